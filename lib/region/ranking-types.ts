@@ -1,0 +1,88 @@
+import type { ResolvedBasis } from '../basis.ts';
+import type { AnnualMinima } from '../lowflow/annual-minima-types.ts';
+
+export const INFLUENCES = [
+  'natural',
+  'regulated',
+  'abstracted',
+  'augmented',
+  'spring-fed',
+  'urban',
+  'unknown',
+] as const;
+export type Influence = (typeof INFLUENCES)[number];
+
+/** The facts of a station that analyses and files carry. */
+export interface StationFacts {
+  id: number;
+  code: string;
+  name: string;
+  river: string;
+  latitude: number | null;
+  longitude: number | null;
+  areaKm2: number | null;
+  influence: Influence;
+}
+
+/** One station's input to the ranking. */
+export interface StationMinima {
+  station: StationFacts;
+  minima: AnnualMinima;
+}
+
+export type Trend = 'falling' | 'rising' | 'none';
+
+/** One station's place and figures. Numbers that do not exist are null. The CSV contract prints these. */
+export interface RankingRow extends StationFacts {
+  rank: number | null;
+  rankLow: number | null;
+  rankHigh: number | null;
+  yearsUsed: number;
+  firstYear: number | null;
+  lastYear: number | null;
+  /** m³/s */
+  meanMinimum: number | null;
+  /** L/s/km² */
+  meanMinimumSpecific: number | null;
+  /** m³/s per decade, with its 95 % interval */
+  slopePerDecade: number | null;
+  slopeLow: number | null;
+  slopeHigh: number | null;
+  percentPerDecade: number | null;
+  /** L/s/km² per decade */
+  specificPerDecade: number | null;
+  tau: number | null;
+  z: number | null;
+  p: number | null;
+  pAdjusted: number | null;
+  trend: Trend | null;
+  trendOf: 'minima' | 'zero-days' | null;
+  /** usable years with an n-day minimum of 0 */
+  zeroFlowYears: number;
+  /** for stations under Drying: days per decade, with its 95 % interval */
+  zeroDaysPerDecade: number | null;
+  zeroDaysLow: number | null;
+  zeroDaysHigh: number | null;
+  /** in words and figures; null when ranked */
+  unrankedReason: string | null;
+  /** true when the station is unranked because it stands in the Drying list */
+  drying: boolean;
+  note: string;
+  /** lag-1 correlation and variance factor that the test used */
+  r1: number | null;
+  serialFactor: number | null;
+  /** m³/s: level of the slope line at t = 0 (calendar year 0), median of x − b·t */
+  intercept: number | null;
+  /** the usable years and their minima in m³/s: what the trend rests on */
+  years: number[];
+  minima: number[];
+}
+
+/** The whole ranking of a region under one basis: ranked rows first, then drying, then the other unranked ones. */
+export interface Ranking {
+  basis: ResolvedBasis;
+  rows: RankingRow[];
+  counts: { stations: number; ranked: number; drying: number; unranked: number; falling: number; rising: number };
+  /** things a reader must know: periods that differ, no common period, … */
+  warnings: string[];
+}
