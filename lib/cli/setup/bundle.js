@@ -1,0 +1,62 @@
+import { existsSync, mkdirSync, renameSync, writeFileSync } from 'node:fs';
+import { basename } from 'node:path';
+import process from 'node:process';
+import { inProject, ROOT } from './paths.js';
+import { SetupError } from './say.js';
+import { hashOf, readStamp, writeStamp } from './stamp.js';
+
+/** What Node runs outside Next: the batch commands, the workers, the demo's maker. */
+const BUNDLES = {
+  'cli.mjs': 'lib/cli/main.ts',
+  'worker.mjs': 'lib/jobs/worker.ts',
+  'seed.mjs': 'seed/cli.ts',
+};
+
+const STAMP = inProject('.build', 'bundles.json');
+const sourceHash = () =>
+  hashOf(ROOT, ['lib', 'seed', 'tsconfig.json', 'package-lock.json'], (name) => name === 'lib/cli/setup');
+
+/** True when the bundles were made from the present sources. */
+export function isBundled() {
+  const names = Object.keys(BUNDLES);
+  return names.every((name) => existsSync(inProject('.build', name))) && readStamp(STAMP)?.sources === sourceHash();
+}
+
+/** Bundles the TypeScript entries to .build/*.mjs; packages stay outside, the generated database client goes in. */
+export async function bundle() {
+  const sources = sourceHash();
+  const { build } = await import('esbuild');
+  mkdirSync(inProject('.build'), { recursive: true });
+  for (const [name, entry] of Object.entries(BUNDLES)) {
+    await bundleOne(build, name, entry);
+  }
+  writeStamp(STAMP, { sources });
+}
+
+async function bundleOne(build, name, entry) {
+  const outfile = inProject('.build', name);
+  let result;
+  try {
+    result = await build({
+      absWorkingDir: ROOT,
+      entryPoints: [entry],
+      outfile,
+      bundle: true,
+      write: false,
+      platform: 'node',
+      format: 'esm',
+      target: 'node20',
+      packages: 'external',
+      sourcemap: 'linked',
+      logLevel: 'silent',
+    });
+  } catch (error) {
+    throw new SetupError(`${entry} could not be bundled: ${error.message}`);
+  }
+  // A worker that starts just now must find the old file or the new one, never half of one.
+  for (const file of result.outputFiles) {
+    const half = inProject('.build', `${basename(file.path)}.${process.pid}`);
+    writeFileSync(half, file.contents);
+    renameSync(half, file.path);
+  }
+}

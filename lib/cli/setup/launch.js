@@ -1,0 +1,46 @@
+import { readFileSync } from 'node:fs';
+import process from 'node:process';
+import { BATCH_COMMANDS, HELP } from './commands.js';
+import { inProject, ROOT } from './paths.js';
+import { SetupError, say } from './say.js';
+
+/** What developers and `npm` call; each module exports `task(argv): Promise<exit code>`. */
+const TASKS = {
+  start: () => import('./tasks/start.js'),
+  dev: () => import('./tasks/dev.js'),
+  test: () => import('./tasks/test.js'),
+  check: () => import('./tasks/check.js'),
+  bench: () => import('./tasks/bench.js'),
+};
+
+/** Runs one command line.
+ *  @param argv  the words after `hungerstone`
+ *  @returns     the exit code */
+export async function launch(argv) {
+  const [command, ...rest] = argv;
+  if (command === undefined) {
+    process.stderr.write(HELP);
+    return 2;
+  }
+  if (command === '--help' || command === '-h' || command === 'help') {
+    process.stdout.write(HELP);
+    return 0;
+  }
+  if (command === '--version') {
+    process.stdout.write(`${JSON.parse(readFileSync(inProject('package.json'), 'utf8')).version}\n`);
+    return 0;
+  }
+  if (!(command in TASKS) && !BATCH_COMMANDS.includes(command)) {
+    say(`Unknown command "${command}". The commands are ${[...BATCH_COMMANDS, ...Object.keys(TASKS)].join(', ')}.`);
+    return 2;
+  }
+  process.env.NEXT_TELEMETRY_DISABLED = '1';
+  process.env.HUNGERSTONE_ROOT = ROOT;
+  try {
+    if (command in TASKS) return await (await TASKS[command]()).task(rest);
+    return await (await import('./batch.js')).batch([command, ...rest]);
+  } catch (error) {
+    say(error instanceof SetupError ? error.message : String(error?.stack ?? error));
+    return 1;
+  }
+}

@@ -1,0 +1,37 @@
+import { fileURLToPath } from 'node:url';
+import { defineConfig } from 'vitest/config';
+
+/** Where clocks and letters are unlike ours: a zone off by 12:45 h with summer time, a locale whose lower-case I has no dot. */
+const ELSEWHERE = { TZ: 'Pacific/Chatham', LANG: 'tr_TR.UTF-8', LC_ALL: 'tr_TR.UTF-8' };
+const AT_HOME = { TZ: 'UTC' };
+
+const alias = { '@': fileURLToPath(new URL('.', import.meta.url)).replace(/\/$/, '') };
+const project = (name: string, test: object) => ({ resolve: { alias }, test: { name, pool: 'forks', ...test } });
+
+export default defineConfig({
+  test: {
+    maxWorkers: 2,
+    projects: [
+      // Pure functions need no fresh process for each file.
+      project('unit', { include: ['test/unit/**/*.test.ts'], isolate: false, env: AT_HOME }),
+      project('reference', { include: ['test/reference/**/*.test.ts'], isolate: false, env: AT_HOME }),
+      project('property', { include: ['test/property/**/*.test.ts'], isolate: false, env: AT_HOME, testTimeout: 30_000 }),
+      project('integration', { include: ['test/integration/**/*.test.ts'], env: AT_HOME, testTimeout: 60_000 }),
+      project('elsewhere', {
+        include: ['test/unit/**/*.test.ts', 'test/reference/**/*.test.ts', 'test/integration/elsewhere/**/*.test.ts'],
+        isolate: false,
+        env: ELSEWHERE,
+      }),
+      project('browser', {
+        include: ['test/browser/**/*.test.ts'],
+        globalSetup: ['test/browser/global-setup.ts'],
+        // After the others, one file at a time: timings in a browser suffer from a busy machine.
+        sequence: { groupOrder: 1 },
+        fileParallelism: false,
+        env: AT_HOME,
+        testTimeout: 60_000,
+        hookTimeout: 60_000,
+      }),
+    ],
+  },
+});
