@@ -1,3 +1,5 @@
+import type { Influence } from '../region/ranking-types.ts';
+
 /** Units in which flows arrive. mm/d is a depth over the drainage area. */
 export const FLOW_UNITS = ['m3/s', 'L/s', 'ft3/s', 'ML/d', 'mm/d'] as const;
 export type FlowUnit = (typeof FLOW_UNITS)[number];
@@ -24,6 +26,8 @@ export interface Mapping {
   decimal: '.' | ',';
   /** delimited layouts only */
   delimiter?: string;
+  /** only the rows whose column holds this text are flows; for files that mix several quantities */
+  where?: { column: number | string; equals: string };
 }
 
 /** A row that was not taken, with its place in the file. */
@@ -84,6 +88,8 @@ export class IntakeError extends Error {
       remedy: string;
       /** machine-readable: the screen asks for what is missing */
       needs?: 'unit' | 'station' | 'date-order' | 'mapping' | 'area' | 'revise';
+      /** every row at fault, where several are (a registry is taken whole or not at all) */
+      rows?: RejectedRow[];
     },
   ) {
     const place = problem.row === undefined ? problem.file : `${problem.file}, row ${problem.row}`;
@@ -101,5 +107,101 @@ export interface StagedPart {
   values: Float64Array;
   /** index into `codeList` a day; 255 = the file has no row for this day */
   codes: Uint8Array;
-  codeList: { text: string; bits: number }[];
+  codeList: DayCode[];
+}
+
+/** What a file says of a day beside its number. */
+export interface DayCode {
+  /** the flag as written; where the row has none, the text that stood in the value's place (`Ice`, `-99.0000`, `<`) */
+  text: string;
+  /** flag bits, see FLAG */
+  bits: number;
+  /** text in the value's place (`-999.00`, `Ice`), or before its number (`<`); absent when there was only a number
+   *  or nothing */
+  valueText?: string;
+}
+
+/** A station that flows may name. */
+export interface KnownStation {
+  code: string;
+  name: string;
+}
+
+export interface InspectOptions {
+  /** the file's name as the person knows it; names the station where the file does not, and stands in messages */
+  fileName: string;
+  /** laid over what is recognised, key by key */
+  mapping?: Partial<Mapping>;
+  /** unit of the values, before what the file itself says */
+  unit?: FlowUnit;
+  /** code of the one station of a file that names none */
+  station?: string;
+  /** the region's registry: any other station refuses the file; null or absent: stations are made from the flows */
+  knownStations?: KnownStation[] | null;
+}
+
+export interface ReadFlowsOptions extends InspectOptions {
+  /** after every block of about a megabyte */
+  onProgress?(rows: number, bytes: number, totalBytes: number): void;
+  /** every rejected row, also those beyond the 1,000 that the report holds */
+  onRejected?(row: RejectedRow): void;
+  signal?: AbortSignal;
+  /** one part a station, in order of appearance, and only when the whole file has been found good */
+  emit(part: StagedPart): void;
+}
+
+/** A column that may hold the flows, for a person to choose from. */
+export interface ValueCandidate {
+  place: FieldPlace;
+  /** header name, or where it stands: "characters 29–38" */
+  label: string;
+  /** the first values in it, as written */
+  samples: string[];
+}
+
+/** What a file looks like before it is read whole. */
+export interface Inspection {
+  /** as recognised; null where the file could not be understood at all (see problems) */
+  mapping: Mapping | null;
+  /** header names of a delimited file; null without a header row */
+  header: string[] | null;
+  /** the first rows split into fields */
+  preview: string[][];
+  /** what must be answered, or put right, before the file can be read; empty when it can */
+  problems: IntakeError[];
+  valueCandidates: ValueCandidate[];
+}
+
+/** One row of a station registry. */
+export interface RegistryStation {
+  code: string;
+  name: string;
+  river: string;
+  latitude: number | null;
+  longitude: number | null;
+  areaKm2: number | null;
+  influence: Influence;
+}
+
+/** A registry file, read whole. A registry with any bad row is refused with all of its bad rows named. */
+export interface Registry {
+  stations: RegistryStation[];
+  rows: number;
+  /** which header name gave which fact */
+  columns: Record<string, string>;
+  sha256: string;
+  warnings: string[];
+}
+
+/** A map layer, checked: lines or polygons in longitude and latitude. */
+export interface LayerFile {
+  name: string;
+  kind: 'river' | 'catchment' | 'other';
+  /** a FeatureCollection as text */
+  geojson: string;
+  features: number;
+  /** west, south, east, north */
+  bounds: [number, number, number, number];
+  sha256: string;
+  warnings: string[];
 }
