@@ -1,0 +1,43 @@
+import { availableParallelism } from 'node:os';
+import { join } from 'node:path';
+import { Piscina } from 'piscina';
+import type { TaskName, Tasks } from './tasks.ts';
+
+const KEY = Symbol.for('hungerstone.pool');
+const holder = globalThis as { [KEY]?: Piscina };
+
+/** A worker that has had nothing to do for this long ends, and gives its memory back. */
+const IDLE_MILLISECONDS = 20_000;
+
+/** Worker threads in all: one a core, and at least two, so that an import never keeps a ranking waiting. */
+export const THREADS = Math.max(2, availableParallelism());
+
+/** The process's one pool of workers. It hangs on `globalThis` since a Next server loads this module several times. */
+function pool(): Piscina {
+  holder[KEY] ??= new Piscina({
+    filename: join(/* turbopackIgnore: true */ process.cwd(), '.build', 'worker.mjs'),
+    minThreads: 0,
+    maxThreads: THREADS,
+    idleTimeout: IDLE_MILLISECONDS,
+    // A worker must hear the message that cancels its import: it may not sleep in Atomics.wait.
+    atomics: 'disabled',
+  });
+  return holder[KEY];
+}
+
+/** Runs a task of lib/jobs/tasks.ts in a worker and answers its result. Typed arrays in `transfer` move, uncopied.
+ *  @throws what the task throws; an AbortError when `signal` is aborted before the task began */
+export async function runTask<Name extends TaskName>(
+  name: Name,
+  task: Parameters<Tasks[Name]>[0],
+  { transfer = [], signal }: { transfer?: Transferable[]; signal?: AbortSignal } = {},
+): Promise<Awaited<ReturnType<Tasks[Name]>>> {
+  return pool().run(task, { name, transferList: transfer as never, signal });
+}
+
+/** Ends all workers; for the end of a batch command or a test. */
+export async function closePool(): Promise<void> {
+  const current = holder[KEY];
+  holder[KEY] = undefined;
+  await current?.destroy();
+}

@@ -1,0 +1,28 @@
+import { BASIS_KEYS, type Basis } from '../basis.ts';
+import type { Ranking } from '../region/ranking-types.ts';
+import type { RegionRow } from '../store/regions.ts';
+import { cached } from './cached.ts';
+import { packedMinimaOf } from './minima.ts';
+import { runTask } from './pool.ts';
+import { regionInputs } from './region-inputs.ts';
+import { resultKey } from './result-key.ts';
+
+/** `normalise` never decides who is ranked, and `units` only how numbers are shown. */
+const KEYS = BASIS_KEYS.filter((key) => key !== 'normalise' && key !== 'units');
+
+/** The ranking of a region under a basis.
+ *  @returns `key`: equal exactly when all that the ranking depends on is equal, good as an ETag
+ *  @throws BasisError when the season does not fit into the low-flow year */
+export async function rankingOf(
+  region: Pick<RegionRow, 'id'>,
+  basis: Basis,
+): Promise<{ ranking: Ranking; key: string }> {
+  const inputs = await regionInputs(region.id);
+  const key = resultKey('ranking', { values: basis, keys: KEYS }, inputs);
+  const ranking = await cached('ranking', key, async () => {
+    const { packed, yearStart } = await packedMinimaOf(inputs, basis);
+    return runTask('rank', { stations: inputs.map(({ facts }) => facts), minima: packed, basis, yearStart });
+  });
+  const { normalise, units } = basis;
+  return { ranking: { ...ranking, basis: { ...ranking.basis, normalise, units } }, key };
+}

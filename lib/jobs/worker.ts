@@ -1,0 +1,8 @@
+/** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
+ *  worker starts quickly. */
+export { coverage } from './tasks/coverage.ts';
+export { curves } from './tasks/curves.ts';
+export { minima } from './tasks/minima.ts';
+export { parseFlows } from './tasks/parse-flows.ts';
+export { rank } from './tasks/rank.ts';
+export { regimes } from './tasks/regimes.ts';
