@@ -15,7 +15,12 @@ export default defineConfig({
       // Pure functions need no fresh process for each file.
       project('unit', { include: ['test/unit/**/*.test.ts'], isolate: false, env: AT_HOME }),
       project('reference', { include: ['test/reference/**/*.test.ts'], isolate: false, env: AT_HOME }),
-      project('property', { include: ['test/property/**/*.test.ts'], isolate: false, env: AT_HOME, testTimeout: 30_000 }),
+      project('property', {
+        include: ['test/property/**/*.test.ts'],
+        isolate: false,
+        env: AT_HOME,
+        testTimeout: 30_000,
+      }),
       project('integration', { include: ['test/integration/**/*.test.ts'], env: AT_HOME, testTimeout: 60_000 }),
       project('elsewhere', {
         include: ['test/unit/**/*.test.ts', 'test/reference/**/*.test.ts', 'test/integration/elsewhere/**/*.test.ts'],

@@ -11,6 +11,8 @@ export interface Host {
 /** A batch command, one module each in ./commands. */
 export interface Command {
   usage: string;
+  /** true when the command brings the database up to date by itself, or must not touch it first */
+  withoutDatabase?: boolean;
   /** @param argv  the words after the command's name
    *  @returns     exit code
    *  @throws UsageError for wrong usage (exit 2); anything else that is thrown is a failure (exit 1) */

@@ -10,4 +10,6 @@ if (major < 20 || (major === 20 && minor < 19)) {
 }
 
 const { launch } = await import('./setup/launch.js');
-process.exitCode = await launch(process.argv.slice(2));
+const code = await launch(process.argv.slice(2));
+// What is still on its way to a pipe gets there first; workers and open connections do not keep us.
+process.stdout.write('', () => process.exit(code));

@@ -36,6 +36,7 @@ export async function main(argv: string[], host: Host): Promise<number> {
     return 0;
   }
   try {
+    if (!command.withoutDatabase) await migrate();
     return await command.run(rest, host);
   } catch (error) {
     process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);

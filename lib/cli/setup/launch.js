@@ -1,4 +1,4 @@
-import { readFileSync } from 'node:fs';
+import { readFileSync, realpathSync } from 'node:fs';
 import process from 'node:process';
 import { BATCH_COMMANDS, HELP } from './commands.js';
 import { inProject, ROOT } from './paths.js';
@@ -35,9 +35,17 @@ export async function launch(argv) {
     return 2;
   }
   process.env.NEXT_TELEMETRY_DISABLED = '1';
-  process.env.HUNGERSTONE_ROOT = ROOT;
+  // A reader that has seen enough (`… | head`) closes the pipe: no failure.
+  process.stdout.on('error', (error) => process.exit(error.code === 'EPIPE' ? 0 : 1));
   try {
-    if (command in TASKS) return await (await TASKS[command]()).task(rest);
+    if (command in TASKS) {
+      process.chdir(ROOT);
+      return await (await TASKS[command]()).task(rest);
+    }
+    if (realpathSync(process.cwd()) !== realpathSync(ROOT)) {
+      say(`Run this from the project's root: cd ${ROOT}`);
+      return 2;
+    }
     return await (await import('./batch.js')).batch([command, ...rest]);
   } catch (error) {
     say(error instanceof SetupError ? error.message : String(error?.stack ?? error));
