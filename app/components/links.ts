@@ -1,0 +1,65 @@
+/** Addresses of the pages of a region, with the state that goes along from page to page. */
+
+/** The basis keys as they stand in a URL. Listed here so that links need not load the whole schema;
+ *  test/unit/app/links.test.ts holds them equal to lib/basis.ts. */
+export const BASIS_PARAMETERS = [
+  'period',
+  'yearStart',
+  'season',
+  'days',
+  'maxMissingDays',
+  'exclude',
+  'minYears',
+  'minCoverage',
+  'normalise',
+  'rankBy',
+  'trendTest',
+  'serialCorrection',
+  'alpha',
+  'units',
+] as const;
+
+/** View state of the map screen that links to and from other pages keep. */
+export const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q'] as const;
+
+export type RegionPage = 'map' | 'curves' | 'import';
+
+/** What a link carries on: the basis and the map's view, and nothing that belongs to one page only. */
+export function carried(query: URLSearchParams | string): URLSearchParams {
+  const from = new URLSearchParams(query);
+  const out = new URLSearchParams();
+  for (const key of [...BASIS_PARAMETERS, ...MAP_PARAMETERS]) {
+    const value = from.get(key);
+    if (value !== null) out.set(key, value);
+  }
+  return out;
+}
+
+const withQuery = (path: string, query: URLSearchParams): string => {
+  // a comma may stand as it is in a query, and links are read by people
+  const text = query.toString().replaceAll('%2C', ',');
+  return text ? `${path}?${text}` : path;
+};
+
+/** Example: ('kestrane-basin', 'curves', 'days=30') → "/regions/kestrane-basin/curves?days=30" */
+export function regionHref(slug: string, page: RegionPage, query: URLSearchParams | string = ''): string {
+  const path = `/regions/${encodeURIComponent(slug)}${page === 'map' ? '' : `/${page}`}`;
+  return withQuery(path, carried(query));
+}
+
+/** The page of one station. */
+export function stationHref(slug: string, code: string, query: URLSearchParams | string = ''): string {
+  return withQuery(`/regions/${encodeURIComponent(slug)}/stations/${encodeURIComponent(code)}`, carried(query));
+}
+
+/** The address of an API table with only the basis along. */
+export function apiHref(slug: string, table: string, query: URLSearchParams | string, format?: string): string {
+  const from = new URLSearchParams(query);
+  const out = new URLSearchParams();
+  for (const key of BASIS_PARAMETERS) {
+    const value = from.get(key);
+    if (value !== null) out.set(key, value);
+  }
+  if (format) out.set('format', format);
+  return withQuery(`/api/regions/${encodeURIComponent(slug)}/${table}`, out);
+}
