@@ -1,0 +1,27 @@
+import type { RankingRow } from '../region/ranking-types.ts';
+import type { SlopeLine } from './types.ts';
+
+const YEARS_PER_DECADE = 10;
+
+/** The slope line of a station's minima from its first to its last year used, with the lines of the slope's interval.
+ *  The latter turn about the line's value at the median year, where the level is known best.
+ *  @returns null for a station without a slope */
+export function slopeLine(row: RankingRow): SlopeLine | null {
+  const { firstYear, lastYear, slopePerDecade, intercept, slopeLow, slopeHigh, years } = row;
+  if (firstYear === null || lastYear === null || slopePerDecade === null || intercept === null) return null;
+  const slope = slopePerDecade / YEARS_PER_DECADE;
+  const at = (year: number) => intercept + slope * year;
+  const pivot = (years[Math.floor((years.length - 1) / 2)] + years[Math.floor(years.length / 2)]) / 2;
+  const turned = (perDecade: number | null): [number, number] | null => {
+    if (perDecade === null) return null;
+    const through = (year: number) => at(pivot) + (perDecade / YEARS_PER_DECADE) * (year - pivot);
+    return [through(firstYear), through(lastYear)];
+  };
+  return {
+    firstYear,
+    lastYear,
+    fitted: [at(firstYear), at(lastYear)],
+    low: turned(slopeLow),
+    high: turned(slopeHigh),
+  };
+}
