@@ -1,0 +1,40 @@
+import type { ExcludableFlag } from '../basis.ts';
+import { type DailySeries, FLAG } from './daily-series.ts';
+
+/** Flag bits whose days count as missing: rejected always, and those that the basis excludes. */
+export function missingMask(exclude: readonly ExcludableFlag[]): number {
+  return exclude.reduce<number>((mask, flag) => mask | FLAG[flag], FLAG.rejected);
+}
+
+/** All flag bits that occur anywhere in a record, in one byte. */
+export function flagBitsPresent(flags: Uint8Array): number {
+  let bits = 0;
+  // Four days at a time where the bytes lie so that they can be read as words: most records carry few flags or none.
+  const words = flags.byteOffset % 4 === 0 ? Math.floor(flags.length / 4) : 0;
+  const fourDays = words > 0 ? new Uint32Array(flags.buffer, flags.byteOffset, words) : new Uint32Array(0);
+  for (let i = 0; i < words; i += 1) bits |= fourDays[i];
+  bits = (bits | (bits >>> 8) | (bits >>> 16) | (bits >>> 24)) & 0xff;
+  for (let i = words * 4; i < flags.length; i += 1) bits |= flags[i];
+  return bits;
+}
+
+/** Daily flows with NaN where a person rejected the value or the basis excludes its flag.
+ *
+ *  The series' own array is returned, uncopied, when there is nothing to take out: treat the result as read-only.
+ *  @param exclude  flags treated as missing
+ *  @returns        m³/s, NaN where missing; same length as `series.values`
+ *  @throws RangeError when values and flags differ in length */
+export function usableFlow(series: DailySeries, exclude: readonly ExcludableFlag[]): Float64Array {
+  const { values, flags } = series;
+  if (values.length !== flags.length) {
+    throw new RangeError(
+      `usableFlow: values and flags must be of one length, got ${values.length} and ${flags.length}`,
+    );
+  }
+  const mask = missingMask(exclude);
+  if ((flagBitsPresent(flags) & mask) === 0) return values;
+
+  const flow = values.slice();
+  for (let i = 0; i < flow.length; i += 1) if ((flags[i] & mask) !== 0) flow[i] = Number.NaN;
+  return flow;
+}
