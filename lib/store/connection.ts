@@ -1,0 +1,125 @@
+import { accessSync, closeSync, constants, existsSync, mkdirSync, openSync, readSync, statSync } from 'node:fs';
+import { dirname } from 'node:path';
+import Database from 'libsql';
+import { BLOCK_MS } from './busy.ts';
+import { databasePath } from './database-url.ts';
+import { StoreError } from './errors.ts';
+
+/** A connection of the libsql package itself, below Prisma: for bulk blobs, for imports, and for threads that read
+ *  records and want no Prisma. Its calls are synchronous. */
+export type Connection = Database.Database;
+export type Row = readonly unknown[];
+
+const HEADER = 'SQLite format 3\0';
+
+/** Makes sure that a database can be opened at a path, before anything opens it and fails in less plain words.
+ *  @throws StoreError 'missing', 'unwritable' or 'not-a-database', each with the file and a remedy */
+export function checkDatabaseFile(path: string, { mayBeNew = false } = {}): void {
+  const folder = dirname(path);
+  try {
+    if (mayBeNew) mkdirSync(folder, { recursive: true });
+    if (existsSync(folder)) accessSync(folder, constants.W_OK);
+  } catch (cause) {
+    throw new StoreError('unwritable', `Cannot write in ${folder}, where the database belongs. ${REMEDY}`, { cause });
+  }
+  if (!existsSync(path)) {
+    if (mayBeNew) return;
+    throw new StoreError('missing', `There is no database at ${path} yet: "npm start" makes one.`);
+  }
+  try {
+    accessSync(path, constants.R_OK | constants.W_OK);
+  } catch (cause) {
+    throw new StoreError('unwritable', `Cannot write to the database ${path}. ${REMEDY}`, { cause });
+  }
+  if (!looksLikeDatabase(path)) throw new StoreError('not-a-database', `${path} is not a database. ${REMEDY}`);
+}
+
+const REMEDY = 'Give another place by DATABASE_URL=file:/path/to/hungerstone.db.';
+
+/** True for an SQLite file, and for an empty one, which SQLite takes for a new database. */
+export function looksLikeDatabase(path: string): boolean {
+  const stat = statSync(path);
+  if (!stat.isFile()) return false;
+  if (stat.size === 0) return true;
+  const head = Buffer.alloc(HEADER.length);
+  const file = openSync(path, 'r');
+  try {
+    return readSync(file, head, 0, head.length, 0) === head.length && head.toString('latin1') === HEADER;
+  } finally {
+    closeSync(file);
+  }
+}
+
+/** Opens a connection of one's own; the caller closes it. Foreign keys are not enforced here: imports write parts before
+ *  the stations they belong to, and show all of it at once at the end. */
+export function openConnection(path = databasePath(), { mayBeNew = false, blockMs = BLOCK_MS } = {}): Connection {
+  checkDatabaseFile(path, { mayBeNew });
+  const connection = new Database(path, { timeout: blockMs });
+  connection.exec('PRAGMA synchronous=NORMAL');
+  connection.exec('PRAGMA foreign_keys=OFF');
+  return connection;
+}
+
+interface Shared {
+  connection: Connection;
+  statements: Map<string, Database.Statement>;
+}
+const KEY = Symbol.for('hungerstone.connections');
+const holder = globalThis as { [KEY]?: Map<string, Shared> };
+
+function shared(path: string): Shared {
+  holder[KEY] ??= new Map();
+  let entry = holder[KEY].get(path);
+  if (!entry) {
+    entry = { connection: openConnection(path), statements: new Map() };
+    holder[KEY].set(path, entry);
+  }
+  return entry;
+}
+
+/** The thread's own connection to a database, opened on first use and kept. */
+export const sharedConnection = (path = databasePath()): Connection => shared(path).connection;
+
+/** A statement on the thread's connection, prepared once, whose rows come as arrays. */
+export function sharedStatement(sql: string, path = databasePath()): Database.Statement {
+  const { connection, statements } = shared(path);
+  let statement = statements.get(sql);
+  if (!statement) {
+    statement = rows(connection, sql);
+    statements.set(sql, statement);
+  }
+  return statement;
+}
+
+/** Closes the thread's connection to a database, or to all. */
+export function closeSharedConnections(path?: string): void {
+  for (const [key, entry] of holder[KEY] ?? []) {
+    if (path !== undefined && key !== path) continue;
+    holder[KEY]?.delete(key);
+    entry.connection.close();
+  }
+}
+
+/** Prepares a query whose rows come as arrays. */
+export const rows = (connection: Connection, sql: string): Database.Statement => {
+  const statement = connection.prepare(sql);
+  // `raw` is in libsql's statements but not in its types.
+  return (statement as Database.Statement & { raw(on?: boolean): Database.Statement }).raw(true);
+};
+
+/** Runs `change` in one transaction that holds the write lock from its start, so that what it read stays true.
+ *  Synchronous; put it into whenFree to wait for others. Rolls back when `change` throws. */
+export function immediately<T>(connection: Connection, change: () => T): T {
+  connection.exec('BEGIN IMMEDIATE');
+  try {
+    const result = change();
+    connection.exec('COMMIT');
+    return result;
+  } catch (error) {
+    if (connection.inTransaction) connection.exec('ROLLBACK');
+    throw error;
+  }
+}
+
+/** Now, as Prisma writes it, so that its text order is the order of time. */
+export const timestamp = (date = new Date()): string => date.toISOString().replace('Z', '+00:00');
