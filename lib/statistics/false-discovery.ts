@@ -17,7 +17,8 @@ export function benjaminiHochberg(p: ArrayLike<number>): Float64Array {
   tests.sort((a, b) => p[b] - p[a]);
   let smallest = 1;
   tests.forEach((index, fromLargest) => {
-    smallest = Math.min(smallest, (p[index] * tests.length) / (tests.length - fromLargest));
+    // the ratio first: p·m/m would leave p in the last bit
+    smallest = Math.min(smallest, p[index] * (tests.length / (tests.length - fromLargest)));
     adjusted[index] = smallest;
   });
   return adjusted;

@@ -1,7 +1,7 @@
 import { presentValues } from './present-values.ts';
 
 /** Ranks this near to a whole number are that number: (n + 1)·p carries a rounding error. */
-const RANK_TOLERANCE = 1e-9;
+export const RANK_TOLERANCE = 1e-9;
 
 /** Sample quantile by plotting positions r/(n + 1), linear between order statistics (type 6).
  *  @param sorted       values in rising order, without NaN; left unchanged

@@ -1,6 +1,7 @@
 import { varianceOfS } from './mann-kendall.ts';
 import { normalQuantile } from './normal.ts';
-import { medianOfSorted, valueAtRank } from './quantile.ts';
+import { medianOfSorted, RANK_TOLERANCE, valueAtRank } from './quantile.ts';
+import { selectInPlace } from './select.ts';
 
 export interface SenSlopeOptions {
   /** what Var S is multiplied by, for serial correlation; 1 by default */
@@ -34,31 +35,69 @@ export interface SenSlopeResult {
  *  Environmental Pollution Monitoring, section 16.5; intercept of Conover 1980, Practical Nonparametric Statistics.
  *  Example: t = [1, 2, 4], x = [1, 2, 6] → slope 5/3 */
 export function senSlope(t: ArrayLike<number>, x: ArrayLike<number>, options: SenSlopeOptions = {}): SenSlopeResult {
-  const { varianceFactor = 1, confidence = 0.95 } = options;
+  return pairwiseSlopes(t, x).withInterval(options);
+}
+
+/** The slopes of all pairs, for a caller who needs the slope before it can say how wide the interval is. */
+export interface PairwiseSlopes {
+  /** median of the slopes; NaN when there are none */
+  slope: number;
+  /** the figures of `senSlope` */
+  withInterval(options?: SenSlopeOptions): SenSlopeResult;
+}
+
+/** First half of `senSlope`, with the same inputs and errors: the slope; its interval on asking. */
+export function pairwiseSlopes(t: ArrayLike<number>, x: ArrayLike<number>): PairwiseSlopes {
+  const { times, values } = presentPairs(t, x);
+  const slopes = slopesOfPairs(times, values);
+  const pairs = slopes.length;
+  const last = pairs - 1;
+  // Only the few ranks that are read are put in their place. The middle stays, and parts the low ones from the high.
+  const middle = last >> 1;
+  putInPlace(slopes, middle, 0, last);
+  const slope = medianOfSorted(slopes);
+  return {
+    slope,
+    withInterval(options) {
+      const reach = reachOfInterval(values, options);
+      const low = (pairs - reach) / 2;
+      const high = (pairs + reach) / 2 + 1;
+      putInPlace(slopes, Math.floor(low + RANK_TOLERANCE) - 1, 0, middle - 1);
+      putInPlace(slopes, Math.floor(high + RANK_TOLERANCE) - 1, middle + 1, last);
+      return {
+        slope,
+        intercept: medianOfSorted(values.map((value, i) => value - slope * times[i]).sort()),
+        low: valueAtRank(slopes, low),
+        high: valueAtRank(slopes, high),
+        pairs,
+      };
+    },
+  };
+}
+
+/** Puts the values of two neighbouring positions in place, as far as they lie in the stretch. */
+function putInPlace(slopes: Float64Array, position: number, from: number, to: number): void {
+  if (position >= from && position <= to) selectInPlace(slopes, position, from, to);
+  // what stands at `position` must not move again
+  const next = position + 1;
+  if (next >= from && next <= to) selectInPlace(slopes, next, Math.max(from, next), to);
+}
+
+/** C of the interval: how many ranks it reaches, both ways together. */
+function reachOfInterval(
+  values: Float64Array,
+  { varianceFactor = 1, confidence = 0.95 }: SenSlopeOptions = {},
+): number {
   if (!(confidence > 0 && confidence < 1)) {
     throw new RangeError(`senSlope: confidence must lie between 0 and 1, got ${confidence}`);
   }
   if (!(varianceFactor > 0 && Number.isFinite(varianceFactor))) {
     throw new RangeError(`senSlope: varianceFactor must be a positive number, got ${varianceFactor}`);
   }
-  const { times, values } = presentPairs(t, x);
-  const slopes = pairwiseSlopes(times, values).sort();
-  const pairs = slopes.length;
-  if (pairs === 0) {
-    return { slope: Number.NaN, intercept: Number.NaN, low: Number.NaN, high: Number.NaN, pairs };
-  }
-  const slope = medianOfSorted(slopes);
-  const reach = normalQuantile(0.5 + confidence / 2) * Math.sqrt(varianceFactor * varianceOfS(values).variance);
-  return {
-    slope,
-    intercept: medianOfSorted(values.map((value, i) => value - slope * times[i]).sort()),
-    low: valueAtRank(slopes, (pairs - reach) / 2),
-    high: valueAtRank(slopes, (pairs + reach) / 2 + 1),
-    pairs,
-  };
+  return normalQuantile(0.5 + confidence / 2) * Math.sqrt(varianceFactor * varianceOfS(values).variance);
 }
 
-function pairwiseSlopes(times: Float64Array, values: Float64Array): Float64Array {
+function slopesOfPairs(times: Float64Array, values: Float64Array): Float64Array {
   const n = values.length;
   const slopes = new Float64Array((n * (n - 1)) / 2);
   let next = 0;

@@ -56,12 +56,15 @@ export function expectReference(
     const figures = typeof value === 'number' ? [value] : Array.from(value);
     expect(figures.length, `${reference.name}: ${key}, how many`).toBe(wanted.length);
     const { abs, rel } = reference.tolerance[key] ?? reference.tolerance.default;
-    figures.forEach((figure, i) => {
+    for (const [i, figure] of figures.entries()) {
       const want = wanted[i];
-      if (want === null) return expect(figure, `${reference.name}: ${key}`).toBeNaN();
+      if (want === null) {
+        expect(figure, `${reference.name}: ${key}`).toBeNaN();
+        continue;
+      }
       if (typeof want !== 'number') throw new Error(`reference: ${reference.name}: ${key} is not a number`);
       const message = `${reference.name}: ${key}[${i}] is ${figure}, expected ${want}`;
       expect(Math.abs(figure - want) <= abs + rel * Math.abs(want), message).toBe(true);
-    });
+    }
   }
 }
