@@ -1,9 +1,9 @@
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
-/** Where clocks and letters are unlike ours: a zone off by 12:45 h with summer time, a locale whose lower-case I has no dot. */
+/** Where clocks and letters are unlike ours: a zone off by 12:45 h with summer time, a locale with a decimal comma. */
 const ELSEWHERE = { TZ: 'Pacific/Chatham', LANG: 'tr_TR.UTF-8', LC_ALL: 'tr_TR.UTF-8' };
-const AT_HOME = { TZ: 'UTC' };
+const AT_HOME = { TZ: 'UTC', LANG: 'en_US.UTF-8', LC_ALL: 'en_US.UTF-8' };
 
 const alias = { '@': fileURLToPath(new URL('.', import.meta.url)).replace(/\/$/, '') };
 const project = (name: string, test: object) => ({ resolve: { alias }, test: { name, pool: 'forks', ...test } });
@@ -23,9 +23,17 @@ export default defineConfig({
       }),
       project('integration', { include: ['test/integration/**/*.test.ts'], env: AT_HOME, testTimeout: 60_000 }),
       project('elsewhere', {
-        include: ['test/unit/**/*.test.ts', 'test/reference/**/*.test.ts', 'test/integration/elsewhere/**/*.test.ts'],
+        include: ['test/unit/**/*.test.ts', 'test/reference/**/*.test.ts', 'test/property/**/*.test.ts'],
         isolate: false,
         env: ELSEWHERE,
+        testTimeout: 30_000,
+      }),
+      project('elsewhere-integration', {
+        include: ['test/integration/**/*.test.ts'],
+        // Starting servers and programs once is enough; they take their surroundings from the tests anyhow.
+        exclude: ['test/integration/cli/**'],
+        env: ELSEWHERE,
+        testTimeout: 60_000,
       }),
       project('browser', {
         include: ['test/browser/**/*.test.ts'],
@@ -37,6 +45,10 @@ export default defineConfig({
         testTimeout: 60_000,
         hookTimeout: 60_000,
       }),
+      // Only `npm run bench` asks for these: they print and assert nothing.
+      ...(process.env.HUNGERSTONE_BENCH
+        ? [project('bench', { include: ['test/bench/**/*.bench.ts'], fileParallelism: false, testTimeout: 900_000 })]
+        : []),
     ],
   },
 });

@@ -9,7 +9,7 @@ import process from 'node:process';
  *  @param entries   files or folders below root; those that do not exist are passed over
  *  @param leaveOut  tells whether a relative name with forward slashes is left out
  *  @returns         hexadecimal digest */
-export function hashOf(root, entries, leaveOut = () => false) {
+export function hashOf(root, entries, leaveOut = (/** @type {string} */ _name) => false) {
   const hash = createHash('sha256');
   for (const name of entries.flatMap((entry) => filesBelow(root, join(root, entry), leaveOut)).sort()) {
     const bytes = readFileSync(join(root, name));

@@ -1,0 +1,18 @@
+import type { TestProject } from 'vitest/node';
+import { startTrial } from '../../lib/cli/setup/trial.js';
+
+declare module 'vitest' {
+  interface ProvidedContext {
+    /** address of a production server whose database holds the demo region */
+    serverUrl: string;
+  }
+}
+
+/** One server for all browser tests. */
+export default async function setup(project: TestProject): Promise<() => Promise<void>> {
+  const trial = await startTrial();
+  project.provide('serverUrl', trial.url);
+  return async () => {
+    await trial.stop();
+  };
+}
