@@ -30,7 +30,7 @@ export function sortAscending(values: Float64Array): Float64Array {
     words[2 * i] = negative ? ~words[2 * i] : words[2 * i];
     words[2 * i + 1] = negative ? ~words[2 * i + 1] : words[2 * i + 1] ^ SIGN_BIT;
   }
-  let from = words;
+  let from: Int32Array<ArrayBuffer> = words;
   let to = new Int32Array(2 * n);
   const next = new Int32Array(DIGIT_MASK + 1);
   for (const [half, shift] of DIGITS) {
@@ -61,7 +61,7 @@ export function sortAscending(values: Float64Array): Float64Array {
 }
 
 /** The values that are not NaN, in their order, as a new array: a loop, for `filter` takes ten times as long. */
-function withoutMissing(values: Float64Array): Float64Array {
+function withoutMissing(values: Float64Array): Float64Array<ArrayBuffer> {
   const present = new Float64Array(values.length);
   let count = 0;
   for (let i = 0; i < values.length; i += 1) {
