@@ -1,19 +1,7 @@
-import { basisSentence, type ResolvedBasis } from '../basis.ts';
+import { basisSentence } from '../basis.ts';
 import type { Column } from './csv.ts';
 import { PROGRAM_VERSION } from './program-version.ts';
-
-/** What a table rests on, so that anyone can make the same one again. */
-export interface Provenance {
-  region: string;
-  /** true for made-up data */
-  invented: boolean;
-  basis: ResolvedBasis;
-  /** SHA-256 over the records, marks and facts of every station of the region */
-  dataHash: string;
-  methodsVersion: number;
-  /** things a reader must know before using the numbers */
-  warnings: readonly string[];
-}
+import { type Provenance, provenanceNotes } from './provenance.ts';
 
 /** Metadata of a CSV file by the W3C's "CSV on the Web" vocabulary (https://www.w3.org/TR/tabular-metadata/).
  *
@@ -42,18 +30,11 @@ export function tableMetadata<Row>(
         ...(column.unit === undefined ? {} : { 'schema:unitText': column.unit }),
       })),
     },
-    notes: [
-      {
-        region: from.region,
-        invented: from.invented,
-        basis: from.basis,
-        basisSentence: basisSentence(from.basis),
-        dataHash: from.dataHash,
-        program: 'Hungerstone',
-        programVersion: PROGRAM_VERSION,
-        methodsVersion: from.methodsVersion,
-        warnings: from.warnings,
-      },
-    ],
+    notes: [provenanceNotes(from)],
   };
+}
+
+/** The name that the metadata of a CSV file has, so that programs find it beside the file. */
+export function metadataName(fileName: string): string {
+  return `${fileName}-metadata.json`;
 }

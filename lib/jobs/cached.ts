@@ -47,17 +47,26 @@ export async function cached<Value>(kind: string, key: string, compute: () => Pr
 }
 
 async function fetchOrCompute<Value>(kind: string, key: string, compute: () => Promise<Value>): Promise<Value> {
-  const stored = await getResult(kind, key);
-  if (stored) {
-    const value = deserialize(stored) as Value;
-    remember(key, value, stored.byteLength);
-    return value;
+  const stored = getResult(kind, key);
+  const found = stored && decoded<Value>(stored);
+  if (stored && found) {
+    remember(key, found.value, stored.byteLength);
+    return found.value;
   }
   const value = await compute();
   const bytes = serialize(value);
   remember(key, value, bytes.byteLength);
   writeLater(kind, key, bytes);
   return value;
+}
+
+/** A result that this Node cannot read, because a later one wrote it, is as good as none. */
+function decoded<Value>(stored: Uint8Array): { value: Value } | null {
+  try {
+    return { value: deserialize(stored) as Value };
+  } catch {
+    return null;
+  }
 }
 
 function remember(key: string, value: unknown, size: number): void {
@@ -76,7 +85,10 @@ function remember(key: string, value: unknown, size: number): void {
 function writeLater(kind: string, key: string, bytes: Uint8Array): void {
   const write = new Promise<void>((resolve) => setImmediate(resolve))
     .then(() => putResult(kind, key, bytes))
-    .catch(() => undefined)
+    .then(
+      () => undefined,
+      () => undefined,
+    )
     .finally(() => cache().writes.delete(write));
   cache().writes.add(write);
 }

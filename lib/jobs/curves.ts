@@ -9,7 +9,7 @@ import { packedMinimaOf, type RegionMinima } from './minima.ts';
 import { packMinima, unpackMinima } from './pack-minima.ts';
 import { runTask } from './pool.ts';
 import { rankingOf } from './ranking.ts';
-import { regionInputs } from './region-inputs.ts';
+import { checkAsRead, withInputs } from './region-inputs.ts';
 import { resultKey, type StationInput } from './result-key.ts';
 import { chunksOf } from './share-out.ts';
 import type { PackedCurves } from './tasks/curves.ts';
@@ -30,12 +30,13 @@ export async function curvesOf(
   basis: Basis,
   kind: CurveKind = 'period',
 ): Promise<RegionCurves & { key: string }> {
-  const inputs = await regionInputs(region.id);
-  const { ranking } = await rankingOf(region, basis);
-  const minima = await packedMinimaOf(inputs, basis);
-  const packed = await packedCurvesOf(inputs, minima, ranking.basis, kind);
-  const key = resultKey(`normalised-curves ${kind}`, { values: ranking.basis, keys: [...KEYS, ...SCALE] }, inputs);
-  return { ...normalised(inputs, packed, ranking.basis), basis: ranking.basis, kind, key };
+  return withInputs(region.id, async (inputs) => {
+    const { ranking } = await rankingOf(region, basis);
+    const minima = await packedMinimaOf(inputs, basis);
+    const packed = await packedCurvesOf(inputs, minima, ranking.basis, kind);
+    const key = resultKey(`normalised-curves ${kind}`, { values: ranking.basis, keys: [...KEYS, ...SCALE] }, inputs);
+    return { ...normalised(inputs, packed, ranking.basis), basis: ranking.basis, kind, key };
+  });
 }
 
 async function packedCurvesOf(
@@ -46,13 +47,17 @@ async function packedCurvesOf(
 ): Promise<PackedCurves[]> {
   const { season, exclude, period } = basis;
   const options = { yearStart: minima.yearStart, season, exclude };
-  const key = resultKey(`curves ${kind}`, { values: basis, keys: KEYS }, stations, 'area');
+  const key = resultKey(`curves ${kind}`, { values: basis, keys: KEYS }, stations, 'none');
   return cached('curves', key, () => {
     const byStation = unpackMinima(minima.packed);
     const recorded = stations.filter(({ dataHash }) => dataHash !== null);
-    const entries = recorded.map(({ facts: { id } }) => ({ stationId: id, minima: byStation.get(id)! }));
     return Promise.all(
-      chunksOf(entries).map((chunk) => runTask('curves', { minima: packMinima(chunk), kind, options, period })),
+      chunksOf(recorded).map(async (chunk) => {
+        const entries = chunk.map(({ facts: { id } }) => ({ stationId: id, minima: byStation.get(id)! }));
+        const pack = await runTask('curves', { minima: packMinima(entries), kind, options, period });
+        checkAsRead(chunk, pack.hashes);
+        return pack;
+      }),
     );
   });
 }

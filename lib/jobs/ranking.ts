@@ -4,7 +4,7 @@ import type { RegionRow } from '../store/regions.ts';
 import { cached } from './cached.ts';
 import { packedMinimaOf } from './minima.ts';
 import { runTask } from './pool.ts';
-import { regionInputs } from './region-inputs.ts';
+import { withInputs } from './region-inputs.ts';
 import { resultKey } from './result-key.ts';
 
 /** `normalise` never decides who is ranked, and `units` only how numbers are shown. */
@@ -17,12 +17,13 @@ export async function rankingOf(
   region: Pick<RegionRow, 'id'>,
   basis: Basis,
 ): Promise<{ ranking: Ranking; key: string }> {
-  const inputs = await regionInputs(region.id);
-  const key = resultKey('ranking', { values: basis, keys: KEYS }, inputs);
-  const ranking = await cached('ranking', key, async () => {
-    const { packed, yearStart } = await packedMinimaOf(inputs, basis);
-    return runTask('rank', { stations: inputs.map(({ facts }) => facts), minima: packed, basis, yearStart });
+  return withInputs(region.id, async (inputs) => {
+    const key = resultKey('ranking', { values: basis, keys: KEYS }, inputs);
+    const ranking = await cached('ranking', key, async () => {
+      const { packed, yearStart } = await packedMinimaOf(inputs, basis);
+      return runTask('rank', { stations: inputs.map(({ facts }) => facts), minima: packed, basis, yearStart });
+    });
+    const { normalise, units } = basis;
+    return { ranking: { ...ranking, basis: { ...ranking.basis, normalise, units } }, key };
   });
-  const { normalise, units } = basis;
-  return { ranking: { ...ranking, basis: { ...ranking.basis, normalise, units } }, key };
 }

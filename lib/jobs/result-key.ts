@@ -10,8 +10,8 @@ export interface StationInput {
   dataHash: string | null;
 }
 
-/** Which facts an analysis reads. `area`: only the drainage area, by which depths become flows. */
-export type FactsRead = 'all' | 'area';
+/** Which facts an analysis reads. `none`: only the record, whose hash speaks of the area where depths become flows. */
+export type FactsRead = 'all' | 'none';
 
 /** Key of a result: SHA-256 of all that it depends on, and of nothing else.
  *
@@ -28,12 +28,12 @@ export function resultKey(
   const hash = createHash('sha256');
   hash.update(JSON.stringify([analysis, METHODS_VERSION, basisText(basis.values, basis.keys)]));
   const lines = stations.map(({ facts, dataHash }) =>
-    JSON.stringify([facts.code, facts.id, dataHash, factsRead === 'all' ? factsText(facts) : facts.areaKm2]),
+    JSON.stringify([facts.code, facts.id, dataHash, ...(factsRead === 'all' ? factsOf(facts) : [])]),
   );
   for (const line of lines.sort()) hash.update(`\n${line}`);
   return hash.digest('hex');
 }
 
-function factsText({ name, river, latitude, longitude, areaKm2, influence }: StationFacts): string {
-  return JSON.stringify([name, river, latitude, longitude, areaKm2, influence]);
+function factsOf({ name, river, latitude, longitude, areaKm2, influence }: StationFacts) {
+  return [name, river, latitude, longitude, areaKm2, influence];
 }

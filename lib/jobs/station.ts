@@ -7,10 +7,11 @@ import { minimaOf } from './minima.ts';
 import { neighboursOf } from './neighbours.ts';
 import { runTask } from './pool.ts';
 import { rankingOf } from './ranking.ts';
-import { regionInputs } from './region-inputs.ts';
+import { checkAsRead, regionInputs, withInputs } from './region-inputs.ts';
 import { resultKey } from './result-key.ts';
 import { slopeLine } from './slope-line.ts';
 import type { StationDetail, YearCoverage } from './types.ts';
+import { yearStartOf } from './year-start.ts';
 
 const COVERAGE_KEYS: readonly BasisKey[] = ['yearStart', 'season', 'days', 'maxMissingDays', 'exclude'];
 
@@ -54,12 +55,18 @@ export async function coverageOf(
   basis: Basis,
   code: string,
 ): Promise<{ coverage: YearCoverage[]; yearStart: number; key: string } | null> {
-  const input = (await regionInputs(region.id)).find(({ facts }) => facts.code === code);
-  if (!input) return null;
-  const { yearStart } = await minimaOf(region, basis);
-  const { season, days, maxMissingDays, exclude } = basis;
-  const key = resultKey('coverage', { values: { ...basis, yearStart }, keys: COVERAGE_KEYS }, [input], 'area');
-  const options = { yearStart, season, days, maxMissingDays, exclude };
-  const coverage = await cached('coverage', key, () => runTask('coverage', { stationId: input.facts.id, options }));
-  return { coverage, yearStart, key };
+  return withInputs(region.id, async (inputs) => {
+    const input = inputs.find(({ facts }) => facts.code === code);
+    if (!input) return null;
+    const yearStart = await yearStartOf(inputs, basis);
+    const { season, days, maxMissingDays, exclude } = basis;
+    const options = { yearStart, season, days, maxMissingDays, exclude };
+    const key = resultKey('coverage', { values: { ...basis, yearStart }, keys: COVERAGE_KEYS }, [input], 'none');
+    const coverage = await cached('coverage', key, async () => {
+      const { years, hash } = await runTask('coverage', { stationId: input.facts.id, options });
+      checkAsRead([input], [hash]);
+      return years;
+    });
+    return { coverage, yearStart, key };
+  });
 }

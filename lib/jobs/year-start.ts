@@ -2,6 +2,7 @@ import { type Basis, BasisError, type BasisKey, seasonProblem } from '../basis.t
 import { resolveYearStart } from '../region/year-start.ts';
 import { cached } from './cached.ts';
 import { runTask } from './pool.ts';
+import { checkAsRead } from './region-inputs.ts';
 import { resultKey, type StationInput } from './result-key.ts';
 import { chunksOf } from './share-out.ts';
 
@@ -20,19 +21,18 @@ export async function yearStartOf(stations: readonly StationInput[], basis: Basi
 
 async function regimesOf(stations: readonly StationInput[], basis: Basis): Promise<Float64Array[]> {
   const recorded = stations.filter(({ dataHash }) => dataHash !== null);
-  const key = resultKey('regimes', { values: basis, keys: KEYS }, recorded, 'area');
-  const ratios = await cached('regimes', key, async () => {
-    const ids = recorded.map(({ facts }) => facts.id);
-    const chunks = await Promise.all(
-      chunksOf(ids).map((chunk) => runTask('regimes', { stationIds: Int32Array.from(chunk), exclude: basis.exclude })),
-    );
-    const all = new Float64Array(ids.length * MONTHS);
-    let at = 0;
-    for (const chunk of chunks) {
-      all.set(chunk, at);
-      at += chunk.length;
-    }
-    return all;
-  });
-  return recorded.map((_, i) => ratios.subarray(i * MONTHS, (i + 1) * MONTHS));
+  const key = resultKey('regimes', { values: basis, keys: KEYS }, recorded, 'none');
+  const chunks = await cached('regimes', key, () =>
+    Promise.all(
+      chunksOf(recorded).map(async (chunk) => {
+        const stationIds = chunk.map(({ facts }) => facts.id);
+        const { ratios, hashes } = await runTask('regimes', { stationIds, exclude: basis.exclude });
+        checkAsRead(chunk, hashes);
+        return ratios;
+      }),
+    ),
+  );
+  return chunks.flatMap((ratios) =>
+    Array.from({ length: ratios.length / MONTHS }, (_, i) => ratios.subarray(i * MONTHS, (i + 1) * MONTHS)),
+  );
 }

@@ -3,25 +3,23 @@ import { jsonText } from '@/lib/export/json';
 const TYPES = {
   json: 'application/json',
   geojson: 'application/geo+json',
-  csv: 'text/csv; charset=utf-8',
+  csv: 'text/csv; charset=utf-8; header=present',
+  metadata: 'application/csvm+json',
 } as const;
-export type Format = keyof typeof TYPES;
+export type AnswerType = keyof typeof TYPES;
 
 /** Answers a product under an entity tag; a client that has it already gets 304 and nothing more.
  *  @param tag   equal exactly when the product is equal
- *  @param make  called only when the product is wanted
- *  @param file  name to save under, for a download */
+ *  @param make  called only when the product is wanted */
 export function taggedAnswer(
   request: Request,
-  { tag, format, file }: { tag: string; format: Format; file?: string },
+  { tag, type, headers = {} }: { tag: string; type: AnswerType; headers?: Record<string, string> },
   make: () => string,
 ): Response {
   const etag = `"${tag}"`;
-  const headers = { etag, 'cache-control': 'private, no-cache' };
-  if (matches(request.headers.get('if-none-match'), etag)) return new Response(null, { status: 304, headers });
-  return new Response(make(), {
-    headers: { ...headers, 'content-type': TYPES[format], ...(file === undefined ? {} : attachment(file)) },
-  });
+  const always = { etag, 'cache-control': 'private, no-cache' };
+  if (matches(request.headers.get('if-none-match'), etag)) return new Response(null, { status: 304, headers: always });
+  return new Response(make(), { headers: { ...always, 'content-type': TYPES[type], ...headers } });
 }
 
 /** If-None-Match compares weakly (RFC 9110, 13.1.2). */

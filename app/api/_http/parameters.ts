@@ -8,7 +8,9 @@ export const narrowingParameters = {
   stations: z
     .string()
     .optional()
-    .describe('codes of the stations to answer, with commas between; ranks and adjusted p stay those of the region'),
+    .describe(
+      'codes of the stations to answer, with commas between (a comma inside a code as %2C); ranks and adjusted p stay those of the region',
+    ),
   in: z
     .string()
     .regex(/^-?[\d.]+(,-?[\d.]+){3}$/, 'must be west,south,east,north in degrees')
@@ -47,9 +49,18 @@ export function basisOf(request: Request, region: { basis: Basis }): Basis {
 export function narrowingOf({ stations, in: bounds }: { stations?: string; in?: string }): Narrowing {
   const [west, south, east, north] = (bounds ?? '').split(',').map(Number);
   return {
-    ...(stations === undefined ? {} : { codes: stations.split(',') }),
+    ...(stations === undefined ? {} : { codes: stations.split(',').map(decodedCode) }),
     ...(bounds === undefined ? {} : { bounds: { west, south, east, north } }),
   };
+}
+
+/** A code that holds a comma or a percent sign comes with it as %2C or %25. */
+function decodedCode(text: string): string {
+  try {
+    return decodeURIComponent(text);
+  } catch {
+    throw new Problem('bad-parameter', `"${text}" is no station code: write a percent sign as %25 and a comma as %2C.`);
+  }
 }
 
 /** Reads a JSON body.

@@ -2,6 +2,7 @@ import * as z from 'zod';
 import { BasisError } from '@/lib/basis';
 import { IntakeError } from '@/lib/intake/types';
 import { StoreBusyError } from '@/lib/store/busy';
+import { StoreError, type StoreProblem } from '@/lib/store/errors';
 
 /** Every way in which a request can fail: status and title in one place (RFC 9457, `type` ends in the code). */
 const PROBLEMS = {
@@ -15,6 +16,7 @@ const PROBLEMS = {
   'bad-file': { status: 422, title: 'The file cannot be taken' },
   busy: { status: 503, title: 'The database is busy' },
   'no-space': { status: 507, title: 'There is not enough disk space' },
+  'no-database': { status: 503, title: 'The database cannot be used' },
   unexpected: { status: 500, title: 'Something went wrong in the program' },
 } as const;
 export type ProblemCode = keyof typeof PROBLEMS;
@@ -34,11 +36,33 @@ export class Problem extends Error {
   }
 }
 
+/** The store's problems as ours. Its messages may name files of the server, so only those about input are passed on. */
+const OF_THE_STORE: Record<StoreProblem, ProblemCode> = {
+  exists: 'conflict',
+  'not-found': 'not-found',
+  'bad-input': 'bad-body',
+  missing: 'no-database',
+  unwritable: 'no-database',
+  'not-a-database': 'no-database',
+  'not-hungerstone': 'no-database',
+  newer: 'no-database',
+  'bad-url': 'no-database',
+  'in-use': 'busy',
+  lost: 'unexpected',
+};
+
+function storeProblem({ code, message }: StoreError): Problem {
+  const ours = OF_THE_STORE[code];
+  if (ours === 'no-database') return new Problem(ours, 'The server’s own messages say why.');
+  return new Problem(ours, message);
+}
+
 /** Any error as a problem. One that nobody foresaw gets a neutral sentence: it may hold paths or data. */
 export function problemFrom(error: unknown): Problem {
   if (error instanceof Problem) return error;
   if (error instanceof BasisError) return new Problem('bad-basis', error.message);
   if (error instanceof IntakeError) return new Problem('bad-file', error.message, { problem: error.problem });
+  if (error instanceof StoreError && OF_THE_STORE[error.code] !== 'unexpected') return storeProblem(error);
   if (error instanceof StoreBusyError) {
     return new Problem('busy', 'Another program is writing to the database. Try again in a moment.');
   }
@@ -57,7 +81,8 @@ function issueWords(error: z.ZodError): string {
 export function problemResponse(error: unknown): Response {
   const { code, detail, more } = problemFrom(error);
   const { status, title } = PROBLEMS[code];
-  if (code === 'unexpected') process.emitWarning(error instanceof Error ? error : String(error));
+  if (code === 'unexpected' || code === 'no-database')
+    process.emitWarning(error instanceof Error ? error : String(error));
   const body = { ...more, type: `urn:hungerstone:problem:${code}`, title, status, detail };
   return new Response(JSON.stringify(body), {
     status,

@@ -5,11 +5,17 @@ import { FLAG } from '../../series/daily-series.ts';
 import { readSeries } from '../../store/records.ts';
 import type { YearCoverage } from '../types.ts';
 
-/** How complete one station's record is, low-flow year by low-flow year (or its season); none without a record. */
-export function coverage(task: { stationId: number; options: MinimaOptions }): YearCoverage[] {
+/** How complete one station's record is, low-flow year by low-flow year (or its season); none without a record.
+ *  @returns `hash`: of the record as read, null without one */
+export function coverage(task: { stationId: number; options: MinimaOptions }): {
+  years: YearCoverage[];
+  hash: string | null;
+} {
   const { options } = task;
   let years: YearCoverage[] = [];
-  readSeries([task.stationId], (_, series) => {
+  let readHash: string | null = null;
+  readSeries([task.stationId], (_, series, hash) => {
+    readHash = hash;
     const minima = annualMinima(series, options);
     years = Array.from(minima.years, (year, i) => {
       const { first, last } = seasonSpan(year, options.yearStart, options.season);
@@ -34,7 +40,7 @@ export function coverage(task: { stationId: number; options: MinimaOptions }): Y
       };
     });
   });
-  return years;
+  return { years, hash: readHash };
 }
 
 function countBit(flags: Uint8Array, bit: number): number {

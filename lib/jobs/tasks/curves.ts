@@ -14,6 +14,8 @@ export interface PackedCurves {
   years: Int32Array;
   mean: Float64Array;
   median: Float64Array;
+  /** of each record as read; null without one */
+  hashes: (string | null)[];
 }
 
 /** Duration curves of the stations whose minima are given; one without a record has no days and NaN for all flows.
@@ -35,8 +37,9 @@ export function curves(task: {
     years: new Int32Array(stationIds.length),
     mean: new Float64Array(stationIds.length).fill(Number.NaN),
     median: new Float64Array(stationIds.length).fill(Number.NaN),
+    hashes: new Array<string | null>(stationIds.length).fill(null),
   };
-  readSeries([...stationIds], (id, series) => {
+  readSeries(stationIds, (id, series, hash) => {
     const at = place.get(id)!;
     const curve = curveOf(series, minima.get(id)!, task.options, task.period);
     packed.flows.set(curve.flows, at * STANDARD_EXCEEDANCES.length);
@@ -44,6 +47,7 @@ export function curves(task: {
     packed.years[at] = curve.years;
     packed.mean[at] = curve.mean;
     packed.median[at] = curve.median;
+    packed.hashes[at] = hash;
   });
   return packed;
 }

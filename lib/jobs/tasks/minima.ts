@@ -3,12 +3,21 @@ import type { AnnualMinima } from '../../lowflow/annual-minima-types.ts';
 import { readSeries } from '../../store/records.ts';
 import { type PackedMinima, packMinima } from '../pack-minima.ts';
 
-/** Annual minima of some stations; one without a record has no years. */
-export function minima(task: { stationIds: Int32Array; options: MinimaOptions }): PackedMinima {
-  const found = new Map<number, AnnualMinima>();
-  readSeries([...task.stationIds], (id, series) => {
-    found.set(id, annualMinima(series, task.options));
+/** Annual minima of some stations; one without a record has no years.
+ *  @returns `hashes`: of each record as read, null without one */
+export function minima(task: { stationIds: number[]; options: MinimaOptions }): {
+  packed: PackedMinima;
+  hashes: (string | null)[];
+} {
+  const found = new Map<number, { minima: AnnualMinima; hash: string }>();
+  readSeries(task.stationIds, (id, series, hash) => {
+    found.set(id, { minima: annualMinima(series, task.options), hash });
   });
   const none = annualMinima({ firstDay: 0, values: new Float64Array(), flags: new Uint8Array() }, task.options);
-  return packMinima(Array.from(task.stationIds, (stationId) => ({ stationId, minima: found.get(stationId) ?? none })));
+  return {
+    packed: packMinima(
+      task.stationIds.map((stationId) => ({ stationId, minima: found.get(stationId)?.minima ?? none })),
+    ),
+    hashes: task.stationIds.map((id) => found.get(id)?.hash ?? null),
+  };
 }
