@@ -1,0 +1,75 @@
+/** What a person answers about files that could not be taken as they are, and how that becomes the import's choices. */
+
+import type { FieldPlace, FlowUnit, Mapping } from '@/lib/intake/types';
+import type { FileChoices, ImportChoices, ImportProblem } from '@/lib/jobs/import-types';
+
+export interface Answer {
+  unit?: FlowUnit;
+  station?: string;
+  dateOrder?: Mapping['date']['order'];
+  value?: FieldPlace;
+  revise?: boolean;
+  /** leave the file out of the next try */
+  leaveOut?: boolean;
+}
+
+export type Answers = Record<string, Answer>;
+
+/** Whether a problem has been answered, so that trying again makes sense. */
+export function isAnswered(problem: ImportProblem, answer: Answer | undefined): boolean {
+  if (answer?.leaveOut) return true;
+  switch (problem.problem?.needs) {
+    case 'unit':
+    case 'area':
+      return answer?.unit !== undefined;
+    case 'station':
+      return Boolean(answer?.station?.trim());
+    case 'date-order':
+      return answer?.dateOrder !== undefined;
+    case 'mapping':
+      return answer?.value !== undefined;
+    case 'revise':
+      return answer?.revise === true;
+    default:
+      return false;
+  }
+}
+
+/** The choices of the next try: what was chosen before, with the answers laid over it.
+ *  Answers of earlier tries stay, so that a file that asked for its unit and then for its station keeps both. */
+export function withAnswers(
+  choices: ImportChoices,
+  problems: readonly ImportProblem[],
+  answers: Answers,
+): ImportChoices {
+  const files: Record<string, FileChoices> = { ...choices.files };
+  for (const problem of problems) {
+    const answer = answers[problem.file];
+    if (!answer || answer.leaveOut) continue;
+    const before = files[problem.file] ?? {};
+    const mapping = answeredMapping(before.mapping, problem, answer);
+    files[problem.file] = {
+      ...before,
+      ...(answer.unit === undefined ? {} : { unit: answer.unit }),
+      ...(answer.station === undefined ? {} : { station: answer.station.trim() }),
+      ...(mapping === undefined ? {} : { mapping }),
+    };
+  }
+  const revise = choices.revise || problems.some((problem) => answers[problem.file]?.revise);
+  return { ...choices, files, ...(revise ? { revise } : {}) };
+}
+
+function answeredMapping(
+  before: Partial<Mapping> | undefined,
+  { inspection }: ImportProblem,
+  { value, dateOrder }: Answer,
+): Partial<Mapping> | undefined {
+  const recognised = inspection?.mapping ?? null;
+  if (value === undefined && dateOrder === undefined) return before;
+  const date = before?.date ?? recognised?.date;
+  return {
+    ...before,
+    ...(value === undefined ? {} : { value, ...(recognised ? { layout: recognised.layout } : {}) }),
+    ...(dateOrder === undefined || !date ? {} : { date: { ...date, order: dateOrder } }),
+  };
+}

@@ -1,0 +1,147 @@
+import type { ImportReport, Layout } from '@/lib/intake/types';
+import type { TakenFile } from '@/lib/jobs/import-types';
+import { count, fixed, significant } from '../format.ts';
+import { ScrollFrame } from '../scroll-frame.tsx';
+import styles from './import.module.css';
+
+const LAYOUT_WORDS: Record<Layout, string> = {
+  long: 'one row a station and day',
+  wide: 'one row a day, one column a station',
+  'agency-tab': 'tab-delimited with comment lines and qualifier columns',
+  whitespace: 'station, year, month, day, flow, parted by blanks',
+  'fixed-width': 'columns of fixed width',
+};
+
+/** Rejected rows shown before the CSV file has to be opened. */
+const SHOWN_ROWS = 10;
+const SHOWN_STATIONS = 12;
+
+/** What became of one file. */
+export function FileReport({ file, rejectedHref }: { file: TakenFile; rejectedHref: string }) {
+  const { report } = file;
+  return (
+    <section className={styles.report} aria-label={`Report on ${file.file}`}>
+      <h3>{file.file}</h3>
+      <p className={styles.summary}>{report ? flowSummary(report) : file.summary}</p>
+      {report && <Counts report={report} rejectedHref={rejectedHref} />}
+      {[...new Set([...file.warnings, ...(report?.warnings ?? [])])].map((warning) => (
+        <p key={warning} className={styles.caution}>
+          <strong>Note</strong> {warning}
+        </p>
+      ))}
+      {report && <Rejected report={report} href={rejectedHref} />}
+      {report && <Stations report={report} />}
+    </section>
+  );
+}
+
+function flowSummary(report: ImportReport): string {
+  return `Daily flows in ${report.unit}: ${LAYOUT_WORDS[report.layout]}.`;
+}
+
+function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: string }) {
+  return (
+    <dl className={styles.counts}>
+      <div>
+        <dt>rows read</dt>
+        <dd>{fixed(report.rows)}</dd>
+      </div>
+      <div>
+        <dt>accepted</dt>
+        <dd>{fixed(report.accepted)}</dd>
+      </div>
+      <div data-attention={report.rejectedTotal > 0 || undefined}>
+        <dt>rejected</dt>
+        <dd>{report.rejectedTotal > 0 ? <a href={rejectedHref}>{fixed(report.rejectedTotal)}</a> : '0'}</dd>
+      </div>
+      <div>
+        <dt>stations</dt>
+        <dd>{fixed(report.stations.length)}</dd>
+      </div>
+      <div>
+        <dt>values</dt>
+        <dd>{fixed(report.stations.reduce((sum, station) => sum + station.values, 0))}</dd>
+      </div>
+    </dl>
+  );
+}
+
+function Rejected({ report, href }: { report: ImportReport; href: string }) {
+  if (report.rejectedTotal === 0) return null;
+  const rows = report.rejected.slice(0, SHOWN_ROWS);
+  return (
+    <ScrollFrame className={styles.scroll} label={`Rejected rows of ${report.file}`}>
+      <table className={styles.table}>
+        <caption>
+          {report.rejectedTotal > rows.length
+            ? `The first ${rows.length} of ${count(report.rejectedTotal, 'rejected row')}. `
+            : `${count(report.rejectedTotal, 'rejected row')}. `}
+          <a href={href} download>
+            All of them as CSV
+          </a>
+        </caption>
+        <thead>
+          <tr>
+            <th scope="col">Row</th>
+            <th scope="col">Text</th>
+            <th scope="col">Why</th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row) => (
+            <tr key={row.row}>
+              <td>{fixed(row.row)}</td>
+              <td className={styles.code}>{row.text}</td>
+              <td className={styles.reason}>{row.reason}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </ScrollFrame>
+  );
+}
+
+function Stations({ report }: { report: ImportReport }) {
+  const { stations } = report;
+  return (
+    <details className={styles.stations} open={stations.length <= SHOWN_STATIONS}>
+      <summary>{count(stations.length, 'station')} in the file</summary>
+      <ScrollFrame className={styles.scroll} label={`Stations in ${report.file}`}>
+        <table className={styles.table}>
+          <thead>
+            <tr>
+              <th scope="col">Station</th>
+              <th scope="col">Values</th>
+              <th scope="col">Missing</th>
+              <th scope="col">First</th>
+              <th scope="col">Last</th>
+              <th scope="col">Gaps</th>
+              <th scope="col">Longest gap, days</th>
+              <th scope="col">Doubled days</th>
+              <th scope="col">Zeros</th>
+              <th scope="col">Least, {report.unit}</th>
+              <th scope="col">Most, {report.unit}</th>
+            </tr>
+          </thead>
+          <tbody>
+            {stations.map((station) => (
+              <tr key={station.code}>
+                <th scope="row">{station.code}</th>
+                <td>{fixed(station.values)}</td>
+                <td>{fixed(station.missing)}</td>
+                <td>{station.first ?? '–'}</td>
+                <td>{station.last ?? '–'}</td>
+                <td>{fixed(station.gaps)}</td>
+                <td>{fixed(station.longestGapDays)}</td>
+                <td>{fixed(station.duplicates)}</td>
+                <td>{fixed(station.zeros)}</td>
+                <td>{significant(station.min)}</td>
+                <td>{significant(station.max)}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </ScrollFrame>
+    </details>
+  );
+}

@@ -1,0 +1,151 @@
+'use client';
+import { scaleLinear } from 'd3-scale';
+import { useWidth } from '@/app/components/use-width';
+import type { YearCoverage } from '@/lib/jobs/types';
+import styles from './coverage-strip.module.css';
+import { PLOT } from './plot-box';
+import { yearTicks } from './time-axis';
+import { useYearReader } from './year-reader';
+import { YearSlider } from './year-slider';
+
+interface Props {
+  years: (YearCoverage & { label: string })[];
+  /** first and last year of the axis, shared with the figure of the minima above */
+  span: [number, number];
+  summary: string;
+}
+
+const BAR = 44;
+const TOP = 4;
+const HEIGHT = TOP + BAR + 28;
+
+/** One bar a year, as tall as the share of its days that have a value: dark where the year counts, light where it does
+ *  not, hatched for provisional days, a cross on the base line where there is nothing. */
+export function CoverageStrip({ years, span, summary }: Props) {
+  const [frame, width] = useWidth<HTMLDivElement>(960);
+  const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, Math.max(PLOT.left + 1, width - PLOT.right)]);
+  const reader = useYearReader(years.map((year) => year.year));
+  const current = years.find((year) => year.year === reader.picked) ?? null;
+  const barWidth = Math.max(1.5, (x(1) - x(0)) * 0.78);
+  const base = TOP + BAR;
+
+  return (
+    <div ref={frame} className={styles.frame}>
+      <YearSlider
+        label={summary}
+        span={span}
+        year={current?.year ?? null}
+        text={current && coverageText(current)}
+        className={styles.strip}
+        yearAt={x.invert}
+        onYear={reader.pickNearest}
+        onKeyDown={reader.onKeyDown}
+        onLeave={reader.clear}
+      >
+        <svg width={width} height={HEIGHT} aria-hidden="true">
+          <Hatch />
+          <line className={styles.full} x1={PLOT.left} x2={width - PLOT.right} y1={TOP} y2={TOP} />
+          <text className={styles.axis} x={PLOT.left - 8} y={TOP} dy="0.6em" textAnchor="end">
+            all days
+          </text>
+          {years.map((year) => (
+            <Bar key={year.year} year={year} x={x(year.year)} width={barWidth} picked={year === current} />
+          ))}
+          <line className={styles.base} x1={PLOT.left} x2={width - PLOT.right} y1={base} y2={base} />
+          {yearTicks(span[0], span[1], width - PLOT.left - PLOT.right).map((year) => (
+            <text key={year} className={styles.axis} x={x(year)} y={base + 18} textAnchor="middle">
+              {year}
+            </text>
+          ))}
+        </svg>
+      </YearSlider>
+      <div className={styles.readout}>{current ? coverageText(current) : <Key years={years} />}</div>
+    </div>
+  );
+}
+
+function Hatch() {
+  return (
+    <defs>
+      <pattern id="coverage-hatch" width="4" height="4" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+        <rect width="4" height="4" className={styles.hatchGround} />
+        <line x1="0" y1="0" x2="0" y2="4" className={styles.hatchLine} />
+      </pattern>
+    </defs>
+  );
+}
+
+function Bar({ year, x, width, picked }: { year: YearCoverage; x: number; width: number; picked: boolean }) {
+  const base = TOP + BAR;
+  const valued = year.days - year.missingDays;
+  if (valued <= 0) return <path className={styles.absent} d={`M${x - 2.5},${base - 6}l5,5m0,-5l-5,5`} />;
+  const height = (valued / year.days) * BAR;
+  const provisional = (Math.min(valued, year.flagged.provisional) / year.days) * BAR;
+  return (
+    <g data-picked={picked || undefined} className={styles.bar}>
+      <rect
+        className={year.state === 'usable' ? styles.usable : styles.partial}
+        x={x - width / 2}
+        y={base - height}
+        width={width}
+        height={height}
+      />
+      {provisional > 0 && (
+        <rect fill="url(#coverage-hatch)" x={x - width / 2} y={base - height} width={width} height={provisional} />
+      )}
+    </g>
+  );
+}
+
+const FLAG_WORDS = [
+  ['estimated', 'estimated'],
+  ['provisional', 'provisional'],
+  ['ice', 'under ice'],
+  ['belowDetection', 'below detection'],
+  ['suspect', 'suspect'],
+  ['rejected', 'rejected'],
+] as const;
+
+/** One year's days in words. */
+export function coverageText(year: YearCoverage & { label: string }): string {
+  const flagged = FLAG_WORDS.filter(([key]) => year.flagged[key] > 0).map(
+    ([key, word]) => `${year.flagged[key]} ${word}`,
+  );
+  const state = { usable: 'the year counts', partial: 'the year does not count', missing: 'no values' }[year.state];
+  return [
+    `${year.label}: ${year.days - year.missingDays} of ${year.days} days with a value`,
+    flagged.length ? ` (${flagged.join(', ')})` : '',
+    `; ${state}`,
+    year.reason && year.state !== 'missing' ? `: ${year.reason}` : '',
+  ].join('');
+}
+
+function Key({ years }: { years: readonly YearCoverage[] }) {
+  const items = [
+    { show: years.some((year) => year.state === 'usable'), look: styles.usable, text: 'the year counts' },
+    { show: years.some((year) => year.state === 'partial'), look: styles.partial, text: 'does not count' },
+    { show: years.some((year) => year.flagged.provisional > 0), look: styles.hatched, text: 'provisional days' },
+  ];
+  return (
+    <span className={styles.key}>
+      {items
+        .filter((item) => item.show)
+        .map((item) => (
+          <span key={item.text}>
+            <svg width="12" height="12" aria-hidden="true">
+              <rect width="12" height="12" className={item.look} />
+            </svg>{' '}
+            {item.text}
+          </span>
+        ))}
+      {years.some((year) => year.state === 'missing') && (
+        <span>
+          <svg width="12" height="12" aria-hidden="true">
+            <path className={styles.absent} d="M3,3l6,6m0,-6l-6,6" />
+          </svg>{' '}
+          no values
+        </span>
+      )}
+    </span>
+  );
+}

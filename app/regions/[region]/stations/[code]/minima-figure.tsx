@@ -1,0 +1,204 @@
+'use client';
+import { scaleLinear } from 'd3-scale';
+import { useMemo } from 'react';
+import { significant } from '@/app/components/format';
+import { useWidth } from '@/app/components/use-width';
+import type { SlopeLine } from '@/lib/jobs/types';
+import styles from './minima-figure.module.css';
+import type { MinimaPoint } from './minima-points';
+
+import { PLOT } from './plot-box';
+import { yearTicks } from './time-axis';
+import { useYearReader } from './year-reader';
+import { YearSlider } from './year-slider';
+
+interface Props {
+  points: MinimaPoint[];
+  slope: SlopeLine | null;
+  trend: 'falling' | 'rising' | 'none' | null;
+  /** from m³/s to the unit shown */
+  factor: number;
+  unit: string;
+  days: number;
+  /** first and last year of the axis, shared with the coverage strip below */
+  span: [number, number];
+  summary: string;
+}
+
+const HEIGHT = 340;
+
+/** Annual minima on a real time axis: filled marks for the years used, hollow ones that hang from a bar for years
+ *  whose minimum is only an upper bound, with the slope.fitted and its interval. Arrow keys move through the years. */
+export function MinimaFigure({ points, slope, trend, factor, unit, days, span, summary }: Props) {
+  const [frame, width] = useWidth<HTMLDivElement>(960);
+  const { x, y } = useMemo(() => scales(points, slope, factor, span, width), [points, slope, factor, span, width]);
+  const reader = useYearReader(points.map((point) => point.year));
+  const current = points.find((point) => point.year === reader.picked) ?? null;
+
+  const bottom = HEIGHT - PLOT.bottom;
+  return (
+    <div ref={frame} className={styles.frame} data-trend={trend ?? 'unranked'}>
+      <p className={styles.axisName}>
+        Lowest {days}-day mean of each year, {unit}
+      </p>
+      <YearSlider
+        label={summary}
+        span={span}
+        year={current?.year ?? null}
+        text={current && readingText(current, factor, unit)}
+        className={styles.figure}
+        yearAt={x.invert}
+        onYear={reader.pickNearest}
+        onKeyDown={reader.onKeyDown}
+        onLeave={reader.clear}
+      >
+        <svg width={width} height={HEIGHT} aria-hidden="true">
+          {y.ticks(5).map((value) => (
+            <g key={value} className={value === 0 ? styles.zero : styles.grid}>
+              <line x1={PLOT.left} x2={width - PLOT.right} y1={y(value)} y2={y(value)} />
+              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
+                {significant(value)}
+              </text>
+            </g>
+          ))}
+          {yearTicks(span[0], span[1], width - PLOT.left - PLOT.right).map((year) => (
+            <g key={year} className={styles.years}>
+              <line x1={x(year)} x2={x(year)} y1={bottom} y2={bottom + 5} />
+              <text x={x(year)} y={bottom + 19} textAnchor="middle">
+                {year}
+              </text>
+            </g>
+          ))}
+          {slope && <Slope slope={slope} x={x} y={(flow) => y(flow * factor)} />}
+          {current && (
+            <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={PLOT.top} y2={bottom} />
+          )}
+          {points.map((point) => (
+            <Mark
+              key={point.year}
+              point={point}
+              x={x(point.year)}
+              y={y((point.minimum ?? 0) * factor)}
+              floor={bottom}
+            />
+          ))}
+        </svg>
+      </YearSlider>
+      <div className={styles.readout}>
+        {current ? readingText(current, factor, unit) : <Key points={points} slope={slope} />}
+      </div>
+    </div>
+  );
+}
+
+function scales(
+  points: readonly MinimaPoint[],
+  slope: SlopeLine | null,
+  factor: number,
+  span: [number, number],
+  width: number,
+) {
+  const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, Math.max(PLOT.left + 1, width - PLOT.right)]);
+  const flows = points.flatMap((point) => (point.minimum === null ? [] : [point.minimum * factor]));
+  const highest = Math.max(0, ...flows, ...(slope?.fitted.map((flow) => flow * factor) ?? []));
+  const y = scaleLinear([0, highest || 1], [HEIGHT - PLOT.bottom, PLOT.top]).nice(5);
+  return { x, y };
+}
+
+type Position = (value: number) => number;
+
+/** The slope.fitted over its interval. What lies below zero is cut off: there are no such flows. */
+function Slope({ slope, x, y }: { slope: SlopeLine; x: Position; y: Position }) {
+  const [left, right] = [x(slope.firstYear), x(slope.lastYear)];
+  return (
+    <g className={styles.slope} clipPath="url(#minima-plot)">
+      <clipPath id="minima-plot">
+        <rect x={left} y={0} width={Math.max(0, right - left)} height={y(0)} />
+      </clipPath>
+      {slope.low && slope.high && (
+        <path
+          className={styles.interval}
+          d={`M${left},${y(slope.low[0])}L${right},${y(slope.low[1])}V${y(slope.high[1])}L${left},${y(slope.high[0])}Z`}
+        />
+      )}
+      <line x1={left} x2={right} y1={y(slope.fitted[0])} y2={y(slope.fitted[1])} />
+    </g>
+  );
+}
+
+function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number; floor: number }) {
+  if (point.minimum === null) {
+    return <path className={styles.absent} d={`M${x - 3},${floor - 3}l6,-6m0,6l-6,-6`} />;
+  }
+  if (!point.usable) {
+    // A bar on top and a stalk down: the true minimum is here or lower.
+    return (
+      <g className={styles.atMost}>
+        <path d={`M${x - 4},${y}h8M${x},${y}v9m-3,-3l3,3l3,-3`} />
+      </g>
+    );
+  }
+  return <circle className={point.used ? styles.used : styles.outside} cx={x} cy={y} r={4} />;
+}
+
+/** One year in words: value, date, what is missing and why it is not used. */
+export function readingText(point: MinimaPoint, factor: number, unit: string): string {
+  const value = point.minimum === null ? 'no minimum' : `${significant(point.minimum * factor)} ${unit}`;
+  const parts = [
+    `${point.label}: ${point.usable || point.minimum === null ? value : `at most ${value}`}`,
+    point.date ? `, in the days to ${point.date}` : '',
+    `; ${point.missingDays === 1 ? '1 day' : `${point.missingDays} days`} missing`,
+    point.flaggedDays > 0 ? `, ${point.flaggedDays} flagged` : '',
+    point.reason ? `. Not used: ${point.reason}` : '',
+    point.usable && !point.used ? '. Usable, but not among the years compared' : '',
+  ];
+  return parts.join('');
+}
+
+function Key({ points, slope }: { points: readonly MinimaPoint[]; slope: SlopeLine | null }) {
+  return (
+    <span className={styles.key}>
+      {points.some((point) => point.used) && (
+        <KeyItem shape={<circle className={styles.used} cx="7" cy="7" r="4" />} text="year used" />
+      )}
+      {points.some((point) => point.usable && !point.used) && (
+        <KeyItem shape={<circle className={styles.outside} cx="7" cy="7" r="4" />} text="usable, not used" />
+      )}
+      {points.some((point) => !point.usable && point.minimum !== null) && (
+        <KeyItem
+          shape={
+            <g className={styles.atMost}>
+              <path d="M3,3h8M7,3v8m-3,-3l3,3l3,-3" />
+            </g>
+          }
+          text="at most: too much missing"
+        />
+      )}
+      {points.some((point) => point.minimum === null) && (
+        <KeyItem shape={<path className={styles.absent} d="M4,4l6,6m0,-6l-6,6" />} text="no minimum" />
+      )}
+      {slope && (
+        <KeyItem
+          shape={
+            <g className={styles.slope}>
+              <path className={styles.interval} d="M0,1L14,4V10L0,13Z" />
+              <line x1="0" x2="14" y1="7" y2="7" />
+            </g>
+          }
+          text="slope with its 95 % interval"
+        />
+      )}
+    </span>
+  );
+}
+
+function KeyItem({ shape, text }: { shape: React.ReactNode; text: string }) {
+  return (
+    <span>
+      <svg width="14" height="14" aria-hidden="true">
+        {shape}
+      </svg>{' '}
+      {text}
+    </span>
+  );
+}

@@ -1,0 +1,46 @@
+import { fixed, flowIn, significant, UNIT_WORDS, type Units } from '@/app/components/format';
+import { ScrollFrame } from '@/app/components/scroll-frame';
+import type { MinimaPoint } from './minima-points';
+import styles from './station-screen.module.css';
+
+/** Every year's minimum in figures, with the reason where it is not used. Folded away until wanted. */
+export function MinimaTable({ points, units, days }: { points: readonly MinimaPoint[]; units: Units; days: number }) {
+  return (
+    <details className={styles.minimaTable}>
+      <summary>The minima as a table</summary>
+      <ScrollFrame className={styles.scroll} label="Annual minima as a table">
+        <table>
+          <thead>
+            <tr>
+              <th scope="col">Year</th>
+              <th scope="col">
+                {days}-day minimum, {UNIT_WORDS[units].flow}
+              </th>
+              <th scope="col">To the day</th>
+              <th scope="col">Missing days</th>
+              <th scope="col">Flagged days</th>
+              <th scope="col">Used</th>
+            </tr>
+          </thead>
+          <tbody>
+            {points.map((point) => (
+              <tr key={point.year} data-unused={!point.usable || undefined}>
+                <th scope="row">{point.label}</th>
+                <td>
+                  {!point.usable && point.minimum !== null && 'at most '}
+                  {significant(flowIn(point.minimum, units))}
+                </td>
+                <td>{point.date ?? '–'}</td>
+                <td>{fixed(point.missingDays)}</td>
+                <td>{fixed(point.flaggedDays)}</td>
+                <td className={styles.words}>
+                  {point.used ? 'yes' : point.usable ? 'usable, not among the years compared' : `no: ${point.reason}`}
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </ScrollFrame>
+    </details>
+  );
+}

@@ -1,0 +1,200 @@
+import Link from 'next/link';
+import { DurationFigure } from '@/app/components/duration-figure/duration-figure';
+import { count, flowIn, UNIT_WORDS } from '@/app/components/format';
+import { apiHref, regionHref, stationHref } from '@/app/components/links';
+import { needleOf, needleWords } from '@/app/components/needle';
+import { NeedleMark } from '@/app/components/needle-mark';
+import ui from '@/app/components/ui.module.css';
+import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
+import type { StationDetail } from '@/lib/jobs/types';
+import type { RankingRow } from '@/lib/region/ranking-types';
+import type { RegionRow } from '@/lib/store/regions';
+import { flowName, shownFlows } from '../../curves/curves-view';
+import { CoverageStrip } from './coverage-strip';
+import { MinimaFigure } from './minima-figure';
+import { minimaPoints } from './minima-points';
+import { MinimaTable } from './minima-table';
+import { Neighbours } from './neighbours';
+import { PrintButton } from './print-button';
+import { placeOf } from './ranking-place';
+import { RankingSteps } from './ranking-steps';
+import { StationFactList } from './station-fact-list';
+import styles from './station-screen.module.css';
+import { TrendFigures } from './trend-figures';
+
+interface Props {
+  region: Pick<RegionRow, 'slug' | 'name'>;
+  detail: StationDetail;
+  rows: readonly RankingRow[];
+  query: URLSearchParams;
+}
+
+export function StationScreen({ region, detail, rows, query }: Props) {
+  const { station, row, basis, coverage } = detail;
+  const needle = needleOf(row);
+  const points = minimaPoints(detail.minima, basis.yearStart, row.trendOf === 'zero-days' ? [] : row.years);
+  const span = yearSpan(coverage.map((year) => year.year).concat(points.map((point) => point.year)));
+  const place = placeOf(rows, station.code);
+  const labelOf = (year: number) => lowFlowYearLabel(year, basis.yearStart);
+  const unit = UNIT_WORDS[basis.units].flow;
+  const mapQuery = new URLSearchParams(query);
+  mapQuery.set('station', station.code);
+  const table = (name: string) =>
+    apiHref(region.slug, `stations/${encodeURIComponent(station.code)}/${name}`, query, 'csv');
+
+  return (
+    <article className={styles.page}>
+      <header className={styles.head}>
+        <nav className={styles.steps} aria-label="Ways from here">
+          <Link href={regionHref(region.slug, 'map', mapQuery)} prefetch={false}>
+            ← Map and ranking
+          </Link>
+          <RankingSteps
+            previous={
+              place.previous && { ...place.previous, href: stationHref(region.slug, place.previous.code, query) }
+            }
+            next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
+          />
+        </nav>
+        <div className={styles.title}>
+          <NeedleMark needle={needle} size={56} />
+          <div>
+            <h1>{station.name}</h1>
+            <p className={styles.place}>
+              {row.rank === null ? needleWords(needle) : `ranked ${row.rank} of ${detail.ranked}`}
+              {row.rankLow !== null &&
+                row.rankHigh !== null &&
+                `, place ${row.rankLow}–${row.rankHigh} with 90 % certainty`}
+              {row.rank !== null && ` · ${needleWords(needle)}`}
+            </p>
+          </div>
+        </div>
+        <p className={styles.verdict}>{detail.verdict}</p>
+        {row.note && <p className={styles.note}>{row.note}</p>}
+      </header>
+
+      <StationFactList station={station} coverage={coverage} units={basis.units} labelOf={labelOf} />
+
+      <section className={styles.figures} aria-labelledby="minima-title">
+        <div className={styles.sectionHead}>
+          <h2 id="minima-title">Annual minima</h2>
+          <a className={ui.button} href={table('minima')} download>
+            Minima CSV
+          </a>
+        </div>
+        {points.length === 0 ? (
+          <p className={styles.nothing}>The record has no low-flow year with values.</p>
+        ) : (
+          <>
+            <MinimaFigure
+              points={points}
+              slope={row.trendOf === 'zero-days' ? null : detail.line}
+              trend={row.trend}
+              factor={flowIn(1, basis.units) ?? 1}
+              unit={unit}
+              days={basis.days}
+              span={span}
+              summary={`Annual ${basis.days}-day minima of ${station.name}, ${count(points.length, 'year')}.`}
+            />
+            <h3 className={styles.coverageTitle}>Days with a value</h3>
+            <CoverageStrip
+              years={coverage.map((year) => ({ ...year, label: labelOf(year.year) }))}
+              span={span}
+              summary={`Days with a value in each year of the record of ${station.name}.`}
+            />
+            <MinimaTable points={points} units={basis.units} days={basis.days} />
+          </>
+        )}
+      </section>
+
+      <aside className={styles.side}>
+        <TrendFigures row={row} units={basis.units} labelOf={labelOf} />
+        <Neighbours slug={region.slug} station={station} near={detail.neighbours} rows={rows} query={query} />
+      </aside>
+
+      <section className={styles.curve} aria-labelledby="curve-title">
+        <div className={styles.sectionHead}>
+          <h2 id="curve-title">Duration curve against the region</h2>
+          <a className={ui.button} href={table('curve')} download>
+            Curve CSV
+          </a>
+        </div>
+        <StationCurve slug={region.slug} detail={detail} query={query} />
+      </section>
+
+      <footer className={styles.foot}>
+        <PrintButton />
+        <p>
+          Screening figures for planning: permits, water rights and safety need the responsible authority’s method. A
+          trend is not a cause, and no significant trend is not no change.
+        </p>
+      </footer>
+    </article>
+  );
+}
+
+/** First and last year of the page's time axis: whole span of the record, at least a few years wide. */
+function yearSpan(years: readonly number[]): [number, number] {
+  if (years.length === 0) return [2000, 2004];
+  const first = Math.min(...years);
+  const last = Math.max(...years);
+  const pad = Math.max(0, Math.ceil((4 - (last - first)) / 2));
+  return [first - pad, last + pad];
+}
+
+function StationCurve({ slug, detail, query }: { slug: string; detail: StationDetail; query: URLSearchParams }) {
+  const { curve, station, basis, region } = detail;
+  const flowsOf = (flows: ArrayLike<number>) => shownFlows(flows, region.unit, basis.units);
+  if (!curve) {
+    const other = new URLSearchParams(query);
+    const ways = (['mean', 'median'] as const).filter((way) => way !== basis.normalise);
+    return (
+      <div className={styles.nothing}>
+        <p>No curve on these terms: {detail.noCurveReason ?? 'the record has no usable year in the period'}.</p>
+        {basis.normalise !== 'none' && (
+          <p className={styles.ways}>
+            {ways.map((way) => {
+              other.set('normalise', way);
+              return (
+                <Link key={way} className={ui.button} href={stationHref(slug, station.code, other)} prefetch={false}>
+                  Compare as a ratio to the {way} flow
+                </Link>
+              );
+            })}
+          </p>
+        )}
+      </div>
+    );
+  }
+  const { p10, p50, p90 } = region.band;
+  const line = {
+    code: station.code,
+    name: station.name,
+    href: stationHref(slug, station.code, query),
+    flows: flowsOf(curve.flows),
+  };
+  return (
+    <>
+      <DurationFigure
+        exceedances={Array.from(region.exceedances)}
+        lines={[line]}
+        band={{ p10: flowsOf(p10), p50: flowsOf(p50), p90: flowsOf(p90) }}
+        flowLabel={flowName(region.unit, basis.normalise, basis.units)}
+        x="normal"
+        y="log"
+        height={400}
+        summary={`Duration curve of ${station.name} over the band of the region’s stations.`}
+      />
+      <p className={styles.caption}>
+        {count(curve.days, 'day')} of {count(curve.years, 'usable year')}. Shaded: 10–90 % of the region’s stations;
+        dotted: their median.{' '}
+        <Link
+          href={`${regionHref(slug, 'curves', query)}${query.size ? '&' : '?'}stations=${encodeURIComponent(station.code)}`}
+          prefetch={false}
+        >
+          Compare with chosen stations
+        </Link>
+      </p>
+    </>
+  );
+}
