@@ -2,13 +2,12 @@
 import { useRouter } from 'next/navigation';
 import { type PointerEvent, useMemo, useState } from 'react';
 import { Area, CartesianGrid, ComposedChart, Line, Tooltip, XAxis, YAxis } from 'recharts';
-import { significant } from '../format.ts';
 import { useWidth } from '../use-width';
 import type { ExceedanceAxis, FlowAxis } from './axes.ts';
 import { CurveReadout } from './curve-readout';
 import styles from './duration-figure.module.css';
 import { EndLabels } from './end-labels';
-import { exceedanceText } from './figure-text.ts';
+import { exceedanceText, tickText } from './figure-text.ts';
 import { layOut } from './lay-out';
 import { lineLook } from './line-looks';
 import { nearestCurve } from './nearest-curve';
@@ -66,7 +65,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
     const curve = [...lines, ...thin].find((candidate) => candidate.code === code);
     if (curve) router.push(curve.href);
   };
-  const tickText = (ticks: typeof xTicks, print: (value: number) => string) => (at: number) => {
+  const labelOf = (ticks: typeof xTicks, print: (value: number) => string) => (at: number) => {
     const value = ticks.find((tick) => tick.at === at)?.value;
     return value === null || value === undefined ? '' : print(value);
   };
@@ -97,7 +96,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
             dataKey="x"
             domain={xDomain}
             ticks={xTicks.map((tick) => tick.at)}
-            tickFormatter={tickText(xTicks, exceedanceText)}
+            tickFormatter={labelOf(xTicks, exceedanceText)}
             interval={0}
             height={plan.axisHeight}
             tick={{ fill: 'var(--figure-ink)', fontSize: 12 }}
@@ -108,7 +107,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
             type="number"
             domain={flow.domain}
             ticks={flow.ticks.map((tick) => tick.at)}
-            tickFormatter={tickText(flow.ticks, significant)}
+            tickFormatter={labelOf(flow.ticks, tickText)}
             interval={0}
             width={plan.axisWidth}
             tick={{ fill: 'var(--figure-ink)', fontSize: 12 }}

@@ -17,7 +17,16 @@ export const FIRST_CHOICE = 6;
 export function readChoice(text: string | null): StationChoice {
   if (text === null) return { way: 'steepest' };
   if (text === 'view' || text === 'all') return { way: text };
-  return { way: 'codes', codes: text.split(',').filter(Boolean).map(decodeURIComponent) };
+  return { way: 'codes', codes: text.split(',').filter(Boolean).map(decoded) };
+}
+
+/** A code typed by hand may hold a bare percent sign. */
+function decoded(text: string): string {
+  try {
+    return decodeURIComponent(text);
+  } catch {
+    return text;
+  }
 }
 
 /** The text for the address, or null for the choice that needs none. */

@@ -36,9 +36,9 @@ export function StationPicker({ stations, chosen, lines, choice, leftOut, hasMap
   const searchId = useId();
   const ticked = new Set(chosen);
   const reasons = new Map(leftOut.map((station) => [station.code, station.reason]));
-  const wanted = search.trim().toLocaleLowerCase();
+  const wanted = search.trim().toLowerCase();
   const found = stations.filter((station) =>
-    `${station.name} ${station.code} ${station.river}`.toLocaleLowerCase().includes(wanted),
+    `${station.name} ${station.code} ${station.river}`.toLowerCase().includes(wanted),
   );
   const tick = (code: string, on: boolean) => {
     const codes = stations.map((station) => station.code).filter((other) => (other === code ? on : ticked.has(other)));

@@ -1,13 +1,14 @@
 'use client';
 import { scaleLinear } from 'd3-scale';
 import { useMemo } from 'react';
-import { significant } from '@/app/components/format';
+import { tickText } from '@/app/components/duration-figure/figure-text';
 import { useWidth } from '@/app/components/use-width';
 import type { SlopeLine } from '@/lib/jobs/types';
 import styles from './minima-figure.module.css';
 import type { MinimaPoint } from './minima-points';
 
 import { PLOT } from './plot-box';
+import { readingText } from './reading-text';
 import { yearTicks } from './time-axis';
 import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
@@ -45,7 +46,7 @@ export function MinimaFigure({ points, slope, trend, factor, unit, days, span, s
         label={summary}
         span={span}
         year={current?.year ?? null}
-        text={current && readingText(current, factor, unit)}
+        text={current && readingText(current, factor, unit, days)}
         className={styles.figure}
         yearAt={x.invert}
         onYear={reader.pickNearest}
@@ -57,7 +58,7 @@ export function MinimaFigure({ points, slope, trend, factor, unit, days, span, s
             <g key={value} className={value === 0 ? styles.zero : styles.grid}>
               <line x1={PLOT.left} x2={width - PLOT.right} y1={y(value)} y2={y(value)} />
               <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {significant(value)}
+                {tickText(value)}
               </text>
             </g>
           ))}
@@ -85,7 +86,7 @@ export function MinimaFigure({ points, slope, trend, factor, unit, days, span, s
         </svg>
       </YearSlider>
       <div className={styles.readout}>
-        {current ? readingText(current, factor, unit) : <Key points={points} slope={slope} />}
+        {current ? readingText(current, factor, unit, days) : <Key points={points} slope={slope} />}
       </div>
     </div>
   );
@@ -139,20 +140,6 @@ function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number
     );
   }
   return <circle className={point.used ? styles.used : styles.outside} cx={x} cy={y} r={4} />;
-}
-
-/** One year in words: value, date, what is missing and why it is not used. */
-export function readingText(point: MinimaPoint, factor: number, unit: string): string {
-  const value = point.minimum === null ? 'no minimum' : `${significant(point.minimum * factor)} ${unit}`;
-  const parts = [
-    `${point.label}: ${point.usable || point.minimum === null ? value : `at most ${value}`}`,
-    point.date ? `, in the days to ${point.date}` : '',
-    `; ${point.missingDays === 1 ? '1 day' : `${point.missingDays} days`} missing`,
-    point.flaggedDays > 0 ? `, ${point.flaggedDays} flagged` : '',
-    point.reason ? `. Not used: ${point.reason}` : '',
-    point.usable && !point.used ? '. Usable, but not among the years compared' : '',
-  ];
-  return parts.join('');
 }
 
 function Key({ points, slope }: { points: readonly MinimaPoint[]; slope: SlopeLine | null }) {

@@ -1,0 +1,98 @@
+import { describe, expect, test } from 'vitest';
+import { isAnswered, withAnswers } from '@/app/components/import/answers';
+import { sizeText } from '@/app/components/import/chosen-files';
+import type { Mapping } from '@/lib/intake/types';
+import type { ImportProblem } from '@/lib/jobs/import-types';
+
+const MAPPING: Mapping = {
+  layout: 'fixed-width',
+  station: { from: 'file-name' },
+  date: {
+    columns: [
+      [0, 4],
+      [4, 6],
+      [6, 8],
+    ],
+    order: 'ymd',
+  },
+  value: null,
+  flag: null,
+  unit: null,
+  missing: [],
+  decimal: '.',
+};
+
+type Needs = NonNullable<ImportProblem['problem']>['needs'];
+
+const problem = (file: string, needs?: Needs): ImportProblem => ({
+  file,
+  message: 'no',
+  problem: { file, message: 'no', remedy: 'Say.', ...(needs ? { needs } : {}) },
+  inspection: { mapping: MAPPING, header: null, preview: [], valueCandidates: [] },
+});
+
+describe('isAnswered', () => {
+  test.each([
+    ['unit', { unit: 'L/s' }],
+    ['area', { unit: 'L/s' }],
+    ['station', { station: '01' }],
+    ['date-order', { dateOrder: 'dmy' }],
+    ['mapping', { value: { slice: [8, 18] } }],
+    ['revise', { revise: true }],
+  ] as const)('%s: by its own answer only', (needs, answer) => {
+    expect(isAnswered(problem('f', needs), undefined)).toBe(false);
+    expect(isAnswered(problem('f', needs), {})).toBe(false);
+    expect(isAnswered(problem('f', needs), structuredClone(answer) as never)).toBe(true);
+  });
+
+  test('a blank station is no answer', () => {
+    expect(isAnswered(problem('f', 'station'), { station: '  ' })).toBe(false);
+  });
+
+  test('a file that asks nothing can only be left out', () => {
+    expect(isAnswered(problem('f'), { unit: 'L/s' })).toBe(false);
+    expect(isAnswered(problem('f'), { leaveOut: true })).toBe(true);
+  });
+});
+
+describe('withAnswers', () => {
+  test('keeps what was answered in an earlier try', () => {
+    const first = withAnswers({ by: 'Ada' }, [problem('f', 'unit')], { f: { unit: 'ft3/s' } });
+    const second = withAnswers(first, [problem('f', 'station')], { f: { station: ' 07 ' } });
+    expect(second).toEqual({ by: 'Ada', files: { f: { unit: 'ft3/s', station: '07' } } });
+  });
+
+  test('a chosen column keeps the layout that was recognised', () => {
+    const { files } = withAnswers({}, [problem('f', 'mapping')], { f: { value: { slice: [8, 18] }, unit: 'mm/d' } });
+    expect(files?.f).toEqual({ unit: 'mm/d', mapping: { layout: 'fixed-width', value: { slice: [8, 18] } } });
+  });
+
+  test('a date order keeps the columns that were recognised', () => {
+    const { files } = withAnswers({}, [problem('f', 'date-order')], { f: { dateOrder: 'mdy' } });
+    expect(files?.f.mapping?.date).toEqual({ columns: MAPPING.date.columns, order: 'mdy' });
+  });
+
+  test('revise stands for the whole import', () => {
+    expect(withAnswers({}, [problem('f', 'revise')], { f: { revise: true } }).revise).toBe(true);
+    expect(withAnswers({}, [problem('f', 'unit')], { f: { unit: 'L/s' } }).revise).toBeUndefined();
+  });
+
+  test('a file left out gets no choices, and what was given before is left unchanged', () => {
+    const before = { files: { g: { unit: 'L/s' as const } } };
+    const copy = structuredClone(before);
+    expect(withAnswers(before, [problem('f', 'unit')], { f: { leaveOut: true, unit: 'm3/s' } })).toEqual(before);
+    expect(before).toEqual(copy);
+  });
+});
+
+test('sizeText rounds to what is read at a glance', () => {
+  expect([0, 999, 1000, 1_234_567, 999_499, 999_500, 1.2e9].map(sizeText)).toEqual([
+    '0 bytes',
+    '999 bytes',
+    '1.0 kB',
+    '1.2 MB',
+    '999 kB',
+    '1.0 MB',
+    '1.2 GB',
+  ]);
+});
