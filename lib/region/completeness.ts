@@ -1,0 +1,22 @@
+/** How complete a station's years must be to be ranked. */
+export interface CompletenessRule {
+  /** usable years needed */
+  minYears: number;
+  /** share of the period, and of its first and its last ten years, that must be usable: 0 to 1 */
+  minCoverage: number;
+}
+
+/** Years at each end of the period that are judged by themselves, so that no record covers one end only. */
+export const END_YEARS = 10;
+
+/** Fewest usable years of `length` that make up the share; both sides compared as real numbers.
+ *  Example: 0.8 of 38 is 30.4, so 31 */
+export function yearsNeeded(minCoverage: number, length: number): number {
+  // 0.55 × 20 comes to 11.000000000000002, which 11 years do satisfy
+  return Math.ceil(minCoverage * length - 1e-9);
+}
+
+/** True when a third or more of the minima are zero: a slope would then say little. */
+export function tooManyZeros(zeroMinima: number, years: number): boolean {
+  return years > 0 && 3 * zeroMinima >= years;
+}

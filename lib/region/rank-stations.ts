@@ -1,0 +1,188 @@
+import type { Basis, ResolvedBasis } from '../basis.ts';
+import { checkStartMonth } from '../calendar/low-flow-year.ts';
+import { commonPeriod } from './common-period.ts';
+import { type Standing, standingOf } from './eligibility.ts';
+import { byCode, placesOf } from './places.ts';
+import type { Ranking, RankingRow, StationFacts, StationMinima, Trend } from './ranking-types.ts';
+import { warningsOf } from './ranking-warnings.ts';
+import { noteOf, rankingFigure } from './row-notes.ts';
+import { type TrendFigures, trendFamily } from './trend-family.ts';
+import { type UsedYears, usedYears } from './used-years.ts';
+
+const YEARS_PER_DECADE = 10;
+const LITRES = 1000;
+
+/** A station on its way through the ranking. */
+interface Entry {
+  row: RankingRow;
+  used: UsedYears;
+  standing: Standing;
+}
+
+/** The stations of a region in order of the trend in their annual minima, most strongly declining first.
+ *
+ *  Resolves the common period, says who is ranked and why others are not, tests and adjusts over all ranked stations,
+ *  and gives places by the basis's ranking figure. Stations with a third or more zero minima stand under Drying, in
+ *  order of the change in zero-flow days per decade, most first: a family of tests of their own, on minus the days.
+ *  @param stations   annual minima under the basis's days, season, completeness and `yearStart`; in any order
+ *  @param yearStart  start month of those low-flow years, resolved, 1–12
+ *  @returns          a row for every station: ranked, then drying, then the others by code
+ *  @throws RangeError when `yearStart` is no month
+ *  Sources: Mann–Kendall, Theil–Sen, serial correction and false discovery rate at the functions of `lib/statistics`. */
+export function rankRegion(stations: readonly StationMinima[], basis: Basis, yearStart: number): Ranking {
+  checkStartMonth('rankRegion', yearStart);
+  const resolved = resolveBasis(stations, basis, yearStart);
+  const entries = stations.map((each) => entryOf(each, resolved));
+  const of = (kind: Standing['kind']) => entries.filter(({ standing }) => standing.kind === kind);
+
+  const ranked = rank(of('ranked'), resolved);
+  const drying = orderDrying(of('drying'), resolved);
+  const unranked = of('unranked').sort((a, b) => byCode(a.row.code, b.row.code));
+  const all = [...ranked, ...drying, ...unranked];
+  for (const { row, used } of all) row.note = noteOf(row, used, resolved);
+
+  const rows = all.map(({ row }) => row);
+  const withTrend = (trend: Trend) => ranked.filter(({ row }) => row.trend === trend).length;
+  const counts = {
+    stations: rows.length,
+    ranked: ranked.length,
+    drying: drying.length,
+    unranked: unranked.length,
+    falling: withTrend('falling'),
+    rising: withTrend('rising'),
+  };
+  return { basis: resolved, rows, counts, warnings: warningsOf(rows, resolved, counts) };
+}
+
+function resolveBasis(stations: readonly StationMinima[], basis: Basis, yearStart: number): ResolvedBasis {
+  const period =
+    basis.period === 'common'
+      ? commonPeriod(
+          stations.map(({ minima }) => minima),
+          basis,
+        ).period
+      : basis.period;
+  return { ...basis, period, yearStart, asked: { period: basis.period, yearStart: basis.yearStart } };
+}
+
+/** A row with all that needs no test. */
+function entryOf({ station, minima }: StationMinima, basis: ResolvedBasis): Entry {
+  const used = usedYears(minima, basis.period);
+  const standing = standingOf(used, basis.period, basis);
+  const n = used.years.length;
+  const meanMinimum = n ? used.minima.reduce((sum, minimum) => sum + minimum, 0) / n : null;
+  const row: RankingRow = {
+    ...factsOf(station),
+    rank: null,
+    rankLow: null,
+    rankHigh: null,
+    yearsUsed: n,
+    firstYear: n ? used.years[0] : null,
+    lastYear: n ? used.years[n - 1] : null,
+    meanMinimum,
+    meanMinimumSpecific: perArea(meanMinimum, station.areaKm2),
+    slopePerDecade: null,
+    slopeLow: null,
+    slopeHigh: null,
+    percentPerDecade: null,
+    specificPerDecade: null,
+    tau: null,
+    z: null,
+    p: null,
+    pAdjusted: null,
+    trend: null,
+    trendOf: null,
+    zeroFlowYears: used.zeroMinima,
+    zeroDaysPerDecade: null,
+    zeroDaysLow: null,
+    zeroDaysHigh: null,
+    unrankedReason: standing.kind === 'ranked' ? null : standing.reason,
+    drying: standing.kind === 'drying',
+    note: '',
+    r1: null,
+    serialFactor: null,
+    intercept: null,
+    years: used.years,
+    minima: used.minima,
+  };
+  return { row, used, standing };
+}
+
+function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
+  const figures = trendFamily(
+    entries.map(({ used }) => ({ years: used.years, values: used.minima })),
+    basis.serialCorrection,
+  );
+  entries.forEach(({ row }, i) => {
+    const { slope, low, high, intercept } = figures[i];
+    const { meanMinimum } = row;
+    row.slopePerDecade = orNull(slope * YEARS_PER_DECADE);
+    row.slopeLow = orNull(low * YEARS_PER_DECADE);
+    row.slopeHigh = orNull(high * YEARS_PER_DECADE);
+    row.intercept = orNull(intercept);
+    // a mean below 0 (flow upstream) would turn the sign of the percentage
+    row.percentPerDecade =
+      meanMinimum !== null && meanMinimum > 0 ? orNull((100 * YEARS_PER_DECADE * slope) / meanMinimum) : null;
+    row.specificPerDecade = perArea(row.slopePerDecade, row.areaKm2);
+    takeTest(row, figures[i], basis.alpha, 'minima');
+  });
+  const { order, place } = placesOf(
+    entries.map(({ row }) => ({ figure: rankingFigure(row, basis.rankBy), code: row.code })),
+  );
+  entries.forEach(({ row }, i) => {
+    row.rank = place[i];
+  });
+  return order.map((i) => entries[i]);
+}
+
+function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
+  // minus the days, so that a station that dries for longer is falling
+  const figures = trendFamily(
+    entries.map(({ used }) => minusZeroDays(used)),
+    basis.serialCorrection,
+  );
+  entries.forEach(({ row }, i) => {
+    const { slope, low, high } = figures[i];
+    row.zeroDaysPerDecade = orNull(-slope * YEARS_PER_DECADE);
+    row.zeroDaysLow = orNull(-high * YEARS_PER_DECADE);
+    row.zeroDaysHigh = orNull(-low * YEARS_PER_DECADE);
+    takeTest(row, figures[i], basis.alpha, 'zero-days');
+  });
+  const { order } = placesOf(
+    entries.map(({ row }) => ({
+      figure: row.zeroDaysPerDecade === null ? null : -row.zeroDaysPerDecade,
+      code: row.code,
+    })),
+  );
+  return order.map((i) => entries[i]);
+}
+
+function minusZeroDays({ years, zeroDays }: UsedYears): { years: number[]; values: number[] } {
+  const known = years.map((_, i) => i).filter((i) => !Number.isNaN(zeroDays[i]));
+  return { years: known.map((i) => years[i]), values: known.map((i) => -zeroDays[i]) };
+}
+
+function takeTest(row: RankingRow, figures: TrendFigures, alpha: number, trendOf: RankingRow['trendOf']): void {
+  const { z, p, tau, pAdjusted, r1, serialFactor } = figures;
+  row.z = orNull(z);
+  row.p = orNull(p);
+  row.tau = orNull(tau);
+  row.pAdjusted = orNull(pAdjusted);
+  row.r1 = orNull(r1);
+  row.serialFactor = serialFactor;
+  row.trendOf = trendOf;
+  if (!(pAdjusted < alpha)) row.trend = 'none';
+  else row.trend = z < 0 ? 'falling' : 'rising';
+}
+
+/** m³/s over the drainage area, as L/s/km²; null without either. */
+function perArea(flowM3s: number | null, areaKm2: number | null): number | null {
+  return flowM3s === null || areaKm2 === null || !(areaKm2 > 0) ? null : (flowM3s * LITRES) / areaKm2;
+}
+
+/** NaN is null in rows, and −0 is 0. */
+const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value + 0);
+
+function factsOf({ id, code, name, river, latitude, longitude, areaKm2, influence }: StationFacts): StationFacts {
+  return { id, code, name, river, latitude, longitude, areaKm2, influence };
+}
