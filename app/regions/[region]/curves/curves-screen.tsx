@@ -2,6 +2,7 @@
 import { useSearchParams } from 'next/navigation';
 import { parseAsString, parseAsStringLiteral, useQueryStates } from 'nuqs';
 import { useMemo, useTransition } from 'react';
+import { Cautions } from '@/app/components/cautions';
 import { DurationFigure, type FigureBand, type FigureCurve } from '@/app/components/duration-figure/duration-figure';
 import { MAX_LINES } from '@/app/components/duration-figure/line-looks';
 import { count, type Units } from '@/app/components/format';
@@ -146,6 +147,7 @@ export function CurvesScreen(props: Props) {
               unit={unitName(unit, normalise, units)}
               kind={kind}
             />
+            <Cautions />
           </>
         )}
       </div>

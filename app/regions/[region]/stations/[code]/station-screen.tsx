@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import { Cautions } from '@/app/components/cautions';
 import { DurationFigure } from '@/app/components/duration-figure/duration-figure';
 import { count, flowIn, UNIT_WORDS } from '@/app/components/format';
 import { apiHref, regionHref, stationHref } from '@/app/components/links';
@@ -124,10 +125,7 @@ export function StationScreen({ region, detail, rows, query }: Props) {
 
       <footer className={styles.foot}>
         <PrintButton />
-        <p>
-          Screening figures for planning: permits, water rights and safety need the responsible authority’s method. A
-          trend is not a cause, and no significant trend is not no change.
-        </p>
+        <Cautions />
       </footer>
     </article>
   );

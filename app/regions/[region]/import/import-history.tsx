@@ -1,0 +1,81 @@
+import { count, fixed } from '@/app/components/format';
+import { ScrollFrame } from '@/app/components/scroll-frame';
+import styles from './import-page.module.css';
+import { UndoImport } from './undo-import';
+
+export interface ListedImport {
+  id: number;
+  /** ISO date and time, UTC */
+  when: string;
+  by: string;
+  kind: string;
+  fileName: string;
+  unit: string;
+  rows: number;
+  accepted: number;
+  rejected: number;
+}
+
+const KIND_WORDS: Record<string, string> = { flows: 'daily flows', registry: 'station list', layer: 'map layer' };
+
+/** Every import that stands, newest first, each with its way back. */
+export function ImportHistory({ slug, imports }: { slug: string; imports: readonly ListedImport[] }) {
+  return (
+    <section aria-labelledby="imports-title">
+      <h2 id="imports-title">Imports so far</h2>
+      {imports.length === 0 ? (
+        <p className={styles.none}>None yet.</p>
+      ) : (
+        <ScrollFrame className={styles.scroll} label="Imports so far">
+          <table className={styles.history}>
+            <thead>
+              <tr>
+                <th scope="col">File</th>
+                <th scope="col">What</th>
+                <th scope="col">When (UTC)</th>
+                <th scope="col">By</th>
+                <th scope="col">Rows</th>
+                <th scope="col">Accepted</th>
+                <th scope="col">Rejected</th>
+                <td />
+              </tr>
+            </thead>
+            <tbody>
+              {imports.map((entry) => (
+                <tr key={entry.id}>
+                  <th scope="row">{entry.fileName}</th>
+                  <td>
+                    {KIND_WORDS[entry.kind] ?? entry.kind}
+                    {entry.unit && `, ${entry.unit}`}
+                  </td>
+                  <td>
+                    <time dateTime={entry.when}>{entry.when.slice(0, 16).replace('T', ' ')}</time>
+                  </td>
+                  <td>{entry.by || '–'}</td>
+                  <td>{fixed(entry.rows)}</td>
+                  <td>{fixed(entry.accepted)}</td>
+                  <td>
+                    {entry.rejected > 0 ? (
+                      <a
+                        href={`/api/regions/${encodeURIComponent(slug)}/imports/${entry.id}/rejected`}
+                        title={`${count(entry.rejected, 'rejected row')} as CSV`}
+                        download
+                      >
+                        {fixed(entry.rejected)}
+                      </a>
+                    ) : (
+                      '0'
+                    )}
+                  </td>
+                  <td>
+                    <UndoImport slug={slug} id={entry.id} fileName={entry.fileName} kind={entry.kind} />
+                  </td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </ScrollFrame>
+      )}
+    </section>
+  );
+}

@@ -1,0 +1,51 @@
+import type { Metadata } from 'next';
+import { Header } from '@/app/components/header';
+import { ImportForm } from '@/app/components/import-form';
+import { listImports } from '@/lib/store/imports';
+import { listJobs } from '@/lib/store/jobs';
+import { type PageQuery, pageRequest } from '../page-request';
+import { ImportHistory } from './import-history';
+import styles from './import-page.module.css';
+
+export const metadata: Metadata = { title: 'Import' };
+
+interface Props {
+  params: Promise<{ region: string }>;
+  searchParams: Promise<PageQuery>;
+}
+
+/** Bring files into a region, see what became of them, and take an import back. */
+export default async function ImportPage({ params, searchParams }: Props) {
+  const { region } = await pageRequest((await params).region, await searchParams);
+  const [imports, jobs] = await Promise.all([listImports(region.id), listJobs({ regionId: region.id, limit: 20 })]);
+  const running = jobs.find((job) => job.kind === 'import' && (job.state === 'waiting' || job.state === 'running'));
+  return (
+    <>
+      <Header region={region} page="import" />
+      <main id="main" className={styles.page}>
+        <header>
+          <h1>Import</h1>
+          <p className={styles.lead}>
+            Files of one import are taken together or not at all, and every import can be undone. Nothing is dropped in
+            silence: each rejected row is listed with its reason.
+          </p>
+        </header>
+        <ImportForm region={region.slug} runningJob={running?.id ?? null} />
+        <ImportHistory
+          slug={region.slug}
+          imports={imports.map((entry) => ({
+            id: entry.id,
+            when: entry.createdAt.toISOString(),
+            by: entry.by,
+            kind: entry.kind,
+            fileName: entry.fileName,
+            unit: entry.unit,
+            rows: entry.rows,
+            accepted: entry.accepted,
+            rejected: entry.rejected,
+          }))}
+        />
+      </main>
+    </>
+  );
+}
