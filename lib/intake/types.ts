@@ -14,7 +14,12 @@ export type FieldPlace = { column: number | string } | { slice: [number, number]
 /** How a file is to be read: as recognised, or as a person gave it by `--mapping` or on the screen. */
 export interface Mapping {
   layout: Layout;
-  station: { from: 'file-name' } | { from: 'column'; column: number | string } | { from: 'given'; code: string };
+  station:
+    | { from: 'file-name' }
+    | { from: 'column'; column: number | string }
+    | { from: 'given'; code: string }
+    /** wide layouts: each column's heading names its station */
+    | { from: 'header' };
   /** columns in the order that `order` names; one column holds a whole date */
   date: { columns: (number | string | [number, number])[]; order: 'ymd' | 'dmy' | 'mdy' };
   /** null in wide layouts, where every other column is a station */

@@ -1,0 +1,100 @@
+import * as z from 'zod';
+import { type FieldPlace, FLOW_UNITS, IntakeError, LAYOUTS, type Mapping } from './types.ts';
+
+const place = z.int().min(0);
+const column = z.union([place, z.string().min(1)]);
+const slice = z.tuple([place, place]).refine(([start, end]) => start < end, {
+  error: 'a slice is [start, end] with the end behind the start',
+});
+const field = z.union([z.strictObject({ column }), z.strictObject({ slice })]);
+
+const mappingSchema = z
+  .strictObject({
+    layout: z.enum(LAYOUTS),
+    station: z.union([
+      z.strictObject({ from: z.literal('file-name') }),
+      z.strictObject({ from: z.literal('header') }),
+      z.strictObject({ from: z.literal('column'), column }),
+      z.strictObject({ from: z.literal('given'), code: z.string().min(1) }),
+    ]),
+    date: z.strictObject({
+      columns: z.array(z.union([column, slice])).refine((columns) => columns.length === 1 || columns.length === 3, {
+        error: 'a date stands in one column, or in three: those of year, month and day',
+      }),
+      order: z.enum(['ymd', 'dmy', 'mdy']),
+    }),
+    value: field.nullable(),
+    flag: field.nullable(),
+    unit: z.enum(FLOW_UNITS).nullable(),
+    missing: z.array(z.string()),
+    decimal: z.enum(['.', ',']),
+    delimiter: z.enum([',', ';', '\t']),
+    where: z.strictObject({ column, equals: z.string() }),
+  })
+  .partial();
+
+/** What each key takes, in words for messages. */
+const TAKES: Record<string, string> = {
+  layout: LAYOUTS.join(', '),
+  station:
+    '{"from": "file-name"}, {"from": "header"}, {"from": "column", "column": 0} or {"from": "given", "code": "…"}',
+  date: '{"columns": [0], "order": "ymd"}, with one column or the three of year, month and day; order ymd, dmy or mdy',
+  value: '{"column": 2}, {"column": "flow"} or {"slice": [28, 38]}, positions from 0, ends exclusive',
+  flag: 'null, {"column": 3}, {"column": "flag"} or {"slice": [38, 40]}',
+  unit: FLOW_UNITS.join(', '),
+  missing: 'a list of texts',
+  decimal: '"." or ","',
+  delimiter: '",", ";" or a tab',
+  where: '{"column": "PARAM", "equals": "1"}',
+};
+
+/** Checks a mapping given as JSON; any subset of keys will do.
+ *  @param file  name of the mapping's file (or of the flow file), for messages
+ *  @throws IntakeError naming the first key that is unknown or has a bad value */
+export function parseMapping(input: unknown, file: string): Partial<Mapping> {
+  const result = mappingSchema.safeParse(input);
+  if (result.success) return result.data;
+  const issue = result.error.issues[0];
+  const key = String(
+    issue.code === 'unrecognized_keys' && issue.path.length === 0 ? issue.keys[0] : (issue.path[0] ?? ''),
+  );
+  const value = typeof input === 'object' && input !== null ? (input as Record<string, unknown>)[key] : input;
+  throw new IntakeError({
+    file,
+    value: JSON.stringify(value)?.slice(0, 200),
+    message:
+      key === ''
+        ? 'a mapping must be a JSON object'
+        : Object.hasOwn(TAKES, key)
+          ? `the mapping's “${key}” cannot be read`
+          : `a mapping has no key “${key}”`,
+    remedy: Object.hasOwn(TAKES, key)
+      ? `It takes ${TAKES[key]}`
+      : `Give any of ${Object.keys(TAKES).join(', ')}, for example {"unit": "m3/s"}`,
+    needs: 'mapping',
+  });
+}
+
+/** Position of a column given by position or by header name.
+ *  @throws IntakeError when the header has no such name */
+export function columnPosition(wanted: number | string, header: readonly string[] | null, file: string): number {
+  if (typeof wanted === 'number') return wanted;
+  const exact = header?.indexOf(wanted) ?? -1;
+  if (exact >= 0) return exact;
+  const alike = header?.findIndex((name) => name.trim().toLowerCase() === wanted.trim().toLowerCase()) ?? -1;
+  if (alike >= 0) return alike;
+  throw new IntakeError({
+    file,
+    value: wanted,
+    message: 'the mapping names a column that the file does not have',
+    remedy: header
+      ? `Its columns are ${header.map((name) => `“${name}”`).join(', ')}`
+      : 'The file has no header row: name columns by position, from 0',
+    needs: 'mapping',
+  });
+}
+
+/** The characters of a field in a fixed-width file; null for a column. */
+export function sliceOf(place: FieldPlace): [number, number] | null {
+  return 'slice' in place ? place.slice : null;
+}

@@ -1,0 +1,49 @@
+/** Powers of ten that a double holds exactly. */
+const POWERS = Float64Array.from({ length: 23 }, (_, exponent) => Number(`1e${exponent}`));
+
+const PLUS = 43;
+const MINUS = 45;
+const DECIMAL_NUMBER = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
+
+/** Reads a decimal number from bytes, to exactly the double that `Number(text)` gives.
+ *
+ *  Up to 15 significant digits the digits form a whole number that a double holds exactly, and one division by an exact
+ *  power of ten rounds correctly. Anything longer, and anything with an exponent, goes through `Number`.
+ *  @param decimal  byte that separates the decimals: 46 (`.`) or 44 (`,`)
+ *  @returns        NaN when the bytes from `start` to `end` (exclusive, already trimmed) are not one finite decimal
+ *                  number; hexadecimal, `Infinity` and thousands separators are none
+ *  Example: the bytes of "87.0" → 87 */
+export function parseDecimal(bytes: Uint8Array, start: number, end: number, decimal: number): number {
+  let at = start;
+  const sign = at < end ? bytes[at] : 0;
+  if (sign === MINUS || sign === PLUS) at++;
+  let whole = 0;
+  let significant = 0;
+  let digits = 0;
+  let decimals = -1;
+  for (; at < end; at++) {
+    const byte = bytes[at];
+    const digit = byte - 48;
+    if (digit >= 0 && digit <= 9) {
+      whole = whole * 10 + digit;
+      digits++;
+      if (whole !== 0) significant++;
+      if (decimals >= 0) decimals++;
+    } else if (byte === decimal && decimals < 0) decimals = 0;
+    else return parseSlowly(bytes, start, end, decimal);
+  }
+  if (digits === 0) return Number.NaN;
+  if (significant > 15 || decimals > 22) return parseSlowly(bytes, start, end, decimal);
+  const size = decimals > 0 ? whole / POWERS[decimals] : whole;
+  return sign === MINUS ? -size : size;
+}
+
+function parseSlowly(bytes: Uint8Array, start: number, end: number, decimal: number): number {
+  // No number that means anything is longer; a line of a million digits is not worth a string.
+  if (end - start > 400) return Number.NaN;
+  let text = '';
+  for (let at = start; at < end; at++) text += bytes[at] === decimal ? '.' : String.fromCharCode(bytes[at]);
+  if (decimal !== 46 && bytes.subarray(start, end).includes(46)) return Number.NaN;
+  const value = DECIMAL_NUMBER.test(text) ? Number(text) : Number.NaN;
+  return Number.isFinite(value) ? value : Number.NaN;
+}

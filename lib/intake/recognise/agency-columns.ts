@@ -1,0 +1,27 @@
+import { DAILY_DISCHARGE } from './find-unit.ts';
+
+/** Where an agency's tab-delimited table has its columns. */
+export interface AgencyColumns {
+  station: number;
+  date: number;
+  value: number;
+  flag: number;
+  candidates: number[];
+}
+
+const SERIES = /_\d{5}(?:_\d{5})?$/;
+
+/** Columns of a header such as `agency_cd site_no datetime 159456_00060_00003 159456_00060_00003_cd`: each series has a
+ *  column of its own and one of its qualifiers behind it. The value is the one daily mean discharge; where there is
+ *  none, or are several, −1 and the candidates.
+ *  @returns null when the header is of another kind */
+export function agencyColumns(header: readonly string[]): AgencyColumns | null {
+  const names = header.map((name) => name.trim().toLowerCase());
+  const station = names.indexOf('site_no');
+  const date = names.findIndex((name) => name === 'datetime' || name === 'date');
+  const candidates = names.flatMap((name, at) => (SERIES.test(name) ? [at] : []));
+  if (station < 0 || date < 0 || candidates.length === 0) return null;
+  const means = candidates.filter((at) => DAILY_DISCHARGE.test(names[at]));
+  const value = means.length === 1 ? means[0] : -1;
+  return { station, date, value, flag: value < 0 ? -1 : names.indexOf(`${names[value]}_cd`), candidates };
+}

@@ -1,0 +1,31 @@
+import { FLOW_UNITS, type FlowUnit, IntakeError } from '../types.ts';
+import { unitNamedIn, unitsNamedIn } from '../units.ts';
+
+/** A column of a public daily-values service: discharge (parameter 00060) in ft³/s, daily mean (statistic 00003). */
+export const DAILY_DISCHARGE = /_00060_00003$/;
+
+/** The unit that a file states, looked for where it is said most closely first: the value's heading, the column of
+ *  units, then comment and title lines (only when all of these together name just one).
+ *  @param headings  heading of the value column; in a wide table, of every station's column */
+export function findUnit(found: { headings: string[]; unitTexts: string[]; remarks: string[] }): FlowUnit | null {
+  if (found.headings.length > 0 && found.headings.every((heading) => DAILY_DISCHARGE.test(heading))) return 'ft3/s';
+  const inHeadings = new Set(found.headings.map(unitNamedIn));
+  if (inHeadings.size === 1) {
+    const [unit] = inHeadings;
+    if (unit !== null) return unit;
+  }
+  const inColumn = new Set(found.unitTexts);
+  if (inColumn.size === 1) return unitNamedIn([...inColumn][0]);
+  const inRemarks = new Set(found.remarks.flatMap(unitsNamedIn));
+  return inRemarks.size === 1 ? [...inRemarks][0] : null;
+}
+
+export function unitProblem(file: string, heading: string | null): IntakeError {
+  return new IntakeError({
+    file,
+    ...(heading ? { value: heading } : {}),
+    message: 'the file does not say in which unit its flows are',
+    remedy: `Say it: ${FLOW_UNITS.join(', ')} (mm/d is a depth over the drainage area)`,
+    needs: 'unit',
+  });
+}

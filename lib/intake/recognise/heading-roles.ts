@@ -1,0 +1,75 @@
+import { unitsNamedIn } from '../units.ts';
+
+/** What a column holds, by its heading. */
+export type HeadingRole =
+  | 'date'
+  | 'year'
+  | 'month'
+  | 'day'
+  | 'station'
+  /** may be a station or a code of another kind */
+  | 'maybe-station'
+  | 'value'
+  | 'flag'
+  | 'unit'
+  | 'quantity'
+  /** names and places: never read */
+  | 'ignored'
+  /** another measured quantity: rain, stage, … */
+  | 'other-quantity'
+  | 'unknown';
+
+const words = (text: string): Set<string> => new Set(text.split(' '));
+
+const EXACT: [HeadingRole, Set<string>][] = [
+  ['year', words('year yr yyyy y jahr annee año ano')],
+  ['month', words('month mon mo mm mth monat mois mes')],
+  ['day', words('day dd dy d tag jour dia')],
+  ['flag', words('cd sym symbol symbole qf qc e')],
+];
+
+/** A heading's role is that of the first list that holds one of its words, in this order. */
+const BY_WORD: [HeadingRole, Set<string>][] = [
+  [
+    'flag',
+    words('flag flags qualifier qualifiers quality qcode qualcode symbol sym status remark remarks grade approval'),
+  ],
+  ['unit', words('unit units einheit unité')],
+  ['quantity', words('param parameter variable')],
+  ['ignored', words('agency name nm river stream watercourse lat latitude lon long longitude tz timezone x')],
+  ['date', words('date datetime datum timestamp fecha dato data dates time')],
+  [
+    'value',
+    words('flow flows discharge streamflow q qdaily qmean qobs value values runoff abfluss debit débit caudal portata'),
+  ],
+  [
+    'value',
+    words('afvoer vattenföring vannføring virtaama průtok przepływ vazão wert valeur valor meanflow dailyflow'),
+  ],
+  [
+    'other-quantity',
+    words('rain rainfall precip precipitation prcp ppt snow swe temp temperature tmin tmax tmean tavg'),
+  ],
+  ['other-quantity', words('stage level height gageheight evap evaporation pet pe eto humidity wind srad dayl vp')],
+  ['station', words('station site gauge gage stn stationid siteid gaugeid messstelle pegel estacion')],
+  ['maybe-station', words('id code no number nr num')],
+];
+
+/** Words of a heading: "siteNo" → site, no; "flow_cfs" → flow, cfs. */
+function headingWords(heading: string): string[] {
+  return heading
+    .replace(/(\p{Ll})(\p{Lu})/gu, '$1 $2')
+    .toLowerCase()
+    .split(/[^\p{L}\p{N}]+/u)
+    .filter((word) => word !== '');
+}
+
+/** What a column holds, judged by its heading alone. A heading without a telling word that names a flow unit is a flow. */
+export function roleOfHeading(heading: string): HeadingRole {
+  const found = headingWords(heading);
+  const whole = found.join(' ');
+  for (const [role, list] of EXACT) if (list.has(whole)) return role;
+  if (found.length > 1 && found[found.length - 1] === 'cd') return found[0] === 'agency' ? 'ignored' : 'flag';
+  for (const [role, list] of BY_WORD) if (found.some((word) => list.has(word))) return role;
+  return unitsNamedIn(heading).length > 0 ? 'value' : 'unknown';
+}

@@ -1,0 +1,280 @@
+import { columnPosition } from '../mapping.ts';
+import { type InspectOptions, IntakeError, type Layout, type Mapping } from '../types.ts';
+import { unitNamedIn } from '../units.ts';
+import { agencyColumns } from './agency-columns.ts';
+import { assignColumns, type ColumnRoles, type WideColumn } from './assign-columns.ts';
+import { columnFacts, looksLikeDate, usesDecimalComma } from './column-facts.ts';
+import { findTableStart, type TableStart } from './find-header.ts';
+import { findUnit, unitProblem } from './find-unit.ts';
+import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount } from './sample.ts';
+import type { TablePlan } from './table-plan.ts';
+
+export interface PlanContext {
+  options: InspectOptions;
+  lineEnd: number;
+  marked: boolean;
+  /** comment lines */
+  remarks: string[];
+}
+
+/** A plan for rows whose fields are set apart by a delimiter, or by blanks (`delimiter` null). */
+export function planColumns(body: readonly SampleLine[], delimiter: string | null, context: PlanContext): TablePlan {
+  const { options, lineEnd, marked } = context;
+  const file = options.fileName;
+  const splitter = splitterFor(delimiter, lineEnd);
+  const rows = splitSample(body, splitter);
+  const start = tableStart(rows);
+  const data = rows.slice(start.firstRow);
+  refuseWithoutRows(file, rows, start, data);
+  const { header } = start;
+  const fieldCount = header?.length ?? usualCount(data);
+  const remarks = [...context.remarks, ...body.slice(0, start.firstRow).map(({ text }) => text)];
+  const roles = rolesOf(data, start, fieldCount, options);
+  const mapping = mappingOf(roles, data, {
+    header,
+    delimiter,
+    remarks,
+    options,
+    layout: layoutOf(roles, start, delimiter),
+  });
+  const position = (column: number | string | [number, number]): number => {
+    if (typeof column !== 'object') return columnPosition(column, header, file);
+    throw mappingProblem(file, 'the mapping gives characters, but the file has delimited columns');
+  };
+  const placeOf = (place: Mapping['value']): number =>
+    place === null ? -1 : position('slice' in place ? place.slice : place.column);
+  const wide = mapping.layout === 'wide' ? wideColumns(roles, header, mapping, fieldCount, position) : null;
+  const places = {
+    date: mapping.date.columns.map(position),
+    station: mapping.station.from === 'column' ? position(mapping.station.column) : -1,
+    value: wide ? -1 : placeOf(mapping.value),
+    flag: wide ? -1 : placeOf(mapping.flag),
+    where: mapping.where ? position(mapping.where.column) : -1,
+    unit: options.unit || options.mapping?.unit ? -1 : (roles.unitColumn ?? -1),
+  };
+  const required = Math.max(...places.date, places.station, places.value, places.where) + 1;
+  const dateTexts = places.date.length === 1 ? data.map(({ fields }) => fields[places.date[0]] ?? '') : [];
+  const warnings: string[] = [];
+  if (options.station && mapping.station.from === 'column') {
+    warnings.push(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
+  }
+  return {
+    ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, warnings, fieldCount },
+    firstLine: data[0].line,
+    leastFields: Math.max(required, leastFields(data, fieldCount)),
+    unitText: places.unit < 0 ? '' : (data.find(({ fields }) => fields[places.unit])?.fields[places.unit] ?? ''),
+    orderOpen: options.mapping?.date === undefined && dateTexts.some((text) => /^\d{1,2}[-/.]/.test(text)),
+    ...(symbolColumn(header, places.flag) ? { iceLetter: 'b' } : {}),
+    repeatsHeader: mapping.layout === 'agency-tab',
+    preview: rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + 7).map(({ fields }) => fields),
+    valueCandidates: roles.candidates.map((column) => ({
+      place: { column },
+      label: header?.[column] || `column ${column + 1}`,
+      samples: data.slice(0, 5).map(({ fields }) => fields[column] ?? ''),
+    })),
+    problems: problemsOf(file, mapping, roles, header, wide),
+  };
+}
+
+function tableStart(rows: readonly SampleRow[]): TableStart {
+  return findTableStart(rows, usualCount(rows));
+}
+
+function refuseWithoutRows(file: string, rows: SampleRow[], { header }: TableStart, data: SampleRow[]): void {
+  if (data.length > 0) return;
+  if (header !== null) {
+    throw new IntakeError({
+      file,
+      row: rows[rows.length - 1].line,
+      value: header.join(', ').slice(0, 200),
+      message: 'the file has a header but no rows of data below it',
+      remedy: 'Export it again with the days that it should hold',
+    });
+  }
+  throw new IntakeError({
+    file,
+    row: rows[0].line,
+    value: rows[0].fields.join(' ').slice(0, 200),
+    message: 'no dates are found in the file, so its layout is not recognised',
+    remedy:
+      'Give a table with one row a day: station, date and flow, or date and a column a station; or give a mapping that says where they stand',
+    needs: 'mapping',
+  });
+}
+
+function rolesOf(data: SampleRow[], start: TableStart, fieldCount: number, options: InspectOptions): ColumnRoles {
+  const agency = start.header && start.widthRow ? agencyColumns(start.header) : null;
+  if (agency) {
+    return {
+      ...{ date: [agency.date], partsOrder: null, station: agency.station, wide: null, unitColumn: null },
+      value: agency.value < 0 ? null : agency.value,
+      flag: agency.flag < 0 ? null : agency.flag,
+      quantityColumn: null,
+      candidates: agency.candidates,
+    };
+  }
+  const known = new Set((options.knownStations ?? []).flatMap(({ code, name }) => [code, name.toLowerCase()]));
+  const isKnown = (heading: string) => known.has(heading) || known.has(heading.toLowerCase());
+  return assignColumns(columnFacts(data, start.header, fieldCount), start.header, isKnown);
+}
+
+function layoutOf(roles: ColumnRoles, start: TableStart, delimiter: string | null): Layout {
+  if (roles.wide) return 'wide';
+  if (start.widthRow) return 'agency-tab';
+  return delimiter === null ? 'whitespace' : 'long';
+}
+
+/** What was recognised, with what a person gave laid over it. */
+function mappingOf(
+  roles: ColumnRoles,
+  data: readonly SampleRow[],
+  found: {
+    header: string[] | null;
+    delimiter: string | null;
+    remarks: string[];
+    options: InspectOptions;
+    layout: Layout;
+  },
+): Mapping {
+  const { header, delimiter, remarks, options } = found;
+  const valueColumns = roles.wide?.map(({ value }) => value) ?? (roles.value === null ? [] : [roles.value]);
+  const valueTexts = data.flatMap(({ fields }) => valueColumns.map((column) => fields[column] ?? ''));
+  const column = (at: number | null) => (at === null ? null : { column: at });
+  const where = quantityFilter(roles, data, remarks);
+  return {
+    layout: found.layout,
+    station: stationOf(roles, options),
+    date: { columns: roles.date, order: roles.partsOrder ?? 'ymd' },
+    value: roles.wide ? null : column(roles.value),
+    flag: roles.wide ? null : column(roles.flag),
+    missing: [],
+    decimal: delimiter !== ',' && usesDecimalComma(valueTexts) ? ',' : '.',
+    ...(delimiter === null ? {} : { delimiter }),
+    ...(where ? { where } : {}),
+    ...options.mapping,
+    unit:
+      options.unit ??
+      options.mapping?.unit ??
+      findUnit({
+        headings: valueColumns.map((at) => header?.[at] ?? ''),
+        unitTexts: roles.unitColumn === null ? [] : data.map(({ fields }) => fields[roles.unitColumn as number] ?? ''),
+        remarks,
+      }),
+  };
+}
+
+function stationOf(roles: ColumnRoles, options: InspectOptions): Mapping['station'] {
+  if (roles.wide) return { from: 'header' };
+  if (roles.station !== null) return { from: 'column', column: roles.station };
+  return options.station ? { from: 'given', code: options.station } : { from: 'file-name' };
+}
+
+/** Files that hold several quantities number them in a column; a title line says which number is discharge. */
+function quantityFilter(roles: ColumnRoles, data: readonly SampleRow[], remarks: string[]): Mapping['where'] | null {
+  const column = roles.quantityColumn;
+  if (column === null) return null;
+  const titled = remarks
+    .map((text) => /(?:discharge|flow)[^=]*\(\s*\w+\s*=\s*(\w+)\s*\)/i.exec(text)?.[1])
+    .find(Boolean);
+  if (titled) return { column, equals: titled };
+  const texts = new Set(data.map(({ fields }) => fields[column] ?? ''));
+  return texts.size === 1 ? { column, equals: [...texts][0] } : null;
+}
+
+/** The columns of a wide table; with a mapping's layout "wide", every column that is not the date's. */
+function wideColumns(
+  roles: ColumnRoles,
+  header: string[] | null,
+  mapping: Mapping,
+  fieldCount: number,
+  position: (column: number | string | [number, number]) => number,
+): WideColumn[] {
+  const dates = mapping.date.columns.map(position);
+  const all = Array.from({ length: fieldCount }, (_, at) => at).filter((at) => !dates.includes(at));
+  const columns =
+    roles.wide ??
+    all.map((value) => ({ name: header?.[value] ?? '', value, flag: null })).filter(({ name }) => name !== '');
+  const sharedUnit = columns.length > 0 && columns.every(({ name }) => unitNamedIn(name) !== null);
+  return columns.map((column) => ({
+    ...column,
+    name: (sharedUnit ? column.name.replace(/\s*[([][^)\]]*[)\]]\s*$/, '') : column.name).trim(),
+  }));
+}
+
+/** The fewest fields that a fair share of rows have: some files leave an empty flag off. The last row may be cut. */
+function leastFields(data: readonly SampleRow[], fieldCount: number): number {
+  const rows = data.slice(0, -1);
+  const shares = new Map<number, number>();
+  for (const { fields } of rows) shares.set(fields.length, (shares.get(fields.length) ?? 0) + 1 / rows.length);
+  return Math.min(fieldCount, ...[...shares].filter(([, share]) => share >= 0.05).map(([count]) => count));
+}
+
+function symbolColumn(header: readonly string[] | null, flag: number): boolean {
+  return flag >= 0 && /^sym(bol)?$/i.test(header?.[flag]?.trim() ?? '');
+}
+
+function mappingProblem(file: string, message: string, value?: string): IntakeError {
+  return new IntakeError({
+    file,
+    ...(value ? { value } : {}),
+    message,
+    remedy: 'Choose the columns on the screen, or give a mapping such as {"value": {"column": "flow"}}',
+    needs: 'mapping',
+  });
+}
+
+function problemsOf(
+  file: string,
+  mapping: Mapping,
+  roles: ColumnRoles,
+  header: readonly string[] | null,
+  wide: readonly WideColumn[] | null,
+): IntakeError[] {
+  const problems: IntakeError[] = [];
+  const shown = header?.join(', ').slice(0, 200);
+  if (mapping.date.columns.length === 0) problems.push(mappingProblem(file, 'no column holds dates', shown));
+  if (wide ? wide.length === 0 : mapping.value === null) {
+    const message =
+      roles.candidates.length > 1 ? 'several columns may hold the flows' : 'no column is known to hold the flows';
+    problems.push(mappingProblem(file, message, shown));
+  }
+  if (roles.quantityColumn !== null && !mapping.where) {
+    const name = header?.[roles.quantityColumn] ?? '';
+    problems.push(
+      new IntakeError({
+        file,
+        value: name,
+        message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
+        remedy: `Give a mapping such as {"where": {"column": "${name}", "equals": "1"}}`,
+        needs: 'mapping',
+      }),
+    );
+  }
+  const twice = wide?.find(({ name }, at) => wide.findIndex((other) => other.name === name) < at);
+  if (twice) {
+    problems.push(
+      new IntakeError({
+        file,
+        value: twice.name,
+        message: 'two columns have the same heading, so a station would have two values a day',
+        remedy: 'Give each station one column',
+      }),
+    );
+  }
+  if (mapping.unit === null) {
+    const heading = mapping.value && 'column' in mapping.value ? mapping.value.column : null;
+    problems.push(unitProblem(file, typeof heading === 'number' ? (header?.[heading] ?? null) : heading));
+  }
+  return problems;
+}
+
+/** True when rows have a date and a flow and nearly all have the fields that they should. */
+export function isSettled(plan: TablePlan, body: readonly SampleLine[]): boolean {
+  if (plan.mapping.value === null && plan.wide === null) return false;
+  const data = splitSample(body, plan.splitter).filter(({ line }) => line >= plan.firstLine);
+  const fitting = data.filter(({ fields }) => {
+    const right = fields.length >= plan.leastFields && fields.length <= plan.fieldCount;
+    return right && (plan.places.date.length === 3 || looksLikeDate(fields[plan.places.date[0]] ?? ''));
+  });
+  return fitting.length >= data.length * 0.9;
+}

@@ -1,0 +1,93 @@
+import { FixedWidthLines } from '../rows/fixed-width.ts';
+import { type FieldPlace, type InspectOptions, IntakeError, type Mapping, type ValueCandidate } from '../types.ts';
+import { findUnit, unitProblem } from './find-unit.ts';
+import { findFixedSlices, type Slice } from './fixed-slices.ts';
+import { type SampleLine, splitSample } from './sample.ts';
+import type { TablePlan } from './table-plan.ts';
+
+const words = ([start, end]: Slice): string => `characters ${start + 1}–${end}`;
+
+/** A plan for rows at fixed characters. The date is recognised; which of the numbers is the flow is never guessed.
+ *  @returns null when the lines do not look like it and no mapping says that they are */
+export function planFixedWidth(
+  body: readonly SampleLine[],
+  context: { options: InspectOptions; lineEnd: number; marked: boolean; remarks: string[] },
+): TablePlan | null {
+  const { options, lineEnd, marked } = context;
+  const given = options.mapping ?? {};
+  const guess = findFixedSlices(body);
+  if (given.layout !== 'fixed-width' && guess === null) return null;
+  const file = options.fileName;
+  const unit = options.unit ?? given.unit ?? findUnit({ headings: [], unitTexts: [], remarks: context.remarks });
+  const mapping: Mapping = {
+    layout: 'fixed-width',
+    station: options.station ? { from: 'given', code: options.station } : { from: 'file-name' },
+    date: { columns: guess?.date ?? [], order: 'ymd' },
+    value: null,
+    flag: null,
+    missing: [],
+    decimal: '.',
+    ...given,
+    unit,
+  };
+  const problems: IntakeError[] = [];
+  if (mapping.date.columns.length === 0) {
+    problems.push(mappingProblem(file, 'no year, month and day stand at the same characters on every line'));
+  } else if (mapping.value === null) {
+    problems.push(
+      mappingProblem(file, 'the rows hold several numbers at fixed characters; which are the flows is not said'),
+    );
+  }
+  if (unit === null) problems.push(unitProblem(file, null));
+
+  const slices = [...mapping.date.columns.map((place) => asSlice(place, file))];
+  const place = (wanted: FieldPlace | null): number => {
+    if (wanted === null) return -1;
+    slices.push(asSlice('slice' in wanted ? wanted.slice : wanted.column, file));
+    return slices.length - 1;
+  };
+  const places = {
+    date: mapping.date.columns.map((_, at) => at),
+    ...{ station: -1, value: place(mapping.value), flag: place(mapping.flag), where: -1, unit: -1 },
+  };
+  const shown = [...slices, ...(mapping.value === null ? (guess?.values ?? []) : [])];
+  return {
+    ...{ file, mapping, lineEnd, marked, header: null, places, problems },
+    splitter: new FixedWidthLines(slices, lineEnd),
+    firstLine: body[0].line,
+    fieldCount: slices.length,
+    leastFields: slices.length,
+    wide: null,
+    unitText: '',
+    orderOpen: false,
+    repeatsHeader: false,
+    preview: splitSample(body.slice(0, 8), new FixedWidthLines(shown, lineEnd)).map(({ fields }) => fields),
+    valueCandidates: (guess?.values ?? []).map((slice) => candidate(slice, body)),
+    warnings: [],
+  };
+}
+
+function candidate(slice: Slice, body: readonly SampleLine[]): ValueCandidate {
+  const samples = body.slice(0, 5).map(({ text }) => text.slice(...slice).trim());
+  return { place: { slice }, label: words(slice), samples };
+}
+
+function mappingProblem(file: string, message: string): IntakeError {
+  return new IntakeError({
+    file,
+    message,
+    remedy: 'Choose the column on the screen, or give a mapping such as {"value": {"slice": [28, 38]}, "unit": "mm/d"}',
+    needs: 'mapping',
+  });
+}
+
+function asSlice(place: number | string | [number, number], file: string): Slice {
+  if (Array.isArray(place)) return place;
+  throw new IntakeError({
+    file,
+    value: String(place),
+    message: 'a fixed-width file has no columns, only characters',
+    remedy: 'Give a slice such as [28, 38]: positions from 0, end exclusive',
+    needs: 'mapping',
+  });
+}

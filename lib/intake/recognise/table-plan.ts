@@ -1,0 +1,54 @@
+import type { DateOrder } from '../dates.ts';
+import type { LineSplitter } from '../rows/fields.ts';
+import type { IntakeError, KnownStation, Mapping, ValueCandidate } from '../types.ts';
+import type { WideColumn } from './assign-columns.ts';
+
+/** How a file is going to be read: the mapping, worked out to positions. */
+export interface TablePlan {
+  file: string;
+  mapping: Mapping;
+  splitter: LineSplitter;
+  lineEnd: number;
+  /** the file begins with the UTF-8 mark */
+  marked: boolean;
+  header: string[] | null;
+  /** line number of the first row of data */
+  firstLine: number;
+  /** fields that a row has, and the fewest that will do */
+  fieldCount: number;
+  leastFields: number;
+  /** positions among the fields of a row; −1 where there is none */
+  places: { date: number[]; station: number; value: number; flag: number; where: number; unit: number };
+  wide: WideColumn[] | null;
+  /** text that the unit column must hold on every row */
+  unitText: string;
+  /** day and month order are not yet known: the whole file must be asked */
+  orderOpen: boolean;
+  /** in this file's symbols the letter means ice */
+  iceLetter?: string;
+  /** agency files repeat their header for each station */
+  repeatsHeader: boolean;
+  preview: string[][];
+  valueCandidates: ValueCandidate[];
+  /** what stands against reading the file */
+  problems: IntakeError[];
+  warnings: string[];
+}
+
+/** A part of a mapping that recognition could not fill, or a person must answer. */
+export interface Findings {
+  /** what is understood of the file so far */
+  mapping: Mapping;
+  header: string[] | null;
+  firstLine: number;
+  orderOpen: boolean;
+}
+
+export type KnownStations = readonly KnownStation[] | null;
+
+/** The three orders with an example each, for messages. */
+export const ORDER_WORDS: Record<DateOrder, string> = {
+  ymd: 'year, month, day',
+  dmy: 'day, month, year',
+  mdy: 'month, day, year',
+};

@@ -1,0 +1,59 @@
+import type { CodeTable } from '../code-table.ts';
+import { NO_DAY } from '../dates.ts';
+import type { TablePlan } from '../recognise/table-plan.ts';
+import type { StationCodes } from '../station-codes.ts';
+import type { ValueReader } from '../value-reader.ts';
+import type { Fields } from './fields.ts';
+import { countProblem, DayReader, type DaySink, fieldIs, type RowReader, textOf } from './row-reader.ts';
+
+/** Rows of one value each: a station (in a column, or one for the whole file), a day, a value and perhaps a flag. */
+export class FlowRows implements RowReader {
+  /** rows of other quantities, left out */
+  leftOut = 0;
+  private readonly days: DayReader;
+  private readonly where: Uint8Array;
+  private readonly unit: Uint8Array;
+
+  /** @param onlyStation  the station of a file without a station column */
+  constructor(
+    private readonly plan: TablePlan,
+    private readonly parts: { stations: StationCodes; codes: CodeTable; values: ValueReader; sink: DaySink },
+    private readonly onlyStation: number,
+  ) {
+    this.days = new DayReader(plan);
+    this.where = new TextEncoder().encode(plan.mapping.where?.equals ?? '');
+    this.unit = new TextEncoder().encode(plan.unitText);
+  }
+
+  read(bytes: Uint8Array, fields: Fields, line: number): string | null {
+    const { plan, parts } = this;
+    const { places } = plan;
+    if (fields.count !== plan.fieldCount || fields.unclosed) {
+      const problem = countProblem(bytes, fields, plan);
+      if (problem !== null) return problem;
+    }
+    if (places.where >= 0 && !fieldIs(bytes, fields, places.where, this.where)) {
+      this.leftOut++;
+      return null;
+    }
+    const day = this.days.day(bytes, fields);
+    if (day <= NO_DAY) return this.days.problem(day, bytes, fields);
+    if (!parts.values.read(bytes, fields.start[places.value], fields.end[places.value])) {
+      return `“${textOf(bytes, fields, places.value)}” is not a flow`;
+    }
+    if (places.unit >= 0 && !fieldIs(bytes, fields, places.unit, this.unit)) {
+      return `the unit “${textOf(bytes, fields, places.unit)}” is not that of the other rows, “${plan.unitText}”`;
+    }
+    let station = this.onlyStation;
+    if (places.station >= 0) {
+      station = parts.stations.ofField(bytes, fields.start[places.station], fields.end[places.station], line);
+      if (station < 0) return 'the row names no station';
+    }
+    const hasFlag = places.flag >= 0 && places.flag < fields.count;
+    const code = hasFlag
+      ? parts.codes.code(bytes, fields.start[places.flag], fields.end[places.flag], parts.values.valueText, line)
+      : parts.codes.code(bytes, 0, 0, parts.values.valueText, line);
+    parts.sink.take(station, day, parts.values.value, code, line);
+    return null;
+  }
+}

@@ -1,0 +1,87 @@
+import { dateProblem, dayOfParts, NO_DAY, parseDate, parseWhole } from '../dates.ts';
+import type { TablePlan } from '../recognise/table-plan.ts';
+import { decodeText } from '../text-encoding.ts';
+import type { Fields } from './fields.ts';
+
+/** Takes the values of rows as they are read. */
+export interface DaySink {
+  /** @param station  number of the station, in order of appearance in the file */
+  take(station: number, day: number, value: number, code: number, line: number): void;
+}
+
+/** Reads rows that have been split into fields. */
+export interface RowReader {
+  /** @returns null when the row was taken (or does not count), else why it was not */
+  read(bytes: Uint8Array, fields: Fields, line: number): string | null;
+}
+
+/** Reads the date of a row, in one column or in three. */
+export class DayReader {
+  private readonly columns: readonly number[];
+
+  constructor(private readonly plan: TablePlan) {
+    this.columns = plan.places.date;
+  }
+
+  /** Day number; below NO_DAY when the row names none. */
+  day(bytes: Uint8Array, fields: Fields): number {
+    const columns = this.columns;
+    if (columns.length === 1) {
+      return parseDate(bytes, fields.start[columns[0]], fields.end[columns[0]], this.plan.mapping.date.order);
+    }
+    const [first, second, third] = columns;
+    const a = parseWhole(bytes, fields.start[first], fields.end[first]);
+    const b = parseWhole(bytes, fields.start[second], fields.end[second]);
+    const c = parseWhole(bytes, fields.start[third], fields.end[third]);
+    const order = this.plan.mapping.date.order;
+    if (order === 'ymd') return dayOfParts(a, b, c);
+    return order === 'dmy' ? dayOfParts(c, b, a) : dayOfParts(c, a, b);
+  }
+
+  /** Why `day` answered below NO_DAY. */
+  problem(day: number, bytes: Uint8Array, fields: Fields): string {
+    const texts = this.columns.map((column) => textOf(bytes, fields, column));
+    if (this.columns.length === 1) return dateProblem(day, texts[0]);
+    const numeric = texts.every((text) => /^\d+$/.test(text));
+    return dateProblem(numeric ? day : NO_DAY, texts.every((text) => text === '') ? '' : texts.join(' '));
+  }
+}
+
+/** Text of a field, shortened for a message. */
+export function textOf(bytes: Uint8Array, fields: Fields, column: number): string {
+  if (column < 0 || column >= fields.count) return '';
+  return decodeText(bytes, fields.start[column], Math.min(fields.end[column], fields.start[column] + 60));
+}
+
+/** Why a row of the wrong number of fields is not taken; null when the surplus is empty, or no more is needed. */
+export function countProblem(bytes: Uint8Array, fields: Fields, plan: TablePlan): string | null {
+  if (fields.unclosed) return 'a quoted field is not closed on its row';
+  const { count } = fields;
+  if (count === plan.fieldCount) return null;
+  if (count < plan.fieldCount) {
+    if (count >= plan.leastFields) return null;
+    if (plan.mapping.layout === 'fixed-width') return 'the row ends before its last field: it is cut short';
+    return `the row has ${count} of ${plan.fieldCount} fields: it is cut short or damaged`;
+  }
+  for (let at = plan.fieldCount; at < count; at++) {
+    if (fields.end[at] > fields.start[at]) {
+      const wanted = `${count} fields where ${plan.header ? 'the header has' : 'other rows have'} ${plan.fieldCount}`;
+      return `the row has ${wanted} (${textOf(bytes, fields, at)})`;
+    }
+  }
+  return null;
+}
+
+/** True when a row's field holds exactly these bytes. */
+export function fieldIs(bytes: Uint8Array, fields: Fields, column: number, wanted: Uint8Array): boolean {
+  const start = fields.start[column];
+  if (column >= fields.count || fields.end[column] - start !== wanted.length) return false;
+  for (let at = 0; at < wanted.length; at++) if (bytes[start + at] !== wanted[at]) return false;
+  return true;
+}
+
+/** True when none of a row's fields holds anything: a line of delimiters, as spreadsheets leave behind. */
+export function isEmptyRow(fields: Fields): boolean {
+  for (let at = 0; at < fields.count; at++) if (fields.end[at] > fields.start[at]) return false;
+  return true;
+}

@@ -1,0 +1,61 @@
+import { FLOW_UNITS, type FlowUnit } from './types.ts';
+
+/** m³/s in one unit. Exact by definition: a foot is 0.3048 m, a day 86,400 s (NIST SP 811, 2008). */
+const FACTORS: Record<Exclude<FlowUnit, 'mm/d'>, number> = {
+  'm3/s': 1,
+  'L/s': 0.001,
+  'ft3/s': 0.028316846592,
+  'ML/d': 1000 / 86400,
+};
+
+/** Factor from a unit to m³/s.
+ *  @param areaKm2  drainage area, km²; only mm/d, a depth over it, needs one
+ *  @returns        NaN for mm/d without a positive area
+ *  Example: toM3s('mm/d', 86.4) → 1 */
+export function toM3s(unit: FlowUnit, areaKm2: number | null): number {
+  if (!FLOW_UNITS.includes(unit))
+    throw new RangeError(`toM3s: unit must be one of ${FLOW_UNITS.join(', ')}, got ${unit}`);
+  if (unit !== 'mm/d') return FACTORS[unit];
+  return areaKm2 !== null && areaKm2 > 0 ? areaKm2 / 86.4 : Number.NaN;
+}
+
+/** How files write the units, after `plain` below has taken case, underscores and raised digits out. What stands per
+ *  area (L/s/km²) is another quantity. */
+const PER_SECOND = String.raw`(?:\/ ?s(?:ec(?:ond)?)?|\.? ?s\^?-1| per second)`;
+const PER_DAY = String.raw`(?:\/ ?d(?:ay)?|\.? ?d\^?-1| per day)`;
+const NOT_PER_AREA = '(?![a-z0-9]|[ ./]{0,2}(?:km|mi|ha)[0-9]?)';
+const PATTERNS: Record<FlowUnit, RegExp> = {
+  'm3/s': pattern(`m\\^?3${PER_SECOND}|m3 ?s|cumecs?|cms|cubic met(?:er|re)s?${PER_SECOND}|cu\\.? ?m${PER_SECOND}`),
+  'L/s': pattern(`l${PER_SECOND}|l s|lps|lit(?:er|re)s?${PER_SECOND}`),
+  'ft3/s': pattern(
+    `ft\\^?3${PER_SECOND}|ft3 ?s|cfs|cusecs?|cubic (?:feet|foot)${PER_SECOND}|cu\\.? ?ft\\.?${PER_SECOND}`,
+  ),
+  'ML/d': pattern(`ml${PER_DAY}|ml d|mld|megalit(?:er|re)s?(?:${PER_DAY})?|\\(ml\\)`),
+  'mm/d': pattern(`mm${PER_DAY}|mm d|mmd|millimet(?:er|re)s?${PER_DAY}`),
+};
+
+function pattern(alternatives: string): RegExp {
+  return new RegExp(`(?<![a-z0-9])(?:${alternatives})${NOT_PER_AREA}`);
+}
+
+function plain(text: string): string {
+  return text
+    .replace(/³/g, '3')
+    .replace(/⁻¹/g, '-1')
+    .replace(/[−–]/g, '-')
+    .replace(/[·⋅*]/g, '.')
+    .replaceAll('_', ' ')
+    .toLowerCase();
+}
+
+/** The flow units that a text names, in a heading ("flow_cfs", "Abfluss [m³/s]") or in a sentence. */
+export function unitsNamedIn(text: string): FlowUnit[] {
+  const words = plain(text);
+  return FLOW_UNITS.filter((unit) => PATTERNS[unit].test(words));
+}
+
+/** The unit that a text names, null when it names none or several. */
+export function unitNamedIn(text: string): FlowUnit | null {
+  const units = unitsNamedIn(text);
+  return units.length === 1 ? units[0] : null;
+}
