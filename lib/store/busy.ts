@@ -30,9 +30,12 @@ export async function whenFree<T>(change: () => T | Promise<T>, { waitMs = WAIT_
       return await change();
     } catch (error) {
       if (!isBusy(error)) throw error;
-      if (performance.now() >= deadline) throw new StoreBusyError(undefined, { cause: error });
+      if (performance.now() < deadline) {
+        await pause(PAUSE_MS);
+        continue;
+      }
+      throw error instanceof StoreBusyError ? error : new StoreBusyError(undefined, { cause: error });
     }
-    await pause(PAUSE_MS);
   }
 }
 
@@ -43,6 +46,7 @@ const BUSY_PRIMARY_CODES = [5, 6];
 /** True when an error of libsql or Prisma means that another connection holds the lock. */
 export function isBusy(error: unknown): boolean {
   if (typeof error !== 'object' || error === null) return false;
+  if (error instanceof StoreBusyError) return true;
   const { rawCode, code, cause } = error as { rawCode?: unknown; code?: unknown; cause?: unknown };
   if (typeof rawCode === 'number' && BUSY_PRIMARY_CODES.includes(rawCode & 0xff)) return true;
   if (typeof code === 'string' && (code.startsWith('SQLITE_BUSY') || code.startsWith('SQLITE_LOCKED'))) return true;

@@ -1,4 +1,4 @@
-import { accessSync, closeSync, constants, existsSync, mkdirSync, openSync, readSync, statSync } from 'node:fs';
+import { accessSync, constants, existsSync, mkdirSync, statSync } from 'node:fs';
 import { dirname } from 'node:path';
 import Database from 'libsql';
 import { BLOCK_MS } from './busy.ts';
@@ -10,11 +10,35 @@ import { StoreError } from './errors.ts';
 export type Connection = Database.Database;
 export type Row = readonly unknown[];
 
-const HEADER = 'SQLite format 3\0';
+const REMEDY = 'Give another place by DATABASE_URL=file:/path/to/hungerstone.db.';
 
-/** Makes sure that a database can be opened at a path, before anything opens it and fails in less plain words.
+/** Opens a connection of one's own; the caller closes it. Foreign keys are not enforced here: imports write parts before
+ *  the stations they belong to, and show all of it at once at the end.
  *  @throws StoreError 'missing', 'unwritable' or 'not-a-database', each with the file and a remedy */
-export function checkDatabaseFile(path: string, { mayBeNew = false } = {}): void {
+export function openConnection(path = databasePath(), { mayBeNew = false, blockMs = BLOCK_MS } = {}): Connection {
+  checkPlace(path, mayBeNew);
+  let connection: Connection | undefined;
+  try {
+    connection = new Database(path, { timeout: blockMs });
+    connection.exec('PRAGMA synchronous=NORMAL');
+    connection.exec('PRAGMA foreign_keys=OFF');
+    // Only SQLite may look into the file: to close it through node:fs would drop the locks that this process holds on it.
+    connection.prepare('SELECT 1 FROM sqlite_master LIMIT 1').get([]);
+    return connection;
+  } catch (cause) {
+    connection?.close();
+    const { code, message } = cause as { code?: string; message: string };
+    if (code === 'SQLITE_NOTADB' || code === 'SQLITE_CORRUPT') {
+      throw new StoreError('not-a-database', `${path} is not a database, or is damaged. ${REMEDY}`, { cause });
+    }
+    if (code === undefined || code.startsWith('SQLITE_CANTOPEN') || code.startsWith('SQLITE_READONLY')) {
+      throw new StoreError('unwritable', `Cannot open the database ${path}: ${message}. ${REMEDY}`, { cause });
+    }
+    throw cause;
+  }
+}
+
+function checkPlace(path: string, mayBeNew: boolean): void {
   const folder = dirname(path);
   try {
     if (mayBeNew) mkdirSync(folder, { recursive: true });
@@ -26,38 +50,12 @@ export function checkDatabaseFile(path: string, { mayBeNew = false } = {}): void
     if (mayBeNew) return;
     throw new StoreError('missing', `There is no database at ${path} yet: "npm start" makes one.`);
   }
+  if (!statSync(path).isFile()) throw new StoreError('not-a-database', `${path} is not a file. ${REMEDY}`);
   try {
     accessSync(path, constants.R_OK | constants.W_OK);
   } catch (cause) {
     throw new StoreError('unwritable', `Cannot write to the database ${path}. ${REMEDY}`, { cause });
   }
-  if (!looksLikeDatabase(path)) throw new StoreError('not-a-database', `${path} is not a database. ${REMEDY}`);
-}
-
-const REMEDY = 'Give another place by DATABASE_URL=file:/path/to/hungerstone.db.';
-
-/** True for an SQLite file, and for an empty one, which SQLite takes for a new database. */
-export function looksLikeDatabase(path: string): boolean {
-  const stat = statSync(path);
-  if (!stat.isFile()) return false;
-  if (stat.size === 0) return true;
-  const head = Buffer.alloc(HEADER.length);
-  const file = openSync(path, 'r');
-  try {
-    return readSync(file, head, 0, head.length, 0) === head.length && head.toString('latin1') === HEADER;
-  } finally {
-    closeSync(file);
-  }
-}
-
-/** Opens a connection of one's own; the caller closes it. Foreign keys are not enforced here: imports write parts before
- *  the stations they belong to, and show all of it at once at the end. */
-export function openConnection(path = databasePath(), { mayBeNew = false, blockMs = BLOCK_MS } = {}): Connection {
-  checkDatabaseFile(path, { mayBeNew });
-  const connection = new Database(path, { timeout: blockMs });
-  connection.exec('PRAGMA synchronous=NORMAL');
-  connection.exec('PRAGMA foreign_keys=OFF');
-  return connection;
 }
 
 interface Shared {

@@ -43,9 +43,10 @@ export function readMigrations(folder = migrationsFolder()): Migration[] {
  *  @throws StoreError when the file cannot be used, was made by a newer version, or knows a migration in other words;
  *          StoreBusyError when another process kept the lock for half a minute */
 export async function migrate(url?: string, { folder = migrationsFolder() } = {}): Promise<string[]> {
-  const connection = openConnection(databasePath(url), { mayBeNew: true });
+  const path = databasePath(url);
+  const wait = { waitMs: 30_000 };
+  const connection = await whenFree(() => openConnection(path, { mayBeNew: true }), wait);
   try {
-    const wait = { waitMs: 30_000 };
     await whenFree(() => connection.exec('PRAGMA journal_mode=WAL'), wait);
     refuseNewer(connection, folder);
     const applied: string[] = [];

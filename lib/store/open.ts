@@ -1,5 +1,5 @@
 import { BLOCK_MS } from './busy.ts';
-import { checkDatabaseFile, closeSharedConnections } from './connection.ts';
+import { closeSharedConnections, openConnection } from './connection.ts';
 import { databasePath, databaseUrl } from './database-url.ts';
 import { PrismaClient } from './generated/client.ts';
 import { LocalLibSql } from './local-libsql.ts';
@@ -21,7 +21,7 @@ export function openStore(url?: string): Store {
   const path = databasePath(url);
   const open = holder[KEY];
   if (open?.path === path) return open;
-  checkDatabaseFile(path);
+  openConnection(path).close();
   if (open) void open.prisma.$disconnect();
   const adapter = new LocalLibSql({ url: databaseUrl(path), timeout: BLOCK_MS });
   holder[KEY] = {

@@ -4,6 +4,10 @@ import { whenFree } from './busy.ts';
 import { sharedStatement } from './connection.ts';
 import { StoreError } from './errors.ts';
 import { openStore } from './open.ts';
+import { slugOf } from './slug.ts';
+
+export { deleteRegion } from './delete-region.ts';
+export { slugOf };
 
 export interface RegionRow {
   id: number;
@@ -27,19 +31,6 @@ export interface RegionSummary {
   /** calendar years of the first and last value of any record; null when there is none */
   firstYear: number | null;
   lastYear: number | null;
-}
-
-/** The name of a region as addresses carry it: letters and digits in lower case, everything else one hyphen.
- *  Example: "Upper Wethe & Lauch" → "upper-wethe-lauch" */
-export function slugOf(name: string): string {
-  const slug = name
-    .normalize('NFKD')
-    .replace(/\p{M}/gu, '')
-    .replace(/ß/g, 'ss')
-    .toLowerCase()
-    .replace(/[^\p{L}\p{N}]+/gu, '-')
-    .replace(/^-+|-+$/g, '');
-  return slug === '' ? 'region' : slug;
 }
 
 /** All regions by name, with what they hold. */

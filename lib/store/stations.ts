@@ -2,6 +2,7 @@ import type { Influence, StationFacts } from '../region/ranking-types.ts';
 import { openStore } from './open.ts';
 
 export { type StationRecord, stationRecords } from './records.ts';
+export { upsertRegistry } from './registry.ts';
 
 /** A dated change on the river or at the gauge: a dam, an abstraction, a new weir or rating. */
 export interface StationChange {

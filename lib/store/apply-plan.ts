@@ -1,0 +1,145 @@
+import { IntakeError } from '../intake/types.ts';
+import { type Connection, rows } from './connection.ts';
+import { reserveIds, VISIBLE } from './import-claim.ts';
+import {
+  bareFacts,
+  FACT_NAMES,
+  type FactChange,
+  type FactName,
+  type Facts,
+  layFacts,
+  type StationInput,
+} from './station-facts.ts';
+
+/** A station as it will stand after the import. */
+export interface PlannedStation {
+  id: number;
+  code: string;
+  facts: Facts;
+  /** number of the file that makes it; null when it is there already */
+  madeBy: number | null;
+  changed: boolean;
+}
+
+/** A part in the staging database, without its days. */
+export interface StagedHead {
+  id: number;
+  file: number;
+  code: string;
+  quantity: string;
+}
+
+/** A record to be laid: a station and quantity, with the staged parts that come to it in the order of their files. */
+export interface Group {
+  station: PlannedStation;
+  quantity: string;
+  staged: StagedHead[];
+  /** parts that stand */
+  standing: number;
+}
+
+export interface Plan {
+  stations: Map<string, PlannedStation>;
+  /** by file, what each registry does */
+  registries: Map<number, FactChange[]>;
+  groups: Group[];
+}
+
+/** Works out what the staged files do to a region, writing nothing but the counter of stations' ids.
+ *  @param unknown  what becomes of flows of a station that neither stands nor is in a staged registry
+ *  @throws IntakeError naming the file and the station that is refused */
+export function planImport(connection: Connection, regionId: number, unknown: 'make' | 'refuse'): Plan {
+  const stations = standingStations(connection, regionId);
+  const registries = layRegistries(connection, stations);
+  const heads = rows(connection, 'SELECT id, file, code, quantity FROM staging.part ORDER BY file, id').all([]);
+  const staged = (heads as [number, number, string, string][]).map(([id, file, code, quantity]) => ({
+    id,
+    file,
+    code,
+    quantity,
+  }));
+  for (const { code, file } of staged) {
+    if (stations.has(code)) continue;
+    if (unknown === 'refuse') throw unknownStation(connection, file, code);
+    stations.set(code, { id: 0, code, facts: bareFacts(code), madeBy: file, changed: false });
+  }
+  const made = [...stations.values()].filter(({ madeBy }) => madeBy !== null);
+  const firstId = made.length > 0 ? reserveIds(connection, 'Station', made.length) : 0;
+  for (const [index, station] of made.entries()) station.id = firstId + index;
+  return { stations, registries, groups: groupsOf(connection, regionId, stations, staged) };
+}
+
+function standingStations(connection: Connection, regionId: number): Map<string, PlannedStation> {
+  const read = rows(connection, `SELECT id, code, ${FACT_NAMES.join(', ')} FROM Station WHERE regionId = ?`);
+  return new Map(
+    (read.all([regionId]) as [number, string, ...(string | number | null)[]][]).map(([id, code, ...values]) => {
+      const facts = Object.fromEntries(FACT_NAMES.map((name, index) => [name, values[index]])) as Facts;
+      return [code, { id, code, facts, madeBy: null, changed: false }];
+    }),
+  );
+}
+
+function layRegistries(connection: Connection, stations: Map<string, PlannedStation>): Map<number, FactChange[]> {
+  const changes = new Map<number, FactChange[]>();
+  for (const row of rows(connection, 'SELECT file, stations, given FROM staging.registry ORDER BY file').all([])) {
+    const [file, inputs, given] = row as [number, string, string];
+    const list: FactChange[] = [];
+    const facts = JSON.parse(given) as FactName[];
+    for (const input of JSON.parse(inputs) as StationInput[]) {
+      const standing = stations.get(input.code);
+      const station = standing ?? {
+        id: 0,
+        code: input.code,
+        facts: bareFacts(input.code),
+        madeBy: file,
+        changed: false,
+      };
+      stations.set(input.code, station);
+      const fields = layFacts(station.facts, input, facts);
+      if (standing && Object.keys(fields).length > 0) station.changed = true;
+      list.push({ code: input.code, made: !standing, fields: standing ? fields : {} });
+    }
+    changes.set(file, list);
+  }
+  return changes;
+}
+
+/** Overlapping records first: a file that is refused for its values then costs no copying. */
+function groupsOf(
+  connection: Connection,
+  regionId: number,
+  stations: Map<string, PlannedStation>,
+  staged: StagedHead[],
+): Group[] {
+  const counts = rows(
+    connection,
+    `SELECT p.stationId, p.quantity, COUNT(*), MAX(s.code), MAX(s.areaKm2) FROM Station s JOIN Part p ON p.stationId = s.id
+     JOIN Import i ON i.id = p.importId WHERE s.regionId = ? AND i.state IN ${VISIBLE} GROUP BY p.stationId, p.quantity`,
+  ).all([regionId]) as [number, string, number, string, number | null][];
+  const standing = new Map(counts.map(([stationId, quantity, count]) => [`${stationId} ${quantity}`, count]));
+  const groups = new Map<string, Group>();
+  const groupOf = (station: PlannedStation, quantity: string): Group => {
+    const key = `${station.id} ${quantity}`;
+    const group = groups.get(key) ?? { station, quantity, staged: [], standing: standing.get(key) ?? 0 };
+    groups.set(key, group);
+    return group;
+  };
+  for (const head of staged) groupOf(stations.get(head.code)!, head.quantity).staged.push(head);
+  // A depth over the drainage area weighs otherwise when a registry corrects that area.
+  for (const [, quantity, count, code, areaKm2] of counts) {
+    const station = stations.get(code)!;
+    if (count > 1 && station.facts.areaKm2 !== areaKm2) groupOf(station, quantity);
+  }
+  const overlaps = (group: Group) => Number(group.standing + group.staged.length > 1);
+  return [...groups.values()].sort((a, b) => overlaps(b) - overlaps(a));
+}
+
+function unknownStation(connection: Connection, file: number, code: string): IntakeError {
+  const [fileName] = rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string];
+  return new IntakeError({
+    file: fileName,
+    value: code,
+    message: 'the region’s registry has no station of this code',
+    remedy: 'Add the station to the registry, or name the station that the file is of',
+  });
+}

@@ -1,0 +1,57 @@
+import { readdirSync, rmSync, statSync } from 'node:fs';
+import { basename, dirname, join } from 'node:path';
+import Database from 'libsql';
+import { openConnection } from './connection.ts';
+import { databasePath } from './database-url.ts';
+import { DEAD_AFTER_MS, failDeadJobs } from './jobs.ts';
+import { recoverImports } from './withdraw.ts';
+
+export interface Recovered {
+  /** jobs that were running and are failed now */
+  failedJobs: string[];
+  /** imports that had been stored in part and were taken back */
+  withdrawnImports: number[];
+  /** staging databases that were removed */
+  stagingFiles: string[];
+}
+
+/** Clears up what dead processes left: their jobs fail, their half-stored imports vanish, their staging files go. For the
+ *  start of a server, and again half a minute later: what died just before may still look alive. Harmless to processes
+ *  that live. */
+export async function recoverStore({ deadAfterMs = DEAD_AFTER_MS } = {}): Promise<Recovered> {
+  const path = databasePath();
+  const failedJobs = await failDeadJobs({ deadAfterMs });
+  const connection = openConnection(path);
+  try {
+    const withdrawnImports = await recoverImports(connection, deadAfterMs);
+    return { failedJobs, withdrawnImports, stagingFiles: removeDeadStaging(path, deadAfterMs) };
+  } finally {
+    connection.close();
+  }
+}
+
+function removeDeadStaging(path: string, deadAfterMs: number): string[] {
+  const prefix = `${basename(path)}.staging-`;
+  const files = readdirSync(dirname(path)).filter((name) => name.startsWith(prefix));
+  return files.filter((name) => {
+    const file = join(dirname(path), name);
+    if (Date.now() - statSync(file).mtimeMs < deadAfterMs || isHeld(file)) return false;
+    rmSync(file, { force: true });
+    return true;
+  });
+}
+
+/** True while the process that fills a staging database lives: it holds the file's lock. */
+function isHeld(file: string): boolean {
+  let connection: Database.Database | undefined;
+  try {
+    connection = new Database(file);
+    connection.exec('BEGIN EXCLUSIVE');
+    connection.exec('ROLLBACK');
+    return false;
+  } catch (error) {
+    return String((error as { code?: unknown }).code).startsWith('SQLITE_BUSY');
+  } finally {
+    connection?.close();
+  }
+}

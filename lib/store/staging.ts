@@ -1,0 +1,141 @@
+import { existsSync, rmSync } from 'node:fs';
+import Database from 'libsql';
+import type { StagedPart } from '../intake/types.ts';
+import { blobOf, blobOfValues } from './blobs.ts';
+import { flagsOfCodes } from './codes.ts';
+import { databasePath } from './database-url.ts';
+import type { LayerKind } from './layers.ts';
+import { summarise } from './record-summary.ts';
+import { FACT_NAMES, type FactName, type StationInput } from './station-facts.ts';
+
+/** A file that is being taken in. */
+export interface StagedFile {
+  kind: 'flows' | 'registry' | 'layer';
+  fileName: string;
+}
+
+/** What is known of a file once it has been read whole. */
+export interface StagedFileFacts {
+  sha256: string;
+  layout?: string;
+  unit?: string;
+  mapping?: unknown;
+  rows?: number;
+  accepted?: number;
+  rejected?: number;
+  /** ImportReport, or for other kinds whatever should be shown again */
+  report?: unknown;
+}
+
+/** Where the files of one import wait, in a database beside the main one, until all of them have been found good.
+ *  Everything is synchronous: a worker fills it while it parses, and nobody else looks at it. */
+export interface Staging {
+  readonly jobId: string;
+  readonly path: string;
+  /** @returns the file's number, for the calls below */
+  addFile(file: StagedFile): number;
+  /** One part a file, station and quantity. */
+  stagePart(file: number, part: StagedPart, quantity?: string): void;
+  /** @param given  the facts that the file speaks of; the others stay as they are */
+  stageRegistry(file: number, stations: readonly StationInput[], given?: readonly FactName[]): void;
+  stageLayer(file: number, layer: { name: string; kind: LayerKind; geojson: string }): void;
+  describeFile(file: number, facts: StagedFileFacts): void;
+  /** Ends the filling; applyStaging comes next. */
+  seal(): void;
+  /** Ends the filling and removes all of it. */
+  discard(): void;
+}
+
+const TABLES = `
+  CREATE TABLE file (id INTEGER PRIMARY KEY, kind TEXT NOT NULL, fileName TEXT NOT NULL, sha256 TEXT NOT NULL DEFAULT '',
+    layout TEXT NOT NULL DEFAULT '', unit TEXT NOT NULL DEFAULT '', mapping TEXT NOT NULL DEFAULT '{}',
+    rows INTEGER NOT NULL DEFAULT 0, accepted INTEGER NOT NULL DEFAULT 0, rejected INTEGER NOT NULL DEFAULT 0,
+    report TEXT NOT NULL DEFAULT '{}');
+  CREATE TABLE registry (file INTEGER NOT NULL, stations TEXT NOT NULL, given TEXT NOT NULL);
+  CREATE TABLE layer (file INTEGER NOT NULL, name TEXT NOT NULL, kind TEXT NOT NULL, geojson TEXT NOT NULL);
+  CREATE TABLE part (id INTEGER PRIMARY KEY, file INTEGER NOT NULL, code TEXT NOT NULL, quantity TEXT NOT NULL,
+    firstDay INTEGER NOT NULL, days INTEGER NOT NULL, unit TEXT NOT NULL, hash TEXT NOT NULL, valueCount INTEGER NOT NULL,
+    firstValueDay INTEGER, lastValueDay INTEGER, zeroCount INTEGER NOT NULL, codeList TEXT NOT NULL, "values" BLOB NOT NULL,
+    codes BLOB NOT NULL, UNIQUE (file, code, quantity));`;
+
+/** Path of a job's staging database, beside the main one.
+ *  @throws RangeError for a job id that is no plain word */
+export function stagingPath(jobId: string, path = databasePath()): string {
+  if (!/^[A-Za-z0-9_-]{1,100}$/.test(jobId))
+    throw new RangeError(`stagingPath: jobId must be a plain word, got "${jobId}"`);
+  return `${path}.staging-${jobId}`;
+}
+
+/** Opens a new staging database for a job, over any that an earlier try left. */
+export function createStaging(jobId: string, path = databasePath()): Staging {
+  const file = stagingPath(jobId, path);
+  discardStaging(jobId, path);
+  const connection = new Database(file);
+  // It is thrown away whole when anything fails: no journal. The lock, held to the end, tells that its maker lives.
+  for (const pragma of ['locking_mode=EXCLUSIVE', 'journal_mode=OFF', 'synchronous=OFF']) {
+    connection.exec(`PRAGMA ${pragma}`);
+  }
+  connection.exec('BEGIN EXCLUSIVE');
+  connection.exec(TABLES);
+  const insertFile = connection.prepare('INSERT INTO file (kind, fileName) VALUES (?, ?)');
+  const insertPart = connection.prepare(
+    `INSERT INTO part (file, code, quantity, firstDay, days, unit, hash, valueCount, firstValueDay, lastValueDay,
+       zeroCount, codeList, "values", codes) VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)`,
+  );
+  return {
+    jobId,
+    path: file,
+    addFile: ({ kind, fileName }) => Number(insertFile.run([kind, fileName]).lastInsertRowid),
+    stagePart(fileId, part, quantity = 'flow') {
+      const { code, unit, firstDay, values, codes, codeList } = part;
+      if (values.length !== codes.length || values.length === 0) {
+        throw new RangeError(
+          `stagePart: values and codes must be equally long, got ${values.length} and ${codes.length}`,
+        );
+      }
+      const { hash, ...summary } = summarise({ unit, firstDay, values, flags: flagsOfCodes(codes, codeList) });
+      insertPart.run([
+        ...[fileId, code, quantity, firstDay, values.length, unit, hash, summary.valueCount, summary.firstValueDay],
+        ...[summary.lastValueDay, summary.zeroCount, JSON.stringify(codeList), blobOfValues(values), blobOf(codes)],
+      ]);
+    },
+    stageRegistry(fileId, stations, given = FACT_NAMES) {
+      connection
+        .prepare('INSERT INTO registry (file, stations, given) VALUES (?, ?, ?)')
+        .run([fileId, JSON.stringify(stations), JSON.stringify(given)]);
+    },
+    stageLayer(fileId, { name, kind, geojson }) {
+      connection
+        .prepare('INSERT INTO layer (file, name, kind, geojson) VALUES (?, ?, ?, ?)')
+        .run([fileId, name, kind, geojson]);
+    },
+    describeFile(fileId, facts) {
+      const { sha256, layout = '', unit = '', mapping = {}, rows = 0, accepted = 0, rejected = 0, report = {} } = facts;
+      connection
+        .prepare(
+          `UPDATE file SET sha256 = ?, layout = ?, unit = ?, mapping = ?, rows = ?, accepted = ?, rejected = ?, report = ?
+           WHERE id = ?`,
+        )
+        .run([
+          ...[sha256, layout, unit, JSON.stringify(mapping), rows, accepted, rejected, JSON.stringify(report)],
+          fileId,
+        ]);
+    },
+    seal() {
+      connection.exec('COMMIT');
+      connection.close();
+    },
+    discard() {
+      if (connection.open) connection.close();
+      discardStaging(jobId, path);
+    },
+  };
+}
+
+/** Removes a job's staging database, if there is one. What was staged is gone; the main database knows nothing of it. */
+export function discardStaging(jobId: string, path = databasePath()): void {
+  const file = stagingPath(jobId, path);
+  for (const name of [file, `${file}-journal`, `${file}-wal`, `${file}-shm`]) {
+    if (existsSync(name)) rmSync(name, { force: true });
+  }
+}

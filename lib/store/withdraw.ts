@@ -1,0 +1,61 @@
+import { whenFree } from './busy.ts';
+import { type Connection, immediately, rows, timestamp } from './connection.ts';
+import { type Counters, restoreCounters } from './import-claim.ts';
+import { DEAD_AFTER_MS } from './jobs.ts';
+import { inSlices, type SliceOptions } from './slices.ts';
+
+/** Takes back imports that were being applied: nothing of them was to be seen yet, and then nothing of them is left. */
+export async function withdraw(
+  connection: Connection,
+  importIds: readonly number[],
+  counters?: Counters,
+): Promise<void> {
+  await whenFree(() =>
+    immediately(connection, () => {
+      const remove = connection.prepare("UPDATE Import SET state = 'undone' WHERE id = ? AND state = 'applying'");
+      for (const id of importIds) remove.run([id]);
+    }),
+  );
+  await sweep(connection);
+  if (counters) await whenFree(() => immediately(connection, () => restoreCounters(connection, counters)));
+}
+
+/** Removes what no reader can reach: parts of imports that are undone or gone, days laid for a record that moved on. */
+export async function sweep(connection: Connection, options: Pick<SliceOptions, 'sliceMs'> = {}): Promise<void> {
+  const removePart = connection.prepare(`DELETE FROM Part WHERE id = ?`);
+  const removeLaid = connection.prepare('DELETE FROM Laid WHERE id = ?');
+  await inSlices(connection, ids(connection, LOST_PARTS), (id) => void removePart.run([id]), options);
+  await inSlices(connection, ids(connection, LOST_LAID), (id) => void removeLaid.run([id]), options);
+  await whenFree(() =>
+    connection.exec(
+      "DELETE FROM Import WHERE state = 'undone' AND NOT EXISTS (SELECT 1 FROM Part WHERE Part.importId = Import.id)",
+    ),
+  );
+}
+
+const LOST_PARTS = "SELECT id FROM Part WHERE importId NOT IN (SELECT id FROM Import WHERE state <> 'undone')";
+const LOST_LAID = `SELECT id FROM Laid WHERE id NOT IN (SELECT laidId FROM Record WHERE laidId IS NOT NULL)
+  AND (importId IS NULL OR importId NOT IN (SELECT id FROM Import WHERE state IN ('applying', 'undoing')))`;
+
+const ids = (connection: Connection, sql: string): number[] => rows(connection, sql).all([]).flat() as number[];
+
+/** Takes back what imports left whose writer died: those being applied vanish, those being undone stand as before, and
+ *  undone ones are cleared away. Harmless beside imports that live. */
+export async function recoverImports(connection: Connection, deadAfterMs = DEAD_AFTER_MS): Promise<number[]> {
+  const before = timestamp(new Date(Date.now() - deadAfterMs));
+  const dead = await whenFree(() =>
+    immediately(connection, () => {
+      const applying = rows(connection, "SELECT id FROM Import WHERE state = 'applying' AND heartbeat < ?").all([
+        before,
+      ]);
+      const end = connection.prepare(
+        `UPDATE Import SET state = CASE state WHEN 'applying' THEN 'undone' ELSE 'applied' END
+         WHERE state IN ('applying', 'undoing') AND heartbeat < ?`,
+      );
+      end.run([before]);
+      return applying.flat() as number[];
+    }),
+  );
+  await sweep(connection);
+  return dead;
+}
