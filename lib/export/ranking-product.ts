@@ -1,15 +1,31 @@
-import type { Ranking } from '../region/ranking-types.ts';
+import type { Ranking, RankingRow } from '../region/ranking-types.ts';
 import type { Format } from './format.ts';
-import { rankingGeojson } from './geojson.ts';
+import { jsonCell, rankingGeojson } from './geojson.ts';
 import { jsonText } from './json.ts';
 import { type Narrowing, narrowTo } from './narrow.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
-import { rankingCsv } from './ranking-csv.ts';
+import { RANKING_COLUMNS, rankingCsv } from './ranking-csv.ts';
 
 /** The ranking as a file, narrowed to some stations or whole; ranks are always those of the whole region. */
 export function rankingProduct(format: Format, ranking: Ranking, from: Provenance, narrowing: Narrowing = {}): string {
   const rows = narrowTo(ranking.rows, narrowing, (row) => row);
   if (format === 'csv') return rankingCsv(rows);
   if (format === 'geojson') return jsonText({ ...rankingGeojson(rows), ...provenanceNotes(from) });
-  return jsonText({ ...provenanceNotes(from), counts: ranking.counts, rows });
+  return jsonText({ ...provenanceNotes(from), counts: ranking.counts, stations: rows.map(stationOf) });
+}
+
+/** A row under the names that the CSV columns have, with what a table has no room for. */
+function stationOf(row: RankingRow): Record<string, unknown> {
+  return {
+    ...Object.fromEntries(RANKING_COLUMNS.map(({ name, value }) => [name, jsonCell(value(row))])),
+    slope_l_s_km2_per_decade: row.specificPerDecade,
+    drying: row.drying,
+    zero_days_per_decade: row.zeroDaysPerDecade,
+    zero_days_ci_low: row.zeroDaysLow,
+    zero_days_ci_high: row.zeroDaysHigh,
+    lag1_correlation: row.r1,
+    variance_factor: row.serialFactor,
+    years: row.years,
+    minima_m3s: row.minima,
+  };
 }

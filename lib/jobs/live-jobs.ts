@@ -52,24 +52,34 @@ const HEARTBEAT_MS = 5_000;
 /** Progress goes into the job's row at most this often; whoever watches in this process sees it at once. */
 const STORE_PROGRESS_MS = 1_000;
 
+export interface NewJob<Result> {
+  kind: string;
+  regionId: number | null;
+  id?: string;
+  /** what is shown before the work reports for the first time */
+  progress?: unknown;
+  /** the region that the work made */
+  regionOf?: (result: Result) => number | undefined;
+}
+
 /** Starts long work as a job: its row is made at once, its state, progress, result and error are kept there.
  *  @param kind   also the queue: jobs of a kind run one after the other
  *  @param work   its answer becomes the row's result; what it throws, the row's error
  *  @returns      the job's id, and its end: the answer of `work`, or what it threw */
 export async function launchJob<Result>(
-  { kind, regionId, id = randomUUID() }: { kind: string; regionId: number | null; id?: string },
+  { kind, regionId, id = randomUUID(), progress = {}, regionOf = () => undefined }: NewJob<Result>,
   work: (context: JobContext) => Promise<Result>,
 ): Promise<{ id: string; result: Promise<Result> }> {
   await createJob({ id, kind, regionId });
   const { jobs, queues } = registry();
   const live: LiveJob = {
     cancel: new AbortController(),
-    progress: {},
+    progress,
     changed: new EventEmitter().setMaxListeners(0),
     ended: Promise.resolve(),
   };
   const turn = queues.get(kind) ?? Promise.resolve();
-  const result = turn.then(() => run(id, live, work));
+  const result = turn.then(() => run(id, live, work, regionOf));
   live.ended = result.then(
     () => undefined,
     () => undefined,
@@ -84,7 +94,12 @@ export async function launchJob<Result>(
   return { id, result };
 }
 
-async function run<Result>(id: string, live: LiveJob, work: (context: JobContext) => Promise<Result>): Promise<Result> {
+async function run<Result>(
+  id: string,
+  live: LiveJob,
+  work: (context: JobContext) => Promise<Result>,
+  regionOf: (result: Result) => number | undefined,
+): Promise<Result> {
   const { signal } = live.cancel;
   const heartbeat = setInterval(() => void beatJob(id).catch(() => undefined), HEARTBEAT_MS);
   let stored = 0;
@@ -101,7 +116,7 @@ async function run<Result>(id: string, live: LiveJob, work: (context: JobContext
     live.changed.emit('change');
     const result = await work({ id, signal, report });
     await beatJob(id, live.progress);
-    await finishJob(id, { state: 'done', result });
+    await finishJob(id, { state: 'done', result, regionId: regionOf(result) });
     return result;
   } catch (error) {
     const ended = signal.aborted ? new CancelledError('Cancelled.', { cause: error }) : error;

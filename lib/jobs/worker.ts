@@ -3,6 +3,6 @@
 export { coverage } from './tasks/coverage.ts';
 export { curves } from './tasks/curves.ts';
 export { minima } from './tasks/minima.ts';
-export { parseFlows } from './tasks/parse-flows.ts';
 export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';
+export { takeFiles } from './tasks/take-files.ts';

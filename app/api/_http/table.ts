@@ -10,11 +10,12 @@ import { narrowingParameters } from './parameters';
 export const TABLE_FORMATS = [...FORMATS, 'metadata'] as const;
 export type TableFormat = (typeof TABLE_FORMATS)[number];
 
-/** Parameters that every table takes beside the basis. */
-export const tableParameters = {
+export const formatParameter = {
   format: z.enum(TABLE_FORMATS).default('json').describe('csv, json, geojson, or metadata: what the CSV file means'),
-  ...narrowingParameters,
 };
+
+/** Parameters that every table of a region takes beside the basis. */
+export const tableParameters = { ...formatParameter, ...narrowingParameters };
 
 interface Table {
   /** key of the result that the table shows */

@@ -1,0 +1,3 @@
+import * as z from 'zod';
+
+export const coverageParameters = { format: z.enum(['json', 'csv']).default('json') };

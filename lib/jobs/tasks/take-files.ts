@@ -1,0 +1,117 @@
+import { stat } from 'node:fs/promises';
+import type { MessagePort } from 'node:worker_threads';
+import type { KnownStation } from '../../intake/types.ts';
+import { type Applied, applyStaging } from '../../store/apply-staging.ts';
+import { createStaging, type Staging } from '../../store/staging.ts';
+import { ImportMeter } from '../import-meter.ts';
+import { problemOf } from '../import-problem.ts';
+import {
+  FILE_KINDS,
+  type GivenFile,
+  type ImportChoices,
+  type ImportOutcome,
+  type ImportProblem,
+} from '../import-types.ts';
+import { discardRejectedRows } from '../rejected-rows.ts';
+import { kindOf, type StagedFile, stageFile } from '../stage-file.ts';
+
+export interface TakeFiles {
+  jobId: string;
+  /** a region that is there, or the name of one to be made */
+  region: { id: number } | { name: string };
+  files: GivenFile[];
+  choices: ImportChoices;
+  /** the region's stations where it has a registry; null where flows make the stations */
+  registry: KnownStation[] | null;
+  /** gets an ImportProgress from time to time */
+  progress: MessagePort;
+  /** the import is cancelled when the first element is no longer 0; shared memory, for a worker that parses hears nothing */
+  cancelled: Int32Array;
+}
+
+/** Takes in the files of one import, or none of them: reads each into the staging database, registries before layers
+ *  before flows whatever the order given, and when all are good copies them over.
+ *  @returns  what was taken, or the problem of every file that cannot be taken
+ *  @throws the signal's reason when cancelled; nothing is then left behind */
+export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
+  const cancel = new AbortController();
+  const sizes = await Promise.all(task.files.map(async ({ path }) => (await stat(path)).size));
+  const meter = new ImportMeter(sizes, (progress) => {
+    task.progress.postMessage(progress);
+    if (Atomics.load(task.cancelled, 0) !== 0) cancel.abort();
+  });
+  const { signal } = cancel;
+  const staging = createStaging(task.jobId);
+  const staged: StagedFile[] = [];
+  let taken = false;
+  try {
+    const problems = await stageAll(task, { staging, staged, meter, signal });
+    if (problems.length > 0) return { taken: [], problems, regionId: null };
+    staging.seal();
+    meter.store(0);
+    const { by, revise } = task.choices;
+    const applied = await applyStaging(task.jobId, {
+      ...{ region: task.region, by, revise, signal },
+      onProgress: (share) => meter.store(share),
+    });
+    taken = true;
+    meter.done();
+    return { ...outcomeOf(staged, applied), regionId: applied.regionId };
+  } catch (error) {
+    signal.throwIfAborted();
+    return { taken: [], problems: [await problemOf(error, null)], regionId: null };
+  } finally {
+    staging.discard();
+    if (!taken) discardRejectedRows(staged.map(({ report }) => report?.rejectedFile ?? null));
+    task.progress.close();
+  }
+}
+
+interface Tools {
+  staging: Staging;
+  staged: StagedFile[];
+  meter: ImportMeter;
+  signal: AbortSignal;
+}
+
+/** Reads every file, also after one was found bad, so that a person hears of all problems at once. */
+async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Tools): Promise<ImportProblem[]> {
+  const problems: ImportProblem[] = [];
+  const files = await Promise.all(
+    task.files.map(async (file, index) => ({ file, index, kind: await kindOf(file, task.choices) })),
+  );
+  files.sort((a, b) => FILE_KINDS.indexOf(a.kind) - FILE_KINDS.indexOf(b.kind) || a.index - b.index);
+  let registry = task.registry;
+  for (const [done, { file, index, kind }] of files.entries()) {
+    signal.throwIfAborted();
+    meter.begin(file.name, done + 1);
+    try {
+      const one = await stageFile(file, kind, {
+        ...{ jobId: task.jobId, fileNumber: index + 1, choices: task.choices, registry, staging, signal },
+        onProgress: (rows, bytes) => meter.read(rows, bytes),
+      });
+      staged.push(one);
+      if (one.registry) registry = [...(registry ?? []), ...one.registry];
+      meter.end(index, one.rows);
+    } catch (error) {
+      signal.throwIfAborted();
+      problems.push(await problemOf(error, { file, choices: task.choices, registry }));
+      meter.end(index, 0);
+    }
+  }
+  return problems;
+}
+
+function outcomeOf(staged: readonly StagedFile[], applied: Applied): ImportOutcome {
+  return {
+    taken: staged.map(({ file, kind, summary, report, warnings }, i) => {
+      const { id, stationsMade } = applied.imports[i];
+      const made = stationsMade > 0 ? `, ${stationsMade} of them new` : '';
+      return {
+        ...{ importId: id, file: file.name, kind, report, warnings },
+        summary: kind === 'registry' ? `${summary}${made}` : summary,
+      };
+    }),
+    problems: [],
+  };
+}

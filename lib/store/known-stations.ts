@@ -1,0 +1,16 @@
+import type { KnownStation } from '../intake/types.ts';
+import { sharedStatement } from './connection.ts';
+import { databasePath } from './database-url.ts';
+
+const HAS_REGISTRY = `SELECT EXISTS (SELECT 1 FROM Import WHERE regionId = ? AND kind = 'registry' AND state = 'applied')
+  OR EXISTS (SELECT 1 FROM Station WHERE regionId = ? AND createdBy IS NULL)`;
+
+/** The stations that flows of a region may name; null where the region has no registry, so that flows make stations. */
+export function knownStations(regionId: number, path = databasePath()): KnownStation[] | null {
+  const [hasRegistry] = sharedStatement(HAS_REGISTRY, path).get([regionId, regionId]) as [number];
+  if (hasRegistry === 0) return null;
+  const found = sharedStatement('SELECT code, name FROM Station WHERE regionId = ? ORDER BY code', path).all([
+    regionId,
+  ]);
+  return (found as [string, string][]).map(([code, name]) => ({ code, name }));
+}
