@@ -188,12 +188,14 @@ export interface RegistryStation {
   influence: Influence;
 }
 
+export type RegistryFact = Exclude<keyof RegistryStation, 'code'>;
+
 /** A registry file, read whole. A registry with any bad row is refused with all of its bad rows named. */
 export interface Registry {
   stations: RegistryStation[];
   rows: number;
-  /** which header name gave which fact */
-  columns: Record<string, string>;
+  /** the facts that the file has columns for; what it does not speak of stays as it is */
+  given: RegistryFact[];
   sha256: string;
   warnings: string[];
 }
