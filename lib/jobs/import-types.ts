@@ -29,6 +29,8 @@ export interface ImportChoices {
 export interface GivenFile {
   path: string;
   name: string;
+  /** what it is, where that is known beforehand; else recognised by content */
+  kind?: FileKind;
 }
 
 /** Where an import stands; what the event stream of a job carries. */

@@ -1,5 +1,6 @@
 import { availableParallelism } from 'node:os';
 import { join } from 'node:path';
+import { SHARE_ENV } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import type { TaskName, Tasks } from './tasks.ts';
 
@@ -21,6 +22,8 @@ function pool(): Piscina {
     idleTimeout: IDLE_MILLISECONDS,
     // A worker must hear the message that cancels its import: it may not sleep in Atomics.wait.
     atomics: 'disabled',
+    // The database's place comes from the environment, also when a test sets another one.
+    env: SHARE_ENV,
   });
   return holder[KEY];
 }

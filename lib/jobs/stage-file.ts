@@ -39,7 +39,7 @@ function choicesFor(file: GivenFile, choices: ImportChoices): FileChoices {
 
 /** What a file is: as a person says, else by what it holds. */
 export async function kindOf(file: GivenFile, choices: ImportChoices): Promise<FileKind> {
-  const chosen = choicesFor(file, choices).kind;
+  const chosen = file.kind ?? choicesFor(file, choices).kind;
   if (chosen) return chosen;
   const handle = await open(file.path);
   try {

@@ -1,0 +1,114 @@
+import { existsSync } from 'node:fs';
+import { basename, resolve } from 'node:path';
+import { parseMapping } from '../../intake/mapping.ts';
+import { FLOW_UNITS, IntakeError, type Mapping } from '../../intake/types.ts';
+import { launchImport } from '../../jobs/import-job.ts';
+import type { FileKind, GivenFile, ImportChoices, ImportOutcome } from '../../jobs/import-types.ts';
+import { CancelledError, cancelJob, FailedWithResult } from '../../jobs/live-jobs.ts';
+import { getRegion, slugOf } from '../../store/regions.ts';
+import { readJson, withWorkers } from '../analysis.ts';
+import { readArguments } from '../arguments.ts';
+import { followImport } from '../import-progress.ts';
+import { reportJson, reportText } from '../import-report.ts';
+import { UsageError } from '../usage-error.ts';
+
+export const usage = `Usage: npx hungerstone import --region NAME [options] FLOWFILE...
+
+Takes in a station registry, map layers and daily flows: all of the files or none. Makes the region if it is new. The
+layout, dates, unit and stations of a flow file are recognised from what it holds.
+
+  --region NAME     the region
+  --stations FILE   a station registry, CSV; may be given several times
+  --layer FILE      a map layer, GeoJSON; may be given several times
+  --unit UNIT       unit of the flows: ${FLOW_UNITS.join(', ')} (mm/d over the drainage area)
+  --station CODE    the station of flow files that name none; else the file's name tells
+  --mapping FILE    JSON that says how the flow files are to be read
+  --revise          take the new values where they are unlike those that stand; else such a file is refused
+  --json            the report as JSON
+
+Exit codes: 0 done, 1 failed and nothing changed, 2 wrong usage, 3 taken in, with rejected rows.
+`;
+
+const OPTIONS = {
+  region: { type: 'string' },
+  stations: { type: 'string', multiple: true },
+  layer: { type: 'string', multiple: true },
+  unit: { type: 'string' },
+  station: { type: 'string' },
+  mapping: { type: 'string' },
+  revise: { type: 'boolean', default: false },
+  json: { type: 'boolean', default: false },
+} as const;
+
+/** Exit codes beside 0. */
+const FAILED = 1;
+const WITH_REJECTED_ROWS = 3;
+
+export async function run(argv: string[]): Promise<number> {
+  const { values, positionals } = readArguments(argv, OPTIONS, { name: 'FLOWFILE' });
+  const { region, unit, station, revise } = values;
+  if (region === undefined || region.trim() === '') throw new UsageError('Name the region with --region NAME.');
+  const files = [
+    ...given(values.stations ?? [], 'registry'),
+    ...given(values.layer ?? [], 'layer'),
+    ...given(positionals, 'flows'),
+  ];
+  if (files.length === 0) throw new UsageError('Give at least one FLOWFILE, --stations FILE or --layer FILE.');
+  const known = FLOW_UNITS.find((one) => one === unit);
+  if (unit !== undefined && !known) throw new UsageError(`--unit takes ${FLOW_UNITS.join(', ')}, not "${unit}".`);
+  const mapping = values.mapping === undefined ? undefined : mappingIn(values.mapping);
+  const choices: ImportChoices = { revise, by: 'import command', all: { unit: known, station, mapping } };
+  return withWorkers(async () => {
+    try {
+      const outcome = await imported(region, files, choices);
+      process.stdout.write(values.json ? reportJson(outcome) : reportText(outcome));
+      const rejected = outcome.taken.some(({ report }) => (report?.rejectedTotal ?? 0) > 0);
+      return rejected ? WITH_REJECTED_ROWS : 0;
+    } catch (error) {
+      if (error instanceof CancelledError) process.stderr.write('Cancelled; nothing was changed.\n');
+      else if (error instanceof FailedWithResult) sayProblems(error.result as ImportOutcome);
+      else throw error;
+      return FAILED;
+    }
+  });
+}
+
+function given(paths: readonly string[], kind: FileKind): GivenFile[] {
+  return paths.map((path) => {
+    if (!existsSync(path)) throw new Error(`There is no file ${path}.`);
+    return { path: resolve(path), name: basename(path), kind };
+  });
+}
+
+function mappingIn(path: string): Partial<Mapping> {
+  try {
+    return parseMapping(readJson('--mapping', path), basename(path));
+  } catch (error) {
+    if (error instanceof IntakeError) throw new UsageError(error.message, { cause: error });
+    throw error;
+  }
+}
+
+async function imported(name: string, files: GivenFile[], choices: ImportChoices): Promise<ImportOutcome> {
+  const standing = await getRegion(slugOf(name));
+  const region = standing ? { id: standing.id } : { name };
+  const { id, result } = await launchImport({ region, files, choices });
+  const cancel = () => void cancelJob(id);
+  process.once('SIGINT', cancel);
+  process.once('SIGTERM', cancel);
+  const over = new AbortController();
+  const telling = followImport(id, over.signal);
+  try {
+    return await result;
+  } finally {
+    over.abort();
+    await telling;
+    process.off('SIGINT', cancel);
+    process.off('SIGTERM', cancel);
+  }
+}
+
+function sayProblems({ problems }: ImportOutcome): void {
+  for (const { message } of problems) process.stderr.write(`${message}\n`);
+  process.stderr.write('Nothing was changed.\n');
+}
