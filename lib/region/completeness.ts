@@ -13,7 +13,7 @@ export const END_YEARS = 10;
  *  Example: 0.8 of 38 is 30.4, so 31 */
 export function yearsNeeded(minCoverage: number, length: number): number {
   // 0.55 × 20 comes to 11.000000000000002, which 11 years do satisfy
-  return Math.ceil(minCoverage * length - 1e-9);
+  return Math.max(0, Math.ceil(minCoverage * length - 1e-9));
 }
 
 /** True when a third or more of the minima are zero: a slope would then say little. */

@@ -35,7 +35,7 @@ export function lowSeasonCut(
   if (atEdge > LARGEST_SHARE * n) {
     signs.push(`${atEdge} of ${n} minima in the first ${FIRST_DAYS} or last ${lastDays} days of the year`);
   }
-  if (near > 0) signs.push(`${near} successive minima under ${SAME_LOW_DAYS} days apart`);
+  if (near > 0) signs.push(`${near} of ${n - 1} successive minima under ${SAME_LOW_DAYS} days after the one before`);
   if (!signs.length) return null;
   return `year start cuts its low season (${signs.join('; ')}): ${adviceOn(dates, basis, lastDays)}`;
 }
