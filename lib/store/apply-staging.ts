@@ -1,13 +1,15 @@
+import { existsSync } from 'node:fs';
 import type { FlowUnit } from '../intake/types.ts';
 import { type Group, type Plan, planImport } from './apply-plan.ts';
 import { refuseForArea } from './area-error.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
-import { whenFree } from './busy.ts';
+import { StoreBusyError, whenFree } from './busy.ts';
 import type { Code } from './codes.ts';
-import { type Connection, immediately, openConnection, rows, timestamp } from './connection.ts';
+import { type Connection, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { beatImports, readCounters, refuseWhileOthersChange, reserveIds } from './import-claim.ts';
+import { HAS_REGISTRY } from './known-stations.ts';
 import { type LayablePart, layParts, type OverlapRule } from './lay-parts.ts';
 import { loadParts, type RecordHead, saveRecords, standingRecord, storeLaid } from './lay-record.ts';
 import { Conflicts, OverlapError } from './overlap-error.ts';
@@ -56,9 +58,9 @@ export interface Applied {
  *          area; StoreBusyError when another import goes on; the signal's reason */
 export async function applyStaging(jobId: string, options: ApplyOptions): Promise<Applied> {
   const path = options.path ?? databasePath();
-  const connection = openConnection(path);
+  const connection = sharedConnection(path);
+  await whenFree(() => attachStaging(connection, stagingPath(jobId, path)), { waitMs: 30_000 });
   try {
-    connection.prepare('ATTACH DATABASE ? AS staging').run([stagingPath(jobId, path)]);
     await recoverImports(connection);
     const counters = readCounters(connection);
     const claim = await claimImports(connection, options);
@@ -71,8 +73,17 @@ export async function applyStaging(jobId: string, options: ApplyOptions): Promis
       throw error;
     }
   } finally {
-    connection.close();
+    connection.exec('DETACH DATABASE staging');
   }
+}
+
+/** One at a time in a thread: two applyStaging of one thread take turns. */
+function attachStaging(connection: Connection, file: string): void {
+  if (!existsSync(file))
+    throw new StoreError('missing', 'The files that were read in have been cleared away; start again.');
+  const attached = rows(connection, "SELECT 1 FROM pragma_database_list WHERE name = 'staging'").get([]);
+  if (attached) throw new StoreBusyError('Another import is being stored; try again when it is done.');
+  connection.prepare('ATTACH DATABASE ? AS staging').run([file]);
 }
 
 interface Claim {
@@ -116,12 +127,9 @@ function claimImports(connection: Connection, options: ApplyOptions): Promise<Cl
 }
 
 /** True when the region's stations are those of a registry, given earlier or now, and not only those of its flows. */
-function hasRegistry(connection: Connection, regionId: number): boolean {
-  const sql = `SELECT EXISTS (SELECT 1 FROM staging.registry)
-    OR EXISTS (SELECT 1 FROM Import WHERE regionId = ? AND kind = 'registry' AND state = 'applied')
-    OR EXISTS (SELECT 1 FROM Station WHERE regionId = ? AND createdBy IS NULL)`;
-  return (rows(connection, sql).get([regionId, regionId]) as [number])[0] === 1;
-}
+const hasRegistry = (connection: Connection, regionId: number): boolean =>
+  rows(connection, 'SELECT 1 FROM staging.registry').get([]) !== undefined ||
+  (rows(connection, HAS_REGISTRY).get([regionId, regionId]) as [number])[0] === 1;
 
 async function applyClaimed(connection: Connection, claim: Claim, options: ApplyOptions): Promise<Applied> {
   const { signal, onProgress, sliceMs } = options;

@@ -1,5 +1,5 @@
 import { whenFree } from './busy.ts';
-import { immediately, openConnection, rows } from './connection.ts';
+import { type Connection, immediately, rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { refuseWhileOthersChange } from './import-claim.ts';
@@ -8,25 +8,21 @@ import { sweep } from './withdraw.ts';
 /** Takes a region away with all that belongs to it: at once for readers, its days in slices afterwards.
  *  @throws StoreError 'not-found'; StoreBusyError while an import is being stored */
 export async function deleteRegion(slug: string, path = databasePath()): Promise<void> {
-  const connection = openConnection(path);
-  try {
-    await whenFree(() =>
-      immediately(connection, () => {
-        refuseWhileOthersChange(connection);
-        const found = rows(connection, 'SELECT id FROM Region WHERE slug = ?').get([slug]) as [number] | undefined;
-        if (!found) throw new StoreError('not-found', `There is no region "${slug}".`);
-        for (const table of ['Record', 'Mark']) {
-          const sql = `DELETE FROM ${table} WHERE stationId IN (SELECT id FROM Station WHERE regionId = ?)`;
-          connection.prepare(sql).run([found[0]]);
-        }
-        for (const table of ['Station', 'Layer', 'Basis', 'Job', 'Import']) {
-          connection.prepare(`DELETE FROM ${table} WHERE regionId = ?`).run([found[0]]);
-        }
-        connection.prepare('DELETE FROM Region WHERE id = ?').run([found[0]]);
-      }),
-    );
-    await sweep(connection);
-  } finally {
-    connection.close();
+  const connection = sharedConnection(path);
+  await whenFree(() => immediately(connection, () => remove(connection, slug)));
+  await sweep(connection);
+}
+
+function remove(connection: Connection, slug: string): void {
+  refuseWhileOthersChange(connection);
+  const found = rows(connection, 'SELECT id FROM Region WHERE slug = ?').get([slug]) as [number] | undefined;
+  if (!found) throw new StoreError('not-found', `There is no region "${slug}".`);
+  for (const table of ['Record', 'Mark']) {
+    const sql = `DELETE FROM ${table} WHERE stationId IN (SELECT id FROM Station WHERE regionId = ?)`;
+    connection.prepare(sql).run([found[0]]);
   }
+  for (const table of ['Station', 'Layer', 'Basis', 'Job', 'Import']) {
+    connection.prepare(`DELETE FROM ${table} WHERE regionId = ?`).run([found[0]]);
+  }
+  connection.prepare('DELETE FROM Region WHERE id = ?').run([found[0]]);
 }

@@ -2,7 +2,8 @@ import type { KnownStation } from '../intake/types.ts';
 import { sharedStatement } from './connection.ts';
 import { databasePath } from './database-url.ts';
 
-const HAS_REGISTRY = `SELECT EXISTS (SELECT 1 FROM Import WHERE regionId = ? AND kind = 'registry' AND state = 'applied')
+/** Whether a region's stations come from a registry, or were made by hand, and not only by flows. */
+export const HAS_REGISTRY = `SELECT EXISTS (SELECT 1 FROM Import WHERE regionId = ? AND kind = 'registry' AND state = 'applied')
   OR EXISTS (SELECT 1 FROM Station WHERE regionId = ? AND createdBy IS NULL)`;
 
 /** The stations that flows of a region may name; null where the region has no registry, so that flows make stations. */

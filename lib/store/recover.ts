@@ -1,7 +1,7 @@
 import { readdirSync, rmSync, statSync } from 'node:fs';
 import { basename, dirname, join } from 'node:path';
 import Database from 'libsql';
-import { openConnection } from './connection.ts';
+import { sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { DEAD_AFTER_MS, failDeadJobs } from './jobs.ts';
 import { recoverImports } from './withdraw.ts';
@@ -21,13 +21,8 @@ export interface Recovered {
 export async function recoverStore({ deadAfterMs = DEAD_AFTER_MS } = {}): Promise<Recovered> {
   const path = databasePath();
   const failedJobs = await failDeadJobs({ deadAfterMs });
-  const connection = openConnection(path);
-  try {
-    const withdrawnImports = await recoverImports(connection, deadAfterMs);
-    return { failedJobs, withdrawnImports, stagingFiles: removeDeadStaging(path, deadAfterMs) };
-  } finally {
-    connection.close();
-  }
+  const withdrawnImports = await recoverImports(sharedConnection(path), deadAfterMs);
+  return { failedJobs, withdrawnImports, stagingFiles: removeDeadStaging(path, deadAfterMs) };
 }
 
 function removeDeadStaging(path: string, deadAfterMs: number): string[] {
@@ -43,15 +38,17 @@ function removeDeadStaging(path: string, deadAfterMs: number): string[] {
 
 /** True while the process that fills a staging database lives: it holds the file's lock. */
 function isHeld(file: string): boolean {
-  let connection: Database.Database | undefined;
+  const connection = new Database(':memory:');
   try {
-    connection = new Database(file);
+    // Attached, for a connection's own file stays open until its statements are collected.
+    connection.prepare('ATTACH DATABASE ? AS staging').run([file]);
     connection.exec('BEGIN EXCLUSIVE');
     connection.exec('ROLLBACK');
+    connection.exec('DETACH DATABASE staging');
     return false;
   } catch (error) {
     return String((error as { code?: unknown }).code).startsWith('SQLITE_BUSY');
   } finally {
-    connection?.close();
+    connection.close();
   }
 }

@@ -3,6 +3,7 @@ import { dateOfDay } from '../calendar/day.ts';
 import { whenFree } from './busy.ts';
 import { sharedStatement } from './connection.ts';
 import { StoreError } from './errors.ts';
+import { VISIBLE } from './import-claim.ts';
 import { openStore } from './open.ts';
 import { slugOf } from './slug.ts';
 
@@ -31,19 +32,22 @@ export interface RegionSummary {
   /** calendar years of the first and last value of any record; null when there is none */
   firstYear: number | null;
   lastYear: number | null;
+  /** ISO date (UTC) of the latest import; null when there is none */
+  lastImport: string | null;
 }
 
 /** All regions by name, with what they hold. */
 export async function listRegions(): Promise<RegionSummary[]> {
   const found = sharedStatement(
-    `SELECT g.id, g.slug, g.name, g.invented, COUNT(s.id), COUNT(r.id), MIN(r.firstValueDay), MAX(r.lastValueDay)
+    `SELECT g.id, g.slug, g.name, g.invented, COUNT(s.id), COUNT(r.id), MIN(r.firstValueDay), MAX(r.lastValueDay),
+       (SELECT SUBSTR(MAX(i.createdAt), 1, 10) FROM Import i WHERE i.regionId = g.id AND i.state IN ${VISIBLE})
      FROM Region g LEFT JOIN Station s ON s.regionId = g.id
      LEFT JOIN Record r ON r.stationId = s.id AND r.quantity = 'flow'
      GROUP BY g.id ORDER BY g.name`,
     openStore().path,
-  ).all([]) as [number, string, string, number, number, number, number | null, number | null][];
+  ).all([]) as [number, string, string, number, number, number, number | null, number | null, string | null][];
   const yearOf = (day: number | null) => (day === null ? null : dateOfDay(day).year);
-  return found.map(([id, slug, name, invented, stations, records, first, last]) => ({
+  return found.map(([id, slug, name, invented, stations, records, first, last, lastImport]) => ({
     id,
     slug,
     name,
@@ -52,6 +56,7 @@ export async function listRegions(): Promise<RegionSummary[]> {
     records,
     firstYear: yearOf(first),
     lastYear: yearOf(last),
+    lastImport,
   }));
 }
 

@@ -46,6 +46,6 @@ export async function inSlices<T>(
       throw error;
     }
     onProgress?.(done);
-    await pause(Math.max(10, sliceMs / 5));
+    if (!next.done) await pause(Math.max(10, sliceMs / 5));
   }
 }

@@ -47,13 +47,13 @@ export interface Staging {
 }
 
 const TABLES = `
-  CREATE TABLE file (id INTEGER PRIMARY KEY, kind TEXT NOT NULL, fileName TEXT NOT NULL, sha256 TEXT NOT NULL DEFAULT '',
+  CREATE TABLE staging.file (id INTEGER PRIMARY KEY, kind TEXT NOT NULL, fileName TEXT NOT NULL, sha256 TEXT NOT NULL DEFAULT '',
     layout TEXT NOT NULL DEFAULT '', unit TEXT NOT NULL DEFAULT '', mapping TEXT NOT NULL DEFAULT '{}',
     rows INTEGER NOT NULL DEFAULT 0, accepted INTEGER NOT NULL DEFAULT 0, rejected INTEGER NOT NULL DEFAULT 0,
     report TEXT NOT NULL DEFAULT '{}');
-  CREATE TABLE registry (file INTEGER NOT NULL, stations TEXT NOT NULL, given TEXT NOT NULL);
-  CREATE TABLE layer (file INTEGER NOT NULL, name TEXT NOT NULL, kind TEXT NOT NULL, geojson TEXT NOT NULL);
-  CREATE TABLE part (id INTEGER PRIMARY KEY, file INTEGER NOT NULL, code TEXT NOT NULL, quantity TEXT NOT NULL,
+  CREATE TABLE staging.registry (file INTEGER NOT NULL, stations TEXT NOT NULL, given TEXT NOT NULL);
+  CREATE TABLE staging.layer (file INTEGER NOT NULL, name TEXT NOT NULL, kind TEXT NOT NULL, geojson TEXT NOT NULL);
+  CREATE TABLE staging.part (id INTEGER PRIMARY KEY, file INTEGER NOT NULL, code TEXT NOT NULL, quantity TEXT NOT NULL,
     firstDay INTEGER NOT NULL, days INTEGER NOT NULL, unit TEXT NOT NULL, hash TEXT NOT NULL, valueCount INTEGER NOT NULL,
     firstValueDay INTEGER, lastValueDay INTEGER, zeroCount INTEGER NOT NULL, codeList TEXT NOT NULL, "values" BLOB NOT NULL,
     codes BLOB NOT NULL, UNIQUE (file, code, quantity));`;
@@ -70,10 +70,13 @@ export function stagingPath(jobId: string, path = databasePath()): string {
 export function createStaging(jobId: string, path = databasePath()): Staging {
   const file = stagingPath(jobId, path);
   discardStaging(jobId, path);
-  const connection = new Database(file);
+  // A connection's own file stays open, and locked, until its last statement is collected; an attached one closes when
+  // it is detached.
+  const connection = new Database(':memory:');
+  connection.prepare('ATTACH DATABASE ? AS staging').run([file]);
   // It is thrown away whole when anything fails: no journal. The lock, held to the end, tells that its maker lives.
   for (const pragma of ['locking_mode=EXCLUSIVE', 'journal_mode=OFF', 'synchronous=OFF']) {
-    connection.exec(`PRAGMA ${pragma}`);
+    connection.exec(`PRAGMA staging.${pragma}`);
   }
   connection.exec('BEGIN EXCLUSIVE');
   connection.exec(TABLES);
@@ -82,6 +85,12 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
     `INSERT INTO part (file, code, quantity, firstDay, days, unit, hash, valueCount, firstValueDay, lastValueDay,
        zeroCount, codeList, "values", codes) VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)`,
   );
+  const end = (sql: 'COMMIT' | 'ROLLBACK') => {
+    if (!connection.open) return;
+    connection.exec(sql);
+    connection.exec('DETACH DATABASE staging');
+    connection.close();
+  };
   return {
     jobId,
     path: file,
@@ -121,12 +130,9 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
           fileId,
         ]);
     },
-    seal() {
-      connection.exec('COMMIT');
-      connection.close();
-    },
+    seal: () => end('COMMIT'),
     discard() {
-      if (connection.open) connection.close();
+      end('ROLLBACK');
       discardStaging(jobId, path);
     },
   };

@@ -1,6 +1,6 @@
 import { refuseForArea } from './area-error.ts';
 import { whenFree } from './busy.ts';
-import { type Connection, immediately, openConnection, rows, timestamp } from './connection.ts';
+import { type Connection, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { beatImports, refuseWhileOthersChange, VISIBLE } from './import-claim.ts';
@@ -28,24 +28,18 @@ export async function undoImport(
   importId: number,
   { path = databasePath(), ...slices }: Pick<SliceOptions, 'sliceMs' | 'signal'> & { path?: string } = {},
 ): Promise<Undone> {
-  const connection = openConnection(path);
+  const connection = sharedConnection(path);
+  await recoverImports(connection);
+  const regionId = await whenFree(() => immediately(connection, () => claim(connection, importId)), { waitMs: 30_000 });
   try {
-    await recoverImports(connection);
-    const regionId = await whenFree(() => immediately(connection, () => claim(connection, importId)), {
-      waitMs: 30_000,
-    });
-    try {
-      const undone = await undoClaimed(connection, { importId, regionId }, slices);
-      await sweep(connection, slices);
-      return undone;
-    } catch (error) {
-      const back = "UPDATE Import SET state = 'applied' WHERE id = ? AND state = 'undoing'";
-      await whenFree(() => connection.prepare(back).run([importId]));
-      await sweep(connection, slices);
-      throw error;
-    }
-  } finally {
-    connection.close();
+    const undone = await undoClaimed(connection, { importId, regionId }, slices);
+    await sweep(connection, slices);
+    return undone;
+  } catch (error) {
+    const back = "UPDATE Import SET state = 'applied' WHERE id = ? AND state = 'undoing'";
+    await whenFree(() => connection.prepare(back).run([importId]));
+    await sweep(connection, slices);
+    throw error;
   }
 }
 

@@ -1,4 +1,4 @@
-import { whenFree } from './busy.ts';
+import { isBusy, whenFree } from './busy.ts';
 import { type Connection, immediately, rows, timestamp } from './connection.ts';
 import { type Counters, restoreCounters } from './import-claim.ts';
 import { DEAD_AFTER_MS } from './jobs.ts';
@@ -20,19 +20,22 @@ export async function withdraw(
   if (counters) await whenFree(() => immediately(connection, () => restoreCounters(connection, counters)));
 }
 
-/** Removes what no reader can reach: parts of imports that are undone or gone, days laid for a record that moved on. */
-export async function sweep(connection: Connection, options: Pick<SliceOptions, 'sliceMs'> = {}): Promise<void> {
-  const removePart = connection.prepare(`DELETE FROM Part WHERE id = ?`);
+/** Removes what no reader can reach: parts of imports that are undone or gone, days laid for a record that moved on. What
+ *  cannot be removed because others keep writing goes with the next sweep. */
+export async function sweep(connection: Connection, { sliceMs }: Pick<SliceOptions, 'sliceMs'> = {}): Promise<void> {
+  const removePart = connection.prepare('DELETE FROM Part WHERE id = ?');
   const removeLaid = connection.prepare('DELETE FROM Laid WHERE id = ?');
-  await inSlices(connection, ids(connection, LOST_PARTS), (id) => void removePart.run([id]), options);
-  await inSlices(connection, ids(connection, LOST_LAID), (id) => void removeLaid.run([id]), options);
-  await whenFree(() =>
-    connection.exec(
-      "DELETE FROM Import WHERE state = 'undone' AND NOT EXISTS (SELECT 1 FROM Part WHERE Part.importId = Import.id)",
-    ),
-  );
+  try {
+    await inSlices(connection, ids(connection, LOST_PARTS), (id) => void removePart.run([id]), { sliceMs });
+    await inSlices(connection, ids(connection, LOST_LAID), (id) => void removeLaid.run([id]), { sliceMs });
+    await whenFree(() => connection.exec(EMPTY_IMPORTS));
+  } catch (error) {
+    if (!isBusy(error)) throw error;
+  }
 }
 
+const EMPTY_IMPORTS = `DELETE FROM Import
+  WHERE state = 'undone' AND NOT EXISTS (SELECT 1 FROM Part WHERE Part.importId = Import.id)`;
 const LOST_PARTS = "SELECT id FROM Part WHERE importId NOT IN (SELECT id FROM Import WHERE state <> 'undone')";
 const LOST_LAID = `SELECT id FROM Laid WHERE id NOT IN (SELECT laidId FROM Record WHERE laidId IS NOT NULL)
   AND (importId IS NULL OR importId NOT IN (SELECT id FROM Import WHERE state IN ('applying', 'undoing')))`;

@@ -1,0 +1,91 @@
+import { createHash } from 'node:crypto';
+import type { FlowUnit, StagedPart } from '../../../lib/intake/types.ts';
+import { type Applied, type ApplyOptions, applyStaging } from '../../../lib/store/apply-staging.ts';
+import { openConnection, rows } from '../../../lib/store/connection.ts';
+import { readSeries } from '../../../lib/store/records.ts';
+import { createStaging, discardStaging } from '../../../lib/store/staging.ts';
+import { listStations } from '../../../lib/store/stations.ts';
+
+/** Every row of every table, blobs by their hash, and the counters: equal exactly when the databases hold the same. */
+export function dump(path: string): string[] {
+  const connection = openConnection(path);
+  try {
+    const tables = rows(connection, "SELECT name FROM sqlite_master WHERE type = 'table' ORDER BY name").all([]).flat();
+    return (tables as string[]).flatMap((table) => {
+      const order = table === 'sqlite_sequence' ? 'name' : 'rowid';
+      const found = rows(connection, `SELECT * FROM "${table}" ORDER BY ${order}`).all([]) as unknown[][];
+      return found.map((row) => `${table} ${JSON.stringify(row.map(plain))}`);
+    });
+  } finally {
+    connection.close();
+  }
+}
+
+const plain = (value: unknown): unknown =>
+  Buffer.isBuffer(value) ? createHash('sha256').update(value).digest('hex') : value;
+
+export interface PartInput {
+  code: string;
+  firstDay?: number;
+  values: number[];
+  /** quality code a day; null = no row */
+  codes?: (string | null)[];
+  unit?: FlowUnit;
+}
+
+const BITS: Record<string, number> = { e: 1, P: 2, Ice: 4 };
+
+export function partOf({ code, firstDay = 0, values, codes, unit = 'm3/s' }: PartInput): StagedPart {
+  const texts = [...new Set(['', ...(codes ?? []).filter((text) => text !== null)])];
+  return {
+    ...{ code, unit, firstDay },
+    values: Float64Array.from(values),
+    codes: Uint8Array.from(values, (_, day) => {
+      const text = codes === undefined ? '' : codes[day];
+      return text === null ? 255 : texts.indexOf(text);
+    }),
+    codeList: texts.map((text) => ({ text, bits: BITS[text] ?? 0 })),
+  };
+}
+
+let jobs = 0;
+
+/** Takes in files of parts, each file an import, in one go. */
+export async function importFiles(
+  files: PartInput[][],
+  options: Omit<ApplyOptions, 'region'> & Partial<Pick<ApplyOptions, 'region'>> = {},
+): Promise<Applied> {
+  const staging = createStaging(`test-${process.pid}-${jobs++}`);
+  for (const [index, parts] of files.entries()) {
+    const file = staging.addFile({ kind: 'flows', fileName: `flows-${index + 1}.csv` });
+    for (const part of parts) staging.stagePart(file, partOf(part));
+    staging.describeFile(file, { sha256: 'none', rows: parts.length, accepted: parts.length });
+  }
+  staging.seal();
+  try {
+    return await applyStaging(staging.jobId, { region: { name: 'Wethe' }, ...options });
+  } finally {
+    discardStaging(staging.jobId);
+  }
+}
+
+export interface SeenRecord {
+  firstDay: number;
+  values: number[];
+  flags: number[];
+  hash: string;
+}
+
+/** The records of a region as readers see them, by code. */
+export async function seenRecords(regionId: number): Promise<Record<string, SeenRecord>> {
+  const stations = await listStations(regionId);
+  const seen: Record<string, SeenRecord> = {};
+  readSeries(
+    stations.map(({ id }) => id),
+    (stationId, { firstDay, values, flags }, hash) => {
+      const { code } = stations.find(({ id }) => id === stationId)!;
+      seen[code] = { firstDay, values: [...values], flags: [...flags], hash };
+    },
+  );
+  return seen;
+}
