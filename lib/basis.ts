@@ -52,6 +52,7 @@ export type BasisInput = z.input<typeof basisSchema>;
 export type BasisKey = keyof Basis;
 
 export const DEFAULT_BASIS: Basis = Object.freeze(basisSchema.parse({})) as Basis;
+Object.freeze(DEFAULT_BASIS.exclude);
 export const BASIS_KEYS = Object.keys(DEFAULT_BASIS) as BasisKey[];
 
 /** The basis with `common` and `auto` replaced by what they came to for a region's records. */
@@ -85,8 +86,14 @@ export function parseBasis(input: unknown, base: Basis = DEFAULT_BASIS): Basis {
   if (typeof input !== 'object' || input === null || Array.isArray(input)) {
     throw new BasisError('A basis must be a JSON object, for example {"days": 30}.');
   }
-  const result = basisSchema.safeParse({ ...base, ...input });
-  if (!result.success) throw new BasisError(result.error.issues.map((issue) => describeIssue(issue, input)).join(' '));
+  // a key that is there but undefined was not given: the base's value stands, not the general default
+  const given = Object.fromEntries(Object.entries(input).filter(([, value]) => value !== undefined));
+  const laidOver = { ...base, ...given };
+  const result = basisSchema.safeParse(laidOver);
+  if (!result.success) {
+    const problems = result.error.issues.map((issue) => describeIssue(issue, laidOver));
+    throw new BasisError([...new Set(problems)].join(' '));
+  }
   return { ...result.data, exclude: sortFlags(result.data.exclude) };
 }
 
@@ -245,7 +252,9 @@ export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
   const from = basis.asked.yearStart === 'auto' ? ' (from the wettest month)' : '';
   const period =
     basis.period === null
-      ? 'each station’s own years'
+      ? basis.asked.period === 'common'
+        ? 'no common period'
+        : 'each station’s own years'
       : `${basis.period[0]}–${basis.period[1]}${basis.asked.period === 'common' ? ' (the common period)' : ''}`;
   return [
     { text: 'Comparing ' },
@@ -256,7 +265,9 @@ export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
     { text: period, term: 'period' },
     { text: ', at stations with ' },
     {
-      text: `at least ${basis.minYears} usable years and ${percent(basis.minCoverage)} % of the period`,
+      text: `at least ${basis.minYears} usable years (at most ${basis.maxMissingDays} days missing) and ${percent(basis.minCoverage)} % of ${
+        basis.period === null ? 'their span' : 'the period'
+      }`,
       term: 'completeness',
     },
     { text: ', ranked by ' },
