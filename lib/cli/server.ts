@@ -1,4 +1,6 @@
 /** The http server in front of Next: request safety, long uploads, an orderly end. */
+
+import { Console } from 'node:console';
 import { randomBytes } from 'node:crypto';
 import { createServer, type IncomingMessage, type Server, type ServerResponse, STATUS_CODES } from 'node:http';
 import type { AddressInfo } from 'node:net';
@@ -29,14 +31,15 @@ interface Options {
 }
 
 type Handler = (request: IncomingMessage, response: ServerResponse) => Promise<void>;
-type UpgradeHandler = (request: IncomingMessage, socket: Duplex, head: Buffer) => Promise<void>;
 
 /** Takes the port and answers 503 on it until `open`.
  *  @throws Error with one clear line when the port is taken or the address is not this machine's */
 export async function listen(options: Options): Promise<Site> {
   const { host, dev, policy } = options;
   let handle: Handler | null = null;
-  let upgrade: UpgradeHandler | null = null;
+  // Next listens for web sockets on the server it is given. This one never listens: what is emitted on it was judged.
+  const nextSockets = createServer();
+  const webSockets = new Set<Duplex>();
   let closeNext: (() => Promise<void>) | null = null;
 
   const server = createServer((request, response) => {
@@ -61,8 +64,10 @@ export async function listen(options: Options): Promise<Site> {
   server.requestTimeout = 0;
   server.on('upgrade', (request: IncomingMessage, socket: Duplex, head: Buffer) => {
     const verdict = judgeRequest({ ...words(request), method: 'UPGRADE' }, policy);
-    if (verdict.kind === 'pass' && upgrade) void upgrade(request, socket, head);
-    else socket.destroy();
+    if (verdict.kind !== 'pass' || nextSockets.listenerCount('upgrade') === 0) return void socket.destroy();
+    webSockets.add(socket);
+    socket.once('close', () => webSockets.delete(socket));
+    nextSockets.emit('upgrade', request, socket, head);
   });
 
   const port = await takePort(server, options);
@@ -70,18 +75,18 @@ export async function listen(options: Options): Promise<Site> {
   return {
     address: `http://${name.includes(':') ? `[${name}]` : name}:${port}`,
     async open() {
+      // Next tells its progress by console.log; stdout is for the address alone.
+      globalThis.console = new Console(process.stderr);
       const { default: next } = await import('next');
-      // Next listens for web sockets on the server it is given. One that never listens keeps it from answering those that
-      // were not judged; the judged ones are handed over above.
-      const app = next({ dev, hostname: host, port, dir: process.cwd(), httpServer: createServer() });
+      const app = next({ dev, hostname: host, port, dir: process.cwd(), httpServer: nextSockets });
       await app.prepare();
       handle = app.getRequestHandler();
-      upgrade = app.getUpgradeHandler();
       closeNext = () => app.close();
     },
     async close() {
       const closed = new Promise<void>((resolve) => server.close(() => resolve()));
       server.closeIdleConnections();
+      for (const socket of webSockets) socket.destroy();
       const late = setTimeout(() => server.closeAllConnections(), GRACE);
       await closed;
       clearTimeout(late);

@@ -1,0 +1,6 @@
+/** Runs once in a starting server, before its first request. */
+export async function register(): Promise<void> {
+  if (process.env.NEXT_RUNTIME !== 'nodejs' || process.env.NEXT_PHASE === 'phase-production-build') return;
+  const { recoverJobs } = await import('./lib/jobs/recover.ts');
+  await recoverJobs();
+}
