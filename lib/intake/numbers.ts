@@ -1,5 +1,5 @@
 /** Powers of ten that a double holds exactly. */
-const POWERS = Float64Array.from({ length: 23 }, (_, exponent) => Number(`1e${exponent}`));
+export const POWERS_OF_TEN = Float64Array.from({ length: 23 }, (_, exponent) => Number(`1e${exponent}`));
 
 const PLUS = 43;
 const MINUS = 45;
@@ -34,7 +34,7 @@ export function parseDecimal(bytes: Uint8Array, start: number, end: number, deci
   }
   if (digits === 0) return Number.NaN;
   if (significant > 15 || decimals > 22) return parseSlowly(bytes, start, end, decimal);
-  const size = decimals > 0 ? whole / POWERS[decimals] : whole;
+  const size = decimals > 0 ? whole / POWERS_OF_TEN[decimals] : whole;
   return sign === MINUS ? -size : size;
 }
 

@@ -19,6 +19,7 @@ export class DelimitedLines implements LineSplitter {
     let count = 0;
     let first = from;
     let at = from;
+    let blanks = false;
     fields.unclosed = false;
     for (; at < limit; at++) {
       const byte = bytes[at];
@@ -34,6 +35,7 @@ export class DelimitedLines implements LineSplitter {
         }
         first = at + 1;
       } else if (byte === lineEnd) break;
+      else if (byte === BLANK) blanks = true;
       else if (byte === QUOTE) return this.splitQuoted(bytes, from, limit, fields);
     }
     start[count] = first;
@@ -45,7 +47,7 @@ export class DelimitedLines implements LineSplitter {
       fields.lineEnd = at - 1;
       if (end[count] > start[count]) end[count] = at - 1;
     }
-    for (let field = 0; field <= count; field++) trim(bytes, start, end, field);
+    if (blanks) for (let field = 0; field <= count; field++) trim(bytes, start, end, field);
     return at + 1;
   }
 

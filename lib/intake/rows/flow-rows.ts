@@ -4,6 +4,7 @@ import type { TablePlan } from '../recognise/table-plan.ts';
 import type { StationCodes } from '../station-codes.ts';
 import type { ValueReader } from '../value-reader.ts';
 import type { Fields } from './fields.ts';
+import { PlainRows } from './plain-rows.ts';
 import { countProblem, DayReader, type DaySink, fieldIs, type RowReader, textOf } from './row-reader.ts';
 
 /** Rows of one value each: a station (in a column, or one for the whole file), a day, a value and perhaps a flag. */
@@ -13,6 +14,7 @@ export class FlowRows implements RowReader {
   private readonly days: DayReader;
   private readonly where: Uint8Array;
   private readonly unit: Uint8Array;
+  private readonly plain: PlainRows | null;
 
   /** @param onlyStation  the station of a file without a station column */
   constructor(
@@ -23,6 +25,11 @@ export class FlowRows implements RowReader {
     this.days = new DayReader(plan);
     this.where = new TextEncoder().encode(plan.mapping.where?.equals ?? '');
     this.unit = new TextEncoder().encode(plan.unitText);
+    this.plain = PlainRows.for(plan, parts, onlyStation);
+  }
+
+  readPlain(bytes: Uint8Array, from: number, limit: number, line: number): number {
+    return this.plain === null ? -1 : this.plain.read(bytes, from, limit, line);
   }
 
   read(bytes: Uint8Array, fields: Fields, line: number): string | null {

@@ -10,6 +10,8 @@ import { isEmptyRow, type RowReader } from './row-reader.ts';
 
 const COMMENT = 35;
 
+type QuickReader = Required<RowReader>;
+
 export interface LoopOptions {
   signal?: AbortSignal;
   onBytes?(bytes: Uint8Array): void;
@@ -65,7 +67,19 @@ export class RowLoop {
     let rows = this.rows;
     let line = this.line;
     let at = start;
+    const quick = reader.readPlain !== undefined;
     while (at < end) {
+      if (quick && line + 1 >= firstLine) {
+        this.line = line + 1;
+        const next = (reader as QuickReader).readPlain(bytes, at, end, line + 1);
+        if (next > 0) {
+          at = next;
+          line++;
+          rows++;
+          if (options.stop?.()) return false;
+          continue;
+        }
+      }
       at = splitter.split(bytes, at, end, fields);
       line++;
       if (line < firstLine || fields.lineEnd === fields.lineStart || bytes[fields.lineStart] === COMMENT) continue;
