@@ -142,15 +142,15 @@ function answerProblem(response: ServerResponse, status: number, detail: string,
   response.end(body);
 }
 
-/** Resolves once a signal has asked for the end and the site is closed; a second signal ends at once. */
-export function untilStopped(site: Site): Promise<void> {
+/** Resolves once a signal has asked for the end; a second signal ends at once. */
+export function untilStopped(): Promise<void> {
   return new Promise((resolve) => {
     let asked = false;
     const stop = () => {
       if (asked) process.exit(1);
       asked = true;
       process.stderr.write('Stopping …\n');
-      void site.close().finally(resolve);
+      resolve();
     };
     for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(signal, stop);
   });

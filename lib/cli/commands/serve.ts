@@ -1,6 +1,7 @@
 import { hostname, networkInterfaces } from 'node:os';
 import { migrate } from '../../store/migrate.ts';
 import { listRegions } from '../../store/regions.ts';
+import { takeServerLock } from '../../store/server-lock.ts';
 import { readArguments, wholeNumber } from '../arguments.ts';
 import type { Host } from '../command.ts';
 import { allowedHosts, isLoopback, LOOPBACK_HOSTS } from '../request-safety.ts';
@@ -36,18 +37,20 @@ export async function run(argv: string[], host: Host): Promise<number> {
     dev: host.dev,
     policy: { hosts: allowedHosts(address, ownNames()), token },
   });
+  let release = () => {};
   try {
     await migrate();
+    release = takeServerLock();
     if (values.demo && (await listRegions()).length === 0) await host.seedDemo();
     if (!host.dev) await host.build();
     await site.open();
-  } catch (error) {
+    process.stdout.write(`Hungerstone is at ${site.address}\n`);
+    await untilStopped();
+    return 0;
+  } finally {
     await site.close();
-    throw error;
+    release();
   }
-  process.stdout.write(`Hungerstone is at ${site.address}\n`);
-  await untilStopped(site);
-  return 0;
 }
 
 /** @throws UsageError when others could reach the server without a token */
