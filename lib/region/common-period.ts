@@ -25,7 +25,8 @@ export function commonPeriod(stations: readonly AnnualMinima[], rule: Completene
   }
   const span = spanOfUsableYears(stations);
   if (span === null || span.last - span.first + 1 < minYears) return { period: null, ranked: 0 };
-  const { ranked, complete, years } = countStations(stations, span.first, span.last - span.first + 1, rule);
+  const years = span.last - span.first + 1;
+  const { ranked, complete } = countStations(stations, span.first, years, rule);
   const best = largestWindow(ranked, years, minYears) ?? largestWindow(complete, years, minYears);
   const [from, to] = best ?? [0, years - 1];
   return { period: [span.first + from, span.first + to], ranked: ranked[from * years + to] };
@@ -50,7 +51,7 @@ function countStations(
   firstYear: number,
   years: number,
   { minYears, minCoverage }: CompletenessRule,
-): { ranked: Int32Array; complete: Int32Array; years: number } {
+): { ranked: Int32Array; complete: Int32Array } {
   const ranked = new Int32Array(years * years);
   const complete = new Int32Array(years * years);
   const needed = Int32Array.from({ length: years + 1 }, (_, length) =>
@@ -75,7 +76,7 @@ function countStations(
       }
     }
   }
-  return { ranked, complete, years };
+  return { ranked, complete };
 }
 
 function runningSums(station: AnnualMinima, firstYear: number, usableBefore: Int32Array, zerosBefore: Int32Array) {

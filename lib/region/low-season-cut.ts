@@ -30,12 +30,12 @@ export function lowSeasonCut(
   if (n === 0 || windowDays > LONGEST_WINDOW) return null;
   const lastDays = windowDays + LAST_DAYS_BESIDE_WINDOW;
   const atEdge = edgeOf(dates.days, yearStart, lastDays).count;
-  const near = successiveNear(dates);
+  const { near, pairs } = successiveNear(dates);
   const signs: string[] = [];
   if (atEdge > LARGEST_SHARE * n) {
     signs.push(`${atEdge} of ${n} minima in the first ${FIRST_DAYS} or last ${lastDays} days of the year`);
   }
-  if (near > 0) signs.push(`${near} of ${n - 1} successive minima under ${SAME_LOW_DAYS} days after the one before`);
+  if (near > 0) signs.push(`${near} of ${pairs} successive minima under ${SAME_LOW_DAYS} days after the one before`);
   if (!signs.length) return null;
   return `year start cuts its low season (${signs.join('; ')}): ${adviceOn(dates, basis, lastDays)}`;
 }
@@ -54,12 +54,16 @@ function edgeOf(days: readonly number[], startMonth: number, lastDays: number): 
   return { count, distance };
 }
 
-function successiveNear({ years, days }: MinimaDates): number {
+/** Minima of consecutive years, and how many of them follow the one before within 60 days. */
+function successiveNear({ years, days }: MinimaDates): { near: number; pairs: number } {
   let near = 0;
+  let pairs = 0;
   for (let i = 1; i < years.length; i++) {
-    if (years[i] === years[i - 1] + 1 && days[i] - days[i - 1] < SAME_LOW_DAYS) near++;
+    if (years[i] !== years[i - 1] + 1) continue;
+    pairs++;
+    if (days[i] - days[i - 1] < SAME_LOW_DAYS) near++;
   }
-  return near;
+  return { near, pairs };
 }
 
 /** The month with the fewest of the present minima at its years' ends; of equal ones that with most room. */
