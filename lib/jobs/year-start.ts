@@ -1,6 +1,8 @@
 import { type Basis, BasisError, type BasisKey, seasonProblem } from '../basis.ts';
 import { resolveYearStart } from '../region/year-start.ts';
 import { cached } from './cached.ts';
+import { keepMinima, minimaOptions } from './minima-results.ts';
+import type { PackedMinima } from './pack-minima.ts';
 import { runTask } from './pool.ts';
 import { checkAsRead } from './region-inputs.ts';
 import { resultKey, type StationInput } from './result-key.ts';
@@ -9,30 +11,64 @@ import { chunksOf } from './share-out.ts';
 const KEYS: readonly BasisKey[] = ['exclude'];
 const MONTHS = 12;
 
+/** Stations whose regimes suggest the month before the others are read. */
+const FIRST_STATIONS = 20;
+
 /** First month of the low-flow year: the basis's own, or for `auto` the region's wettest month.
  *  @throws BasisError when the season does not fit into the year that `auto` came to */
 export async function yearStartOf(stations: readonly StationInput[], basis: Basis): Promise<number> {
   if (basis.yearStart !== 'auto') return basis.yearStart;
-  const yearStart = resolveYearStart(await regimesOf(stations, basis));
+  const key = resultKey('regimes', { values: basis, keys: KEYS }, stations, 'none');
+  const ratios = await cached('regimes', key, () => regimesOf(stations, basis));
+  const yearStart = wettestMonth(stations, ratios);
   const problem = seasonProblem(basis.season, yearStart);
   if (problem) throw new BasisError(`Basis key "season" does not fit: ${problem}.`);
   return yearStart;
 }
 
-async function regimesOf(stations: readonly StationInput[], basis: Basis): Promise<Float64Array[]> {
-  const recorded = stations.filter(({ dataHash }) => dataHash !== null);
-  const key = resultKey('regimes', { values: basis, keys: KEYS }, recorded, 'none');
-  const chunks = await cached('regimes', key, () =>
-    Promise.all(
-      chunksOf(recorded).map(async (chunk) => {
-        const stationIds = chunk.map(({ facts }) => facts.id);
-        const { ratios, hashes } = await runTask('regimes', { stationIds, exclude: basis.exclude });
-        checkAsRead(chunk, hashes);
-        return ratios;
-      }),
-    ),
+function wettestMonth(stations: readonly StationInput[], ratios: Float64Array): number {
+  const regimes = stations.flatMap(({ dataHash }, i) =>
+    dataHash === null ? [] : [ratios.subarray(i * MONTHS, (i + 1) * MONTHS)],
   );
-  return chunks.flatMap((ratios) =>
-    Array.from({ length: ratios.length / MONTHS }, (_, i) => ratios.subarray(i * MONTHS, (i + 1) * MONTHS)),
+  return resolveYearStart(regimes);
+}
+
+/** Monthly regimes of all stations, twelve ratios each in their order.
+ *
+ *  Every record is read for this, and reading costs as much as computing: so the first few stations suggest a month, the
+ *  minima of that year are computed on the way, and kept when the month turns out to be right, as it mostly does. */
+async function regimesOf(stations: readonly StationInput[], basis: Basis): Promise<Float64Array> {
+  const head = stations.slice(0, FIRST_STATIONS);
+  const first = await readRegimes(head, basis, null);
+  const guess = wettestMonth(head, first.ratios);
+  const fits = seasonProblem(basis.season, guess) === null;
+  const rest = await Promise.all(
+    chunksOf(stations.slice(FIRST_STATIONS)).map((chunk) => readRegimes(chunk, basis, fits ? guess : null)),
   );
+  const ratios = new Float64Array(stations.length * MONTHS);
+  let at = 0;
+  for (const chunk of [first, ...rest]) {
+    ratios.set(chunk.ratios, at);
+    at += chunk.ratios.length;
+  }
+  const minima = rest.flatMap((chunk) => chunk.minima ?? []);
+  if (minima.length > 0 && wettestMonth(stations, ratios) === guess) {
+    const again = await readRegimes(head, basis, guess);
+    await keepMinima(stations, basis, guess, [...(again.minima ? [again.minima] : []), ...minima]);
+  }
+  return ratios;
+}
+
+async function readRegimes(
+  stations: readonly StationInput[],
+  basis: Basis,
+  yearStart: number | null,
+): Promise<{ ratios: Float64Array; minima: PackedMinima | null }> {
+  const read = await runTask('regimes', {
+    stationIds: stations.map(({ facts }) => facts.id),
+    exclude: basis.exclude,
+    minimaOptions: yearStart === null ? null : minimaOptions(basis, yearStart),
+  });
+  checkAsRead(stations, read.hashes);
+  return read;
 }

@@ -13,11 +13,16 @@ export function minima(task: { stationIds: number[]; options: MinimaOptions }): 
   readSeries(task.stationIds, (id, series, hash) => {
     found.set(id, { minima: annualMinima(series, task.options), hash });
   });
-  const none = annualMinima({ firstDay: 0, values: new Float64Array(), flags: new Uint8Array() }, task.options);
+  const none = noMinima(task.options);
   return {
     packed: packMinima(
       task.stationIds.map((stationId) => ({ stationId, minima: found.get(stationId)?.minima ?? none })),
     ),
     hashes: task.stationIds.map((id) => found.get(id)?.hash ?? null),
   };
+}
+
+/** The minima of a station without a record: no years. */
+export function noMinima(options: MinimaOptions): AnnualMinima {
+  return annualMinima({ firstDay: 0, values: new Float64Array(), flags: new Uint8Array() }, options);
 }

@@ -1,0 +1,14 @@
+import { DEAD_AFTER_MS } from '../store/jobs.ts';
+import { recoverStore } from '../store/recover.ts';
+
+/** For the start of a server: clears up what processes that died have left, at once and again when the heartbeat of one
+ *  that died a moment ago has had the time to grow old. */
+export async function recoverJobs(): Promise<void> {
+  await recoverStore();
+  const later = setTimeout(() => void recoverStore().catch(report), DEAD_AFTER_MS + 1000);
+  later.unref();
+}
+
+function report(error: unknown): void {
+  process.stderr.write(`Clearing up after unfinished work failed: ${String(error)}\n`);
+}

@@ -1,0 +1,32 @@
+import { expect, test } from 'vitest';
+import { ImportMeter } from '../../../lib/jobs/import-meter.ts';
+import type { ImportProgress } from '../../../lib/jobs/import-types.ts';
+
+test('ImportMeter counts rows and bytes over all files, and ends at 1', () => {
+  const told: ImportProgress[] = [];
+  const meter = new ImportMeter([100, 300], (progress) => told.push(progress));
+  meter.begin('a.csv', 1);
+  meter.read(5, 60);
+  meter.end(0, 10);
+  meter.begin('b.csv', 2);
+  expect(told.at(-1)).toMatchObject({ stage: 'reading', file: 'b.csv', fileNumber: 2, files: 2, rows: 10, bytes: 100 });
+  expect(told.at(-1)!.share).toBeCloseTo(0.9 * 0.25, 9);
+  meter.end(1, 30);
+  meter.store(0.5);
+  meter.done();
+  expect(told.at(-1)).toMatchObject({ stage: 'done', share: 1, rows: 40, bytes: 400, totalBytes: 400 });
+});
+
+test('the share never falls', () => {
+  const shares: number[] = [];
+  const meter = new ImportMeter([0, 10], ({ share }) => shares.push(share));
+  meter.begin('empty.csv', 1);
+  meter.end(0, 0);
+  meter.begin('b.csv', 2);
+  meter.read(1, 10);
+  meter.end(1, 1);
+  meter.store(0);
+  meter.store(1);
+  meter.done();
+  expect(shares).toEqual([...shares].sort((a, b) => a - b));
+});
