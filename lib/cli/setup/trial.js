@@ -3,20 +3,17 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import process from 'node:process';
-import { ensureBuilt } from './build.js';
 import { inProject, ROOT } from './paths.js';
-import { prepare } from './prepare.js';
-import { SetupError } from './say.js';
+import { SetupError, say } from './say.js';
 
 /** The build that tests and checks look at, apart from the one that a running server uses. */
 const DIST = '.next-test';
 
-/** Builds the site and serves it on a free port with a database of its own that holds the demo region.
+/** Builds the site if it has changed, and serves it on a free port with a database of its own that holds the demo region.
  *  @param args  further words for `serve`
  *  @returns     its address, its database, and `stop`, which also removes the database */
 export async function startTrial(args = []) {
-  await prepare();
-  await ensureBuilt(DIST);
+  say('Starting a server for the tests; it builds the site if that has changed …');
   const folder = mkdtempSync(join(tmpdir(), 'hungerstone-trial-'));
   const database = `file:${join(folder, 'trial.db')}`;
   const server = spawn(process.execPath, [inProject('lib/cli/hungerstone.js'), 'start', '--port', '0', ...args], {
