@@ -1,0 +1,56 @@
+import { ImportForm } from '@/app/components/import-form';
+import { listImports } from '@/lib/store/imports';
+import { listRegions } from '@/lib/store/regions';
+import { Header } from './components/header.tsx';
+import styles from './page.module.css';
+import { RegionTable } from './region-table.tsx';
+
+/** Regions: the list, and a way to make one by dropping files. */
+export default async function RegionsPage() {
+  const regions = await Promise.all(
+    (await listRegions()).map(async (region) => {
+      const [latest] = await listImports(region.id);
+      return { ...region, lastImport: latest?.createdAt.toISOString().slice(0, 10) ?? null };
+    }),
+  );
+  return (
+    <>
+      <Header />
+      <main id="main" className={styles.main}>
+        <section className={styles.opening}>
+          <h1>Which rivers are losing their low flows?</h1>
+          <p>
+            Hungerstone takes the daily flows of a region’s gauging stations and says where the lowest flows of each
+            year are falling, how fast and how surely. Records of unlike length, size and quality are compared on one
+            set of terms, and those terms are printed on everything it makes.
+          </p>
+        </section>
+        {regions.length > 0 && (
+          <section aria-labelledby="regions">
+            <h2 id="regions">Regions</h2>
+            <RegionTable regions={regions} />
+          </section>
+        )}
+        <section aria-labelledby="new-region" className={styles.make}>
+          <h2 id="new-region">{regions.length > 0 ? 'Make another region' : 'Make the first region'}</h2>
+          <div className={styles.steps}>
+            <ol>
+              <li>
+                <b>Daily flows</b>, the one thing needed: text files with a date and a flow, one for all stations or one
+                each. Layout and dates are recognised by content; where a unit is not written, you are asked.
+              </li>
+              <li>
+                <b>A registry of stations</b> as CSV: code, name, latitude, longitude, drainage area. It puts them on
+                the map and lets catchments of unlike size be compared.
+              </li>
+              <li>
+                <b>Rivers and catchments</b> as GeoJSON, to draw the ground.
+              </li>
+            </ol>
+            <ImportForm region={null} />
+          </div>
+        </section>
+      </main>
+    </>
+  );
+}

@@ -1,0 +1,233 @@
+import L from 'leaflet';
+import type { Needle } from '@/app/components/needle';
+import { drawNeedle } from './draw-needle.ts';
+import { indexMarks, type MarkIndex } from './mark-index.ts';
+import type { Palette } from './palette.ts';
+
+export interface Mark {
+  latitude: number;
+  longitude: number;
+  needle: Needle;
+}
+
+/** How far the canvas reaches past each edge of the map, as a share of its size: dragging within it draws nothing. */
+const OVERLAP = 0.3;
+/** Extra pixels about a disc that still count as on it: fingers and small discs. */
+const REACH = 8;
+
+/** All needles on one canvas. Marks are given in drawing order; the emphasised ones are drawn on a second canvas above,
+ *  so that hovering draws one mark and not two thousand. */
+export class NeedleLayer extends L.Layer {
+  private readonly base = document.createElement('canvas');
+  private readonly top = document.createElement('canvas');
+  private marks: Mark[] = [];
+  private faded: Uint8Array = new Uint8Array(0);
+  private xs = new Float64Array(0);
+  private ys = new Float64Array(0);
+  private index: MarkIndex = indexMarks(this.xs, this.ys);
+  private hovered = -1;
+  private selected = -1;
+  private frame = 0;
+  /** layer point of the canvas's upper left corner, and the view it was drawn for */
+  private origin = L.point(0, 0);
+  private drawnCentre = L.latLng(0, 0);
+  private drawnZoom = 0;
+  private map: L.Map | null = null;
+
+  constructor(private palette: Palette) {
+    super({ pane: 'needles' });
+    for (const canvas of [this.base, this.top]) {
+      canvas.className = 'leaflet-zoom-animated';
+      canvas.style.pointerEvents = 'none';
+      canvas.setAttribute('aria-hidden', 'true');
+    }
+  }
+
+  override onAdd(map: L.Map): this {
+    this.map = map;
+    this.getPane()?.append(this.base, this.top);
+    this.project();
+    this.draw();
+    return this;
+  }
+
+  override onRemove(): this {
+    cancelAnimationFrame(this.frame);
+    this.base.remove();
+    this.top.remove();
+    this.map = null;
+    return this;
+  }
+
+  override getEvents(): { [name: string]: L.LeafletEventHandlerFn } {
+    return {
+      move: () => this.drawIfBeyond(),
+      moveend: () => this.draw(),
+      resize: () => this.draw(),
+      zoomend: () => this.project(),
+      viewreset: () => this.project(),
+      zoomanim: (event) => this.followZoom(event as L.ZoomAnimEvent),
+    };
+  }
+
+  setMarks(marks: Mark[]): void {
+    this.marks = marks;
+    this.faded = new Uint8Array(marks.length);
+    this.hovered = -1;
+    this.selected = -1;
+    this.project();
+    this.draw();
+  }
+
+  setPalette(palette: Palette): void {
+    this.palette = palette;
+    this.draw();
+  }
+
+  /** Marks with a 1 step back: they are not what is searched for. */
+  setFaded(faded: Uint8Array): void {
+    this.faded = faded;
+    this.draw();
+  }
+
+  setEmphasis(hovered: number, selected: number): void {
+    if (hovered === this.hovered && selected === this.selected) return;
+    this.hovered = hovered;
+    this.selected = selected;
+    this.drawTop();
+  }
+
+  /** The mark under a point of the map's box, or −1. */
+  hit(point: L.Point): number {
+    if (!this.map) return -1;
+    const at = this.map.containerPointToLayerPoint(point);
+    return this.index.at(at.x, at.y, this.radius() + REACH);
+  }
+
+  /** Places of all marks in layer points, in drawing order. */
+  get places(): { xs: Float64Array; ys: Float64Array } {
+    return { xs: this.xs, ys: this.ys };
+  }
+
+  /** Discs shrink where many share the view, so that the whole of a large region can still be read. */
+  private radius(): number {
+    if (!this.map) return 0;
+    const size = this.map.getSize();
+    const inView = this.index.inside(...this.box(0)).length;
+    const room = Math.sqrt((size.x * size.y) / Math.max(1, inView)) * 0.085;
+    return Math.max(3.2, Math.min(7, room));
+  }
+
+  private box(overlap: number): [number, number, number, number] {
+    if (!this.map) return [0, 0, 0, 0];
+    const size = this.map.getSize();
+    const corner = this.map.containerPointToLayerPoint(size.multiplyBy(-overlap));
+    const far = this.map.containerPointToLayerPoint(size.multiplyBy(1 + overlap));
+    return [corner.x, corner.y, far.x, far.y];
+  }
+
+  private project(): void {
+    if (!this.map) return;
+    this.xs = new Float64Array(this.marks.length);
+    this.ys = new Float64Array(this.marks.length);
+    for (let i = 0; i < this.marks.length; i++) {
+      const point = this.map.latLngToLayerPoint([this.marks[i].latitude, this.marks[i].longitude]);
+      this.xs[i] = point.x;
+      this.ys[i] = point.y;
+    }
+    this.index = indexMarks(this.xs, this.ys);
+  }
+
+  private drawIfBeyond(): void {
+    if (!this.map) return;
+    const corner = this.map.containerPointToLayerPoint([0, 0]);
+    const reach = this.map.getSize().multiplyBy(OVERLAP);
+    const moved = corner.subtract(this.origin.add(reach));
+    if (Math.abs(moved.x) < reach.x && Math.abs(moved.y) < reach.y) return;
+    if (!this.frame) {
+      this.frame = requestAnimationFrame(() => {
+        this.frame = 0;
+        this.draw();
+      });
+    }
+  }
+
+  private draw(): void {
+    if (!this.map) return;
+    const size = this.map.getSize();
+    this.origin = this.map.containerPointToLayerPoint(size.multiplyBy(-OVERLAP)).round();
+    this.drawnCentre = this.map.getCenter();
+    this.drawnZoom = this.map.getZoom();
+    const whole = size.multiplyBy(1 + 2 * OVERLAP).round();
+    for (const canvas of [this.base, this.top]) place(canvas, whole, this.origin);
+    const context = this.context(this.base);
+    if (!context) return;
+    const radius = this.radius();
+    for (const i of this.index.inside(...this.box(OVERLAP)).sort((a, b) => a - b)) {
+      context.globalAlpha = this.faded[i] ? 0.18 : 1;
+      drawNeedle(context, this.marks[i].needle, { x: this.xs[i], y: this.ys[i] }, radius, this.palette);
+    }
+    this.drawTop();
+  }
+
+  private drawTop(): void {
+    const context = this.context(this.top);
+    if (!context) return;
+    const radius = this.radius();
+    for (const i of new Set([this.selected, this.hovered])) {
+      if (i < 0 || i >= this.marks.length) continue;
+      const place = { x: this.xs[i], y: this.ys[i] };
+      const chosen = i === this.selected;
+      context.beginPath();
+      context.arc(place.x, place.y, Math.max(radius, 6) * 2.4, 0, 2 * Math.PI);
+      context.fillStyle = this.palette.paper;
+      context.globalAlpha = 0.75;
+      context.fill();
+      context.globalAlpha = 1;
+      context.lineWidth = chosen ? 2.5 : 1.5;
+      context.strokeStyle = this.palette.blue;
+      context.stroke();
+      drawNeedle(context, this.marks[i].needle, place, Math.max(radius * 1.1, 6), this.palette);
+    }
+  }
+
+  /** A cleared canvas whose unit is a layer pixel. */
+  private context(canvas: HTMLCanvasElement): CanvasRenderingContext2D | null {
+    const context = canvas.getContext('2d');
+    if (!context) return null;
+    context.setTransform(1, 0, 0, 1, 0, 0);
+    context.clearRect(0, 0, canvas.width, canvas.height);
+    const ratio = window.devicePixelRatio || 1;
+    context.setTransform(ratio, 0, 0, ratio, -this.origin.x * ratio, -this.origin.y * ratio);
+    return context;
+  }
+
+  /** While a zoom is animated the drawn picture is scaled about; it is drawn anew when the zoom ends. */
+  private followZoom({ center, zoom }: L.ZoomAnimEvent): void {
+    if (!this.map) return;
+    const scale = this.map.getZoomScale(zoom, this.drawnZoom);
+    const half = this.map.getSize().multiplyBy(0.5 + OVERLAP);
+    const drawn = this.map.project(this.drawnCentre, zoom);
+    const offset = half.multiplyBy(-scale).add(drawn).subtract(this.newOrigin(center, zoom));
+    for (const canvas of [this.base, this.top]) L.DomUtil.setTransform(canvas, offset, scale);
+  }
+
+  /** World pixel of layer point 0,0 once the map stands at this centre and zoom. */
+  private newOrigin(center: L.LatLng, zoom: number): L.Point {
+    const map = this.map as L.Map;
+    const pane = L.DomUtil.getPosition(map.getPanes().mapPane) ?? L.point(0, 0);
+    return map.project(center, zoom).subtract(map.getSize().divideBy(2)).add(pane).round();
+  }
+}
+
+function place(canvas: HTMLCanvasElement, size: L.Point, origin: L.Point): void {
+  const ratio = window.devicePixelRatio || 1;
+  const [width, height] = [Math.round(size.x * ratio), Math.round(size.y * ratio)];
+  if (canvas.width !== width || canvas.height !== height) {
+    canvas.width = width;
+    canvas.height = height;
+    canvas.style.width = `${size.x}px`;
+    canvas.style.height = `${size.y}px`;
+  }
+  L.DomUtil.setTransform(canvas, origin, 1);
+}

@@ -1,0 +1,51 @@
+import type L from 'leaflet';
+import { useCallback, useEffect, useRef } from 'react';
+import type { MapView } from '../map-state.ts';
+
+export const FIT: L.FitBoundsOptions = { padding: [36, 36], maxZoom: 11 };
+
+/** Tells of the view once a person has moved the map; until then the map keeps showing all stations, also when its box
+ *  changes size.
+ *  @returns how to go back to all stations */
+export function useOwnView(
+  map: L.Map,
+  bounds: [[number, number], [number, number]] | null,
+  onView: (view: MapView | null) => void,
+): () => void {
+  const moved = useRef(false);
+
+  useEffect(() => {
+    const container = map.getContainer();
+    const touch = () => {
+      moved.current = true;
+    };
+    const tell = () => {
+      const { lat, lng } = map.getCenter();
+      if (moved.current) onView({ latitude: lat, longitude: lng, zoom: map.getZoom() });
+    };
+    const hands = ['pointerdown', 'wheel', 'keydown'];
+    for (const name of hands) container.addEventListener(name, touch, { capture: true, passive: true });
+    map.on('moveend', tell);
+    return () => {
+      for (const name of hands) container.removeEventListener(name, touch, { capture: true });
+      map.off('moveend', tell);
+    };
+  }, [map, onView]);
+
+  useEffect(() => {
+    const observer = new ResizeObserver(() => {
+      map.invalidateSize({ pan: false, animate: false });
+      if (!moved.current && bounds && !new URLSearchParams(location.search).has('view')) {
+        map.fitBounds(bounds, { ...FIT, animate: false });
+      }
+    });
+    observer.observe(map.getContainer());
+    return () => observer.disconnect();
+  }, [map, bounds]);
+
+  return useCallback(() => {
+    if (bounds) map.fitBounds(bounds, FIT);
+    moved.current = false;
+    onView(null);
+  }, [map, bounds, onView]);
+}

@@ -1,0 +1,130 @@
+'use client';
+import dynamic from 'next/dynamic';
+import { useQueryStates } from 'nuqs';
+import { useCallback, useMemo, useState } from 'react';
+import { Group, Panel, Separator } from 'react-resizable-panels';
+import type { Units } from '@/app/components/format';
+import { apiHref } from '@/app/components/links';
+import type { Basis } from '@/lib/basis';
+import { Legend } from './_map/legend.tsx';
+import type { GroundSource } from './_map/use-ground.ts';
+import { RankingPanel } from './_ranking/ranking-panel.tsx';
+import { createHoverStore } from './hover-store.ts';
+import type { MapRow } from './map-row.ts';
+import styles from './map-screen.module.css';
+import { type MapView, mapState } from './map-state.ts';
+import { hasPlace, matcher } from './row-filter.ts';
+import { SmallScreen } from './small-screen.tsx';
+import { useIsNarrow } from './use-is-narrow.ts';
+
+/** Leaflet wants a window as soon as it is imported, so the map is only ever loaded in the browser. */
+const StationMap = dynamic(() => import('./_map/station-map.tsx').then((part) => part.StationMap), {
+  ssr: false,
+  loading: () => <p className={styles.waiting}>Drawing the map…</p>,
+});
+
+interface MapScreenProps {
+  region: {
+    slug: string;
+    name: string;
+    invented: boolean;
+    tileUrl: string | null;
+    tileAttribution: string | null;
+  };
+  rows: MapRow[];
+  layers: { id: number; name: string; kind: string }[];
+  rankBy: Basis['rankBy'];
+  units: Units;
+  span: [number, number];
+}
+
+/** Map and ranking, linked both ways. What is shown stands in the address: view, selection, following, list, search. */
+export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScreenProps) {
+  const [state, setState] = useQueryStates(mapState, { history: 'replace', throttleMs: 150 });
+  const [inView, setInView] = useState<Set<string> | null>(null);
+  const [hover] = useState(createHoverStore);
+  const narrow = useIsNarrow();
+
+  const found = useMemo(() => {
+    if (!state.q.trim()) return null;
+    const matches = matcher(state.q);
+    return new Set(rows.filter(matches).map((row) => row.code));
+  }, [rows, state.q]);
+
+  const select = useCallback((station: string | null) => void setState({ station }), [setState]);
+  const showView = useCallback((view: MapView | null) => void setState({ view }), [setState]);
+
+  const ground = useMemo<GroundSource[]>(
+    () =>
+      layers.map(({ id, name, kind }) => ({
+        kind: kind === 'river' || kind === 'catchment' ? kind : 'other',
+        name,
+        url: apiHref(region.slug, `layers/${id}`, ''),
+      })),
+    [layers, region.slug],
+  );
+
+  const map = (
+    <section aria-label="Map" className={styles.mapBox}>
+      <StationMap
+        regionName={region.name}
+        slug={region.slug}
+        invented={region.invented}
+        rows={rows}
+        found={found}
+        ground={ground}
+        tiles={region.tileUrl ? { url: region.tileUrl, attribution: region.tileAttribution ?? '' } : null}
+        units={units}
+        hover={hover}
+        selected={state.station}
+        onSelect={select}
+        view={state.view}
+        onView={showView}
+        onInView={setInView}
+      />
+      {rows.some(hasPlace) ? (
+        <Legend rows={rows} startOpen={!narrow} key={narrow ? 'narrow' : 'wide'} />
+      ) : (
+        <p className={styles.noPlaces}>
+          No station has coordinates, so the map has nothing to show. The ranking works without; a registry with
+          latitude and longitude puts the stations here.
+        </p>
+      )}
+    </section>
+  );
+
+  const ranking = (
+    <RankingPanel
+      slug={region.slug}
+      regionName={region.name}
+      rows={rows}
+      found={found}
+      inView={inView}
+      follow={state.follow}
+      onFollow={(follow) => void setState({ follow })}
+      search={state.q}
+      onSearch={(q) => void setState({ q })}
+      tab={state.tab}
+      onTab={(tab) => void setState({ tab })}
+      rankBy={rankBy}
+      units={units}
+      span={span}
+      hover={hover}
+      selected={state.station}
+      onSelect={select}
+    />
+  );
+
+  if (narrow) return <SmallScreen map={map} ranking={ranking} />;
+  return (
+    <Group orientation="horizontal" className={styles.group} id="map-and-ranking">
+      <Panel id="map" defaultSize="44%" minSize="18%" className={styles.panel}>
+        {map}
+      </Panel>
+      <Separator id="divider" className={styles.divider} aria-label="Divider between map and ranking" />
+      <Panel id="ranking" defaultSize="56%" minSize="22%" className={styles.panel}>
+        {ranking}
+      </Panel>
+    </Group>
+  );
+}
