@@ -106,7 +106,10 @@ export const rows = (connection: Connection, sql: string): Database.Statement =>
 };
 
 /** Runs `change` in one transaction that holds the write lock from its start, so that what it read stays true.
- *  Synchronous; put it into whenFree to wait for others. Rolls back when `change` throws. */
+ *  Synchronous; put it into whenFree to wait for others. Rolls back when `change` throws.
+ *
+ *  Every write goes through a transaction that `exec` begins. A prepared write that finds the database locked stays in
+ *  progress until it is collected, and no later COMMIT of its connection succeeds till then. */
 export function immediately<T>(connection: Connection, change: () => T): T {
   connection.exec('BEGIN IMMEDIATE');
   try {

@@ -1,6 +1,5 @@
-import { BLOCK_MS } from './busy.ts';
 import { closeSharedConnections, openConnection } from './connection.ts';
-import { databasePath, databaseUrl } from './database-url.ts';
+import { databasePath } from './database-url.ts';
 import { PrismaClient } from './generated/client.ts';
 import { LocalLibSql } from './local-libsql.ts';
 
@@ -23,7 +22,7 @@ export function openStore(url?: string): Store {
   if (open?.path === path) return open;
   openConnection(path).close();
   if (open) void open.prisma.$disconnect();
-  const adapter = new LocalLibSql({ url: databaseUrl(path), timeout: BLOCK_MS });
+  const adapter = new LocalLibSql(path);
   holder[KEY] = {
     path,
     prisma: new PrismaClient({ adapter, transactionOptions: { maxWait: 5_000, timeout: 10_000 } }),

@@ -24,7 +24,10 @@ export function getResult(kind: string, key: string, path = databasePath()): Uin
 /** A reading that cannot be noted, because someone else writes, is noted another time. */
 function noteUse(id: number, path: string): void {
   try {
-    sharedConnection(path).prepare('UPDATE Result SET lastUsed = ? WHERE id = ?').run([timestamp(), id]);
+    const connection = sharedConnection(path);
+    immediately(connection, () =>
+      connection.prepare('UPDATE Result SET lastUsed = ? WHERE id = ?').run([timestamp(), id]),
+    );
   } catch (error) {
     if (!isBusy(error)) throw error;
   }

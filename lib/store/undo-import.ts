@@ -37,7 +37,7 @@ export async function undoImport(
     return undone;
   } catch (error) {
     const back = "UPDATE Import SET state = 'applied' WHERE id = ? AND state = 'undoing'";
-    await whenFree(() => connection.prepare(back).run([importId]));
+    await whenFree(() => immediately(connection, () => connection.prepare(back).run([importId])));
     await sweep(connection, slices);
     throw error;
   }

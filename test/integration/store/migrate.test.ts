@@ -3,12 +3,12 @@ import { createHash } from 'node:crypto';
 import { cpSync, existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { promisify } from 'node:util';
-import { build } from 'esbuild';
 import { expect, test } from 'vitest';
 import { openConnection, rows } from '../../../lib/store/connection.ts';
 import { migrationsFolder } from '../../../lib/store/database-url.ts';
 import { migrate, readMigrations } from '../../../lib/store/migrate.ts';
 import { openStore } from '../../../lib/store/open.ts';
+import { bundleScript } from './bundle.ts';
 import { temporaryDatabase } from './temporary-database.ts';
 
 const run = promisify(execFile);
@@ -52,21 +52,8 @@ test('the migrations make exactly the columns that the Prisma client knows', asy
 });
 
 test('four processes that migrate a new database at once apply each migration once', async () => {
-  const bundle = join(place.folder, 'migrate.mjs');
-  await build({
-    stdin: {
-      contents: `import { migrate } from ${JSON.stringify(join(process.cwd(), 'lib/store/migrate.ts'))};
-        process.stdout.write(JSON.stringify(await migrate()));`,
-      resolveDir: process.cwd(),
-    },
-    outfile: bundle,
-    bundle: true,
-    platform: 'node',
-    format: 'esm',
-    alias: { libsql: join(process.cwd(), 'node_modules/libsql/index.js') },
-    external: [join(process.cwd(), 'node_modules/libsql/index.js')],
-    logLevel: 'silent',
-  });
+  const lines = `import { migrate } from '@/lib/store/migrate.ts'; process.stdout.write(JSON.stringify(await migrate()));`;
+  const bundle = await bundleScript(lines, join(place.folder, 'migrate.mjs'));
   const outputs = await Promise.all([1, 2, 3, 4].map(() => run(process.execPath, [bundle])));
   const applied = outputs.flatMap(({ stdout }) => JSON.parse(stdout) as string[]);
   expect(applied.sort()).toEqual(readMigrations().map(({ name }) => name));
