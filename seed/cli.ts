@@ -1,12 +1,12 @@
 /** Makes an invented region: as files, or in the database.
  *
- *    node .build/seed.mjs --demo                        the demo region (seed 1654), if the database has no region
+ *    node .build/seed.mjs --demo                        the demo region (seed 1921), if the database has no region
  *    node .build/seed.mjs --stations 2000 --years 60 --csv flows.csv --registry stations.csv
  *    node .build/seed.mjs --stations 2000 --years 60 --seed 7 --region "Large"
  *
  *  --stations N     how many stations (36)
  *  --years Y        length of every record; without it 25 to 90 years, one short one, and the other traits of the demo
- *  --seed S         seed number (1654); the same number makes the same region
+ *  --seed S         seed number (1921); the same number makes the same region
  *  --csv FILE       daily flows as one long table: station,date,flow,flag
  *  --registry FILE  the stations
  *  --layers FOLDER  basin, catchments and rivers as GeoJSON

@@ -11,7 +11,7 @@ export interface Drainage {
   order: Int32Array;
   /** cells that drain through a cell, itself included */
   upstreamCells: Int32Array;
-  /** 0 at the mouth to 1 at the farthest divide */
+  /** 0 at the mouth to 1 at the farthest divide: the share of the basin that is nearer to the mouth */
   height: Float64Array;
   mouth: number;
 }
@@ -26,7 +26,7 @@ export function layDrainage(seed: number, basinCells: number): Drainage {
   const grid = new HexGrid(seed, columns, Math.ceil(columns * 1.05));
   const resistance = layGround(seed, grid);
   const mouth = findMouth(grid, resistance);
-  const { downstream, order, cost } = growChannels(grid, resistance, mouth);
+  const { downstream, order } = growChannels(grid, resistance, mouth);
 
   const upstreamCells = new Int32Array(grid.cells);
   for (let i = order.length - 1; i >= 0; i -= 1) {
@@ -34,8 +34,8 @@ export function layDrainage(seed: number, basinCells: number): Drainage {
     upstreamCells[cell] += 1;
     if (downstream[cell] >= 0) upstreamCells[downstream[cell]] += upstreamCells[cell];
   }
-  const farthest = cost[order[order.length - 1]];
-  const height = cost.map((each) => Math.min(1, each / farthest));
+  const height = new Float64Array(grid.cells);
+  for (const [rank, cell] of order.entries()) height[cell] = rank / order.length;
   return { grid, downstream, order, upstreamCells, height, mouth };
 }
 
@@ -89,7 +89,7 @@ function growChannels(grid: HexGrid, resistance: Float64Array, mouth: number) {
       queue.push(next, cost[next]);
     }
   }
-  return { downstream, cost, order: Int32Array.from(order) };
+  return { downstream, order: Int32Array.from(order) };
 }
 
 /** A binary heap of cells, the cheapest on top. */

@@ -24,6 +24,8 @@ const [, ESTIMATED, PROVISIONAL, ICE] = [0, 1, 2, 3];
 export const NO_ROW = 255;
 
 const CUBIC_FEET = 35.3147;
+/** °C, mean of about a week, below which ice backs up the water at the gauge. */
+const ICE_BELOW = -1;
 
 /** What a gauge writes down of the true flow: rounded, with gaps, flags, and the trouble that its traits name.
  *  @param flow    true flow on every day of the weather, m³/s
@@ -45,7 +47,7 @@ export function observe(
   for (let i = 0; i < values.length; i += 1) {
     values[i] = asWritten(flow[from + i]);
     cold += (weather.temperature[from + i] - cooler - cold) / 8;
-    codes[i] = i >= provisional ? PROVISIONAL : cold < -2.5 ? ICE : 0;
+    codes[i] = i >= provisional ? PROVISIONAL : cold < ICE_BELOW ? ICE : 0;
   }
   slipUnit(traits, values);
   estimateSome(values, codes, random);
