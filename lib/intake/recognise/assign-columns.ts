@@ -69,14 +69,21 @@ function assignByHeading(roles: ColumnRoles, rest: ColumnFacts[], isKnown: (head
   roles.unitColumn = ofRole('unit')[0]?.position ?? null;
   roles.quantityColumn = ofRole('quantity')[0]?.position ?? null;
 
+  const unnamed = ofRole('unknown', 'measured').filter((column) => column.heading !== '' && isNumeric(column));
   if (known.length > 0 && (known.length > 1 || values.length === 0)) {
-    makeWide(roles, rest, known);
+    // A heading that the registry does not know stays among them, for the file to be refused by it.
+    makeWide(
+      roles,
+      rest,
+      rest.filter((column) => known.includes(column) || unnamed.includes(column)),
+    );
     return;
   }
   const station = (stations.length === 1 ? stations : ofRole('maybe-station').filter(repeats))[0];
   roles.station = station?.position ?? null;
-  const unnamed = ofRole('unknown').filter((column) => column.heading !== '' && isNumeric(column));
   if (values.length === 1) roles.value = values[0].position;
+  else if (values.length === 0 && unnamed.length === 1 && unnamed[0].role === 'measured')
+    roles.value = unnamed[0].position;
   else if (values.length === 0 && station === undefined && ofRole('other-quantity').length === 0) {
     const columns = stations.length > 1 ? stations.filter(isNumeric) : unnamed;
     if (columns.length > 0) {
@@ -113,7 +120,7 @@ function makeWide(roles: ColumnRoles, rest: readonly ColumnFacts[], columns: rea
 function candidates(rest: readonly ColumnFacts[], roles: ColumnRoles): number[] {
   return rest
     .filter((column) => isNumeric(column) && column.position !== roles.station)
-    .filter(({ role }) => role === 'value' || role === 'unknown' || role === 'other-quantity')
+    .filter(({ role }) => role === 'value' || role === 'measured' || role === 'unknown' || role === 'other-quantity')
     .map(({ position }) => position);
 }
 

@@ -7,15 +7,14 @@ export const DAILY_DISCHARGE = /_00060_00003$/;
 /** The unit that a file states, looked for where it is said most closely first: the value's heading, the column of
  *  units, then comment and title lines (only when all of these together name just one).
  *  @param headings  heading of the value column; in a wide table, of every station's column */
-export function findUnit(found: { headings: string[]; unitTexts: string[]; remarks: string[] }): FlowUnit | null {
+export function findUnit(found: { headings: string[]; unitText: string; remarks: string[] }): FlowUnit | null {
   if (found.headings.length > 0 && found.headings.every((heading) => DAILY_DISCHARGE.test(heading))) return 'ft3/s';
   const inHeadings = new Set(found.headings.map(unitNamedIn));
   if (inHeadings.size === 1) {
     const [unit] = inHeadings;
     if (unit !== null) return unit;
   }
-  const inColumn = new Set(found.unitTexts);
-  if (inColumn.size === 1) return unitNamedIn([...inColumn][0]);
+  if (found.unitText !== '') return unitNamedIn(found.unitText);
   const inRemarks = new Set(found.remarks.flatMap(unitsNamedIn));
   return inRemarks.size === 1 ? [...inRemarks][0] : null;
 }

@@ -10,6 +10,8 @@ export type HeadingRole =
   /** may be a station or a code of another kind */
   | 'maybe-station'
   | 'value'
+  /** says a flow unit and something else, which may be a station: "Mill (m3/s)" */
+  | 'measured'
   | 'flag'
   | 'unit'
   | 'quantity'
@@ -55,6 +57,8 @@ const BY_WORD: [HeadingRole, Set<string>][] = [
   ['maybe-station', words('id code no number nr num')],
 ];
 
+const UNIT_WORDS = words('cfs cms cumecs cumec cusecs m3 s m3s ft3 ft3s l ls lps ml mld d day mm mmd sec 1 3 m ft');
+
 /** Words of a heading: "siteNo" → site, no; "flow_cfs" → flow, cfs. */
 function headingWords(heading: string): string[] {
   return heading
@@ -64,12 +68,13 @@ function headingWords(heading: string): string[] {
     .filter((word) => word !== '');
 }
 
-/** What a column holds, judged by its heading alone. A heading without a telling word that names a flow unit is a flow. */
+/** What a column holds, judged by its heading alone. A heading that is nothing but a flow unit is a flow. */
 export function roleOfHeading(heading: string): HeadingRole {
   const found = headingWords(heading);
   const whole = found.join(' ');
   for (const [role, list] of EXACT) if (list.has(whole)) return role;
   if (found.length > 1 && found[found.length - 1] === 'cd') return found[0] === 'agency' ? 'ignored' : 'flag';
   for (const [role, list] of BY_WORD) if (found.some((word) => list.has(word))) return role;
-  return unitsNamedIn(heading).length > 0 ? 'value' : 'unknown';
+  if (unitsNamedIn(heading).length === 0) return 'unknown';
+  return found.every((word) => UNIT_WORDS.has(word)) ? 'value' : 'measured';
 }

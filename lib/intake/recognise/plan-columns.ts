@@ -58,11 +58,12 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   if (options.station && mapping.station.from === 'column') {
     warnings.push(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
   }
+  if (wide) warnings.push(...unreadColumns(header ?? [], wide, places.date));
   return {
     ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, warnings, fieldCount },
     firstLine: data[0].line,
     leastFields: Math.max(required, leastFields(data, fieldCount)),
-    unitText: places.unit < 0 ? '' : (data.find(({ fields }) => fields[places.unit])?.fields[places.unit] ?? ''),
+    unitText: mostFrequent(columnTexts(data, places.unit)),
     orderOpen: options.mapping?.date === undefined && dateTexts.some((text) => /^\d{1,2}[-/.]/.test(text)),
     ...(symbolColumn(header, places.flag) ? { iceLetter: 'b' } : {}),
     repeatsHeader: mapping.layout === 'agency-tab',
@@ -157,7 +158,7 @@ function mappingOf(
       options.mapping?.unit ??
       findUnit({
         headings: valueColumns.map((at) => header?.[at] ?? ''),
-        unitTexts: roles.unitColumn === null ? [] : data.map(({ fields }) => fields[roles.unitColumn as number] ?? ''),
+        unitText: mostFrequent(columnTexts(data, roles.unitColumn ?? -1)),
         remarks,
       }),
   };
@@ -201,12 +202,29 @@ function wideColumns(
   }));
 }
 
+function columnTexts(data: readonly SampleRow[], column: number): string[] {
+  return column < 0 ? [] : data.map(({ fields }) => fields[column] ?? '').filter((text) => text !== '');
+}
+
+function mostFrequent(texts: readonly string[]): string {
+  const counts = new Map<string, number>();
+  for (const text of texts) counts.set(text, (counts.get(text) ?? 0) + 1);
+  return [...counts].sort((a, b) => b[1] - a[1])[0]?.[0] ?? '';
+}
+
 /** The fewest fields that a fair share of rows have: some files leave an empty flag off. The last row may be cut. */
 function leastFields(data: readonly SampleRow[], fieldCount: number): number {
   const rows = data.slice(0, -1);
   const shares = new Map<number, number>();
   for (const { fields } of rows) shares.set(fields.length, (shares.get(fields.length) ?? 0) + 1 / rows.length);
   return Math.min(fieldCount, ...[...shares].filter(([, share]) => share >= 0.05).map(([count]) => count));
+}
+
+/** Columns of a wide table that are taken for no station must be named: they are left out for every day. */
+function unreadColumns(header: readonly string[], wide: readonly WideColumn[], dates: readonly number[]): string[] {
+  const used = new Set([...dates, ...wide.flatMap(({ value, flag }) => [value, flag ?? value])]);
+  const unread = header.filter((name, at) => name !== '' && !used.has(at)).map((name) => `“${name}”`);
+  return unread.length === 0 ? [] : [`Columns taken for no station, and not read: ${unread.join(', ')}.`];
 }
 
 function symbolColumn(header: readonly string[] | null, flag: number): boolean {

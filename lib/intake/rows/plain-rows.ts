@@ -165,7 +165,8 @@ export class PlainRows {
   /** End of a field of plain text; −1 when it holds a quote, or has blanks around it. */
   private plainEnd(bytes: Uint8Array, from: number, stop: number): number {
     let at = from;
-    while (bytes[at] !== stop && bytes[at] > 32 && bytes[at] !== 34) at++;
+    const { delimiter } = this;
+    while (bytes[at] !== stop && bytes[at] > 32 && bytes[at] !== 34 && bytes[at] !== delimiter) at++;
     return bytes[at] === stop || bytes[at] === 13 ? at : -1;
   }
 }
