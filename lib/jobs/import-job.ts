@@ -3,7 +3,7 @@ import { MessageChannel } from 'node:worker_threads';
 import type { KnownStation } from '../intake/types.ts';
 import { knownStations } from '../store/known-stations.ts';
 import { NO_PROGRESS } from './import-meter.ts';
-import type { GivenFile, ImportChoices, ImportOutcome } from './import-types.ts';
+import type { GivenFile, ImportChoices, ImportOutcome, ImportProgress } from './import-types.ts';
 import { FailedWithResult, type JobContext, launchJob } from './live-jobs.ts';
 import { runTask } from './pool.ts';
 
@@ -51,7 +51,11 @@ async function inWorker({ id, signal, report }: JobContext, work: Work) {
   const cancel = () => Atomics.store(cancelled, 0, 1);
   signal.addEventListener('abort', cancel, { once: true });
   const { port1, port2 } = new MessageChannel();
-  port1.on('message', report);
+  let last = NO_PROGRESS;
+  port1.on('message', (progress: ImportProgress) => {
+    last = progress;
+    report(progress);
+  });
   try {
     const outcome = await runTask(
       'takeFiles',
@@ -59,6 +63,8 @@ async function inWorker({ id, signal, report }: JobContext, work: Work) {
       { transfer: [port2] },
     );
     if (outcome.problems.length > 0) throw new FailedWithResult(problemWords(outcome), outcome);
+    // The worker's answer may overtake its last message.
+    report({ ...last, stage: 'done', file: null, share: 1 });
     return outcome;
   } finally {
     signal.removeEventListener('abort', cancel);
