@@ -64,7 +64,9 @@ const isNumeric = (column: ColumnFacts): boolean => column.filled === 0 || colum
 function assignByHeading(roles: ColumnRoles, rest: ColumnFacts[], isKnown: (heading: string) => boolean): void {
   const known = rest.filter(({ heading }) => heading !== '' && isKnown(heading));
   const ofRole = (...wanted: ColumnFacts['role'][]) => rest.filter(({ role }) => wanted.includes(role));
-  const values = ofRole('value').filter(isNumeric);
+  // A column that is called the flow is it, even where its first rows have gone wrong; among several, contents decide.
+  const called = ofRole('value');
+  const values = called.length > 1 ? called.filter(isNumeric) : called;
   const stations = ofRole('station');
   roles.unitColumn = ofRole('unit')[0]?.position ?? null;
   roles.quantityColumn = ofRole('quantity')[0]?.position ?? null;

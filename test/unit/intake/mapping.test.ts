@@ -1,0 +1,55 @@
+import { expect, test } from 'vitest';
+import { columnPosition, parseMapping } from '../../../lib/intake/mapping.ts';
+import { IntakeError } from '../../../lib/intake/types.ts';
+
+test('parseMapping takes a whole mapping, any subset of its keys, and nothing at all', () => {
+  const whole = {
+    layout: 'fixed-width',
+    station: { from: 'file-name' },
+    date: {
+      columns: [
+        [0, 4],
+        [4, 6],
+        [6, 8],
+      ],
+      order: 'ymd',
+    },
+    value: { slice: [28, 38] },
+    flag: null,
+    unit: 'mm/d',
+    missing: ['-99.0000'],
+    decimal: '.',
+  };
+  expect(parseMapping(whole, 'm.json')).toEqual(whole);
+  expect(parseMapping({ value: { column: 'flow' } }, 'm.json')).toEqual({ value: { column: 'flow' } });
+  expect(parseMapping({}, 'm.json')).toEqual({});
+});
+
+test.each([
+  [{ unit: 'gpm' }, /“unit” cannot be read \(“"gpm"”\)\. It takes m3\/s, L\/s/],
+  [{ layout: 'csv' }, /“layout” cannot be read/],
+  [{ value: { slice: [38, 28] } }, /“value” cannot be read/],
+  [{ value: { column: -1 } }, /“value” cannot be read/],
+  [{ value: { column: 1, slice: [0, 1] } }, /“value” cannot be read/],
+  [{ date: { columns: [0, 1], order: 'ymd' } }, /“date” cannot be read/],
+  [{ date: { columns: [0], order: 'ydm' } }, /“date” cannot be read/],
+  [{ station: { from: 'column' } }, /“station” cannot be read/],
+  [{ delimiter: '|' }, /“delimiter” cannot be read/],
+  [{ colour: 'red' }, /has no key “colour”/],
+  ['flow', /must be a JSON object/],
+  [null, /must be a JSON object/],
+])('parseMapping refuses %j by the key at fault', (input, message) => {
+  const parse = () => parseMapping(input, 'm.json');
+  expect(parse).toThrow(IntakeError);
+  expect(parse).toThrow(message);
+  expect(parse).toThrow(/^m\.json/);
+});
+
+test('columnPosition finds a heading exactly, else without regard to case; numbers are positions', () => {
+  const header = ['Flow', 'flow', ' Date '];
+  expect(columnPosition(7, header, 'f')).toBe(7);
+  expect(columnPosition('flow', header, 'f')).toBe(1);
+  expect(columnPosition('date', header, 'f')).toBe(2);
+  expect(() => columnPosition('stage', header, 'f')).toThrow(/“Flow”, “flow”/);
+  expect(() => columnPosition('stage', null, 'f')).toThrow(/no header row/);
+});
