@@ -51,9 +51,10 @@ export interface AnalysisRequest {
 /** Reads what all analyses have in common.
  *  @throws UsageError, BasisError for what cannot be followed; Error for a region or station that is not there */
 export async function analysisRequest(values: AnalysisValues): Promise<AnalysisRequest> {
-  const region = await namedRegion(values.region);
+  // Words first: what is wrong with them is told whatever the database holds.
   const format = FORMATS.find((known) => known === values.format);
   if (!format) throw new UsageError(`--format takes ${FORMATS.join(', ')}, not "${values.format}".`);
+  const region = await namedRegion(values.region);
   const basis = values.basis === undefined ? region.basis : parseBasis(readJson('--basis', values.basis), region.basis);
   const codes = values.station;
   if (codes) {

@@ -64,6 +64,9 @@ export function expectTrouble(page: Page, pattern: RegExp): void {
   expected.set(page, [...(expected.get(page) ?? []), pattern]);
 }
 
+/** What has gone wrong in a page so far. */
+export const troubleOf = (page: Page): readonly string[] => watched.get(page) ?? [];
+
 async function watch(page: Page, troubles: string[]): Promise<void> {
   page.on('console', (message) => {
     if (message.type() === 'error') troubles.push(`console: ${message.text()}`);

@@ -11,14 +11,22 @@ const DIST = '.next-test';
 
 /** Builds the site if it has changed, and serves it on a free port with a database of its own that holds the demo region.
  *  @param args  further words for `serve`
+ *  @param env   further environment of the server
  *  @returns     its address, its database, and `stop`, which also removes the database */
-export async function startTrial(args = []) {
+export async function startTrial(args = [], env = {}) {
   say('Starting a server for the tests; it builds the site if that has changed …');
   const folder = mkdtempSync(join(tmpdir(), 'hungerstone-trial-'));
   const database = `file:${join(folder, 'trial.db')}`;
   const server = spawn(process.execPath, [inProject('lib/cli/hungerstone.js'), 'start', '--port', '0', ...args], {
     cwd: ROOT,
-    env: { ...process.env, NODE_ENV: 'production', NEXT_DIST: DIST, DATABASE_URL: database, HUNGERSTONE_TOKEN: '' },
+    env: {
+      ...process.env,
+      NODE_ENV: 'production',
+      NEXT_DIST: DIST,
+      DATABASE_URL: database,
+      HUNGERSTONE_TOKEN: '',
+      ...env,
+    },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   const remove = () => rmSync(folder, { recursive: true, force: true, maxRetries: 3 });

@@ -1,0 +1,79 @@
+import { gzipSync } from 'node:zlib';
+import { beforeAll, describe, expect, test } from 'vitest';
+import { SCRIPT_LIMIT } from '../../lib/cli/setup/checks/script-size.js';
+import { accessibilityProblems, expectTrouble, hydrated, newPage, serverUrl, troubleOf } from './harness.ts';
+
+let region: string;
+let station: string;
+beforeAll(async () => {
+  const regions = (await (await fetch(`${serverUrl}/api/regions`)).json()) as { slug: string; invented: boolean }[];
+  region = regions.filter(({ invented }) => invented)[0].slug;
+  const stations = await (await fetch(`${serverUrl}/api/regions/${region}/stations`)).json();
+  station = stations.features[0].properties.code;
+});
+
+const PAGES: [string, () => string][] = [
+  ['regions', () => '/'],
+  ['map and ranking', () => `/regions/${region}`],
+  ['curves', () => `/regions/${region}/curves`],
+  ['station', () => `/regions/${region}/stations/${encodeURIComponent(station)}`],
+  ['import', () => `/regions/${region}/import`],
+];
+
+describe.each(PAGES)('the page %s', (_, pathOf) => {
+  test.each(['light', 'dark'] as const)(
+    'comes alive without trouble and meets WCAG 2.2 AA, %s',
+    async (colorScheme) => {
+      const page = await newPage(pathOf(), { colorScheme });
+      await hydrated(page);
+      await page.waitForLoadState('networkidle');
+      expect(await accessibilityProblems(page)).toEqual([]);
+    },
+  );
+  test('is no wider than a phone of 390 pixels', async () => {
+    const page = await newPage(pathOf(), { width: 390, height: 844 });
+    await hydrated(page);
+    expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(390);
+  });
+});
+
+test('the map page loads at most 300 kB of compressed script before anyone touches it', async () => {
+  const page = await newPage();
+  const sizes = new Map<string, Promise<number>>();
+  page.on('response', (response) => {
+    if (response.request().resourceType() !== 'script') return;
+    sizes.set(
+      response.url(),
+      response.body().then((body) => gzipSync(body).length),
+    );
+  });
+  await page.goto(`/regions/${region}`, { waitUntil: 'networkidle' });
+  await hydrated(page);
+  const total = (await Promise.all(sizes.values())).reduce((sum, size) => sum + size, 0);
+  expect(sizes.size).toBeGreaterThan(3);
+  expect(total).toBeLessThanOrEqual(SCRIPT_LIMIT);
+});
+
+test('the harness sees trouble: a forbidden inline script, an error, and a request to another host', async () => {
+  const page = await newPage('/');
+  expectTrouble(page, /^content policy: script-src/);
+  expectTrouble(page, /^console: .*(Content Security Policy|ERR_FAILED)/);
+  expectTrouble(page, /^thrown: made up$/);
+  expectTrouble(page, /^asked another host: http:\/\/tiles\.example\//);
+  const ran = await page.evaluate(async () => {
+    const script = document.createElement('script');
+    script.textContent = 'window.ran = true';
+    document.body.append(script);
+    setTimeout(() => {
+      throw new Error('made up');
+    });
+    const image = new Image();
+    image.src = 'http://tiles.example/1.png';
+    await new Promise((resolve) => {
+      image.onerror = resolve;
+    });
+    return 'ran' in window;
+  });
+  expect(ran).toBe(false);
+  await expect.poll(() => troubleOf(page).filter((line) => /^(content policy|thrown|asked)/.test(line)).length).toBe(3);
+});
