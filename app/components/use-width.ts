@@ -1,10 +1,11 @@
 'use client';
 import { type RefObject, useEffect, useRef, useState } from 'react';
 
-/** Width of an element in CSS pixels, followed as it changes. Before it is known (on the server): `fallback`. */
-export function useWidth<T extends HTMLElement>(fallback: number): [RefObject<T | null>, number] {
+/** Width of an element in CSS pixels, followed as it changes. Before it is known (on the server): `fallback`.
+ *  @returns the element's ref, its width, and whether that is known */
+export function useWidth<T extends HTMLElement>(fallback: number): [RefObject<T | null>, number, boolean] {
   const ref = useRef<T | null>(null);
-  const [width, setWidth] = useState(fallback);
+  const [width, setWidth] = useState<number | null>(null);
   useEffect(() => {
     const element = ref.current;
     if (!element) return;
@@ -12,5 +13,5 @@ export function useWidth<T extends HTMLElement>(fallback: number): [RefObject<T 
     observer.observe(element);
     return () => observer.disconnect();
   }, []);
-  return [ref, width];
+  return [ref, width ?? fallback, width !== null];
 }

@@ -49,7 +49,7 @@ const REACH = 10;
 /** Duration curves over the region's band. Hover reads every curve at that exceedance; a click opens the station. */
 export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel, x, y, height = 480, summary }: Props) {
   const router = useRouter();
-  const [frame, width] = useWidth<HTMLDivElement>(960);
+  const [frame, width, measured] = useWidth<HTMLDivElement>(960);
   const [near, setNear] = useState<string | null>(null);
   const plan = useMemo(
     () => layOut({ exceedances, lines, thin, band, x, y, width, height }),
@@ -170,15 +170,17 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
             }
           />
         </ComposedChart>
-        {flow.breakAt !== null && (
+        {measured && flow.breakAt !== null && (
           <span className={styles.axisBreak} style={{ left: plot.left, top: plan.toPixel(flow.breakAt) }} aria-hidden />
         )}
-        {flow.zeroAt !== null && (
+        {measured && flow.zeroAt !== null && (
           <span className={styles.zeroName} style={{ left: plot.left + 6, top: plan.toPixel(flow.zeroAt) }}>
             no flow
           </span>
         )}
-        <EndLabels lines={lines} ends={plan.ends} plot={plot} width={width} near={near} compact={plan.compact} />
+        {measured && (
+          <EndLabels lines={lines} ends={plan.ends} plot={plot} width={width} near={near} compact={plan.compact} />
+        )}
       </div>
       <div
         className={styles.exceedanceName}

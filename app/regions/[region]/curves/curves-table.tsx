@@ -26,9 +26,9 @@ export function CurvesTable({ exceedances, curves, lines, band, unit, kind }: Pr
     at: exceedances.findIndex((other) => Math.abs(other - exceedance) < 1e-9),
   }));
   const bandRows = [
-    { name: 'Region, 90 % of stations below', flows: band.p90 },
-    { name: 'Region, median station', flows: band.p50 },
-    { name: 'Region, 10 % of stations below', flows: band.p10 },
+    { name: 'Region, 90th percentile', flows: band.p90 },
+    { name: 'Region, median', flows: band.p50 },
+    { name: 'Region, 10th percentile', flows: band.p10 },
   ];
   return (
     <ScrollFrame className={styles.tableFrame} label="Flows at named exceedances">

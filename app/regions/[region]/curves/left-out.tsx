@@ -1,7 +1,6 @@
 import Link from 'next/link';
 import { useSearchParams } from 'next/navigation';
 import { stationHref } from '@/app/components/links';
-import ui from '@/app/components/ui.module.css';
 import type { Basis } from '@/lib/basis';
 import styles from './curves-screen.module.css';
 
@@ -9,8 +8,8 @@ export interface LeftOutStation {
   code: string;
   name: string;
   reason: string;
-  /** among the stations that were asked for */
-  chosen: boolean;
+  /** it has usable years, so that on another scale it would have a curve */
+  curable: boolean;
 }
 
 interface Props {
@@ -44,7 +43,13 @@ export function LeftOut({ slug, stations, normalise, onNormalise }: Props) {
           ));
         return (
           <div key={reason}>
-            <strong>Without a curve:</strong> {names(same.slice(0, NAMED))} – {reason}.
+            <strong>Without a curve:</strong> {names(same.slice(0, NAMED))} – {reason}.{' '}
+            {same.some((station) => station.curable) &&
+              others.map((other) => (
+                <button key={other} type="button" className={styles.way} onClick={() => onNormalise(other)}>
+                  compare as a ratio to the {other} flow
+                </button>
+              ))}
             {same.length > NAMED && (
               <details>
                 <summary>and {same.length - NAMED} more</summary>
@@ -54,15 +59,6 @@ export function LeftOut({ slug, stations, normalise, onNormalise }: Props) {
           </div>
         );
       })}
-      {normalise !== 'none' && (
-        <div className={styles.leftOutWays}>
-          {others.map((other) => (
-            <button key={other} type="button" className={ui.button} onClick={() => onNormalise(other)}>
-              Compare as a ratio to the {other} flow
-            </button>
-          ))}
-        </div>
-      )}
     </div>
   );
 }

@@ -1,5 +1,3 @@
-import { parseView } from '../map-state';
-
 /** The map's pane, about: its size depends on the window and is not in the address, so what counts as in view is good to
  *  the nearest hundred pixels. */
 const PANE = { width: 760, height: 700 };
@@ -10,7 +8,7 @@ const MOST_LATITUDE = 85.0511;
 /** Degrees that a map view covers (spherical Mercator), or null without a view that can be read.
  *  Example: at zoom 0 the whole world fits: west −180 … east 180 */
 export function boundsOfView(text: string | null): { west: number; south: number; east: number; north: number } | null {
-  const view = text === null ? null : parseView(text);
+  const view = text === null ? null : readView(text);
   if (!view) return null;
   const world = TILE * 2 ** view.zoom;
   const halfWidth = (PANE.width / 2 / world) * 360;
@@ -28,3 +26,13 @@ export function boundsOfView(text: string | null): { west: number; south: number
 const mercator = (latitude: number): number => Math.log(Math.tan(Math.PI / 4 + (latitude * Math.PI) / 360));
 const latitudeOf = (y: number): number => (Math.atan(Math.sinh(y)) * 180) / Math.PI;
 const turned = (longitude: number): number => ((((longitude + 180) % 360) + 360) % 360) - 180;
+
+/** A map view as the address holds it: "latitude,longitude,zoom". Read here as well as on the map, because the map's own
+ *  reader belongs to the browser and these bounds are taken on the server. */
+function readView(text: string): { latitude: number; longitude: number; zoom: number } | null {
+  const match = /^(-?[\d.]+),(-?[\d.]+),([\d.]+)$/.exec(text);
+  if (!match) return null;
+  const [latitude, longitude, zoom] = match.slice(1).map(Number);
+  if (![latitude, longitude, zoom].every(Number.isFinite) || Math.abs(latitude) > 90 || zoom > 20) return null;
+  return { latitude, longitude, zoom };
+}

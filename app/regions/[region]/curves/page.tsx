@@ -34,6 +34,7 @@ export default async function CurvesPage({ params, searchParams }: Props) {
   }));
   const chosen = new Set(chooseStations(stations, choice, query.get('view')));
   const flowsOf = (flows: ArrayLike<number>) => shownFlows(flows, curves.unit, basis.units);
+  const yearsOf = new Map(ranking.rows.map((row) => [row.code, row.yearsUsed]));
   const curveOf = new Map(curves.curves.map((curve) => [curve.station.code, curve]));
   const shown = stations.flatMap(({ code, name }) => {
     const curve = chosen.has(code) ? curveOf.get(code) : undefined;
@@ -67,7 +68,7 @@ export default async function CurvesPage({ params, searchParams }: Props) {
             code: station.code,
             name: station.name,
             reason,
-            chosen: chosen.has(station.code),
+            curable: basis.normalise !== 'none' && (yearsOf.get(station.code) ?? 0) > 0,
           }))}
           band={{ p10: flowsOf(p10), p50: flowsOf(p50), p90: flowsOf(p90) }}
         />

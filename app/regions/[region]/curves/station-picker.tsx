@@ -1,5 +1,5 @@
 'use client';
-import { useId, useState } from 'react';
+import { useEffect, useId, useState } from 'react';
 import { LineSwatch } from '@/app/components/duration-figure/line-swatch';
 import { fixed } from '@/app/components/format';
 import ui from '@/app/components/ui.module.css';
@@ -33,6 +33,9 @@ const MOST_ROWS = 200;
 /** Which stations the figure shows: by search and tick, or a whole set at once. */
 export function StationPicker({ stations, chosen, lines, choice, leftOut, hasMapView, onChoose }: Props) {
   const [search, setSearch] = useState('');
+  const [open, setOpen] = useState(true);
+  // On a narrow screen the list would stand between the reader and the figure.
+  useEffect(() => setOpen(!window.matchMedia('(max-width: 900px)').matches), []);
   const searchId = useId();
   const ticked = new Set(chosen);
   const reasons = new Map(leftOut.map((station) => [station.code, station.reason]));
@@ -53,7 +56,7 @@ export function StationPicker({ stations, chosen, lines, choice, leftOut, hasMap
     { label: 'none', choice: { way: 'codes', codes: [] }, on: chosen.length === 0 },
   ];
   return (
-    <details className={styles.picker} open>
+    <details className={styles.picker} open={open} onToggle={(event) => setOpen(event.currentTarget.open)}>
       <summary>
         <h2>Stations</h2>
         <span>

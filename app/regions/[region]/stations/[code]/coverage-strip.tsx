@@ -102,7 +102,11 @@ function Key({ years }: { years: readonly YearCoverage[] }) {
   const items = [
     { show: years.some((year) => year.state === 'usable'), look: styles.usable, text: 'the year counts' },
     { show: years.some((year) => year.state === 'partial'), look: styles.partial, text: 'does not count' },
-    { show: years.some((year) => year.flagged.provisional > 0), look: styles.hatched, text: 'provisional days' },
+    {
+      show: years.some((year) => year.flagged.provisional > 0),
+      fill: 'url(#coverage-hatch)',
+      text: 'provisional days',
+    },
   ];
   return (
     <span className={styles.key}>
@@ -111,7 +115,7 @@ function Key({ years }: { years: readonly YearCoverage[] }) {
         .map((item) => (
           <span key={item.text}>
             <svg width="12" height="12" aria-hidden="true">
-              <rect width="12" height="12" className={item.look} />
+              <rect width="12" height="12" className={item.look} fill={item.fill} />
             </svg>{' '}
             {item.text}
           </span>

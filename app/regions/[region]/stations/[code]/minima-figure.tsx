@@ -132,10 +132,11 @@ function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number
     return <path className={styles.absent} d={`M${x - 3},${floor - 3}l6,-6m0,6l-6,-6`} />;
   }
   if (!point.usable) {
-    // A bar on top and a stalk down: the true minimum is here or lower.
+    // A bar on top and a stalk down: the true minimum is here or lower. At zero there is no lower.
+    const stalk = Math.min(9, floor - y);
     return (
       <g className={styles.atMost}>
-        <path d={`M${x - 4},${y}h8M${x},${y}v9m-3,-3l3,3l3,-3`} />
+        <path d={`M${x - 4},${y}h8${stalk < 5 ? '' : `M${x},${y}v${stalk}m-3,-3l3,3l3,-3`}`} />
       </g>
     );
   }

@@ -3,8 +3,8 @@ import ui from '@/app/components/ui.module.css';
 
 export function PrintButton() {
   return (
-    <button type="button" className={ui.button} onClick={() => window.print()}>
-      Print this page
+    <button type="button" className={ui.plain} onClick={() => window.print()}>
+      Print
     </button>
   );
 }

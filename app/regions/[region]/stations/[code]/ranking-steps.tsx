@@ -2,7 +2,6 @@
 import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useEffect } from 'react';
-import styles from './station-screen.module.css';
 
 interface Step {
   name: string;
@@ -22,7 +21,7 @@ export function RankingSteps({ previous, next }: { previous: Step | null; next: 
     return () => window.removeEventListener('keydown', onKey);
   }, [previous, next, router]);
   return (
-    <span className={styles.ranks}>
+    <>
       {previous && (
         <Link href={previous.href} prefetch={false} rel="prev" aria-keyshortcuts="[">
           ↑ {previous.name} <kbd>[</kbd>
@@ -33,7 +32,7 @@ export function RankingSteps({ previous, next }: { previous: Step | null; next: 
           ↓ {next.name} <kbd>]</kbd>
         </Link>
       )}
-    </span>
+    </>
   );
 }
 

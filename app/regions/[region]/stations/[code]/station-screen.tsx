@@ -33,7 +33,7 @@ interface Props {
 export function StationScreen({ region, detail, rows, query }: Props) {
   const { station, row, basis, coverage } = detail;
   const needle = needleOf(row);
-  const points = minimaPoints(detail.minima, basis.yearStart, row.trendOf === 'zero-days' ? [] : row.years);
+  const points = minimaPoints(detail.minima, basis.yearStart, row.years);
   const span = yearSpan(coverage.map((year) => year.year).concat(points.map((point) => point.year)));
   const place = placeOf(rows, station.code);
   const labelOf = (year: number) => lowFlowYearLabel(year, basis.yearStart);
@@ -50,12 +50,15 @@ export function StationScreen({ region, detail, rows, query }: Props) {
           <Link href={regionHref(region.slug, 'map', mapQuery)} prefetch={false}>
             ← Map and ranking
           </Link>
-          <RankingSteps
-            previous={
-              place.previous && { ...place.previous, href: stationHref(region.slug, place.previous.code, query) }
-            }
-            next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
-          />
+          <span className={styles.ranks}>
+            <RankingSteps
+              previous={
+                place.previous && { ...place.previous, href: stationHref(region.slug, place.previous.code, query) }
+              }
+              next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
+            />
+            <PrintButton />
+          </span>
         </nav>
         <div className={styles.title}>
           <NeedleMark needle={needle} size={56} />
@@ -116,15 +119,16 @@ export function StationScreen({ region, detail, rows, query }: Props) {
       <section className={styles.curve} aria-labelledby="curve-title">
         <div className={styles.sectionHead}>
           <h2 id="curve-title">Duration curve against the region</h2>
-          <a className={ui.button} href={table('curve')} download>
-            Curve CSV
-          </a>
+          {detail.curve && (
+            <a className={ui.button} href={table('curve')} download>
+              Curve CSV
+            </a>
+          )}
         </div>
         <StationCurve slug={region.slug} detail={detail} query={query} />
       </section>
 
       <footer className={styles.foot}>
-        <PrintButton />
         <Cautions />
       </footer>
     </article>
@@ -149,7 +153,7 @@ function StationCurve({ slug, detail, query }: { slug: string; detail: StationDe
     return (
       <div className={styles.nothing}>
         <p>No curve on these terms: {detail.noCurveReason ?? 'the record has no usable year in the period'}.</p>
-        {basis.normalise !== 'none' && (
+        {basis.normalise !== 'none' && detail.row.yearsUsed > 0 && (
           <p className={styles.ways}>
             {ways.map((way) => {
               other.set('normalise', way);
