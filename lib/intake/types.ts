@@ -1,8 +1,7 @@
 import type { Influence } from '../region/ranking-types.ts';
+import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 
-/** Units in which flows arrive. mm/d is a depth over the drainage area. */
-export const FLOW_UNITS = ['m3/s', 'L/s', 'ft3/s', 'ML/d', 'mm/d'] as const;
-export type FlowUnit = (typeof FLOW_UNITS)[number];
+export { FLOW_UNITS, type FlowUnit };
 
 export const LAYOUTS = ['long', 'wide', 'agency-tab', 'whitespace', 'fixed-width'] as const;
 export type Layout = (typeof LAYOUTS)[number];

@@ -1,23 +1,6 @@
-import { FLOW_UNITS, type FlowUnit } from './types.ts';
+import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 
-/** m³/s in one unit. Exact by definition: a foot is 0.3048 m, a day 86,400 s (NIST SP 811, 2008). */
-const FACTORS: Record<Exclude<FlowUnit, 'mm/d'>, number> = {
-  'm3/s': 1,
-  'L/s': 0.001,
-  'ft3/s': 0.028316846592,
-  'ML/d': 1000 / 86400,
-};
-
-/** Factor from a unit to m³/s.
- *  @param areaKm2  drainage area, km²; only mm/d, a depth over it, needs one
- *  @returns        NaN for mm/d without a positive area
- *  Example: toM3s('mm/d', 86.4) → 1 */
-export function toM3s(unit: FlowUnit, areaKm2: number | null): number {
-  if (!FLOW_UNITS.includes(unit))
-    throw new RangeError(`toM3s: unit must be one of ${FLOW_UNITS.join(', ')}, got ${unit}`);
-  if (unit !== 'mm/d') return FACTORS[unit];
-  return areaKm2 !== null && areaKm2 > 0 ? areaKm2 / 86.4 : Number.NaN;
-}
+export { toM3s } from '../series/flow-units.ts';
 
 /** How files write the units, after `plain` below has taken case, underscores and raised digits out. What stands per
  *  area (L/s/km²) is another quantity. */

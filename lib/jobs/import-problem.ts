@@ -1,5 +1,6 @@
 import { inspectFile } from '../intake/inspect-file.ts';
 import { IntakeError, type KnownStation } from '../intake/types.ts';
+import { ImportRefused } from '../store/import-refused.ts';
 import type { GivenFile, ImportChoices, ImportProblem } from './import-types.ts';
 import { flowOptions } from './stage-file.ts';
 
@@ -11,7 +12,7 @@ export async function problemOf(
   error: unknown,
   about: { file: GivenFile; choices: ImportChoices; registry: KnownStation[] | null } | null,
 ): Promise<ImportProblem> {
-  if (!(error instanceof IntakeError)) throw error;
+  if (!(error instanceof IntakeError || error instanceof ImportRefused)) throw error;
   const { message, problem } = error;
   return {
     file: problem.file,

@@ -1,6 +1,6 @@
-import { IntakeError } from '../intake/types.ts';
 import { type Connection, rows } from './connection.ts';
 import { reserveIds, VISIBLE } from './import-claim.ts';
+import { ImportRefused } from './import-refused.ts';
 import {
   bareFacts,
   FACT_NAMES,
@@ -47,7 +47,7 @@ export interface Plan {
 
 /** Works out what the staged files do to a region, writing nothing but the counter of stations' ids.
  *  @param unknown  what becomes of flows of a station that neither stands nor is in a staged registry
- *  @throws IntakeError naming the file and the station that is refused */
+ *  @throws ImportRefused naming the file and the station that is refused */
 export function planImport(connection: Connection, regionId: number, unknown: 'make' | 'refuse'): Plan {
   const stations = standingStations(connection, regionId);
   const registries = layRegistries(connection, stations);
@@ -134,9 +134,9 @@ function groupsOf(
   return [...groups.values()].sort((a, b) => overlaps(b) - overlaps(a));
 }
 
-function unknownStation(connection: Connection, file: number, code: string): IntakeError {
+function unknownStation(connection: Connection, file: number, code: string): ImportRefused {
   const [fileName] = rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string];
-  return new IntakeError({
+  return new ImportRefused({
     file: fileName,
     value: code,
     message: 'the region’s registry has no station of this code',

@@ -1,5 +1,5 @@
 import { existsSync } from 'node:fs';
-import type { FlowUnit } from '../intake/types.ts';
+import type { FlowUnit } from '../series/flow-units.ts';
 import { type Group, type Plan, planImport } from './apply-plan.ts';
 import { refuseForArea } from './area-error.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
@@ -54,7 +54,7 @@ export interface Applied {
  *  it writes the few small rows that records, stations, registry and layers consist of. When anything fails, or the
  *  signal aborts, what was copied is taken away again; when the process dies, recoverImports does so at the next start.
  *  The staging database stays; the caller discards it.
- *  @throws OverlapError for values unlike those that stand; IntakeError for an unknown station, or a depth without an
+ *  @throws OverlapError for values unlike those that stand; ImportRefused for an unknown station, or a depth without an
  *          area; StoreBusyError when another import goes on; the signal's reason */
 export async function applyStaging(jobId: string, options: ApplyOptions): Promise<Applied> {
   const path = options.path ?? databasePath();

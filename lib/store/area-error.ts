@@ -1,8 +1,8 @@
-import { IntakeError } from '../intake/types.ts';
+import { ImportRefused } from './import-refused.ts';
 import type { LayablePart } from './lay-parts.ts';
 
 /** Refuses to lay depths over the drainage area together with flows in other units when there is no such area.
- *  @throws IntakeError */
+ *  @throws ImportRefused */
 export function refuseForArea(
   parts: readonly LayablePart[],
   station: { code: string; areaKm2: number | null },
@@ -10,7 +10,7 @@ export function refuseForArea(
 ): void {
   const units = new Set(parts.map(({ unit }) => unit));
   if (units.size < 2 || !units.has('mm/d') || (station.areaKm2 ?? 0) > 0) return;
-  throw new IntakeError({
+  throw new ImportRefused({
     file: fileName(),
     value: station.code,
     message:

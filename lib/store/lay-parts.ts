@@ -1,6 +1,6 @@
-import type { FlowUnit } from '../intake/types.ts';
-import { toM3s } from '../intake/units.ts';
 import { FLAG } from '../series/daily-series.ts';
+import type { FlowUnit } from '../series/flow-units.ts';
+import { toM3s } from '../series/flow-units.ts';
 import { type Code, NO_ROW } from './codes.ts';
 
 /** What an import does on a day that holds a value already, when its own is another one.

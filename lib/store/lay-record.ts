@@ -1,4 +1,4 @@
-import type { FlowUnit } from '../intake/types.ts';
+import type { FlowUnit } from '../series/flow-units.ts';
 import { blobOf, blobOfValues, bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
 import { type Connection, rows } from './connection.ts';

@@ -1,5 +1,5 @@
 import { isoDate } from '../calendar/day.ts';
-import { IntakeError } from '../intake/types.ts';
+import { ImportRefused } from './import-refused.ts';
 
 /** A day on which a file has another value than the record. Both in the record's unit. */
 export interface Conflict {
@@ -27,7 +27,7 @@ export class Conflicts {
 const SHOWN = 3;
 
 /** A file whose values are unlike those that stand. Nothing of the import was taken. */
-export class OverlapError extends IntakeError {
+export class OverlapError extends ImportRefused {
   override name = 'OverlapError';
   constructor(
     file: string,

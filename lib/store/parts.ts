@@ -1,4 +1,4 @@
-import type { FlowUnit } from '../intake/types.ts';
+import type { FlowUnit } from '../series/flow-units.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import type { Code } from './codes.ts';
 import { rows, sharedConnection } from './connection.ts';

@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
-import type { FlowUnit } from '../intake/types.ts';
-import { toM3s } from '../intake/units.ts';
 import type { DailySeries } from '../series/daily-series.ts';
+import type { FlowUnit } from '../series/flow-units.ts';
+import { toM3s } from '../series/flow-units.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
 import { rows, sharedConnection, sharedStatement } from './connection.ts';

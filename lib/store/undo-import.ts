@@ -22,7 +22,7 @@ export interface Undone {
  *  marks on them) unless another import has days of them or names them. The region stays.
  *
  *  All of it shows at once. When the process dies on the way, recoverImports leaves the import as it was, or gone.
- *  @throws StoreError 'not-found'; StoreBusyError while another import is being stored; IntakeError when what remains
+ *  @throws StoreError 'not-found'; StoreBusyError while another import is being stored; ImportRefused when what remains
  *          cannot be put into one unit without a drainage area that this import brought */
 export async function undoImport(
   importId: number,

@@ -3,6 +3,7 @@ import { BasisError } from '@/lib/basis';
 import { IntakeError } from '@/lib/intake/types';
 import { StoreBusyError } from '@/lib/store/busy';
 import { StoreError, type StoreProblem } from '@/lib/store/errors';
+import { ImportRefused } from '@/lib/store/import-refused';
 
 /** Every way in which a request can fail: status and title in one place (RFC 9457, `type` ends in the code). */
 const PROBLEMS = {
@@ -61,7 +62,9 @@ function storeProblem({ code, message }: StoreError): Problem {
 export function problemFrom(error: unknown): Problem {
   if (error instanceof Problem) return error;
   if (error instanceof BasisError) return new Problem('bad-basis', error.message);
-  if (error instanceof IntakeError) return new Problem('bad-file', error.message, { problem: error.problem });
+  if (error instanceof IntakeError || error instanceof ImportRefused) {
+    return new Problem('bad-file', error.message, { problem: error.problem });
+  }
   if (error instanceof StoreError && OF_THE_STORE[error.code] !== 'unexpected') return storeProblem(error);
   if (error instanceof StoreBusyError) {
     return new Problem('busy', 'Another program is writing to the database. Try again in a moment.');
