@@ -12,6 +12,11 @@ export class ByteTable {
     return this.keys.length;
   }
 
+  /** The bytes that were last met; not to be changed. */
+  get lastKey(): Uint8Array {
+    return this.last;
+  }
+
   /** The bytes numbered `index`. */
   key(index: number): Uint8Array {
     return this.keys[index];

@@ -19,6 +19,11 @@ export class CodeTable {
     private readonly iceLetter?: string,
   ) {}
 
+  /** The bytes of the flag last read by `code`. */
+  get lastFlag(): Uint8Array {
+    return this.flags.lastKey;
+  }
+
   /** Number of a text that stood in the value's place, for `code`; 0 is none. */
   valueText(text: string): number {
     const known = this.valueTexts.indexOf(text);

@@ -39,6 +39,11 @@ export class StationCodes {
     return found;
   }
 
+  /** The bytes of the field last read by `ofField`. */
+  get lastKey(): Uint8Array {
+    return this.table.lastKey;
+  }
+
   /** Number of the station that a text names: by code, then by name.
    *  @param line  row that names it, for the message; undefined when the file's name does */
   add(text: string, line?: number): number {

@@ -149,8 +149,8 @@ export class PlainRows {
     if (stationStart >= 0) this.turnToStation(bytes, stationStart, stationEnd, line);
     if (flagStart >= 0 || this.code < 0) {
       const [start, end] = flagStart >= 0 ? [flagStart, flagEnd] : [0, 0];
-      this.flagKey = bytes.slice(start, end);
       this.code = this.parts.codes.code(bytes, start, end, 0, line);
+      this.flagKey = this.parts.codes.lastFlag;
     }
     const station = this.onlyStation >= 0 ? this.onlyStation : this.station;
     this.parts.sink.take(station, day, value, this.code, line);
@@ -159,7 +159,7 @@ export class PlainRows {
 
   private turnToStation(bytes: Uint8Array, start: number, end: number, line: number): void {
     this.station = this.parts.stations.ofField(bytes, start, end, line);
-    this.stationKey = bytes.slice(start, end);
+    this.stationKey = this.parts.stations.lastKey;
   }
 
   /** End of a field of plain text; −1 when it holds a quote, or has blanks around it. */
