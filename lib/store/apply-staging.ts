@@ -5,7 +5,7 @@ import { refuseForArea } from './area-error.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { StoreBusyError, whenFree } from './busy.ts';
 import type { Code } from './codes.ts';
-import { type Connection, immediately, rows, sharedConnection, timestamp } from './connection.ts';
+import { type Connection, change, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { beatImports, readCounters, refuseWhileOthersChange, reserveIds } from './import-claim.ts';
@@ -107,7 +107,8 @@ function claimImports(connection: Connection, options: ApplyOptions): Promise<Cl
     if (!found && 'id' in region) throw new StoreError('not-found', 'The region is not there any more.');
     const newRegion = found || 'id' in region ? null : { name: region.name.trim(), invented: region.invented ?? false };
     const [regionId, slug] = found ?? [reserveIds(connection, 'Region', 1), slugOf(newRegion?.name ?? '')];
-    const insert = connection.prepare(
+    const insert = change(
+      connection,
       `INSERT INTO Import (regionId, createdAt, heartbeat, state, "by", kind, fileName, sha256, layout, unit, mapping, rule,
          rows, accepted, rejected, report)
        SELECT ?, ?, ?, 'applying', ?, kind, fileName, sha256, layout, unit, mapping, ?, rows, accepted, rejected, report
@@ -195,7 +196,8 @@ const registryFile = (connection: Connection): number =>
   (rows(connection, 'SELECT MIN(file) FROM staging.registry').get([]) as [number])[0];
 
 function copyPart(connection: Connection, id: number, importId: number, stationId: number): number {
-  const copy = connection.prepare(
+  const copy = change(
+    connection,
     `INSERT INTO main.Part (importId, stationId, quantity, firstDay, days, unit, codeList, "values", codes)
      SELECT ?, ?, quantity, firstDay, days, unit, codeList, "values", codes FROM staging.part WHERE id = ?`,
   );
@@ -228,14 +230,18 @@ function show(connection: Connection, claim: Claim, plan: Plan, heads: RecordHea
     if (rows(connection, 'SELECT 1 FROM Region WHERE slug = ?').get([slug])) {
       throw new StoreError('exists', `A region named "${newRegion.name}" was made meanwhile; import into it.`);
     }
-    connection
-      .prepare('INSERT INTO Region (id, slug, name, invented, createdAt) VALUES (?, ?, ?, ?, ?)')
-      .run([regionId, slug, newRegion.name, newRegion.invented ? 1 : 0, timestamp()]);
+    change(connection, 'INSERT INTO Region (id, slug, name, invented, createdAt) VALUES (?, ?, ?, ?, ?)').run([
+      regionId,
+      slug,
+      newRegion.name,
+      newRegion.invented ? 1 : 0,
+      timestamp(),
+    ]);
   }
   writeFacts(connection, regionId, plan, imports);
   writeLayers(connection, regionId, imports);
   saveRecords(connection, heads);
-  const end = connection.prepare("UPDATE Import SET state = 'applied' WHERE id = ?");
+  const end = change(connection, "UPDATE Import SET state = 'applied' WHERE id = ?");
   for (const id of imports.values()) end.run([id]);
   const files = rows(connection, 'SELECT id, fileName, kind FROM staging.file ORDER BY id').all([]);
   const made = [...plan.stations.values()].filter(({ madeBy }) => madeBy !== null);

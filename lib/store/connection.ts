@@ -58,52 +58,50 @@ function checkPlace(path: string, mayBeNew: boolean): void {
   }
 }
 
-interface Shared {
-  connection: Connection;
-  statements: Map<string, Database.Statement>;
-}
 const KEY = Symbol.for('hungerstone.connections');
-const holder = globalThis as { [KEY]?: Map<string, Shared> };
-
-function shared(path: string): Shared {
-  holder[KEY] ??= new Map();
-  let entry = holder[KEY].get(path);
-  if (!entry) {
-    entry = { connection: openConnection(path), statements: new Map() };
-    holder[KEY].set(path, entry);
-  }
-  return entry;
-}
+const holder = globalThis as { [KEY]?: Map<string, Connection> };
 
 /** The thread's own connection to a database, opened on first use and kept. */
-export const sharedConnection = (path = databasePath()): Connection => shared(path).connection;
-
-/** A statement on the thread's connection, prepared once, whose rows come as arrays. */
-export function sharedStatement(sql: string, path = databasePath()): Database.Statement {
-  const { connection, statements } = shared(path);
-  let statement = statements.get(sql);
-  if (!statement) {
-    statement = rows(connection, sql);
-    statements.set(sql, statement);
+export function sharedConnection(path = databasePath()): Connection {
+  holder[KEY] ??= new Map();
+  let connection = holder[KEY].get(path);
+  if (!connection) {
+    connection = openConnection(path);
+    holder[KEY].set(path, connection);
   }
-  return statement;
+  return connection;
 }
 
 /** Closes the thread's connection to a database, or to all. */
 export function closeSharedConnections(path?: string): void {
-  for (const [key, entry] of holder[KEY] ?? []) {
+  for (const [key, connection] of holder[KEY] ?? []) {
     if (path !== undefined && key !== path) continue;
     holder[KEY]?.delete(key);
-    entry.connection.close();
+    connection.close();
   }
 }
 
-/** Prepares a query whose rows come as arrays. */
-export const rows = (connection: Connection, sql: string): Database.Statement => {
-  const statement = connection.prepare(sql);
-  // `raw` is in libsql's statements but not in its types.
-  return (statement as Database.Statement & { raw(on?: boolean): Database.Statement }).raw(true);
-};
+const prepared = new WeakMap<Connection, Map<string, Database.Statement>>();
+
+function prepareOnce(connection: Connection, key: string, prepare: () => Database.Statement): Database.Statement {
+  const statements = prepared.get(connection) ?? new Map<string, Database.Statement>();
+  prepared.set(connection, statements);
+  const statement = statements.get(key) ?? prepare();
+  statements.set(key, statement);
+  return statement;
+}
+
+/** A statement that changes something, prepared once a connection. The SQL is one of few: values go in by `?`. */
+export const change = (connection: Connection, sql: string): Database.Statement =>
+  prepareOnce(connection, sql, () => connection.prepare(sql));
+
+/** A query whose rows come as arrays, prepared once a connection. */
+export const rows = (connection: Connection, sql: string): Database.Statement =>
+  prepareOnce(connection, `rows ${sql}`, () => {
+    // `raw` is in libsql's statements but not in its types.
+    const statement = connection.prepare(sql) as Database.Statement & { raw(on?: boolean): Database.Statement };
+    return statement.raw(true);
+  });
 
 /** Runs `change` in one transaction that holds the write lock from its start, so that what it read stays true.
  *  Synchronous; put it into whenFree to wait for others. Rolls back when `change` throws.

@@ -1,5 +1,5 @@
 import { whenFree } from './busy.ts';
-import { type Connection, immediately, rows, sharedConnection } from './connection.ts';
+import { type Connection, change, immediately, rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { refuseWhileOthersChange } from './import-claim.ts';
@@ -19,10 +19,10 @@ function remove(connection: Connection, slug: string): void {
   if (!found) throw new StoreError('not-found', `There is no region "${slug}".`);
   for (const table of ['Record', 'Mark']) {
     const sql = `DELETE FROM ${table} WHERE stationId IN (SELECT id FROM Station WHERE regionId = ?)`;
-    connection.prepare(sql).run([found[0]]);
+    change(connection, sql).run([found[0]]);
   }
   for (const table of ['Station', 'Layer', 'Basis', 'Job', 'Import']) {
-    connection.prepare(`DELETE FROM ${table} WHERE regionId = ?`).run([found[0]]);
+    change(connection, `DELETE FROM ${table} WHERE regionId = ?`).run([found[0]]);
   }
-  connection.prepare('DELETE FROM Region WHERE id = ?').run([found[0]]);
+  change(connection, 'DELETE FROM Region WHERE id = ?').run([found[0]]);
 }

@@ -1,5 +1,5 @@
 import { StoreBusyError } from './busy.ts';
-import { type Connection, rows, timestamp } from './connection.ts';
+import { type Connection, change, rows, timestamp } from './connection.ts';
 import { StoreError } from './errors.ts';
 import { DEAD_AFTER_MS } from './jobs.ts';
 
@@ -24,7 +24,7 @@ export function refuseWhileOthersChange(connection: Connection, now = Date.now()
 /** Shows that the writer of these imports lives, and makes sure that nobody took it for dead meanwhile.
  *  @throws StoreError 'lost' when they are no longer in the state */
 export function beatImports(connection: Connection, ids: readonly number[], state: 'applying' | 'undoing'): void {
-  const beat = connection.prepare('UPDATE Import SET heartbeat = ? WHERE id = ? AND state = ?');
+  const beat = change(connection, 'UPDATE Import SET heartbeat = ? WHERE id = ? AND state = ?');
   for (const id of ids) {
     if (beat.run([timestamp(), id, state]).changes === 1) continue;
     throw new StoreError(
@@ -49,10 +49,10 @@ export function restoreCounters(connection: Connection, counters: Counters): voi
   for (const [table, before] of counters) {
     const [highest] = rows(connection, `SELECT MAX(id) FROM "${table}"`).get([]) as [number | null];
     if (before === null && highest === null) {
-      connection.prepare('DELETE FROM sqlite_sequence WHERE name = ?').run([table]);
+      change(connection, 'DELETE FROM sqlite_sequence WHERE name = ?').run([table]);
     } else {
       const seq = Math.max(before ?? 0, highest ?? 0);
-      connection.prepare('UPDATE sqlite_sequence SET seq = ? WHERE name = ?').run([seq, table]);
+      change(connection, 'UPDATE sqlite_sequence SET seq = ? WHERE name = ?').run([seq, table]);
     }
   }
 }
@@ -66,6 +66,6 @@ export function reserveIds(connection: Connection, table: Numbered, count: numbe
     last === null
       ? 'INSERT INTO sqlite_sequence (seq, name) VALUES (?, ?)'
       : 'UPDATE sqlite_sequence SET seq = ? WHERE name = ?';
-  connection.prepare(sql).run([(last ?? 0) + count, table]);
+  change(connection, sql).run([(last ?? 0) + count, table]);
   return (last ?? 0) + 1;
 }

@@ -1,5 +1,5 @@
 import type { KnownStation } from '../intake/types.ts';
-import { sharedStatement } from './connection.ts';
+import { rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 
 /** Whether a region's stations come from a registry, or were made by hand, and not only by flows. */
@@ -8,9 +8,9 @@ export const HAS_REGISTRY = `SELECT EXISTS (SELECT 1 FROM Import WHERE regionId 
 
 /** The stations that flows of a region may name; null where the region has no registry, so that flows make stations. */
 export function knownStations(regionId: number, path = databasePath()): KnownStation[] | null {
-  const [hasRegistry] = sharedStatement(HAS_REGISTRY, path).get([regionId, regionId]) as [number];
+  const [hasRegistry] = rows(sharedConnection(path), HAS_REGISTRY).get([regionId, regionId]) as [number];
   if (hasRegistry === 0) return null;
-  const found = sharedStatement('SELECT code, name FROM Station WHERE regionId = ? ORDER BY code', path).all([
+  const found = rows(sharedConnection(path), 'SELECT code, name FROM Station WHERE regionId = ? ORDER BY code').all([
     regionId,
   ]);
   return (found as [string, string][]).map(([code, name]) => ({ code, name }));

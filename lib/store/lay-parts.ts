@@ -87,14 +87,15 @@ function layOver(
     bits[index] = code.bits;
     if (code.text !== '') hasCode[index] = STATED;
   }
+  const { values: given, codes, rule } = part;
   const offset = part.firstDay - firstDay;
-  for (let day = 0; day < part.values.length; day++) {
-    const code = part.codes[day];
+  for (let day = 0; day < given.length; day++) {
+    const code = codes[day];
     if (code === NO_ROW) continue;
     const at = offset + day;
-    const value = factor === 1 ? part.values[day] : part.values[day] * factor;
+    const value = factor === 1 ? given[day] : given[day] * factor;
     const standing = values[at];
-    const replaces = mayReplace(part.rule, flags[at]);
+    const replaces = mayReplace(rule, flags[at]);
     let takesCode: boolean;
     if (Number.isNaN(standing)) {
       values[at] = value;
@@ -103,12 +104,12 @@ function layOver(
       takesCode = false;
     } else if (isSame(standing, value, factor === 1)) {
       takesCode =
-        hasCode[code] === STATED ? replaces || stated[at] < STATED : replaces && part.rule === 'take-where-provisional';
+        hasCode[code] === STATED ? replaces || stated[at] < STATED : replaces && rule === 'take-where-provisional';
     } else if (replaces) {
       values[at] = value;
       takesCode = true;
     } else {
-      if (part.rule === 'keep') onConflict(firstDay + at, standing, value);
+      if (rule === 'keep') onConflict(firstDay + at, standing, value);
       takesCode = false;
     }
     if (takesCode) {

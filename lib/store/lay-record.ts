@@ -1,7 +1,7 @@
 import type { FlowUnit } from '../series/flow-units.ts';
 import { blobOf, blobOfValues, bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
-import { type Connection, rows } from './connection.ts';
+import { type Connection, change, rows } from './connection.ts';
 import { VISIBLE } from './import-claim.ts';
 import type { LaidDays, LayablePart, OverlapRule } from './lay-parts.ts';
 import { type RecordSummary, summarise } from './record-summary.ts';
@@ -70,15 +70,18 @@ export function storeLaid(
   const { unit, firstDay, values, flags } = laid;
   const head = { stationId, quantity, unit, firstDay, days: values.length, ...summary };
   if (standing?.hash === summary.hash) return { ...head, partId: standing.partId, laidId: standing.laidId };
-  const { lastInsertRowid } = connection
-    .prepare('INSERT INTO Laid (importId, "values", flags) VALUES (?, ?, ?)')
-    .run([importId, blobOfValues(values), blobOf(flags)]);
+  const { lastInsertRowid } = change(connection, 'INSERT INTO Laid (importId, "values", flags) VALUES (?, ?, ?)').run([
+    importId,
+    blobOfValues(values),
+    blobOf(flags),
+  ]);
   return { ...head, partId: null, laidId: Number(lastInsertRowid) };
 }
 
 /** Writes Records' rows: what readers go by. */
 export function saveRecords(connection: Connection, heads: Iterable<RecordHead>): void {
-  const save = connection.prepare(
+  const save = change(
+    connection,
     `INSERT INTO Record (stationId, quantity, partId, laidId, unit, firstDay, days, hash, valueCount, firstValueDay,
        lastValueDay, zeroCount) VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
      ON CONFLICT (stationId, quantity) DO UPDATE SET partId = excluded.partId, laidId = excluded.laidId,

@@ -4,7 +4,7 @@ import type { FlowUnit } from '../series/flow-units.ts';
 import { toM3s } from '../series/flow-units.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
-import { rows, sharedConnection, sharedStatement } from './connection.ts';
+import { rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { hashAsRead, layMarks, type MarkSpan } from './marks-on-flags.ts';
 
@@ -27,8 +27,8 @@ export function readSeries(
   visit: (stationId: number, series: DailySeries, hash: string) => void,
   { quantity = 'flow', path = databasePath() } = {},
 ): void {
-  const record = sharedStatement(RECORD_SQL, path);
-  const marksOf = sharedStatement(MARKS_SQL, path);
+  const record = rows(sharedConnection(path), RECORD_SQL);
+  const marksOf = rows(sharedConnection(path), MARKS_SQL);
   for (const stationId of stationIds) {
     const row = record.get([stationId, quantity]) as
       | [string, FlowUnit, number, number | null, string | null, Buffer, Buffer]
@@ -90,11 +90,11 @@ export async function stationRecords(regionId: number): Promise<StationRecord[]>
 
 function recordsOf(regionId: number, path: string): StationRecord[] {
   const marks = new Map<number, MarkSpan[]>();
-  for (const row of sharedStatement(REGION_MARKS_SQL, path).all([regionId])) {
+  for (const row of rows(sharedConnection(path), REGION_MARKS_SQL).all([regionId])) {
     const stationId = (row as number[])[3];
     marks.set(stationId, [...(marks.get(stationId) ?? []), toSpan(row)]);
   }
-  return (sharedStatement(HEADS_SQL, path).all([regionId]) as HeadRow[]).map(
+  return (rows(sharedConnection(path), HEADS_SQL).all([regionId]) as HeadRow[]).map(
     ([stationId, code, areaKm2, hash, unit, firstDay, days, valueCount, firstValueDay, lastValueDay, zeroCount]) => ({
       stationId,
       code,

@@ -1,7 +1,7 @@
 import { BASIS_KEYS, type Basis, DEFAULT_BASIS, parseBasis } from '../basis.ts';
 import { dateOfDay } from '../calendar/day.ts';
 import { whenFree } from './busy.ts';
-import { sharedStatement } from './connection.ts';
+import { rows, sharedConnection } from './connection.ts';
 import { StoreError } from './errors.ts';
 import { VISIBLE } from './import-claim.ts';
 import { openStore } from './open.ts';
@@ -38,13 +38,13 @@ export interface RegionSummary {
 
 /** All regions by name, with what they hold. */
 export async function listRegions(): Promise<RegionSummary[]> {
-  const found = sharedStatement(
+  const found = rows(
+    sharedConnection(openStore().path),
     `SELECT g.id, g.slug, g.name, g.invented, COUNT(s.id), COUNT(r.id), MIN(r.firstValueDay), MAX(r.lastValueDay),
        (SELECT SUBSTR(MAX(i.createdAt), 1, 10) FROM Import i WHERE i.regionId = g.id AND i.state IN ${VISIBLE})
      FROM Region g LEFT JOIN Station s ON s.regionId = g.id
      LEFT JOIN Record r ON r.stationId = s.id AND r.quantity = 'flow'
      GROUP BY g.id ORDER BY g.name`,
-    openStore().path,
   ).all([]) as [number, string, string, number, number, number, number | null, number | null, string | null][];
   const yearOf = (day: number | null) => (day === null ? null : dateOfDay(day).year);
   return found.map(([id, slug, name, invented, stations, records, first, last, lastImport]) => ({

@@ -1,5 +1,5 @@
 import { isBusy, whenFree } from './busy.ts';
-import { immediately, rows, sharedConnection, sharedStatement, timestamp } from './connection.ts';
+import { change, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
 
 /** Size of all stored results at most, bytes; the least recently used go first. */
@@ -11,7 +11,7 @@ const NOTE_AFTER_MS = 60_000;
 
 /** The stored result of an analysis under the key of all that it depends on, or null. Synchronous, by libsql alone. */
 export function getResult(kind: string, key: string, path = databasePath()): Uint8Array | null {
-  const found = sharedStatement('SELECT id, lastUsed, bytes FROM Result WHERE kind = ? AND key = ?', path).get([
+  const found = rows(sharedConnection(path), 'SELECT id, lastUsed, bytes FROM Result WHERE kind = ? AND key = ?').get([
     kind,
     key,
   ]) as [number, string, Buffer] | undefined;
@@ -26,7 +26,7 @@ function noteUse(id: number, path: string): void {
   try {
     const connection = sharedConnection(path);
     immediately(connection, () =>
-      connection.prepare('UPDATE Result SET lastUsed = ? WHERE id = ?').run([timestamp(), id]),
+      change(connection, 'UPDATE Result SET lastUsed = ? WHERE id = ?').run([timestamp(), id]),
     );
   } catch (error) {
     if (!isBusy(error)) throw error;
@@ -46,11 +46,15 @@ export async function putResult(
   const connection = sharedConnection(path);
   await whenFree(() =>
     immediately(connection, () => {
-      connection.prepare('DELETE FROM Result WHERE kind = ? AND key = ?').run([kind, key]);
+      change(connection, 'DELETE FROM Result WHERE kind = ? AND key = ?').run([kind, key]);
       makeRoom(path, limitBytes - bytes.byteLength);
-      connection
-        .prepare('INSERT INTO Result (kind, key, size, lastUsed, bytes) VALUES (?, ?, ?, ?, ?)')
-        .run([kind, key, bytes.byteLength, timestamp(), Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength)]);
+      change(connection, 'INSERT INTO Result (kind, key, size, lastUsed, bytes) VALUES (?, ?, ?, ?, ?)').run([
+        kind,
+        key,
+        bytes.byteLength,
+        timestamp(),
+        Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength),
+      ]);
     }),
   );
   return true;
@@ -61,7 +65,7 @@ function makeRoom(path: string, limit: number): void {
   let [total] = rows(connection, 'SELECT COALESCE(SUM(size), 0) FROM Result').get([]) as [number];
   if (total <= limit) return;
   const oldest = rows(connection, 'SELECT id, size FROM Result ORDER BY lastUsed, id').all([]) as [number, number][];
-  const remove = connection.prepare('DELETE FROM Result WHERE id = ?');
+  const remove = change(connection, 'DELETE FROM Result WHERE id = ?');
   for (const [id, size] of oldest) {
     if (total <= limit) return;
     remove.run([id]);

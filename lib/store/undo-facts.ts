@@ -1,4 +1,4 @@
-import { type Connection, rows } from './connection.ts';
+import { type Connection, change, rows } from './connection.ts';
 import { FACT_NAMES, type FactChange, type FactName } from './station-facts.ts';
 import type { LayerBefore, RegistryBefore } from './undo-trail.ts';
 
@@ -77,9 +77,12 @@ function restoreFacts(
       else next.change.fields[name] = [old, given];
       saveTrail(connection, next.trail);
     } else {
-      connection
-        .prepare(`UPDATE Station SET ${name} = ? WHERE regionId = ? AND code = ? AND ${name} IS ?`)
-        .run([old, regionId, code, mine]);
+      change(connection, `UPDATE Station SET ${name} = ? WHERE regionId = ? AND code = ? AND ${name} IS ?`).run([
+        old,
+        regionId,
+        code,
+        mine,
+      ]);
     }
   }
 }
@@ -95,18 +98,21 @@ function restoreLayer(
     next.before.layer.old = old;
     saveTrail(connection, next);
   } else if (old) {
-    connection
-      .prepare('UPDATE Layer SET kind = ?, geojson = ?, importId = ? WHERE regionId = ? AND name = ? AND importId = ?')
-      .run([old.kind, old.geojson, old.importId, regionId, name, importId]);
+    change(
+      connection,
+      'UPDATE Layer SET kind = ?, geojson = ?, importId = ? WHERE regionId = ? AND name = ? AND importId = ?',
+    ).run([old.kind, old.geojson, old.importId, regionId, name, importId]);
   } else {
-    connection
-      .prepare('DELETE FROM Layer WHERE regionId = ? AND name = ? AND importId = ?')
-      .run([regionId, name, importId]);
+    change(connection, 'DELETE FROM Layer WHERE regionId = ? AND name = ? AND importId = ?').run([
+      regionId,
+      name,
+      importId,
+    ]);
   }
 }
 
 const saveTrail = (connection: Connection, { id, before }: Trail): void =>
-  void connection.prepare('UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), id]);
+  void change(connection, 'UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), id]);
 
 /** Stations that the import made pass to the next import that has days of them or names them; the others go. */
 function releaseStations(connection: Connection, importId: number, others: readonly Trail[]): number {
@@ -127,11 +133,11 @@ function releaseStations(connection: Connection, importId: number, others: reado
     const [withDays] = nextPart.get([id]) as [number | null];
     const heirs = [withDays, namedBy.get(code)].filter((heir) => typeof heir === 'number');
     if (heirs.length > 0) {
-      connection.prepare('UPDATE Station SET createdBy = ? WHERE id = ?').run([Math.min(...heirs), id]);
+      change(connection, 'UPDATE Station SET createdBy = ? WHERE id = ?').run([Math.min(...heirs), id]);
       continue;
     }
-    connection.prepare('DELETE FROM Mark WHERE stationId = ?').run([id]);
-    connection.prepare('DELETE FROM Station WHERE id = ?').run([id]);
+    change(connection, 'DELETE FROM Mark WHERE stationId = ?').run([id]);
+    change(connection, 'DELETE FROM Station WHERE id = ?').run([id]);
     removed++;
   }
   return removed;

@@ -1,6 +1,6 @@
 import { refuseForArea } from './area-error.ts';
 import { whenFree } from './busy.ts';
-import { type Connection, immediately, rows, sharedConnection, timestamp } from './connection.ts';
+import { type Connection, change, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { StoreError } from './errors.ts';
 import { beatImports, refuseWhileOthersChange, VISIBLE } from './import-claim.ts';
@@ -37,7 +37,7 @@ export async function undoImport(
     return undone;
   } catch (error) {
     const back = "UPDATE Import SET state = 'applied' WHERE id = ? AND state = 'undoing'";
-    await whenFree(() => immediately(connection, () => connection.prepare(back).run([importId])));
+    await whenFree(() => immediately(connection, () => change(connection, back).run([importId])));
     await sweep(connection, slices);
     throw error;
   }
@@ -47,7 +47,7 @@ function claim(connection: Connection, importId: number): number {
   refuseWhileOthersChange(connection);
   const found = rows(connection, "SELECT regionId FROM Import WHERE id = ? AND state = 'applied'").get([importId]);
   if (!found) throw new StoreError('not-found', `There is no import ${importId} to undo.`);
-  connection.prepare("UPDATE Import SET state = 'undoing', heartbeat = ? WHERE id = ?").run([timestamp(), importId]);
+  change(connection, "UPDATE Import SET state = 'undoing', heartbeat = ? WHERE id = ?").run([timestamp(), importId]);
   return (found as [number])[0];
 }
 
@@ -75,10 +75,10 @@ async function undoClaimed(
     () =>
       immediately(connection, () => {
         before();
-        const remove = connection.prepare('DELETE FROM Record WHERE stationId = ? AND quantity = ?');
+        const remove = change(connection, 'DELETE FROM Record WHERE stationId = ? AND quantity = ?');
         for (const { stationId, quantity } of gone) remove.run([stationId, quantity]);
         saveRecords(connection, heads);
-        connection.prepare("UPDATE Import SET state = 'undone' WHERE id = ?").run([importId]);
+        change(connection, "UPDATE Import SET state = 'undone' WHERE id = ?").run([importId]);
         const stationsRemoved = undoFacts(connection, { importId, regionId });
         return { regionId, records: touched.length, stationsRemoved };
       }),

@@ -1,5 +1,5 @@
 import { isBusy, whenFree } from './busy.ts';
-import { type Connection, immediately, rows, timestamp } from './connection.ts';
+import { type Connection, change, immediately, rows, timestamp } from './connection.ts';
 import { type Counters, restoreCounters } from './import-claim.ts';
 import { DEAD_AFTER_MS } from './jobs.ts';
 import { inSlices, type SliceOptions } from './slices.ts';
@@ -12,7 +12,7 @@ export async function withdraw(
 ): Promise<void> {
   await whenFree(() =>
     immediately(connection, () => {
-      const remove = connection.prepare("UPDATE Import SET state = 'undone' WHERE id = ? AND state = 'applying'");
+      const remove = change(connection, "UPDATE Import SET state = 'undone' WHERE id = ? AND state = 'applying'");
       for (const id of importIds) remove.run([id]);
     }),
   );
@@ -23,8 +23,8 @@ export async function withdraw(
 /** Removes what no reader can reach: parts of imports that are undone or gone, days laid for a record that moved on. What
  *  cannot be removed because others keep writing goes with the next sweep. */
 export async function sweep(connection: Connection, { sliceMs }: Pick<SliceOptions, 'sliceMs'> = {}): Promise<void> {
-  const removePart = connection.prepare('DELETE FROM Part WHERE id = ?');
-  const removeLaid = connection.prepare('DELETE FROM Laid WHERE id = ?');
+  const removePart = change(connection, 'DELETE FROM Part WHERE id = ?');
+  const removeLaid = change(connection, 'DELETE FROM Laid WHERE id = ?');
   try {
     await inSlices(connection, ids(connection, LOST_PARTS), (id) => void removePart.run([id]), { sliceMs });
     await inSlices(connection, ids(connection, LOST_LAID), (id) => void removeLaid.run([id]), { sliceMs });
@@ -51,7 +51,8 @@ export async function recoverImports(connection: Connection, deadAfterMs = DEAD_
       const applying = rows(connection, "SELECT id FROM Import WHERE state = 'applying' AND heartbeat < ?").all([
         before,
       ]);
-      const end = connection.prepare(
+      const end = change(
+        connection,
         `UPDATE Import SET state = CASE state WHEN 'applying' THEN 'undone' ELSE 'applied' END
          WHERE state IN ('applying', 'undoing') AND heartbeat < ?`,
       );

@@ -1,5 +1,5 @@
 import type { Plan, PlannedStation } from './apply-plan.ts';
-import { type Connection, rows } from './connection.ts';
+import { type Connection, change, rows } from './connection.ts';
 import { FACT_NAMES } from './station-facts.ts';
 import type { LayerBefore, RegistryBefore } from './undo-trail.ts';
 
@@ -26,24 +26,25 @@ export function insertStation(
   { id, code, facts }: Pick<PlannedStation, 'id' | 'code' | 'facts'>,
   createdBy: number | null,
 ): void {
-  connection
-    .prepare(
-      `INSERT INTO Station (id, regionId, code, createdBy, ${FACT_NAMES.join(', ')})
+  change(
+    connection,
+    `INSERT INTO Station (id, regionId, code, createdBy, ${FACT_NAMES.join(', ')})
        VALUES (?, ?, ?, ?, ${FACT_NAMES.map(() => '?').join(', ')})`,
-    )
-    .run([id, regionId, code, createdBy, ...FACT_NAMES.map((name) => facts[name])]);
+  ).run([id, regionId, code, createdBy, ...FACT_NAMES.map((name) => facts[name])]);
 }
 
 export function updateStation(connection: Connection, { id, facts }: Pick<PlannedStation, 'id' | 'facts'>): void {
-  connection
-    .prepare(`UPDATE Station SET ${FACT_NAMES.map((name) => `${name} = ?`).join(', ')} WHERE id = ?`)
-    .run([...FACT_NAMES.map((name) => facts[name]), id]);
+  change(connection, `UPDATE Station SET ${FACT_NAMES.map((name) => `${name} = ?`).join(', ')} WHERE id = ?`).run([
+    ...FACT_NAMES.map((name) => facts[name]),
+    id,
+  ]);
 }
 
 /** Writes the staged layers, each over the one of its name, and into its import what stood before. */
 export function writeLayers(connection: Connection, regionId: number, imports: ReadonlyMap<number, number>): void {
   const staged = rows(connection, 'SELECT file, name, kind, geojson FROM staging.layer ORDER BY file').all([]);
-  const save = connection.prepare(
+  const save = change(
+    connection,
     `INSERT INTO main.Layer (regionId, name, kind, geojson, importId) VALUES (?, ?, ?, ?, ?)
      ON CONFLICT (regionId, name) DO UPDATE SET kind = excluded.kind, geojson = excluded.geojson, importId = excluded.importId`,
   );
@@ -59,5 +60,5 @@ export function writeLayers(connection: Connection, regionId: number, imports: R
 }
 
 function remember(connection: Connection, importId: number, before: RegistryBefore | LayerBefore): void {
-  connection.prepare('UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), importId]);
+  change(connection, 'UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), importId]);
 }
