@@ -24,11 +24,18 @@ class OrderWitness implements RowReader {
 }
 
 /** Finds whether dates such as 4/3/2001 are day first or month first, from all dates of the file.
+ *  @param firstProof  stop at the first date that decides it, and leave contradictions to the reading
  *  @throws IntakeError when no date decides it, or dates contradict one another */
-export async function findDateOrder(path: string, plan: TablePlan, signal?: AbortSignal): Promise<'dmy' | 'mdy'> {
+export async function findDateOrder(
+  path: string,
+  plan: TablePlan,
+  { signal, firstProof = false }: { signal?: AbortSignal; firstProof?: boolean } = {},
+): Promise<'dmy' | 'mdy'> {
   const witness = new OrderWitness(plan.places.date[0]);
-  await new RowLoop(plan, witness, { signal }).read(path);
-  const { dmy, mdy } = witness.seen;
+  const { seen } = witness;
+  const stop = firstProof ? () => seen.dmy !== undefined || seen.mdy !== undefined : undefined;
+  await new RowLoop(plan, witness, { signal, stop }).read(path);
+  const { dmy, mdy } = seen;
   if (dmy && mdy) {
     throw new IntakeError({
       file: plan.file,

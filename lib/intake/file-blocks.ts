@@ -5,6 +5,10 @@ import { IntakeError } from './types.ts';
 const BLOCK = 1 << 20;
 export const LONGEST_LINE = 1 << 20;
 
+/** Bytes behind every block that may be looked at, whatever they hold: a reader need not ask whether a word of a row
+ *  reaches over the end. */
+export const SPARE_BYTES = 64;
+
 export interface FileHead {
   /** up to 1 MiB from the start */
   bytes: Uint8Array;
@@ -57,8 +61,8 @@ export interface BlockReading {
 export async function readBlocks(path: string, reading: BlockReading): Promise<void> {
   const handle = await openToRead(path, reading.file);
   try {
-    let current = new Uint8Array(BLOCK + LONGEST_LINE);
-    let other = new Uint8Array(BLOCK + LONGEST_LINE);
+    let current = new Uint8Array(BLOCK + LONGEST_LINE + SPARE_BYTES);
+    let other = new Uint8Array(BLOCK + LONGEST_LINE + SPARE_BYTES);
     let carried = 0;
     let next = handle.read(current, 0, BLOCK, null);
     for (;;) {

@@ -73,7 +73,7 @@ export async function readFlows(path: string, options: ReadFlowsOptions): Promis
   const plan = recognise(head, options);
   if (plan.problems.length > 0) throw plan.problems[0];
   if (plan.orderOpen)
-    plan.mapping.date = { ...plan.mapping.date, order: await findDateOrder(path, plan, options.signal) };
+    plan.mapping.date = { ...plan.mapping.date, order: await findDateOrder(path, plan, { signal: options.signal }) };
 
   const hash = createHash('sha256');
   const rejections = new Rejections(options.onRejected);
@@ -134,9 +134,8 @@ function handOn(
 }
 
 function readingWarnings(loop: RowLoop, reading: Reading, sink: RecordSink): string[] {
-  const { mapping } = { mapping: reading.values };
   const warnings: [number, (count: number) => string][] = [
-    [mapping.negatives, (count) => `${count} values are negative; they were taken as written.`],
+    [reading.values.negatives, (count) => `${count} values are negative; they were taken as written.`],
     [reading.leftOut(), (count) => `${count} rows of other quantities were left out.`],
     [sink.filled, (count) => `${count} days stand twice, once with a value and once without; the value was taken.`],
     [

@@ -2,6 +2,10 @@ import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 
 export { toM3s } from '../series/flow-units.ts';
 
+/** Heading of a column of a public daily-values service: discharge (parameter 00060) in ft³/s, daily mean (statistic
+ *  00003). */
+export const DAILY_DISCHARGE = /_00060_00003$/;
+
 /** How files write the units, after `plain` below has taken case, underscores and raised digits out. What stands per
  *  area (L/s/km²) is another quantity. */
 const PER_SECOND = String.raw`(?:\/ ?s(?:ec(?:ond)?)?|\.? ?s\^?-1| per second)`;

@@ -1,4 +1,4 @@
-import { DAILY_DISCHARGE } from './find-unit.ts';
+import { DAILY_DISCHARGE } from '../units.ts';
 
 /** Where an agency's tab-delimited table has its columns. */
 export interface AgencyColumns {

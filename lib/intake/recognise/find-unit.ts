@@ -1,8 +1,5 @@
 import { FLOW_UNITS, type FlowUnit, IntakeError } from '../types.ts';
-import { unitNamedIn, unitsNamedIn } from '../units.ts';
-
-/** A column of a public daily-values service: discharge (parameter 00060) in ft³/s, daily mean (statistic 00003). */
-export const DAILY_DISCHARGE = /_00060_00003$/;
+import { DAILY_DISCHARGE, unitNamedIn, unitsNamedIn } from '../units.ts';
 
 /** The unit that a file states, looked for where it is said most closely first: the value's heading, the column of
  *  units, then comment and title lines (only when all of these together name just one).

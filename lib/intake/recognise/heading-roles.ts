@@ -1,4 +1,4 @@
-import { unitsNamedIn } from '../units.ts';
+import { DAILY_DISCHARGE, unitsNamedIn } from '../units.ts';
 
 /** What a column holds, by its heading. */
 export type HeadingRole =
@@ -28,6 +28,7 @@ const EXACT: [HeadingRole, Set<string>][] = [
   ['month', words('month mon mo mm mth monat mois mes')],
   ['day', words('day dd dy d tag jour dia')],
   ['flag', words('cd sym symbol symbole qf qc e')],
+  ['ignored', words('x')],
 ];
 
 /** A heading's role is that of the first list that holds one of its words, in this order. */
@@ -38,7 +39,7 @@ const BY_WORD: [HeadingRole, Set<string>][] = [
   ],
   ['unit', words('unit units einheit unité')],
   ['quantity', words('param parameter variable')],
-  ['ignored', words('agency name nm river stream watercourse lat latitude lon long longitude tz timezone x')],
+  ['ignored', words('agency name nm river stream watercourse lat latitude lon long longitude tz timezone')],
   ['date', words('date datetime datum timestamp fecha dato data dates time')],
   [
     'value',
@@ -70,6 +71,7 @@ function headingWords(heading: string): string[] {
 
 /** What a column holds, judged by its heading alone. A heading that is nothing but a flow unit is a flow. */
 export function roleOfHeading(heading: string): HeadingRole {
+  if (DAILY_DISCHARGE.test(heading)) return 'value';
   const found = headingWords(heading);
   const whole = found.join(' ');
   for (const [role, list] of EXACT) if (list.has(whole)) return role;

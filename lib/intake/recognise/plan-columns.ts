@@ -55,7 +55,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const required = Math.max(...places.date, places.station, places.value, places.where) + 1;
   const dateTexts = places.date.length === 1 ? data.map(({ fields }) => fields[places.date[0]] ?? '') : [];
   const warnings: string[] = [];
-  if (options.station && mapping.station.from === 'column') {
+  if (options.station && (mapping.station.from === 'column' || wide)) {
     warnings.push(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
   }
   if (wide) warnings.push(...unreadColumns(header ?? [], wide, places.date));

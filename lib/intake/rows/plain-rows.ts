@@ -1,5 +1,6 @@
 import type { CodeTable } from '../code-table.ts';
 import { dayOfParts, NO_DAY } from '../dates.ts';
+import { SPARE_BYTES } from '../file-blocks.ts';
 import { POWERS_OF_TEN } from '../numbers.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import type { StationCodes } from '../station-codes.ts';
@@ -12,12 +13,24 @@ enum Step {
   flag,
 }
 
+/** Bytes of a station code that are compared four at a time; a longer one is read thoroughly. */
+const LONGEST_CODE = SPARE_BYTES / 2;
+
 /** The quick way through long tables: a row that is as plain as nearly all are (`01013500,2001-03-09,12.5,A`: no quotes
  *  or blanks, an ISO date, a number of at most 15 digits) is read in one pass over its bytes, without looking for its
  *  fields first. Any other row is left to the thorough reader, which takes the very same rows in the same way. */
 export class PlainRows {
   private station = -1;
   private stationKey: Uint8Array = new Uint8Array(0);
+  private stationWords: Int32Array = new Int32Array(0);
+  /** the block last read from, to be looked at four bytes at a time */
+  private block: Uint8Array = new Uint8Array(0);
+  private view: DataView = new DataView(new ArrayBuffer(0));
+  /** bytes of the year and month of the date last read, and the day number before the month's first */
+  private yearWord = 0;
+  private monthWord = 0;
+  private monthStart = 0;
+  private monthLength = 0;
   private code = -1;
   private flagKey: Uint8Array = new Uint8Array(0);
 
@@ -56,6 +69,11 @@ export class PlainRows {
   read(bytes: Uint8Array, from: number, limit: number, line: number): number {
     const { steps, delimiter, lineEnd } = this;
     const last = steps.length - 1;
+    if (bytes !== this.block) {
+      this.block = bytes;
+      this.view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+    }
+    const view = this.view;
     let at = from;
     let day = NO_DAY;
     let value = 0;
@@ -67,20 +85,13 @@ export class PlainRows {
       const stop = step === last ? lineEnd : delimiter;
       switch (steps[step]) {
         case Step.date: {
-          const y1 = bytes[at] - 48;
-          const y2 = bytes[at + 1] - 48;
-          const y3 = bytes[at + 2] - 48;
-          const y4 = bytes[at + 3] - 48;
-          const m1 = bytes[at + 5] - 48;
-          const m2 = bytes[at + 6] - 48;
-          const d1 = bytes[at + 8] - 48;
-          const d2 = bytes[at + 9] - 48;
-          if (bytes[at + 4] !== 45 || bytes[at + 7] !== 45) return -1;
-          // As unsigned numbers, all bytes that are not digits lie above 9.
-          if (y1 >>> 0 > 9 || y2 >>> 0 > 9 || y3 >>> 0 > 9 || y4 >>> 0 > 9) return -1;
-          if (m1 >>> 0 > 9 || m2 >>> 0 > 9 || d1 >>> 0 > 9 || d2 >>> 0 > 9) return -1;
-          day = dayOfParts(y1 * 1000 + y2 * 100 + y3 * 10 + y4, m1 * 10 + m2, d1 * 10 + d2);
-          if (day <= NO_DAY) return -1;
+          // Nearly every date lies in the month of the date before it: eight equal bytes, and two digits to read.
+          const date = twoDigits(bytes, at + 8);
+          if (view.getInt32(at) !== this.yearWord || view.getInt32(at + 4) !== this.monthWord) {
+            if (!this.turnToMonth(bytes, at)) return -1;
+          }
+          if (date < 1 || date > this.monthLength) return -1;
+          day = this.monthStart + date;
           at += 10;
           break;
         }
@@ -110,15 +121,20 @@ export class PlainRows {
         }
         case Step.station: {
           const key = this.stationKey;
-          let same = 0;
-          while (same < key.length && bytes[at + same] === key[same]) same++;
-          if (this.station >= 0 && same === key.length && bytes[at + same] === stop) {
-            at += same;
-            break;
+          const words = this.stationWords;
+          let word = 0;
+          while (word < words.length && view.getInt32(at + word * 4) === words[word]) word++;
+          if (word === words.length && this.station >= 0) {
+            let same = word * 4;
+            while (same < key.length && bytes[at + same] === key[same]) same++;
+            if (same === key.length && bytes[at + same] === stop) {
+              at += same;
+              break;
+            }
           }
           stationStart = at;
           at = this.plainEnd(bytes, at, stop);
-          if (at <= stationStart) return -1;
+          if (at <= stationStart || at - stationStart > LONGEST_CODE) return -1;
           stationEnd = at;
           break;
         }
@@ -159,7 +175,29 @@ export class PlainRows {
 
   private turnToStation(bytes: Uint8Array, start: number, end: number, line: number): void {
     this.station = this.parts.stations.ofField(bytes, start, end, line);
-    this.stationKey = this.parts.stations.lastKey;
+    const key = this.parts.stations.lastKey;
+    this.stationKey = key;
+    const words = key.length >> 2;
+    if (this.stationWords.length !== words) this.stationWords = new Int32Array(words);
+    for (let word = 0; word < words; word++) this.stationWords[word] = this.view.getInt32(start + word * 4);
+  }
+
+  /** Reads year and month of an ISO date, `2001-03-`.
+   *  @returns false when it is none */
+  private turnToMonth(bytes: Uint8Array, at: number): boolean {
+    const century = twoDigits(bytes, at);
+    const year = twoDigits(bytes, at + 2);
+    const month = twoDigits(bytes, at + 5);
+    if (century < 0 || year < 0 || month < 0 || bytes[at + 4] !== 45 || bytes[at + 7] !== 45) return false;
+    const first = dayOfParts(century * 100 + year, month, 1);
+    if (first <= NO_DAY) return false;
+    let length = 28;
+    while (length < 31 && dayOfParts(century * 100 + year, month, length + 1) > NO_DAY) length++;
+    this.yearWord = this.view.getInt32(at);
+    this.monthWord = this.view.getInt32(at + 4);
+    this.monthStart = first - 1;
+    this.monthLength = length;
+    return true;
   }
 
   /** End of a field of plain text; −1 when it holds a quote, or has blanks around it. */
@@ -169,4 +207,12 @@ export class PlainRows {
     while (bytes[at] !== stop && bytes[at] > 32 && bytes[at] !== 34 && bytes[at] !== delimiter) at++;
     return bytes[at] === stop || bytes[at] === 13 ? at : -1;
   }
+}
+
+/** Two digits as a number; below 0 when they are none. */
+function twoDigits(bytes: Uint8Array, at: number): number {
+  const tens = bytes[at] - 48;
+  const ones = bytes[at + 1] - 48;
+  // As unsigned numbers, all bytes that are not digits lie above 9.
+  return tens >>> 0 <= 9 && ones >>> 0 <= 9 ? tens * 10 + ones : -1;
 }

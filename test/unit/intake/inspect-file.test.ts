@@ -58,3 +58,11 @@ test('inspectFile of a file that nothing can be made of has its problem and no m
   expect(seen).toMatchObject({ mapping: null, header: null, preview: [], valueCandidates: [] });
   expect(seen.problems[0].message).toMatch(/gauge.csv: the file is empty/);
 });
+
+test('inspectFile finds the date order, and asks for it where no date says it', async () => {
+  const decided = await inspect('date,flow_m3s\n1/2/2001,1\n1/13/2001,2\n');
+  expect(decided.mapping?.date).toEqual({ columns: [0], order: 'mdy' });
+  expect(decided.problems).toEqual([]);
+  const open = await inspect('date,flow_m3s\n1/2/2001,1\n');
+  expect(open.problems.map(({ problem }) => problem.needs)).toEqual(['date-order']);
+});

@@ -63,10 +63,16 @@ describe('long tables', () => {
     ['year, month, day columns', 'year,month,day,flow_m3s\n2001,1,30,2.5\n2001,01,31,0.125\n'],
     ['times of day', 'datetime,flow_m3s\n2001-01-30T00:00:00Z,2.5\n2001-01-31T00:00:00Z,0.125\n'],
     ['a column of units', 'date,value,unit\n2001-01-30,2.5,m3/s\n2001-01-31,0.125,m3/s\n'],
+    [
+      'headings of an agency’s series among commas',
+      'site,Date,X_00060_00003,X_00060_00003_cd\ng,2001-01-30,2.5,\ng,2001-01-31,0.125,\n',
+    ],
+    ['blank-padded rows with a header', 'year month day flow_m3s\n2001  1 30  2.5\n2001  1 31  0.125\n'],
+    ['a spreadsheet’s sep= line', 'sep=;\ndate;flow_m3s\n2001-01-30;2,5\n2001-01-31;0,125\n'],
     ['rows out of order', 'date,flow_m3s\n2001-01-31,0.125\n2001-01-30,2.5\n'],
   ])('readFlows reads %s', async (_, text) => {
     const { report, days } = await read(text, /no header/.test(_) ? { unit: 'm3/s' } : {});
-    expect(report).toMatchObject({ unit: 'm3/s', rows: 2, accepted: 2 });
+    expect(report).toMatchObject({ unit: /agency/.test(_) ? 'ft3/s' : 'm3/s', rows: 2, accepted: 2 });
     expect(days).toEqual({ '2001-01-30': [2.5, ''], '2001-01-31': [0.125, ''] });
   });
 
