@@ -134,9 +134,10 @@ export const PATHS = {
     },
   },
   '/api/regions/{region}/imports/{import}': {
+    parameters: [REGION, IMPORT],
+    get: { summary: 'The report of an import', responses: answers('report and mapping', json(anything)) },
     delete: {
       summary: 'Undo an import',
-      parameters: [REGION, IMPORT],
       responses: { '204': { description: 'it is undone' }, ...PROBLEM },
     },
   },

@@ -32,7 +32,7 @@ beforeEach(async () => {
   files = sampleFiles(`${place.folder}/given`);
   region = await createRegion({ name: 'Upper Wethe' });
   await take(files.registry, files.flows);
-});
+}, 60_000);
 
 async function take(...paths: string[]): Promise<void> {
   const given = paths.map((path) => ({ path, name: basename(path) }));

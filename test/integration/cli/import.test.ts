@@ -1,0 +1,138 @@
+import { readFileSync } from 'node:fs';
+import { afterAll, beforeEach, expect, test } from 'vitest';
+import { closePool } from '../../../lib/jobs/pool.ts';
+import { getRegion, listRegions } from '../../../lib/store/regions.ts';
+import { listStations, stationRecords } from '../../../lib/store/stations.ts';
+import { databaseContent } from '../jobs/database-content.ts';
+import { longRows, type SampleFiles, sampleFiles } from '../jobs/sample-files.ts';
+import { temporaryDatabase } from '../store/temporary-database.ts';
+import { runCommand } from './run-command.ts';
+
+const place = temporaryDatabase();
+afterAll(closePool);
+let files: SampleFiles;
+beforeEach(() => {
+  files = sampleFiles(`${place.folder}/given`);
+});
+
+const REGION = ['--region', 'Upper Wethe'];
+
+test('import makes the region, takes registry, layer and flows, and prints the report', async () => {
+  const { registry, layer, flows } = files;
+  const { code, stdout } = await runCommand('import', ...REGION, '--stations', registry, '--layer', layer, flows);
+  expect(code).toBe(0);
+  expect(stdout).toContain('stations.csv: registry, 4 stations');
+  expect(stdout).toContain('A1: 10958 values, 1980-01-01 to 2009-12-31, 0 missing');
+  const region = (await getRegion('upper-wethe'))!;
+  expect(await listStations(region.id)).toHaveLength(4);
+});
+
+test('import of the same registry again changes nothing, and of the same flows merges', async () => {
+  await runCommand('import', ...REGION, '--stations', files.registry, files.flows);
+  const region = (await getRegion('upper-wethe'))!;
+  const before = await stationRecords(region.id);
+  expect((await runCommand('import', ...REGION, '--stations', files.registry, files.flows)).code).toBe(0);
+  expect((await stationRecords(region.id)).map(({ hash }) => hash)).toEqual(before.map(({ hash }) => hash));
+});
+
+test('import with rejected rows ends with exit code 3 and writes all of them', async () => {
+  const bad = files.write('bad.csv', 'station,date,discharge_m3s\nA1,2001-01-01,3\nA1,2001-02-31,4\n');
+  const { code, stdout } = await runCommand('import', ...REGION, '--json', bad);
+  expect(code).toBe(3);
+  const [file] = JSON.parse(stdout).files;
+  expect(file).toMatchObject({ file: 'bad.csv', rows: 2, accepted: 1, rejectedTotal: 1, rejected: [{ row: 3 }] });
+  expect(file.stations).toEqual([
+    { code: 'A1', values: 1, missing: 0, first: '2001-01-01', last: '2001-01-01', zeros: 0, min: 3, max: 3 },
+  ]);
+  expect(readFileSync(file.rejectedFile, 'utf8')).toMatch(/^row,text,reason\r\n3,"A1,2001-02-31,4",/);
+});
+
+test('import --mapping, --unit and --station read a file that names neither', async () => {
+  const rows = longRows(['A1'])
+    .slice(0, 400)
+    .map((row) => {
+      const [, date, flow] = row.split(',');
+      return `${date.replaceAll('-', '')} ${flow.padStart(10)}`;
+    });
+  const fixed = files.write('fixed.dly', `${rows.join('\n')}\n`);
+  const mapping = files.write(
+    'mapping.json',
+    JSON.stringify({
+      layout: 'fixed-width',
+      station: { from: 'file-name' },
+      date: {
+        columns: [
+          [0, 4],
+          [4, 6],
+          [6, 8],
+        ],
+        order: 'ymd',
+      },
+      value: { slice: [9, 19] },
+      flag: null,
+      unit: 'L/s',
+      missing: ['-99'],
+      decimal: '.',
+    }),
+  );
+  const { code, stdout, stderr } = await runCommand('import', ...REGION, '--mapping', mapping, '--json', fixed);
+  expect([code, stderr.includes('Nothing was changed')]).toEqual([0, false]);
+  expect(JSON.parse(stdout).files[0]).toMatchObject({
+    layout: 'fixed-width',
+    unit: 'L/s',
+    stations: [{ code: 'fixed', values: 400 }],
+  });
+});
+
+test('a bad file fails with exit code 1, names file and remedy, and changes nothing', async () => {
+  await runCommand('import', ...REGION, files.flows);
+  const before = databaseContent(place.path);
+  const empty = files.write('empty.csv', '');
+  const { code, stdout, stderr } = await runCommand('import', ...REGION, '--layer', files.layer, empty);
+  expect([code, stdout]).toEqual([1, '']);
+  expect(stderr).toContain('empty.csv');
+  expect(stderr).toContain('Nothing was changed.');
+  expect(databaseContent(place.path)).toBe(before);
+});
+
+test('a failed first import leaves no region behind', async () => {
+  const empty = files.write('empty.csv', '');
+  expect((await runCommand('import', '--region', 'Nowhere', empty)).code).toBe(1);
+  expect(await listRegions()).toEqual([]);
+});
+
+test('unlike values are refused without --revise and taken with it', async () => {
+  await runCommand('import', ...REGION, files.flows);
+  const other = files.write('other.csv', 'station,date,discharge_m3s\nA1,1980-01-01,99\n');
+  const refused = await runCommand('import', ...REGION, other);
+  expect(refused.code).toBe(1);
+  expect(refused.stderr).toContain('1980-01-01');
+  expect((await runCommand('import', ...REGION, '--revise', other)).code).toBe(0);
+});
+
+test.each([
+  ['no region', ['flows.csv'], 'region'],
+  ['no file', ['--region', 'A'], 'FLOWFILE'],
+  ['an unknown unit', ['--region', 'A', '--unit', 'gallons', 'flows.csv'], 'gallons'],
+  ['an unknown option', ['--region', 'A', '--overwrite', 'flows.csv'], '--overwrite'],
+])('import with %s ends with exit code 2', async (_what, argv, said) => {
+  const given = argv.map((word) => (word === 'flows.csv' ? files.flows : word));
+  const { code, stderr } = await runCommand('import', ...given);
+  expect(code).toBe(2);
+  expect(stderr).toContain(said);
+  expect(await listRegions()).toEqual([]);
+});
+
+test('a mapping with an unknown key is refused by name with exit code 2', async () => {
+  const mapping = files.write('mapping.json', JSON.stringify({ layoot: 'long' }));
+  const { code, stderr } = await runCommand('import', ...REGION, '--mapping', mapping, files.flows);
+  expect(code).toBe(2);
+  expect(stderr).toContain('layoot');
+});
+
+test('a file that is not there is named, and nothing is changed', async () => {
+  const { code, stderr } = await runCommand('import', ...REGION, '/nowhere/flows.csv');
+  expect(code).toBe(1);
+  expect(stderr).toContain('/nowhere/flows.csv');
+  expect(await listRegions()).toEqual([]);
+});
