@@ -25,7 +25,7 @@ export type Verdict =
 
 export const LOOPBACK_HOSTS = ['localhost', '127.0.0.1', '[::1]'] as const;
 const COOKIE = 'hungerstone-token';
-const UNSAFE_FREE = new Set(['GET', 'HEAD']);
+const READING = new Set(['GET', 'HEAD']);
 
 /** Judges one request; the first rule that speaks decides. */
 export function judgeRequest(request: RequestWords, policy: SafetyPolicy): Verdict {
@@ -35,7 +35,8 @@ export function judgeRequest(request: RequestWords, policy: SafetyPolicy): Verdi
   if (!policy.hosts.has(name)) {
     return { kind: 'refuse', status: 421, reason: `This server does not answer for ${name}; start it with --host.` };
   }
-  if (!UNSAFE_FREE.has(request.method) && !isFromOwnPage(request.headers, host)) {
+  if (!isDecodable(request.url)) return { kind: 'refuse', status: 400, reason: 'The address is not well formed.' };
+  if (!READING.has(request.method) && !isFromOwnPage(request.headers, host)) {
     return { kind: 'refuse', status: 403, reason: 'Only a page of this site may change something here.' };
   }
   return policy.token === null ? { kind: 'pass' } : judgeToken(request, policy.token);
@@ -45,6 +46,16 @@ export function judgeRequest(request: RequestWords, policy: SafetyPolicy): Verdi
 export function hostName(host: string | undefined): string | null {
   const match = /^(\[[0-9a-f:.]+\]|[a-z0-9._-]+)(?::\d{1,5})?$/i.exec(host ?? '');
   return match ? match[1].toLowerCase() : null;
+}
+
+/** Whether the percent signs of an address stand for letters: nothing behind us expects others. */
+function isDecodable(url: string): boolean {
+  try {
+    decodeURIComponent(url.split('?')[0]);
+    return true;
+  } catch {
+    return false;
+  }
 }
 
 /** Programs send neither header and are let through; browsers send at least one with everything but GET and HEAD. */
@@ -64,7 +75,7 @@ function judgeToken(request: RequestWords, token: string): Verdict {
   const query = request.url.indexOf('?');
   const parameters = new URLSearchParams(query < 0 ? '' : request.url.slice(query));
   const given = parameters.get('token');
-  if (given !== null && UNSAFE_FREE.has(request.method) && isSame(given, token)) {
+  if (given !== null && READING.has(request.method) && isSame(given, token)) {
     parameters.delete('token');
     const rest = parameters.toString();
     // One leading slash: two would make the browser take the first part of the path for another host.

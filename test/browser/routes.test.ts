@@ -22,7 +22,8 @@ let importRegion: string;
 const getJson = async (path: string) => (await fetch(serverUrl + path)).json();
 
 beforeAll(async () => {
-  const [demo] = (await getJson('/api/regions')) as { slug: string }[];
+  const regions = (await getJson('/api/regions')) as { slug: string; invented: boolean }[];
+  const [demo] = regions.filter(({ invented }) => invented);
   VALUES.region = demo.slug;
   const stations = await getJson(`/api/regions/${demo.slug}/stations`);
   VALUES.code = stations.features[0].properties.code;

@@ -102,7 +102,10 @@ describe('the running server', () => {
 });
 
 test('a server that others can reach asks for its token, takes it from the address once, and then knows the browser', async () => {
-  const trial = await startTrial(['--host', '0.0.0.0'], { HUNGERSTONE_TOKEN: 'stone & water' });
+  const trial = await startTrial(['--host', '0.0.0.0'], {
+    HUNGERSTONE_TOKEN: 'stone & water',
+    HUNGERSTONE_AS_BUILT: '1',
+  });
   try {
     const { url } = trial;
     expect((await ask('/', { url })).status).toBe(401);

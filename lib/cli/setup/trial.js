@@ -4,17 +4,17 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import process from 'node:process';
 import { inProject, ROOT } from './paths.js';
-import { SetupError, say } from './say.js';
+import { SetupError } from './say.js';
 
 /** The build that tests and checks look at, apart from the one that a running server uses. */
 const DIST = '.next-test';
 
 /** Builds the site if it has changed, and serves it on a free port with a database of its own that holds the demo region.
+ *  With `HUNGERSTONE_AS_BUILT: '1'` in `env` the build is taken as it is: for a second server beside a running one.
  *  @param args  further words for `serve`
  *  @param env   further environment of the server
  *  @returns     its address, its database, and `stop`, which also removes the database */
 export async function startTrial(args = [], env = {}) {
-  say('Starting a server for the tests; it builds the site if that has changed …');
   const folder = mkdtempSync(join(tmpdir(), 'hungerstone-trial-'));
   const database = `file:${join(folder, 'trial.db')}`;
   const server = spawn(process.execPath, [inProject('lib/cli/hungerstone.js'), 'start', '--port', '0', ...args], {

@@ -55,6 +55,12 @@ describe('judgeRequest by Host', () => {
   });
 });
 
+test('judgeRequest answers 400 to an address whose percent signs mean nothing, and reads the others', () => {
+  for (const url of ['/regions/%E0%A4%A', '/%', '/%zz?x=1']) expect(kindOf(request({}, 'GET', url)), url).toBe(400);
+  for (const url of ['/regions/m%C3%BChl%2fbach', '/?x=%zz', '/100%25'])
+    expect(kindOf(request({}, 'GET', url)), url).toBe('pass');
+});
+
 describe('judgeRequest of what changes something', () => {
   test.each(['POST', 'PUT', 'PATCH', 'DELETE', 'OPTIONS', 'UPGRADE'])(
     '%s passes from our own page, not from another',
