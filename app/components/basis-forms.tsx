@@ -212,38 +212,41 @@ function readYear(form: FormData): Record<string, unknown> {
 function PeriodFields({ basis, resolved }: FieldsProps) {
   const [first, last] = Array.isArray(basis.period) ? basis.period : (resolved.period ?? ['', '']);
   const [kind, setKind] = useState(basis.period === null ? 'own' : basis.period === 'common' ? 'common' : 'years');
+  const years = (
+    <span className={styles.pair}>
+      <YearField name="first" label="First low-flow year" value={first} onFocus={() => setKind('years')} />
+      to
+      <YearField name="last" label="Last low-flow year" value={last} onFocus={() => setKind('years')} />
+    </span>
+  );
   return (
-    <>
-      <Choices
-        name="period"
-        value={kind}
-        onChoose={setKind}
-        options={[
-          ['common', 'The common period', 'The years that give the most stations × years.'],
-          ['years', 'From year to year', ''],
-          ['own', 'Each station’s own years', 'Periods then differ, and so may what made the trend.'],
-        ]}
-      />
-      <div className={styles.pair}>
-        <input
-          name="first"
-          aria-label="First low-flow year"
-          inputMode="numeric"
-          defaultValue={first}
-          onFocus={() => setKind('years')}
-          className={styles.number}
-        />
-        to
-        <input
-          name="last"
-          aria-label="Last low-flow year"
-          inputMode="numeric"
-          defaultValue={last}
-          onFocus={() => setKind('years')}
-          className={styles.number}
-        />
-      </div>
-    </>
+    <Choices
+      name="period"
+      legend="Low-flow years, each named by the year in which it begins"
+      value={kind}
+      onChoose={setKind}
+      options={[
+        ['common', 'The common period', 'The years that give the most stations × years.'],
+        ['years', 'These years', ''],
+        ['own', 'Each station’s own years', 'Periods then differ, and so may what made the trend.'],
+      ]}
+      under={{ years }}
+    />
+  );
+}
+
+function YearField(props: { name: string; label: string; value: number | string; onFocus: () => void }) {
+  const { name, label, value, onFocus } = props;
+  return (
+    <input
+      name={name}
+      aria-label={label}
+      inputMode="numeric"
+      autoComplete="off"
+      defaultValue={value}
+      onFocus={onFocus}
+      className={styles.number}
+    />
   );
 }
 
@@ -281,27 +284,32 @@ interface ChoicesProps {
   /** value, words, what it means */
   options: [string, string, string][];
   onChoose?: (value: string) => void;
+  /** fields that belong to an option */
+  under?: Record<string, ReactNode>;
 }
 
-function Choices({ name, value, legend, options, onChoose }: ChoicesProps) {
+function Choices({ name, value, legend, options, onChoose, under = {} }: ChoicesProps) {
   return (
     <fieldset className={styles.set}>
       <legend className={legend ? undefined : 'visually-hidden'}>{legend ?? name}</legend>
       {options.map(([option, words, meaning]) => (
-        <label key={option} className={styles.choice}>
-          <input
-            type="radio"
-            name={name}
-            value={option}
-            {...(onChoose
-              ? { checked: value === option, onChange: () => onChoose(option) }
-              : { defaultChecked: value === option })}
-          />
-          <span>
-            {words}
-            {meaning && <small>{meaning}</small>}
-          </span>
-        </label>
+        <div key={option} className={styles.option}>
+          <label className={styles.choice}>
+            <input
+              type="radio"
+              name={name}
+              value={option}
+              {...(onChoose
+                ? { checked: value === option, onChange: () => onChoose(option) }
+                : { defaultChecked: value === option })}
+            />
+            <span>
+              {words}
+              {meaning && <small>{meaning}</small>}
+            </span>
+          </label>
+          {under[option]}
+        </div>
       ))}
     </fieldset>
   );

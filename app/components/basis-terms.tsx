@@ -50,7 +50,7 @@ export function BasisTerms({ parts, basis, base, resolved }: BasisTermsProps) {
       <p className={styles.sentence}>
         {parts.map((part) => (part.term ? term(part.term, part.text) : part.text))}{' '}
         <span className={styles.small}>
-          Shown in {term('units', basis.units === 'metric' ? 'metric units' : 'US units')}.
+          In {term('units', basis.units === 'metric' ? 'metric units' : 'US units')}.
           {changed && (
             <>
               {' '}

@@ -10,8 +10,8 @@ export interface IntervalScale {
 export function intervalScale(ends: (number | null)[]): IntervalScale {
   const known = ends.filter((end): end is number => end !== null && Number.isFinite(end)).sort((a, b) => a - b);
   if (known.length === 0) return { low: -1, high: 1 };
-  // a few wide intervals must not flatten all others: the outer 2 % of ends may be cut
-  const cut = Math.floor(known.length * 0.02);
+  // a few wide intervals must not flatten all others: the outer 1 % of ends may be cut
+  const cut = Math.floor(known.length * 0.01);
   const low = Math.min(0, known[cut]);
   const high = Math.max(0, known[known.length - 1 - cut]);
   const pad = (high - low || 1) * 0.06;

@@ -1,10 +1,10 @@
 'use client';
 import dynamic from 'next/dynamic';
 import { useQueryStates } from 'nuqs';
-import { useCallback, useMemo, useState } from 'react';
-import { Group, Panel, Separator } from 'react-resizable-panels';
+import { startTransition, useCallback, useMemo, useState } from 'react';
 import type { Units } from '@/app/components/format';
 import { apiHref } from '@/app/components/links';
+import { SplitPanes } from '@/app/components/split-panes';
 import type { Basis } from '@/lib/basis';
 import { Legend } from './_map/legend.tsx';
 import type { GroundSource } from './_map/use-ground.ts';
@@ -12,7 +12,7 @@ import { RankingPanel } from './_ranking/ranking-panel.tsx';
 import { createHoverStore } from './hover-store.ts';
 import type { MapRow } from './map-row.ts';
 import styles from './map-screen.module.css';
-import { type MapView, mapState } from './map-state.ts';
+import { type MapView, mapState, type Tab, USUAL_SPLIT } from './map-state.ts';
 import { hasPlace, matcher } from './row-filter.ts';
 import { SmallScreen } from './small-screen.tsx';
 import { useIsNarrow } from './use-is-narrow.ts';
@@ -52,7 +52,13 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
   }, [rows, state.q]);
 
   const select = useCallback((station: string | null) => void setState({ station }), [setState]);
+  const setFollow = useCallback((follow: boolean) => void setState({ follow }), [setState]);
+  const setSearch = useCallback((q: string) => void setState({ q }), [setState]);
+  const setTab = useCallback((tab: Tab) => void setState({ tab }), [setState]);
   const showView = useCallback((view: MapView | null) => void setState({ view }), [setState]);
+
+  // the lists follow in slices of a few milliseconds: the map never waits for them
+  const showInView = useCallback((codes: Set<string>) => startTransition(() => setInView(codes)), []);
 
   const ground = useMemo<GroundSource[]>(
     () =>
@@ -64,32 +70,34 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
     [layers, region.slug],
   );
 
+  const hasPlaces = useMemo(() => rows.some(hasPlace), [rows]);
   const map = (
-    <section aria-label="Map" className={styles.mapBox}>
-      <StationMap
-        regionName={region.name}
-        slug={region.slug}
-        invented={region.invented}
-        rows={rows}
-        found={found}
-        ground={ground}
-        tiles={region.tileUrl ? { url: region.tileUrl, attribution: region.tileAttribution ?? '' } : null}
-        units={units}
-        hover={hover}
-        selected={state.station}
-        onSelect={select}
-        view={state.view}
-        onView={showView}
-        onInView={setInView}
-      />
-      {rows.some(hasPlace) ? (
-        <Legend rows={rows} startOpen={!narrow} key={narrow ? 'narrow' : 'wide'} />
-      ) : (
-        <p className={styles.noPlaces}>
-          No station has coordinates, so the map has nothing to show. The ranking works without; a registry with
-          latitude and longitude puts the stations here.
-        </p>
-      )}
+    <section aria-label="Map" className={styles.mapColumn}>
+      <div className={styles.mapBox}>
+        <StationMap
+          regionName={region.name}
+          slug={region.slug}
+          invented={region.invented}
+          rows={rows}
+          found={found}
+          ground={ground}
+          tiles={region.tileUrl ? { url: region.tileUrl, attribution: region.tileAttribution ?? '' } : null}
+          units={units}
+          hover={hover}
+          selected={state.station}
+          onSelect={select}
+          view={state.view}
+          onView={showView}
+          onInView={showInView}
+        />
+        {!hasPlaces && (
+          <p className={styles.noPlaces}>
+            No station has coordinates, so the map has nothing to show. The ranking works without; a registry with
+            latitude and longitude puts the stations here.
+          </p>
+        )}
+      </div>
+      {hasPlaces && <Legend rows={rows} startOpen={!narrow} key={narrow ? 'narrow' : 'wide'} />}
     </section>
   );
 
@@ -101,11 +109,11 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
       found={found}
       inView={inView}
       follow={state.follow}
-      onFollow={(follow) => void setState({ follow })}
+      onFollow={setFollow}
       search={state.q}
-      onSearch={(q) => void setState({ q })}
+      onSearch={setSearch}
       tab={state.tab}
-      onTab={(tab) => void setState({ tab })}
+      onTab={setTab}
       rankBy={rankBy}
       units={units}
       span={span}
@@ -117,14 +125,14 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
 
   if (narrow) return <SmallScreen map={map} ranking={ranking} />;
   return (
-    <Group orientation="horizontal" className={styles.group} id="map-and-ranking">
-      <Panel id="map" defaultSize="44%" minSize="18%" className={styles.panel}>
-        {map}
-      </Panel>
-      <Separator id="divider" className={styles.divider} aria-label="Divider between map and ranking" />
-      <Panel id="ranking" defaultSize="56%" minSize="22%" className={styles.panel}>
-        {ranking}
-      </Panel>
-    </Group>
+    <SplitPanes
+      label="Divider between map and ranking"
+      share={state.split}
+      onShare={(split) => void setState({ split })}
+      limits={[20, 75]}
+      usual={USUAL_SPLIT}
+      first={map}
+      second={ranking}
+    />
   );
 }

@@ -1,4 +1,4 @@
-import { createParser, parseAsBoolean, parseAsString, parseAsStringLiteral } from 'nuqs';
+import { createParser, parseAsBoolean, parseAsInteger, parseAsString, parseAsStringLiteral } from 'nuqs';
 
 export interface MapView {
   latitude: number;
@@ -21,6 +21,9 @@ export const viewText = ({ latitude, longitude, zoom }: MapView): string =>
 export const TABS = ['ranked', 'drying', 'unranked'] as const;
 export type Tab = (typeof TABS)[number];
 
+/** Share of the width that the map has, percent. */
+export const USUAL_SPLIT = 44;
+
 /** The screen's state in its address. */
 export const mapState = {
   view: createParser<MapView>({ parse: parseView, serialize: viewText, eq: (a, b) => viewText(a) === viewText(b) }),
@@ -28,4 +31,5 @@ export const mapState = {
   follow: parseAsBoolean.withDefault(true),
   tab: parseAsStringLiteral(TABS).withDefault('ranked'),
   q: parseAsString.withDefault(''),
+  split: parseAsInteger.withDefault(USUAL_SPLIT),
 };

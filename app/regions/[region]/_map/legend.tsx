@@ -1,5 +1,6 @@
 'use client';
 import { useState } from 'react';
+import { fixed } from '@/app/components/format';
 import type { Needle } from '@/app/components/needle';
 import { needleOf, PERCENT_AT_45_DEGREES } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
@@ -44,21 +45,21 @@ export function Legend({ rows, startOpen }: { rows: MapRow[]; startOpen: boolean
         </svg>
       </button>
       {open && (
-        <>
-          <ul>
-            {ENTRIES.map(({ words, needle, holds }) => {
-              const number = needles.filter(holds).length;
-              return number === 0 ? null : (
-                <li key={words}>
-                  <NeedleMark needle={needle} size={26} />
-                  <span>{words}</span>
-                  <span className={styles.count}>{number}</span>
-                </li>
-              );
-            })}
-          </ul>
-          <p>Steeper needle, faster change: {PERCENT_AT_45_DEGREES} % per decade stands at 45°.</p>
-        </>
+        <ul>
+          {ENTRIES.map(({ words, needle, holds }) => {
+            const number = needles.filter(holds).length;
+            return number === 0 ? null : (
+              <li key={words}>
+                <NeedleMark needle={needle} size={24} />
+                {words}
+                <b>{fixed(number)}</b>
+              </li>
+            );
+          })}
+          <li className={styles.tilt}>
+            The steeper, the faster: {PERCENT_AT_45_DEGREES}&nbsp;% a decade stands at 45°
+          </li>
+        </ul>
       )}
     </div>
   );

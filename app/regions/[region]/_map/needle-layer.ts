@@ -35,7 +35,7 @@ export class NeedleLayer extends L.Layer {
   private map: L.Map | null = null;
 
   constructor(private palette: Palette) {
-    super({ pane: 'needles' });
+    super();
     for (const canvas of [this.base, this.top]) {
       canvas.className = 'leaflet-zoom-animated';
       canvas.style.pointerEvents = 'none';
@@ -45,7 +45,7 @@ export class NeedleLayer extends L.Layer {
 
   override onAdd(map: L.Map): this {
     this.map = map;
-    this.getPane()?.append(this.base, this.top);
+    map.getPane('needles')?.append(this.base, this.top);
     this.project();
     this.draw();
     return this;

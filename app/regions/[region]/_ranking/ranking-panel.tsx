@@ -1,6 +1,6 @@
 'use client';
 import { Tabs } from '@base-ui/react/tabs';
-import { useDeferredValue, useMemo } from 'react';
+import { memo, useMemo } from 'react';
 import { Cautions } from '@/app/components/cautions';
 import { fixed, type Units } from '@/app/components/format';
 import ui from '@/app/components/ui.module.css';
@@ -36,20 +36,18 @@ interface RankingPanelProps {
 }
 
 /** The lists beside the map: ranked, drying, not ranked; what is counted; search, following the map, files. */
-export function RankingPanel(props: RankingPanelProps) {
+export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps) {
   const { slug, regionName, rows, found, inView, follow, onFollow, search, onSearch, tab, onTab } = props;
   const { rankBy, units, span, hover, selected, onSelect } = props;
   const lists = useMemo(() => byTab(rows), [rows]);
-  // the map never waits for the table: while it is dragged the lists may lag a frame behind
-  const frame = useDeferredValue(inView);
   const shown = useMemo(() => {
     // a station without a place is never out of view
     const isShown = (row: MapRow) =>
-      (found === null || found.has(row.code)) && (!follow || frame === null || !hasPlace(row) || frame.has(row.code));
+      (found === null || found.has(row.code)) && (!follow || inView === null || !hasPlace(row) || inView.has(row.code));
     return byTab(rows.filter(isShown));
-  }, [rows, found, follow, frame]);
+  }, [rows, found, follow, inView]);
   const placed = useMemo(() => rows.filter(hasPlace), [rows]);
-  const rankedInView = frame === null ? null : lists.ranked.filter((row) => frame.has(row.code)).length;
+  const rankedInView = inView === null ? null : lists.ranked.filter((row) => inView.has(row.code)).length;
   const table = { slug, units, span, hover, selected, onSelect };
 
   return (
@@ -132,7 +130,7 @@ export function RankingPanel(props: RankingPanelProps) {
       <Cautions />
     </section>
   );
-}
+});
 
 function byTab(rows: MapRow[]): Record<Tab, MapRow[]> {
   const lists: Record<Tab, MapRow[]> = { ranked: [], drying: [], unranked: [] };

@@ -136,9 +136,9 @@ export function RankingTable(props: RankingTableProps) {
               Years
             </th>
             <th scope="col" className={styles.minima}>
+              Annual minima
               <span className={styles.ends}>
                 <span>{span[0]}</span>
-                <span>Annual minima</span>
                 <span>{span[1]}</span>
               </span>
             </th>

@@ -48,7 +48,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
           {row.name}
         </Link>
         <span className={styles.river}>
-          {row.river || row.code}
+          {subtitle(row)}
           {row.note && (
             <span title={row.note} className={styles.note}>
               {' '}
@@ -65,8 +65,12 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
       <td className={styles.change}>
         <span className={`${styles.figure} ${tone ?? ''}`}>{words.text(row.figure.value)}</span>
         <span className={styles.trend}>
-          {row.trend && <>{significant ? <b className={tone}>{trendWords[row.trend]}</b> : trendWords[row.trend]}, </>}p{' '}
-          {pValue(row.pAdjusted)}
+          {row.trend && (
+            <span className={significant ? `${styles.sure} ${tone}` : undefined}>{trendWords[row.trend]}</span>
+          )}
+          <span className={styles.p}>
+            {row.trend && ', '}p {pValue(row.pAdjusted)}
+          </span>
         </span>
       </td>
       {scale && (
@@ -85,3 +89,8 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
     </tr>
   );
 });
+
+/** The river where the name does not say it already, and the code. */
+function subtitle({ name, river, code }: MapRow): string {
+  return river && !name.toLowerCase().includes(river.toLowerCase()) ? `${river} · ${code}` : code;
+}
