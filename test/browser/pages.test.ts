@@ -9,7 +9,7 @@ beforeAll(async () => {
   const regions = (await (await fetch(`${serverUrl}/api/regions`)).json()) as { slug: string; invented: boolean }[];
   region = regions.filter(({ invented }) => invented)[0].slug;
   const stations = await (await fetch(`${serverUrl}/api/regions/${region}/stations`)).json();
-  station = stations.features[0].properties.code;
+  station = stations.features[0].properties.station_code;
 });
 
 const PAGES: [string, () => string][] = [
@@ -27,6 +27,8 @@ describe.each(PAGES)('the page %s', (_, pathOf) => {
       const page = await newPage(pathOf(), { colorScheme });
       await hydrated(page);
       await page.waitForLoadState('networkidle');
+      // A page that is sent in pieces answers 200 before it knows that it has nothing to show.
+      expect(await page.getByText(/^There is no/).count()).toBe(0);
       expect(await accessibilityProblems(page)).toEqual([]);
     },
   );

@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import { beforeAll, describe, expect, inject, test } from 'vitest';
+import { beforeAll, describe, expect, inject, test, vi } from 'vitest';
 
 // Every route that the production build has, by the build's own list: a new one without a line here fails.
 
@@ -15,7 +15,7 @@ const VALUES: Record<string, string> = {};
 const OF_THE_IMPORT = /\[import\]|\[job\]/;
 
 /** What a route needs beside its path. */
-const QUERIES: Record<string, string> = { '/map-outline': '?west=-10&south=40&east=10&north=60' };
+const QUERIES: Record<string, string> = { '/map-outline': '?box=-10,40,10,60' };
 
 let importRegion: string;
 
@@ -26,13 +26,13 @@ beforeAll(async () => {
   const [demo] = regions.filter(({ invented }) => invented);
   VALUES.region = demo.slug;
   const stations = await getJson(`/api/regions/${demo.slug}/stations`);
-  VALUES.code = stations.features[0].properties.code;
+  VALUES.code = stations.features[0].properties.station_code;
   VALUES.layer = String((await getJson(`/api/regions/${demo.slug}/layers`))[0].id);
 
   const made = await fetch(`${serverUrl}/api/regions`, {
     method: 'POST',
     headers: { 'content-type': 'application/json' },
-    body: JSON.stringify({ name: 'Routes' }),
+    body: JSON.stringify({ name: `Routes ${Date.now()}` }),
   });
   importRegion = (await made.json()).slug;
   const form = new FormData();
@@ -41,11 +41,12 @@ beforeAll(async () => {
     new Blob(['station,date,flow\nA,2001-05-01,1.5\nA,2001-05-02,wet\nA,2001-05-03,1.25\n']),
     'flows.csv',
   );
-  form.set('choices', JSON.stringify({ unit: 'm3/s' }));
+  form.set('choices', JSON.stringify({ all: { unit: 'm3/s' } }));
   const sent = await fetch(`${serverUrl}/api/regions/${importRegion}/imports`, { method: 'POST', body: form });
   expect(sent.status, await sent.clone().text()).toBe(202);
   VALUES.job = (await sent.json()).id;
-  await expect.poll(async () => (await getJson(`/api/jobs/${VALUES.job}`)).state, { timeout: 20_000 }).toBe('done');
+  const finished = async () => expect((await getJson(`/api/jobs/${VALUES.job}`)).state).toBe('done');
+  await vi.waitFor(finished, { timeout: 20_000, interval: 100 });
   VALUES.import = String((await getJson(`/api/regions/${importRegion}/imports`))[0].id);
 });
 
@@ -71,12 +72,12 @@ describe('answers 200', () => {
   test.each(ROUTES)('%s', async (route) => {
     const values = OF_THE_IMPORT.test(route) ? { ...VALUES, region: importRegion } : VALUES;
     const path = route.replace(/\[(\w+)\]/g, (_, name: string) => {
-      expect(Object.keys(values), `a value for [${name}] of ${route}`).toContain(name);
+      expect(values[name], `a value for [${name}] of ${route}`).toEqual(expect.stringMatching(/^(?!undefined)./));
       return encodeURIComponent(values[name]);
     });
     const answer = await fetch(serverUrl + path + (QUERIES[route] ?? ''), { signal: AbortSignal.timeout(30_000) });
     const text = await answer.text();
     expect(answer.status, text.slice(0, 300)).toBe(200);
-    expect(text).not.toBe('');
+    expect(text.length).toBeGreaterThan(0);
   });
 });
