@@ -16,13 +16,21 @@ export function csvRecords(text: string): string[] {
 
 /** The fields of one record, unquoted. */
 export function csvFields(record: string): string[] {
+  const text = record.replace(/\r?\n$/, '');
   const fields: string[] = [];
-  const pattern = /(?:^|,)(?:"((?:[^"]|"")*)"|([^",]*))/g;
-  for (const match of record.replace(/\r?\n$/, '').matchAll(pattern)) {
-    fields.push(match[1] === undefined ? match[2] : match[1].replaceAll('""', '"'));
+  let quoted = false;
+  let start = 0;
+  for (let i = 0; i <= text.length; i++) {
+    if (text[i] === '"') quoted = !quoted;
+    else if (i === text.length || (text[i] === ',' && !quoted)) {
+      fields.push(unquoted(text.slice(start, i)));
+      start = i + 1;
+    }
   }
   return fields;
 }
+
+const unquoted = (field: string): string => (field.startsWith('"') ? field.slice(1, -1).replaceAll('""', '"') : field);
 
 /** The table with only the rows of these stations, every kept row byte for byte as it was, header first.
  *  @throws RangeError when the table has no station_code column */

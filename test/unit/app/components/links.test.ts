@@ -1,0 +1,30 @@
+import { expect, test } from 'vitest';
+import { apiHref, BASIS_PARAMETERS, carried, regionHref, stationHref } from '@/app/components/links';
+import { BASIS_KEYS } from '@/lib/basis';
+
+test('links carry every key of the basis', () => {
+  expect([...BASIS_PARAMETERS]).toEqual(BASIS_KEYS);
+});
+
+test('regionHref keeps basis and map view and drops what belongs to one page', () => {
+  expect(regionHref('kestrane-basin', 'curves', 'days=30&view=1,2,8&axis=log')).toBe(
+    '/regions/kestrane-basin/curves?days=30&view=1,2,8',
+  );
+  expect(regionHref('kestrane-basin', 'map')).toBe('/regions/kestrane-basin');
+});
+
+test('stationHref takes codes with slashes and spaces as they are', () => {
+  expect(stationHref('r', 'A/1 b', 'alpha=0.05')).toBe('/regions/r/stations/A%2F1%20b?alpha=0.05');
+});
+
+test('apiHref takes only the basis along', () => {
+  expect(apiHref('r', 'ranking', 'station=7&days=30&exclude=ice,suspect', 'csv')).toBe(
+    '/api/regions/r/ranking?days=30&exclude=ice,suspect&format=csv',
+  );
+});
+
+test('carried leaves its input as it was', () => {
+  const query = new URLSearchParams('days=30&axis=log');
+  carried(query);
+  expect(query.toString()).toBe('days=30&axis=log');
+});
