@@ -5,6 +5,9 @@ export class ByteTable {
   private hashes: Int32Array = new Int32Array(64);
   /** index + 1 of the key in each slot, 0 when free; open addressing */
   private slots: Int32Array = new Int32Array(128);
+  /** index of the key that came after each key last time: a file that goes day by day through its stations names them
+   *  in the same order every day */
+  private followers: Int32Array = new Int32Array(64);
   private last: Uint8Array = new Uint8Array(0);
   private lastIndex = -1;
 
@@ -30,7 +33,14 @@ export class ByteTable {
       while (at < last.length && last[at] === bytes[start + at]) at++;
       if (at === last.length) return this.lastIndex;
     }
-    return this.find(bytes, start, end);
+    const before = this.lastIndex;
+    if (before >= 0) {
+      const follower = this.followers[before];
+      if (equals(this.keys[follower], bytes, start, end)) return this.remember(follower);
+    }
+    const index = this.find(bytes, start, end);
+    if (before >= 0) this.followers[before] = index;
+    return index;
   }
 
   private find(bytes: Uint8Array, start: number, end: number): number {
@@ -67,6 +77,9 @@ export class ByteTable {
   private grow(): void {
     const hashes = new Int32Array(this.hashes.length * 2);
     hashes.set(this.hashes);
+    const followers = new Int32Array(hashes.length);
+    followers.set(this.followers);
+    this.followers = followers;
     const known = this.hashes.length;
     this.hashes = hashes;
     this.slots = new Int32Array(hashes.length * 2);

@@ -61,10 +61,13 @@ export interface BlockReading {
 export async function readBlocks(path: string, reading: BlockReading): Promise<void> {
   const handle = await openToRead(path, reading.file);
   try {
-    let current = new Uint8Array(BLOCK + LONGEST_LINE + SPARE_BYTES);
-    let other = new Uint8Array(BLOCK + LONGEST_LINE + SPARE_BYTES);
+    const { size } = await handle.stat();
+    const block = Math.max(1, Math.min(BLOCK, size));
+    const longest = Math.min(LONGEST_LINE, size);
+    let current = new Uint8Array(block + longest + SPARE_BYTES);
+    let other = new Uint8Array(block + longest + SPARE_BYTES);
     let carried = 0;
-    let next = handle.read(current, 0, BLOCK, null);
+    let next = handle.read(current, 0, block, null);
     for (;;) {
       const { bytesRead } = await next;
       reading.signal?.throwIfAborted();
@@ -73,9 +76,9 @@ export async function readBlocks(path: string, reading: BlockReading): Promise<v
       reading.onBytes?.(current.subarray(carried, filled));
       const end = Buffer.from(current.buffer, 0, filled).lastIndexOf(reading.lineEnd) + 1;
       carried = filled - end;
-      if (carried <= LONGEST_LINE) {
+      if (carried <= longest) {
         other.set(current.subarray(end, filled), 0);
-        next = handle.read(other, carried, BLOCK, null);
+        next = handle.read(other, carried, block, null);
       }
       // The visit may throw: the fetch under way must have ended before the file is closed.
       const goOn = await visitWhileFetching(reading, current, end, next);
@@ -83,7 +86,7 @@ export async function readBlocks(path: string, reading: BlockReading): Promise<v
         await next;
         return;
       }
-      if (carried > LONGEST_LINE) throw longLineError(reading.file, reading.nextLine(), current.subarray(end, filled));
+      if (carried > longest) throw longLineError(reading.file, reading.nextLine(), current.subarray(end, filled));
       [current, other] = [other, current];
     }
     if (carried > 0) reading.visit(current, 0, carried);
@@ -125,11 +128,11 @@ async function visitWhileFetching(
 }
 
 /** What is said of a line that is too long to be a row. */
-export function longLineError(file: string, row: number, start: Uint8Array): IntakeError {
+export function longLineError(file: string, row: number, start?: Uint8Array): IntakeError {
   return new IntakeError({
     file,
     row,
-    value: `${Buffer.from(start.subarray(0, 40)).toString('latin1')}…`,
+    ...(start === undefined ? {} : { value: `${Buffer.from(start.subarray(0, 40)).toString('latin1')}…` }),
     message: `the line is longer than ${LONGEST_LINE / 1024} kB, so it cannot be a row of daily flows`,
     remedy: 'Check that the file is a table of text with line ends, one row a line',
   });

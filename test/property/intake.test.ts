@@ -6,7 +6,7 @@ import { parseDecimal } from '../../lib/intake/numbers.ts';
 import { readLayer } from '../../lib/intake/read-layer.ts';
 import { readRegistry } from '../../lib/intake/read-registry.ts';
 import { IntakeError } from '../../lib/intake/types.ts';
-import { read, withFile } from '../unit/intake/reading.ts';
+import { daysOf, read, withFile } from '../unit/intake/reading.ts';
 
 const decimal = fc.oneof(
   fc.tuple(fc.nat(999_999), fc.nat(999_999)).map(([whole, part]) => `${whole}.${part}`),
@@ -230,5 +230,51 @@ test('a row that is read is accepted or rejected, never lost', async () => {
       expect(days + duplicates).toBe(report.accepted);
     }),
     { numRuns: 120 },
+  );
+});
+
+test('plain rows and the same rows in quotes give the same values, codes and rejections', async () => {
+  const field = fc.record({
+    station: fc.constantFrom('A', 'B2', '01013500', '010135009', ''),
+    date: fc.oneof(
+      fc.integer({ min: -9_000, max: 8_000 }).map(isoDate),
+      fc.constantFrom(
+        '2001-02-29',
+        '2000-02-29',
+        '2001-1-05',
+        '1699-12-31',
+        '2001-12-32',
+        '2001-00-01',
+        '20010105',
+        '2001-01-0a',
+      ),
+    ),
+    value: fc.oneof(
+      decimal,
+      fc.constantFrom('', '.', '5.', '.5', '-1', '-0', '-999', 'Ice', 'x', '<2', '1e3', '00', '1234567890123456'),
+    ),
+    flag: fc.constantFrom('', 'A', 'A:e', 'P', '<'),
+  });
+  await fc.assert(
+    fc.asyncProperty(fc.array(field, { minLength: 1, maxLength: 40 }), async (rows) => {
+      const table = (wrap: (text: string) => string) =>
+        [
+          'station,date,flow_m3s,flag',
+          'Z,1990-01-01,1,A',
+          ...rows.map(({ station, date, value, flag }) => [station, date, value, flag].map(wrap).join(',')),
+        ].join('\n');
+      const outcome = (text: string) =>
+        read(text).then(
+          ({ report, parts }) => ({
+            ...report,
+            sha256: '',
+            days: parts.map(daysOf),
+            rejected: report.rejected.map(({ row, reason }) => [row, reason]),
+          }),
+          (error: unknown) => (error as IntakeError).message,
+        );
+      expect(await outcome(table((text) => text))).toEqual(await outcome(table((text) => `"${text}"`)));
+    }),
+    { numRuns: 150 },
   );
 });

@@ -1,11 +1,13 @@
+import { longLineError } from '../file-blocks.ts';
 import { columnPosition } from '../mapping.ts';
 import { type InspectOptions, IntakeError, type Layout, type Mapping } from '../types.ts';
 import { unitNamedIn } from '../units.ts';
 import { agencyColumns } from './agency-columns.ts';
 import { assignColumns, type ColumnRoles, type WideColumn } from './assign-columns.ts';
-import { columnFacts, looksLikeDate, usesDecimalComma } from './column-facts.ts';
+import { columnFacts, looksLikeDate } from './column-facts.ts';
 import { findTableStart, type TableStart } from './find-header.ts';
-import { findUnit, unitProblem } from './find-unit.ts';
+import { mappingProblem, problemsOf } from './plan-problems.ts';
+import { columnTexts, mappingOf, mostFrequent } from './recognised-mapping.ts';
 import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount } from './sample.ts';
 import type { TablePlan } from './table-plan.ts';
 
@@ -15,6 +17,8 @@ export interface PlanContext {
   marked: boolean;
   /** comment lines */
   remarks: string[];
+  /** the sample is the file, not only its first megabyte */
+  wholeFile: boolean;
 }
 
 /** A plan for rows whose fields are set apart by a delimiter, or by blanks (`delimiter` null). */
@@ -25,7 +29,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const rows = splitSample(body, splitter);
   const start = tableStart(rows);
   const data = rows.slice(start.firstRow);
-  refuseWithoutRows(file, rows, start, data);
+  refuseWithoutRows(file, rows, start, data, context.wholeFile);
   const { header } = start;
   const fieldCount = header?.length ?? usualCount(data);
   const remarks = [...context.remarks, ...body.slice(0, start.firstRow).map(({ text }) => text)];
@@ -81,8 +85,16 @@ function tableStart(rows: readonly SampleRow[]): TableStart {
   return findTableStart(rows, usualCount(rows));
 }
 
-function refuseWithoutRows(file: string, rows: SampleRow[], { header }: TableStart, data: SampleRow[]): void {
+function refuseWithoutRows(
+  file: string,
+  rows: SampleRow[],
+  { header }: TableStart,
+  data: SampleRow[],
+  wholeFile: boolean,
+): void {
   if (data.length > 0) return;
+  // A megabyte that holds a header and no whole row behind it.
+  if (!wholeFile && header !== null) throw longLineError(file, rows[rows.length - 1].line + 1);
   if (header !== null) {
     throw new IntakeError({
       file,
@@ -125,63 +137,6 @@ function layoutOf(roles: ColumnRoles, start: TableStart, delimiter: string | nul
   return delimiter === null ? 'whitespace' : 'long';
 }
 
-/** What was recognised, with what a person gave laid over it. */
-function mappingOf(
-  roles: ColumnRoles,
-  data: readonly SampleRow[],
-  found: {
-    header: string[] | null;
-    delimiter: string | null;
-    remarks: string[];
-    options: InspectOptions;
-    layout: Layout;
-  },
-): Mapping {
-  const { header, delimiter, remarks, options } = found;
-  const valueColumns = roles.wide?.map(({ value }) => value) ?? (roles.value === null ? [] : [roles.value]);
-  const valueTexts = data.flatMap(({ fields }) => valueColumns.map((column) => fields[column] ?? ''));
-  const column = (at: number | null) => (at === null ? null : { column: at });
-  const where = quantityFilter(roles, data, remarks);
-  return {
-    layout: found.layout,
-    station: stationOf(roles, options),
-    date: { columns: roles.date, order: roles.partsOrder ?? 'ymd' },
-    value: roles.wide ? null : column(roles.value),
-    flag: roles.wide ? null : column(roles.flag),
-    missing: [],
-    decimal: delimiter !== ',' && usesDecimalComma(valueTexts) ? ',' : '.',
-    ...(delimiter === null ? {} : { delimiter }),
-    ...(where ? { where } : {}),
-    ...options.mapping,
-    unit:
-      options.unit ??
-      options.mapping?.unit ??
-      findUnit({
-        headings: valueColumns.map((at) => header?.[at] ?? ''),
-        unitText: mostFrequent(columnTexts(data, roles.unitColumn ?? -1)),
-        remarks,
-      }),
-  };
-}
-
-function stationOf(roles: ColumnRoles, options: InspectOptions): Mapping['station'] {
-  if (roles.wide) return { from: 'header' };
-  if (roles.station !== null) return { from: 'column', column: roles.station };
-  return options.station ? { from: 'given', code: options.station } : { from: 'file-name' };
-}
-
-/** Files that hold several quantities number them in a column; a title line says which number is discharge. */
-function quantityFilter(roles: ColumnRoles, data: readonly SampleRow[], remarks: string[]): Mapping['where'] | null {
-  const column = roles.quantityColumn;
-  if (column === null) return null;
-  const titled = remarks
-    .map((text) => /(?:discharge|flow)[^=]*\(\s*\w+\s*=\s*(\w+)\s*\)/i.exec(text)?.[1])
-    .find(Boolean);
-  if (titled) return { column, equals: titled };
-  const texts = new Set(data.map(({ fields }) => fields[column] ?? ''));
-  return texts.size === 1 ? { column, equals: [...texts][0] } : null;
-}
-
 /** The columns of a wide table; with a mapping's layout "wide", every column that is not the date's. */
 function wideColumns(
   roles: ColumnRoles,
@@ -202,16 +157,6 @@ function wideColumns(
   }));
 }
 
-function columnTexts(data: readonly SampleRow[], column: number): string[] {
-  return column < 0 ? [] : data.map(({ fields }) => fields[column] ?? '').filter((text) => text !== '');
-}
-
-function mostFrequent(texts: readonly string[]): string {
-  const counts = new Map<string, number>();
-  for (const text of texts) counts.set(text, (counts.get(text) ?? 0) + 1);
-  return [...counts].sort((a, b) => b[1] - a[1])[0]?.[0] ?? '';
-}
-
 /** The fewest fields that a fair share of rows have: some files leave an empty flag off. The last row may be cut. */
 function leastFields(data: readonly SampleRow[], fieldCount: number): number {
   const rows = data.slice(0, -1);
@@ -229,61 +174,6 @@ function unreadColumns(header: readonly string[], wide: readonly WideColumn[], d
 
 function symbolColumn(header: readonly string[] | null, flag: number): boolean {
   return flag >= 0 && /^sym(bol)?$/i.test(header?.[flag]?.trim() ?? '');
-}
-
-function mappingProblem(file: string, message: string, value?: string): IntakeError {
-  return new IntakeError({
-    file,
-    ...(value ? { value } : {}),
-    message,
-    remedy: 'Choose the columns on the screen, or give a mapping such as {"value": {"column": "flow"}}',
-    needs: 'mapping',
-  });
-}
-
-function problemsOf(
-  file: string,
-  mapping: Mapping,
-  roles: ColumnRoles,
-  header: readonly string[] | null,
-  wide: readonly WideColumn[] | null,
-): IntakeError[] {
-  const problems: IntakeError[] = [];
-  const shown = header?.join(', ').slice(0, 200);
-  if (mapping.date.columns.length === 0) problems.push(mappingProblem(file, 'no column holds dates', shown));
-  if (wide ? wide.length === 0 : mapping.value === null) {
-    const message =
-      roles.candidates.length > 1 ? 'several columns may hold the flows' : 'no column is known to hold the flows';
-    problems.push(mappingProblem(file, message, shown));
-  }
-  if (roles.quantityColumn !== null && !mapping.where) {
-    const name = header?.[roles.quantityColumn] ?? '';
-    problems.push(
-      new IntakeError({
-        file,
-        value: name,
-        message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
-        remedy: `Give a mapping such as {"where": {"column": "${name}", "equals": "1"}}`,
-        needs: 'mapping',
-      }),
-    );
-  }
-  const twice = wide?.find(({ name }, at) => wide.findIndex((other) => other.name === name) < at);
-  if (twice) {
-    problems.push(
-      new IntakeError({
-        file,
-        value: twice.name,
-        message: 'two columns have the same heading, so a station would have two values a day',
-        remedy: 'Give each station one column',
-      }),
-    );
-  }
-  if (mapping.unit === null) {
-    const heading = mapping.value && 'column' in mapping.value ? mapping.value.column : null;
-    problems.push(unitProblem(file, typeof heading === 'number' ? (header?.[heading] ?? null) : heading));
-  }
-  return problems;
 }
 
 /** True when rows have a date and a flow and nearly all have the fields that they should. */

@@ -26,7 +26,7 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
   }
   refuseMarkup(body[0].text, body[0].line, file);
   const context = {
-    ...{ options, lineEnd, marked: hasUtf8Mark(head.bytes) },
+    ...{ options, wholeFile, lineEnd, marked: hasUtf8Mark(head.bytes) },
     remarks: lines.filter(({ text }) => text.startsWith('#')).map(({ text }) => text),
   };
   const asked = options.mapping?.layout;

@@ -1,6 +1,6 @@
 import type { DateOrder } from '../dates.ts';
 import type { LineSplitter } from '../rows/fields.ts';
-import type { IntakeError, KnownStation, Mapping, ValueCandidate } from '../types.ts';
+import type { IntakeError, Mapping, ValueCandidate } from '../types.ts';
 import type { WideColumn } from './assign-columns.ts';
 
 /** How a file is going to be read: the mapping, worked out to positions. */
@@ -34,17 +34,6 @@ export interface TablePlan {
   problems: IntakeError[];
   warnings: string[];
 }
-
-/** A part of a mapping that recognition could not fill, or a person must answer. */
-export interface Findings {
-  /** what is understood of the file so far */
-  mapping: Mapping;
-  header: string[] | null;
-  firstLine: number;
-  orderOpen: boolean;
-}
-
-export type KnownStations = readonly KnownStation[] | null;
 
 /** The three orders with an example each, for messages. */
 export const ORDER_WORDS: Record<DateOrder, string> = {

@@ -86,6 +86,9 @@ describe('files that are refused', () => {
     expect(first.problem.message).toMatch(/longer than 1024 kB/);
     const later = await refusal(`${GOOD}${long}\n`);
     expect(later.problem).toMatchObject({ row: 4 });
+    const afterHeader = await refusal(`date,flow_m3s\n${'1'.repeat(3 << 20)}`);
+    expect(afterHeader.problem.row).toBe(2);
+    expect(afterHeader.problem.message).toMatch(/longer than/);
   });
 
   test('readFlows refuses a file of which no row can be read, with the first reason', async () => {

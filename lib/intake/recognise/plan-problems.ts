@@ -1,0 +1,60 @@
+import { IntakeError, type Mapping } from '../types.ts';
+import type { ColumnRoles, WideColumn } from './assign-columns.ts';
+import { unitProblem } from './find-unit.ts';
+
+/** A question that a mapping answers. */
+export function mappingProblem(file: string, message: string, value?: string): IntakeError {
+  return new IntakeError({
+    file,
+    ...(value ? { value } : {}),
+    message,
+    remedy: 'Choose the columns on the screen, or give a mapping such as {"value": {"column": "flow"}}',
+    needs: 'mapping',
+  });
+}
+
+/** What stands against reading a table of columns as the mapping has it. */
+export function problemsOf(
+  file: string,
+  mapping: Mapping,
+  roles: ColumnRoles,
+  header: readonly string[] | null,
+  wide: readonly WideColumn[] | null,
+): IntakeError[] {
+  const problems: IntakeError[] = [];
+  const shown = header?.join(', ').slice(0, 200);
+  if (mapping.date.columns.length === 0) problems.push(mappingProblem(file, 'no column holds dates', shown));
+  if (wide ? wide.length === 0 : mapping.value === null) {
+    const message =
+      roles.candidates.length > 1 ? 'several columns may hold the flows' : 'no column is known to hold the flows';
+    problems.push(mappingProblem(file, message, shown));
+  }
+  if (roles.quantityColumn !== null && !mapping.where) {
+    const name = header?.[roles.quantityColumn] ?? '';
+    problems.push(
+      new IntakeError({
+        file,
+        value: name,
+        message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
+        remedy: `Give a mapping such as {"where": {"column": "${name}", "equals": "1"}}`,
+        needs: 'mapping',
+      }),
+    );
+  }
+  const twice = wide?.find(({ name }, at) => wide.findIndex((other) => other.name === name) < at);
+  if (twice) {
+    problems.push(
+      new IntakeError({
+        file,
+        value: twice.name,
+        message: 'two columns have the same heading, so a station would have two values a day',
+        remedy: 'Give each station one column',
+      }),
+    );
+  }
+  if (mapping.unit === null) {
+    const heading = mapping.value && 'column' in mapping.value ? mapping.value.column : null;
+    problems.push(unitProblem(file, typeof heading === 'number' ? (header?.[heading] ?? null) : heading));
+  }
+  return problems;
+}
