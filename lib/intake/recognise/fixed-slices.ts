@@ -16,6 +16,11 @@ function holds(lines: readonly SampleLine[], [start, end]: Slice, test: (text: s
   return good >= lines.length * SHARE;
 }
 
+/** Numbers are padded on their left: text that ends in a blank is a slice in the wrong place. */
+function endsInDigit(lines: readonly SampleLine[], [, end]: Slice): boolean {
+  return lines.filter(({ text }) => /\d/.test(text[end - 1] ?? '')).length >= lines.length * SHARE;
+}
+
 /** Year, month and day at fixed characters, side by side or one apart, starting within the first 24 characters. */
 function dateSlices(lines: readonly SampleLine[]): [Slice, Slice, Slice] | null {
   for (let start = 0; start < 24; start++) {
@@ -23,7 +28,8 @@ function dateSlices(lines: readonly SampleLine[]): [Slice, Slice, Slice] | null 
     for (const gap of [0, 1]) {
       const month: Slice = [start + 4 + gap, start + 6 + gap];
       const day: Slice = [month[1] + gap, month[1] + gap + 2];
-      if (holds(lines, month, isMonth) && holds(lines, day, isDay)) return [[start, start + 4], month, day];
+      const aligned = [month, day].every((slice) => endsInDigit(lines, slice));
+      if (aligned && holds(lines, month, isMonth) && holds(lines, day, isDay)) return [[start, start + 4], month, day];
     }
   }
   return null;
