@@ -44,6 +44,8 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
   const [inView, setInView] = useState<Set<string> | null>(null);
   const [hover] = useState(createHoverStore);
   const narrow = useIsNarrow();
+  // the map keeps its own view from here on, and tells; it is not told
+  const [startView] = useState(state.view);
 
   const found = useMemo(() => {
     if (!state.q.trim()) return null;
@@ -70,6 +72,12 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
     [layers, region.slug],
   );
 
+  const { tileUrl, tileAttribution } = region;
+  const tiles = useMemo(
+    () => (tileUrl ? { url: tileUrl, attribution: tileAttribution ?? '' } : null),
+    [tileUrl, tileAttribution],
+  );
+
   const hasPlaces = useMemo(() => rows.some(hasPlace), [rows]);
   const map = (
     <section aria-label="Map" className={styles.mapColumn}>
@@ -81,12 +89,12 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
           rows={rows}
           found={found}
           ground={ground}
-          tiles={region.tileUrl ? { url: region.tileUrl, attribution: region.tileAttribution ?? '' } : null}
+          tiles={tiles}
           units={units}
           hover={hover}
           selected={state.station}
           onSelect={select}
-          view={state.view}
+          startView={startView}
           onView={showView}
           onInView={showInView}
         />

@@ -2,6 +2,7 @@ import L from 'leaflet';
 import type { Needle } from '@/app/components/needle';
 import { drawNeedle } from './draw-needle.ts';
 import { indexMarks, type MarkIndex } from './mark-index.ts';
+import { NeedleSprites } from './needle-sprites.ts';
 import type { Palette } from './palette.ts';
 
 export interface Mark {
@@ -27,6 +28,7 @@ export class NeedleLayer extends L.Layer {
   private index: MarkIndex = indexMarks(this.xs, this.ys);
   private hovered = -1;
   private selected = -1;
+  private readonly sprites = new NeedleSprites();
   private frame = 0;
   /** layer point of the canvas's upper left corner, and the view it was drawn for */
   private origin = L.point(0, 0);
@@ -115,7 +117,8 @@ export class NeedleLayer extends L.Layer {
     const size = this.map.getSize();
     const inView = this.index.inside(...this.box(0)).length;
     const room = Math.sqrt((size.x * size.y) / Math.max(1, inView)) * 0.085;
-    return Math.max(3.2, Math.min(7, room));
+    // in steps, so that a small pan keeps the size and the pictures made for it
+    return Math.max(3, Math.min(7, Math.round(room * 2) / 2));
   }
 
   private box(overlap: number): [number, number, number, number] {
@@ -162,10 +165,10 @@ export class NeedleLayer extends L.Layer {
     for (const canvas of [this.base, this.top]) place(canvas, whole, this.origin);
     const context = this.context(this.base);
     if (!context) return;
-    const radius = this.radius();
+    this.sprites.use(this.radius(), window.devicePixelRatio || 1, this.palette);
     for (const i of this.index.inside(...this.box(OVERLAP)).sort((a, b) => a - b)) {
       context.globalAlpha = this.faded[i] ? 0.18 : 1;
-      drawNeedle(context, this.marks[i].needle, { x: this.xs[i], y: this.ys[i] }, radius, this.palette);
+      this.sprites.draw(context, this.marks[i].needle, this.xs[i], this.ys[i]);
     }
     this.drawTop();
   }

@@ -1,7 +1,7 @@
 'use client';
 import 'leaflet/dist/leaflet.css';
 import type L from 'leaflet';
-import { useEffect, useMemo, useState } from 'react';
+import { memo, useEffect, useMemo, useState } from 'react';
 import { AttributionControl, MapContainer, ScaleControl, TileLayer, useMap } from 'react-leaflet';
 import type { Units } from '@/app/components/format';
 import type { HoverStore } from '../hover-store.ts';
@@ -30,8 +30,8 @@ export interface StationMapProps {
   hover: HoverStore;
   selected: string | null;
   onSelect: (code: string | null) => void;
-  /** the view of the address; null shows all stations */
-  view: MapView | null;
+  /** the view to begin with; null shows all stations */
+  startView: MapView | null;
   /** a person moved the map; null when it shows all stations again */
   onView: (view: MapView | null) => void;
   /** codes of the stations inside the map's frame */
@@ -44,11 +44,11 @@ const EVERYWHERE: L.LatLngBoundsExpression = [
 ];
 
 /** The map: ground, needles, and what happens on them. Loaded in the browser only; Leaflet wants a window. */
-export function StationMap(props: StationMapProps) {
-  const { rows, view, invented, tiles, units } = props;
+export const StationMap = memo(function StationMap(props: StationMapProps) {
+  const { rows, startView, invented, tiles, units } = props;
   const bounds = useMemo(() => stationBounds(rows), [rows]);
-  const start = view
-    ? { center: [view.latitude, view.longitude] as [number, number], zoom: view.zoom }
+  const start = startView
+    ? { center: [startView.latitude, startView.longitude] as [number, number], zoom: startView.zoom }
     : { bounds: bounds ?? EVERYWHERE, boundsOptions: FIT };
   return (
     <MapContainer
@@ -69,7 +69,7 @@ export function StationMap(props: StationMapProps) {
       <MapInside {...props} bounds={bounds} outline={!invented && !tiles && bounds !== null} />
     </MapContainer>
   );
-}
+});
 
 interface InsideProps extends StationMapProps {
   bounds: [[number, number], [number, number]] | null;
