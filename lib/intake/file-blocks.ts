@@ -128,11 +128,11 @@ async function visitWhileFetching(
 }
 
 /** What is said of a line that is too long to be a row. */
-export function longLineError(file: string, row: number, start?: Uint8Array): IntakeError {
+export function longLineError(file: string, row: number, start: Uint8Array): IntakeError {
   return new IntakeError({
     file,
     row,
-    ...(start === undefined ? {} : { value: `${Buffer.from(start.subarray(0, 40)).toString('latin1')}…` }),
+    value: `${Buffer.from(start.subarray(0, 40)).toString('latin1')}…`,
     message: `the line is longer than ${LONGEST_LINE / 1024} kB, so it cannot be a row of daily flows`,
     remedy: 'Check that the file is a table of text with line ends, one row a line',
   });

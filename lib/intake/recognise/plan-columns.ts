@@ -17,8 +17,8 @@ export interface PlanContext {
   marked: boolean;
   /** comment lines */
   remarks: string[];
-  /** the sample is the file, not only its first megabyte */
-  wholeFile: boolean;
+  /** the line that runs over the end of the sample; null when the sample is the whole file */
+  openLine: Uint8Array | null;
 }
 
 /** A plan for rows whose fields are set apart by a delimiter, or by blanks (`delimiter` null). */
@@ -29,7 +29,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const rows = splitSample(body, splitter);
   const start = tableStart(rows);
   const data = rows.slice(start.firstRow);
-  refuseWithoutRows(file, rows, start, data, context.wholeFile);
+  refuseWithoutRows(file, rows, start, data, context.openLine);
   const { header } = start;
   const fieldCount = header?.length ?? usualCount(data);
   const remarks = [...context.remarks, ...body.slice(0, start.firstRow).map(({ text }) => text)];
@@ -90,11 +90,11 @@ function refuseWithoutRows(
   rows: SampleRow[],
   { header }: TableStart,
   data: SampleRow[],
-  wholeFile: boolean,
+  openLine: Uint8Array | null,
 ): void {
   if (data.length > 0) return;
   // A megabyte that holds a header and no whole row behind it.
-  if (!wholeFile && header !== null) throw longLineError(file, rows[rows.length - 1].line + 1);
+  if (openLine !== null && header !== null) throw longLineError(file, rows[rows.length - 1].line + 1, openLine);
   if (header !== null) {
     throw new IntakeError({
       file,

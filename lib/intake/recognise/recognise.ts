@@ -25,8 +25,9 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
     });
   }
   refuseMarkup(body[0].text, body[0].line, file);
+  const openLine = wholeFile ? null : head.bytes.subarray(head.bytes.lastIndexOf(lineEnd) + 1);
   const context = {
-    ...{ options, wholeFile, lineEnd, marked: hasUtf8Mark(head.bytes) },
+    ...{ options, openLine, lineEnd, marked: hasUtf8Mark(head.bytes) },
     remarks: lines.filter(({ text }) => text.startsWith('#')).map(({ text }) => text),
   };
   const asked = options.mapping?.layout;
