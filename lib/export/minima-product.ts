@@ -1,7 +1,6 @@
 import type { StationMinima } from '../region/ranking-types.ts';
 import type { Format } from './format.ts';
 import { jsonCell, stationFeature } from './geojson.ts';
-import { jsonText } from './json.ts';
 import { MINIMA_COLUMNS, minimaCsv, minimaRows } from './minima-csv.ts';
 import { type Narrowing, narrowTo } from './narrow.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
@@ -17,7 +16,7 @@ export function minimaProduct(
   if (format === 'csv') return minimaCsv(shown);
   if (format === 'json') {
     const list = shown.map((one) => ({ station_code: one.station.code, years: yearsOf(one) }));
-    return jsonText({ ...provenanceNotes(from), stations: list });
+    return JSON.stringify({ ...provenanceNotes(from), stations: list });
   }
   const features = shown.map((one) =>
     stationFeature(one.station, {
@@ -26,7 +25,7 @@ export function minimaProduct(
       years: yearsOf(one),
     }),
   );
-  return jsonText({ type: 'FeatureCollection', features, ...provenanceNotes(from) });
+  return JSON.stringify({ type: 'FeatureCollection', features, ...provenanceNotes(from) });
 }
 
 /** A station's years under the names that the CSV columns have. */

@@ -1,7 +1,6 @@
 import type { Ranking, RankingRow } from '../region/ranking-types.ts';
 import type { Format } from './format.ts';
 import { jsonCell, rankingGeojson } from './geojson.ts';
-import { jsonText } from './json.ts';
 import { type Narrowing, narrowTo } from './narrow.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
 import { RANKING_COLUMNS, rankingCsv } from './ranking-csv.ts';
@@ -10,8 +9,8 @@ import { RANKING_COLUMNS, rankingCsv } from './ranking-csv.ts';
 export function rankingProduct(format: Format, ranking: Ranking, from: Provenance, narrowing: Narrowing = {}): string {
   const rows = narrowTo(ranking.rows, narrowing, (row) => row);
   if (format === 'csv') return rankingCsv(rows);
-  if (format === 'geojson') return jsonText({ ...rankingGeojson(rows), ...provenanceNotes(from) });
-  return jsonText({ ...provenanceNotes(from), counts: ranking.counts, stations: rows.map(stationOf) });
+  if (format === 'geojson') return JSON.stringify({ ...rankingGeojson(rows), ...provenanceNotes(from) });
+  return JSON.stringify({ ...provenanceNotes(from), counts: ranking.counts, stations: rows.map(stationOf) });
 }
 
 /** A row under the names that the CSV columns have, with what a table has no room for. */

@@ -1,4 +1,5 @@
 import type { Influence, StationFacts } from '../region/ranking-types.ts';
+import { rows, sharedConnection } from './connection.ts';
 import { openStore } from './open.ts';
 
 export { type StationRecord, stationRecords } from './records.ts';
@@ -28,14 +29,17 @@ const FACTS = {
   influence: true,
 } as const;
 
-/** The facts of a region's stations, by code. */
+const LIST_SQL = `SELECT ${Object.keys(FACTS).join(', ')} FROM Station WHERE regionId = ? ORDER BY code`;
+
+type FactsRow = [number, string, string, string, number | null, number | null, number | null, Influence];
+
+/** The facts of a region's stations, by code. By libsql alone: every answer about a region begins with them, and for
+ *  2,000 stations Prisma takes twice as long. */
 export async function listStations(regionId: number): Promise<StationFacts[]> {
-  const found = await openStore().prisma.station.findMany({
-    where: { regionId },
-    select: FACTS,
-    orderBy: { code: 'asc' },
-  });
-  return found.map((row) => ({ ...row, influence: row.influence as Influence }));
+  const found = rows(sharedConnection(openStore().path), LIST_SQL).all([regionId]) as FactsRow[];
+  return found.map(([id, code, name, river, latitude, longitude, areaKm2, influence]) => ({
+    ...{ id, code, name, river, latitude, longitude, areaKm2, influence },
+  }));
 }
 
 /** One station by its code, or null. */
