@@ -19,7 +19,7 @@ export function isInstalled() {
 export async function install() {
   if (!agreesWithLock(readJson('package-lock.json'), readJson('node_modules/.package-lock.json'))) {
     say('Installing packages …');
-    const code = await npm(['ci', '--include=dev', '--no-fund', '--no-audit']);
+    const code = await npm(['ci', '--include=dev', '--no-fund', '--no-audit', '--loglevel=error']);
     if (code !== 0) throw new SetupError(`npm ci ended with ${code}: the packages could not be installed.`);
   }
   writeStamp(STAMP, { lock: lockHash(), platform: `${process.platform}-${process.arch}` });

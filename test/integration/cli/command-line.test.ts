@@ -127,7 +127,7 @@ describe('failure ends with 1 and one clear line', () => {
     const { code, err } = await hungerstone(['rank', '--region', 'x'], { database: 'file/in.db' });
     expect(code).toBe(1);
     expect(lines(err)).toHaveLength(1);
-    expect(err).toContain('in.db');
+    expect(err).toMatch(/^Cannot write in .*file/);
   });
   test('another folder than the project’s root', async () => {
     const { code, err } = await hungerstone(['rank', '--region', 'x'], { cwd: folder });
