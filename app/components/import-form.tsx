@@ -139,7 +139,9 @@ function Taken({ slug, outcome }: { slug: string; outcome: ImportOutcome }) {
   return (
     <div className={styles.outcome}>
       <div className={styles.outcomeHead}>
-        <h2 role="status">{count(outcome.taken.length, 'file')} taken</h2>
+        <div role="status">
+          <h2>{count(outcome.taken.length, 'file')} taken</h2>
+        </div>
         <a className={ui.primary} href={regionHref(slug, 'map')}>
           Open the map
         </a>

@@ -29,7 +29,9 @@ const tickTexts = (page: Awaited<ReturnType<typeof newPage>>, axis: 'x' | 'y') =
 
 test('without a choice it shows the six steepest declines, each named at the end of its line', async () => {
   const page = await curvesPage();
-  const names = await page.getByRole('list', { name: 'Stations in the figure' }).getByRole('link').allTextContents();
+  const links = page.getByRole('list', { name: 'Stations in the figure' }).getByRole('link');
+  await links.first().waitFor();
+  const names = await links.allTextContents();
   const known = new Set(stations.map((station) => station.name));
   expect(names.length).toBeGreaterThan(3);
   expect(names.every((name) => known.has(name))).toBe(true);
@@ -130,7 +132,7 @@ test('keyboard alone: from the search to a tick to the figure', async () => {
   const was = await focused.isChecked();
   await page.keyboard.press('Space');
   await expect.poll(() => new URL(page.url()).searchParams.get('stations')).not.toBeNull();
-  expect(await page.locator('aside, details').getByRole('checkbox').first().isChecked()).toBe(!was);
+  await expect.poll(() => page.getByRole('checkbox').first().isChecked()).toBe(!was);
 });
 
 test.each([

@@ -61,7 +61,8 @@ export interface FigurePlan {
 
 const AXIS_WIDTH = 58;
 const AXIS_HEIGHT = 28;
-const LABEL_HEIGHT = 17;
+/** Height of a label and of the target that it is, which is 24 pixels at least (WCAG 2.2, 2.5.8). */
+const LABEL_HEIGHT = 24;
 
 export function layOut({ exceedances, lines, thin, band, x, y, width, height }: Request): FigurePlan {
   const compact = width < 640;

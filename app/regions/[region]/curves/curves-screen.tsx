@@ -1,7 +1,7 @@
 'use client';
 import { useSearchParams } from 'next/navigation';
-import { parseAsString, parseAsStringLiteral, useQueryStates } from 'nuqs';
-import { useMemo, useTransition } from 'react';
+import { parseAsStringLiteral, useQueryStates } from 'nuqs';
+import { useMemo } from 'react';
 import { Cautions } from '@/app/components/cautions';
 import { DurationFigure, type FigureBand, type FigureCurve } from '@/app/components/duration-figure/duration-figure';
 import { MAX_LINES } from '@/app/components/duration-figure/line-looks';
@@ -14,9 +14,10 @@ import type { Basis } from '@/lib/basis';
 import type { CurveKind, RegionCurves } from '@/lib/jobs/types';
 import styles from './curves-screen.module.css';
 import { CurvesTable } from './curves-table';
-import { EXCEEDANCE_AXES, FLOW_AXES, flowName, type StationChoice, unitName, writeChoice } from './curves-view';
+import { EXCEEDANCE_AXES, FLOW_AXES, flowName, type StationChoice, unitName } from './curves-view';
 import { LeftOut, type LeftOutStation } from './left-out';
 import { type PickableStation, StationPicker } from './station-picker';
+import { useAsked } from './use-asked';
 
 export interface ShownCurve extends FigureCurve {
   years: number;
@@ -55,43 +56,32 @@ const KINDS = [
 
 export function CurvesScreen(props: Props) {
   const { slug, kind, normalise, units, unit, exceedances, shown, band, leftOut } = props;
-  const [pending, startTransition] = useTransition();
   const query = useSearchParams();
   const [{ x, y }, setAxes] = useQueryStates({
     x: parseAsStringLiteral(EXCEEDANCE_AXES).withDefault('normal'),
     y: parseAsStringLiteral(FLOW_AXES).withDefault('log'),
   });
-  // These change what the server answers.
-  const [, setAsked] = useQueryStates(
-    { stations: parseAsString, kind: parseAsString, normalise: parseAsString },
-    { shallow: false, startTransition, history: 'push' },
-  );
-  const setNormalise = (value: Basis['normalise']) =>
-    void setAsked({ normalise: value === props.ownNormalise ? null : value });
+  const { asked, pending, ask } = useAsked(props);
+  const setNormalise = (normalise: Basis['normalise']) => ask({ normalise });
   const lines = useMemo(() => shown.slice(0, MAX_LINES), [shown]);
   const thin = useMemo(() => shown.slice(MAX_LINES), [shown]);
-  const csv = apiHref(slug, 'curves', query.toString(), 'csv') + (kind === 'period' ? '' : `&kind=${kind}`);
+  const csv = csvHref(apiHref(slug, 'curves', query.toString(), 'csv'), kind, shown);
 
   return (
     <div className={styles.screen} aria-busy={pending}>
       <StationPicker
         stations={props.stations}
-        chosen={props.chosen}
+        chosen={asked.chosen}
         lines={lines.map((line) => line.code)}
-        choice={props.choice}
+        choice={asked.choice}
         leftOut={leftOut}
         hasMapView={props.hasMapView}
-        onChoose={(choice) => void setAsked({ stations: writeChoice(choice) })}
+        onChoose={(choice) => ask({ choice })}
       />
       <div className={styles.main}>
         <div className={styles.tools}>
-          <Segmented label="Flow" value={normalise} options={NORMALISE} onChange={setNormalise} />
-          <Segmented
-            label="Curve of"
-            value={kind}
-            options={KINDS}
-            onChange={(value) => void setAsked({ kind: value === 'period' ? null : value })}
-          />
+          <Segmented label="Flow" value={asked.normalise} options={NORMALISE} onChange={setNormalise} />
+          <Segmented label="Curve of" value={asked.kind} options={KINDS} onChange={(kind) => ask({ kind })} />
           <Segmented
             label="Share of time"
             value={x}
@@ -154,3 +144,15 @@ export function CurvesScreen(props: Props) {
     </div>
   );
 }
+
+/** The file of the curves shown; of all stations' where naming them would make the address too long. */
+function csvHref(base: string, kind: CurveKind, shown: readonly ShownCurve[]): string {
+  const more = new URLSearchParams(kind === 'period' ? {} : { kind });
+  const codes = shown.map((curve) => curve.code);
+  const nameable = codes.every((code) => !code.includes(','));
+  if (nameable && codes.length <= MOST_NAMED) more.set('stations', codes.join(','));
+  const text = more.toString();
+  return text ? `${base}&${text}` : base;
+}
+
+const MOST_NAMED = 200;

@@ -2,8 +2,6 @@ import type { ExceedanceAxis, FlowAxis } from '@/app/components/duration-figure/
 import { flowIn, specificIn, UNIT_WORDS, type Units } from '@/app/components/format';
 import type { CurveKind, RegionCurves } from '@/lib/jobs/types';
 
-/** View state of the screen as it stands in the address; what equals the default is left out. */
-export const CURVE_PARAMETERS = { stations: 'stations', x: 'x', y: 'y', kind: 'kind' } as const;
 export const EXCEEDANCE_AXES: readonly ExceedanceAxis[] = ['linear', 'normal'];
 export const FLOW_AXES: readonly FlowAxis[] = ['log', 'linear'];
 

@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import { count, fixed } from '@/app/components/format';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import styles from './import-page.module.css';
@@ -14,12 +15,23 @@ export interface ListedImport {
   rows: number;
   accepted: number;
   rejected: number;
+  /** is being taken back just now */
+  undoing: boolean;
 }
 
 const KIND_WORDS: Record<string, string> = { flows: 'daily flows', registry: 'station list', layer: 'map layer' };
 
-/** Every import that stands, newest first, each with its way back. */
-export function ImportHistory({ slug, imports }: { slug: string; imports: readonly ListedImport[] }) {
+interface Props {
+  slug: string;
+  imports: readonly ListedImport[];
+  /** the import whose report stands above */
+  shown: number | null;
+  /** the address' parameters, which links keep */
+  query: string;
+}
+
+/** Every import that stands, newest first, each with its report and its way back. */
+export function ImportHistory({ slug, imports, shown, query }: Props) {
   return (
     <section aria-labelledby="imports-title">
       <h2 id="imports-title">Imports so far</h2>
@@ -43,7 +55,15 @@ export function ImportHistory({ slug, imports }: { slug: string; imports: readon
             <tbody>
               {imports.map((entry) => (
                 <tr key={entry.id}>
-                  <th scope="row">{entry.fileName}</th>
+                  <th scope="row">
+                    {entry.kind === 'flows' && entry.id !== shown ? (
+                      <Link href={reportHref(query, entry.id)} prefetch={false} title="Show its report">
+                        {entry.fileName}
+                      </Link>
+                    ) : (
+                      entry.fileName
+                    )}
+                  </th>
                   <td>
                     {KIND_WORDS[entry.kind] ?? entry.kind}
                     {entry.unit && `, ${entry.unit}`}
@@ -68,7 +88,11 @@ export function ImportHistory({ slug, imports }: { slug: string; imports: readon
                     )}
                   </td>
                   <td>
-                    <UndoImport slug={slug} id={entry.id} fileName={entry.fileName} kind={entry.kind} />
+                    {entry.undoing ? (
+                      'being undone'
+                    ) : (
+                      <UndoImport slug={slug} id={entry.id} fileName={entry.fileName} kind={entry.kind} />
+                    )}
                   </td>
                 </tr>
               ))}
@@ -78,4 +102,10 @@ export function ImportHistory({ slug, imports }: { slug: string; imports: readon
       )}
     </section>
   );
+}
+
+function reportHref(query: string, id: number): string {
+  const next = new URLSearchParams(query);
+  next.set('report', String(id));
+  return `?${next}`;
 }

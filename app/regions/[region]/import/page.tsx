@@ -1,7 +1,9 @@
 import type { Metadata } from 'next';
 import { Header } from '@/app/components/header';
+import { FileReport } from '@/app/components/import/report-view';
 import { ImportForm } from '@/app/components/import-form';
-import { listImports } from '@/lib/store/imports';
+import type { ImportReport } from '@/lib/intake/types';
+import { getImportReport, listImports } from '@/lib/store/imports';
 import { listJobs } from '@/lib/store/jobs';
 import { type PageQuery, pageRequest } from '../page-request';
 import { ImportHistory } from './import-history';
@@ -16,9 +18,11 @@ interface Props {
 
 /** Bring files into a region, see what became of them, and take an import back. */
 export default async function ImportPage({ params, searchParams }: Props) {
-  const { region } = await pageRequest((await params).region, await searchParams);
+  const { region, query } = await pageRequest((await params).region, await searchParams);
   const [imports, jobs] = await Promise.all([listImports(region.id), listJobs({ regionId: region.id, limit: 20 })]);
   const running = jobs.find((job) => job.kind === 'import' && (job.state === 'waiting' || job.state === 'running'));
+  const asked = imports.find((entry) => String(entry.id) === query.get('report'));
+  const past = asked?.kind === 'flows' ? await getImportReport(region.id, asked.id) : null;
   return (
     <>
       <Header region={region} page="import" />
@@ -31,7 +35,22 @@ export default async function ImportPage({ params, searchParams }: Props) {
           </p>
         </header>
         <ImportForm region={region.slug} runningJob={running?.id ?? null} />
+        {asked && past && (
+          <FileReport
+            file={{
+              importId: asked.id,
+              file: asked.fileName,
+              kind: asked.kind,
+              summary: '',
+              report: past.report as ImportReport,
+              warnings: [],
+            }}
+            rejectedHref={`/api/regions/${encodeURIComponent(region.slug)}/imports/${asked.id}/rejected`}
+          />
+        )}
         <ImportHistory
+          shown={asked?.id ?? null}
+          query={query.toString()}
           slug={region.slug}
           imports={imports.map((entry) => ({
             id: entry.id,
@@ -43,6 +62,7 @@ export default async function ImportPage({ params, searchParams }: Props) {
             rows: entry.rows,
             accepted: entry.accepted,
             rejected: entry.rejected,
+            undoing: entry.undoing,
           }))}
         />
       </main>
