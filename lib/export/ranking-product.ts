@@ -15,8 +15,9 @@ export function rankingProduct(format: Format, ranking: Ranking, from: Provenanc
 
 /** A row under the names that the CSV columns have, with what a table has no room for. */
 function stationOf(row: RankingRow): Record<string, unknown> {
-  return {
-    ...Object.fromEntries(RANKING_COLUMNS.map(({ name, value }) => [name, jsonCell(value(row))])),
+  const station: Record<string, unknown> = {};
+  for (const { name, value } of RANKING_COLUMNS) station[name] = jsonCell(value(row));
+  return Object.assign(station, {
     slope_l_s_km2_per_decade: row.specificPerDecade,
     drying: row.drying,
     zero_days_per_decade: row.zeroDaysPerDecade,
@@ -26,5 +27,5 @@ function stationOf(row: RankingRow): Record<string, unknown> {
     variance_factor: row.serialFactor,
     years: row.years,
     minima_m3s: row.minima,
-  };
+  });
 }
