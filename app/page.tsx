@@ -1,5 +1,4 @@
 import { ImportForm } from '@/app/components/import-form';
-import { listImports } from '@/lib/store/imports';
 import { listRegions } from '@/lib/store/regions';
 import { Header } from './components/header.tsx';
 import styles from './page.module.css';
@@ -7,12 +6,7 @@ import { RegionTable } from './region-table.tsx';
 
 /** Regions: the list, and a way to make one by dropping files. */
 export default async function RegionsPage() {
-  const regions = await Promise.all(
-    (await listRegions()).map(async (region) => {
-      const [latest] = await listImports(region.id);
-      return { ...region, lastImport: latest?.createdAt.toISOString().slice(0, 10) ?? null };
-    }),
-  );
+  const regions = await listRegions();
   return (
     <>
       <Header />

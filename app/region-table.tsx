@@ -6,17 +6,21 @@ import { ScrollFrame } from './components/scroll-frame.tsx';
 import styles from './page.module.css';
 
 /** The regions with what each holds, and the day (UTC) of its latest import. */
-export function RegionTable({ regions }: { regions: (RegionSummary & { lastImport: string | null })[] }) {
+export function RegionTable({ regions }: { regions: RegionSummary[] }) {
   return (
-    <ScrollFrame label="Regions">
+    <ScrollFrame label="Regions" className={styles.frame}>
       <table className={styles.table}>
         <thead>
           <tr>
             <th scope="col">Region</th>
             <th scope="col">Stations</th>
-            <th scope="col">With flows</th>
+            <th scope="col" className={styles.spare}>
+              With flows
+            </th>
             <th scope="col">Years</th>
-            <th scope="col">Last import</th>
+            <th scope="col" className={styles.spare}>
+              Last import
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -29,13 +33,13 @@ export function RegionTable({ regions }: { regions: (RegionSummary & { lastImpor
                 {region.invented && <em> (invented, for trying things out)</em>}
               </th>
               <td>{fixed(region.stations)}</td>
-              <td>{fixed(region.records)}</td>
+              <td className={styles.spare}>{fixed(region.records)}</td>
               <td>
                 {region.firstYear === null || region.lastYear === null
                   ? MISSING
                   : range(region.firstYear, region.lastYear)}
               </td>
-              <td>{region.lastImport ?? MISSING}</td>
+              <td className={styles.spare}>{region.lastImport ?? MISSING}</td>
             </tr>
           ))}
         </tbody>

@@ -1,4 +1,4 @@
-import { count, percent } from '@/app/components/format';
+import { count, fixed, percent } from '@/app/components/format';
 import type { MapRow } from './map-row.ts';
 
 /** The answer in one line: how many ranked stations fall and rise, and how many of those may be chance.
@@ -8,13 +8,16 @@ export function headline(rows: MapRow[], alpha: number): string {
   const falling = ranked.filter((row) => row.trend === 'falling').length;
   const rising = ranked.filter((row) => row.trend === 'rising').length;
   if (ranked.length === 0) return 'No station can be ranked on these terms.';
-  const of = `${ranked.length === 1 ? 'the' : ranked.length} ranked ${ranked.length === 1 ? 'station' : 'stations'}`;
   const chance = `with at most ${percent(alpha, alpha < 0.01 ? 1 : 0)} false discoveries expected`;
-  if (falling + rising === 0) {
-    return `None of ${of} falls or rises, ${chance}. No significant trend is not no change.`;
+  const still = falling + rising === 0 ? ' No significant trend is not no change.' : '';
+  if (ranked.length === 1) {
+    const does = falling ? 'falls' : rising ? 'rises' : 'neither falls nor rises';
+    return `The one ranked station ${does}, ${chance}.${still}`;
   }
-  const fall = `${falling === 0 ? 'None' : falling} of ${of} ${falling <= 1 ? 'falls' : 'fall'}`;
-  const rise = rising === 0 ? 'none rises' : `${rising} ${rising === 1 ? 'rises' : 'rise'}`;
+  const of = `${fixed(ranked.length)} ranked stations`;
+  if (falling + rising === 0) return `None of ${of} falls or rises, ${chance}.${still}`;
+  const fall = `${falling === 0 ? 'None' : fixed(falling)} of ${of} ${falling <= 1 ? 'falls' : 'fall'}`;
+  const rise = rising === 0 ? 'none rises' : `${fixed(rising)} ${rising === 1 ? 'rises' : 'rise'}`;
   return `${fall} and ${rise}, ${chance}.`;
 }
 
@@ -25,7 +28,7 @@ export function besideRanking(rows: MapRow[]): string {
   const parts: string[] = [];
   if (drying) parts.push(`${count(drying, 'station')} ${drying === 1 ? 'is' : 'are'} listed as drying`);
   if (unranked) {
-    parts.push(`${drying ? unranked : count(unranked, 'station')} ${unranked === 1 ? 'is' : 'are'} not ranked`);
+    parts.push(`${drying ? fixed(unranked) : count(unranked, 'station')} ${unranked === 1 ? 'is' : 'are'} not ranked`);
   }
   return parts.length ? `${parts.join(' and ')}.` : '';
 }

@@ -54,8 +54,9 @@ export function groundStyle(kind: GroundKind, palette: Palette, feature?: Featur
   }
 }
 
-/** Rivers with a stream order grow with it; others are one width. */
+/** Rivers grow with the land they drain, or with their stream order; others are one width. */
 function riverWeight(feature?: Feature): number {
-  const order = Number(feature?.properties?.order ?? feature?.properties?.strahler);
-  return Number.isFinite(order) ? Math.max(0.9, Math.min(3.6, 0.6 + 0.55 * order)) : 1.4;
+  const { areaKm2, order, strahler } = feature?.properties ?? {};
+  const size = Number.isFinite(areaKm2) ? Math.log10(Math.max(1, areaKm2)) : Number(order ?? strahler);
+  return Number.isFinite(size) ? Math.max(0.8, Math.min(3.2, 0.2 + 0.62 * size)) : 1.4;
 }

@@ -56,7 +56,7 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
   return (
     <>
       <p aria-live="polite" className="visually-hidden">
-        {row ? `${row.name}, ${words}` : ''}
+        {row ? [row.name, words, row.note].filter(Boolean).join(', ') : ''}
       </p>
       {row && (
         <div ref={card} className={styles.card} data-hovering={hovered !== null && hovered !== selected}>
@@ -71,6 +71,7 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
                 .join(' · ')}
             </p>
             <p>{words}</p>
+            {row.note && <p className={styles.cardFacts}>{row.note}</p>}
             {code === selected && (
               <Link href={stationHref(slug, row.code, query)} prefetch={false}>
                 Open the station’s page

@@ -65,7 +65,9 @@ export const StationMap = memo(function StationMap(props: StationMapProps) {
     >
       {tiles && <TileLayer url={tiles.url} attribution={escapeHtml(tiles.attribution)} />}
       <AttributionControl prefix={false} position="bottomright" />
-      <ScaleControl metric={units === 'metric'} imperial={units === 'us'} position="bottomright" maxWidth={110} />
+      {bounds && (
+        <ScaleControl metric={units === 'metric'} imperial={units === 'us'} position="bottomright" maxWidth={110} />
+      )}
       <MapInside {...props} bounds={bounds} outline={!invented && !tiles && bounds !== null} />
     </MapContainer>
   );

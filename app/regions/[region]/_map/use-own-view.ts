@@ -2,7 +2,8 @@ import type L from 'leaflet';
 import { useCallback, useEffect, useRef } from 'react';
 import type { MapView } from '../map-state.ts';
 
-export const FIT: L.FitBoundsOptions = { padding: [36, 36], maxZoom: 11 };
+/** A lone station is shown with enough land about it to know where it lies. */
+export const FIT: L.FitBoundsOptions = { padding: [36, 36], maxZoom: 9 };
 
 /** Tells of the view once a person has moved the map; until then the map keeps showing all stations, also when its box
  *  changes size.

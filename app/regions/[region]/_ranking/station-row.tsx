@@ -8,6 +8,7 @@ import { Sparkline } from '@/app/components/sparkline';
 import { type HoverStore, useIsHovered } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { type FigureWords, trendWords } from './figure-words.ts';
+import { nameLines } from './name-lines.ts';
 import styles from './ranking-table.module.css';
 
 interface StationRowProps {
@@ -31,6 +32,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
   const { row, index, href, selected, tabbable, hover, words, scale, span, units } = props;
   const hovered = useIsHovered(hover, row.code);
   const { side, significant } = needleOf(row);
+  const [head, tail] = nameLines(row.name);
   const ratios = decodeRatios(row.spark);
   const years = Int32Array.from(ratios, (_, i) => row.sparkFirst + i);
   const tone = significant ? styles[side] : undefined;
@@ -45,17 +47,18 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
       <td className={styles.rank}>{row.rank ?? ''}</td>
       <th scope="row" className={styles.station}>
         <Link href={href} prefetch={false} tabIndex={tabbable ? 0 : -1} aria-current={selected || undefined}>
-          {row.name}
+          <span className={styles.head}>{head}</span>{' '}
+          <span className={styles.sub}>
+            {tail && `${tail} · `}
+            {row.code}
+            {row.note && (
+              <span aria-hidden="true" title={row.note}>
+                {' '}
+                · note
+              </span>
+            )}
+          </span>
         </Link>
-        <span className={styles.river}>
-          {subtitle(row)}
-          {row.note && (
-            <span title={row.note} className={styles.note}>
-              {' '}
-              · {row.note}
-            </span>
-          )}
-        </span>
       </th>
       <td className={styles.area}>{areaNumber(row.areaKm2, units)}</td>
       <td className={styles.years}>{fixed(row.yearsUsed)}</td>
@@ -89,8 +92,3 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
     </tr>
   );
 });
-
-/** The river where the name does not say it already, and the code. */
-function subtitle({ name, river, code }: MapRow): string {
-  return river && !name.toLowerCase().includes(river.toLowerCase()) ? `${river} · ${code}` : code;
-}

@@ -24,6 +24,15 @@ test('headline says that no trend is not no change', () => {
   expect(headline([chance, chance], 0.1)).toContain('No significant trend is not no change.');
 });
 
+test('headline speaks of a lone station as one', () => {
+  expect(headline([chance, unranked], 0.1)).toMatch(/^The one ranked station neither falls nor rises, with at most 10/);
+  expect(headline([rising], 0.1)).toMatch(/^The one ranked station rises/);
+});
+
+test('headline groups thousands', () => {
+  expect(headline([...Array(1200).fill(chance), falling], 0.1)).toMatch(/^1 of 1,201 ranked stations falls/);
+});
+
 test('headline says when nothing can be ranked', () => {
   expect(headline([unranked, drying], 0.1)).toBe('No station can be ranked on these terms.');
 });
