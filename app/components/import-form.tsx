@@ -4,7 +4,7 @@ import { type FormEvent, useCallback, useId, useState } from 'react';
 import type { FlowUnit } from '@/lib/intake/types';
 import type { ImportOutcome } from '@/lib/jobs/import-types';
 import { count } from './format.ts';
-import { type Answers, isAnswered } from './import/answers.ts';
+import { type Answers, isAnswered, isAsked } from './import/answers.ts';
 import { ChosenFiles } from './import/chosen-files.tsx';
 import { FileDrop } from './import/file-drop.tsx';
 import styles from './import/import.module.css';
@@ -170,7 +170,7 @@ function Refused({ outcome, error, filesAtHand, onRetry, onAgain }: RefusedProps
   const [answers, setAnswers] = useState<Answers>({});
   const { problems } = outcome;
   const ready = problems.length > 0 && problems.every((problem) => isAnswered(problem, answers[problem.file]));
-  const asked = problems.some((problem) => problem.problem?.needs);
+  const asked = problems.some(isAsked);
   return (
     <div className={styles.outcome}>
       <div role="alert">

@@ -15,19 +15,27 @@ export interface Answer {
 
 export type Answers = Record<string, Answer>;
 
+/** Whether a file whose column of flows is asked for does not tell its unit either. */
+export const asksUnit = ({ inspection }: ImportProblem): boolean => inspection?.mapping?.unit === null;
+
+const ASKED = ['unit', 'station', 'date-order', 'mapping', 'revise'] as const;
+
+/** Whether an answer on the screen would do. A missing area has to come in a station list. */
+export const isAsked = ({ problem }: ImportProblem): boolean =>
+  problem?.needs !== undefined && ASKED.some((need) => need === problem.needs);
+
 /** Whether a problem has been answered, so that trying again makes sense. */
 export function isAnswered(problem: ImportProblem, answer: Answer | undefined): boolean {
   if (answer?.leaveOut) return true;
   switch (problem.problem?.needs) {
     case 'unit':
-    case 'area':
       return answer?.unit !== undefined;
     case 'station':
       return Boolean(answer?.station?.trim());
     case 'date-order':
       return answer?.dateOrder !== undefined;
     case 'mapping':
-      return answer?.value !== undefined;
+      return answer?.value !== undefined && (answer.unit !== undefined || !asksUnit(problem));
     case 'revise':
       return answer?.revise === true;
     default:

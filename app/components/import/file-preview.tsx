@@ -12,6 +12,7 @@ const ROWS = 6;
 
 /** The first rows of a file as they were split into fields. Fields are known by their place alone. */
 export function FilePreview({ name, header, rows }: Props) {
+  const body = header && rows[0]?.join('\t') === header.join('\t') ? rows.slice(1) : rows;
   return (
     <ScrollFrame className={styles.scroll} label={`First rows of ${name}`}>
       <table className={styles.preview}>
@@ -27,7 +28,7 @@ export function FilePreview({ name, header, rows }: Props) {
           </thead>
         )}
         <tbody>
-          {numbered(rows.slice(0, ROWS)).map(({ item: row, number: line }) => (
+          {numbered(body.slice(0, ROWS)).map(({ item: row, number: line }) => (
             <tr key={line}>
               {numbered(row).map(({ item, number }) => (
                 <td key={number}>{item}</td>

@@ -4,7 +4,7 @@ import { FLOW_UNITS, type FlowUnit } from '@/lib/intake/types';
 import type { ImportProblem } from '@/lib/jobs/import-types';
 import { count, fixed } from '../format.ts';
 import ui from '../ui.module.css';
-import type { Answer } from './answers.ts';
+import { type Answer, asksUnit, isAsked } from './answers.ts';
 import { ColumnChoice } from './column-choice.tsx';
 import { FilePreview } from './file-preview.tsx';
 import styles from './import.module.css';
@@ -28,20 +28,20 @@ export function ProblemView({ problem, answer = {}, onAnswer }: Props) {
       {detail ? (
         <p>
           {detail.row !== undefined && <>Row {fixed(detail.row)}: </>}
-          {detail.message}
+          {sentence(detail.message)}
           {detail.value !== undefined && (
             <>
               {' '}
               (<code>{detail.value}</code>)
             </>
           )}
-          . <strong>{detail.remedy}</strong>
+          .{!isAskedHere(detail.needs) && <strong> {sentence(detail.remedy)}</strong>}
         </p>
       ) : (
         <p>{problem.message}</p>
       )}
       {detail?.rows && detail.rows.length > 0 && <RowsAtFault rows={detail.rows} />}
-      {!answer.leaveOut && detail?.needs && (
+      {!answer.leaveOut && isAsked(problem) && (
         <>
           {inspection && inspection.preview.length > 0 && (
             <FilePreview header={inspection.header} rows={inspection.preview} name={file} />
@@ -61,6 +61,12 @@ export function ProblemView({ problem, answer = {}, onAnswer }: Props) {
   );
 }
 
+const sentence = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
+
+/** Needs that the form under the message asks for itself: the remedy would say it twice, in words for the batch command. */
+const isAskedHere = (needs: NonNullable<ImportProblem['problem']>['needs']): boolean =>
+  needs !== undefined && ['unit', 'station', 'date-order', 'mapping'].includes(needs);
+
 function RowsAtFault({ rows }: { rows: NonNullable<NonNullable<ImportProblem['problem']>['rows']> }) {
   return (
     <ul className={styles.faults}>
@@ -78,17 +84,10 @@ function Question({ problem, answer, give }: { problem: ImportProblem; answer: A
   const id = useId();
   switch (problem.problem?.needs) {
     case 'unit':
-    case 'area':
       return (
         <label className={ui.label} htmlFor={id}>
           Unit of the flows
           <UnitSelect id={id} value={answer.unit} onChange={(unit) => give({ unit })} />
-          {problem.problem.needs === 'area' && (
-            <span className={ui.hint}>
-              A depth over the drainage area needs that area: give a station list that has it beside this file, or
-              another unit.
-            </span>
-          )}
         </label>
       );
     case 'station':
@@ -113,7 +112,7 @@ function Question({ problem, answer, give }: { problem: ImportProblem; answer: A
           chosen={answer.value}
           onChoose={(value) => give({ value })}
         >
-          {problem.inspection?.mapping?.unit === null && (
+          {asksUnit(problem) && (
             <label className={ui.label} htmlFor={id}>
               Unit of the flows
               <UnitSelect id={id} value={answer.unit} onChange={(unit) => give({ unit })} />

@@ -3,6 +3,7 @@ import type { TakenFile } from '@/lib/jobs/import-types';
 import { count, fixed, significant } from '../format.ts';
 import { ScrollFrame } from '../scroll-frame.tsx';
 import styles from './import.module.css';
+import { unitText } from './unit-text.ts';
 
 const LAYOUT_WORDS: Record<Layout, string> = {
   long: 'one row a station and day',
@@ -36,7 +37,7 @@ export function FileReport({ file, rejectedHref }: { file: TakenFile; rejectedHr
 }
 
 function flowSummary(report: ImportReport): string {
-  return `Daily flows in ${report.unit}: ${LAYOUT_WORDS[report.layout]}.`;
+  return `Daily flows in ${unitText(report.unit)}: ${LAYOUT_WORDS[report.layout]}.`;
 }
 
 function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: string }) {
@@ -83,8 +84,12 @@ function Rejected({ report, href }: { report: ImportReport; href: string }) {
         <thead>
           <tr>
             <th scope="col">Row</th>
-            <th scope="col">Text</th>
-            <th scope="col">Why</th>
+            <th scope="col" className={styles.words}>
+              Text
+            </th>
+            <th scope="col" className={styles.words}>
+              Why
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -119,8 +124,8 @@ function Stations({ report }: { report: ImportReport }) {
               <th scope="col">Longest gap, days</th>
               <th scope="col">Doubled days</th>
               <th scope="col">Zeros</th>
-              <th scope="col">Least, {report.unit}</th>
-              <th scope="col">Most, {report.unit}</th>
+              <th scope="col">Least, {unitText(report.unit)}</th>
+              <th scope="col">Most, {unitText(report.unit)}</th>
             </tr>
           </thead>
           <tbody>

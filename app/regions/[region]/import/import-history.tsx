@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { count, fixed } from '@/app/components/format';
+import { unitText } from '@/app/components/import/unit-text';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import styles from './import-page.module.css';
 import { UndoImport } from './undo-import';
@@ -66,7 +67,7 @@ export function ImportHistory({ slug, imports, shown, query }: Props) {
                   </th>
                   <td>
                     {KIND_WORDS[entry.kind] ?? entry.kind}
-                    {entry.unit && `, ${entry.unit}`}
+                    {entry.unit && `, ${unitText(entry.unit)}`}
                   </td>
                   <td>
                     <time dateTime={entry.when}>{entry.when.slice(0, 16).replace('T', ' ')}</time>

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { isAnswered, withAnswers } from '@/app/components/import/answers';
+import { isAnswered, isAsked, withAnswers } from '@/app/components/import/answers';
 import { sizeText } from '@/app/components/import/chosen-files';
 import type { Mapping } from '@/lib/intake/types';
 import type { ImportProblem } from '@/lib/jobs/import-types';
@@ -34,10 +34,9 @@ const problem = (file: string, needs?: Needs): ImportProblem => ({
 describe('isAnswered', () => {
   test.each([
     ['unit', { unit: 'L/s' }],
-    ['area', { unit: 'L/s' }],
     ['station', { station: '01' }],
     ['date-order', { dateOrder: 'dmy' }],
-    ['mapping', { value: { slice: [8, 18] } }],
+    ['mapping', { value: { slice: [8, 18] }, unit: 'mm/d' }],
     ['revise', { revise: true }],
   ] as const)('%s: by its own answer only', (needs, answer) => {
     expect(isAnswered(problem('f', needs), undefined)).toBe(false);
@@ -45,8 +44,20 @@ describe('isAnswered', () => {
     expect(isAnswered(problem('f', needs), structuredClone(answer) as never)).toBe(true);
   });
 
+  test('a column is only half an answer where the file does not tell its unit', () => {
+    const asked = problem('f', 'mapping');
+    expect(isAnswered(asked, { value: { slice: [8, 18] } })).toBe(false);
+    const told = { ...asked, inspection: { ...asked.inspection!, mapping: { ...MAPPING, unit: 'mm/d' as const } } };
+    expect(isAnswered(told, { value: { slice: [8, 18] } })).toBe(true);
+  });
+
   test('a blank station is no answer', () => {
     expect(isAnswered(problem('f', 'station'), { station: '  ' })).toBe(false);
+  });
+
+  test('a missing drainage area is nothing that a screen could answer', () => {
+    expect(isAsked(problem('f', 'area'))).toBe(false);
+    expect(isAnswered(problem('f', 'area'), { unit: 'L/s' })).toBe(false);
   });
 
   test('a file that asks nothing can only be left out', () => {
