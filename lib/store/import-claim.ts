@@ -1,7 +1,7 @@
 import { StoreBusyError } from './busy.ts';
 import { type Connection, change, rows, timestamp } from './connection.ts';
+import { DEAD_AFTER_MS } from './dead-after.ts';
 import { StoreError } from './errors.ts';
-import { DEAD_AFTER_MS } from './jobs.ts';
 
 /** An import's life. Its parts are in records, and it is listed, while applied or undoing; otherwise it is not yet, or no
  *  longer, there for readers. */

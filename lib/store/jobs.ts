@@ -1,4 +1,5 @@
 import { whenFree } from './busy.ts';
+import { DEAD_AFTER_MS } from './dead-after.ts';
 import { openStore } from './open.ts';
 
 export const JOB_STATES = ['waiting', 'running', 'done', 'failed', 'cancelled'] as const;
@@ -18,8 +19,7 @@ export interface JobRow {
   finishedAt: Date | null;
 }
 
-/** Age of a heartbeat from which its job counts as dead, milliseconds. */
-export const DEAD_AFTER_MS = 30_000;
+export { DEAD_AFTER_MS };
 
 export async function createJob(job: { id: string; kind: string; regionId?: number | null }): Promise<JobRow> {
   const data = { id: job.id, kind: job.kind, regionId: job.regionId ?? null, state: 'waiting' };

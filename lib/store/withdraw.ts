@@ -1,7 +1,7 @@
 import { isBusy, whenFree } from './busy.ts';
 import { type Connection, change, immediately, rows, timestamp } from './connection.ts';
+import { DEAD_AFTER_MS } from './dead-after.ts';
 import { type Counters, restoreCounters } from './import-claim.ts';
-import { DEAD_AFTER_MS } from './jobs.ts';
 import { inSlices, type SliceOptions } from './slices.ts';
 
 /** Takes back imports that were being applied: nothing of them was to be seen yet, and then nothing of them is left. */
