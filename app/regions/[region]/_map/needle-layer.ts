@@ -1,5 +1,6 @@
 import L from 'leaflet';
 import type { Needle } from '@/app/components/needle';
+import { CanvasFrame, pixelRatio } from './canvas-frame.ts';
 import { drawNeedle } from './draw-needle.ts';
 import { indexMarks, type MarkIndex } from './mark-index.ts';
 import { NeedleSprites } from './needle-sprites.ts';
@@ -30,10 +31,7 @@ export class NeedleLayer extends L.Layer {
   private selected = -1;
   private readonly sprites = new NeedleSprites();
   private frame = 0;
-  /** layer point of the canvas's upper left corner, and the view it was drawn for */
-  private origin = L.point(0, 0);
-  private drawnCentre = L.latLng(0, 0);
-  private drawnZoom = 0;
+  private readonly area = new CanvasFrame(OVERLAP);
   private map: L.Map | null = null;
 
   constructor(private palette: Palette) {
@@ -68,7 +66,7 @@ export class NeedleLayer extends L.Layer {
       resize: () => this.draw(),
       zoomend: () => this.project(),
       viewreset: () => this.project(),
-      zoomanim: (event) => this.followZoom(event as L.ZoomAnimEvent),
+      zoomanim: (event) => this.map && this.area.follow(this.map, [this.base, this.top], event as L.ZoomAnimEvent),
     };
   }
 
@@ -115,18 +113,11 @@ export class NeedleLayer extends L.Layer {
   private radius(): number {
     if (!this.map) return 0;
     const size = this.map.getSize();
-    const inView = this.index.inside(...this.box(0)).length;
+    const near = this.map.containerPointToLayerPoint([0, 0]);
+    const inView = this.index.inside(near.x, near.y, near.x + size.x, near.y + size.y).length;
     const room = Math.sqrt((size.x * size.y) / Math.max(1, inView)) * 0.085;
     // in steps, so that a small pan keeps the size and the pictures made for it
     return Math.max(3, Math.min(7, Math.round(room * 2) / 2));
-  }
-
-  private box(overlap: number): [number, number, number, number] {
-    if (!this.map) return [0, 0, 0, 0];
-    const size = this.map.getSize();
-    const corner = this.map.containerPointToLayerPoint(size.multiplyBy(-overlap));
-    const far = this.map.containerPointToLayerPoint(size.multiplyBy(1 + overlap));
-    return [corner.x, corner.y, far.x, far.y];
   }
 
   private project(): void {
@@ -142,31 +133,21 @@ export class NeedleLayer extends L.Layer {
   }
 
   private drawIfBeyond(): void {
-    if (!this.map) return;
-    const corner = this.map.containerPointToLayerPoint([0, 0]);
-    const reach = this.map.getSize().multiplyBy(OVERLAP);
-    const moved = corner.subtract(this.origin.add(reach));
-    if (Math.abs(moved.x) < reach.x && Math.abs(moved.y) < reach.y) return;
-    if (!this.frame) {
-      this.frame = requestAnimationFrame(() => {
-        this.frame = 0;
-        this.draw();
-      });
-    }
+    if (!this.map || this.frame || this.area.holds(this.map)) return;
+    this.frame = requestAnimationFrame(() => {
+      this.frame = 0;
+      this.draw();
+    });
   }
 
   private draw(): void {
     if (!this.map) return;
-    const size = this.map.getSize();
-    this.origin = this.map.containerPointToLayerPoint(size.multiplyBy(-OVERLAP)).round();
-    this.drawnCentre = this.map.getCenter();
-    this.drawnZoom = this.map.getZoom();
-    const whole = size.multiplyBy(1 + 2 * OVERLAP).round();
-    for (const canvas of [this.base, this.top]) place(canvas, whole, this.origin);
-    const context = this.context(this.base);
+    this.area.lay(this.map);
+    for (const canvas of [this.base, this.top]) this.area.fit(canvas);
+    const context = this.area.clear(this.base);
     if (!context) return;
-    this.sprites.use(this.radius(), window.devicePixelRatio || 1, this.palette);
-    for (const i of this.index.inside(...this.box(OVERLAP)).sort((a, b) => a - b)) {
+    this.sprites.use(this.radius(), pixelRatio(), this.palette);
+    for (const i of this.index.inside(...this.area.box).sort((a, b) => a - b)) {
       context.globalAlpha = this.faded[i] ? 0.18 : 1;
       this.sprites.draw(context, this.marks[i].needle, this.xs[i], this.ys[i]);
     }
@@ -174,7 +155,7 @@ export class NeedleLayer extends L.Layer {
   }
 
   private drawTop(): void {
-    const context = this.context(this.top);
+    const context = this.area.clear(this.top);
     if (!context) return;
     const radius = this.radius();
     for (const i of new Set([this.selected, this.hovered])) {
@@ -193,44 +174,4 @@ export class NeedleLayer extends L.Layer {
       drawNeedle(context, this.marks[i].needle, place, Math.max(radius * 1.1, 6), this.palette);
     }
   }
-
-  /** A cleared canvas whose unit is a layer pixel. */
-  private context(canvas: HTMLCanvasElement): CanvasRenderingContext2D | null {
-    const context = canvas.getContext('2d');
-    if (!context) return null;
-    context.setTransform(1, 0, 0, 1, 0, 0);
-    context.clearRect(0, 0, canvas.width, canvas.height);
-    const ratio = window.devicePixelRatio || 1;
-    context.setTransform(ratio, 0, 0, ratio, -this.origin.x * ratio, -this.origin.y * ratio);
-    return context;
-  }
-
-  /** While a zoom is animated the drawn picture is scaled about; it is drawn anew when the zoom ends. */
-  private followZoom({ center, zoom }: L.ZoomAnimEvent): void {
-    if (!this.map) return;
-    const scale = this.map.getZoomScale(zoom, this.drawnZoom);
-    const half = this.map.getSize().multiplyBy(0.5 + OVERLAP);
-    const drawn = this.map.project(this.drawnCentre, zoom);
-    const offset = half.multiplyBy(-scale).add(drawn).subtract(this.newOrigin(center, zoom));
-    for (const canvas of [this.base, this.top]) L.DomUtil.setTransform(canvas, offset, scale);
-  }
-
-  /** World pixel of layer point 0,0 once the map stands at this centre and zoom. */
-  private newOrigin(center: L.LatLng, zoom: number): L.Point {
-    const map = this.map as L.Map;
-    const pane = L.DomUtil.getPosition(map.getPanes().mapPane) ?? L.point(0, 0);
-    return map.project(center, zoom).subtract(map.getSize().divideBy(2)).add(pane).round();
-  }
-}
-
-function place(canvas: HTMLCanvasElement, size: L.Point, origin: L.Point): void {
-  const ratio = window.devicePixelRatio || 1;
-  const [width, height] = [Math.round(size.x * ratio), Math.round(size.y * ratio)];
-  if (canvas.width !== width || canvas.height !== height) {
-    canvas.width = width;
-    canvas.height = height;
-    canvas.style.width = `${size.x}px`;
-    canvas.style.height = `${size.y}px`;
-  }
-  L.DomUtil.setTransform(canvas, origin, 1);
 }

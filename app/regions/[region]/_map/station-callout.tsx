@@ -86,15 +86,15 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
 
 /** Example: "rank 3: −9.3 % per decade (−12.1 to −6.4), adjusted p 0.003; falling, significant" */
 export function calloutWords(row: MapRow): string {
-  const mark = needleWords(needleOf(row));
   if (row.drying) {
     const { value, low, high } = row.figure;
-    return `drying: ${signed(value)} days without flow per decade (${interval(low, high)}), adjusted p ${pValue(row.pAdjusted)}; ${mark}`;
+    const sure = needleOf(row).significant ? 'significant' : 'may be chance';
+    return `drying: ${signed(value)} days without flow per decade (${interval(low, high)}), adjusted p ${pValue(row.pAdjusted)}; ${sure}`;
   }
   if (row.rank === null) return `not ranked: ${row.unrankedReason ?? 'no reason given'}`;
   const change =
     row.percentPerDecade === null
       ? 'no percentage, its mean minimum is 0'
       : `${signed(row.percentPerDecade)} % per decade (${interval(row.line?.low, row.line?.high)})`;
-  return `rank ${row.rank}: ${change}, adjusted p ${pValue(row.pAdjusted)}; ${mark}`;
+  return `rank ${row.rank}: ${change}, adjusted p ${pValue(row.pAdjusted)}; ${needleWords(needleOf(row))}`;
 }

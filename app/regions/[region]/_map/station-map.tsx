@@ -8,8 +8,8 @@ import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import type { MapView } from '../map-state.ts';
 import { outlineBox, stationBounds } from './bounds.ts';
-import { makePanes } from './ground-layers.ts';
 import { MapControls } from './map-controls.tsx';
+import { makePanes } from './panes.ts';
 import { StationCallout } from './station-callout.tsx';
 import styles from './station-map.module.css';
 import { type GroundSource, useGroundLayer } from './use-ground.ts';
@@ -57,7 +57,6 @@ export const StationMap = memo(function StationMap(props: StationMapProps) {
       keyboard={false}
       zoomControl={false}
       attributionControl={false}
-      preferCanvas
       minZoom={2}
       maxZoom={17}
       zoomSnap={0.5}

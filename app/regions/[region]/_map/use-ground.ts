@@ -1,7 +1,8 @@
 import type { GeoJsonObject } from 'geojson';
 import type L from 'leaflet';
 import { useEffect, useState } from 'react';
-import { type GroundKind, groundLayer } from './ground-layers.ts';
+import { GroundLayer } from './ground-layer.ts';
+import type { GroundKind } from './ground-style.ts';
 import { onThemeChange, readPalette } from './palette.ts';
 
 export interface GroundSource {
@@ -27,11 +28,8 @@ export function useGroundLayer(map: L.Map, { kind, url }: GroundSource): boolean
 
   useEffect(() => {
     if (!data) return;
-    let layer = groundLayer(data, kind, readPalette()).addTo(map);
-    const stop = onThemeChange(() => {
-      layer.remove();
-      layer = groundLayer(data, kind, readPalette()).addTo(map);
-    });
+    const layer = new GroundLayer(data, kind, readPalette()).addTo(map);
+    const stop = onThemeChange(() => layer.setPalette(readPalette()));
     return () => {
       stop();
       layer.remove();
