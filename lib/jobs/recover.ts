@@ -1,12 +1,23 @@
 import { DEAD_AFTER_MS } from '../store/jobs.ts';
 import { recoverStore } from '../store/recover.ts';
+import { discardRejectedRowsOfJob } from './rejected-rows.ts';
+import { discardAbandonedUploads, discardUpload } from './upload-folder.ts';
 
 /** For the start of a server: clears up what processes that died have left, at once and again when the heartbeat of one
  *  that died a moment ago has had the time to grow old. */
 export async function recoverJobs(): Promise<void> {
-  await recoverStore();
-  const later = setTimeout(() => void recoverStore().catch(report), DEAD_AFTER_MS + 1000);
+  await clearUp();
+  const later = setTimeout(() => void clearUp().catch(report), DEAD_AFTER_MS + 1000);
   later.unref();
+}
+
+async function clearUp(): Promise<void> {
+  const { failedJobs } = await recoverStore();
+  for (const id of failedJobs) {
+    await discardUpload(id);
+    discardRejectedRowsOfJob(id);
+  }
+  await discardAbandonedUploads();
 }
 
 function report(error: unknown): void {

@@ -1,4 +1,4 @@
-import { closeSync, existsSync, mkdirSync, openSync, rmSync, writeSync } from 'node:fs';
+import { closeSync, existsSync, mkdirSync, openSync, readdirSync, rmSync, writeSync } from 'node:fs';
 import { basename, join } from 'node:path';
 import { csvLine } from '../intake/csv-line.ts';
 import type { RejectedRow } from '../intake/types.ts';
@@ -62,6 +62,12 @@ export function discardRejectedRows(names: readonly (string | null)[]): void {
   for (const name of names) {
     if (name !== null && existsSync(rejectedPath(name))) rmSync(rejectedPath(name));
   }
+}
+
+/** Removes all rejected rows of a job that died. */
+export function discardRejectedRowsOfJob(jobId: string): void {
+  if (!existsSync(rejectedFolder())) return;
+  discardRejectedRows(readdirSync(rejectedFolder()).filter((name) => name.startsWith(`${jobId}-`)));
 }
 
 /** The file of rejected rows that a stored report names; null when it names none. */
