@@ -36,7 +36,7 @@ export async function demoStations(slug: string): Promise<DemoStation[]> {
 
 /** One line of CSV as RFC 4180 has it. */
 function splitCsv(line: string): string[] {
-  return [...line.matchAll(/(?:^|,)(?:"((?:[^"]|"")*)"|([^,]*))/g)].map((match) =>
+  return [...`,${line}`.matchAll(/,(?:"((?:[^"]|"")*)"|([^,]*))/g)].map((match) =>
     match[1] === undefined ? match[2] : match[1].replaceAll('""', '"'),
   );
 }

@@ -68,6 +68,7 @@ test('the curve CSV is of this station on this basis', async () => {
 
 test('] and [ step through the ranking, and a link goes back to the map with its view', async () => {
   const page = await stationPage(stations[0], '?view=46.0512,14.5060,8&days=30');
+  await page.waitForSelector('.recharts-line-curve');
   await page.keyboard.press(']');
   await page.getByRole('heading', { level: 1 }).filter({ hasNotText: stations[0].name }).waitFor();
   await page.keyboard.press('[');
