@@ -71,7 +71,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
   };
 
   return (
-    <figure className={styles.figure}>
+    <figure className={styles.figure} aria-label={summary}>
       <div className={styles.axisName}>{flowLabel}</div>
       <div
         ref={frame}
@@ -87,7 +87,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
           height={height}
           data={plan.rows}
           margin={plan.margin}
-          title={summary}
+          desc={summary}
           className={styles.chart}
         >
           <CartesianGrid stroke="var(--figure-grid)" />

@@ -49,8 +49,9 @@ export default async function CurvesPage({ params, searchParams }: Props) {
       <Header region={region} page="curves" />
       <main id="main">
         <h1 className="visually-hidden">Duration curves of {region.name}</h1>
-        <BasisSentence resolved={curves.basis} base={region.basis} />
-        {basisProblem && <ErrorNote title="The address holds terms that cannot be used">{basisProblem}</ErrorNote>}
+        <BasisSentence resolved={curves.basis} base={region.basis}>
+          {basisProblem && <ErrorNote title="The region’s own terms are shown">{basisProblem}</ErrorNote>}
+        </BasisSentence>
         <CurvesScreen
           slug={region.slug}
           kind={kind}

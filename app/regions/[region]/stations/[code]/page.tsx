@@ -33,8 +33,9 @@ export default async function StationPage({ params, searchParams }: Props) {
     <>
       <Header region={region} />
       <main id="main">
-        <BasisSentence resolved={detail.basis} base={region.basis} />
-        {basisProblem && <ErrorNote title="The address holds terms that cannot be used">{basisProblem}</ErrorNote>}
+        <BasisSentence resolved={detail.basis} base={region.basis}>
+          {basisProblem && <ErrorNote title="The region’s own terms are shown">{basisProblem}</ErrorNote>}
+        </BasisSentence>
         <StationScreen region={region} detail={detail} rows={ranking.rows} query={query} />
       </main>
     </>
