@@ -28,10 +28,9 @@ export default defineConfig({
         env: ELSEWHERE,
         testTimeout: 30_000,
       }),
+      // Where dates and figures become text on the way in and out; the rest of integration has none of either.
       project('elsewhere-integration', {
-        include: ['test/integration/**/*.test.ts'],
-        // Starting servers and programs once is enough; they take their surroundings from the tests anyhow.
-        exclude: ['test/integration/cli/**'],
+        include: ['test/integration/api/**/*.test.ts', 'test/integration/jobs/import*.test.ts'],
         env: ELSEWHERE,
         testTimeout: 60_000,
       }),

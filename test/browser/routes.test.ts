@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import { beforeAll, describe, expect, inject, test, vi } from 'vitest';
+import { afterAll, beforeAll, describe, expect, inject, test, vi } from 'vitest';
 
 // Every route that the production build has, by the build's own list: a new one without a line here fails.
 
@@ -48,6 +48,10 @@ beforeAll(async () => {
   const finished = async () => expect((await getJson(`/api/jobs/${VALUES.job}`)).state).toBe('done');
   await vi.waitFor(finished, { timeout: 20_000, interval: 100 });
   VALUES.import = String((await getJson(`/api/regions/${importRegion}/imports`))[0].id);
+});
+
+afterAll(async () => {
+  await fetch(`${serverUrl}/api/regions/${importRegion}`, { method: 'DELETE' });
 });
 
 test('the build has the routes that are promised to other programs', () => {

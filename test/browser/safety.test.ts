@@ -51,6 +51,11 @@ describe('the running server', () => {
     const own = await ask('/api/regions', { method: 'POST', headers: { ...headers, origin: serverUrl }, body });
     expect(own.status).toBe(201);
     expect((await ask('/api/regions')).body).toContain('From elsewhere');
+    const gone = await ask(`/api/regions/${JSON.parse(own.body).slug}`, {
+      method: 'DELETE',
+      headers: { origin: serverUrl },
+    });
+    expect(gone.status).toBe(204);
   });
 
   test('sends the safety headers with pages, data and static files, and does not say what it is made with', async () => {
