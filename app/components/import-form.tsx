@@ -4,7 +4,7 @@ import { type FormEvent, useCallback, useId, useState } from 'react';
 import type { FlowUnit } from '@/lib/intake/types';
 import type { ImportOutcome } from '@/lib/jobs/import-types';
 import { count } from './format.ts';
-import { type Answers, isAnswered, isAsked } from './import/answers.ts';
+import { type Answers, alikeTo, answeredAlike, isAnswered, isAsked } from './import/answers.ts';
 import { ChosenFiles } from './import/chosen-files.tsx';
 import { FileDrop } from './import/file-drop.tsx';
 import styles from './import/import.module.css';
@@ -169,7 +169,8 @@ interface RefusedProps {
 function Refused({ outcome, error, filesAtHand, onRetry, onAgain }: RefusedProps) {
   const [answers, setAnswers] = useState<Answers>({});
   const { problems } = outcome;
-  const ready = problems.length > 0 && problems.every((problem) => isAnswered(problem, answers[problem.file]));
+  // without a problem of a file it was the program or the machine: the same files may pass the next time
+  const ready = problems.every((problem) => isAnswered(problem, answers[problem.file]));
   const asked = problems.some(isAsked);
   return (
     <div className={styles.outcome}>
@@ -184,7 +185,8 @@ function Refused({ outcome, error, filesAtHand, onRetry, onAgain }: RefusedProps
           key={problem.file}
           problem={problem}
           answer={answers[problem.file]}
-          onAnswer={(answer) => setAnswers((now) => answeredAlike({ ...now, [problem.file]: answer }, outcome, answer))}
+          alike={alikeTo(problem, problems).length}
+          onAnswer={(answer) => setAnswers((now) => answeredAlike(now, problems, problem, answer))}
         />
       ))}
       <div className={styles.actions}>
@@ -201,14 +203,4 @@ function Refused({ outcome, error, filesAtHand, onRetry, onAgain }: RefusedProps
       </div>
     </div>
   );
-}
-
-/** A unit given once stands for every other file that asks for one and has none yet. */
-function answeredAlike(answers: Answers, outcome: ImportOutcome, given: Answers[string]): Answers {
-  if (given.unit === undefined) return answers;
-  const out = { ...answers };
-  for (const { file, problem } of outcome.problems) {
-    if (problem?.needs === 'unit' && out[file]?.unit === undefined) out[file] = { ...out[file], unit: given.unit };
-  }
-  return out;
 }

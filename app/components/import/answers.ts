@@ -43,6 +43,40 @@ export function isAnswered(problem: ImportProblem, answer: Answer | undefined): 
   }
 }
 
+/** The other files that ask the same and are laid out the same: nineteen files of one agency need one answer. */
+export function alikeTo(problem: ImportProblem, problems: readonly ImportProblem[]): ImportProblem[] {
+  const needs = problem.problem?.needs;
+  if (needs !== 'unit' && needs !== 'mapping' && needs !== 'date-order') return [];
+  const layout = problem.inspection?.mapping?.layout;
+  return problems.filter(
+    (other) => other !== problem && other.problem?.needs === needs && other.inspection?.mapping?.layout === layout,
+  );
+}
+
+/** Lays an answer in; files that are alike and have said nothing of their own take it as well. */
+export function answeredAlike(
+  answers: Answers,
+  problems: readonly ImportProblem[],
+  problem: ImportProblem,
+  given: Answer,
+): Answers {
+  const before = answers[problem.file];
+  const out: Answers = { ...answers, [problem.file]: given };
+  for (const key of ['unit', 'dateOrder', 'value'] as const) {
+    if (given[key] === before?.[key]) continue;
+    for (const { file, inspection } of alikeTo(problem, problems)) {
+      const theirs = out[file]?.[key];
+      if (theirs !== undefined && !same(theirs, before?.[key])) continue;
+      // a column is only the same column where the file has it
+      const known = key !== 'value' || inspection?.valueCandidates.some(({ place }) => same(place, given.value));
+      if (known) out[file] = { ...out[file], [key]: given[key] };
+    }
+  }
+  return out;
+}
+
+const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+
 /** The choices of the next try: what was chosen before, with the answers laid over it.
  *  Answers of earlier tries stay, so that a file that asked for its unit and then for its station keeps both. */
 export function withAnswers(

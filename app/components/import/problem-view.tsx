@@ -12,6 +12,8 @@ import styles from './import.module.css';
 interface Props {
   problem: ImportProblem;
   answer: Answer | undefined;
+  /** how many other files take the answer as well */
+  alike: number;
   onAnswer(answer: Answer): void;
 }
 
@@ -19,7 +21,7 @@ interface Props {
 const SHOWN_ROWS = 10;
 
 /** Why one file was not taken: row, value, remedy, and a question where an answer would do. */
-export function ProblemView({ problem, answer = {}, onAnswer }: Props) {
+export function ProblemView({ problem, answer = {}, alike, onAnswer }: Props) {
   const { file, problem: detail, inspection } = problem;
   const give = (part: Answer) => onAnswer({ ...answer, ...part });
   return (
@@ -47,6 +49,12 @@ export function ProblemView({ problem, answer = {}, onAnswer }: Props) {
             <FilePreview header={inspection.header} rows={inspection.preview} name={file} />
           )}
           <Question problem={problem} answer={answer} give={give} />
+          {alike > 0 && (
+            <p className={ui.hint}>
+              {count(alike, 'other file')} laid out like this {alike === 1 ? 'takes' : 'take'} the same answer, unless
+              it is given another.
+            </p>
+          )}
         </>
       )}
       <label className={ui.check}>

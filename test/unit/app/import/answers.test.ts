@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { isAnswered, isAsked, withAnswers } from '@/app/components/import/answers';
+import { answeredAlike, isAnswered, isAsked, withAnswers } from '@/app/components/import/answers';
 import { sizeText } from '@/app/components/import/chosen-files';
 import type { Mapping } from '@/lib/intake/types';
 import type { ImportProblem } from '@/lib/jobs/import-types';
@@ -93,6 +93,43 @@ describe('withAnswers', () => {
     const copy = structuredClone(before);
     expect(withAnswers(before, [problem('f', 'unit')], { f: { leaveOut: true, unit: 'm3/s' } })).toEqual(before);
     expect(before).toEqual(copy);
+  });
+});
+
+describe('answeredAlike', () => {
+  const column = { slice: [8, 18] as [number, number] };
+  const asking = (file: string, needs: Needs, layout: Mapping['layout'] = 'fixed-width', known = true) => {
+    const asked = problem(file, needs);
+    const valueCandidates = known ? [{ place: column, label: '', samples: [] }] : [];
+    return { ...asked, inspection: { ...asked.inspection!, mapping: { ...MAPPING, layout }, valueCandidates } };
+  };
+
+  test('files that ask the same and are laid out the same take the answer, others do not', () => {
+    const problems = [asking('a', 'unit'), asking('b', 'unit'), asking('c', 'unit', 'long'), asking('d', 'station')];
+    expect(answeredAlike({}, problems, problems[0], { unit: 'ft3/s' })).toEqual({
+      a: { unit: 'ft3/s' },
+      b: { unit: 'ft3/s' },
+    });
+  });
+
+  test('an answer of a file’s own stands; one that was taken over follows a change', () => {
+    const problems = [asking('a', 'unit'), asking('b', 'unit'), asking('c', 'unit')];
+    const first = answeredAlike({ c: { unit: 'L/s' } }, problems, problems[0], { unit: 'ft3/s' });
+    const second = answeredAlike(first, problems, problems[0], { unit: 'm3/s' });
+    expect(second).toEqual({ a: { unit: 'm3/s' }, b: { unit: 'm3/s' }, c: { unit: 'L/s' } });
+  });
+
+  test('a column is taken over only where the file has it', () => {
+    const problems = [asking('a', 'mapping'), asking('b', 'mapping'), asking('c', 'mapping', 'fixed-width', false)];
+    expect(answeredAlike({}, problems, problems[0], { value: column })).toEqual({
+      a: { value: column },
+      b: { value: column },
+    });
+  });
+
+  test('leaving a file out leaves the others alone', () => {
+    const problems = [asking('a', 'unit'), asking('b', 'unit')];
+    expect(answeredAlike({}, problems, problems[0], { leaveOut: true })).toEqual({ a: { leaveOut: true } });
   });
 });
 
