@@ -33,19 +33,20 @@ function isHeader(fields: readonly string[]): boolean {
  *  the header when it has as many fields and is not itself data; whatever stands above are title lines.
  *  @param count  the usual number of fields */
 export function findTableStart(rows: readonly SampleRow[], count: number): TableStart {
-  const named = rows.findIndex(({ fields }) => fields.length > 1 && isHeader(fields) && !hasDate(fields));
   const dated = rows.findIndex(({ fields }) => fields.length >= Math.min(count, 2) && hasDate(fields));
   // A header that says where the date is holds even when the first rows below it have gone wrong.
-  if (named >= 0 && (dated < 0 || named < dated)) {
+  const above = dated < 0 ? rows : rows.slice(0, dated);
+  const named = above.findIndex(({ fields }) => fields.length > 1 && isHeader(fields) && !hasDate(fields));
+  if (named >= 0) {
     const widthRow = rows[named + 1] !== undefined && isWidthRow(rows[named + 1].fields);
     return { header: rows[named].fields, widthRow, firstRow: named + (widthRow ? 2 : 1) };
   }
   if (dated < 0) return { header: null, widthRow: false, firstRow: rows.length };
-  const above = dated > 0 ? rows[dated - 1].fields : null;
+  const last = above.at(-1)?.fields ?? null;
   const isHeading =
-    above !== null &&
-    above.length === rows[dated].fields.length &&
-    above.filter((field) => field !== '').length > 1 &&
-    above.some((field) => /\p{L}/u.test(field));
-  return { header: isHeading ? above : null, widthRow: false, firstRow: dated };
+    last !== null &&
+    last.length === rows[dated].fields.length &&
+    last.filter((field) => field !== '').length > 1 &&
+    last.some((field) => /\p{L}/u.test(field));
+  return { header: isHeading ? last : null, widthRow: false, firstRow: dated };
 }
