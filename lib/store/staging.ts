@@ -85,9 +85,11 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
     `INSERT INTO part (file, code, quantity, firstDay, days, unit, hash, valueCount, firstValueDay, lastValueDay,
        zeroCount, codeList, "values", codes) VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)`,
   );
-  const end = (sql: 'COMMIT' | 'ROLLBACK') => {
+  // Also what is to be discarded is committed: without a journal SQLite cannot roll back what it has already written, and
+  // the broken file could not even be detached.
+  const end = () => {
     if (!connection.open) return;
-    connection.exec(sql);
+    connection.exec('COMMIT');
     connection.exec('DETACH DATABASE staging');
     connection.close();
   };
@@ -130,9 +132,9 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
           fileId,
         ]);
     },
-    seal: () => end('COMMIT'),
+    seal: end,
     discard() {
-      end('ROLLBACK');
+      end();
       discardStaging(jobId, path);
     },
   };

@@ -151,6 +151,15 @@ test('a cancel while parsing leaves no file; a cancel while storing leaves the d
   staging.discard();
   expect(readdirSync(place.folder).filter((name) => name.includes('staging'))).toEqual([]);
 
+  // more than SQLite holds in memory: some of it is in the file already
+  const large = createStaging('cancelled-late');
+  const file = large.addFile({ kind: 'flows', fileName: 'a.csv' });
+  for (let i = 0; i < 40; i++) {
+    large.stagePart(file, partOf({ code: `S${i}`, values: new Array<number>(20_000).fill(i) }));
+  }
+  large.discard();
+  expect(readdirSync(place.folder).filter((name) => name.includes('staging'))).toEqual([]);
+
   await importFiles([[{ code: 'A', values: [1] }]]);
   const before = dump(place.path);
   const abort = new AbortController();
