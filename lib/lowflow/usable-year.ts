@@ -46,13 +46,14 @@ export function unusableReason(year: YearFacts): string {
     const allowed = (year.maxMissingDays * seasonDays) / year.yearDays;
     reasons.push(`${year.missingDays} of ${seasonDays} days missing, ${figure(allowed)} allowed`);
   }
-  const lost = windows - completeWindows(year);
+  const gaps = gapsOf(year);
+  const lost = windows - completeWindows(gaps, year);
   if (lost * LOST_WINDOWS_SHARE > windows) {
     reasons.push(
       `${lost} of ${windows} ${year.days}-day windows lost to missing days, ${figure(windows / LOST_WINDOWS_SHARE)} allowed`,
     );
   }
-  const gap = harmfulGap(year);
+  const gap = harmfulGap(gaps, year);
   if (gap) {
     reasons.push(
       `a gap of ${gap.length} days from ${isoDate(gap.first)} may hide the low: ${figure(gap.edge)} m³/s beside it is ` +
@@ -62,35 +63,53 @@ export function unusableReason(year: YearFacts): string {
   return reasons.join('; ');
 }
 
-/** Daily flow on a day of the season; NaN where missing and outside the season or the record. */
-function flowOn({ flow, firstDay, span }: YearFacts, day: number): number {
-  return day < span.first || day > span.last ? Number.NaN : (flow[day - firstDay] ?? Number.NaN);
+/** A stretch of missing days inside the season. */
+interface Gap {
+  /** day numbers, both included */
+  first: number;
+  last: number;
 }
 
-/** Windows of n days without a missing day. */
-function completeWindows(year: YearFacts): number {
-  let complete = 0;
-  let run = 0;
-  for (let day = year.span.first; day <= year.span.last; day += 1) {
-    run = Number.isNaN(flowOn(year, day)) ? 0 : run + 1;
-    if (run >= year.days) complete += 1;
+/** The gaps of the season in order; days outside the record are missing. */
+function gapsOf({ flow, firstDay, span }: YearFacts): Gap[] {
+  const gaps: Gap[] = [];
+  const end = Math.min(span.last + 1, firstDay + flow.length);
+  let first = span.first;
+  // `first` is where the gap that may be open began: at the season's start, or after the last day with a value.
+  for (let day = Math.max(span.first, firstDay); day < end; day += 1) {
+    if (Number.isNaN(flow[day - firstDay])) continue;
+    if (day > first) gaps.push({ first, last: day - 1 });
+    first = day + 1;
   }
-  return complete;
+  if (first <= span.last) gaps.push({ first, last: span.last });
+  return gaps;
+}
+
+/** Windows of n days without a missing day: those that fit between two gaps. */
+function completeWindows(gaps: readonly Gap[], { span, days }: YearFacts): number {
+  let complete = 0;
+  let from = span.first;
+  for (const gap of gaps) {
+    complete += Math.max(0, gap.first - from - days + 1);
+    from = gap.last + 1;
+  }
+  return complete + Math.max(0, span.last + 1 - from - days + 1);
 }
 
 /** The first gap that breaks rule (c), with the lower of the flows beside it. */
-function harmfulGap(year: YearFacts): { first: number; length: number; edge: number } | null {
-  if (Number.isNaN(year.minimum)) return null;
-  const { span } = year;
-  for (let day = span.first; day <= span.last; day += 1) {
-    if (!Number.isNaN(flowOn(year, day))) continue;
-    const first = day;
-    while (day < span.last && Number.isNaN(flowOn(year, day + 1))) day += 1;
-    const length = day - first + 1;
+function harmfulGap(
+  gaps: readonly Gap[],
+  { flow, firstDay, span, minimum }: YearFacts,
+): { first: number; length: number; edge: number } | null {
+  if (Number.isNaN(minimum)) return null;
+  for (const { first, last } of gaps) {
+    const length = last - first + 1;
     if (length <= LONGEST_HARMLESS_GAP) continue;
-    const [before, after] = [flowOn(year, first - 1), flowOn(year, day + 1)];
-    const edge = Number.isNaN(before) || after < before ? after : before;
-    if (edge < GAP_EDGE_FACTOR * year.minimum) return { first, length, edge };
+    // Beyond the season's ends there is no flow that counts.
+    const before = first > span.first ? flow[first - 1 - firstDay] : Number.POSITIVE_INFINITY;
+    const after = last < span.last ? flow[last + 1 - firstDay] : Number.POSITIVE_INFINITY;
+    const edge = Math.min(before, after);
+    if (edge < GAP_EDGE_FACTOR * minimum) return { first, length, edge };
   }
   return null;
 }
