@@ -9,7 +9,7 @@ export default function NotFound() {
       <main id="main">
         <Empty title="There is no such page">
           <p>
-            The region may have been renamed or removed. <Link href="/">All regions</Link> are on the first page.
+            A region may have been renamed or removed. <Link href="/">All regions</Link> are on the first page.
           </p>
         </Empty>
       </main>

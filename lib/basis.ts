@@ -6,6 +6,9 @@ import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import * as z from 'zod';
 
+/** Else zod tries to make code at run time, which the pages' Content-Security-Policy forbids and reports. */
+z.config({ jitless: true });
+
 export const EXCLUDABLE_FLAGS = ['estimated', 'provisional', 'ice', 'below-detection', 'suspect'] as const;
 export type ExcludableFlag = (typeof EXCLUDABLE_FLAGS)[number];
 

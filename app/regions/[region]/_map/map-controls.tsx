@@ -18,7 +18,7 @@ export function MapControls({ map, onShowAll }: MapControlsProps) {
     () => map.getZoom(),
   );
   return (
-    <div className={`${styles.controls} leaflet-control`} ref={keepFromMap}>
+    <div className={styles.controls}>
       <button type="button" aria-label="Zoom in" disabled={zoom >= map.getMaxZoom()} onClick={() => map.zoomIn()}>
         <Sign path="M8 3v10M3 8h10" />
       </button>
@@ -44,15 +44,4 @@ function Sign({ path }: { path: string }) {
       <path d={path} fill="none" stroke="currentColor" strokeWidth="1.6" strokeLinecap="round" />
     </svg>
   );
-}
-
-/** Clicks, drags and wheel turns on a control are not the map's. */
-export function keepFromMap(element: HTMLElement | null): (() => void) | undefined {
-  if (!element) return undefined;
-  const stop = (event: Event) => event.stopPropagation();
-  const events = ['click', 'dblclick', 'mousedown', 'touchstart', 'pointerdown', 'wheel', 'keydown', 'mousemove'];
-  for (const name of events) element.addEventListener(name, stop);
-  return () => {
-    for (const name of events) element.removeEventListener(name, stop);
-  };
 }

@@ -8,7 +8,6 @@ import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
 import { type HoverStore, useHovered } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
-import { keepFromMap } from './map-controls.tsx';
 import styles from './station-map.module.css';
 import type { DrawnStations } from './use-needle-layer.ts';
 
@@ -60,24 +59,22 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
       </p>
       {row && (
         <div ref={card} className={styles.card} data-hovering={hovered !== null && hovered !== selected}>
-          <div ref={keepFromMap}>
-            <p className={styles.cardName}>
-              <NeedleMark needle={needleOf(row)} size={22} />
-              <strong>{row.name}</strong>
-            </p>
-            <p className={styles.cardFacts}>
-              {[row.river, row.areaKm2 === null ? 'no drainage area' : area(row.areaKm2, units)]
-                .filter(Boolean)
-                .join(' · ')}
-            </p>
-            <p>{words}</p>
-            {row.note && <p className={styles.cardFacts}>{row.note}</p>}
-            {code === selected && (
-              <Link href={stationHref(slug, row.code, query)} prefetch={false}>
-                Open the station’s page
-              </Link>
-            )}
-          </div>
+          <p className={styles.cardName}>
+            <NeedleMark needle={needleOf(row)} size={22} />
+            <strong>{row.name}</strong>
+          </p>
+          <p className={styles.cardFacts}>
+            {[row.river, row.areaKm2 === null ? 'no drainage area' : area(row.areaKm2, units)]
+              .filter(Boolean)
+              .join(' · ')}
+          </p>
+          <p>{words}</p>
+          {row.note && <p className={styles.cardFacts}>{row.note}</p>}
+          {code === selected && (
+            <Link href={stationHref(slug, row.code, query)} prefetch={false}>
+              Open the station’s page
+            </Link>
+          )}
         </div>
       )}
     </>

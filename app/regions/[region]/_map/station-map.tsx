@@ -2,6 +2,7 @@
 import 'leaflet/dist/leaflet.css';
 import type L from 'leaflet';
 import { memo, useEffect, useMemo, useState } from 'react';
+import { createPortal } from 'react-dom';
 import { AttributionControl, MapContainer, ScaleControl, TileLayer, useMap } from 'react-leaflet';
 import type { Units } from '@/app/components/format';
 import type { HoverStore } from '../hover-store.ts';
@@ -113,11 +114,19 @@ function MapInside(props: InsideProps) {
       {ground.map((source) => (
         <Ground key={source.url} map={map} source={source} />
       ))}
-      <MapControls map={map} onShowAll={bounds ? showAll : null} />
-      <StationCallout map={map} slug={slug} drawn={drawn} hover={hover} selected={selected} units={units} />
+      {createPortal(
+        <>
+          <MapControls map={map} onShowAll={bounds ? showAll : null} />
+          <StationCallout map={map} slug={slug} drawn={drawn} hover={hover} selected={selected} units={units} />
+        </>,
+        beside(map),
+      )}
     </>
   );
 }
+
+/** Controls stand beside Leaflet's own element and not in it: there every click on them would be the map's too. */
+const beside = (map: L.Map): HTMLElement => map.getContainer().parentElement as HTMLElement;
 
 function Ground({ map, source }: { map: L.Map; source: GroundSource }) {
   const failed = useGroundLayer(map, source);

@@ -16,7 +16,8 @@ export function useOwnView(
   const moved = useRef(false);
 
   useEffect(() => {
-    const container = map.getContainer();
+    // the box about the map holds its buttons too
+    const box = map.getContainer().parentElement as HTMLElement;
     const touch = () => {
       moved.current = true;
     };
@@ -25,10 +26,10 @@ export function useOwnView(
       if (moved.current) onView({ latitude: lat, longitude: lng, zoom: map.getZoom() });
     };
     const hands = ['pointerdown', 'wheel', 'keydown'];
-    for (const name of hands) container.addEventListener(name, touch, { capture: true, passive: true });
+    for (const name of hands) box.addEventListener(name, touch, { capture: true, passive: true });
     map.on('moveend', tell);
     return () => {
-      for (const name of hands) container.removeEventListener(name, touch, { capture: true });
+      for (const name of hands) box.removeEventListener(name, touch, { capture: true });
       map.off('moveend', tell);
     };
   }, [map, onView]);
