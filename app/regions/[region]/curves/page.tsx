@@ -6,6 +6,7 @@ import { stationHref } from '@/app/components/links';
 import { ErrorNote } from '@/app/components/notes';
 import { curvesOf } from '@/lib/jobs/curves';
 import { rankingOf } from '@/lib/jobs/ranking';
+import { NoRecords } from '../no-records';
 import { type PageQuery, pageRequest } from '../page-request';
 import { chooseStations } from './choose-stations';
 import { CurvesScreen } from './curves-screen';
@@ -44,6 +45,16 @@ export default async function CurvesPage({ params, searchParams }: Props) {
   });
   const { p10, p50, p90 } = curves.band;
 
+  if (stations.length === 0) {
+    return (
+      <>
+        <Header region={region} page="curves" />
+        <main id="main">
+          <NoRecords slug={region.slug} name={region.name} />
+        </main>
+      </>
+    );
+  }
   return (
     <>
       <Header region={region} page="curves" />

@@ -53,7 +53,7 @@ export function StationPicker({ stations, chosen, lines, choice, leftOut, hasMap
       ? [{ label: 'in view of the map', choice: { way: 'view' } as const, on: choice.way === 'view' }]
       : []),
     { label: 'all', choice: { way: 'all' }, on: choice.way === 'all' },
-    { label: 'none', choice: { way: 'codes', codes: [] }, on: chosen.length === 0 },
+    { label: 'none', choice: { way: 'codes', codes: [] }, on: choice.way === 'codes' && chosen.length === 0 },
   ];
   return (
     <details className={styles.picker} open={open} onToggle={(event) => setOpen(event.currentTarget.open)}>
