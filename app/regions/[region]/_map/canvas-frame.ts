@@ -47,8 +47,8 @@ export class CanvasFrame {
   }
 
   /** A cleared canvas whose unit is a layer pixel. */
-  clear(canvas: HTMLCanvasElement): CanvasRenderingContext2D | null {
-    const context = canvas.getContext('2d');
+  clear(canvas: HTMLCanvasElement, settings?: CanvasRenderingContext2DSettings): CanvasRenderingContext2D | null {
+    const context = canvas.getContext('2d', settings);
     if (!context) return null;
     const ratio = pixelRatio();
     context.setTransform(1, 0, 0, 1, 0, 0);

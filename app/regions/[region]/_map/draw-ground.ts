@@ -15,7 +15,7 @@ const FINEST = 0.8;
 /** Radius of a place that a layer gives as a point, pixels. */
 const POINT_RADIUS = 2.5;
 /** Points a step draws before it lets others work. */
-const POINTS_A_STEP = 1500;
+const POINTS_A_STEP = 400;
 
 /** Draws shapes one after another, pausing after every so many points. */
 export function* drawGround(

@@ -31,6 +31,7 @@ export class NeedleLayer extends L.Layer {
   private selected = -1;
   private readonly sprites = new NeedleSprites();
   private frame = 0;
+  private drawnRadius = 0;
   private readonly area = new CanvasFrame(OVERLAP);
   private map: L.Map | null = null;
 
@@ -62,7 +63,7 @@ export class NeedleLayer extends L.Layer {
   override getEvents(): { [name: string]: L.LeafletEventHandlerFn } {
     return {
       move: () => this.drawIfBeyond(),
-      moveend: () => this.draw(),
+      moveend: () => this.drawIfOutdated(),
       resize: () => this.draw(),
       zoomend: () => this.project(),
       viewreset: () => this.project(),
@@ -140,13 +141,19 @@ export class NeedleLayer extends L.Layer {
     });
   }
 
+  /** After a small drag the picture still serves, unless the discs should have another size. */
+  private drawIfOutdated(): void {
+    if (this.map && (!this.area.holds(this.map) || this.radius() !== this.drawnRadius)) this.draw();
+  }
+
   private draw(): void {
     if (!this.map) return;
     this.area.lay(this.map);
     for (const canvas of [this.base, this.top]) this.area.fit(canvas);
     const context = this.area.clear(this.base);
     if (!context) return;
-    this.sprites.use(this.radius(), pixelRatio(), this.palette);
+    this.drawnRadius = this.radius();
+    this.sprites.use(this.drawnRadius, pixelRatio(), this.palette);
     for (const i of this.index.inside(...this.area.box).sort((a, b) => a - b)) {
       context.globalAlpha = this.faded[i] ? 0.18 : 1;
       this.sprites.draw(context, this.marks[i].needle, this.xs[i], this.ys[i]);
@@ -157,7 +164,7 @@ export class NeedleLayer extends L.Layer {
   private drawTop(): void {
     const context = this.area.clear(this.top);
     if (!context) return;
-    const radius = this.radius();
+    const radius = this.drawnRadius;
     for (const i of new Set([this.selected, this.hovered])) {
       if (i < 0 || i >= this.marks.length) continue;
       const place = { x: this.xs[i], y: this.ys[i] };

@@ -1,7 +1,7 @@
 import type L from 'leaflet';
 
-/** From the ground up; the needles lie over all of them. The map's tiles lie under, at 200. */
-const PANES = { outline: '240', catchment: '250', other: '255', river: '260', needles: '450' };
+/** The ground lies over the map's tiles, which Leaflet puts at 200; the needles lie over all. */
+const PANES = { ground: '250', needles: '450' };
 
 export function makePanes(map: L.Map): void {
   for (const [name, zIndex] of Object.entries(PANES)) {

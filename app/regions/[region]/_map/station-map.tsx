@@ -9,11 +9,12 @@ import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import type { MapView } from '../map-state.ts';
 import { outlineBox, stationBounds } from './bounds.ts';
+import type { GroundLayer } from './ground-layer.ts';
 import { MapControls } from './map-controls.tsx';
 import { makePanes } from './panes.ts';
 import { StationCallout } from './station-callout.tsx';
 import styles from './station-map.module.css';
-import { type GroundSource, useGroundLayer } from './use-ground.ts';
+import { type GroundSource, useGround, useGroundSource } from './use-ground.ts';
 import { useMapKeys } from './use-map-keys.ts';
 import { useMapPointer } from './use-map-pointer.ts';
 import { drawingOrder, useNeedleLayer } from './use-needle-layer.ts';
@@ -84,6 +85,7 @@ function MapInside(props: InsideProps) {
   const map = useMap();
   useState(() => makePanes(map));
   const drawn = useMemo(() => drawingOrder(rows), [rows]);
+  const layerOfGround = useGround(map);
   const layer = useNeedleLayer({ map, drawn, found, hover, selected });
   useMapPointer({ map, layer, drawn, hover, onSelect });
   useMapKeys({ map, layer, drawn, hover, selected, onSelect });
@@ -110,9 +112,9 @@ function MapInside(props: InsideProps) {
 
   return (
     <>
-      {outline && bounds && <Outline map={map} box={outlineBox(bounds)} />}
+      {outline && bounds && <Outline map={map} ground={layerOfGround} box={outlineBox(bounds)} />}
       {ground.map((source) => (
-        <Ground key={source.url} map={map} source={source} />
+        <Ground key={source.url} ground={layerOfGround} source={source} />
       ))}
       {createPortal(
         <>
@@ -128,8 +130,8 @@ function MapInside(props: InsideProps) {
 /** Controls stand beside Leaflet's own element and not in it: there every click on them would be the map's too. */
 const beside = (map: L.Map): HTMLElement => map.getContainer().parentElement as HTMLElement;
 
-function Ground({ map, source }: { map: L.Map; source: GroundSource }) {
-  const failed = useGroundLayer(map, source);
+function Ground({ ground, source }: { ground: GroundLayer; source: GroundSource }) {
+  const failed = useGroundSource(ground, source);
   return failed ? (
     <p role="status" className={styles.failed}>
       The layer “{source.name}” could not be drawn.
@@ -139,7 +141,7 @@ function Ground({ map, source }: { map: L.Map; source: GroundSource }) {
 
 const ATLAS = 'Outline: Natural Earth';
 
-function Outline({ map, box }: { map: L.Map; box: string }) {
+function Outline({ map, ground, box }: { map: L.Map; ground: GroundLayer; box: string }) {
   const source = useMemo<GroundSource>(
     () => ({ kind: 'outline', name: 'outline of land and borders', url: `/map-outline?box=${box}` }),
     [box],
@@ -152,7 +154,7 @@ function Outline({ map, box }: { map: L.Map; box: string }) {
       map.attributionControl?.removeAttribution(ATLAS);
     };
   }, [map]);
-  return <Ground map={map} source={source} />;
+  return <Ground ground={ground} source={source} />;
 }
 
 /** Tells screen readers what the map is and how it is used. */

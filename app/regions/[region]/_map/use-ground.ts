@@ -1,6 +1,6 @@
 import type { GeoJsonObject } from 'geojson';
 import type L from 'leaflet';
-import { useEffect, useState } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { GroundLayer } from './ground-layer.ts';
 import type { GroundKind } from './ground-style.ts';
 import { onThemeChange, readPalette } from './palette.ts';
@@ -11,30 +11,34 @@ export interface GroundSource {
   url: string;
 }
 
-/** Fetches one ground layer and draws it, anew when the theme changes.
- *  @returns true when it could not be had; the map goes on without it */
-export function useGroundLayer(map: L.Map, { kind, url }: GroundSource): boolean {
-  const [data, setData] = useState<GeoJsonObject | null>(null);
-  const [failed, setFailed] = useState(false);
+/** Puts an empty ground on the map and keeps it in the colours of the theme. */
+export function useGround(map: L.Map): GroundLayer {
+  const ground = useMemo(() => new GroundLayer(readPalette()), []);
+  useEffect(() => {
+    ground.addTo(map);
+    const stop = onThemeChange(() => ground.setPalette(readPalette()));
+    return () => {
+      stop();
+      ground.remove();
+    };
+  }, [ground, map]);
+  return ground;
+}
 
+/** Fetches one source of the ground and has it drawn.
+ *  @returns true when it could not be had; the map goes on without it */
+export function useGroundSource(ground: GroundLayer, { kind, url }: GroundSource): boolean {
+  const [failed, setFailed] = useState(false);
   useEffect(() => {
     const request = new AbortController();
     fetch(url, { signal: request.signal })
       .then((answer) => (answer.ok ? answer.json() : Promise.reject(new Error(`status ${answer.status}`))))
-      .then(setData)
+      .then((data: GeoJsonObject) => ground.put(url, kind, data))
       .catch(() => setFailed(!request.signal.aborted));
-    return () => request.abort();
-  }, [url]);
-
-  useEffect(() => {
-    if (!data) return;
-    const layer = new GroundLayer(data, kind, readPalette()).addTo(map);
-    const stop = onThemeChange(() => layer.setPalette(readPalette()));
     return () => {
-      stop();
-      layer.remove();
+      request.abort();
+      ground.drop(url);
     };
-  }, [map, data, kind]);
-
+  }, [ground, url, kind]);
   return failed;
 }

@@ -5,6 +5,9 @@ import type { MapView } from '../map-state.ts';
 /** A lone station is shown with enough land about it to know where it lies. */
 export const FIT: L.FitBoundsOptions = { padding: [36, 36], maxZoom: 9 };
 
+/** A divider that has not moved for this long, milliseconds, has come to rest. */
+const AT_REST = 120;
+
 /** Tells of the view once a person has moved the map; until then the map keeps showing all stations, also when its box
  *  changes size.
  *  @returns how to go back to all stations */
@@ -35,14 +38,20 @@ export function useOwnView(
   }, [map, onView]);
 
   useEffect(() => {
+    let settled: ReturnType<typeof setTimeout>;
     const observer = new ResizeObserver(() => {
       map.invalidateSize({ pan: false, animate: false });
-      if (!moved.current && bounds && !new URLSearchParams(location.search).has('view')) {
-        map.fitBounds(bounds, { ...FIT, animate: false });
-      }
+      clearTimeout(settled);
+      settled = setTimeout(() => {
+        const own = moved.current || new URLSearchParams(location.search).has('view');
+        if (!own && bounds) map.fitBounds(bounds, { ...FIT, animate: false });
+      }, AT_REST);
     });
     observer.observe(map.getContainer());
-    return () => observer.disconnect();
+    return () => {
+      clearTimeout(settled);
+      observer.disconnect();
+    };
   }, [map, bounds]);
 
   return useCallback(() => {

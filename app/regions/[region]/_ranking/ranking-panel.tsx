@@ -68,15 +68,17 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
             Follow the map
           </label>
         )}
-        <input
-          type="search"
-          className={`${ui.input} ${styles.search}`}
-          placeholder="Find a station"
-          aria-label="Find a station by name, code or river"
-          value={search}
-          onChange={(event) => onSearch(event.target.value)}
-        />
-        <DownloadMenu slug={slug} shown={shown[tab].map((row) => row.code)} all={rows.length} />
+        <div className={styles.tools}>
+          <input
+            type="search"
+            className={`${ui.input} ${styles.search}`}
+            placeholder="Find a station"
+            aria-label="Find a station by name, code or river"
+            value={search}
+            onChange={(event) => onSearch(event.target.value)}
+          />
+          <DownloadMenu slug={slug} shown={shown[tab].map((row) => row.code)} all={rows.length} />
+        </div>
       </div>
       <Tabs.Root value={tab} onValueChange={(value) => onTab(value as Tab)} className={styles.tabs}>
         <Tabs.List className={styles.tabList} aria-label="Lists">
