@@ -20,7 +20,7 @@ export const BASIS_PARAMETERS = [
 ] as const;
 
 /** View state of the map screen that links to and from other pages keep. */
-export const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q', 'split'] as const;
+const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q', 'split'] as const;
 
 export type RegionPage = 'map' | 'curves' | 'import';
 

@@ -1,8 +1,8 @@
 /** What a station's mark says: the one place that turns a ranking row into a shape, used by map, table and legend. */
 import type { Trend } from '@/lib/region/ranking-types';
 
-export type NeedleKind = 'ranked' | 'drying' | 'unranked';
-export type NeedleSide = 'falling' | 'rising' | 'level';
+type NeedleKind = 'ranked' | 'drying' | 'unranked';
+type NeedleSide = 'falling' | 'rising' | 'level';
 
 export interface Needle {
   kind: NeedleKind;
@@ -18,7 +18,7 @@ export const PERCENT_AT_45_DEGREES = 10;
 /** A change that prints as 0.0 is drawn level. */
 const LEVEL_BELOW = 0.05;
 /** Under Drying: days without flow gained per decade that tilt by 45°. */
-export const ZERO_DAYS_AT_45_DEGREES = 10;
+const ZERO_DAYS_AT_45_DEGREES = 10;
 
 export interface NeedleFacts {
   rank: number | null;

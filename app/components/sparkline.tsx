@@ -1,6 +1,6 @@
 import styles from './sparkline.module.css';
 
-export interface SparklineProps {
+interface SparklineProps {
   /** the years on the axis, first and last; the same in every row, so that gaps and short records show */
   span: [number, number];
   years: ArrayLike<number>;
@@ -14,7 +14,7 @@ export interface SparklineProps {
 }
 
 /** The height of every figure: 0 to twice the station's mean minimum, so that tilts compare from row to row. */
-export const TOP_RATIO = 2;
+const TOP_RATIO = 2;
 
 /** Annual minima as dots on a real time axis, the slope as a line, its 95 % interval as the wedge about the line's
  *  middle. A value above the top is drawn as a small tick on it. Decoration: the row's figures say the same in words. */

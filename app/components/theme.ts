@@ -2,7 +2,7 @@
 export const THEMES = ['system', 'light', 'dark'] as const;
 export type Theme = (typeof THEMES)[number];
 
-export const THEME_KEY = 'hungerstone.theme';
+const THEME_KEY = 'hungerstone.theme';
 
 /** Sets the chosen theme while the page is parsed. No quotes, ampersands or angle brackets: React escapes those. */
 export const THEME_SCRIPT = `try{const t=localStorage.getItem(\`${THEME_KEY}\`);if(t===\`light\`||t===\`dark\`)document.documentElement.dataset.theme=t}catch{}`;

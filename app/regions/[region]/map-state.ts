@@ -18,7 +18,7 @@ export const parseView = (text: string): MapView | null => {
 export const viewText = ({ latitude, longitude, zoom }: MapView): string =>
   `${latitude.toFixed(4)},${longitude.toFixed(4)},${Number(zoom.toFixed(2))}`;
 
-export const TABS = ['ranked', 'drying', 'unranked'] as const;
+const TABS = ['ranked', 'drying', 'unranked'] as const;
 export type Tab = (typeof TABS)[number];
 
 /** Share of the width that the map has, percent. */

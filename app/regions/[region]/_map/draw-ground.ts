@@ -2,7 +2,7 @@ import type { GroundShape } from './ground-shapes.ts';
 import type { GroundStyle } from './ground-style.ts';
 
 /** From world pixels of zoom 0 to layer points: x · scale − left. */
-export interface GroundView {
+interface GroundView {
   scale: number;
   left: number;
   top: number;

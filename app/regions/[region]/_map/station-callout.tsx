@@ -82,7 +82,7 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
 }
 
 /** Example: "rank 3: −9.3 % per decade (−12.1 to −6.4), adjusted p 0.003; falling, significant" */
-export function calloutWords(row: MapRow): string {
+function calloutWords(row: MapRow): string {
   if (row.drying) {
     const { value, low, high } = row.figure;
     const sure = needleOf(row).significant ? 'significant' : 'may be chance';

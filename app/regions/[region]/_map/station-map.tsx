@@ -20,7 +20,7 @@ import { useMapPointer } from './use-map-pointer.ts';
 import { drawingOrder, useNeedleLayer } from './use-needle-layer.ts';
 import { FIT, useOwnView } from './use-own-view.ts';
 
-export interface StationMapProps {
+interface StationMapProps {
   regionName: string;
   slug: string;
   invented: boolean;

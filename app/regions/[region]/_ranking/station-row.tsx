@@ -49,8 +49,11 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
         <Link href={href} prefetch={false} tabIndex={tabbable ? 0 : -1} aria-current={selected || undefined}>
           <span className={styles.head}>{head}</span>{' '}
           <span className={styles.sub}>
-            {tail && `${tail} · `}
-            {row.code}
+            {tail}
+            <span className={tail ? styles.code : undefined}>
+              {tail && ' · '}
+              {row.code}
+            </span>
             {row.note && (
               <span aria-hidden="true" title={row.note}>
                 {' '}
