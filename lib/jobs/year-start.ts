@@ -11,8 +11,8 @@ import { chunksOf } from './share-out.ts';
 const KEYS: readonly BasisKey[] = ['exclude'];
 const MONTHS = 12;
 
-/** Stations whose regimes suggest the month before the others are read. */
-const FIRST_STATIONS = 20;
+/** Stations whose regimes suggest the month before all are read: from all over the list, since codes run by basin. */
+const SAMPLE_STATIONS = 60;
 
 /** First month of the low-flow year: the basis's own, or for `auto` the region's wettest month.
  *  @throws BasisError when the season does not fit into the year that `auto` came to */
@@ -35,28 +35,32 @@ function wettestMonth(stations: readonly StationInput[], ratios: Float64Array): 
 
 /** Monthly regimes of all stations, twelve ratios each in their order.
  *
- *  Every record is read for this, and reading costs as much as computing: so the first few stations suggest a month, the
+ *  Every record is read for this, and reading costs as much as computing: so a sample of stations suggests a month, the
  *  minima of that year are computed on the way, and kept when the month turns out to be right, as it mostly does. */
 async function regimesOf(stations: readonly StationInput[], basis: Basis): Promise<Float64Array> {
-  const head = stations.slice(0, FIRST_STATIONS);
-  const first = await readRegimes(head, basis, null);
-  const guess = wettestMonth(head, first.ratios);
+  const step = Math.max(1, Math.floor(stations.length / SAMPLE_STATIONS));
+  const sample = stations.filter((_, i) => i % step === 0);
+  const guess = wettestMonth(sample, await sampleRatios(sample, basis));
   const fits = seasonProblem(basis.season, guess) === null;
-  const rest = await Promise.all(
-    chunksOf(stations.slice(FIRST_STATIONS)).map((chunk) => readRegimes(chunk, basis, fits ? guess : null)),
-  );
+  const chunks = await Promise.all(chunksOf(stations).map((chunk) => readRegimes(chunk, basis, fits ? guess : null)));
   const ratios = new Float64Array(stations.length * MONTHS);
   let at = 0;
-  for (const chunk of [first, ...rest]) {
+  for (const chunk of chunks) {
     ratios.set(chunk.ratios, at);
     at += chunk.ratios.length;
   }
-  const minima = rest.flatMap((chunk) => chunk.minima ?? []);
+  const minima = chunks.flatMap((chunk) => chunk.minima ?? []);
   if (minima.length > 0 && wettestMonth(stations, ratios) === guess) {
-    const again = await readRegimes(head, basis, guess);
-    await keepMinima(stations, basis, guess, [...(again.minima ? [again.minima] : []), ...minima]);
+    await keepMinima(stations, basis, guess, minima);
   }
   return ratios;
+}
+
+/** Regimes of a sample, read by all workers at once: they start up together. */
+async function sampleRatios(sample: readonly StationInput[], basis: Basis): Promise<Float64Array> {
+  const half = Math.ceil(sample.length / 2);
+  const parts = await Promise.all(chunksOf(sample, half).map((chunk) => readRegimes(chunk, basis, null)));
+  return Float64Array.from(parts.flatMap(({ ratios }) => [...ratios]));
 }
 
 async function readRegimes(

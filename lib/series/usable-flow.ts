@@ -6,15 +6,20 @@ export function missingMask(exclude: readonly ExcludableFlag[]): number {
   return exclude.reduce<number>((mask, flag) => mask | FLAG[flag], FLAG.rejected);
 }
 
+/** Flags four days at a time, where the bytes lie so that they can be read as words: most days carry no flag. Signed
+ *  words, for V8 keeps those as plain integers. */
+function fourDaysAtATime(flags: Uint8Array): Int32Array {
+  const words = flags.byteOffset % 4 === 0 ? Math.floor(flags.length / 4) : 0;
+  return words > 0 ? new Int32Array(flags.buffer, flags.byteOffset, words) : new Int32Array(0);
+}
+
 /** All flag bits that occur anywhere in a record, in one byte. */
 export function flagBitsPresent(flags: Uint8Array): number {
+  const fourDays = fourDaysAtATime(flags);
   let bits = 0;
-  // Four days at a time where the bytes lie so that they can be read as words: most records carry few flags or none.
-  const words = flags.byteOffset % 4 === 0 ? Math.floor(flags.length / 4) : 0;
-  const fourDays = words > 0 ? new Uint32Array(flags.buffer, flags.byteOffset, words) : new Uint32Array(0);
-  for (let i = 0; i < words; i += 1) bits |= fourDays[i];
+  for (let i = 0; i < fourDays.length; i += 1) bits |= fourDays[i];
   bits = (bits | (bits >>> 8) | (bits >>> 16) | (bits >>> 24)) & 0xff;
-  for (let i = words * 4; i < flags.length; i += 1) bits |= flags[i];
+  for (let i = fourDays.length * 4; i < flags.length; i += 1) bits |= flags[i];
   return bits;
 }
 
@@ -35,6 +40,11 @@ export function usableFlow(series: DailySeries, exclude: readonly ExcludableFlag
   if ((flagBitsPresent(flags) & mask) === 0) return values;
 
   const flow = values.slice();
-  for (let i = 0; i < flow.length; i += 1) if ((flags[i] & mask) !== 0) flow[i] = Number.NaN;
+  const blank = (from: number, to: number) => {
+    for (let i = from; i < to; i += 1) if ((flags[i] & mask) !== 0) flow[i] = Number.NaN;
+  };
+  const fourDays = fourDaysAtATime(flags);
+  for (let word = 0; word < fourDays.length; word += 1) if (fourDays[word] !== 0) blank(word * 4, word * 4 + 4);
+  blank(fourDays.length * 4, flow.length);
   return flow;
 }
