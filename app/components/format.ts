@@ -6,7 +6,7 @@ const MINUS = '\u2212';
 const NO_BREAK = '\u00a0';
 const THIN = '\u202f';
 
-export type Figure = number | null | undefined;
+type Figure = number | null | undefined;
 const isMissing = (value: Figure): value is null | undefined =>
   value === null || value === undefined || !Number.isFinite(value);
 
@@ -83,7 +83,7 @@ export const UNIT_WORDS = {
 
 export const flowIn = (m3s: Figure, units: Units): Figure =>
   isMissing(m3s) || units === 'metric' ? m3s : m3s * FT3_PER_M3;
-export const areaIn = (km2: Figure, units: Units): Figure =>
+const areaIn = (km2: Figure, units: Units): Figure =>
   isMissing(km2) || units === 'metric' ? km2 : km2 * MI2_PER_KM2;
 export const specificIn = (lsKm2: Figure, units: Units): Figure =>
   isMissing(lsKm2) || units === 'metric' ? lsKm2 : lsKm2 * FT3S_MI2_PER_LS_KM2;
