@@ -3,5 +3,7 @@ export async function register(): Promise<void> {
   if (process.env.NEXT_RUNTIME === 'nodejs' && process.env.NEXT_PHASE !== 'phase-production-build') {
     const { recoverJobs } = await import('./lib/jobs/recover.ts');
     await recoverJobs();
+    const { keepWorkersReady } = await import('./lib/jobs/pool.ts');
+    keepWorkersReady();
   }
 }

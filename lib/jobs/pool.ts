@@ -14,10 +14,10 @@ const IDLE_MILLISECONDS = 20_000;
 export const THREADS = Math.max(2, availableParallelism());
 
 /** The process's one pool of workers. It hangs on `globalThis` since a Next server loads this module several times. */
-function pool(): Piscina {
+function pool(minThreads = 0): Piscina {
   holder[KEY] ??= new Piscina({
     filename: join(/* turbopackIgnore: true */ process.cwd(), '.build', 'worker.mjs'),
-    minThreads: 0,
+    minThreads,
     maxThreads: THREADS,
     idleTimeout: IDLE_MILLISECONDS,
     // A worker must hear the message that cancels its import: it may not sleep in Atomics.wait.
@@ -26,6 +26,11 @@ function pool(): Piscina {
     env: SHARE_ENV,
   });
   return holder[KEY];
+}
+
+/** Starts all workers and keeps them: for a server, where the first asker should not wait for them to load. */
+export function keepWorkersReady(): void {
+  pool(THREADS);
 }
 
 /** Runs a task of lib/jobs/tasks.ts in a worker and answers its result. Typed arrays in `transfer` move, uncopied.

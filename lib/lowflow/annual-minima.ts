@@ -29,16 +29,20 @@ const LONGEST_YEAR = 366;
  *  A window counts when all its n days are present and lie inside one low-flow year (and season); means are rounded to
  *  10 significant digits. Years that break a rule of completeness are listed with the reason; their minimum is then
  *  only known to be "at most" the one given. Days outside the record are missing.
+ *  @param flow  the usable flow, where the caller has it already
  *  @returns flows in m³/s; no years when the record holds no value
  *  @throws RangeError for a day count, month or season that cannot be, and unlike lengths of values and flags
  *  Source: definition as in Riggs, 1972, Low-flow investigations, USGS TWRI 4-B1; WMO-No. 1029, 2008. */
-export function annualMinima(series: DailySeries, options: MinimaOptions): AnnualMinima {
+export function annualMinima(
+  series: DailySeries,
+  options: MinimaOptions,
+  flow: Float64Array = usableFlow(series, options.exclude),
+): AnnualMinima {
   checkDays('annualMinima', options.days);
   if (!(options.maxMissingDays >= 0)) {
     throw new RangeError(`annualMinima: maxMissingDays must be at least 0, got ${options.maxMissingDays}`);
   }
   const { yearStart, days } = options;
-  const flow = usableFlow(series, options.exclude);
   const anyFlag = flagBitsPresent(series.flags) !== 0;
   const range = valuedYears(series, yearStart);
   const count = range === null ? 0 : range.last - range.first + 1;

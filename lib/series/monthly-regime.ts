@@ -8,9 +8,13 @@ import { usableFlow } from './usable-flow.ts';
  *  A month's mean is over all its observed days of the whole record. The divisor is the mean over the months that were
  *  seen, all twelve in any record of a year or more.
  *  @param exclude  flags treated as missing
+ *  @param flow     the usable flow, where the caller has it already
  *  @returns        12 ratios, January first; NaN for a month never seen, and for all when the river never flows */
-export function monthlyRegime(series: DailySeries, exclude: readonly ExcludableFlag[]): Float64Array {
-  const flow = usableFlow(series, exclude);
+export function monthlyRegime(
+  series: DailySeries,
+  exclude: readonly ExcludableFlag[],
+  flow: Float64Array = usableFlow(series, exclude),
+): Float64Array {
   const sums = new Float64Array(12);
   const counts = new Float64Array(12);
   for (let i = 0; i < flow.length; ) {

@@ -3,7 +3,7 @@
 import { performance } from 'node:perf_hooks';
 import { rankingProduct } from '../../lib/export/ranking-product.ts';
 import { forgetResults } from '../../lib/jobs/cached.ts';
-import { closePool } from '../../lib/jobs/pool.ts';
+import { closePool, keepWorkersReady } from '../../lib/jobs/pool.ts';
 import { rankingOf } from '../../lib/jobs/ranking.ts';
 import { openConnection } from '../../lib/store/connection.ts';
 import { closeStore } from '../../lib/store/open.ts';
@@ -32,6 +32,9 @@ const connection = openConnection();
 connection.exec('DELETE FROM Result');
 connection.close();
 const region = (await getRegion(process.argv[2]))!;
+// As in a server: the workers have started, and nothing of the region is at hand.
+keepWorkersReady();
+await new Promise((resolve) => setTimeout(resolve, 3000));
 let cold = 0;
 const pause = await longestPause(async () => {
   [, cold] = await timed(() => rankingOf(region, region.basis));

@@ -2,6 +2,7 @@ import type { ExcludableFlag } from '../../basis.ts';
 import { annualMinima, type MinimaOptions } from '../../lowflow/annual-minima.ts';
 import type { AnnualMinima } from '../../lowflow/annual-minima-types.ts';
 import { monthlyRegime } from '../../series/monthly-regime.ts';
+import { usableFlow } from '../../series/usable-flow.ts';
 import { readSeries } from '../../store/records.ts';
 import { type PackedMinima, packMinima } from '../pack-minima.ts';
 import { noMinima } from './minima.ts';
@@ -11,7 +12,7 @@ const MONTHS = 12;
 export interface RegimesTask {
   stationIds: number[];
   exclude: ExcludableFlag[];
-  /** also answer the minima under these terms: reading a record costs as much as computing from it */
+  /** also answer the minima under these terms, with the same `exclude`: reading a record costs as much as computing from it */
   minimaOptions: MinimaOptions | null;
 }
 
@@ -30,8 +31,9 @@ export function regimes({ stationIds, exclude, minimaOptions }: RegimesTask): {
   readSeries(stationIds, (id, series, hash) => {
     const at = place.get(id)!;
     hashes[at] = hash;
-    ratios.set(monthlyRegime(series, exclude), at * MONTHS);
-    if (minimaOptions) minima[at] = annualMinima(series, minimaOptions);
+    const flow = usableFlow(series, exclude);
+    ratios.set(monthlyRegime(series, exclude, flow), at * MONTHS);
+    if (minimaOptions) minima[at] = annualMinima(series, minimaOptions, flow);
   });
   if (!minimaOptions) return { ratios, hashes, minima: null };
   const none = noMinima(minimaOptions);
