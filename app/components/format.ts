@@ -83,8 +83,7 @@ export const UNIT_WORDS = {
 
 export const flowIn = (m3s: Figure, units: Units): Figure =>
   isMissing(m3s) || units === 'metric' ? m3s : m3s * FT3_PER_M3;
-const areaIn = (km2: Figure, units: Units): Figure =>
-  isMissing(km2) || units === 'metric' ? km2 : km2 * MI2_PER_KM2;
+const areaIn = (km2: Figure, units: Units): Figure => (isMissing(km2) || units === 'metric' ? km2 : km2 * MI2_PER_KM2);
 export const specificIn = (lsKm2: Figure, units: Units): Figure =>
   isMissing(lsKm2) || units === 'metric' ? lsKm2 : lsKm2 * FT3S_MI2_PER_LS_KM2;
 

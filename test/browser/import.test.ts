@@ -1,11 +1,16 @@
 import { Buffer } from 'node:buffer';
+import { appendFileSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { dirname, join } from 'node:path';
 import type { Page } from 'playwright-core';
 import { afterEach, expect, test } from 'vitest';
 import { deleteRegion, fetchJson, newRegion } from './demo-region.ts';
 import { accessibilityProblems, hydrated, newPage } from './harness.ts';
 
 const made: string[] = [];
+const madeFiles: string[] = [];
 afterEach(async () => {
+  for (const path of madeFiles.splice(0)) rmSync(dirname(path), { recursive: true });
   for (const slug of made.splice(0)) await deleteRegion(slug);
 });
 
@@ -36,6 +41,16 @@ function days(code: string, count: number, flow: (day: number) => string): strin
   });
 }
 const flows = (...rows: string[][]) => ['station,date,flow_m3s', ...rows.flat()].join('\n');
+
+/** A file that takes seconds to import, longer than a page takes to come back: eight million rows. */
+function slowFile(): string {
+  const path = join(mkdtempSync(join(tmpdir(), 'hungerstone-')), 'big.csv');
+  const station = days('0000', 40_000, () => '1.234').join('\n');
+  writeFileSync(path, 'station,date,flow_m3s\n');
+  for (let code = 1000; code < 1200; code++) appendFileSync(path, `${station.replaceAll('0000,', `${code},`)}\n`);
+  madeFiles.push(path);
+  return path;
+}
 
 test('station list and flows together: the report counts every row and lists each rejected one', async () => {
   const { page, slug } = await importPage();
@@ -174,10 +189,7 @@ test('undo asks first, then takes values and stations away again', async () => {
 
 test('a running import survives a closed page, can be cancelled, and leaves nothing', async () => {
   const { page, slug } = await importPage();
-  const rows = Array.from({ length: 60 }, (_, station) =>
-    days(String(station).padStart(4, '0'), 15_000, () => '1.234'),
-  );
-  await choose(page, file('big.csv', flows(...rows)));
+  await page.setInputFiles('input[type=file]', slowFile());
   await start(page);
   await page.getByRole('progressbar').waitFor();
   await page.getByText(/the import goes on/).waitFor();
