@@ -77,7 +77,7 @@ describe('parseBasis', () => {
     ['serialCorrection', ['ar1-regional', 'ar1', 'none'], ['pre-whitening']],
     ['alpha', [0.001, 0.5], [0, 0.0009, 0.51, Number.NaN]],
     ['units', ['metric', 'us'], ['imperial']],
-  ])('%s: takes what the contract says and refuses the rest by name and value', (key, good, bad) => {
+  ])('%s: takes its values and refuses the rest by name and value', (key, good, bad) => {
     for (const value of good) expect(parseBasis({ [key]: value })[key]).toEqual(value);
     for (const value of bad) {
       expect(() => parseBasis({ [key]: value }), JSON.stringify(value)).toThrow(BasisError);
