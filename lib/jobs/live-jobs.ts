@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { EventEmitter } from 'node:events';
+import { inspect } from 'node:util';
 import { beatJob, createJob, finishJob, getJob, startJob } from '../store/jobs.ts';
 
 /** What a job that was cancelled throws. */
@@ -131,7 +132,7 @@ function endOf(error: unknown): { state: 'failed' | 'cancelled'; error: string; 
   if (error instanceof CancelledError) return { state: 'cancelled', error: error.message };
   if (error instanceof FailedWithResult) return { state: 'failed', error: error.message, result: error.result };
   // Anything else may hold paths or data of the machine: the server's own messages say it.
-  process.emitWarning(error instanceof Error ? error : String(error));
+  process.emitWarning(error instanceof Error ? error : inspect(error));
   return { state: 'failed', error: 'Something went wrong in the program. The server’s own messages say why.' };
 }
 
