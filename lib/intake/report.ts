@@ -46,12 +46,12 @@ export function stationReport(part: StagedPart, duplicates: number): StationRepo
     if (value < min) min = value;
     if (value > max) max = value;
   }
-  const any = first >= 0;
+  const hasValues = first >= 0;
   return {
     ...{ code: part.code, values: report.values, missing: report.missing },
-    first: any ? isoDate(firstDay + first) : null,
-    last: any ? isoDate(firstDay + last) : null,
-    ...{ zeros: report.zeros, min: any ? min : null, max: any ? max : null },
+    first: hasValues ? isoDate(firstDay + first) : null,
+    last: hasValues ? isoDate(firstDay + last) : null,
+    ...{ zeros: report.zeros, min: hasValues ? min : null, max: hasValues ? max : null },
     ...{ gaps: report.gaps, longestGapDays: report.longestGapDays, duplicates },
   };
 }

@@ -140,7 +140,7 @@ export interface InspectOptions {
   unit?: FlowUnit;
   /** code of the one station of a file that names none */
   station?: string;
-  /** the region's registry: any other station refuses the file; null or absent: stations are made from the flows */
+  /** the region's registry: a station outside it refuses the file; null or absent: stations are made from the flows */
   knownStations?: KnownStation[] | null;
 }
 

@@ -91,7 +91,7 @@ function scaledCurve(curve: RawCurve, { areaKm2 }: StationFacts, { normalise }: 
   return normaliseCurve(curve, { by: normalise, areaKm2 });
 }
 
-/** The band over no station at all is NaN everywhere, and as long as any other. */
+/** The band over no station at all is NaN everywhere, and of the same length. */
 function bandOf(curves: readonly StationCurveRow[]): RegionCurves['band'] {
   if (curves.length > 0) return regionBand(curves.map(({ flows }) => flows));
   const none = () => new Float64Array(STANDARD_EXCEEDANCES.length).fill(Number.NaN);

@@ -1,8 +1,9 @@
 import { DEFAULT_BASIS, type ResolvedBasis } from '../../../lib/basis.ts';
 import type { RankingRow } from '../../../lib/region/ranking-types.ts';
+import { rankedRow } from '../region/region-fixtures.ts';
 
 /** A ranked station with a figure in every field. */
-export const RANKED: RankingRow = {
+export const RANKED: RankingRow = rankedRow({
   id: 1,
   code: '007',
   name: 'Alder, at the "mill"',
@@ -11,9 +12,6 @@ export const RANKED: RankingRow = {
   longitude: -7.5,
   areaKm2: 120,
   influence: 'natural',
-  rank: 1,
-  rankLow: null,
-  rankHigh: null,
   yearsUsed: 30,
   firstYear: 1990,
   lastYear: 2019,
@@ -28,21 +26,12 @@ export const RANKED: RankingRow = {
   z: -1.96,
   p: 0.05,
   pAdjusted: 0.09,
-  trend: 'falling',
-  trendOf: 'minima',
-  zeroFlowYears: 0,
-  zeroDaysPerDecade: null,
-  zeroDaysLow: null,
-  zeroDaysHigh: null,
-  unrankedReason: null,
-  drying: false,
-  note: '',
   r1: 0.1,
   serialFactor: 1.2,
   intercept: 5,
   years: [1990, 2019],
   minima: [0.4, 0.3],
-};
+});
 
 /** A station without a place on the map or in the ranking. */
 export const UNRANKED: RankingRow = {

@@ -3,9 +3,10 @@ import { decodeRatios } from '@/app/components/spark-code';
 import { mapRows } from '@/app/regions/[region]/map-row';
 import { DEFAULT_BASIS, type ResolvedBasis } from '@/lib/basis';
 import type { Ranking, RankingRow } from '@/lib/region/ranking-types';
+import { rankedRow } from '../../region/region-fixtures';
 
 /** A station whose minima fall from 3 to 1 m³/s in 20 years: −1 m³/s per decade, half the mean of 2. */
-const row: RankingRow = {
+const row = rankedRow({
   id: 1,
   code: '1',
   name: 'Ambry at Stonefold',
@@ -14,9 +15,6 @@ const row: RankingRow = {
   longitude: 14,
   areaKm2: 100,
   influence: 'natural',
-  rank: 1,
-  rankLow: null,
-  rankHigh: null,
   yearsUsed: 3,
   firstYear: 2000,
   lastYear: 2020,
@@ -31,22 +29,13 @@ const row: RankingRow = {
   z: -1,
   p: 0.01,
   pAdjusted: 0.012345,
-  trend: 'falling',
-  trendOf: 'minima',
-  zeroFlowYears: 0,
-  zeroDaysPerDecade: null,
-  zeroDaysLow: null,
-  zeroDaysHigh: null,
-  unrankedReason: null,
-  drying: false,
-  note: '',
   r1: 0,
   serialFactor: 1,
   // 3 at the year 2000 on a slope of −0.1 a year
   intercept: 203,
   years: [2000, 2010, 2020],
   minima: [3, 2, 1],
-};
+});
 const { period: _, yearStart: __, ...rest } = DEFAULT_BASIS;
 const basis: ResolvedBasis = {
   ...rest,
