@@ -10,6 +10,7 @@
 
 import { dateOfDay } from '../lib/calendar/day.ts';
 import type { StationFacts } from '../lib/region/ranking-types.ts';
+import type { StationChange } from '../lib/series/station-history.ts';
 import { type Catchment, runoffOf } from './catchment-flow.ts';
 import { type Drainage, layDrainage } from './drainage.ts';
 import { CELL_KM2 } from './hex-grid.ts';
@@ -37,7 +38,7 @@ export interface RegionRequest {
 
 export interface SeedStation extends Omit<StationFacts, 'id'> {
   /** dated changes: what, and since when */
-  changes: { date: string; kind: string; note: string }[];
+  changes: StationChange[];
   notes: string;
 }
 
@@ -124,7 +125,7 @@ function describeStations(
   return sites.map((site, i) => {
     const [longitude, latitude] = toDegrees(points.get(site.cell) ?? drainage.grid.centre(site.cell));
     const { influence, spring, damYear, abstraction: taken, notes } = traits[i];
-    const changes = [];
+    const changes: StationChange[] = [];
     if (damYear) changes.push({ date: `${damYear}-01-01`, kind: 'dam', note: 'Reservoir above the station filled.' });
     if (taken)
       changes.push({ date: `${taken.fromYear}-01-01`, kind: 'abstraction', note: 'Water works began to pump.' });

@@ -18,9 +18,10 @@ export async function inspectFile(path: string, options: InspectOptions): Promis
       });
       mapping.date = { ...mapping.date, order };
     }
-    return { mapping, header, preview, problems, valueCandidates };
+    return { mapping, header, preview, problems, valueCandidates, understood: [], others: [], facts: [], sheets: null };
   } catch (error) {
     if (!(error instanceof IntakeError)) throw error;
-    return { mapping: null, header: null, preview: [], problems: [error], valueCandidates: [] };
+    const nothing = { understood: [], others: [], facts: [], sheets: null };
+    return { mapping: null, header: null, preview: [], problems: [error], valueCandidates: [], ...nothing };
   }
 }

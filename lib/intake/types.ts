@@ -1,9 +1,16 @@
 import type { Influence } from '../region/ranking-types.ts';
 import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
+import type { Quantity, Unit } from '../series/quantities.ts';
+import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
 
-export { FLOW_UNITS, type FlowUnit };
+export { FLOW_UNITS, type FlowUnit, type Quantity, type Unit };
 
-export const LAYOUTS = ['long', 'wide', 'agency-tab', 'whitespace', 'fixed-width'] as const;
+/** How the days lie in a file. `month-rows`: a row a month with a column for each day of it; `day-rows`: a row a day of the
+ *  month with a column for each month, in blocks of a year. The last three are documents, whose places are not by column. */
+export const LAYOUTS = [
+  ...(['long', 'wide', 'agency-tab', 'whitespace', 'fixed-width', 'month-rows', 'day-rows'] as const),
+  ...(['waterml-2', 'waterml-1', 'waterml-json'] as const),
+] as const;
 export type Layout = (typeof LAYOUTS)[number];
 
 /** Where a field stands: a column of delimited text (position from 0, or header name), or characters of a line
@@ -24,14 +31,45 @@ export interface Mapping {
   /** null in wide layouts, where every other column is a station */
   value: FieldPlace | null;
   flag: FieldPlace | null;
-  unit: FlowUnit | null;
+  unit: Unit | null;
   /** text that means "no value", beyond the usual ones */
   missing: string[];
   decimal: '.' | ',';
+  /** sign between groups of three digits ("1,234.5"); absent: none */
+  thousands?: ',' | '.' | ' ' | "'";
+  /** two-digit years: the year that the first of the hundred they stand for is (1930: "29" is 2029, "30" is 1930) */
+  firstYear?: number;
+  /** several values a day: their mean is the day's, where at least this share (0 to 1) of the day is covered */
+  dailyMean?: number;
+  /** what the values are of; absent: flow */
+  quantity?: Quantity;
+  /** further quantities of the same file, each laid over this mapping in a reading of its own */
+  also?: AlsoQuantity[];
+  /** name of the sheet of a workbook */
+  sheet?: string;
   /** delimited layouts only */
   delimiter?: string;
   /** only the rows whose column holds this text are flows; for files that mix several quantities */
   where?: { column: number | string; equals: string };
+}
+
+/** Where a file has another quantity than the mapping's own. */
+export interface AlsoQuantity {
+  quantity: Quantity;
+  unit: Unit;
+  value: FieldPlace | null;
+  flag?: FieldPlace | null;
+  where?: { column: number | string; equals: string };
+}
+
+/** What a file of flows says of a station beside its days. Facts fill in what nobody has said yet; they never replace. */
+export interface FoundFacts {
+  code: string;
+  name?: string;
+  river?: string;
+  latitude?: number;
+  longitude?: number;
+  areaKm2?: number;
 }
 
 /** A row that was not taken, with its place in the file. */
@@ -45,6 +83,8 @@ export interface RejectedRow {
 /** Counts of one station in one file, values as imported (in the file's unit). */
 export interface StationReport {
   code: string;
+  /** absent: flow */
+  quantity?: Quantity;
   values: number;
   missing: number;
   /** ISO dates of the first and last row with a value; null when there is none */
@@ -63,7 +103,7 @@ export interface StationReport {
 export interface ImportReport {
   file: string;
   layout: Layout;
-  unit: FlowUnit;
+  unit: Unit;
   mapping: Mapping;
   rows: number;
   accepted: number;
@@ -75,7 +115,23 @@ export interface ImportReport {
   stations: StationReport[];
   sha256: string;
   warnings: string[];
+  /** stations' facts that the file states; absent when it states none */
+  facts?: FoundFacts[];
 }
+
+/** What a person can answer so that a file can be read.
+ *  century: which hundred years two-digit years stand for · daily-mean: whether several values a day become their mean ·
+ *  codes: whether codes that differ by case or leading zeros are the registry's · correction: whether coordinates are
+ *  swapped or run from 0 to 360 · quantity: which of several quantities is the flow · sheet: which sheet of a workbook */
+export const NEEDS = [
+  ...(['unit', 'station', 'date-order', 'mapping', 'area', 'revise', 'century', 'daily-mean', 'codes'] as const),
+  ...(['correction', 'quantity', 'sheet', 'thousands'] as const),
+] as const;
+export type Need = (typeof NEEDS)[number];
+
+/** Corrections of a registry's coordinates that a person may ask for. */
+export const CORRECTIONS = ['swap-coordinates', 'longitude-360'] as const;
+export type Correction = (typeof CORRECTIONS)[number];
 
 /** A file that cannot be taken: names the file, the row where there is one, the value and the remedy. */
 export class IntakeError extends Error {
@@ -91,7 +147,7 @@ export class IntakeError extends Error {
       /** what to do about it */
       remedy: string;
       /** machine-readable: the screen asks for what is missing */
-      needs?: 'unit' | 'station' | 'date-order' | 'mapping' | 'area' | 'revise';
+      needs?: Need;
       /** every row at fault, where several are (a registry is taken whole or not at all) */
       rows?: RejectedRow[];
     },
@@ -105,7 +161,9 @@ export class IntakeError extends Error {
 /** One station's values of one file: consecutive days from `firstDay`, as written. */
 export interface StagedPart {
   code: string;
-  unit: FlowUnit;
+  /** absent: flow */
+  quantity?: Quantity;
+  unit: Unit;
   firstDay: number;
   /** in `unit`, NaN = missing */
   values: Float64Array;
@@ -137,11 +195,13 @@ export interface InspectOptions {
   /** laid over what is recognised, key by key */
   mapping?: Partial<Mapping>;
   /** unit of the values, before what the file itself says */
-  unit?: FlowUnit;
+  unit?: Unit;
   /** code of the one station of a file that names none */
   station?: string;
   /** the region's registry: a station outside it refuses the file; null or absent: stations are made from the flows */
   knownStations?: KnownStation[] | null;
+  /** codes that differ from the registry's by case or leading zeros only are taken for the registry's */
+  matchCodes?: boolean;
 }
 
 export interface ReadFlowsOptions extends InspectOptions {
@@ -174,6 +234,43 @@ export interface Inspection {
   /** what must be answered, or put right, before the file can be read; empty when it can */
   problems: IntakeError[];
   valueCandidates: ValueCandidate[];
+  /** the first rows as the program understands them, in the order of the file; empty until it can be read */
+  understood: UnderstoodRow[];
+  /** quantities beside the flow that the file holds, for a person to add */
+  others: AlsoCandidate[];
+  /** stations' facts that the file states */
+  facts: FoundFacts[];
+  /** the sheets of a workbook, in its order; null for other files */
+  sheets: string[] | null;
+}
+
+/** One value as understood, or the reason why its row is not taken. */
+export interface UnderstoodRow {
+  /** line or row number in the file, from 1; of a document, the number of the point */
+  row: number;
+  station: string;
+  /** ISO date; null where none can be read */
+  date: string | null;
+  /** null: missing */
+  value: number | null;
+  /** the flag as written */
+  flag: string;
+  /** bits of FLAG that it was understood as */
+  bits: number;
+  /** why the row is not taken; null when it is */
+  problem: string | null;
+}
+
+/** A quantity of a file that is not read unless a person asks for it. */
+export interface AlsoCandidate {
+  label: string;
+  samples: string[];
+  /** null where it is not known what it is of, or in what unit */
+  quantity: Quantity | null;
+  unit: Unit | null;
+  value: FieldPlace | null;
+  flag: FieldPlace | null;
+  where?: { column: number | string; equals: string };
 }
 
 /** One row of a station registry. */
@@ -185,9 +282,13 @@ export interface RegistryStation {
   longitude: number | null;
   areaKm2: number | null;
   influence: Influence;
+  changes?: StationChange[];
+  namedFlows?: NamedFlow[];
+  notes?: string;
+  derived?: DerivedRecipe | null;
 }
 
-export type RegistryFact = Exclude<keyof RegistryStation, 'code'>;
+export type RegistryFact = 'name' | 'river' | 'latitude' | 'longitude' | 'areaKm2' | 'influence';
 
 /** A registry file, read whole. A registry with any bad row is refused with all of its bad rows named. */
 export interface Registry {

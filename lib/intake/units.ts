@@ -18,6 +18,8 @@ const PATTERNS: Record<FlowUnit, RegExp> = {
     `ft\\^?3${PER_SECOND}|ft3 ?s|cfs|cusecs?|cubic (?:feet|foot)${PER_SECOND}|cu\\.? ?ft\\.?${PER_SECOND}`,
   ),
   'ML/d': pattern(`ml${PER_DAY}|ml d|mld|megalit(?:er|re)s?(?:${PER_DAY})?|\\(ml\\)`),
+  'Mgal/d': pattern(`mgd|mgal${PER_DAY}|mgal d|million (?:us )?gal(?:lon)?s?${PER_DAY}`),
+  'acre-ft/d': pattern(`acre[- ]?(?:ft|feet|foot)${PER_DAY}|acre[- ]ft d|af${PER_DAY}|afd`),
   'mm/d': pattern(`mm${PER_DAY}|mm d|mmd|millimet(?:er|re)s?${PER_DAY}`),
 };
 

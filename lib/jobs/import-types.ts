@@ -1,4 +1,6 @@
-import type { FlowUnit, ImportReport, Inspection, IntakeError, Mapping } from '../intake/types.ts';
+import type { Correction, ImportReport, Inspection, IntakeError, Mapping, Unit } from '../intake/types.ts';
+import type { OverlapRule } from '../store/lay-parts.ts';
+import type { Revisions } from '../store/revisions.ts';
 
 export const FILE_KINDS = ['registry', 'layer', 'flows'] as const;
 export type FileKind = (typeof FILE_KINDS)[number];
@@ -8,9 +10,13 @@ export interface FileChoices {
   /** what the file is; recognised by content where nobody says */
   kind?: FileKind;
   mapping?: Partial<Mapping>;
-  unit?: FlowUnit;
+  unit?: Unit;
   /** code of the station of a file that names none */
   station?: string;
+  /** take codes that differ by case or leading zeros for those of the registry */
+  matchCodes?: boolean;
+  /** of a registry's coordinates */
+  corrections?: Correction[];
 }
 
 /** What a person says about a whole import. */
@@ -19,8 +25,12 @@ export interface ImportChoices {
   all?: FileChoices;
   /** by file name */
   files?: Record<string, FileChoices>;
-  /** take new values where they are unlike those that stand; otherwise such a file is refused */
+  /** take new values where they are unlike those that stand; short for rule 'take-new' */
   revise?: boolean;
+  /** what becomes of days whose values are unlike those that stand; absent: such a file is refused, with its revisions */
+  rule?: OverlapRule;
+  /** read, check and compare, and change nothing: the outcome says what would come of it */
+  dryRun?: boolean;
   /** who imports, as shown in the list of imports */
   by?: string;
 }
@@ -56,6 +66,8 @@ export interface ImportProblem {
   problem: IntakeError['problem'] | null;
   /** what the file looks like, where an answer is needed */
   inspection: Omit<Inspection, 'problems'> | null;
+  /** where values are unlike those that stand */
+  revisions?: Revisions;
 }
 
 /** One file that was taken in, in the order of the import. */
@@ -69,10 +81,16 @@ export interface TakenFile {
   /** for flows: counts, rejected rows, gaps; null for registries and layers */
   report: ImportReport | null;
   warnings: string[];
+  /** what it did to days that stood: null for registries and layers */
+  revisions: Revisions | null;
 }
 
 /** What came of an import job: files taken, or the problems of a job that failed. */
 export interface ImportOutcome {
   taken: TakenFile[];
   problems: ImportProblem[];
+  /** a dry run: `taken` is what would be taken, with import ids of 0 */
+  dryRun?: boolean;
+  /** what the checks found on the records that the import touched */
+  findings?: { stations: number; findings: number };
 }

@@ -1,6 +1,7 @@
 import { FLAG } from '../series/daily-series.ts';
 import type { FlowUnit } from '../series/flow-units.ts';
 import { toM3s } from '../series/flow-units.ts';
+import type { Unit } from '../series/quantities.ts';
 import { type Code, NO_ROW } from './codes.ts';
 
 /** What an import does on a day that holds a value already, when its own is another one.
@@ -10,7 +11,7 @@ export type OverlapRule = (typeof OVERLAP_RULES)[number];
 
 /** One import's days of one station, as written. */
 export interface LayablePart {
-  unit: FlowUnit;
+  unit: Unit;
   firstDay: number;
   values: Float64Array;
   codes: Uint8Array;
@@ -19,7 +20,7 @@ export interface LayablePart {
 }
 
 export interface LaidDays {
-  unit: FlowUnit;
+  unit: Unit;
   firstDay: number;
   values: Float64Array;
   /** flag bits a day */
@@ -66,9 +67,9 @@ export function layParts(parts: readonly LayablePart[], areaKm2: number | null, 
   return laid;
 }
 
-function conversion(from: FlowUnit, to: FlowUnit, areaKm2: number | null): number {
+function conversion(from: Unit, to: Unit, areaKm2: number | null): number {
   if (from === to) return 1;
-  const factor = toM3s(from, areaKm2) / toM3s(to, areaKm2);
+  const factor = toM3s(from as FlowUnit, areaKm2) / toM3s(to as FlowUnit, areaKm2);
   if (!(factor > 0))
     throw new RangeError(`layParts: areaKm2 must be positive to turn ${from} into ${to}, got ${areaKm2}`);
   return factor;

@@ -1,4 +1,4 @@
-import type { FlowUnit } from '../series/flow-units.ts';
+import type { Unit } from '../series/quantities.ts';
 import { blobOf, blobOfValues, bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
 import { type Connection, change, rows } from './connection.ts';
@@ -12,7 +12,7 @@ export interface RecordHead extends RecordSummary {
   quantity: string;
   partId: number | null;
   laidId: number | null;
-  unit: FlowUnit;
+  unit: Unit;
   firstDay: number;
   days: number;
 }
@@ -44,7 +44,7 @@ export function loadParts(connection: Connection, stationId: number, quantity: s
     }),
   );
 }
-type PartRow = [number, number, FlowUnit, number, string, Buffer, Buffer, OverlapRule];
+type PartRow = [number, number, Unit, number, string, Buffer, Buffer, OverlapRule];
 
 interface Place {
   stationId: number;

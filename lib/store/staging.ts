@@ -97,7 +97,7 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
     jobId,
     path: file,
     addFile: ({ kind, fileName }) => Number(insertFile.run([kind, fileName]).lastInsertRowid),
-    stagePart(fileId, part, quantity = 'flow') {
+    stagePart(fileId, part, quantity = part.quantity ?? 'flow') {
       const { code, unit, firstDay, values, codes, codeList } = part;
       if (values.length !== codes.length || values.length === 0) {
         throw new RangeError(

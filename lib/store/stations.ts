@@ -1,21 +1,19 @@
 import type { Influence, StationFacts } from '../region/ranking-types.ts';
+import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
 import { rows, sharedConnection } from './connection.ts';
 import { openStore } from './open.ts';
 
 export { type StationRecord, stationRecords } from './records.ts';
 export { upsertRegistry } from './registry.ts';
 
-/** A dated change on the river or at the gauge: a dam, an abstraction, a new weir or rating. */
-export interface StationChange {
-  /** ISO date */
-  date: string;
-  kind: string;
-  note: string;
-}
+export type { StationChange };
 
 export interface StationRow extends StationFacts {
   changes: StationChange[];
   notes: string;
+  namedFlows: NamedFlow[];
+  /** null for a measured station */
+  derived: DerivedRecipe | null;
 }
 
 const FACTS = {
@@ -46,7 +44,15 @@ export async function listStations(regionId: number): Promise<StationFacts[]> {
 export async function getStation(regionId: number, code: string): Promise<StationRow | null> {
   const row = await openStore().prisma.station.findUnique({
     where: { regionId_code: { regionId, code } },
-    select: { ...FACTS, changes: true, notes: true },
+    select: { ...FACTS, changes: true, notes: true, namedFlows: true, derived: true },
   });
-  return row && { ...row, influence: row.influence as Influence, changes: JSON.parse(row.changes) };
+  return (
+    row && {
+      ...row,
+      influence: row.influence as Influence,
+      changes: JSON.parse(row.changes),
+      namedFlows: JSON.parse(row.namedFlows),
+      derived: row.derived === null ? null : JSON.parse(row.derived),
+    }
+  );
 }

@@ -10,7 +10,7 @@ const ROOT = fileURLToPath(new URL('../..', import.meta.url));
 const FLOORS = [
   ['lib/calendar'],
   ['lib/series', 'lib/statistics'],
-  ['lib/lowflow', 'lib/curves'],
+  ['lib/lowflow', 'lib/curves', 'lib/checks'],
   ['lib/region'],
   ['lib/store', 'lib/intake'],
   ['lib/jobs', 'lib/export'],
@@ -18,7 +18,9 @@ const FLOORS = [
 ];
 
 /** Numbers in, numbers out: the same in a worker, in a test and in a browser. */
-const PURE = ['lib/calendar', 'lib/series', 'lib/statistics', 'lib/lowflow', 'lib/curves', 'lib/region'];
+const PURE = [
+  ...['lib/calendar', 'lib/series', 'lib/statistics', 'lib/lowflow', 'lib/curves', 'lib/checks', 'lib/region'],
+];
 
 /** Packages that a pure folder may use: none of them reads, writes, waits or draws lots by itself. */
 const PURE_PACKAGES = /^(@stdlib\/|d3-array$|pure-rand(\/|$))/;

@@ -149,6 +149,8 @@ const UNIT_WORDS: Record<FlowUnit, string> = {
   'L/s': 'L/s, litres a second',
   'ft3/s': 'ft³/s, cubic feet a second',
   'ML/d': 'ML/d, megalitres a day',
+  'Mgal/d': 'Mgal/d, million US gallons a day',
+  'acre-ft/d': 'acre-ft/d, acre-feet a day',
   'mm/d': 'mm/d, depth over the drainage area',
 };
 

@@ -11,6 +11,11 @@ const LAYOUT_WORDS: Record<Layout, string> = {
   'agency-tab': 'tab-delimited with comment lines and qualifier columns',
   whitespace: 'station, year, month, day, flow, parted by blanks',
   'fixed-width': 'columns of fixed width',
+  'month-rows': 'a row a month, a column a day',
+  'day-rows': 'a row a day, a column a month',
+  'waterml-2': 'WaterML 2.0',
+  'waterml-1': 'WaterML 1.1',
+  'waterml-json': 'WaterML 1.1 as JSON',
 };
 
 /** Rejected rows shown before the CSV file has to be opened. */

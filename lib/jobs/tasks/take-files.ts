@@ -108,7 +108,7 @@ function outcomeOf(staged: readonly StagedFile[], applied: Applied): ImportOutco
       const { id, stationsMade } = applied.imports[i];
       const made = stationsMade > 0 ? `, ${stationsMade} of them new` : '';
       return {
-        ...{ importId: id, file: file.name, kind, report, warnings },
+        ...{ importId: id, file: file.name, kind, report, warnings, revisions: null },
         summary: kind === 'registry' ? `${summary}${made}` : summary,
       };
     }),

@@ -44,6 +44,7 @@ export default async function ImportPage({ params, searchParams }: Props) {
               summary: '',
               report: past.report as ImportReport,
               warnings: [],
+              revisions: null,
             }}
             rejectedHref={`/api/regions/${encodeURIComponent(region.slug)}/imports/${asked.id}/rejected`}
           />

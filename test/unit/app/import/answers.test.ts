@@ -28,7 +28,16 @@ const problem = (file: string, needs?: Needs): ImportProblem => ({
   file,
   message: 'no',
   problem: { file, message: 'no', remedy: 'Say.', ...(needs ? { needs } : {}) },
-  inspection: { mapping: MAPPING, header: null, preview: [], valueCandidates: [] },
+  inspection: {
+    mapping: MAPPING,
+    header: null,
+    preview: [],
+    valueCandidates: [],
+    understood: [],
+    others: [],
+    facts: [],
+    sheets: null,
+  },
 });
 
 describe('isAnswered', () => {
