@@ -1,4 +1,6 @@
 import * as z from 'zod';
+import { QUANTITIES, UNITS, UNITS_OF } from '../series/quantities.ts';
+import { FIRST_YEAR, LAST_YEAR } from './dates.ts';
 import { type FieldPlace, FLOW_UNITS, IntakeError, LAYOUTS, type Mapping } from './types.ts';
 
 const place = z.int().min(0);
@@ -7,6 +9,18 @@ const slice = z.tuple([place, place]).refine(([start, end]) => start < end, {
   error: 'a slice is [start, end] with the end behind the start',
 });
 const field = z.union([z.strictObject({ column }), z.strictObject({ slice })]);
+
+const where = z.strictObject({ column, equals: z.string() });
+
+const alsoQuantity = z
+  .strictObject({
+    quantity: z.enum(QUANTITIES),
+    unit: z.enum(UNITS),
+    value: field.nullable(),
+    flag: field.nullable().optional(),
+    where: where.optional(),
+  })
+  .refine(({ quantity, unit }) => UNITS_OF[quantity].includes(unit));
 
 const mappingSchema = z
   .strictObject({
@@ -25,13 +39,29 @@ const mappingSchema = z
     }),
     value: field.nullable(),
     flag: field.nullable(),
-    unit: z.enum(FLOW_UNITS).nullable(),
+    unit: z.enum(UNITS).nullable(),
     missing: z.array(z.string()),
     decimal: z.enum(['.', ',']),
+    thousands: z.enum([',', '.', ' ', "'"]),
+    firstYear: z
+      .int()
+      .min(FIRST_YEAR)
+      .max(LAST_YEAR - 99),
+    dailyMean: z.number().min(0).max(1),
+    quantity: z.enum(QUANTITIES),
+    also: z.array(alsoQuantity),
+    sheet: z.string().min(1),
     delimiter: z.enum([',', ';', '\t']),
-    where: z.strictObject({ column, equals: z.string() }),
+    where,
   })
-  .partial();
+  .partial()
+  .superRefine(({ quantity = 'flow', unit, also, decimal, thousands }, context) => {
+    const refuse = (key: string) => context.addIssue({ code: 'custom', path: [key], message: `${key} does not fit` });
+    if (unit && !UNITS_OF[quantity].includes(unit)) refuse('unit');
+    if (thousands !== undefined && thousands === decimal) refuse('thousands');
+    const quantities = [quantity, ...(also ?? []).map((other) => other.quantity)];
+    if (new Set(quantities).size < quantities.length) refuse('also');
+  });
 
 /** What each key takes, in words for messages. */
 const TAKES: Record<string, string> = {
@@ -41,9 +71,15 @@ const TAKES: Record<string, string> = {
   date: '{"columns": [0], "order": "ymd"}, with one column or the three of year, month and day; order ymd, dmy or mdy',
   value: '{"column": 2}, {"column": "flow"} or {"slice": [28, 38]}, positions from 0, ends exclusive',
   flag: 'null, {"column": 3}, {"column": "flag"} or {"slice": [38, 40]}',
-  unit: FLOW_UNITS.join(', '),
+  unit: `${FLOW_UNITS.join(', ')}; with a quantity beside flow, a unit of that quantity`,
   missing: 'a list of texts',
   decimal: '"." or ","',
+  thousands: `",", ".", " " or "'", and not the decimal sign`,
+  firstYear: `the year that two-digit years begin with, ${FIRST_YEAR} to ${LAST_YEAR - 99}: with 1930, "29" is 2029`,
+  dailyMean: "the share of a day, 0 to 1, that its values must cover for their mean to be the day's, such as 0.8",
+  quantity: QUANTITIES.map((quantity) => `${quantity} (in ${UNITS_OF[quantity].join(', ')})`).join('; '),
+  also: '[{"quantity": "stage", "unit": "m", "value": {"column": "level"}}], each quantity once and in a unit of its own',
+  sheet: 'the name of a sheet of the workbook',
   delimiter: '",", ";" or a tab',
   where: '{"column": "PARAM", "equals": "1"}',
 };

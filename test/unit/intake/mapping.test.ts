@@ -23,6 +23,12 @@ test('parseMapping takes a whole mapping, any subset of its keys, and nothing at
   expect(parseMapping(whole, 'm.json')).toEqual(whole);
   expect(parseMapping({ value: { column: 'flow' } }, 'm.json')).toEqual({ value: { column: 'flow' } });
   expect(parseMapping({}, 'm.json')).toEqual({});
+  const further = {
+    ...{ layout: 'day-rows', decimal: ',', thousands: '.', firstYear: 2100, dailyMean: 0.8, sheet: 'Tabelle 1' },
+    ...{ quantity: 'stage', unit: 'cm' },
+    also: [{ quantity: 'rainfall', unit: 'in', value: { column: 2 }, where: { column: 'PARAM', equals: '2' } }],
+  };
+  expect(parseMapping(further, 'm.json')).toEqual(further);
 });
 
 test.each([
@@ -35,6 +41,15 @@ test.each([
   [{ date: { columns: [0], order: 'ydm' } }, /“date” cannot be read/],
   [{ station: { from: 'column' } }, /“station” cannot be read/],
   [{ delimiter: '|' }, /“delimiter” cannot be read/],
+  [{ unit: 'mm' }, /“unit” cannot be read/],
+  [{ unit: 'm3/s', quantity: 'stage' }, /“unit” cannot be read/],
+  [{ decimal: ',', thousands: ',' }, /“thousands” cannot be read/],
+  [{ dailyMean: 1.01 }, /“dailyMean” cannot be read/],
+  [{ firstYear: 2101 }, /“firstYear” cannot be read/],
+  [{ quantity: 'turbidity' }, /“quantity” cannot be read.*rainfall \(in mm, in\)/],
+  [{ also: [{ quantity: 'stage', unit: 'L/s', value: null }] }, /“also” cannot be read/],
+  [{ also: [{ quantity: 'flow', unit: 'L/s', value: null }] }, /“also” cannot be read/],
+  [{ sheet: '' }, /“sheet” cannot be read/],
   [{ colour: 'red' }, /has no key “colour”/],
   ['flow', /must be a JSON object/],
   [null, /must be a JSON object/],
