@@ -9,7 +9,7 @@ import { type Inspection, type InspectOptions, IntakeError } from './types.ts';
 export async function inspectFile(path: string, options: InspectOptions): Promise<Inspection> {
   try {
     const plan = recognise(await readHead(path, options.fileName), options);
-    const { mapping, header, preview, problems, valueCandidates } = plan;
+    const { mapping, header, preview, previewLines, problems, valueCandidates } = plan;
     if (plan.orderOpen) {
       const order = await findDateOrder(path, plan, { firstProof: true }).catch((error: unknown) => {
         if (!(error instanceof IntakeError)) throw error;
@@ -18,7 +18,8 @@ export async function inspectFile(path: string, options: InspectOptions): Promis
       });
       mapping.date = { ...mapping.date, order };
     }
-    return { mapping, header, preview, problems, valueCandidates, understood: [], others: [], facts: [], sheets: null };
+    const seen = { mapping, header, preview, previewLines, problems, valueCandidates };
+    return { ...seen, understood: [], others: [], facts: [], sheets: null };
   } catch (error) {
     if (!(error instanceof IntakeError)) throw error;
     const nothing = { understood: [], others: [], facts: [], sheets: null };

@@ -210,8 +210,17 @@ export interface ReadFlowsOptions extends InspectOptions {
   /** every rejected row, also those beyond the 1,000 that the report holds */
   onRejected?(row: RejectedRow): void;
   signal?: AbortSignal;
-  /** one part a station, in order of appearance, and only when the whole file has been found good */
+  /** the last day that is not in the future, as a day number; by the clock where it is not given */
+  today?: number;
+  /** one part a station, in order of appearance, and only when the whole file has been found good; of a file with
+   *  several quantities, when all rows of the quantity have */
   emit(part: StagedPart): void;
+}
+
+/** Reads a file that is no table: recognised by its first bytes, inspected and read by itself. */
+export interface DocumentReader {
+  inspect(path: string, options: InspectOptions): Promise<Inspection>;
+  read(path: string, options: ReadFlowsOptions): Promise<ImportReport>;
 }
 
 /** A column that may hold the flows, for a person to choose from. */
@@ -231,6 +240,8 @@ export interface Inspection {
   header: string[] | null;
   /** the first rows split into fields */
   preview: string[][];
+  /** line number of each row of `preview`, from 1, by which it meets its row of `understood`; absent for documents */
+  previewLines?: number[];
   /** what must be answered, or put right, before the file can be read; empty when it can */
   problems: IntakeError[];
   valueCandidates: ValueCandidate[];

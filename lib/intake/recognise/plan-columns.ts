@@ -63,6 +63,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
     warnings.push(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
   }
   if (wide) warnings.push(...unreadColumns(header ?? [], wide, places.date));
+  const shown = rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + 7);
   return {
     ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, warnings, fieldCount },
     firstLine: data[0].line,
@@ -71,7 +72,8 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
     orderOpen: options.mapping?.date === undefined && dateTexts.some((text) => /^\d{1,2}[-/.]/.test(text)),
     ...(symbolColumn(header, places.flag) ? { iceLetter: 'b' } : {}),
     repeatsHeader: mapping.layout === 'agency-tab',
-    preview: rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + 7).map(({ fields }) => fields),
+    preview: shown.map(({ fields }) => fields),
+    previewLines: shown.map(({ line }) => line),
     valueCandidates: roles.candidates.map((column) => ({
       place: { column },
       label: header?.[column] || `column ${column + 1}`,

@@ -62,6 +62,7 @@ export function planFixedWidth(
     orderOpen: false,
     repeatsHeader: false,
     preview: splitSample(body.slice(0, 8), new FixedWidthLines(shown, lineEnd)).map(({ fields }) => fields),
+    previewLines: body.slice(0, 8).map(({ line }) => line),
     valueCandidates: (guess?.values ?? []).map((slice) => candidate(slice, body)),
     warnings: [],
   };

@@ -1,6 +1,6 @@
 import type { DateOrder } from '../dates.ts';
 import type { LineSplitter } from '../rows/fields.ts';
-import type { IntakeError, Mapping, ValueCandidate } from '../types.ts';
+import type { AlsoCandidate, FoundFacts, IntakeError, Mapping, ValueCandidate } from '../types.ts';
 import type { WideColumn } from './assign-columns.ts';
 
 /** How a file is going to be read: the mapping, worked out to positions. */
@@ -29,7 +29,13 @@ export interface TablePlan {
   /** agency files repeat their header for each station */
   repeatsHeader: boolean;
   preview: string[][];
+  /** line number of each row of `preview`, from 1 */
+  previewLines: number[];
   valueCandidates: ValueCandidate[];
+  /** quantities beside the one that the mapping reads; absent: none */
+  others?: AlsoCandidate[];
+  /** stations' facts stated above the table; absent: none */
+  facts?: FoundFacts[];
   /** what stands against reading the file */
   problems: IntakeError[];
   warnings: string[];
