@@ -10,6 +10,9 @@ ALTER TABLE "Import" ADD COLUMN "revisions" TEXT NOT NULL DEFAULT 'null';
 -- AlterTable
 ALTER TABLE "Record" ADD COLUMN "checked" TEXT;
 
+-- AlterTable
+ALTER TABLE "Record" ADD COLUMN "suspect" TEXT;
+
 -- CreateTable
 CREATE TABLE "Link" (
     "id" INTEGER NOT NULL PRIMARY KEY AUTOINCREMENT,
