@@ -1,65 +1,14 @@
 import { createHash } from 'node:crypto';
-import { CodeTable } from './code-table.ts';
 import { findDateOrder } from './date-order.ts';
 import { conflictError, DayConflict } from './day-conflict.ts';
 import { readHead } from './file-blocks.ts';
 import { recognise } from './recognise/recognise.ts';
-import type { TablePlan } from './recognise/table-plan.ts';
+import { RecordSink } from './record-sink.ts';
 import { Rejections } from './rejections.ts';
 import { countMissingNumbers, stagedPart, stationReport } from './report.ts';
-import { FlowRows } from './rows/flow-rows.ts';
 import { RowLoop } from './rows/row-loop.ts';
-import type { DaySink, RowReader } from './rows/row-reader.ts';
-import { WideRows } from './rows/wide-rows.ts';
-import { StationCodes, stationInFileName } from './station-codes.ts';
-import { FILLED, OTHER_CODE, OTHER_VALUE, PageMemory, StationDays } from './station-days.ts';
+import { type TableReading, tableReading } from './table-reading.ts';
 import { type FlowUnit, type ImportReport, IntakeError, type ReadFlowsOptions, type StationReport } from './types.ts';
-import { ValueReader } from './value-reader.ts';
-
-/** Lays the values of a file into one record of days for each station. */
-class RecordSink implements DaySink {
-  readonly records: StationDays[] = [];
-  filled = 0;
-  otherCodes = 0;
-  private readonly memory = new PageMemory();
-
-  take(station: number, day: number, value: number, code: number, line: number): void {
-    let record = this.records[station];
-    if (record === undefined) {
-      record = new StationDays(this.memory);
-      this.records[station] = record;
-    }
-    const outcome = record.put(day, value, code);
-    if (outcome === OTHER_VALUE) throw new DayConflict(station, day, value, line);
-    if (outcome === FILLED) this.filled++;
-    else if (outcome === OTHER_CODE) this.otherCodes++;
-  }
-}
-
-/** What reads the rows of one file, built anew for each reading. */
-interface Reading {
-  reader: RowReader;
-  stations: StationCodes;
-  codes: CodeTable;
-  values: ValueReader;
-  leftOut(): number;
-}
-
-function readingOf(plan: TablePlan, options: ReadFlowsOptions, sink: DaySink): Reading {
-  const stations = new StationCodes(plan.file, options.knownStations ?? null);
-  const codes = new CodeTable(plan.file, plan.iceLetter);
-  const values = new ValueReader(codes, plan.mapping.decimal, plan.mapping.missing);
-  const reading = { stations, codes, values };
-  if (plan.wide) {
-    const columns = plan.wide.map(({ name }) => stations.add(name, plan.firstLine - 1));
-    return { ...reading, reader: new WideRows(plan, { ...reading, sink }, columns), leftOut: () => 0 };
-  }
-  const { station } = plan.mapping;
-  const name = station.from === 'given' ? station.code : stationInFileName(options.fileName);
-  const only = plan.places.station < 0 ? stations.add(name) : -1;
-  const reader = new FlowRows(plan, { ...reading, sink }, only);
-  return { ...reading, reader, leftOut: () => reader.leftOut };
-}
 
 /** Reads a file of daily flows, whatever its size, and hands on one part for each station once all of it is good.
  *
@@ -78,7 +27,7 @@ export async function readFlows(path: string, options: ReadFlowsOptions): Promis
   const hash = createHash('sha256');
   const rejections = new Rejections(options.onRejected);
   const sink = new RecordSink();
-  const reading = readingOf(plan, options, sink);
+  const reading = tableReading(plan, options, sink);
   let bytesRead = 0;
   const loop = new RowLoop(plan, reading.reader, {
     ...{ signal: options.signal, rejections },
@@ -95,7 +44,7 @@ export async function readFlows(path: string, options: ReadFlowsOptions): Promis
     const code = reading.stations.codes[error.station];
     // A header met on the way may have moved the columns: recognise anew.
     const again = { ...recognise(head, options), mapping: plan.mapping };
-    throw await conflictError(path, again, error, code, (other) => readingOf(again, options, other).reader);
+    throw await conflictError(path, again, error, code, (other) => tableReading(again, options, other).reader);
   }
 
   const rows = loop.rows - reading.leftOut();
@@ -113,7 +62,7 @@ export async function readFlows(path: string, options: ReadFlowsOptions): Promis
 /** Emits each station's part and drops it, so that no more than one is held twice. */
 function handOn(
   unit: FlowUnit,
-  { stations, codes }: Reading,
+  { stations, codes }: TableReading,
   sink: RecordSink,
   options: ReadFlowsOptions,
 ): { stations: StationReport[]; warnings: string[] } {
@@ -133,7 +82,7 @@ function handOn(
   return { stations: reports, warnings };
 }
 
-function readingWarnings(loop: RowLoop, reading: Reading, sink: RecordSink): string[] {
+function readingWarnings(loop: RowLoop, reading: TableReading, sink: RecordSink): string[] {
   const warnings: [number, (count: number) => string][] = [
     [reading.values.negatives, (count) => `${count} values are negative; they were taken as written.`],
     [reading.leftOut(), (count) => `${count} rows of other quantities were left out.`],

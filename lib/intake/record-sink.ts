@@ -1,0 +1,24 @@
+import { DayConflict } from './day-conflict.ts';
+import type { DaySink } from './rows/row-reader.ts';
+import { FILLED, OTHER_CODE, OTHER_VALUE, PageMemory, StationDays } from './station-days.ts';
+
+/** Lays the values of a file into one record of days for each station. */
+export class RecordSink implements DaySink {
+  readonly records: StationDays[] = [];
+  filled = 0;
+  otherCodes = 0;
+  private readonly memory = new PageMemory();
+
+  /** @throws DayConflict when the day stands already with another value */
+  take(station: number, day: number, value: number, code: number, line: number): void {
+    let record = this.records[station];
+    if (record === undefined) {
+      record = new StationDays(this.memory);
+      this.records[station] = record;
+    }
+    const outcome = record.put(day, value, code);
+    if (outcome === OTHER_VALUE) throw new DayConflict(station, day, value, line);
+    if (outcome === FILLED) this.filled++;
+    else if (outcome === OTHER_CODE) this.otherCodes++;
+  }
+}

@@ -1,0 +1,37 @@
+import { CodeTable } from './code-table.ts';
+import type { TablePlan } from './recognise/table-plan.ts';
+import { FlowRows } from './rows/flow-rows.ts';
+import type { DaySink, RowReader } from './rows/row-reader.ts';
+import { WideRows } from './rows/wide-rows.ts';
+import { StationCodes, stationInFileName } from './station-codes.ts';
+import type { InspectOptions } from './types.ts';
+import { ValueReader } from './value-reader.ts';
+
+/** What reads the rows of one table, built anew for each reading of it. */
+export interface TableReading {
+  reader: RowReader;
+  stations: StationCodes;
+  codes: CodeTable;
+  values: ValueReader;
+  /** rows of other quantities, not read */
+  leftOut(): number;
+}
+
+/** The reader that fits a plan, with the tables of stations and codes that it fills.
+ *  @param sink  takes every value
+ *  @throws IntakeError when the station of a heading, or of the file's name, is unknown */
+export function tableReading(plan: TablePlan, options: InspectOptions, sink: DaySink): TableReading {
+  const stations = new StationCodes(plan.file, options.knownStations ?? null);
+  const codes = new CodeTable(plan.file, plan.iceLetter);
+  const values = new ValueReader(codes, plan.mapping.decimal, plan.mapping.missing);
+  const reading = { stations, codes, values };
+  if (plan.wide) {
+    const columns = plan.wide.map(({ name }) => stations.add(name, plan.firstLine - 1));
+    return { ...reading, reader: new WideRows(plan, { ...reading, sink }, columns), leftOut: () => 0 };
+  }
+  const { station } = plan.mapping;
+  const name = station.from === 'given' ? station.code : stationInFileName(options.fileName);
+  const only = plan.places.station < 0 ? stations.add(name) : -1;
+  const reader = new FlowRows(plan, { ...reading, sink }, only);
+  return { ...reading, reader, leftOut: () => reader.leftOut };
+}
