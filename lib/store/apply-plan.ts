@@ -1,3 +1,4 @@
+import type { FoundFacts } from '../intake/types.ts';
 import { type Connection, rows } from './connection.ts';
 import { reserveIds, VISIBLE } from './import-claim.ts';
 import { ImportRefused } from './import-refused.ts';
@@ -7,6 +8,8 @@ import {
   type FactChange,
   type FactName,
   type Facts,
+  fillFacts,
+  isChanged,
   layFacts,
   type StationInput,
 } from './station-facts.ts';
@@ -40,8 +43,8 @@ export interface Group {
 
 export interface Plan {
   stations: Map<string, PlannedStation>;
-  /** by file, what each registry does */
-  registries: Map<number, FactChange[]>;
+  /** by file, what each says of stations */
+  said: Map<number, FactChange[]>;
   groups: Group[];
 }
 
@@ -50,7 +53,7 @@ export interface Plan {
  *  @throws ImportRefused naming the file and the station that is refused */
 export function planImport(connection: Connection, regionId: number, unknown: 'make' | 'refuse'): Plan {
   const stations = standingStations(connection, regionId);
-  const registries = layRegistries(connection, stations);
+  makeRegistered(connection, stations);
   const heads = rows(connection, 'SELECT id, file, code, quantity FROM staging.part ORDER BY file, id').all([]);
   const staged = (heads as [number, number, string, string][]).map(([id, file, code, quantity]) => ({
     id,
@@ -63,10 +66,11 @@ export function planImport(connection: Connection, regionId: number, unknown: 'm
     if (unknown === 'refuse') throw unknownStation(connection, file, code);
     stations.set(code, { id: 0, code, facts: bareFacts(code), madeBy: file, changed: false });
   }
+  const said = laySaid(connection, stations);
   const made = [...stations.values()].filter(({ madeBy }) => madeBy !== null);
   const firstId = made.length > 0 ? reserveIds(connection, 'Station', made.length) : 0;
   for (const [index, station] of made.entries()) station.id = firstId + index;
-  return { stations, registries, groups: groupsOf(connection, regionId, stations, staged) };
+  return { stations, said, groups: groupsOf(connection, regionId, stations, staged) };
 }
 
 function standingStations(connection: Connection, regionId: number): Map<string, PlannedStation> {
@@ -79,29 +83,44 @@ function standingStations(connection: Connection, regionId: number): Map<string,
   );
 }
 
-function layRegistries(connection: Connection, stations: Map<string, PlannedStation>): Map<number, FactChange[]> {
-  const changes = new Map<number, FactChange[]>();
-  for (const row of rows(connection, 'SELECT file, stations, given FROM staging.registry ORDER BY file').all([])) {
-    const [file, inputs, given] = row as [number, string, string];
-    const list: FactChange[] = [];
-    const facts = JSON.parse(given) as FactName[];
-    for (const input of JSON.parse(inputs) as StationInput[]) {
-      const standing = stations.get(input.code);
-      const station = standing ?? {
-        id: 0,
-        code: input.code,
-        facts: bareFacts(input.code),
-        madeBy: file,
-        changed: false,
-      };
-      stations.set(input.code, station);
-      const fields = layFacts(station.facts, input, facts);
-      if (standing && Object.keys(fields).length > 0) station.changed = true;
-      list.push({ code: input.code, made: !standing, fields: standing ? fields : {} });
+/** Stations that a staged registry names and that are not there yet: the first to name one makes it. */
+function makeRegistered(connection: Connection, stations: Map<string, PlannedStation>): void {
+  for (const row of rows(connection, 'SELECT file, stations FROM staging.registry ORDER BY file').all([])) {
+    const [file, inputs] = row as [number, string];
+    for (const { code } of JSON.parse(inputs) as StationInput[]) {
+      if (!stations.has(code)) {
+        stations.set(code, { id: 0, code, facts: bareFacts(code), madeBy: file, changed: false });
+      }
     }
-    changes.set(file, list);
   }
-  return changes;
+}
+
+/** Lays what the files say of stations over their facts, in the order of the files: registries set a fact, files of flows
+ *  fill one that is empty. */
+function laySaid(connection: Connection, stations: Map<string, PlannedStation>): Map<number, FactChange[]> {
+  const said = new Map<number, FactChange[]>();
+  const staged = rows(
+    connection,
+    `SELECT file, stations, given FROM staging.registry UNION ALL SELECT file, stations, NULL FROM staging.facts
+     ORDER BY file`,
+  ).all([]) as [number, string, string | null][];
+  for (const [file, text, given] of staged) {
+    const list = said.get(file) ?? [];
+    said.set(file, list);
+    for (const input of JSON.parse(text) as (StationInput & FoundFacts)[]) {
+      const station = stations.get(input.code);
+      // A file may state facts of a station of which it holds no day.
+      if (!station) continue;
+      const what =
+        given === null
+          ? fillFacts(station.facts, input)
+          : { fields: layFacts(station.facts, input, JSON.parse(given) as FactName[]) };
+      const change: FactChange = { code: input.code, made: station.madeBy === file, ...what };
+      if (station.madeBy === null && isChanged(change)) station.changed = true;
+      list.push(change);
+    }
+  }
+  return said;
 }
 
 /** Overlapping records first: a file that is refused for its values then costs no copying. */

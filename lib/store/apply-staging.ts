@@ -16,6 +16,7 @@ import { Conflicts, OverlapError } from './overlap-error.ts';
 import { inSlices } from './slices.ts';
 import { slugOf } from './slug.ts';
 import { stagingPath } from './staging.ts';
+import { isChanged } from './station-facts.ts';
 import { recoverImports, sweep, withdraw } from './withdraw.ts';
 import { writeFacts, writeLayers } from './write-facts.ts';
 
@@ -250,7 +251,7 @@ function show(connection: Connection, claim: Claim, plan: Plan, heads: RecordHea
     imports: (files as [number, string, string][]).map(([file, name, kind]) => ({
       ...{ id: imports.get(file)!, file: name, kind },
       stationsMade: made.filter(({ madeBy }) => madeBy === file).length,
-      stationsChanged: plan.registries.get(file)?.filter(({ fields }) => Object.keys(fields).length > 0).length ?? 0,
+      stationsChanged: plan.said.get(file)?.filter(isChanged).length ?? 0,
     })),
   };
 }

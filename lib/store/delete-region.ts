@@ -17,11 +17,11 @@ function remove(connection: Connection, slug: string): void {
   refuseWhileOthersChange(connection);
   const found = rows(connection, 'SELECT id FROM Region WHERE slug = ?').get([slug]) as [number] | undefined;
   if (!found) throw new StoreError('not-found', `There is no region "${slug}".`);
-  for (const table of ['Record', 'Mark']) {
+  for (const table of ['Record', 'Mark', 'Finding']) {
     const sql = `DELETE FROM ${table} WHERE stationId IN (SELECT id FROM Station WHERE regionId = ?)`;
     change(connection, sql).run([found[0]]);
   }
-  for (const table of ['Station', 'Layer', 'Basis', 'Job', 'Import']) {
+  for (const table of ['Link', 'SavedMapping', 'Station', 'Layer', 'Basis', 'Job', 'Import']) {
     change(connection, `DELETE FROM ${table} WHERE regionId = ?`).run([found[0]]);
   }
   change(connection, 'DELETE FROM Region WHERE id = ?').run([found[0]]);

@@ -1,6 +1,6 @@
 import { existsSync, rmSync } from 'node:fs';
 import Database from 'libsql';
-import type { StagedPart } from '../intake/types.ts';
+import type { FoundFacts, StagedPart } from '../intake/types.ts';
 import { blobOf, blobOfValues } from './blobs.ts';
 import { flagsOfCodes } from './codes.ts';
 import { databasePath } from './database-url.ts';
@@ -38,6 +38,8 @@ export interface Staging {
   stagePart(file: number, part: StagedPart, quantity?: string): void;
   /** @param given  the facts that the file speaks of; the others stay as they are */
   stageRegistry(file: number, stations: readonly StationInput[], given?: readonly FactName[]): void;
+  /** Stations' facts that a file of flows states beside its days: they only fill in what is empty. */
+  stageFacts(file: number, facts: readonly FoundFacts[]): void;
   stageLayer(file: number, layer: { name: string; kind: LayerKind; geojson: string }): void;
   describeFile(file: number, facts: StagedFileFacts): void;
   /** Ends the filling; applyStaging comes next. */
@@ -52,6 +54,7 @@ const TABLES = `
     rows INTEGER NOT NULL DEFAULT 0, accepted INTEGER NOT NULL DEFAULT 0, rejected INTEGER NOT NULL DEFAULT 0,
     report TEXT NOT NULL DEFAULT '{}');
   CREATE TABLE staging.registry (file INTEGER NOT NULL, stations TEXT NOT NULL, given TEXT NOT NULL);
+  CREATE TABLE staging.facts (file INTEGER NOT NULL, stations TEXT NOT NULL);
   CREATE TABLE staging.layer (file INTEGER NOT NULL, name TEXT NOT NULL, kind TEXT NOT NULL, geojson TEXT NOT NULL);
   CREATE TABLE staging.part (id INTEGER PRIMARY KEY, file INTEGER NOT NULL, code TEXT NOT NULL, quantity TEXT NOT NULL,
     firstDay INTEGER NOT NULL, days INTEGER NOT NULL, unit TEXT NOT NULL, hash TEXT NOT NULL, valueCount INTEGER NOT NULL,
@@ -114,6 +117,10 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
       connection
         .prepare('INSERT INTO registry (file, stations, given) VALUES (?, ?, ?)')
         .run([fileId, JSON.stringify(stations), JSON.stringify(given)]);
+    },
+    stageFacts(fileId, facts) {
+      if (facts.length === 0) return;
+      connection.prepare('INSERT INTO facts (file, stations) VALUES (?, ?)').run([fileId, JSON.stringify(facts)]);
     },
     stageLayer(fileId, { name, kind, geojson }) {
       connection

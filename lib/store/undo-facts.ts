@@ -1,6 +1,7 @@
 import { type Connection, change, rows } from './connection.ts';
-import { FACT_NAMES, type FactChange, type FactName } from './station-facts.ts';
-import type { LayerBefore, RegistryBefore } from './undo-trail.ts';
+import { deleteStation } from './delete-station.ts';
+import { FACT_NAMES, type FactChange, type FactName, type FactValue, isEmptyFact } from './station-facts.ts';
+import type { LayerBefore, StationsBefore } from './undo-trail.ts';
 
 interface UndoTask {
   importId: number;
@@ -9,81 +10,94 @@ interface UndoTask {
 
 interface Trail {
   id: number;
-  before: Partial<RegistryBefore & LayerBefore>;
+  kind: string;
+  before: Partial<StationsBefore & LayerBefore>;
+  byCode: Map<string, FactChange>;
+  touched: boolean;
 }
 
-/** The drainage areas that stations will have once a registry's import is undone, by code; only those that change. */
+/** The drainage areas that stations will have once an import is undone, by code; only those that change. */
 export function areasAfterUndo(connection: Connection, task: UndoTask): Map<string, number | null> {
   const areas = new Map<string, number | null>();
   const { mine, later } = readTrails(connection, task);
   const area = rows(connection, 'SELECT areaKm2 FROM Station WHERE regionId = ? AND code = ?');
-  for (const { code, fields } of mine.before.stations ?? []) {
-    const change = fields.areaKm2;
-    if (!change || laterChange(later, code, 'areaKm2')) continue;
-    const stands = area.get([task.regionId, code]) as [number | null] | undefined;
-    if (stands?.[0] === change[1]) areas.set(code, change[0] as number | null);
+  for (const said of mine.byCode.values()) {
+    const end = followFact(later, said, 'areaKm2').end;
+    if (!end || end.from === end.to) continue;
+    const stands = area.get([task.regionId, said.code]) as [number | null] | undefined;
+    if (stands?.[0] === end.from) areas.set(said.code, end.to as number | null);
   }
   return areas;
 }
 
 /** Puts back the facts and the layer that an import changed, and takes away the stations it made that nobody else needs.
  *
- *  What a later import changed again stays as that one left it, and that one then takes over what stood before; what a
- *  person changed since stays too.
+ *  What a later import said again stays as that one left it, and that one then takes over what stood before; what a later
+ *  file offered for an empty fact fills it; what a person changed since stays.
  *  @returns the number of stations taken away */
 export function undoFacts(connection: Connection, task: UndoTask): number {
   const { mine, later, others } = readTrails(connection, task);
-  for (const change of mine.before.stations ?? []) restoreFacts(connection, task.regionId, change, later);
+  for (const said of mine.byCode.values()) restoreFacts(connection, task.regionId, said, later);
   if (mine.before.layer) restoreLayer(connection, task, mine.before.layer, later);
+  for (const trail of later) if (trail.touched) saveTrail(connection, trail);
   return releaseStations(connection, task.importId, others);
 }
 
 function readTrails(connection: Connection, { importId, regionId }: UndoTask) {
   const found = rows(
     connection,
-    `SELECT id, "before" FROM Import WHERE regionId = ? AND (state = 'applied' OR id = ?) AND kind <> 'flows' ORDER BY id`,
-  ).all([regionId, importId]) as [number, string][];
-  const trails: Trail[] = found.map(([id, before]) => ({ id, before: JSON.parse(before) }));
+    `SELECT id, kind, "before" FROM Import
+     WHERE regionId = ? AND (state = 'applied' OR id = ?) AND "before" <> '{}' ORDER BY id`,
+  ).all([regionId, importId]) as [number, string, string][];
+  const trails = found.map(([id, kind, text]): Trail => {
+    const before = JSON.parse(text) as Trail['before'];
+    const byCode = new Map((before.stations ?? []).map((said) => [said.code, said]));
+    return { id, kind, before, byCode, touched: false };
+  });
+  const none: Trail = { id: importId, kind: '', before: {}, byCode: new Map(), touched: false };
   return {
-    mine: trails.find(({ id }) => id === importId) ?? { id: importId, before: {} },
+    mine: trails.find(({ id }) => id === importId) ?? none,
     later: trails.filter(({ id }) => id > importId),
     others: trails.filter(({ id }) => id !== importId),
   };
 }
 
-/** The first later import that changed a fact again, with what it did. */
-function laterChange(later: readonly Trail[], code: string, name: FactName) {
+/** Where a fact goes when one import's word on it is taken away: what the later imports that spoke of it then keep as
+ *  [before, after], and what happens to the station's own fact; null when it stays as it is. */
+function followFact(later: readonly Trail[], { code, fields }: FactChange, name: FactName) {
+  const steps: { trail: Trail; said: FactChange; field: [FactValue, FactValue] }[] = [];
+  const field = fields[name];
+  if (!field) return { steps, end: null };
+  let [now, was] = field;
   for (const trail of later) {
-    const change = trail.before.stations?.find((station) => station.code === code);
-    if (change?.fields[name]) return { trail, change };
+    const said = trail.byCode.get(code);
+    const next = said?.fields[name];
+    if (!said || !next) continue;
+    // A person changed it in between, and that stays.
+    if (next[0] !== was) return { steps, end: null };
+    const offer = said.offers?.[name];
+    const after = offer === undefined ? next[1] : isEmptyFact(code, name, now) ? offer : now;
+    steps.push({ trail, said, field: [now, after] });
+    if (after === next[1]) return { steps, end: null };
+    [was, now] = [next[1], after];
   }
-  return null;
+  return { steps, end: { from: was, to: now } };
 }
 
-function restoreFacts(
-  connection: Connection,
-  regionId: number,
-  { code, fields }: FactChange,
-  later: readonly Trail[],
-): void {
+function restoreFacts(connection: Connection, regionId: number, mine: FactChange, later: readonly Trail[]): void {
   for (const name of FACT_NAMES) {
-    const field = fields[name];
-    if (!field) continue;
-    const [old, mine] = field;
-    const next = laterChange(later, code, name);
-    if (next) {
-      const given = next.change.fields[name]![1];
-      if (given === old) delete next.change.fields[name];
-      else next.change.fields[name] = [old, given];
-      saveTrail(connection, next.trail);
-    } else {
-      change(connection, `UPDATE Station SET ${name} = ? WHERE regionId = ? AND code = ? AND ${name} IS ?`).run([
-        old,
-        regionId,
-        code,
-        mine,
-      ]);
+    const { steps, end } = followFact(later, mine, name);
+    for (const { trail, said, field } of steps) {
+      said.fields[name] = field;
+      trail.touched = true;
     }
+    if (!end || end.from === end.to) continue;
+    change(connection, `UPDATE Station SET ${name} = ? WHERE regionId = ? AND code = ? AND ${name} IS ?`).run([
+      end.to,
+      regionId,
+      mine.code,
+      end.from,
+    ]);
   }
 }
 
@@ -96,7 +110,7 @@ function restoreLayer(
   const next = later.find(({ before }) => before.layer?.name === name);
   if (next?.before.layer) {
     next.before.layer.old = old;
-    saveTrail(connection, next);
+    next.touched = true;
   } else if (old) {
     change(
       connection,
@@ -114,11 +128,12 @@ function restoreLayer(
 const saveTrail = (connection: Connection, { id, before }: Trail): void =>
   void change(connection, 'UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), id]);
 
-/** Stations that the import made pass to the next import that has days of them or names them; the others go. */
+/** Stations that the import made pass to the next import that has days of them, or is a registry that names them; the
+ *  others go. */
 function releaseStations(connection: Connection, importId: number, others: readonly Trail[]): number {
   const namedBy = new Map<string, number>();
-  for (const { id, before } of [...others].reverse()) {
-    for (const { code } of before.stations ?? []) namedBy.set(code, id);
+  for (const { id, kind, byCode } of [...others].reverse()) {
+    if (kind === 'registry') for (const code of byCode.keys()) namedBy.set(code, id);
   }
   const made = rows(connection, 'SELECT id, code FROM Station WHERE createdBy = ?').all([importId]) as [
     number,
@@ -136,8 +151,7 @@ function releaseStations(connection: Connection, importId: number, others: reado
       change(connection, 'UPDATE Station SET createdBy = ? WHERE id = ?').run([Math.min(...heirs), id]);
       continue;
     }
-    change(connection, 'DELETE FROM Mark WHERE stationId = ?').run([id]);
-    change(connection, 'DELETE FROM Station WHERE id = ?').run([id]);
+    deleteStation(connection, id);
     removed++;
   }
   return removed;

@@ -1,7 +1,7 @@
 import type { FactChange } from './station-facts.ts';
 
-/** What a registry's import keeps so that it can be undone: every station it named, with what it did to it. */
-export interface RegistryBefore {
+/** What an import keeps of the stations it spoke of so that it can be undone: every one, with what it said and did. */
+export interface StationsBefore {
   stations: FactChange[];
 }
 

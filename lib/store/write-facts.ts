@@ -1,21 +1,21 @@
 import type { Plan, PlannedStation } from './apply-plan.ts';
 import { type Connection, change, rows } from './connection.ts';
 import { FACT_NAMES } from './station-facts.ts';
-import type { LayerBefore, RegistryBefore } from './undo-trail.ts';
+import type { LayerBefore, StationsBefore } from './undo-trail.ts';
 
-/** Writes the stations that an import makes or changes, and into each registry's import what stood before. */
+/** Writes the stations that an import makes or changes, and into each file's import what it said and what stood before. */
 export function writeFacts(
   connection: Connection,
   regionId: number,
-  { stations, registries }: Pick<Plan, 'stations' | 'registries'>,
+  { stations, said }: Pick<Plan, 'stations' | 'said'>,
   imports: ReadonlyMap<number, number>,
 ): void {
   for (const station of stations.values()) {
     if (station.madeBy !== null) insertStation(connection, regionId, station, imports.get(station.madeBy) ?? null);
     else if (station.changed) updateStation(connection, station);
   }
-  for (const [file, changes] of registries) {
-    const before: RegistryBefore = { stations: changes };
+  for (const [file, changes] of said) {
+    const before: StationsBefore = { stations: changes };
     remember(connection, imports.get(file)!, before);
   }
 }
@@ -59,6 +59,6 @@ export function writeLayers(connection: Connection, regionId: number, imports: R
   }
 }
 
-function remember(connection: Connection, importId: number, before: RegistryBefore | LayerBefore): void {
+function remember(connection: Connection, importId: number, before: StationsBefore | LayerBefore): void {
   change(connection, 'UPDATE Import SET "before" = ? WHERE id = ?').run([JSON.stringify(before), importId]);
 }

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
-import type { FlowUnit, StagedPart } from '../../../lib/intake/types.ts';
+import type { FoundFacts, StagedPart, Unit } from '../../../lib/intake/types.ts';
+import type { Quantity } from '../../../lib/series/quantities.ts';
 import { type Applied, type ApplyOptions, applyStaging } from '../../../lib/store/apply-staging.ts';
 import { openConnection, rows } from '../../../lib/store/connection.ts';
 import { readSeries } from '../../../lib/store/records.ts';
@@ -30,15 +31,16 @@ export interface PartInput {
   values: number[];
   /** quality code a day; null = no row */
   codes?: (string | null)[];
-  unit?: FlowUnit;
+  unit?: Unit;
+  quantity?: Quantity;
 }
 
 const BITS: Record<string, number> = { e: 1, P: 2, Ice: 4 };
 
-export function partOf({ code, firstDay = 0, values, codes, unit = 'm3/s' }: PartInput): StagedPart {
+export function partOf({ code, firstDay = 0, values, codes, unit = 'm3/s', quantity }: PartInput): StagedPart {
   const texts = [...new Set(['', ...(codes ?? []).filter((text) => text !== null)])];
   return {
-    ...{ code, unit, firstDay },
+    ...{ code, unit, firstDay, quantity },
     values: Float64Array.from(values),
     codes: Uint8Array.from(values, (_, day) => {
       const text = codes === undefined ? '' : codes[day];
@@ -50,15 +52,18 @@ export function partOf({ code, firstDay = 0, values, codes, unit = 'm3/s' }: Par
 
 let jobs = 0;
 
-/** Takes in files of parts, each file an import, in one go. */
+/** Takes in files of parts, each file an import, in one go.
+ *  @param facts  of each file, what it states of stations */
 export async function importFiles(
   files: PartInput[][],
   options: Omit<ApplyOptions, 'region'> & Partial<Pick<ApplyOptions, 'region'>> = {},
+  facts: FoundFacts[][] = [],
 ): Promise<Applied> {
   const staging = createStaging(`test-${process.pid}-${jobs++}`);
   for (const [index, parts] of files.entries()) {
     const file = staging.addFile({ kind: 'flows', fileName: `flows-${index + 1}.csv` });
     for (const part of parts) staging.stagePart(file, partOf(part));
+    staging.stageFacts(file, facts[index] ?? []);
     staging.describeFile(file, { sha256: 'none', rows: parts.length, accepted: parts.length });
   }
   staging.seal();

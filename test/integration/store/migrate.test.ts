@@ -46,7 +46,9 @@ test('the migrations make exactly the columns that the Prisma client knows', asy
   expect(Object.keys(models).length).toBeGreaterThanOrEqual(11);
   for (const [model, { fields }] of Object.entries(models)) {
     const columns = rows(connection, `SELECT name FROM pragma_table_info('${model}')`).all([]).flat();
-    expect(columns, model).toEqual(fields.filter(({ kind }) => kind === 'scalar').map(({ name }) => name));
+    const known = fields.filter(({ kind }) => kind === 'scalar').map(({ name }) => name);
+    // A column that a later migration adds stands last in the table, wherever the schema has it.
+    expect(columns.sort(), model).toEqual(known.sort());
   }
   connection.close();
 });

@@ -85,19 +85,63 @@ test('undoing a registry puts the facts back, and removes the stations that it m
   expect(await getStation(regionId, 'A')).toEqual(before);
   expect((await listStations(regionId)).map(({ code, name }) => [code, name])).toEqual([
     ['A', 'A'],
-    ['C', 'Combe'],
+    ['C', 'C'],
   ]);
 });
 
-test('undoing an earlier registry leaves what a later one changed again, and the later one’s undo goes all the way back', async () => {
+test('undoing an earlier registry leaves what a later one said again, and the later one’s undo goes all the way back', async () => {
   const { regionId } = await importFiles([[{ code: 'A', values: [1] }]]);
   const before = await getStation(regionId, 'A');
   await upsertRegistry(regionId, [{ code: 'A', name: 'First', areaKm2: 10, river: 'Wethe' }], { fileName: '1.csv' });
   await upsertRegistry(regionId, [{ code: 'A', name: 'Second', areaKm2: 10 }], { fileName: '2.csv' });
   await undoImport(await idOf(regionId, '1.csv'));
-  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'Second', areaKm2: null, river: '' });
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'Second', areaKm2: 10, river: '' });
   await undoImport(await idOf(regionId, '2.csv'));
   expect(await getStation(regionId, 'A')).toEqual(before);
+});
+
+const CHANGES = [
+  { date: '1990-05-01', kind: 'dam', note: 'Upper dam' },
+  { date: '1971-10-01', kind: 'gauge moved', note: '' },
+] as const;
+
+test('a registry’s changes, named flows and notes are stored in one spelling, and go with its undo', async () => {
+  const { regionId } = await importFiles([[{ code: 'A', values: [1] }]]);
+  const before = await getStation(regionId, 'A');
+  const flow = { name: 'Minimum', kind: 'legal minimum', value: 0.3, unit: 'm3/s', months: [9, 8] } as const;
+  const entry = {
+    code: 'A',
+    changes: CHANGES,
+    namedFlows: [{ ...flow, months: [...flow.months] }],
+    notes: 'By the mill',
+  };
+  await upsertRegistry(regionId, [entry], { fileName: '1.csv' });
+  const set = await getStation(regionId, 'A');
+  expect(set).toMatchObject({ changes: [CHANGES[1], CHANGES[0]], notes: 'By the mill' });
+  expect(set?.namedFlows).toEqual([{ ...flow, months: [8, 9] }]);
+  const again = await upsertRegistry(regionId, [{ ...entry, changes: [...CHANGES].reverse() }], { fileName: '2.csv' });
+  expect(again.imports[0].stationsChanged).toBe(0);
+  await undoImport(await idOf(regionId, '2.csv'));
+  expect(await getStation(regionId, 'A')).toEqual(set);
+  await undoImport(await idOf(regionId, '1.csv'));
+  expect(await getStation(regionId, 'A')).toEqual(before);
+});
+
+test('facts found in a file of flows fill what is empty, never replace, and a later offer steps in at their undo', async () => {
+  const found = (name: string, areaKm2: number) => [[{ code: 'A', name, areaKm2, latitude: 47, longitude: 8 }]];
+  const one = await importFiles([[{ code: 'A', values: [1] }]], {}, found('Alder', 10));
+  const { regionId } = one;
+  const two = await importFiles([[{ code: 'A', values: [1] }]], {}, found('Alder Bridge', 11));
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'Alder', areaKm2: 10, latitude: 47, longitude: 8 });
+  await upsertRegistry(regionId, [{ code: 'A', name: 'At Alder' }], { fileName: 'stations.csv' });
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'At Alder', areaKm2: 10 });
+  await undoImport(one.imports[0].id);
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'At Alder', areaKm2: 11 });
+  await undoImport(await idOf(regionId, 'stations.csv'));
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'Alder Bridge', areaKm2: 11 });
+  await importFiles([[{ code: 'A', values: [1] }]]);
+  await undoImport(two.imports[0].id);
+  expect(await getStation(regionId, 'A')).toMatchObject({ name: 'A', areaKm2: null, latitude: null });
 });
 
 test('undoing a registry lays depths anew with the area that stood before', async () => {
