@@ -22,7 +22,7 @@ export const BASIS_PARAMETERS = [
 /** View state of the map screen that links to and from other pages keep. */
 const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q', 'split'] as const;
 
-export type RegionPage = 'map' | 'curves' | 'import';
+export type RegionPage = 'map' | 'curves' | 'records' | 'import';
 
 /** What a link carries on: the basis and the map's view, and nothing that belongs to one page only. */
 export function carried(query: URLSearchParams | string): URLSearchParams {
@@ -50,6 +50,14 @@ export function regionHref(slug: string, page: RegionPage, query: URLSearchParam
 /** The page of one station. */
 export function stationHref(slug: string, code: string, query: URLSearchParams | string = ''): string {
   return withQuery(`/regions/${encodeURIComponent(slug)}/stations/${encodeURIComponent(code)}`, carried(query));
+}
+
+/** The Records page with one year of one station open. */
+export function yearHref(slug: string, station: string, year: number, query: URLSearchParams | string = ''): string {
+  const next = carried(query);
+  next.set('station', station);
+  next.set('year', String(year));
+  return withQuery(`/regions/${encodeURIComponent(slug)}/records`, next);
 }
 
 /** The address of an API table with only the basis along. */

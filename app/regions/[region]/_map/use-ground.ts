@@ -3,7 +3,8 @@ import type L from 'leaflet';
 import { useEffect, useMemo, useState } from 'react';
 import { GroundLayer } from './ground-layer.ts';
 import type { GroundKind } from './ground-style.ts';
-import { onThemeChange, readPalette } from './palette.ts';
+import { onThemeChange } from '@/app/components/canvas/tokens';
+import { readPalette } from './palette.ts';
 
 export interface GroundSource {
   kind: GroundKind;

@@ -5,7 +5,8 @@ import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { hasPlace } from '../row-filter.ts';
 import { type Mark, NeedleLayer } from './needle-layer.ts';
-import { onThemeChange, readPalette } from './palette.ts';
+import { onThemeChange } from '@/app/components/canvas/tokens';
+import { readPalette } from './palette.ts';
 
 export interface DrawnStations {
   /** stations that have a place, in drawing order: the steepest significant ones last, on top */

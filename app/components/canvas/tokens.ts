@@ -1,0 +1,28 @@
+import { THEME_EVENT } from '../theme.ts';
+
+/** Design tokens resolved for the theme that is shown, under names of one's own. A canvas cannot read light-dark(): an
+ *  element wears each token in turn and its computed colour is taken.
+ *  Example: readTokens({ ink: '--ink' }) → { ink: 'rgb(27, 36, 48)' } */
+export function readTokens<Name extends string>(tokens: Record<Name, string>): Record<Name, string> {
+  const probe = document.createElement('span');
+  probe.hidden = true;
+  document.body.append(probe);
+  const style = getComputedStyle(probe);
+  const entries = Object.entries<string>(tokens).map(([name, token]) => {
+    probe.style.color = `var(${token})`;
+    return [name, style.color];
+  });
+  probe.remove();
+  return Object.fromEntries(entries) as Record<Name, string>;
+}
+
+/** Calls back when the device or the reader changes the theme. @returns how to stop */
+export function onThemeChange(listener: () => void): () => void {
+  const device = matchMedia('(prefers-color-scheme: dark)');
+  device.addEventListener('change', listener);
+  window.addEventListener(THEME_EVENT, listener);
+  return () => {
+    device.removeEventListener('change', listener);
+    window.removeEventListener(THEME_EVENT, listener);
+  };
+}
