@@ -28,14 +28,15 @@ const mappingSchema = z
     station: z.union([
       z.strictObject({ from: z.literal('file-name') }),
       z.strictObject({ from: z.literal('header') }),
+      z.strictObject({ from: z.literal('lines-above') }),
       z.strictObject({ from: z.literal('column'), column }),
       z.strictObject({ from: z.literal('given'), code: z.string().min(1) }),
     ]),
     date: z.strictObject({
-      columns: z.array(z.union([column, slice])).refine((columns) => columns.length === 1 || columns.length === 3, {
-        error: 'a date stands in one column, or in three: those of year, month and day',
-      }),
+      columns: z.array(z.union([column, slice])).min(1).max(3),
       order: z.enum(['ymd', 'dmy', 'mdy']),
+      year: z.union([z.int().min(FIRST_YEAR).max(LAST_YEAR), z.literal('heading')]).optional(),
+      yearBegins: z.strictObject({ month: z.int().min(1).max(12), named: z.enum(['first', 'last']) }).optional(),
     }),
     value: field.nullable(),
     flag: field.nullable(),
@@ -55,8 +56,11 @@ const mappingSchema = z
     where,
   })
   .partial()
-  .superRefine(({ quantity = 'flow', unit, also, decimal, thousands }, context) => {
+  .superRefine(({ layout, date, quantity = 'flow', unit, also, decimal, thousands }, context) => {
     const refuse = (key: string) => context.addIssue({ code: 'custom', path: [key], message: `${key} does not fit` });
+    const calendar = layout === 'month-rows' || layout === 'day-rows';
+    // A date stands in one column, or in the three of year, month and day; a calendar's rows have no column of days.
+    if (date && date.columns.length === (calendar ? 3 : 2)) refuse('date');
     if (unit && !UNITS_OF[quantity].includes(unit)) refuse('unit');
     if (thousands !== undefined && thousands === decimal) refuse('thousands');
     const quantities = [quantity, ...(also ?? []).map((other) => other.quantity)];
@@ -67,8 +71,8 @@ const mappingSchema = z
 const TAKES: Record<string, string> = {
   layout: LAYOUTS.join(', '),
   station:
-    '{"from": "file-name"}, {"from": "header"}, {"from": "column", "column": 0} or {"from": "given", "code": "…"}',
-  date: '{"columns": [0], "order": "ymd"}, with one column or the three of year, month and day; order ymd, dmy or mdy',
+    '{"from": "file-name"}, {"from": "lines-above"}, {"from": "header"}, {"from": "column", "column": 0} or {"from": "given", "code": "…"}',
+  date: '{"columns": [0], "order": "ymd"}, with one column or the three of year, month and day; order ymd, dmy or mdy; with the layouts month-rows and day-rows {"columns": [0, 1], "order": "ymd"}, year and month (day), or {"columns": [0], "order": "ymd", "year": 1987} or "year": "heading", and where years do not begin in January "yearBegins": {"month": 10, "named": "last"}',
   value: '{"column": 2}, {"column": "flow"} or {"slice": [28, 38]}, positions from 0, ends exclusive',
   flag: 'null, {"column": 3}, {"column": "flag"} or {"slice": [38, 40]}',
   unit: `${FLOW_UNITS.join(', ')}; with a quantity beside flow, a unit of that quantity`,

@@ -25,11 +25,25 @@ export interface Mapping {
     | { from: 'column'; column: number | string }
     | { from: 'given'; code: string }
     /** wide layouts: each column's heading names its station */
-    | { from: 'header' };
-  /** columns in the order that `order` names; one column holds a whole date */
-  date: { columns: (number | string | [number, number])[]; order: 'ymd' | 'dmy' | 'mdy' };
-  /** null in wide layouts, where every other column is a station */
+    | { from: 'header' }
+    /** the lines above the table name it: "Station number: 0306" */
+    | { from: 'lines-above' };
+  /** columns in the order that `order` names; one column holds a whole date. Calendar layouts: the columns of year and
+   *  month, in this order, or one that holds both (`month-rows`); those of year and day of the month (`day-rows`); only
+   *  that of the month, or of the day, where `year` says the year */
+  date: {
+    columns: (number | string | [number, number])[];
+    order: 'ymd' | 'dmy' | 'mdy';
+    /** calendar layouts without a column of years: a line above each block names its year, or all rows are of this one */
+    year?: number | 'heading';
+    /** calendar layouts whose years begin in another month than January: that month, and whether the calendar year in
+     *  which they begin or the one in which they end names them */
+    yearBegins?: { month: number; named: 'first' | 'last' };
+  };
+  /** null in wide layouts, where every other column is a station. Calendar layouts: the first column of a day (of a month);
+   *  the others follow it at equal steps, a flag behind each when there are flags */
   value: FieldPlace | null;
+  /** calendar layouts: the flag of the first day (month) */
   flag: FieldPlace | null;
   unit: Unit | null;
   /** text that means "no value", beyond the usual ones */
@@ -71,6 +85,9 @@ export interface FoundFacts {
   longitude?: number;
   areaKm2?: number;
 }
+
+/** Facts as the lines above a table state them: without a code they are of the file's one station. */
+export type StatedFacts = Omit<FoundFacts, 'code'> & { code?: string };
 
 /** A row that was not taken, with its place in the file. */
 export interface RejectedRow {
@@ -133,6 +150,12 @@ export type Need = (typeof NEEDS)[number];
 export const CORRECTIONS = ['swap-coordinates', 'longitude-360'] as const;
 export type Correction = (typeof CORRECTIONS)[number];
 
+/** A code as a file writes it, and that of the registry which it may be. */
+export interface CodePair {
+  written: string;
+  registered: string;
+}
+
 /** A file that cannot be taken: names the file, the row where there is one, the value and the remedy. */
 export class IntakeError extends Error {
   override name = 'IntakeError';
@@ -148,6 +171,8 @@ export class IntakeError extends Error {
       remedy: string;
       /** machine-readable: the screen asks for what is missing */
       needs?: Need;
+      /** with needs 'codes': the codes as written and those of the registry that they may be */
+      pairs?: CodePair[];
       /** every row at fault, where several are (a registry is taken whole or not at all) */
       rows?: RejectedRow[];
     },
@@ -215,12 +240,6 @@ export interface ReadFlowsOptions extends InspectOptions {
   /** one part a station, in order of appearance, and only when the whole file has been found good; of a file with
    *  several quantities, when all rows of the quantity have */
   emit(part: StagedPart): void;
-}
-
-/** Reads a file that is no table: recognised by its first bytes, inspected and read by itself. */
-export interface DocumentReader {
-  inspect(path: string, options: InspectOptions): Promise<Inspection>;
-  read(path: string, options: ReadFlowsOptions): Promise<ImportReport>;
 }
 
 /** A column that may hold the flows, for a person to choose from. */

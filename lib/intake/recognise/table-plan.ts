@@ -1,7 +1,8 @@
 import type { DateOrder } from '../dates.ts';
 import type { LineSplitter } from '../rows/fields.ts';
-import type { AlsoCandidate, FoundFacts, IntakeError, Mapping, ValueCandidate } from '../types.ts';
+import type { AlsoCandidate, IntakeError, Mapping, StatedFacts, ValueCandidate } from '../types.ts';
 import type { WideColumn } from './assign-columns.ts';
+import type { CalendarPlan } from './calendar-plan.ts';
 
 /** How a file is going to be read: the mapping, worked out to positions. */
 export interface TablePlan {
@@ -34,8 +35,12 @@ export interface TablePlan {
   valueCandidates: ValueCandidate[];
   /** quantities beside the one that the mapping reads; absent: none */
   others?: AlsoCandidate[];
-  /** stations' facts stated above the table; absent: none */
-  facts?: FoundFacts[];
+  /** stations' facts stated above the table; absent: none. `factsOf` gives them their codes */
+  facts?: StatedFacts[];
+  /** bytes that a comment line begins with, beside `#`; absent: none */
+  comment?: Uint8Array;
+  /** layouts with a column for each day or month; absent: others */
+  calendar?: CalendarPlan;
   /** what stands against reading the file */
   problems: IntakeError[];
   warnings: string[];
