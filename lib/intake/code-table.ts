@@ -1,8 +1,9 @@
+import { FLAG } from '../series/daily-series.ts';
 import { ByteTable } from './byte-table.ts';
 import { flagBits } from './flags.ts';
 import { NO_ROW } from './station-days.ts';
 import { decodeText } from './text-encoding.ts';
-import { type DayCode, IntakeError } from './types.ts';
+import { type DayCode, IntakeError, type Mapping } from './types.ts';
 
 /** The day codes of one file: each pair of a flag and a text in the value's place gets one number, 0 to 254. */
 export class CodeTable {
@@ -13,10 +14,12 @@ export class CodeTable {
   private readonly plain: number[] = [];
   private readonly others = new Map<number, number>();
 
-  /** @param iceLetter  letter that means ice among this file's flags */
+  /** @param iceLetter  letter that means ice among this file's flags
+   *  @param meanings  what flags mean by their text, before what their words say */
   constructor(
     private readonly file: string,
     private readonly iceLetter?: string,
+    private readonly meanings: Mapping['flags'] = {},
   ) {}
 
   /** The bytes of the flag last read by `code`. */
@@ -55,10 +58,15 @@ export class CodeTable {
       });
     }
     const code = this.codes.length;
-    const bits = flagBits(flagText, this.iceLetter) | flagBits(written);
+    const bits = this.bitsOf(flagText, this.iceLetter) | this.bitsOf(written);
     this.codes.push({ text: flagText || written, bits, ...(written === '' ? {} : { valueText: written }) });
     if (valueText === 0) this.plain[flag] = code;
     else this.others.set(valueText * 4096 + flag, code);
     return code;
+  }
+
+  private bitsOf(text: string, iceLetter?: string): number {
+    if (!Object.hasOwn(this.meanings, text)) return flagBits(text, iceLetter);
+    return this.meanings[text].reduce((bits, name) => bits | FLAG[name], 0);
   }
 }

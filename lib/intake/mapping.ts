@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { FLAG_NAMES } from '../series/daily-series.ts';
 import { QUANTITIES, UNITS, UNITS_OF } from '../series/quantities.ts';
 import { FIRST_YEAR, LAST_YEAR } from './dates.ts';
 import { type FieldPlace, FLOW_UNITS, IntakeError, LAYOUTS, type Mapping } from './types.ts';
@@ -33,7 +34,10 @@ const mappingSchema = z
       z.strictObject({ from: z.literal('given'), code: z.string().min(1) }),
     ]),
     date: z.strictObject({
-      columns: z.array(z.union([column, slice])).min(1).max(3),
+      columns: z
+        .array(z.union([column, slice]))
+        .min(1)
+        .max(3),
       order: z.enum(['ymd', 'dmy', 'mdy']),
       year: z.union([z.int().min(FIRST_YEAR).max(LAST_YEAR), z.literal('heading')]).optional(),
       yearBegins: z.strictObject({ month: z.int().min(1).max(12), named: z.enum(['first', 'last']) }).optional(),
@@ -50,6 +54,7 @@ const mappingSchema = z
       .max(LAST_YEAR - 99),
     dailyMean: z.number().min(0).max(1),
     quantity: z.enum(QUANTITIES),
+    flags: z.record(z.string().max(200), z.array(z.enum(FLAG_NAMES))),
     also: z.array(alsoQuantity),
     sheet: z.string().min(1),
     delimiter: z.enum([',', ';', '\t']),
@@ -82,6 +87,7 @@ const TAKES: Record<string, string> = {
   firstYear: `the year that two-digit years begin with, ${FIRST_YEAR} to ${LAST_YEAR - 99}: with 1930, "29" is 2029`,
   dailyMean: "the share of a day, 0 to 1, that its values must cover for their mean to be the day's, such as 0.8",
   quantity: QUANTITIES.map((quantity) => `${quantity} (in ${UNITS_OF[quantity].join(', ')})`).join('; '),
+  flags: `what flags mean, by their text: {"B": ["ice"], "7": []}, any of ${FLAG_NAMES.join(', ')}`,
   also: '[{"quantity": "stage", "unit": "m", "value": {"column": "level"}}], each quantity once and in a unit of its own',
   sheet: 'the name of a sheet of the workbook',
   delimiter: '",", ";" or a tab',

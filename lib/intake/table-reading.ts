@@ -22,7 +22,7 @@ export interface TableReading {
  *  @throws IntakeError when the station of a heading, or of the file's name, is unknown */
 export function tableReading(plan: TablePlan, options: InspectOptions, sink: DaySink): TableReading {
   const stations = new StationCodes(plan.file, options.knownStations ?? null);
-  const codes = new CodeTable(plan.file, plan.iceLetter);
+  const codes = new CodeTable(plan.file, plan.iceLetter, plan.mapping.flags);
   const values = new ValueReader(codes, plan.mapping.decimal, plan.mapping.missing);
   const reading = { stations, codes, values };
   if (plan.wide) {

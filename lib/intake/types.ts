@@ -1,4 +1,5 @@
 import type { Influence } from '../region/ranking-types.ts';
+import type { FlagName } from '../series/daily-series.ts';
 import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 import type { Quantity, Unit } from '../series/quantities.ts';
 import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
@@ -57,6 +58,8 @@ export interface Mapping {
   dailyMean?: number;
   /** what the values are of; absent: flow */
   quantity?: Quantity;
+  /** what flags mean in this file, by their text; goes before what their words say by themselves */
+  flags?: Record<string, FlagName[]>;
   /** further quantities of the same file, each laid over this mapping in a reading of its own */
   also?: AlsoQuantity[];
   /** name of the sheet of a workbook */

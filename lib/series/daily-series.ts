@@ -18,3 +18,4 @@ export const FLAG = {
   rejected: 32,
 } as const;
 export type FlagName = keyof typeof FLAG;
+export const FLAG_NAMES = Object.keys(FLAG) as FlagName[];

@@ -288,3 +288,10 @@ test('readFlows reports progress up to the whole size, and stops with the signal
   const reading = read(text, { signal: abort.signal, onProgress: () => abort.abort(reason) });
   await expect(reading).rejects.toBe(reason);
 });
+
+test('a mapping says what flags mean in its file, before what their words say', async () => {
+  const text = 'date,flow_m3s,flag\n2001-01-01,1,B\n2001-01-02,2,E\n2001-01-03,Ice,\n2001-01-04,4,P\n';
+  const { parts } = await read(text, { mapping: { flags: { B: ['ice', 'estimated'], E: [], Ice: ['suspect'] } } });
+  const bits = Array.from(parts[0].codes, (code) => parts[0].codeList[code].bits);
+  expect(bits).toEqual([FLAG.ice | FLAG.estimated, 0, FLAG.suspect, FLAG.provisional]);
+});
