@@ -2,6 +2,7 @@
  *  worker starts quickly. */
 export { coverage } from './tasks/coverage.ts';
 export { curves } from './tasks/curves.ts';
+export { lookAtFiles } from './tasks/look-at-files.ts';
 export { minima } from './tasks/minima.ts';
 export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';

@@ -70,3 +70,4 @@ export const STATION = pathParameter('code', 'code of the station');
 export const LAYER = pathParameter('layer', 'number of the layer');
 export const IMPORT = pathParameter('import', 'number of the import');
 export const JOB = pathParameter('job', 'id of the job');
+export const UPLOAD = pathParameter('upload', 'id of the upload');

@@ -5,27 +5,9 @@ import { coverageParameters } from '../regions/[region]/stations/[code]/coverage
 import { stationCurveParameters } from '../regions/[region]/stations/[code]/curve/parameters';
 import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
-import type { SCHEMAS } from './schemas';
-
-type SchemaName = keyof typeof SCHEMAS;
-
-const reference = (name: SchemaName) => ({ $ref: `#/components/schemas/${name}` });
-const listOf = (name: SchemaName) => ({ type: 'array', items: reference(name) });
-const anything = { type: 'object' };
-const text = { type: 'string' };
-
-const json = (schema: object) => ({ 'application/json': { schema } });
-const PROBLEM = {
-  default: {
-    description: 'what is wrong, and what would do',
-    content: { 'application/problem+json': { schema: reference('Problem') } },
-  },
-};
-
-/** What an operation answers when all is well. */
-function answers(description: string, content: object, status = '200') {
-  return { [status]: { description, content }, ...PROBLEM };
-}
+import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
+import { DAY_PATHS } from './paths-days';
+import { UPLOAD_PATHS } from './paths-uploads';
 
 const TABLE = {
   'application/json': { schema: anything },
@@ -47,19 +29,6 @@ function table(summary: string, path: Parameter[], shape: z.ZodRawShape, content
     },
   };
 }
-
-const MULTIPART = {
-  'multipart/form-data': {
-    schema: {
-      type: 'object',
-      properties: {
-        files: { type: 'array', items: { type: 'string', format: 'binary' } },
-        choices: { type: 'string', description: 'JSON of the schema ImportChoices' },
-      },
-      required: ['files'],
-    },
-  },
-};
 
 export const PATHS = {
   '/api/regions': {
@@ -111,6 +80,7 @@ export const PATHS = {
     coverageParameters,
     { ...json(anything), 'text/csv': { schema: text } },
   ),
+  ...DAY_PATHS,
   '/api/regions/{region}/layers': {
     get: { summary: 'Map layers', parameters: [REGION], responses: answers('the layers', json(listOf('Layer'))) },
   },
@@ -148,6 +118,7 @@ export const PATHS = {
       responses: answers('row, text, reason', { 'text/csv': { schema: text } }),
     },
   },
+  ...UPLOAD_PATHS,
   '/api/jobs/{job}': {
     parameters: [JOB],
     get: { summary: 'A job', responses: answers('where it stands', json(reference('Job'))) },

@@ -1,9 +1,28 @@
 import * as z from 'zod';
 import { basisSchema } from '@/lib/basis';
+import { LAYOUTS, NEEDS } from '@/lib/intake/types';
+import { FILE_KINDS } from '@/lib/jobs/import-types';
 import { INFLUENCES } from '@/lib/region/ranking-types';
+import { UNITS } from '@/lib/series/quantities';
 import { JOB_STATES } from '@/lib/store/jobs';
-import { importChoices } from '../regions/[region]/imports/bodies';
+import { fileChoices, importChoices } from '../regions/[region]/imports/bodies';
 import { newRegion, regionChange } from '../regions/bodies';
+import { importOrder, previewOrder, uploadChange } from '../uploads/[upload]/bodies';
+
+const uploadedFile = z.object({
+  file: z.string(),
+  size: z.int().describe('bytes'),
+  state: z.enum(['unseen', 'ready', 'asks', 'unreadable']),
+  kind: z.enum(FILE_KINDS).nullable(),
+  layout: z.enum(LAYOUTS).nullable(),
+  unit: z.enum(UNITS).nullable(),
+  stations: z.array(z.string()).describe('codes met in the first rows'),
+  count: z.int().nullable().describe('stations of a registry, features of a layer'),
+  problem: z.string().nullable(),
+  needs: z.array(z.enum(NEEDS)),
+  likeness: z.string().nullable().describe('equal for files that are laid out alike'),
+  choices: fileChoices,
+});
 
 /** What the API answers and takes, by name. */
 export const SCHEMAS = {
@@ -50,4 +69,21 @@ export const SCHEMAS = {
     finishedAt: z.string().nullable(),
   }),
   ImportChoices: importChoices,
+  Upload: z.object({
+    id: z.string(),
+    region: z.string().nullable().describe('null: its import makes a region'),
+    createdAt: z.string(),
+    files: z.array(uploadedFile),
+    job: z.object({ id: z.string(), state: z.enum(JOB_STATES), dryRun: z.boolean() }).nullable(),
+  }),
+  UploadChange: uploadChange,
+  PreviewOrder: previewOrder,
+  FilePreview: uploadedFile.extend({
+    problems: z.array(z.looseObject({ message: z.string() })),
+    inspection: z.looseObject({}).nullable().describe('mapping, header, first rows, and what they are understood as'),
+    lines: z.array(z.string()).describe('the first lines as they stand in the file'),
+    registry: z.looseObject({}).nullable(),
+    layer: z.looseObject({}).nullable(),
+  }),
+  ImportOrder: importOrder,
 } as const;

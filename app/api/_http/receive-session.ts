@@ -1,0 +1,60 @@
+import { randomUUID } from 'node:crypto';
+import { rm } from 'node:fs/promises';
+import { join } from 'node:path';
+import { takeUpload, viewUpload } from '@/lib/jobs/open-upload';
+import { discardAbandonedUploads } from '@/lib/jobs/upload-folder';
+import { discardSession, listSessions, newSessionFolder, type UploadSession } from '@/lib/jobs/upload-session';
+import { jsonAnswer } from './answer';
+import { Problem } from './problem';
+import { present } from './session';
+import { receiveUpload } from './upload';
+
+/** Uploads that may wait at a time, and files in one: a full disk would hurt more than a refusal. */
+const MOST_SESSIONS = 50;
+const MOST_FILES = 5_000;
+
+/** Receives files for a region, or for one to be made, as an upload that waits for its import. */
+export async function openSession(request: Request, regionId: number | null): Promise<Response> {
+  await discardAbandonedUploads();
+  if ((await listSessions()).length >= MOST_SESSIONS) {
+    throw new Problem(
+      'conflict',
+      `${MOST_SESSIONS} uploads wait for their import. Import or give up one of them first.`,
+    );
+  }
+  const { id } = newSessionFolder();
+  try {
+    await receiveInto({ id, regionId, files: [] }, request);
+  } catch (error) {
+    await discardSession(id);
+    throw error;
+  }
+  return viewAnswer(id, 201);
+}
+
+/** Adds files to an upload that waits. */
+export async function addToSession(request: Request, session: UploadSession): Promise<Response> {
+  await receiveInto(session, request);
+  return viewAnswer(session.id, 200);
+}
+
+async function receiveInto(
+  { id, regionId, files: before }: Pick<UploadSession, 'id' | 'regionId' | 'files'>,
+  request: Request,
+): Promise<void> {
+  const folder = join(newSessionFolder(id).folder, randomUUID());
+  try {
+    const { files } = await receiveUpload(request, folder);
+    if (before.length + files.length > MOST_FILES) {
+      throw new Problem('too-large', `At most ${MOST_FILES} files at once. Import them in parts.`);
+    }
+    await takeUpload({ id, regionId }, files);
+  } catch (error) {
+    await rm(folder, { recursive: true, force: true });
+    throw error;
+  }
+}
+
+async function viewAnswer(id: string, status: number): Promise<Response> {
+  return jsonAnswer(present(await viewUpload(id)), { status, headers: { location: `/api/uploads/${id}` } });
+}

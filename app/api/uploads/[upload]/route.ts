@@ -1,0 +1,28 @@
+import { jsonAnswer } from '@/app/api/_http/answer';
+import { readJson, readParameters } from '@/app/api/_http/parameters';
+import { route } from '@/app/api/_http/route';
+import { idleSessionOf, present, type UploadParams } from '@/app/api/_http/session';
+import { viewUpload } from '@/lib/jobs/open-upload';
+import { discardSession } from '@/lib/jobs/upload-session';
+import { lookedAt } from '../look';
+import { uploadChange } from './bodies';
+
+/** An upload that waits: its files in short, and its last import. */
+export const GET = route<UploadParams>(async (request, { upload }) => {
+  readParameters(request, {});
+  return jsonAnswer(present(await viewUpload(upload)));
+});
+
+/** Says how some of its files are to be read, and answers the upload as it stands then. */
+export const PATCH = route<UploadParams>(async (request, params) => {
+  const { id } = await idleSessionOf(params);
+  await lookedAt(id, (await readJson(request, uploadChange)).files);
+  return jsonAnswer(present(await viewUpload(id)));
+});
+
+/** Gives an upload up: its files go. */
+export const DELETE = route<UploadParams>(async (_request, params) => {
+  const { id } = await idleSessionOf(params);
+  await discardSession(id);
+  return new Response(null, { status: 204 });
+});

@@ -1,0 +1,16 @@
+import type { FileChoices } from '@/lib/jobs/import-types';
+import { lookAtUpload } from '@/lib/jobs/look-at-upload';
+import type { FilePreview } from '@/lib/jobs/upload-types';
+import { Problem } from '../_http/problem';
+import { present } from '../_http/session';
+
+/** Looks at files of an upload under the choices of a request.
+ *  @throws Problem for a file that the upload does not have */
+export async function lookedAt(id: string, choices: Record<string, unknown>): Promise<FilePreview[]> {
+  try {
+    return present(await lookAtUpload(id, choices as Record<string, FileChoices>));
+  } catch (error) {
+    if (error instanceof RangeError) throw new Problem('bad-body', 'The upload has no file of this name.');
+    throw error;
+  }
+}

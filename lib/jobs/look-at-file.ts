@@ -1,0 +1,105 @@
+import { readHead } from '../intake/file-blocks.ts';
+import { inspectFile } from '../intake/inspect-file.ts';
+import { readLayer } from '../intake/read-layer.ts';
+import { readRegistry } from '../intake/read-registry.ts';
+import { decodeText } from '../intake/text-encoding.ts';
+import { CORRECTIONS, type Inspection, IntakeError, type KnownStation } from '../intake/types.ts';
+import type { FileChoices, FileKind, GivenFile } from './import-types.ts';
+import { flowOptions, kindOf } from './stage-file.ts';
+import type { FilePreview, LayerPreview, PreviewProblem, RegistryPreview } from './upload-types.ts';
+
+/** Stations of a registry that are shown, and lines of a text. */
+const SHOWN_STATIONS = 50;
+const SHOWN_LINES = 12;
+const LONGEST_LINE_SHOWN = 2_000;
+
+export interface FileLook {
+  file: GivenFile;
+  /** bytes */
+  size: number;
+  choices: FileChoices;
+  /** the stations that flows may name; null where flows make them */
+  known: KnownStation[] | null;
+}
+
+/** What a look tells, and of a registry the stations that flows may name from now on. */
+export interface Looked {
+  preview: FilePreview;
+  names: KnownStation[] | null;
+}
+
+type Found = Pick<FilePreview, 'problems'> &
+  Partial<Pick<FilePreview, 'inspection' | 'registry' | 'layer' | 'count'>> & { names?: KnownStation[] };
+
+/** Looks at a file's beginning under the choices made for it; a registry or layer is read whole.
+ *  Changes nothing; whatever is wrong with the file or the choices stands in `problems`. */
+export async function lookAtFile({ file, size, choices, known }: FileLook): Promise<Looked> {
+  const kind = await kindOf(file, { files: { [file.name]: choices } });
+  const found = await foundIn(kind, file, choices, known).catch((error: unknown): Found => {
+    if (!(error instanceof IntakeError)) throw error;
+    return { problems: [problemIn(error)] };
+  });
+  const { problems, inspection = null, registry = null, layer = null, count = null, names = null } = found;
+  const mapping = inspection?.mapping ?? null;
+  const needs = problems.flatMap(({ problem }) => problem.needs ?? []);
+  const preview: FilePreview = {
+    ...{ file: file.name, size, kind, choices, problems, inspection, registry, layer, count, needs },
+    state: problems.length === 0 ? 'ready' : problems.every(({ problem }) => problem.needs) ? 'asks' : 'unreadable',
+    layout: mapping?.layout ?? null,
+    unit: mapping?.unit ?? null,
+    stations: [...new Set((inspection?.understood ?? []).map(({ station }) => station).filter(Boolean))].slice(0, 20),
+    problem: problems[0]?.message ?? null,
+    likeness: likenessOf(kind, inspection),
+    lines: kind === 'flows' && inspection?.sheets === null ? await firstLines(file) : [],
+  };
+  return { preview, names };
+}
+
+async function foundIn(
+  kind: FileKind,
+  file: GivenFile,
+  choices: FileChoices,
+  known: KnownStation[] | null,
+): Promise<Found> {
+  if (kind === 'registry') return registryIn(file, choices);
+  if (kind === 'layer') {
+    const { name, kind: shape, features, bounds, warnings } = await readLayer(file.path, file.name);
+    const layer: LayerPreview = { name, kind: shape, features, bounds, warnings };
+    return { problems: [], layer, count: features };
+  }
+  const options = flowOptions({ file, choices: { files: { [file.name]: choices } }, registry: known });
+  const { problems, ...inspection } = await inspectFile(file.path, options);
+  return { problems: problems.map(problemIn), inspection };
+}
+
+async function registryIn(file: GivenFile, choices: FileChoices): Promise<Found> {
+  try {
+    const { stations, given, warnings } = await readRegistry(file.path, file.name);
+    const shown = stations.slice(0, SHOWN_STATIONS);
+    const registry: RegistryPreview = { stations: shown, total: stations.length, given, warnings, offered: [] };
+    const names = stations.map(({ code, name }) => ({ code, name }));
+    return { problems: [], registry, count: stations.length, names };
+  } catch (error) {
+    if (!(error instanceof IntakeError) || error.problem.needs !== 'correction') throw error;
+    const offered = CORRECTIONS.filter((correction) => !choices.corrections?.includes(correction));
+    const registry: RegistryPreview = { stations: [], total: 0, given: [], warnings: [], offered };
+    return { problems: [problemIn(error)], registry };
+  }
+}
+
+const problemIn = (error: IntakeError): PreviewProblem => ({ message: error.message, problem: error.problem });
+
+/** Files of one layout with one header are laid out alike; a wide file's header names its stations, which differ. */
+function likenessOf(kind: FileKind, inspection: Pick<Inspection, 'mapping' | 'header' | 'preview'> | null) {
+  const mapping = inspection?.mapping;
+  if (kind !== 'flows' || !mapping) return null;
+  const columns = mapping.layout === 'wide' ? null : (inspection.header ?? inspection.preview[0]?.length ?? 0);
+  return JSON.stringify([mapping.layout, mapping.delimiter ?? null, columns]);
+}
+
+async function firstLines(file: GivenFile): Promise<string[]> {
+  const { bytes } = await readHead(file.path, file.name);
+  return decodeText(bytes.subarray(0, 64 * 1024))
+    .split(/\r\n|\n|\r/, SHOWN_LINES)
+    .map((line) => line.slice(0, LONGEST_LINE_SHOWN));
+}

@@ -1,0 +1,57 @@
+import type { KnownStation } from '../intake/types.ts';
+import { knownStations } from '../store/known-stations.ts';
+import type { FileChoices } from './import-types.ts';
+import type { Looked } from './look-at-file.ts';
+import { runTask } from './pool.ts';
+import { inTurn, readSession, type UploadSession, writeSession } from './upload-session.ts';
+import type { FilePreview, UploadedFile } from './upload-types.ts';
+
+/** Looks at files of an upload under new choices, and keeps both with it.
+ *  @param choices  by file name; a file keeps what is said here until it is said anew
+ *  @returns        a preview for each file named, in the order given; null when the upload is no longer there
+ *  @throws RangeError for a name that is none of its files */
+export function lookAtUpload(id: string, choices: Record<string, FileChoices>): Promise<FilePreview[] | null> {
+  return inTurn(id, async () => {
+    const session = await readSession(id);
+    if (!session) return null;
+    const names = Object.keys(choices);
+    const looks = names.map((name) => lookOf(session, name, choices[name]));
+    const looked = await runTask('lookAtFiles', { looks, known: knownTo(session, names) });
+    await writeSession(withLooks(session, looked));
+    return looked.map(({ preview }) => preview);
+  });
+}
+
+function lookOf(session: UploadSession, name: string, choices: FileChoices) {
+  const at = session.files.findIndex((file) => file.name === name);
+  if (at < 0) throw new RangeError(`lookAtUpload: choices must name files of the upload, got "${name}"`);
+  return { file: session.files[at], size: session.seen[at].size, choices };
+}
+
+/** The region's stations with those of the upload's own registries, but for the ones that are looked at anew. */
+function knownTo({ regionId, names }: UploadSession, anew: readonly string[]): KnownStation[] | null {
+  const standing = regionId === null ? null : knownStations(regionId);
+  const coming = Object.keys(names).flatMap((file) => (anew.includes(file) ? [] : names[file]));
+  return standing === null && coming.length === 0 ? null : [...(standing ?? []), ...coming];
+}
+
+/** A registry that has come in, or reads otherwise now, changes what the flows may name: they are to be looked at anew. */
+function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSession {
+  const fresh = new Map(looked.map(({ preview }) => [preview.file, shortOf(preview)]));
+  const names = { ...session.names };
+  for (const { preview, names: stations } of looked) {
+    if (stations) names[preview.file] = stations;
+    else delete names[preview.file];
+  }
+  const otherNames = JSON.stringify(names) !== JSON.stringify(session.names);
+  const seen = session.seen.map((one) => {
+    const anew: UploadedFile = otherNames && one.kind === 'flows' ? { ...one, state: 'unseen' } : one;
+    return fresh.get(one.file) ?? anew;
+  });
+  return { ...session, names, seen };
+}
+
+function shortOf(preview: FilePreview): UploadedFile {
+  const { problems, inspection, registry, layer, lines, ...short } = preview;
+  return short;
+}

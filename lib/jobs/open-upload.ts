@@ -1,0 +1,55 @@
+import { listRegions } from '../store/regions.ts';
+import type { GivenFile } from './import-types.ts';
+import { type JobView, viewJob } from './live-jobs.ts';
+import { lookAtUpload } from './look-at-upload.ts';
+import { inTurn, listSessions, readSession, type UploadSession, withFiles, writeSession } from './upload-session.ts';
+import type { UploadView } from './upload-types.ts';
+
+/** Files that are looked at before an upload is answered; the screen asks for the others, some at a time. */
+const LOOKED_AT_ONCE = 40;
+
+/** Opens a session for files that lie in its folder, or adds them to the one that is open. */
+export async function takeUpload(
+  { id, regionId }: Pick<UploadSession, 'id' | 'regionId'>,
+  files: readonly GivenFile[],
+): Promise<void> {
+  const first = await inTurn(id, async () => {
+    const createdAt = new Date().toISOString();
+    const open = (await readSession(id)) ?? { id, regionId, createdAt, files: [], seen: [], names: {}, job: null };
+    const session = await withFiles(open, files);
+    await writeSession(session);
+    return session.seen.filter(({ state }) => state === 'unseen').slice(0, LOOKED_AT_ONCE);
+  });
+  if (first.length > 0) await lookAtUpload(id, Object.fromEntries(first.map(({ file, choices }) => [file, choices])));
+}
+
+/** An upload as it is shown; null when there is none of this id. */
+export async function viewUpload(id: string): Promise<UploadView | null> {
+  const session = await readSession(id);
+  return session && viewOf(session, await slugs());
+}
+
+/** The uploads that wait for a region, oldest first. */
+export async function uploadsOf(regionId: number): Promise<UploadView[]> {
+  const sessions = (await listSessions()).filter((session) => session.regionId === regionId);
+  const bySlug = await slugs();
+  return Promise.all(sessions.map((session) => viewOf(session, bySlug)));
+}
+
+const slugs = async () => new Map((await listRegions()).map(({ id, slug }) => [id, slug]));
+
+async function viewOf(session: UploadSession, bySlug: Map<number, string>): Promise<UploadView> {
+  const { id, regionId, createdAt, seen, job } = session;
+  const view = job && (await viewJob(job.id));
+  return {
+    ...{ id, createdAt, files: seen },
+    region: regionId === null ? null : (bySlug.get(regionId) ?? null),
+    job: job && view ? { ...job, state: view.state } : null,
+  };
+}
+
+/** Whether an import of the session is under way. */
+export async function isBusy(session: UploadSession): Promise<boolean> {
+  const view: JobView | null = session.job && (await viewJob(session.job.id));
+  return view?.state === 'waiting' || view?.state === 'running';
+}
