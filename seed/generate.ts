@@ -57,6 +57,8 @@ export interface SeedRecord {
 export interface SeedRegion {
   name: string;
   stations: SeedStation[];
+  /** each station with the next one below it */
+  network: { upstream: string; downstream: string }[];
   layers(): SeedLayer[];
   /** every record once, upstream before downstream; may be walked again */
   records(): Generator<SeedRecord>;
@@ -86,6 +88,9 @@ export function generateRegion({ seed, stations: count = DEMO_STATIONS, years }:
   return {
     name: REGION_NAME,
     stations,
+    network: sites.flatMap(({ below }, i) =>
+      below < 0 ? [] : [{ upstream: stations[i].code, downstream: stations[below].code }],
+    ),
     layers: () => drawLayers(drainage, rivers, sites, { riverNames: names, stations }, DRAWN_RIVER_CELLS),
     records: () => flowRecords(seed, drainage, sites, traits, stations),
   };
