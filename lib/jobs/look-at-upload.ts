@@ -4,7 +4,7 @@ import type { FileChoices } from './import-types.ts';
 import type { Looked } from './look-at-file.ts';
 import { runTask } from './pool.ts';
 import { inTurn, readSession, type UploadSession, writeSession } from './upload-session.ts';
-import type { FilePreview, UploadedFile } from './upload-types.ts';
+import { type FilePreview, inShort, type UploadedFile } from './upload-types.ts';
 
 /** Looks at files of an upload under new choices, and keeps both with it.
  *  @param choices  by file name; a file keeps what is said here until it is said anew
@@ -37,7 +37,7 @@ function knownTo({ regionId, names }: UploadSession, anew: readonly string[]): K
 
 /** A registry that has come in, or reads otherwise now, changes what the flows may name: they are to be looked at anew. */
 function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSession {
-  const fresh = new Map(looked.map(({ preview }) => [preview.file, shortOf(preview)]));
+  const fresh = new Map(looked.map(({ preview }) => [preview.file, inShort(preview)]));
   const names = { ...session.names };
   for (const { preview, names: stations } of looked) {
     if (stations) names[preview.file] = stations;
@@ -49,9 +49,4 @@ function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSes
     return fresh.get(one.file) ?? anew;
   });
   return { ...session, names, seen };
-}
-
-function shortOf(preview: FilePreview): UploadedFile {
-  const { problems, inspection, registry, layer, lines, ...short } = preview;
-  return short;
 }

@@ -38,6 +38,12 @@ export interface UploadedFile {
   choices: FileChoices;
 }
 
+/** A preview without what only the screen of the one file shows. */
+export function inShort(preview: FilePreview): UploadedFile {
+  const { problems, inspection, registry, layer, lines, ...short } = preview;
+  return short;
+}
+
 /** Something that stands against taking a file. */
 export interface PreviewProblem {
   message: string;

@@ -38,7 +38,7 @@ export const UPLOAD_PATHS = {
     patch: {
       summary: 'Say how some of its files are to be read, and look at them anew',
       requestBody: { required: true, content: json(reference('UploadChange')) },
-      responses: answers('the upload', json(reference('Upload'))),
+      responses: answers('these files in short', json(listOf('UploadedFile'))),
     },
     delete: { summary: 'Give an upload up', responses: { '204': { description: 'its files are gone' }, ...PROBLEM } },
   },

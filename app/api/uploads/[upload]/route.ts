@@ -4,6 +4,7 @@ import { route } from '@/app/api/_http/route';
 import { idleSessionOf, present, type UploadParams } from '@/app/api/_http/session';
 import { viewUpload } from '@/lib/jobs/open-upload';
 import { discardSession } from '@/lib/jobs/upload-session';
+import { inShort } from '@/lib/jobs/upload-types';
 import { lookedAt } from '../look';
 import { uploadChange } from './bodies';
 
@@ -13,11 +14,11 @@ export const GET = route<UploadParams>(async (request, { upload }) => {
   return jsonAnswer(present(await viewUpload(upload)));
 });
 
-/** Says how some of its files are to be read, and answers the upload as it stands then. */
+/** Says how some of its files are to be read, and answers what they look like then. */
 export const PATCH = route<UploadParams>(async (request, params) => {
   const { id } = await idleSessionOf(params);
-  await lookedAt(id, (await readJson(request, uploadChange)).files);
-  return jsonAnswer(present(await viewUpload(id)));
+  const { files } = await readJson(request, uploadChange);
+  return jsonAnswer((await lookedAt(id, files)).map(inShort));
 });
 
 /** Gives an upload up: its files go. */
