@@ -4,7 +4,6 @@ import type { ImportReport, Mapping, StationReport } from '../lib/intake/types.t
 import { applyStaging } from '../lib/store/apply-staging.ts';
 import { blobOfValues } from '../lib/store/blobs.ts';
 import { createStaging, type Staging } from '../lib/store/staging.ts';
-import { setStationHistory } from '../lib/store/station-history.ts';
 import type { SeedRegion } from './generate.ts';
 import { NO_ROW } from './observe.ts';
 
@@ -35,11 +34,7 @@ export async function storeRegion(
     stageLand(staging, region);
     stageFlows(staging, region, onProgress);
     staging.seal();
-    const { regionId, slug } = await applyStaging(staging.jobId, { region: { name, invented: true }, by: BY });
-    for (const { code, changes, notes } of region.stations) {
-      if (changes.length > 0 || notes !== '') await setStationHistory(regionId, code, { changes, notes });
-    }
-    return slug;
+    return (await applyStaging(staging.jobId, { region: { name, invented: true }, by: BY })).slug;
   } finally {
     staging.discard();
   }

@@ -11,6 +11,7 @@ export type StoreProblem =
   | 'exists'
   | 'not-found'
   | 'in-use'
+  | 'needed'
   | 'lost';
 
 export class StoreError extends Error {

@@ -59,12 +59,13 @@ export function pointAtPart({ stationId, quantity }: Place, part: LayablePart & 
 }
 
 /** Stores laid days for a record to point to; when they are what the record holds already, nothing is stored anew.
- *  @param importId  the import on whose behalf they are laid: until it is over, no record points to them */
+ *  @param importId  the import on whose behalf they are laid: until it is over, no record points to them; null where the
+ *                   record comes to point to them in the same transaction */
 export function storeLaid(
   connection: Connection,
   { stationId, quantity }: Place,
   laid: LaidDays,
-  { standing, importId }: { standing: Standing | null; importId: number },
+  { standing, importId }: { standing: Standing | null; importId: number | null },
 ): RecordHead {
   const summary = summarise(laid);
   const { unit, firstDay, values, flags } = laid;
@@ -78,7 +79,7 @@ export function storeLaid(
   return { ...head, partId: null, laidId: Number(lastInsertRowid) };
 }
 
-/** Writes Records' rows: what readers go by. */
+/** Writes Records' rows: what readers go by. What the checks found on other days than these is forgotten. */
 export function saveRecords(connection: Connection, heads: Iterable<RecordHead>): void {
   const save = change(
     connection,
@@ -87,7 +88,8 @@ export function saveRecords(connection: Connection, heads: Iterable<RecordHead>)
      ON CONFLICT (stationId, quantity) DO UPDATE SET partId = excluded.partId, laidId = excluded.laidId,
        unit = excluded.unit, firstDay = excluded.firstDay, days = excluded.days, hash = excluded.hash,
        valueCount = excluded.valueCount, firstValueDay = excluded.firstValueDay, lastValueDay = excluded.lastValueDay,
-       zeroCount = excluded.zeroCount`,
+       zeroCount = excluded.zeroCount, checked = CASE WHEN hash = excluded.hash THEN checked END,
+       suspect = CASE WHEN hash = excluded.hash THEN suspect END`,
   );
   for (const head of heads) {
     save.run([

@@ -12,7 +12,7 @@ const PROBLEMS = {
   'bad-body': { status: 400, title: 'The request cannot be read' },
   'cut-off': { status: 400, title: 'The upload did not arrive whole' },
   'not-found': { status: 404, title: 'There is no such thing here' },
-  conflict: { status: 409, title: 'This would overwrite something' },
+  conflict: { status: 409, title: 'Something that is there stands against it' },
   'too-large': { status: 413, title: 'The upload is too large' },
   'bad-file': { status: 422, title: 'The file cannot be taken' },
   busy: { status: 503, title: 'The database is busy' },
@@ -49,6 +49,7 @@ const OF_THE_STORE: Record<StoreProblem, ProblemCode> = {
   newer: 'no-database',
   'bad-url': 'no-database',
   'in-use': 'busy',
+  needed: 'conflict',
   lost: 'unexpected',
 };
 

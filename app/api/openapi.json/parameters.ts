@@ -71,3 +71,5 @@ export const LAYER = pathParameter('layer', 'number of the layer');
 export const IMPORT = pathParameter('import', 'number of the import');
 export const JOB = pathParameter('job', 'id of the job');
 export const UPLOAD = pathParameter('upload', 'id of the upload');
+export const KEPT_MAPPING = pathParameter('mapping', 'number of the kept mapping');
+export const LINK = pathParameter('link', 'number of the link');

@@ -7,6 +7,7 @@ import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
 import { DAY_PATHS } from './paths-days';
+import { KEPT_PATHS } from './paths-mappings';
 import { UPLOAD_PATHS } from './paths-uploads';
 
 const TABLE = {
@@ -118,6 +119,7 @@ export const PATHS = {
       responses: answers('row, text, reason', { 'text/csv': { schema: text } }),
     },
   },
+  ...KEPT_PATHS,
   ...UPLOAD_PATHS,
   '/api/jobs/{job}': {
     parameters: [JOB],

@@ -6,6 +6,8 @@ import { INFLUENCES } from '@/lib/region/ranking-types';
 import { UNITS } from '@/lib/series/quantities';
 import { JOB_STATES } from '@/lib/store/jobs';
 import { fileChoices, importChoices } from '../regions/[region]/imports/bodies';
+import { link } from '../regions/[region]/links/bodies';
+import { mappingToKeep } from '../regions/[region]/mappings/bodies';
 import { newRegion, regionChange } from '../regions/bodies';
 import { importOrder, previewOrder, uploadChange } from '../uploads/[upload]/bodies';
 
@@ -69,6 +71,10 @@ export const SCHEMAS = {
     finishedAt: z.string().nullable(),
   }),
   ImportChoices: importChoices,
+  MappingToKeep: mappingToKeep,
+  SavedMapping: mappingToKeep.extend({ id: z.int(), createdAt: z.string() }),
+  NewLink: link,
+  Link: link.extend({ id: z.int() }),
   Upload: z.object({
     id: z.string(),
     region: z.string().nullable().describe('null: its import makes a region'),
@@ -76,6 +82,7 @@ export const SCHEMAS = {
     files: z.array(uploadedFile),
     job: z.object({ id: z.string(), state: z.enum(JOB_STATES), dryRun: z.boolean() }).nullable(),
   }),
+  UploadedFile: uploadedFile,
   UploadChange: uploadChange,
   PreviewOrder: previewOrder,
   FilePreview: uploadedFile.extend({

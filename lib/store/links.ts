@@ -1,0 +1,94 @@
+import { LINK_SOURCES, type LinkSource } from '../region/link-suggestions.ts';
+import { whenFree } from './busy.ts';
+import { type Connection, change, immediately, rows, sharedConnection } from './connection.ts';
+import { databasePath } from './database-url.ts';
+import { StoreError } from './errors.ts';
+
+export { LINK_SOURCES, type LinkSource };
+
+/** Two stations on one river, by code: water flows from the upper one to the lower one. */
+export interface LinkInput {
+  upstream: string;
+  downstream: string;
+  source: LinkSource;
+}
+
+export interface LinkRow extends LinkInput {
+  id: number;
+}
+
+const LIST = `SELECT l.id, u.code, d.code, l.source FROM Link l JOIN Station u ON u.id = l.upstreamId
+  JOIN Station d ON d.id = l.downstreamId WHERE l.regionId = ? ORDER BY u.code, d.code`;
+
+/** The links of a region, by the upper station's code. */
+export async function listLinks(regionId: number, path = databasePath()): Promise<LinkRow[]> {
+  const found = rows(sharedConnection(path), LIST).all([regionId]) as [number, string, string, LinkSource][];
+  return found.map(([id, upstream, downstream, source]) => ({ id, upstream, downstream, source }));
+}
+
+/** Says that one station lies below another; naming a link again only changes its source.
+ *  @throws StoreError 'not-found' for a code the region does not have, 'bad-input' for a link that would let water run in
+ *          a circle, or an unknown source */
+export async function setLink(regionId: number, link: LinkInput, path = databasePath()): Promise<LinkRow> {
+  const { upstream, downstream, source } = link;
+  if (!LINK_SOURCES.includes(source)) {
+    throw new StoreError('bad-input', `A link comes from ${LINK_SOURCES.join(', ')}, not from "${source}".`);
+  }
+  if (upstream === downstream) throw new StoreError('bad-input', `Station "${upstream}" cannot lie below itself.`);
+  const connection = sharedConnection(path);
+  const write = () => {
+    const [upperId, lowerId] = [upstream, downstream].map((code) => idOf(connection, regionId, code));
+    const way = wayDown(connection, regionId, downstream, upstream);
+    if (way) {
+      throw new StoreError(
+        'bad-input',
+        `Water would run in a circle: ${[upstream, ...way].join(' → ')}. Take one of these links away first.`,
+      );
+    }
+    change(
+      connection,
+      `INSERT INTO Link (regionId, upstreamId, downstreamId, source) VALUES (?, ?, ?, ?)
+       ON CONFLICT (upstreamId, downstreamId) DO UPDATE SET source = excluded.source`,
+    ).run([regionId, upperId, lowerId, source]);
+    const find = rows(connection, 'SELECT id FROM Link WHERE upstreamId = ? AND downstreamId = ?');
+    return (find.get([upperId, lowerId]) as [number])[0];
+  };
+  return { id: await whenFree(() => immediately(connection, write)), ...link };
+}
+
+/** Takes a link away. @returns false when the region has no such link */
+export async function removeLink(regionId: number, id: number, path = databasePath()): Promise<boolean> {
+  const connection = sharedConnection(path);
+  const remove = () => change(connection, 'DELETE FROM Link WHERE regionId = ? AND id = ?').run([regionId, id]).changes;
+  return (await whenFree(() => immediately(connection, remove))) > 0;
+}
+
+function idOf(connection: Connection, regionId: number, code: string): number {
+  const find = rows(connection, 'SELECT id FROM Station WHERE regionId = ? AND code = ?');
+  const found = find.get([regionId, code]) as [number] | undefined;
+  if (!found) throw new StoreError('not-found', `The region has no station "${code}".`);
+  return found[0];
+}
+
+/** The stations by which water comes from one to another, both included; null when it does not. */
+function wayDown(connection: Connection, regionId: number, from: string, to: string): string[] | null {
+  const below = new Map<string, string[]>();
+  for (const [, upper, lower] of rows(connection, LIST).all([regionId]) as [number, string, string, string][]) {
+    below.set(upper, [...(below.get(upper) ?? []), lower]);
+  }
+  const cameFrom = new Map<string, string | null>([[from, null]]);
+  const queue = [from];
+  for (const at of queue) {
+    if (at === to) {
+      const way: string[] = [];
+      for (let step: string | null = at; step !== null; step = cameFrom.get(step) ?? null) way.unshift(step);
+      return way;
+    }
+    for (const next of below.get(at) ?? []) {
+      if (cameFrom.has(next)) continue;
+      cameFrom.set(next, at);
+      queue.push(next);
+    }
+  }
+  return null;
+}
