@@ -1,6 +1,7 @@
 import { existsSync } from 'node:fs';
 import type { FlowUnit } from '../series/flow-units.ts';
 import { type Group, type Plan, planImport } from './apply-plan.ts';
+import { type ArchivedRegion, writeArchivedRegion } from './archived-region.ts';
 import { refuseForArea } from './area-error.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { StoreBusyError, whenFree } from './busy.ts';
@@ -112,7 +113,8 @@ function claimImports(connection: Connection, options: ApplyOptions): Promise<Cl
       connection,
       `INSERT INTO Import (regionId, createdAt, heartbeat, state, "by", kind, fileName, sha256, layout, unit, mapping, rule,
          rows, accepted, rejected, report)
-       SELECT ?, ?, ?, 'applying', ?, kind, fileName, sha256, layout, unit, mapping, ?, rows, accepted, rejected, report
+       SELECT ?, COALESCE(createdAt, ?), ?, 'applying', COALESCE("by", ?), kind, fileName, sha256, layout, unit, mapping,
+         COALESCE(rule, ?), rows, accepted, rejected, report
        FROM staging.file WHERE id = ?`,
     );
     const now = timestamp();
@@ -242,6 +244,11 @@ function show(connection: Connection, claim: Claim, plan: Plan, heads: RecordHea
   writeFacts(connection, regionId, plan, imports);
   writeLayers(connection, regionId, imports);
   saveRecords(connection, heads);
+  const archived = rows(connection, 'SELECT facts FROM staging.region').get([]) as [string] | undefined;
+  if (archived) {
+    const about = { regionId, regionMade: newRegion !== null };
+    writeArchivedRegion(connection, about, JSON.parse(archived[0]) as ArchivedRegion);
+  }
   const end = change(connection, "UPDATE Import SET state = 'applied' WHERE id = ?");
   for (const id of imports.values()) end.run([id]);
   const files = rows(connection, 'SELECT id, fileName, kind FROM staging.file ORDER BY id').all([]);

@@ -1,9 +1,11 @@
 import { existsSync, rmSync } from 'node:fs';
 import Database from 'libsql';
 import type { FoundFacts, StagedPart } from '../intake/types.ts';
+import type { ArchivedRegion } from './archived-region.ts';
 import { blobOf, blobOfValues } from './blobs.ts';
 import { flagsOfCodes } from './codes.ts';
 import { databasePath } from './database-url.ts';
+import type { OverlapRule } from './lay-parts.ts';
 import type { LayerKind } from './layers.ts';
 import { summarise } from './record-summary.ts';
 import { FACT_NAMES, type FactName, type StationInput } from './station-facts.ts';
@@ -25,6 +27,10 @@ export interface StagedFileFacts {
   rejected?: number;
   /** ImportReport, or for other kinds whatever should be shown again */
   report?: unknown;
+  /** of a file that was imported elsewhere before: by whom, when, and its own rule for unlike values */
+  by?: string;
+  createdAt?: string;
+  rule?: OverlapRule;
 }
 
 /** Where the files of one import wait, in a database beside the main one, until all of them have been found good.
@@ -42,6 +48,8 @@ export interface Staging {
   stageFacts(file: number, facts: readonly FoundFacts[]): void;
   stageLayer(file: number, layer: { name: string; kind: LayerKind; geojson: string }): void;
   describeFile(file: number, facts: StagedFileFacts): void;
+  /** what an archive says of the region itself */
+  stageRegion(facts: ArchivedRegion): void;
   /** Ends the filling; applyStaging comes next. */
   seal(): void;
   /** Ends the filling and removes all of it. */
@@ -52,7 +60,8 @@ const TABLES = `
   CREATE TABLE staging.file (id INTEGER PRIMARY KEY, kind TEXT NOT NULL, fileName TEXT NOT NULL, sha256 TEXT NOT NULL DEFAULT '',
     layout TEXT NOT NULL DEFAULT '', unit TEXT NOT NULL DEFAULT '', mapping TEXT NOT NULL DEFAULT '{}',
     rows INTEGER NOT NULL DEFAULT 0, accepted INTEGER NOT NULL DEFAULT 0, rejected INTEGER NOT NULL DEFAULT 0,
-    report TEXT NOT NULL DEFAULT '{}');
+    report TEXT NOT NULL DEFAULT '{}', "by" TEXT, createdAt TEXT, rule TEXT);
+  CREATE TABLE staging.region (facts TEXT NOT NULL);
   CREATE TABLE staging.registry (file INTEGER NOT NULL, stations TEXT NOT NULL, given TEXT NOT NULL);
   CREATE TABLE staging.facts (file INTEGER NOT NULL, stations TEXT NOT NULL);
   CREATE TABLE staging.layer (file INTEGER NOT NULL, name TEXT NOT NULL, kind TEXT NOT NULL, geojson TEXT NOT NULL);
@@ -129,15 +138,19 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
     },
     describeFile(fileId, facts) {
       const { sha256, layout = '', unit = '', mapping = {}, rows = 0, accepted = 0, rejected = 0, report = {} } = facts;
+      const { by = null, createdAt = null, rule = null } = facts;
       connection
         .prepare(
-          `UPDATE file SET sha256 = ?, layout = ?, unit = ?, mapping = ?, rows = ?, accepted = ?, rejected = ?, report = ?
-           WHERE id = ?`,
+          `UPDATE file SET sha256 = ?, layout = ?, unit = ?, mapping = ?, rows = ?, accepted = ?, rejected = ?, report = ?,
+             "by" = ?, createdAt = ?, rule = ? WHERE id = ?`,
         )
         .run([
           ...[sha256, layout, unit, JSON.stringify(mapping), rows, accepted, rejected, JSON.stringify(report)],
-          fileId,
+          ...[by, createdAt, rule, fileId],
         ]);
+    },
+    stageRegion(facts) {
+      connection.prepare('INSERT INTO region (facts) VALUES (?)').run([JSON.stringify(facts)]);
     },
     seal: end,
     discard() {
