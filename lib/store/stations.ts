@@ -1,6 +1,7 @@
 import type { Influence, StationFacts } from '../region/ranking-types.ts';
 import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
 import { rows, sharedConnection } from './connection.ts';
+import { changesOf, namedFlowsOf, recipeOf } from './history-text.ts';
 import { openStore } from './open.ts';
 
 export { type StationRecord, stationRecords } from './records.ts';
@@ -27,6 +28,8 @@ const FACTS = {
   influence: true,
 } as const;
 
+const ALL = { ...FACTS, changes: true, notes: true, namedFlows: true, derived: true } as const;
+
 const LIST_SQL = `SELECT ${Object.keys(FACTS).join(', ')} FROM Station WHERE regionId = ? ORDER BY code`;
 
 type FactsRow = [number, string, string, string, number | null, number | null, number | null, Influence];
@@ -40,19 +43,36 @@ export async function listStations(regionId: number): Promise<StationFacts[]> {
   }));
 }
 
+/** All that is known of a region's stations, by code. */
+export async function listStationRows(regionId: number): Promise<StationRow[]> {
+  const found = await openStore().prisma.station.findMany({
+    where: { regionId },
+    select: ALL,
+    orderBy: { code: 'asc' },
+  });
+  return found.map(toRow);
+}
+
 /** One station by its code, or null. */
 export async function getStation(regionId: number, code: string): Promise<StationRow | null> {
   const row = await openStore().prisma.station.findUnique({
     where: { regionId_code: { regionId, code } },
-    select: { ...FACTS, changes: true, notes: true, namedFlows: true, derived: true },
+    select: ALL,
   });
-  return (
-    row && {
-      ...row,
-      influence: row.influence as Influence,
-      changes: JSON.parse(row.changes),
-      namedFlows: JSON.parse(row.namedFlows),
-      derived: row.derived === null ? null : JSON.parse(row.derived),
-    }
-  );
+  return row && toRow(row);
+}
+
+interface Stored extends Omit<StationFacts, 'influence'> {
+  influence: string;
+  changes: string;
+  notes: string;
+  namedFlows: string;
+  derived: string | null;
+}
+
+function toRow({ influence, changes, namedFlows, derived, ...row }: Stored): StationRow {
+  return {
+    ...{ ...row, influence: influence as Influence },
+    ...{ changes: changesOf(changes), namedFlows: namedFlowsOf(namedFlows), derived: recipeOf(derived) },
+  };
 }
