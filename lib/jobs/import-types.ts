@@ -1,5 +1,7 @@
 import type { Correction, ImportReport, Inspection, IntakeError, Mapping, Unit } from '../intake/types.ts';
+import type { ArchivedImport } from '../store/archived-region.ts';
 import type { OverlapRule } from '../store/lay-parts.ts';
+import type { LayerKind } from '../store/layers.ts';
 import type { Revisions } from '../store/revisions.ts';
 
 export const FILE_KINDS = ['registry', 'layer', 'flows'] as const;
@@ -17,6 +19,10 @@ export interface FileChoices {
   matchCodes?: boolean;
   /** of a registry's coordinates */
   corrections?: Correction[];
+  /** of a file of a region's archive: what its first import was */
+  recorded?: ArchivedImport;
+  /** of a layer of an archive */
+  layer?: { name: string; kind: LayerKind };
 }
 
 /** What a person says about a whole import. */

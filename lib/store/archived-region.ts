@@ -1,4 +1,5 @@
 import { type Connection, change, rows } from './connection.ts';
+import type { OverlapRule } from './lay-parts.ts';
 import type { LayerKind } from './layers.ts';
 import type { MarkKind } from './marks-on-flags.ts';
 
@@ -53,7 +54,7 @@ export interface ArchivedImport {
   /** ISO date and time, UTC */
   createdAt: string;
   by: string;
-  rule: string;
+  rule: OverlapRule;
   layout: string;
   unit: string;
   rows: number;
