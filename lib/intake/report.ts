@@ -1,9 +1,9 @@
 import { isoDate } from '../calendar/day.ts';
 import { type DayRun, NO_ROW } from './station-days.ts';
-import type { DayCode, FlowUnit, StagedPart, StationReport } from './types.ts';
+import type { DayCode, StagedPart, StationReport, Unit } from './types.ts';
 
 /** One station's days with the codes it uses, and no others. */
-export function stagedPart(code: string, unit: FlowUnit, run: DayRun, fileCodes: readonly DayCode[]): StagedPart {
+export function stagedPart(code: string, unit: Unit, run: DayRun, fileCodes: readonly DayCode[]): StagedPart {
   const renumbered = new Int16Array(256).fill(-1);
   const codeList: DayCode[] = [];
   const codes = new Uint8Array(run.codes.length);

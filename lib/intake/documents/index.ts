@@ -1,18 +1,16 @@
 import type { FileHead } from '../file-blocks.ts';
-import type { ImportReport, Inspection, InspectOptions, Layout, ReadFlowsOptions } from '../types.ts';
+import { type DocumentReader, readerOf } from './document-reader.ts';
+import { sniffDocument } from './sniff.ts';
+import { parseWaterml1 } from './waterml-1.ts';
+import { parseWaterml2 } from './waterml-2.ts';
+import { parseWatermlJson } from './waterml-json.ts';
 
-/** Reads documents of time series, whose values have no place by column. */
-export interface DocumentReader {
-  layout: Layout;
-  /** What the document holds and what must be answered before it can be read.
-   *  @returns `mapping: null` when it cannot be read whatever is answered; never throws IntakeError */
-  inspect(path: string, options: InspectOptions): Promise<Inspection>;
-  /** Reads the document whole, whatever its size; emits one part a station and quantity when all of it is good.
-   *  @throws IntakeError; the signal's reason when aborted */
-  read(path: string, options: ReadFlowsOptions): Promise<ImportReport>;
-}
+export type { DocumentReader } from './document-reader.ts';
+
+const PARSERS = { 'waterml-2': parseWaterml2, 'waterml-1': parseWaterml1, 'waterml-json': parseWatermlJson };
 
 /** The reader for a document that begins with these bytes; null where they begin no document of time series. */
-export function documentReader(_head: FileHead): DocumentReader | null {
-  return null;
+export function documentReader(head: FileHead): DocumentReader | null {
+  const layout = sniffDocument(head.bytes);
+  return layout === null ? null : readerOf(layout, head, PARSERS[layout]);
 }
