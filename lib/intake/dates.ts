@@ -1,4 +1,6 @@
 import { dayNumber, daysInMonth } from '../calendar/day.ts';
+import { monthOfName, namedDate } from './month-names.ts';
+import { decodeText } from './text-encoding.ts';
 import type { Mapping } from './types.ts';
 
 export type DateOrder = Mapping['date']['order'];
@@ -36,11 +38,27 @@ export function dayOfParts(year: number, month: number, day: number): number {
 
 const isSeparator = (byte: number): boolean => byte === 45 || byte === 47 || byte === 46;
 
-/** Day number of a whole date in bytes: year first (`2001-03-09`, `2001/3/9`, `20010309`), or year last in the given
- *  order (`9/3/2001`, `09.03.2001`). A time of day behind it is allowed and not used.
+/** No two-digit years: it is not said which hundred years they stand for. */
+export const NO_CENTURY = -1;
+
+/** The year that two digits stand for, among the hundred years from `firstYear`. */
+export function fullYear(twoDigits: number, firstYear: number): number {
+  return firstYear + ((((twoDigits - firstYear) % 100) + 100) % 100);
+}
+
+/** Day number of a whole date in bytes: year first (`2001-03-09`, `2001/3/9`, `20010309`), year last in the given
+ *  order (`9/3/2001`, `09.03.2001`), or with the month's name (`9 Mar 2001`). A time of day behind it is allowed and not
+ *  used.
  *  @param start,end  the trimmed field, end exclusive
+ *  @param firstYear  first of the hundred years that two-digit years stand for; NO_CENTURY refuses them
  *  @returns          below NO_DAY when it is not a date; `dateProblem` words the reason */
-export function parseDate(bytes: Uint8Array, start: number, end: number, order: DateOrder): number {
+export function parseDate(
+  bytes: Uint8Array,
+  start: number,
+  end: number,
+  order: DateOrder,
+  firstYear: number = NO_CENTURY,
+): number {
   const length = end - start;
   if (length === 10 && bytes[start + 4] === 45 && bytes[start + 7] === 45) {
     const year =
@@ -51,7 +69,7 @@ export function parseDate(bytes: Uint8Array, start: number, end: number, order: 
     for (let at = start; at < end; at++) if (bytes[at] - 48 >= 0 && bytes[at] - 48 <= 9) digits++;
     if (digits === 8) return dayOfParts(year, month, day);
   }
-  return parseAnyDate(bytes, start, end, order);
+  return parseAnyDate(bytes, start, end, order, firstYear);
 }
 
 /** The three whole numbers of a date field, filled by splitDate; one for each call would cost more than the reading. */
@@ -77,11 +95,14 @@ function splitDate(bytes: Uint8Array, start: number, end: number): boolean {
   return at === end || isTimeOfDay(bytes, at, end);
 }
 
-/** `T00:00`, ` 09:00:00`, `T00:00:00.000+01:00`, `Z` behind a date. */
+/** `T00:00`, ` 09:00:00`, `T00:00:00.000+01:00`, `Z`, ` 12:00:00 AM`, ` 00:00 UTC` behind a date. */
 function isTimeOfDay(bytes: Uint8Array, start: number, end: number): boolean {
   if (bytes[start] === 90) return end === start + 1;
   if ((bytes[start] !== 84 && bytes[start] !== 32) || end - start < 3 || end - start > 30) return false;
-  for (let at = start + 1; at < end; at++) {
+  let last = end;
+  while (last > start + 1 && isLetter(bytes[last - 1])) last--;
+  if (end - last > 4) return false;
+  for (let at = start + 1; at < last; at++) {
     const byte = bytes[at];
     const fits = (byte >= 48 && byte <= 58) || byte === 46 || byte === 43 || byte === 45 || byte === 32 || byte === 90;
     if (!fits) return false;
@@ -89,17 +110,38 @@ function isTimeOfDay(bytes: Uint8Array, start: number, end: number): boolean {
   return bytes[start + 1] >= 48 && bytes[start + 1] <= 57;
 }
 
-function parseAnyDate(bytes: Uint8Array, start: number, end: number, order: DateOrder): number {
+const isLetter = (byte: number): boolean => (byte >= 65 && byte <= 90) || (byte >= 97 && byte <= 122);
+
+function parseAnyDate(bytes: Uint8Array, start: number, end: number, order: DateOrder, firstYear: number): number {
   if (end - start === 8 && parseCompact(bytes, start)) return dayOfParts(parts[0], parts[1], parts[2]);
-  if (!splitDate(bytes, start, end)) return NOT_A_DATE;
+  if (!splitDate(bytes, start, end)) return parseNamed(bytes, start, end, firstYear);
   if (widths[0] === 4 && widths[1] <= 2 && widths[2] <= 2) return dayOfParts(parts[0], parts[1], parts[2]);
   if (widths[0] > 2 || widths[1] > 2) return NOT_A_DATE;
-  if (widths[2] !== 4) return SHORT_YEAR;
+  if (widths[2] !== 4) {
+    if (widths[2] > 2 || firstYear === NO_CENTURY) return SHORT_YEAR;
+    return dayInOrder(order, (part) => fullYear(part, firstYear));
+  }
   if (order === 'ymd') return OTHER_ORDER;
   const day = order === 'dmy' ? parts[0] : parts[1];
   const month = order === 'dmy' ? parts[1] : parts[0];
   if (month > 12 && day <= 12 && dayOfParts(parts[2], day, month) > NO_DAY) return OTHER_ORDER;
   return dayOfParts(parts[2], month, day);
+}
+
+/** The day that the three parts last split stand for in an order. */
+function dayInOrder(order: DateOrder, year: (part: number) => number): number {
+  if (order === 'ymd') return dayOfParts(year(parts[0]), parts[1], parts[2]);
+  return order === 'dmy'
+    ? dayOfParts(year(parts[2]), parts[1], parts[0])
+    : dayOfParts(year(parts[2]), parts[0], parts[1]);
+}
+
+function parseNamed(bytes: Uint8Array, start: number, end: number, firstYear: number): number {
+  if (end - start < 6 || end - start > 64) return NOT_A_DATE;
+  const named = namedDate(decodeText(bytes, start, end));
+  if (named === null) return NOT_A_DATE;
+  if (named.short && firstYear === NO_CENTURY) return SHORT_YEAR;
+  return dayOfParts(named.short ? fullYear(named.year, firstYear) : named.year, named.month, named.day);
 }
 
 function parseCompact(bytes: Uint8Array, start: number): boolean {
@@ -114,15 +156,23 @@ function parseCompact(bytes: Uint8Array, start: number): boolean {
   return true;
 }
 
-/** Which order a year-last date proves: 13/1/2001 can only be day first. */
-export function orderShownBy(bytes: Uint8Array, start: number, end: number): 'dmy' | 'mdy' | 'either' | 'none' {
-  if (!splitDate(bytes, start, end) || widths[0] > 2 || widths[1] > 2 || widths[2] !== 4) return 'none';
-  const dmy = dayOfParts(parts[2], parts[1], parts[0]) > NO_DAY;
-  const mdy = dayOfParts(parts[2], parts[0], parts[1]) > NO_DAY;
-  // 5/5/2001 is the same day either way and asks for no decision.
-  if (dmy && mdy) return parts[0] === parts[1] ? 'none' : 'either';
-  if (dmy) return 'dmy';
-  return mdy ? 'mdy' : 'none';
+/** The orders of a date as bits, for those in which a date may be read. */
+export const ORDER_BITS: Record<DateOrder, number> = { ymd: 1, dmy: 2, mdy: 4 };
+
+/** The orders in which a date of three numbers is a day, as ORDER_BITS: 13/1/2001 can only be day first.
+ *  @returns 0 for a date that says nothing of the file's order: it is no such date, or the same day in any order
+ *           (5/5/2001), or its year stands in front with four digits */
+export function ordersOf(bytes: Uint8Array, start: number, end: number): number {
+  if (!splitDate(bytes, start, end) || widths[0] > 2 || widths[1] > 2 || widths[2] === 3) return 0;
+  const short = widths[2] <= 2;
+  // Two digits stand for a leap year at most: 29 February is possible in any order.
+  const year = short ? () => 2000 : (part: number) => part;
+  let bits = 0;
+  for (const order of ['ymd', 'dmy', 'mdy'] as const) {
+    if ((order !== 'ymd' || short) && dayInOrder(order, year) > NO_DAY) bits |= ORDER_BITS[order];
+  }
+  const alike = parts[0] === parts[1] && (!short || parts[1] === parts[2]);
+  return alike ? 0 : bits;
 }
 
 /** A whole number in bytes, blanks before it allowed; −1 when it is none. For year, month and day in columns. */
@@ -134,6 +184,13 @@ export function parseWhole(bytes: Uint8Array, start: number, end: number): numbe
     value = value * 10 + bytes[at] - 48;
   }
   return value;
+}
+
+/** A month in a column of its own, as a number or a name; −1 when it is none. */
+export function parseMonth(bytes: Uint8Array, start: number, end: number): number {
+  const month = parseWhole(bytes, start, end);
+  if (month >= 0 || end - start < 3 || end - start > 14) return month;
+  return monthOfName(decodeText(bytes, start, end)) || -1;
 }
 
 /** Why a field is not a day, in words. */

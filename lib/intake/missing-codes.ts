@@ -1,7 +1,7 @@
 /** Words that stand where a value is missing, as monitoring agencies and spreadsheets write them. */
 const WORDS = new Set(
   [
-    ...['', '-', '--', '---', '.', '..', '*', '**', '***', '?', 'x'],
+    ...['', '-', '--', '---', '.', '..', '*', '**', '***', '?'],
     ...['na', 'n/a', '#n/a', 'nan', 'null', 'none', 'nil', 'nd', 'm', 'missing', 'no data', 'nodata', 'lücke', 'gap'],
     // Reasons that agencies print in place of a value.
     ...['ice', 'eqp', 'bkw', 'dis', 'ssn', 'rat', 'mnt', 'zfl', 'fld', 'dry', 'tst', 'afl', 'pr', 'cr', 'frozen'],

@@ -29,24 +29,57 @@ function isHeader(fields: readonly string[]): boolean {
   return roles.includes('date') || (roles.includes('year') && roles.includes('month') && roles.includes('day'));
 }
 
+/** Rows behind the first with a date that are asked whether they have dates too. */
+const ROWS_ASKED = 10;
+
+/** The first row of data: it stands right below a header, or most rows behind it have dates as well, unlike behind a line
+ *  such as "Period: 2001-01-01". */
+function firstDated(rows: readonly SampleRow[], least: number): number {
+  const dated = (row: SampleRow) => row.fields.length >= least && hasDate(row.fields);
+  let first = -1;
+  for (const [at, row] of rows.entries()) {
+    if (!dated(row)) continue;
+    if (first < 0) first = at;
+    const above = rows[at - 1] !== undefined && isWidthRow(rows[at - 1].fields) ? rows[at - 2] : rows[at - 1];
+    if (above !== undefined && isHeaderRow(above.fields)) return at;
+    const behind = rows.slice(at + 1, at + 1 + ROWS_ASKED);
+    if (behind.filter(dated).length * 2 >= behind.length) return at;
+  }
+  return first;
+}
+
+/** A line of a key and its value, "Unit:;m3/s", which is no header. */
+const isPair = (fields: readonly string[]): boolean => /:$/.test(fields[0]);
+
+const isHeaderRow = (fields: readonly string[]): boolean =>
+  fields.length > 1 && !isPair(fields) && isHeader(fields) && !hasDate(fields);
+
 /** Finds where the data begin: at the first row with a date that has as many fields as most rows. The row before it is
  *  the header when it has as many fields and is not itself data; whatever stands above are title lines.
  *  @param count  the usual number of fields */
 export function findTableStart(rows: readonly SampleRow[], count: number): TableStart {
-  const dated = rows.findIndex(({ fields }) => fields.length >= Math.min(count, 2) && hasDate(fields));
+  const dated = firstDated(rows, Math.min(count, 2));
   // A header that says where the date is holds even when the first rows below it have gone wrong.
   const above = dated < 0 ? rows : rows.slice(0, dated);
-  const named = above.findIndex(({ fields }) => fields.length > 1 && isHeader(fields) && !hasDate(fields));
-  if (named >= 0) {
-    const widthRow = rows[named + 1] !== undefined && isWidthRow(rows[named + 1].fields);
-    return { header: rows[named].fields, widthRow, firstRow: named + (widthRow ? 2 : 1) };
-  }
+  const headers = above.flatMap(({ fields }, at) => (isHeaderRow(fields) ? [at] : []));
+  // Of several, the one right above the data: blocks of station facts may have keys such as "Time zone".
+  const below = (at: number) => (isWidthRow(rows[at + 1]?.fields ?? []) ? at + 2 : at + 1);
+  const named = headers.findLast((at) => below(at) === dated) ?? headers[0] ?? -1;
+  if (named >= 0) return { header: rows[named].fields, widthRow: below(named) > named + 1, firstRow: below(named) };
   if (dated < 0) return { header: null, widthRow: false, firstRow: rows.length };
   const last = above.at(-1)?.fields ?? null;
   const isHeading =
     last !== null &&
+    !isPair(last) &&
     last.length === rows[dated].fields.length &&
     last.filter((field) => field !== '').length > 1 &&
     last.some((field) => /\p{L}/u.test(field));
   return { header: isHeading ? last : null, widthRow: false, firstRow: dated };
+}
+
+/** The header that stands in the last of the comment lines above a table: "#Timestamp;Value;Quality code".
+ *  @param fields  that line's fields
+ *  @returns       null when it is none */
+export function headerInComment(fields: readonly string[], count: number): string[] | null {
+  return fields.length > 1 && Math.abs(fields.length - count) <= 1 && isHeader(fields) ? [...fields] : null;
 }

@@ -2,9 +2,14 @@ import { FLOW_UNITS, type FlowUnit, IntakeError } from '../types.ts';
 import { DAILY_DISCHARGE, unitNamedIn, unitsNamedIn } from '../units.ts';
 
 /** The unit that a file states, looked for where it is said most closely first: the value's heading, the column of
- *  units, then comment and title lines (only when all of these together name just one).
+ *  units, a line "Unit: …" above the table, then comment and title lines (only when all of these together name just one).
  *  @param headings  heading of the value column; in a wide table, of every station's column */
-export function findUnit(found: { headings: string[]; unitText: string; remarks: string[] }): FlowUnit | null {
+export function findUnit(found: {
+  headings: string[];
+  unitText: string;
+  units: string[];
+  remarks: string[];
+}): FlowUnit | null {
   if (found.headings.length > 0 && found.headings.every((heading) => DAILY_DISCHARGE.test(heading))) return 'ft3/s';
   const inHeadings = new Set(found.headings.map(unitNamedIn));
   if (inHeadings.size === 1) {
@@ -12,6 +17,8 @@ export function findUnit(found: { headings: string[]; unitText: string; remarks:
     if (unit !== null) return unit;
   }
   if (found.unitText !== '') return unitNamedIn(found.unitText);
+  const stated = new Set(found.units.flatMap(unitsNamedIn));
+  if (stated.size > 0) return stated.size === 1 ? [...stated][0] : null;
   const inRemarks = new Set(found.remarks.flatMap(unitsNamedIn));
   return inRemarks.size === 1 ? [...inRemarks][0] : null;
 }

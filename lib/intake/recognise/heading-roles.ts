@@ -24,9 +24,9 @@ export type HeadingRole =
 const words = (text: string): Set<string> => new Set(text.split(' '));
 
 const EXACT: [HeadingRole, Set<string>][] = [
-  ['year', words('year yr yyyy y jahr annee año ano')],
-  ['month', words('month mon mo mm mth monat mois mes')],
-  ['day', words('day dd dy d tag jour dia')],
+  ['year', words('year yr yyyy y jahr annee année año ano anno år jaar')],
+  ['month', words('month mon mo mm mth monat mois mes mês mese månad maand')],
+  ['day', words('day dd dy d tag jour dia día giorno dag')],
   ['flag', words('cd sym symbol symbole qf qc e')],
   ['ignored', words('x')],
 ];
@@ -35,9 +35,11 @@ const EXACT: [HeadingRole, Set<string>][] = [
 const BY_WORD: [HeadingRole, Set<string>][] = [
   [
     'flag',
-    words('flag flags qualifier qualifiers quality qcode qualcode symbol sym status remark remarks grade approval'),
+    words(
+      'flag flags qualifier qualifiers quality qcode qualcode symbol sym status remark remarks grade approval kvalitet',
+    ),
   ],
-  ['unit', words('unit units einheit unité')],
+  ['unit', words('unit units einheit unité unidad unidade enhet eenheid')],
   ['quantity', words('param parameter variable')],
   ['ignored', words('agency name nm river stream watercourse lat latitude lon long longitude tz timezone')],
   ['date', words('date datetime datum timestamp fecha dato data dates time')],
@@ -58,6 +60,9 @@ const BY_WORD: [HeadingRole, Set<string>][] = [
   ['maybe-station', words('id code no number nr num')],
 ];
 
+/** A heading that shows how its dates are written: "YYYY-MM-DD", "TT.MM.JJJJ". */
+const DATE_FORM = /^(?:[YJA]{4}[-./]MM[-./][DTJ]{2}|[DTJ]{2}[-./]MM[-./][YJA]{4})(?:[ T]HH:MM(?::SS)?)?$/i;
+
 const UNIT_WORDS = words('cfs cms cumecs cumec cusecs m3 s m3s ft3 ft3s l ls lps ml mld d day mm mmd sec 1 3 m ft');
 
 /** Words of a heading: "siteNo" → site, no; "flow_cfs" → flow, cfs. */
@@ -75,6 +80,7 @@ export function roleOfHeading(heading: string): HeadingRole {
   const found = headingWords(heading);
   const whole = found.join(' ');
   for (const [role, list] of EXACT) if (list.has(whole)) return role;
+  if (DATE_FORM.test(heading.trim())) return 'date';
   if (found.length > 1 && found[found.length - 1] === 'cd') return found[0] === 'agency' ? 'ignored' : 'flag';
   for (const [role, list] of BY_WORD) if (found.some((word) => list.has(word))) return role;
   if (unitsNamedIn(heading).length === 0) return 'unknown';

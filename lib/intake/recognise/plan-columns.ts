@@ -1,22 +1,28 @@
 import { longLineError } from '../file-blocks.ts';
 import { columnPosition } from '../mapping.ts';
+import type { LineSplitter } from '../rows/fields.ts';
 import { type InspectOptions, IntakeError, type Layout, type Mapping } from '../types.ts';
 import { unitNamedIn } from '../units.ts';
 import { agencyColumns } from './agency-columns.ts';
 import { assignColumns, type ColumnRoles, type WideColumn } from './assign-columns.ts';
-import { columnFacts, looksLikeDate } from './column-facts.ts';
-import { findTableStart, type TableStart } from './find-header.ts';
-import { mappingProblem, problemsOf } from './plan-problems.ts';
-import { columnTexts, mappingOf, mostFrequent } from './recognised-mapping.ts';
+import { columnFacts, hasShortYear, looksLikeDate } from './column-facts.ts';
+import { findTableStart, headerInComment, isWidthRow, type TableStart } from './find-header.ts';
+import { readLinesAbove, stationAbove } from './lines-above.ts';
+import { otherQuantities } from './other-quantities.ts';
+import { centuryProblem, mappingProblem, problemsOf, stationProblem, thousandsProblem } from './plan-problems.ts';
+import { columnTexts, mappingOf, mostFrequent, signsOf } from './recognised-mapping.ts';
 import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount } from './sample.ts';
+import { withoutSign } from './stated-facts.ts';
 import type { TablePlan } from './table-plan.ts';
+import { mixedUnits } from './unit-column.ts';
 
 export interface PlanContext {
   options: InspectOptions;
   lineEnd: number;
   marked: boolean;
-  /** comment lines */
+  /** comment lines, and the sign that they begin with where it is not `#` */
   remarks: string[];
+  sign: string | null;
   /** the line that runs over the end of the sample; null when the sample is the whole file */
   openLine: Uint8Array | null;
 }
@@ -27,20 +33,19 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const file = options.fileName;
   const splitter = splitterFor(delimiter, lineEnd);
   const rows = splitSample(body, splitter);
-  const start = tableStart(rows);
+  const start = tableStart(rows, splitter, context.remarks);
   const data = rows.slice(start.firstRow);
   refuseWithoutRows(file, rows, start, data, context.openLine);
   const { header } = start;
   const fieldCount = header?.length ?? usualCount(data);
-  const remarks = [...context.remarks, ...body.slice(0, start.firstRow).map(({ text }) => text)];
+  const titles = rows
+    .slice(0, start.firstRow)
+    .map((row, at) => ({ text: body[at].text, row }))
+    .filter(({ row }) => row.fields !== header && !isWidthRow(row.fields));
+  const above = readLinesAbove(context.remarks, titles, delimiter);
   const roles = rolesOf(data, start, fieldCount, options);
-  const mapping = mappingOf(roles, data, {
-    header,
-    delimiter,
-    remarks,
-    options,
-    layout: layoutOf(roles, start, delimiter),
-  });
+  const layout = layoutOf(roles, start, delimiter);
+  const mapping = mappingOf(roles, data, { header, delimiter, above, options, layout });
   const position = (column: number | string | [number, number]): number => {
     if (typeof column !== 'object') return columnPosition(column, header, file);
     throw mappingProblem(file, 'the mapping gives characters, but the file has delimited columns');
@@ -54,22 +59,32 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
     value: wide ? -1 : placeOf(mapping.value),
     flag: wide ? -1 : placeOf(mapping.flag),
     where: mapping.where ? position(mapping.where.column) : -1,
-    unit: options.unit || options.mapping?.unit ? -1 : (roles.unitColumn ?? -1),
+    unit: wide ? -1 : (roles.unitColumn ?? -1),
   };
+  const { where } = mapping;
+  const flows = where ? data.filter(({ fields }) => fields[places.where] === where.equals) : data;
+  const valueTexts = (wide?.map(({ value }) => value) ?? [places.value]).flatMap((at) => columnTexts(flows, at));
+  const { signs, open } = signsOf(valueTexts, options.mapping);
+  Object.assign(mapping, signs);
+  const problems = problemsOf(file, mapping, roles, header, wide);
+  if (open !== null) problems.push(thousandsProblem(file, open));
+  const shortYear = mapping.firstYear === undefined ? shortYearIn(data, places.date) : null;
+  if (shortYear !== null) problems.push(centuryProblem(file, shortYear));
+  const mixed = mixedUnits(file, flows, places, header, wide);
+  if (mixed !== null) problems.unshift(mixed);
+  if (mapping.station.from === 'lines-above' && stationAbove(above.facts, options.knownStations) === null)
+    problems.push(stationProblem(file));
+
   const required = Math.max(...places.date, places.station, places.value, places.where) + 1;
-  const dateTexts = places.date.length === 1 ? data.map(({ fields }) => fields[places.date[0]] ?? '') : [];
-  const warnings: string[] = [];
-  if (options.station && (mapping.station.from === 'column' || wide)) {
-    warnings.push(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
-  }
-  if (wide) warnings.push(...unreadColumns(header ?? [], wide, places.date));
+  const dateTexts = places.date.length === 1 ? columnTexts(data, places.date[0]) : [];
   const shown = rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + 7);
   return {
-    ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, warnings, fieldCount },
+    ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, fieldCount, problems },
+    ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),
     firstLine: data[0].line,
     leastFields: Math.max(required, leastFields(data, fieldCount)),
-    unitText: mostFrequent(columnTexts(data, places.unit)),
-    orderOpen: options.mapping?.date === undefined && dateTexts.some((text) => /^\d{1,2}[-/.]/.test(text)),
+    unitText: mostFrequent(columnTexts(flows, places.unit)),
+    orderOpen: options.mapping?.date === undefined && dateTexts.some((text) => /^\d{1,2}[-/.]\d{1,2}[-/.]/.test(text)),
     ...(symbolColumn(header, places.flag) ? { iceLetter: 'b' } : {}),
     repeatsHeader: mapping.layout === 'agency-tab',
     preview: shown.map(({ fields }) => fields),
@@ -79,12 +94,44 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
       label: header?.[column] || `column ${column + 1}`,
       samples: data.slice(0, 5).map(({ fields }) => fields[column] ?? ''),
     })),
-    problems: problemsOf(file, mapping, roles, header, wide),
+    others: otherQuantities(roles, { header, data, remarks: above.remarks, mapping, value: places.value }),
+    facts: above.facts,
+    warnings: warningsOf(options, mapping, wide, header, places.date),
   };
 }
 
-function tableStart(rows: readonly SampleRow[]): TableStart {
-  return findTableStart(rows, usualCount(rows));
+function warningsOf(
+  options: InspectOptions,
+  mapping: Mapping,
+  wide: WideColumn[] | null,
+  header: readonly string[] | null,
+  dates: readonly number[],
+): string[] {
+  const warnings = wide ? unreadColumns(header ?? [], wide, dates) : [];
+  if (options.station && (mapping.station.from === 'column' || wide)) {
+    warnings.unshift(`The file names its stations itself; the station “${options.station}” given for it was not used.`);
+  }
+  return warnings;
+}
+
+/** A date with a two-digit year, where most dates have one; null where they do not. */
+function shortYearIn(data: readonly SampleRow[], dates: readonly number[]): string | null {
+  const texts =
+    dates.length === 1
+      ? columnTexts(data, dates[0])
+      : data.map(({ fields }) => dates.map((column) => fields[column] ?? '').join(' ')).filter((text) => text.trim());
+  const short = texts.filter((text) => (dates.length === 1 ? hasShortYear(text) : !/\d{4}/.test(text)));
+  return short.length * 2 > texts.length ? short[0] : null;
+}
+
+function tableStart(rows: readonly SampleRow[], splitter: LineSplitter, remarks: readonly string[]): TableStart {
+  const count = usualCount(rows);
+  const start = findTableStart(rows, count);
+  const last = remarks[remarks.length - 1];
+  if (start.header !== null || last === undefined) return start;
+  const bytes = new TextEncoder().encode(withoutSign(last));
+  const [{ fields }] = splitSample([{ line: 0, text: last, bytes }], splitter);
+  return { ...start, header: headerInComment(fields, count) };
 }
 
 function refuseWithoutRows(

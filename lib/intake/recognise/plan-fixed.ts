@@ -18,7 +18,8 @@ export function planFixedWidth(
   const guess = findFixedSlices(body);
   if (given.layout !== 'fixed-width' && guess === null) return null;
   const file = options.fileName;
-  const unit = options.unit ?? given.unit ?? findUnit({ headings: [], unitText: '', remarks: context.remarks });
+  const unit =
+    options.unit ?? given.unit ?? findUnit({ headings: [], unitText: '', units: [], remarks: context.remarks });
   const mapping: Mapping = {
     layout: 'fixed-width',
     station: options.station ? { from: 'given', code: options.station } : { from: 'file-name' },

@@ -13,6 +13,40 @@ export function mappingProblem(file: string, message: string, value?: string): I
   });
 }
 
+/** Dates with two-digit years: which hundred years they lie in is asked, never guessed. */
+export function centuryProblem(file: string, date: string): IntakeError {
+  return new IntakeError({
+    file,
+    value: date,
+    message: 'the years have two digits, and the file does not say of which century',
+    remedy:
+      'Say the first of the hundred years that they stand for, in a mapping such as {"firstYear": 1930}: "30" is then 1930 and "29" is 2029',
+    needs: 'century',
+  });
+}
+
+/** A mapping says that the lines above the table name the station, and they do not. */
+export function stationProblem(file: string): IntakeError {
+  return new IntakeError({
+    file,
+    message: 'the lines above the table do not name the station',
+    remedy: 'Say which station the flows are of, or in a mapping where it is named',
+    needs: 'station',
+  });
+}
+
+/** A sign before three digits that may set decimals or thousands apart. */
+export function thousandsProblem(file: string, value: string): IntakeError {
+  const sign = value.includes(',') ? ',' : '.';
+  return new IntakeError({
+    file,
+    value,
+    message: `“${sign}” may stand before decimals or between thousands; no value of the file says which`,
+    remedy: `Say it in a mapping: {"decimal": "${sign}"} or {"thousands": "${sign}"}`,
+    needs: 'thousands',
+  });
+}
+
 /** What stands against reading a table of columns as the mapping has it. */
 export function problemsOf(
   file: string,
@@ -37,7 +71,7 @@ export function problemsOf(
         value: name,
         message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
         remedy: `Give a mapping such as {"where": {"column": "${name}", "equals": "1"}}`,
-        needs: 'mapping',
+        needs: 'quantity',
       }),
     );
   }

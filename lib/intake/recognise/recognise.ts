@@ -1,6 +1,7 @@
 import { type FileHead, LONGEST_LINE, lineEndOf, longLineError } from '../file-blocks.ts';
 import { hasUtf8Mark, refuseUnlessText } from '../text-encoding.ts';
 import { type InspectOptions, IntakeError } from '../types.ts';
+import { commentSign, isComment } from './comment-lines.ts';
 import { isSettled, planColumns } from './plan-columns.ts';
 import { planFixedWidth } from './plan-fixed.ts';
 import { detectDelimiter, sampleLines } from './sample.ts';
@@ -16,7 +17,8 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
   const wholeFile = head.bytes.length >= head.size;
   if (head.bytes.length >= LONGEST_LINE && !head.bytes.includes(lineEnd)) throw longLineError(file, 1, head.bytes);
   const lines = sampleLines(head.bytes, lineEnd, wholeFile);
-  const body = lines.filter(({ text }) => !text.startsWith('#'));
+  const sign = commentSign(lines);
+  const body = lines.filter(({ text }) => !isComment(text, sign));
   if (body.length === 0) {
     throw new IntakeError({
       file,
@@ -28,7 +30,8 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
   const openLine = wholeFile ? null : head.bytes.subarray(head.bytes.lastIndexOf(lineEnd) + 1);
   const context = {
     ...{ options, openLine, lineEnd, marked: hasUtf8Mark(head.bytes) },
-    remarks: lines.filter(({ text }) => text.startsWith('#')).map(({ text }) => text),
+    remarks: lines.filter(({ text }) => isComment(text, sign)).map(({ text }) => text),
+    sign,
   };
   const asked = options.mapping?.layout;
   if (asked === 'fixed-width') return planFixedWidth(body, context) as TablePlan;

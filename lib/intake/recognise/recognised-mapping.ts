@@ -1,7 +1,8 @@
-import type { InspectOptions, Layout, Mapping } from '../types.ts';
+import type { InspectOptions, Layout, Mapping, StatedFacts } from '../types.ts';
 import type { ColumnRoles } from './assign-columns.ts';
-import { usesDecimalComma } from './column-facts.ts';
 import { findUnit } from './find-unit.ts';
+import { type LinesAbove, stationAbove } from './lines-above.ts';
+import { type NumberSigns, numberSigns } from './number-signs.ts';
 import type { SampleRow } from './sample.ts';
 
 /** What was recognised, with what a person gave laid over it. */
@@ -11,24 +12,23 @@ export function mappingOf(
   found: {
     header: string[] | null;
     delimiter: string | null;
-    remarks: string[];
+    above: LinesAbove;
     options: InspectOptions;
     layout: Layout;
   },
 ): Mapping {
-  const { header, delimiter, remarks, options } = found;
+  const { header, delimiter, above, options } = found;
   const valueColumns = roles.wide?.map(({ value }) => value) ?? (roles.value === null ? [] : [roles.value]);
-  const valueTexts = data.flatMap(({ fields }) => valueColumns.map((column) => fields[column] ?? ''));
   const column = (at: number | null) => (at === null ? null : { column: at });
-  const where = quantityFilter(roles, data, remarks);
+  const where = quantityFilter(roles, data, above.remarks);
   return {
     layout: found.layout,
-    station: stationOf(roles, options),
+    station: stationOf(roles, options, above.facts),
     date: { columns: roles.date, order: roles.partsOrder ?? 'ymd' },
     value: roles.wide ? null : column(roles.value),
     flag: roles.wide ? null : column(roles.flag),
     missing: [],
-    decimal: delimiter !== ',' && usesDecimalComma(valueTexts) ? ',' : '.',
+    decimal: '.',
     ...(delimiter === null ? {} : { delimiter }),
     ...(where ? { where } : {}),
     ...options.mapping,
@@ -38,19 +38,50 @@ export function mappingOf(
       findUnit({
         headings: valueColumns.map((at) => header?.[at] ?? ''),
         unitText: mostFrequent(columnTexts(data, roles.unitColumn ?? -1)),
-        remarks,
+        ...above,
       }),
   };
 }
 
-function stationOf(roles: ColumnRoles, options: InspectOptions): Mapping['station'] {
+/** The station of a table that has no column for it. */
+export function stationOf(
+  roles: Pick<ColumnRoles, 'wide' | 'station'>,
+  options: InspectOptions,
+  facts: readonly StatedFacts[],
+): Mapping['station'] {
   if (roles.wide) return { from: 'header' };
   if (roles.station !== null) return { from: 'column', column: roles.station };
-  return options.station ? { from: 'given', code: options.station } : { from: 'file-name' };
+  if (options.station) return { from: 'given', code: options.station };
+  return { from: stationAbove(facts, options.knownStations) === null ? 'file-name' : 'lines-above' };
+}
+
+/** The decimal and thousands signs of the values, as given or as they show.
+ *  @returns `open`: a value whose sign may be either, which must be asked; null when all is clear */
+export function signsOf(
+  texts: readonly string[],
+  given: Partial<Mapping> | undefined,
+): { signs: NumberSigns; open: string | null } {
+  if (given?.thousands !== undefined) {
+    const { thousands } = given;
+    const decimal = given.decimal ?? (thousands === '.' ? ',' : thousands === ',' ? '.' : numberSigns(texts)?.decimal);
+    return { signs: { decimal: decimal ?? '.', thousands }, open: null };
+  }
+  const shown = numberSigns(texts);
+  const open = shown === null ? (texts.find((text) => /^[+-]?\d{1,3}[.,]\d{3}$/.test(text)) ?? null) : null;
+  if (given?.decimal === undefined) return { signs: shown ?? { decimal: '.' }, open };
+  const { decimal } = given;
+  // With the decimal sign said, the other one can only stand between thousands.
+  const other = decimal === '.' ? ',' : '.';
+  const grouped = shown === null ? open?.includes(other) : shown.decimal === decimal && shown.thousands !== undefined;
+  return { signs: { decimal, ...(grouped ? { thousands: shown?.thousands ?? other } : {}) }, open: null };
 }
 
 /** Files that hold several quantities number them in a column; a title line says which number is discharge. */
-function quantityFilter(roles: ColumnRoles, data: readonly SampleRow[], remarks: string[]): Mapping['where'] | null {
+function quantityFilter(
+  roles: ColumnRoles,
+  data: readonly SampleRow[],
+  remarks: readonly string[],
+): Mapping['where'] | null {
   const column = roles.quantityColumn;
   if (column === null) return null;
   const titled = remarks
@@ -58,8 +89,14 @@ function quantityFilter(roles: ColumnRoles, data: readonly SampleRow[], remarks:
     .find(Boolean);
   if (titled) return { column, equals: titled };
   const texts = new Set(data.map(({ fields }) => fields[column] ?? ''));
-  return texts.size === 1 ? { column, equals: [...texts][0] } : null;
+  if (texts.size === 1) return { column, equals: [...texts][0] };
+  // Texts that name their quantities: the only one that is the flow.
+  const flows = [...texts].filter((text) => FLOW_WORDS.test(text));
+  return flows.length === 1 ? { column, equals: flows[0] } : null;
 }
+
+const FLOW_WORDS =
+  /(?<!\p{L})(?:flow|streamflow|discharge|runoff|abfluss|durchfluss|d[ée]bit|caudal|vaz[ãa]o|vattenf[öo]ring|afvoer|portata|q)(?!\p{L})/iu;
 
 /** The filled fields of a column. */
 export function columnTexts(data: readonly SampleRow[], column: number): string[] {

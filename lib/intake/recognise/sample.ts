@@ -56,13 +56,20 @@ export function usualCount(rows: readonly SampleRow[]): number {
 /** The delimiter that splits most lines into equally many fields, at least two; null when none does. Tab before
  *  semicolon before comma: a comma may be the decimal sign of the other two. */
 export function detectDelimiter(lines: readonly SampleLine[], lineEnd: number): '\t' | ';' | ',' | null {
-  // Title lines stand at the top, so the last lines of the sample say more.
-  const late = lines.slice(-400);
+  // Title lines stand at the top, so the last lines of the sample say more; of a short file, its very last.
+  for (const tail of [400, Math.ceil(lines.length / 2), Math.ceil(lines.length / 4)]) {
+    const delimiter = delimiterOf(lines.slice(-tail), lineEnd);
+    if (delimiter !== null) return delimiter;
+  }
+  return null;
+}
+
+function delimiterOf(lines: readonly SampleLine[], lineEnd: number): '\t' | ';' | ',' | null {
   for (const delimiter of ['\t', ';', ','] as const) {
-    const rows = splitSample(late, new DelimitedLines(delimiter.charCodeAt(0), lineEnd));
+    const rows = splitSample(lines, new DelimitedLines(delimiter.charCodeAt(0), lineEnd));
     const count = usualCount(rows.filter((row) => row.fields.length > 1));
     const alike = rows.filter((row) => row.fields.length === count).length;
-    if (count >= 2 && alike * 2 >= late.length) return delimiter;
+    if (count >= 2 && alike * 2 >= lines.length) return delimiter;
   }
   return null;
 }

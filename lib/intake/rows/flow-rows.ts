@@ -6,6 +6,7 @@ import type { ValueReader } from '../value-reader.ts';
 import type { Fields } from './fields.ts';
 import { PlainRows } from './plain-rows.ts';
 import { countProblem, DayReader, type DaySink, fieldIs, type RowReader, textOf } from './row-reader.ts';
+import { UnitColumn } from './unit-column.ts';
 
 /** Rows of one value each: a station (in a column, or one for the whole file), a day, a value and perhaps a flag. */
 export class FlowRows implements RowReader {
@@ -13,7 +14,7 @@ export class FlowRows implements RowReader {
   leftOut = 0;
   private readonly days: DayReader;
   private readonly where: Uint8Array;
-  private readonly unit: Uint8Array;
+  private readonly unit: UnitColumn;
   private readonly plain: PlainRows | null;
 
   /** @param onlyStation  the station of a file without a station column */
@@ -24,7 +25,7 @@ export class FlowRows implements RowReader {
   ) {
     this.days = new DayReader(plan);
     this.where = new TextEncoder().encode(plan.mapping.where?.equals ?? '');
-    this.unit = new TextEncoder().encode(plan.unitText);
+    this.unit = new UnitColumn(plan);
     this.plain = PlainRows.for(plan, parts, onlyStation);
   }
 
@@ -39,7 +40,9 @@ export class FlowRows implements RowReader {
       const problem = countProblem(bytes, fields, plan);
       if (problem !== null) return problem;
     }
-    if (places.where >= 0 && !fieldIs(bytes, fields, places.where, this.where)) {
+    const other = places.where >= 0 && !fieldIs(bytes, fields, places.where, this.where);
+    // No column of this station holds the quantity.
+    if (other || places.value < 0) {
       this.leftOut++;
       return null;
     }
@@ -48,8 +51,9 @@ export class FlowRows implements RowReader {
     if (!parts.values.read(bytes, fields.start[places.value], fields.end[places.value])) {
       return `“${textOf(bytes, fields, places.value)}” is not a flow`;
     }
-    if (places.unit >= 0 && !fieldIs(bytes, fields, places.unit, this.unit)) {
-      return `the unit “${textOf(bytes, fields, places.unit)}” is not that of the other rows, “${plan.unitText}”`;
+    if (places.unit >= 0) {
+      const problem = this.unit.problem(bytes, fields, line);
+      if (problem !== null) return problem;
     }
     let station = this.onlyStation;
     if (places.station >= 0) {

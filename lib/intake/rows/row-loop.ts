@@ -1,12 +1,14 @@
 import { readBlocks } from '../file-blocks.ts';
-import { agencyColumns } from '../recognise/agency-columns.ts';
+import { agencyColumns, seriesOf } from '../recognise/agency-columns.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
+import { roleOfHeading } from '../recognise/heading-roles.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import type { Rejections } from '../rejections.ts';
 import { decodeText, refuseUnlessUtf8 } from '../text-encoding.ts';
 import { IntakeError } from '../types.ts';
 import { Fields } from './fields.ts';
-import { isEmptyRow, type RowReader } from './row-reader.ts';
+import { FixedWidthLines } from './fixed-width.ts';
+import { isEmptyRow, NO_ROW_OF_DATA, type RowReader } from './row-reader.ts';
 
 const COMMENT = 35;
 
@@ -31,17 +33,37 @@ export class RowLoop {
   line = 0;
   /** the last line has no line end: the file may have been cut */
   endsOpen = false;
+  /** times that the header was met again below the first row of data */
+  headersAgain = 0;
   private readonly fields = new Fields(16);
   private started = false;
+  /** parameter and statistic of an agency file's column that is read; null: the daily mean discharge */
+  private readonly series: string | null;
 
   constructor(
     private readonly plan: TablePlan,
     private readonly reader: RowReader,
     private readonly options: LoopOptions,
-  ) {}
+  ) {
+    this.series = seriesOf(plan.header?.[plan.places.value] ?? '');
+  }
 
   /** @throws IntakeError of the reader's, and for lines beyond the longest */
   async read(path: string): Promise<void> {
+    const { plan } = this;
+    // A header met on the way may move the columns; the next reading begins with those of the first again.
+    const { fieldCount, leastFields } = plan;
+    const places = { ...plan.places, date: [...plan.places.date] };
+    try {
+      await this.readAll(path);
+    } finally {
+      plan.places.date.splice(0, places.date.length, ...places.date);
+      Object.assign(plan.places, { ...places, date: plan.places.date });
+      Object.assign(plan, { fieldCount, leastFields });
+    }
+  }
+
+  private async readAll(path: string): Promise<void> {
     const { plan, options } = this;
     await readBlocks(path, {
       file: plan.file,
@@ -59,6 +81,13 @@ export class RowLoop {
         return goOn;
       },
     });
+  }
+
+  /** Reads the whole lines among the first bytes of a file, by the thorough way.
+   *  @param wholeFile  the bytes are all of it, so that a last line may lack its end */
+  readHead(head: Uint8Array, wholeFile: boolean): void {
+    const end = wholeFile ? head.length : head.lastIndexOf(this.plan.lineEnd) + 1;
+    this.block(head, this.plan.marked ? 3 : 0, end);
   }
 
   private block(bytes: Uint8Array, start: number, end: number): boolean {
@@ -82,12 +111,12 @@ export class RowLoop {
       }
       at = splitter.split(bytes, at, end, fields);
       line++;
-      if (line < firstLine || fields.lineEnd === fields.lineStart || bytes[fields.lineStart] === COMMENT) continue;
+      if (line < firstLine || fields.lineEnd === fields.lineStart || this.isComment(bytes)) continue;
       // Set before reading, for a reader that refuses the file.
       this.line = line;
       const reason = reader.read(bytes, fields, line);
       if (reason === null) rows++;
-      else if (this.rejects(bytes, reason)) rows++;
+      else if (reason !== NO_ROW_OF_DATA && this.rejects(bytes, reason)) rows++;
       if (options.stop?.()) return false;
     }
     this.rows = rows;
@@ -95,24 +124,63 @@ export class RowLoop {
     return true;
   }
 
+  private isComment(bytes: Uint8Array): boolean {
+    const { lineStart } = this.fields;
+    if (bytes[lineStart] === COMMENT) return true;
+    const { comment } = this.plan;
+    return comment?.every((byte, at) => bytes[lineStart + at] === byte) === true;
+  }
+
   /** Rejects the row just split, unless it is no row at all.
    *  @returns whether it counts as a row */
   private rejects(bytes: Uint8Array, reason: string): boolean {
     const { fields, plan } = this;
-    if (isEmptyRow(fields) || (plan.repeatsHeader && this.isHeading(bytes))) return false;
+    if (isEmptyRow(fields)) return false;
+    if (plan.repeatsHeader ? this.isHeading(bytes) : this.isHeaderAgain(bytes)) return false;
     this.options.rejections?.add(bytes, fields.lineStart, fields.lineEnd, this.line, reason);
     return true;
   }
 
+  /** Tables that were put one below another have their header in between.
+   *  @throws IntakeError when it is another header: the columns would no longer be where they were */
+  private isHeaderAgain(bytes: Uint8Array): boolean {
+    const { fields, plan } = this;
+    const { header, places } = plan;
+    const date = places.date[0];
+    if (header === null || date === undefined || date >= fields.count) return false;
+    const texts = this.texts(bytes);
+    if (texts.length === header.length && texts.every((text, at) => text === header[at])) {
+      this.headersAgain++;
+      return true;
+    }
+    const words = texts.filter((text) => /^\p{L}/u.test(text)).length;
+    const isHeader = texts.length > 1 && texts.some((text) => roleOfHeading(text) === 'date') && words === texts.length;
+    if (!isHeader || plan.splitter instanceof FixedWidthLines) return false;
+    throw new IntakeError({
+      file: plan.file,
+      row: this.line,
+      value: texts.join(', ').slice(0, 200),
+      message: `from this header on, the columns are others than those of the first header (${header.join(', ').slice(0, 200)})`,
+      remedy: 'Split the file where its header changes',
+    });
+  }
+
+  private texts(bytes: Uint8Array): string[] {
+    const { fields } = this;
+    return Array.from({ length: fields.count }, (_, at) => decodeText(bytes, fields.start[at], fields.end[at]));
+  }
+
   /** An agency file gives each station a header and a row of widths of its own, with its own series numbers. */
   private isHeading(bytes: Uint8Array): boolean {
-    const { fields, plan } = this;
-    const texts = Array.from({ length: fields.count }, (_, at) => decodeText(bytes, fields.start[at], fields.end[at]));
+    const { plan } = this;
+    const texts = this.texts(bytes);
     if (isWidthRow(texts)) return true;
     if (texts[0] !== plan.header?.[0]) return false;
-    const columns = agencyColumns(texts);
+    const columns = agencyColumns(texts, this.series);
     if (columns === null) return false;
-    if (columns.value < 0) {
+    const isFlow = (plan.mapping.quantity ?? 'flow') === 'flow';
+    // A station may lack a further quantity; its rows are then left out.
+    if (columns.value < 0 && isFlow) {
       throw new IntakeError({
         file: plan.file,
         row: this.line,

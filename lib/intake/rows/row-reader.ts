@@ -1,4 +1,4 @@
-import { dateProblem, dayOfParts, NO_DAY, parseDate, parseWhole } from '../dates.ts';
+import { dateProblem, dayOfParts, fullYear, NO_CENTURY, NO_DAY, parseDate, parseMonth, parseWhole } from '../dates.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import { decodeText } from '../text-encoding.ts';
 import type { Fields } from './fields.ts';
@@ -9,9 +9,12 @@ export interface DaySink {
   take(station: number, day: number, value: number, code: number, line: number): void;
 }
 
+/** Answer of a reader for a line between rows of data: a heading, a line of totals that is left out. */
+export const NO_ROW_OF_DATA = '';
+
 /** Reads rows that have been split into fields. */
 export interface RowReader {
-  /** @returns null when the row was taken (or does not count), else why it was not */
+  /** @returns null when the row was taken (or does not count), else why it was not; NO_ROW_OF_DATA for a line that is none */
   read(bytes: Uint8Array, fields: Fields, line: number): string | null;
   /** The quick way, where a table has one: takes the line that starts at `from` without splitting it.
    *  @returns first byte of the next line; −1 when the line must be split and read */
@@ -21,24 +24,31 @@ export interface RowReader {
 /** Reads the date of a row, in one column or in three. */
 export class DayReader {
   private readonly columns: readonly number[];
+  private readonly firstYear: number;
 
   constructor(private readonly plan: TablePlan) {
     this.columns = plan.places.date;
+    this.firstYear = plan.mapping.firstYear ?? NO_CENTURY;
   }
 
   /** Day number; below NO_DAY when the row names none. */
   day(bytes: Uint8Array, fields: Fields): number {
     const columns = this.columns;
+    const { order } = this.plan.mapping.date;
     if (columns.length === 1) {
-      return parseDate(bytes, fields.start[columns[0]], fields.end[columns[0]], this.plan.mapping.date.order);
+      return parseDate(bytes, fields.start[columns[0]], fields.end[columns[0]], order, this.firstYear);
     }
     const [first, second, third] = columns;
-    const a = parseWhole(bytes, fields.start[first], fields.end[first]);
-    const b = parseWhole(bytes, fields.start[second], fields.end[second]);
-    const c = parseWhole(bytes, fields.start[third], fields.end[third]);
-    const order = this.plan.mapping.date.order;
-    if (order === 'ymd') return dayOfParts(a, b, c);
-    return order === 'dmy' ? dayOfParts(c, b, a) : dayOfParts(c, a, b);
+    const whole = (column: number) => parseWhole(bytes, fields.start[column], fields.end[column]);
+    const month = (column: number) => parseMonth(bytes, fields.start[column], fields.end[column]);
+    if (order === 'ymd') return dayOfParts(this.year(whole(first)), month(second), whole(third));
+    if (order === 'dmy') return dayOfParts(this.year(whole(third)), month(second), whole(first));
+    return dayOfParts(this.year(whole(third)), month(first), whole(second));
+  }
+
+  private year(written: number): number {
+    const short = written >= 0 && written < 100 && this.firstYear !== NO_CENTURY;
+    return short ? fullYear(written, this.firstYear) : written;
   }
 
   /** Why `day` answered below NO_DAY. */

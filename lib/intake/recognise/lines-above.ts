@@ -1,0 +1,46 @@
+import type { KnownStation, StatedFacts } from '../types.ts';
+import { factOfKey } from './fact-words.ts';
+import type { SampleRow } from './sample.ts';
+import { factsIn, pairOf, pairsAcross, stationsListed } from './stated-facts.ts';
+
+/** What the lines above a table say. */
+export interface LinesAbove {
+  /** comment and title lines as written */
+  remarks: string[];
+  facts: StatedFacts[];
+  /** what stands behind "Unit:" and its like */
+  units: string[];
+}
+
+/** Reads comment lines and the title lines above a table.
+ *  @param titles  title lines, split like the table */
+export function readLinesAbove(
+  comments: readonly string[],
+  titles: readonly { text: string; row: SampleRow }[],
+  delimiter: string | null,
+): LinesAbove {
+  const remarks = [...comments, ...titles.map(({ text }) => text)];
+  const pairs = remarks.flatMap((text) => pairOf(text, delimiter) ?? []);
+  for (let at = 0; at + 1 < titles.length; at++) {
+    pairs.push(...pairsAcross(titles[at].row.fields, titles[at + 1].row.fields));
+  }
+  const stated = factsIn(pairs);
+  const listed = stationsListed(comments);
+  const units = pairs.flatMap(({ key, value }) => (factOfKey(key) === 'unit' ? [value] : []));
+  if (stated.code === undefined && listed.length > 0) return { remarks, facts: listed, units };
+  return { remarks, facts: Object.keys(stated).length > 0 ? [stated] : [], units };
+}
+
+/** The station that the lines above a table name: by its number, or by a name that the registry has; null when neither
+ *  does. */
+export function stationAbove(
+  facts: readonly StatedFacts[] | undefined,
+  known: readonly KnownStation[] | null | undefined,
+): string | null {
+  if (facts?.length !== 1) return null;
+  const [{ code, name }] = facts;
+  if (code !== undefined) return code;
+  const plain = name?.trim().toLowerCase();
+  const bearers = known?.filter((station) => plain !== undefined && station.name.trim().toLowerCase() === plain) ?? [];
+  return bearers.length === 1 ? bearers[0].code : null;
+}
