@@ -1,7 +1,10 @@
 import type { FoundFacts } from '../intake/types.ts';
+import type { Quantity } from '../series/quantities.ts';
+import type { Claim } from './claim-import.ts';
 import { type Connection, rows } from './connection.ts';
-import { reserveIds, VISIBLE } from './import-claim.ts';
+import { VISIBLE } from './import-claim.ts';
 import { ImportRefused } from './import-refused.ts';
+import { refuseDerived } from './plan-derived.ts';
 import {
   bareFacts,
   FACT_NAMES,
@@ -29,13 +32,13 @@ export interface StagedHead {
   id: number;
   file: number;
   code: string;
-  quantity: string;
+  quantity: Quantity;
 }
 
 /** A record to be laid: a station and quantity, with the staged parts that come to it in the order of their files. */
 export interface Group {
   station: PlannedStation;
-  quantity: string;
+  quantity: Quantity;
   staged: StagedHead[];
   /** parts that stand */
   standing: number;
@@ -48,14 +51,18 @@ export interface Plan {
   groups: Group[];
 }
 
-/** Works out what the staged files do to a region, writing nothing but the counter of stations' ids.
- *  @param unknown  what becomes of flows of a station that neither stands nor is in a staged registry
+/** Works out what the staged files do to a region, writing nothing but what `idsFor` does.
+ *  @param idsFor  the first of so many ids for new stations
  *  @throws ImportRefused naming the file and the station that is refused */
-export function planImport(connection: Connection, regionId: number, unknown: 'make' | 'refuse'): Plan {
+export function planImport(
+  connection: Connection,
+  { regionId, unknownStations }: Pick<Claim, 'regionId' | 'unknownStations'>,
+  idsFor: (count: number) => number,
+): Plan {
   const stations = standingStations(connection, regionId);
   makeRegistered(connection, stations);
   const heads = rows(connection, 'SELECT id, file, code, quantity FROM staging.part ORDER BY file, id').all([]);
-  const staged = (heads as [number, number, string, string][]).map(([id, file, code, quantity]) => ({
+  const staged = (heads as [number, number, string, Quantity][]).map(([id, file, code, quantity]) => ({
     id,
     file,
     code,
@@ -63,14 +70,16 @@ export function planImport(connection: Connection, regionId: number, unknown: 'm
   }));
   for (const { code, file } of staged) {
     if (stations.has(code)) continue;
-    if (unknown === 'refuse') throw unknownStation(connection, file, code);
+    if (unknownStations === 'refuse') throw unknownStation(connection, file, code);
     stations.set(code, { id: 0, code, facts: bareFacts(code), madeBy: file, changed: false });
   }
   const said = laySaid(connection, stations);
   const made = [...stations.values()].filter(({ madeBy }) => madeBy !== null);
-  const firstId = made.length > 0 ? reserveIds(connection, 'Station', made.length) : 0;
+  const firstId = made.length > 0 ? idsFor(made.length) : 0;
   for (const [index, station] of made.entries()) station.id = firstId + index;
-  return { stations, said, groups: groupsOf(connection, regionId, stations, staged) };
+  const plan = { stations, said, groups: groupsOf(connection, regionId, stations, staged) };
+  refuseDerived(connection, plan);
+  return plan;
 }
 
 function standingStations(connection: Connection, regionId: number): Map<string, PlannedStation> {
@@ -134,10 +143,10 @@ function groupsOf(
     connection,
     `SELECT p.stationId, p.quantity, COUNT(*), MAX(s.code), MAX(s.areaKm2) FROM Station s JOIN Part p ON p.stationId = s.id
      JOIN Import i ON i.id = p.importId WHERE s.regionId = ? AND i.state IN ${VISIBLE} GROUP BY p.stationId, p.quantity`,
-  ).all([regionId]) as [number, string, number, string, number | null][];
+  ).all([regionId]) as [number, Quantity, number, string, number | null][];
   const standing = new Map(counts.map(([stationId, quantity, count]) => [`${stationId} ${quantity}`, count]));
   const groups = new Map<string, Group>();
-  const groupOf = (station: PlannedStation, quantity: string): Group => {
+  const groupOf = (station: PlannedStation, quantity: Quantity): Group => {
     const key = `${station.id} ${quantity}`;
     const group = groups.get(key) ?? { station, quantity, staged: [], standing: standing.get(key) ?? 0 };
     groups.set(key, group);
@@ -147,7 +156,7 @@ function groupsOf(
   // A depth over the drainage area weighs otherwise when a registry corrects that area.
   for (const [, quantity, count, code, areaKm2] of counts) {
     const station = stations.get(code)!;
-    if (count > 1 && station.facts.areaKm2 !== areaKm2) groupOf(station, quantity);
+    if (count > 1 && quantity === 'flow' && station.facts.areaKm2 !== areaKm2) groupOf(station, quantity);
   }
   const overlaps = (group: Group) => Number(group.standing + group.staged.length > 1);
   return [...groups.values()].sort((a, b) => overlaps(b) - overlaps(a));

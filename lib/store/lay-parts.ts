@@ -1,7 +1,5 @@
 import { FLAG } from '../series/daily-series.ts';
-import type { FlowUnit } from '../series/flow-units.ts';
-import { toM3s } from '../series/flow-units.ts';
-import type { Unit } from '../series/quantities.ts';
+import { type Quantity, toShownUnit, type Unit } from '../series/quantities.ts';
 import { type Code, NO_ROW } from './codes.ts';
 
 /** What an import does on a day that holds a value already, when its own is another one.
@@ -27,9 +25,38 @@ export interface LaidDays {
   flags: Uint8Array;
 }
 
-/** Told of every day on which a part with the rule "keep" has another value than the record; both in the record's unit.
- *  `part` is the part's place in the list. */
-export type OnConflict = (part: number, day: number, standing: number, other: number) => void;
+/** What a part came upon, day by day, when it was laid over those before it. */
+export interface LaidCounts {
+  /** days on which there was no value before: outside the days that had one, and between them */
+  extended: number;
+  filled: number;
+  /** days whose value is equal to the one that stood */
+  equal: number;
+  /** days whose value is unlike the one that stood, those of them that stood as provisional, and those taken */
+  unlike: number;
+  unlikeProvisional: number;
+  revised: number;
+}
+
+/** A day on which a part has another value than the record had by then; both in the record's unit. */
+export interface UnlikeDay {
+  day: number;
+  standing: number;
+  other: number;
+}
+
+/** Told of what each part comes upon; `part` is its place in the list. */
+export interface LayWatcher {
+  unlike?(part: number, day: UnlikeDay): void;
+  laid?(part: number, counts: LaidCounts): void;
+}
+
+export interface LayOptions {
+  quantity?: Quantity;
+  /** drainage area, for depths over it */
+  areaKm2: number | null;
+  watcher?: LayWatcher;
+}
 
 /** Values of unlike units count as equal within this share of the larger: more than rounding in the conversion, less
  *  than the last digit of any gauge. */
@@ -45,9 +72,12 @@ const STATED = 2;
  *  A day without a value takes the value and code of the next part that has one. A missing value never takes a value's
  *  place. Where values are equal, a code fills in where none was stated, and replaces the one that stands where the
  *  part's rule lets its value do so (a row without a code only ends a provisional one). Where they are unlike, the part's rule decides.
- *  @param areaKm2  drainage area, for depths over it
- *  @throws RangeError for no parts, or when a depth must be converted and there is no area */
-export function layParts(parts: readonly LayablePart[], areaKm2: number | null, onConflict?: OnConflict): LaidDays {
+ *  @throws RangeError for no parts, for a unit that the quantity does not come in, or when a depth over the area must be
+ *          converted and there is no area */
+export function layParts(
+  parts: readonly LayablePart[],
+  { quantity = 'flow', areaKm2, watcher = {} }: LayOptions,
+): LaidDays {
   if (parts.length === 0) throw new RangeError('layParts: parts must hold at least one part, got none');
   const { unit } = parts[0];
   const firstDay = Math.min(...parts.map((part) => part.firstDay));
@@ -60,16 +90,19 @@ export function layParts(parts: readonly LayablePart[], areaKm2: number | null, 
   };
   const stated = new Uint8Array(days);
   for (const [index, part] of parts.entries()) {
-    layOver(laid, stated, part, conversion(part.unit, unit, areaKm2), (day, standing, other) =>
-      onConflict?.(index, day, standing, other),
-    );
+    const factor = conversion(quantity, { from: part.unit, to: unit, areaKm2 });
+    const counts = layOver(laid, stated, { part, factor }, (day) => watcher.unlike?.(index, day));
+    watcher.laid?.(index, counts);
   }
   return laid;
 }
 
-function conversion(from: Unit, to: Unit, areaKm2: number | null): number {
+function conversion(
+  quantity: Quantity,
+  { from, to, areaKm2 }: { from: Unit; to: Unit; areaKm2: number | null },
+): number {
   if (from === to) return 1;
-  const factor = toM3s(from as FlowUnit, areaKm2) / toM3s(to as FlowUnit, areaKm2);
+  const factor = toShownUnit(quantity, from, areaKm2) / toShownUnit(quantity, to, areaKm2);
   if (!(factor > 0))
     throw new RangeError(`layParts: areaKm2 must be positive to turn ${from} into ${to}, got ${areaKm2}`);
   return factor;
@@ -78,10 +111,9 @@ function conversion(from: Unit, to: Unit, areaKm2: number | null): number {
 function layOver(
   { values, flags, firstDay }: LaidDays,
   stated: Uint8Array,
-  part: LayablePart,
-  factor: number,
-  onConflict: (day: number, standing: number, other: number) => void,
-): void {
+  { part, factor }: { part: LayablePart; factor: number },
+  onUnlike: (day: UnlikeDay) => void,
+): LaidCounts {
   const bits = new Uint8Array(256);
   const hasCode = new Uint8Array(256).fill(BLANK);
   for (const [index, code] of part.codeList.entries()) {
@@ -90,6 +122,8 @@ function layOver(
   }
   const { values: given, codes, rule } = part;
   const offset = part.firstDay - firstDay;
+  const [first, last] = ends(values);
+  const counts: LaidCounts = { extended: 0, filled: 0, equal: 0, unlike: 0, unlikeProvisional: 0, revised: 0 };
   for (let day = 0; day < given.length; day++) {
     const code = codes[day];
     if (code === NO_ROW) continue;
@@ -101,23 +135,38 @@ function layOver(
     if (Number.isNaN(standing)) {
       values[at] = value;
       takesCode = !Number.isNaN(value) || stated[at] < STATED;
+      if (!Number.isNaN(value)) counts[at < first || at > last ? 'extended' : 'filled']++;
     } else if (Number.isNaN(value)) {
       takesCode = false;
     } else if (isSame(standing, value, factor === 1)) {
+      counts.equal++;
       takesCode =
         hasCode[code] === STATED ? replaces || stated[at] < STATED : replaces && rule === 'take-where-provisional';
-    } else if (replaces) {
-      values[at] = value;
-      takesCode = true;
     } else {
-      if (rule === 'keep') onConflict(firstDay + at, standing, value);
-      takesCode = false;
+      counts.unlike++;
+      if ((flags[at] & FLAG.provisional) !== 0) counts.unlikeProvisional++;
+      if (replaces) {
+        values[at] = value;
+        counts.revised++;
+      }
+      takesCode = replaces;
+      onUnlike({ day: firstDay + at, standing, other: value });
     }
     if (takesCode) {
       flags[at] = bits[code];
       stated[at] = hasCode[code];
     } else if (stated[at] === NONE) stated[at] = BLANK;
   }
+  return counts;
+}
+
+/** Places of the first and the last value; where there is none every day lies before the first. */
+function ends(values: Float64Array): [number, number] {
+  let first = 0;
+  let last = values.length - 1;
+  while (first < values.length && Number.isNaN(values[first])) first++;
+  while (last >= 0 && Number.isNaN(values[last])) last--;
+  return [first, last];
 }
 
 const mayReplace = (rule: OverlapRule, flags: number): boolean =>

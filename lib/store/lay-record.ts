@@ -1,4 +1,4 @@
-import type { Unit } from '../series/quantities.ts';
+import type { Quantity, Unit } from '../series/quantities.ts';
 import { blobOf, blobOfValues, bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
 import { type Connection, change, rows } from './connection.ts';
@@ -9,7 +9,7 @@ import { type RecordSummary, summarise } from './record-summary.ts';
 /** A Record's row but for its own id. */
 export interface RecordHead extends RecordSummary {
   stationId: number;
-  quantity: string;
+  quantity: Quantity;
   partId: number | null;
   laidId: number | null;
   unit: Unit;
@@ -48,7 +48,7 @@ type PartRow = [number, number, Unit, number, string, Buffer, Buffer, OverlapRul
 
 interface Place {
   stationId: number;
-  quantity: string;
+  quantity: Quantity;
 }
 
 /** The record of a station with one part: it points to it. */

@@ -148,11 +148,11 @@ function relay(
   connection: Connection,
   { id, code, areaKm2 }: { id: number; code: string; areaKm2: number | null },
 ): void {
-  const place = { stationId: id, quantity: 'flow' };
+  const place = { stationId: id, quantity: 'flow' } as const;
   const parts = loadParts(connection, id, 'flow');
   if (parts.length < 2) return;
   const problem = areaProblem(parts, areaKm2);
   if (problem) throw new StoreError('bad-input', `Station "${code}" needs its drainage area: ${problem}.`);
   const standing = standingRecord(connection, id, 'flow');
-  saveRecords(connection, [storeLaid(connection, place, layParts(parts, areaKm2), { standing, importId: null })]);
+  saveRecords(connection, [storeLaid(connection, place, layParts(parts, { areaKm2 }), { standing, importId: null })]);
 }

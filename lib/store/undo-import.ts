@@ -1,7 +1,9 @@
+import type { Quantity } from '../series/quantities.ts';
 import { refuseForArea } from './area-error.ts';
 import { whenFree } from './busy.ts';
 import { type Connection, change, immediately, rows, sharedConnection, timestamp } from './connection.ts';
 import { databasePath } from './database-url.ts';
+import { rebuildRegion } from './derived.ts';
 import { StoreError } from './errors.ts';
 import { beatImports, refuseWhileOthersChange, VISIBLE } from './import-claim.ts';
 import { layParts } from './lay-parts.ts';
@@ -54,7 +56,7 @@ function claim(connection: Connection, importId: number): number {
 interface Touched {
   stationId: number;
   code: string;
-  quantity: string;
+  quantity: Quantity;
   areaKm2: number | null;
 }
 
@@ -80,6 +82,7 @@ async function undoClaimed(
         saveRecords(connection, heads);
         change(connection, "UPDATE Import SET state = 'undone' WHERE id = ?").run([importId]);
         const stationsRemoved = undoFacts(connection, { importId, regionId });
+        rebuildRegion(connection, regionId, null);
         return { regionId, records: touched.length, stationsRemoved };
       }),
     { waitMs: 60_000 },
@@ -94,7 +97,7 @@ function touchedRecords(connection: Connection, importId: number, regionId: numb
     `SELECT s.id, s.code, p.quantity, s.areaKm2, MAX(p.importId = ?), SUM(p.importId <> ?) FROM Part p
      JOIN Station s ON s.id = p.stationId JOIN Import i ON i.id = p.importId
      WHERE s.regionId = ? AND i.state IN ${VISIBLE} GROUP BY s.id, p.quantity`,
-  ).all([importId, importId, regionId]) as [number, string, string, number | null, number, number][];
+  ).all([importId, importId, regionId]) as [number, string, Quantity, number | null, number, number][];
   return found
     .filter(([, code, , , mine, others]) => mine === 1 || (areas.has(code) && others > 1))
     .map(([stationId, code, quantity, areaKm2]) => ({
@@ -118,7 +121,7 @@ function relay(connection: Connection, importId: number, record: Touched, heads:
   const standing = standingRecord(connection, record.stationId, record.quantity);
   // A record that points to a part of this import must move on even where its days stay the same.
   const mayStay = standing?.partId == null || parts.some(({ id }) => id === standing.partId);
-  const laid = layParts(parts, areaKm2);
+  const laid = layParts(parts, { quantity: record.quantity, areaKm2 });
   heads.push(storeLaid(connection, record, laid, { standing: mayStay ? standing : null, importId }));
 }
 

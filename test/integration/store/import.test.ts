@@ -77,8 +77,8 @@ test('unlike values refuse the file with their count and the first three; the da
     ],
   ]).catch((thrown: unknown) => thrown);
   expect(error).toBeInstanceOf(OverlapError);
-  const { count, first, problem, message } = error as OverlapError;
-  expect(count).toBe(4);
+  const { revisions, first, problem, message } = error as OverlapError;
+  expect(revisions).toMatchObject({ extended: 1, equal: 1, unlike: 4, revised: 0 });
   expect(first).toEqual([
     { code: 'A', date: '1970-01-02', standing: 2, other: 20, unit: 'm3/s' },
     { code: 'A', date: '1970-01-03', standing: 3, other: 30, unit: 'm3/s' },

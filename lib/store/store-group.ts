@@ -1,0 +1,130 @@
+import type { Unit } from '../series/quantities.ts';
+import type { Group } from './apply-plan.ts';
+import { refuseForArea } from './area-error.ts';
+import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
+import type { Claim } from './claim-import.ts';
+import type { Code } from './codes.ts';
+import { type Connection, change, rows } from './connection.ts';
+import { RevisionCounter } from './count-revisions.ts';
+import { type LaidCounts, type LayablePart, layParts, type OverlapRule } from './lay-parts.ts';
+import { loadParts, type RecordHead, standingRecord, storeLaid } from './lay-record.ts';
+import { OverlapError } from './overlap-error.ts';
+
+/** Stores the records of an import one by one, for nobody to see yet, and counts what each file does to days that stand. */
+export class GroupWork {
+  /** what the records will be */
+  readonly heads: RecordHead[] = [];
+  private readonly counters: Map<number, RevisionCounter>;
+  private readonly firstImport: number;
+  /** a file without a rule has values unlike those that stand */
+  private isRefused = false;
+
+  constructor(
+    private readonly connection: Connection,
+    private readonly claim: Claim,
+    /** only counts, and writes nothing */
+    private readonly dryRun: boolean,
+  ) {
+    [this.firstImport] = claim.imports.values();
+    this.counters = new Map([...claim.rules.keys()].map((file) => [file, new RevisionCounter()]));
+  }
+
+  counterOf(file: number): RevisionCounter {
+    return this.counters.get(file)!;
+  }
+
+  /** Copies the parts of one record, and lays them over those that stand where there are any. */
+  store(group: Group): void {
+    const { station, quantity, staged, standing } = group;
+    const place = { stationId: station.id, quantity };
+    if (standing === 0 && staged.length === 1) {
+      const [{ id, file }] = staged;
+      const head = stagedHead(this.connection, id);
+      this.counterOf(file).extend(head.valueCount);
+      if (this.isIdle()) return;
+      this.heads.push({ ...head, ...place, partId: this.copyPart(id, file, station.id) });
+      return;
+    }
+    const parts: LayablePart[] = standing > 0 ? loadParts(this.connection, station.id, quantity) : [];
+    const stood = parts.length;
+    for (const { id, file } of staged) {
+      parts.push(stagedPart(this.connection, id, this.claim.rules.get(file) ?? 'keep'));
+    }
+    const areaKm2 = station.facts.areaKm2 as number | null;
+    refuseForArea(parts, { code: station.code, areaKm2 }, () =>
+      fileName(this.connection, staged[0]?.file ?? registryFile(this.connection)),
+    );
+    const { code } = station;
+    const { unit } = parts[0];
+    const laid = layParts(parts, {
+      ...{ quantity, areaKm2 },
+      watcher: {
+        unlike: (part, day) => {
+          if (part >= stood) this.counterOf(staged[part - stood].file).addUnlike({ code, quantity, unit }, day);
+        },
+        laid: (part, counts) => {
+          if (part >= stood) this.count(staged[part - stood].file, counts);
+        },
+      },
+    });
+    if (this.isIdle()) return;
+    const record = standingRecord(this.connection, station.id, quantity);
+    for (const { id, file } of staged) this.copyPart(id, file, station.id);
+    this.heads.push(storeLaid(this.connection, place, laid, { standing: record, importId: this.firstImport }));
+  }
+
+  /** @throws OverlapError when a file without a rule has values unlike those that stand */
+  refuseUnlike(): void {
+    if (!this.isRefused) return;
+    const files = [...this.counters].filter(([file, { unlike }]) => unlike > 0 && this.claim.rules.get(file) === null);
+    const [first, ...others] = files.map(
+      ([file, counter]) => [fileName(this.connection, file), counter.firstUnlike, counter.revisions()] as const,
+    );
+    throw new OverlapError(
+      ...first,
+      others.map((one) => new OverlapError(...one)),
+    );
+  }
+
+  private count(file: number, counts: LaidCounts): void {
+    this.counterOf(file).add(counts);
+    if (counts.unlike > 0 && this.claim.rules.get(file) === null) this.isRefused = true;
+  }
+
+  /** Nothing is copied of an import that is refused or only tried; it is read on to count all of it. */
+  private isIdle(): boolean {
+    return this.dryRun || this.isRefused;
+  }
+
+  private copyPart(id: number, file: number, stationId: number): number {
+    const copy = change(
+      this.connection,
+      `INSERT INTO main.Part (importId, stationId, quantity, firstDay, days, unit, codeList, "values", codes)
+       SELECT ?, ?, quantity, firstDay, days, unit, codeList, "values", codes FROM staging.part WHERE id = ?`,
+    );
+    return Number(copy.run([this.claim.imports.get(file)!, stationId, id]).lastInsertRowid);
+  }
+}
+
+const fileName = (connection: Connection, file: number): string =>
+  (rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string])[0];
+
+const registryFile = (connection: Connection): number =>
+  (rows(connection, 'SELECT MIN(file) FROM staging.registry').get([]) as [number])[0];
+
+function stagedHead(connection: Connection, id: number): Omit<RecordHead, 'stationId' | 'quantity' | 'partId'> {
+  const [unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount] = rows(
+    connection,
+    'SELECT unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount FROM staging.part WHERE id = ?',
+  ).get([id]) as [Unit, number, number, string, number, number | null, number | null, number];
+  return { unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount, laidId: null };
+}
+
+function stagedPart(connection: Connection, id: number, rule: OverlapRule): LayablePart {
+  const [unit, firstDay, codeList, values, codes] = rows(
+    connection,
+    'SELECT unit, firstDay, codeList, "values", codes FROM staging.part WHERE id = ?',
+  ).get([id]) as [Unit, number, string, Buffer, Buffer];
+  const days = { values: valuesOfBlob(values), codes: bytesOfBlob(codes) };
+  return { unit, firstDay, codeList: JSON.parse(codeList) as Code[], ...days, rule };
+}
