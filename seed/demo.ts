@@ -6,6 +6,6 @@ import { storeRegion } from './store-region.ts';
  *  @returns slug of the region it made; null when there was one already */
 export async function seedDemo(): Promise<string | null> {
   if ((await listRegions()).length > 0) return null;
-  const region = generateRegion({ seed: DEMO_SEED });
+  const region = generateRegion({ seed: DEMO_SEED, furnished: true });
   return storeRegion(region, { name: region.name });
 }

@@ -9,21 +9,24 @@
  *  names, land, weather and flows come out of the seed, and its place is open ocean. */
 
 import { dateOfDay } from '../lib/calendar/day.ts';
-import type { StationFacts } from '../lib/region/ranking-types.ts';
-import type { StationChange } from '../lib/series/station-history.ts';
+import { plantFaults, type SeedBeside } from './beside.ts';
 import { type Catchment, runoffOf } from './catchment-flow.ts';
+import { describeStations, type SeedStation } from './describe.ts';
 import { type Drainage, layDrainage } from './drainage.ts';
+import { BARE, besideOf, type Furnishings, furnish } from './furnish.ts';
 import { CELL_KM2 } from './hex-grid.ts';
 import { abstraction, dam, returnFlow, seepage } from './influences.ts';
-import { drawLayers, type SeedLayer, toDegrees } from './layers.ts';
-import { placeNames, REGION_NAME, riverNames } from './names.ts';
+import { drawLayers, type SeedLayer } from './layers.ts';
+import { REGION_NAME, riverNames } from './names.ts';
 import { fractalNoise, type NoiseField } from './noise.ts';
 import { CODES, observe } from './observe.ts';
 import { randomStream } from './random.ts';
-import { type River, riverPoints, traceRivers } from './rivers.ts';
+import { type River, traceRivers } from './rivers.ts';
 import { chooseSites, type Site } from './sites.ts';
 import { drawTraits, type Traits } from './traits.ts';
 import { makeWeather, type Weather } from './weather.ts';
+
+export type { SeedStation };
 
 export const DEMO_SEED = 1921;
 export const DEMO_STATIONS = 36;
@@ -34,12 +37,8 @@ export interface RegionRequest {
   stations?: number;
   /** length of every record in years; 25 to 90 and a short one unless said */
   years?: number;
-}
-
-export interface SeedStation extends Omit<StationFacts, 'id'> {
-  /** dated changes: what, and since when */
-  changes: StationChange[];
-  notes: string;
+  /** with what the demo shows beyond flows: levels, weather, a metered abstraction, faults to find */
+  furnished?: boolean;
 }
 
 /** One station's flows as an archive would hand them out. */
@@ -52,6 +51,8 @@ export interface SeedRecord {
   /** index into codeList a day; 255 = no row for this day */
   codes: Uint8Array;
   codeList: { text: string; bits: number }[];
+  /** further records that were kept there */
+  beside: SeedBeside[];
 }
 
 export interface SeedRegion {
@@ -59,6 +60,7 @@ export interface SeedRegion {
   stations: SeedStation[];
   /** each station with the next one below it */
   network: { upstream: string; downstream: string }[];
+  furnishings: Furnishings;
   layers(): SeedLayer[];
   /** every record once, upstream before downstream; may be walked again */
   records(): Generator<SeedRecord>;
@@ -74,7 +76,7 @@ const DRAWN_RIVER_CELLS = 26;
 const RUN_IN_YEARS = 3;
 
 /** @throws RangeError when a number is not a whole number in its range: stations 1–20,000, years 1–150 */
-export function generateRegion({ seed, stations: count = DEMO_STATIONS, years }: RegionRequest): SeedRegion {
+export function generateRegion({ seed, stations: count = DEMO_STATIONS, years, furnished }: RegionRequest): SeedRegion {
   checkWhole('seed', seed, -(2 ** 31), 2 ** 31);
   checkWhole('stations', count, 1, 20_000);
   if (years !== undefined) checkWhole('years', years, 1, 150);
@@ -85,14 +87,16 @@ export function generateRegion({ seed, stations: count = DEMO_STATIONS, years }:
   const traits = drawTraits(seed, sites, years ?? null);
   const names = nameRivers(seed, drainage, rivers, sites);
   const stations = describeStations(seed, drainage, rivers, sites, traits, names);
+  const furnishings = furnished ? furnish(sites, traits, stations) : BARE;
   return {
     name: REGION_NAME,
     stations,
     network: sites.flatMap(({ below }, i) =>
       below < 0 ? [] : [{ upstream: stations[i].code, downstream: stations[below].code }],
     ),
+    furnishings,
     layers: () => drawLayers(drainage, rivers, sites, { riverNames: names, stations }, DRAWN_RIVER_CELLS),
-    records: () => flowRecords(seed, drainage, sites, traits, stations),
+    records: () => flowRecords(seed, drainage, sites, traits, stations, furnishings),
   };
 }
 
@@ -114,38 +118,6 @@ function nameRivers(
   const gauged = [...new Set(sites.map(({ river }) => river))].sort((a, b) => size(rivers[b]) - size(rivers[a]));
   for (const river of gauged) names[river] = String(pool.next().value);
   return names;
-}
-
-function describeStations(
-  seed: number,
-  drainage: Drainage,
-  rivers: readonly River[],
-  sites: readonly Site[],
-  traits: readonly Traits[],
-  names: readonly string[],
-): SeedStation[] {
-  const points = riverPoints(drainage, rivers);
-  const places = placeNames(seed);
-  const digits = Math.max(3, String(sites.length).length);
-  return sites.map((site, i) => {
-    const [longitude, latitude] = toDegrees(points.get(site.cell) ?? drainage.grid.centre(site.cell));
-    const { influence, spring, damYear, abstraction: taken, notes } = traits[i];
-    const changes: StationChange[] = [];
-    if (damYear) changes.push({ date: `${damYear}-01-01`, kind: 'dam', note: 'Reservoir above the station filled.' });
-    if (taken)
-      changes.push({ date: `${taken.fromYear}-01-01`, kind: 'abstraction', note: 'Water works began to pump.' });
-    return {
-      code: `VM${String(i + 1).padStart(digits, '0')}`,
-      name: `${names[site.river]} at ${places.next().value}`,
-      river: names[site.river],
-      latitude,
-      longitude,
-      areaKm2: spring ? null : Math.round(site.cells * CELL_KM2 * 10) / 10,
-      influence,
-      changes,
-      notes,
-    };
-  });
 }
 
 /** How the land differs from place to place. */
@@ -188,6 +160,7 @@ function* flowRecords(
   sites: readonly Site[],
   traits: readonly Traits[],
   stations: readonly SeedStation[],
+  furnishings: Furnishings,
 ): Generator<SeedRecord> {
   const firstDay = traits.reduce((first, each) => Math.min(first, each.firstDay), Number.POSITIVE_INFINITY);
   const lastDay = traits.reduce((last, each) => Math.max(last, each.lastDay), Number.NEGATIVE_INFINITY);
@@ -210,12 +183,15 @@ function* flowRecords(
   function* from(i: number): Generator<SeedRecord, Float64Array> {
     const random = randomStream(seed, 'flow', i);
     const site = sites[i];
-    const flow = runoffOf(weather, catchmentAt(site, traits[i], land), random);
+    const catchment = catchmentAt(site, traits[i], land);
+    const flow = runoffOf(weather, catchment, random);
     // 1 mm a day on 1 km² is 1/86.4 m³/s.
     const m3sPerMm = (site.ownCells * CELL_KM2) / 86.4;
     for (let day = 0; day < flow.length; day += 1) flow[day] *= m3sPerMm;
     for (const upper of above[i]) addUpstream(flow, yield* from(upper));
+    const whole = furnishings.works?.site === i ? flow.slice() : null;
     applyInfluences(weather, flow, traits[i]);
+    const taken = whole?.map((before, day) => before - flow[day]) ?? null;
     const record = observe(
       weather,
       flow,
@@ -223,7 +199,10 @@ function* flowRecords(
       GAUGE_COOLER_ABOVE * site.height ** 2,
       randomStream(seed, 'gauge', i),
     );
-    yield { code: stations[i].code, unit: 'm3/s', ...record, codeList: CODES.map((code) => ({ ...code })) };
+    if (furnishings.faulty === i) plantFaults(record);
+    const place = { seed, station: stations[i], traits: traits[i], flow: record, weather, land: catchment, taken };
+    const codeList = CODES.map((code) => ({ ...code }));
+    yield { code: stations[i].code, unit: 'm3/s', ...record, codeList, beside: besideOf(furnishings, i, place) };
     return flow;
   }
 }

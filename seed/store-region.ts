@@ -1,10 +1,13 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { stationReport } from '../lib/intake/report.ts';
-import type { ImportReport, Mapping, StationReport } from '../lib/intake/types.ts';
+import type { ImportReport, Mapping, StagedPart, StationReport } from '../lib/intake/types.ts';
+import type { Quantity, Unit } from '../lib/series/quantities.ts';
 import { applyStaging } from '../lib/store/apply-staging.ts';
 import { blobOfValues } from '../lib/store/blobs.ts';
+import { setLink } from '../lib/store/links.ts';
 import { createStaging, type Staging } from '../lib/store/staging.ts';
-import type { SeedRegion } from './generate.ts';
+import type { SeedBeside } from './beside.ts';
+import type { SeedRecord, SeedRegion } from './generate.ts';
 import { NO_ROW } from './observe.ts';
 
 /** How the flows would be read if they came as the file that writeFlowsCsv makes. */
@@ -34,13 +37,16 @@ export async function storeRegion(
     stageLand(staging, region);
     stageFlows(staging, region, onProgress);
     staging.seal();
-    return (await applyStaging(staging.jobId, { region: { name, invented: true }, by: BY })).slug;
+    const { regionId, slug } = await applyStaging(staging.jobId, { region: { name, invented: true }, by: BY });
+    for (const link of region.furnishings.links) await setLink(regionId, { ...link, source: 'river-layer' });
+    return slug;
   } finally {
     staging.discard();
   }
 }
 
-function stageLand(staging: Staging, { stations, layers }: SeedRegion): void {
+function stageLand(staging: Staging, { stations: gauged, furnishings, layers }: SeedRegion): void {
+  const stations = [...gauged, ...furnishings.extras];
   const file = staging.addFile({ kind: 'registry', fileName: 'invented stations' });
   staging.stageRegistry(file, stations);
   const sha256 = createHash('sha256').update(JSON.stringify(stations)).digest('hex');
@@ -54,26 +60,47 @@ function stageLand(staging: Staging, { stations, layers }: SeedRegion): void {
   }
 }
 
+/** Flows first; what was kept beside them is small, and follows as a file a quantity. */
 function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: number) => void): void {
-  const fileName = 'invented flows';
+  const beside = new Map<string, SeedBeside[]>();
+  let made = 0;
+  function* flows(): Generator<SeedRecord> {
+    for (const record of region.records()) {
+      for (const other of record.beside) {
+        const name =
+          other.quantity === 'flow' ? 'invented abstraction' : `invented ${other.quantity.replace('-', ' ')}`;
+        beside.set(name, [...(beside.get(name) ?? []), other]);
+      }
+      yield record;
+      made += 1;
+      onProgress(made / region.stations.length);
+    }
+  }
+  stageTable(staging, { fileName: 'invented flows', quantity: 'flow', unit: 'm3/s' }, flows());
+  for (const [fileName, records] of beside) stageTable(staging, { fileName, ...records[0] }, records);
+}
+
+function stageTable(
+  staging: Staging,
+  { fileName, quantity, unit }: { fileName: string; quantity: Quantity; unit: Unit },
+  records: Iterable<StagedPart>,
+): void {
   const file = staging.addFile({ kind: 'flows', fileName });
   const hash = createHash('sha256');
   const stations: StationReport[] = [];
   let rows = 0;
-  for (const record of region.records()) {
-    staging.stagePart(file, record);
+  for (const record of records) {
+    staging.stagePart(file, record, quantity);
     hash.update(blobOfValues(record.values));
     for (const code of record.codes) if (code !== NO_ROW) rows += 1;
     stations.push(stationReport(record, 0));
-    onProgress(stations.length / region.stations.length);
   }
   const sha256 = hash.digest('hex');
+  const mapping: Mapping = { ...MAPPING, unit, quantity };
   const report: ImportReport = {
-    ...{ file: fileName, layout: MAPPING.layout, unit: 'm3/s', mapping: MAPPING, rows, accepted: rows, sha256 },
+    ...{ file: fileName, layout: mapping.layout, unit, mapping, rows, accepted: rows, sha256 },
     ...{ rejectedTotal: 0, rejectedFile: null, rejected: [], stations },
-    warnings: ['Made by a generator: no flow in this region was ever measured.'],
+    warnings: [`Made by a generator: no ${quantity.replace('-', ' ')} in this region was ever measured.`],
   };
-  staging.describeFile(file, {
-    ...{ sha256, layout: MAPPING.layout, unit: 'm3/s', mapping: MAPPING, rows, accepted: rows, report },
-  });
+  staging.describeFile(file, { sha256, layout: mapping.layout, unit, mapping, rows, accepted: rows, report });
 }

@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import { getImportReport, listImports } from '../../../lib/store/imports.ts';
 import { getLayer, listLayers } from '../../../lib/store/layers.ts';
+import { listLinks } from '../../../lib/store/links.ts';
 import { readSeries, stationRecords } from '../../../lib/store/records.ts';
 import { createRegion, listRegions } from '../../../lib/store/regions.ts';
 import { getStation, listStations } from '../../../lib/store/stations.ts';
@@ -14,15 +15,25 @@ test('seedDemo() stores the invented region once, as it was generated', async ()
   const slug = await seedDemo();
   const [found, ...others] = await listRegions();
   expect(others).toEqual([]);
-  expect(found).toMatchObject({ slug, invented: true, stations: 36, records: 36, lastYear: 2025 });
+  expect(found).toMatchObject({ slug, invented: true, stations: 38, records: 38, lastYear: 2025 });
 
-  const generated = generateRegion({ seed: DEMO_SEED });
+  const generated = generateRegion({ seed: DEMO_SEED, furnished: true });
   const stations = await listStations(found.id);
-  expect(stations.map(({ id, ...facts }) => facts)).toEqual(
-    generated.stations.map(({ changes, notes, ...facts }) => facts),
+  const expected = [...generated.stations, ...generated.furnishings.extras].sort((a, b) => (a.code < b.code ? -1 : 1));
+  expect(stations).toMatchObject(
+    expected.map(({ code, name, river, latitude, longitude, areaKm2, influence }) => ({
+      ...{ code, name, river, latitude, longitude, areaKm2, influence },
+    })),
   );
-  const dammed = generated.stations.find(({ influence }) => influence === 'regulated')!;
-  expect(await getStation(found.id, dammed.code)).toMatchObject({ changes: dammed.changes, notes: dammed.notes });
+  const { code, changes, namedFlows } = generated.stations.find(({ influence }) => influence === 'regulated')!;
+  expect(await getStation(found.id, code)).toMatchObject({ changes, namedFlows, derived: null });
+  expect(await listLinks(found.id)).toMatchObject(generated.furnishings.links);
+
+  const [pump, derived] = generated.furnishings.extras;
+  expect(await getStation(found.id, derived.code)).toMatchObject({ derived: derived.derived });
+  const recordOf = async (wanted: string) =>
+    (await stationRecords(found.id)).find((candidate) => candidate.code === wanted)!;
+  expect((await recordOf(derived.code)).firstValueDay).toBe((await recordOf(pump.code)).firstDay);
 
   const kinds = (await listLayers(found.id)).map(({ name, kind }) => [name, kind]);
   expect(kinds).toEqual([

@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import { expect, test } from 'vitest';
 import { DEFAULT_BASIS } from '../../../lib/basis.ts';
-import { isoDate } from '../../../lib/calendar/day.ts';
+import { isoDate, parseIsoDate } from '../../../lib/calendar/day.ts';
 import { annualMinima } from '../../../lib/lowflow/annual-minima.ts';
 import { median } from '../../../lib/statistics/quantile.ts';
 import { DEMO_SEED, generateRegion, type SeedRecord, type SeedStation } from '../../../seed/generate.ts';
@@ -85,8 +85,11 @@ test('values are never negative, and written no finer than a litre a second', ()
 });
 
 test('a dam raises the low flows after it was filled', () => {
-  const [station] = withInfluence('regulated');
-  const [{ date, kind }] = station.changes;
+  const [station] = region.stations.filter(({ changes }) =>
+    changes.some(({ note }) => note.includes('above the station')),
+  );
+  expect(station.influence).toBe('regulated');
+  const { date, kind } = station.changes.find(({ note }) => note.includes('above the station'))!;
   expect(kind).toBe('dam');
   const year = Number(date.slice(0, 4));
   const [before, after] = [usableMinima(station, 0, year - 1), usableMinima(station, year + 1, 9999)];
@@ -103,6 +106,41 @@ test('abstracted stations lose low flow, urban ones gain it', () => {
   for (const station of withInfluence('abstracted')) expect(change(station)).toBeLessThan(0.85);
   expect(withInfluence('urban').length).toBeGreaterThanOrEqual(2);
   for (const station of withInfluence('urban')) expect(change(station)).toBeGreaterThan(1.2);
+});
+
+test('no station below a dam, an intake or an outfall of some size calls itself natural', () => {
+  const byCode = new Map(region.stations.map((station) => [station.code, station]));
+  const below = new Map(region.network.map(({ upstream, downstream }) => [upstream, downstream]));
+  const deeds = ['dam', 'abstraction', 'discharge'];
+  let looked = 0;
+  for (const { code, areaKm2, changes } of region.stations) {
+    const own = changes.find(({ kind, note }) => deeds.includes(kind) && !note.includes('upstream'));
+    if (!own || areaKm2 === null) continue;
+    for (let at = below.get(code); at !== undefined; at = below.get(at)) {
+      const station = byCode.get(at)!;
+      if (areaKm2 / station.areaKm2! < 0.01) continue;
+      looked += 1;
+      expect(station.influence, at).not.toMatch(/natural|unknown/);
+      expect(station.changes, at).toContainEqual(expect.objectContaining({ date: own.date, kind: own.kind }));
+      expect(station.changes.some(({ note }) => note.includes(`${code}, upstream`))).toBe(true);
+    }
+  }
+  expect(looked).toBeGreaterThanOrEqual(5);
+});
+
+test('dated changes lie inside their records in order; named flows have a value of their own unit', () => {
+  const kinds = new Set(region.stations.flatMap(({ changes }) => changes.map(({ kind }) => kind)));
+  expect([...kinds]).toEqual(
+    expect.arrayContaining(['dam', 'abstraction', 'discharge', 'weir changed', 'rating changed']),
+  );
+  for (const { changes } of region.stations) {
+    const dates = changes.map(({ date }) => date);
+    expect(dates).toEqual([...dates].sort());
+    for (const date of dates) expect(Number.isNaN(parseIsoDate(date))).toBe(false);
+  }
+  const flows = region.stations.flatMap(({ namedFlows }) => namedFlows);
+  expect(new Set(flows.map(({ kind }) => kind)).size).toBe(4);
+  for (const { value, unit } of flows) expect(value, unit).toBeGreaterThan(unit === 'L/s' ? 10 : 0.1);
 });
 
 test('spring-fed stations have no area and no catchment drawn', () => {
