@@ -19,7 +19,7 @@ export class CodeTable {
   constructor(
     private readonly file: string,
     private readonly iceLetter?: string,
-    private readonly meanings: Mapping['flags'] = {},
+    private readonly meanings: NonNullable<Mapping['flags']> = {},
   ) {}
 
   /** The bytes of the flag last read by `code`. */

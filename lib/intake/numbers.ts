@@ -47,3 +47,22 @@ function parseSlowly(bytes: Uint8Array, start: number, end: number, decimal: num
   const value = DECIMAL_NUMBER.test(text) ? Number(text) : Number.NaN;
   return Number.isFinite(value) ? value : Number.NaN;
 }
+
+/** Reads a number whose whole part may be set in groups of three digits: `1,234.5`, `1.234,5`, `1 234,5`, `1'234.5`.
+ *  Groups are all or none, and only before the decimal sign; a blank between them may be a fixed or a narrow one.
+ *  @param text  the trimmed field
+ *  @returns     NaN when it is no such number: 1,23 and 1234,567 are not grouped by three
+ *  Example: parseGrouped('1,234.5', '.', ',') → 1234.5 */
+export function parseGrouped(text: string, decimal: '.' | ',', thousands: ',' | '.' | ' ' | "'"): number {
+  if (text.length > 60) return Number.NaN;
+  // The typographer's apostrophe and the spaces that do not break lines are written for the plain ones.
+  const plain = text
+    .replace(/[\u00a0\u2009\u202f]/g, ' ')
+    .replaceAll('’', "'")
+    .replace(/^−/, '-');
+  const grouped = new RegExp(`^[+-]?\\d{1,3}(?:[${thousands}]\\d{3})+(?:[${decimal}]\\d*)?$`);
+  const digits = grouped.test(plain) ? plain.replaceAll(thousands, '') : plain;
+  const pointed = decimal === ',' ? digits.replace(',', '.') : digits;
+  if (decimal === ',' && digits.includes('.')) return Number.NaN;
+  return DECIMAL_NUMBER.test(pointed) ? Number(pointed) : Number.NaN;
+}

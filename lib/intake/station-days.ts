@@ -130,6 +130,16 @@ export class StationDays {
     this.memory.give(page);
   }
 
+  /** True when two days side by side have values: at once for a daily record, whose first page shows it. */
+  hasNeighbours(): boolean {
+    for (const page of this.pages.values()) {
+      const { values } =
+        'mantissas' in page ? unpack(page, { values: new Float64Array(PAGE), codes: new Uint8Array(PAGE) }) : page;
+      for (let at = 1; at < PAGE; at++) if (!Number.isNaN(values[at]) && !Number.isNaN(values[at - 1])) return true;
+    }
+    return false;
+  }
+
   /** All days from the first row to the last as one run; null when there was no row. */
   run(): DayRun | null {
     const numbers = [...this.pages.keys()].sort((a, b) => a - b);

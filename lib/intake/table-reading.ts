@@ -17,13 +17,29 @@ export interface TableReading {
   leftOut(): number;
 }
 
+/** Stands in for the values of a table of which nobody knows yet where they are. */
+class NoValues extends ValueReader {
+  override read(): boolean {
+    this.value = Number.NaN;
+    return true;
+  }
+}
+
 /** The reader that fits a plan, with the tables of stations and codes that it fills.
  *  @param sink  takes every value
- *  @throws IntakeError when the station of a heading, or of the file's name, is unknown */
-export function tableReading(plan: TablePlan, options: InspectOptions, sink: DaySink): TableReading {
-  const stations = new StationCodes(plan.file, options.knownStations ?? null);
+ *  @param look  for a first look: unknown stations are numbered like others, and where nobody knows yet which column holds
+ *               the flows, rows are read without
+ *  @throws IntakeError, except for a look, when the station of a heading, or of the file's name, is unknown */
+export function tableReading(plan: TablePlan, options: InspectOptions, sink: DaySink, look = false): TableReading {
+  const stations = new StationCodes(plan.file, options.knownStations ?? null, {
+    matchCodes: options.matchCodes,
+    lenient: look,
+  });
   const codes = new CodeTable(plan.file, plan.iceLetter, plan.mapping.flags);
-  const values = new ValueReader(codes, plan.mapping.decimal, plan.mapping.missing);
+  const values =
+    look && plan.wide === null && plan.mapping.value === null
+      ? new NoValues(codes, plan.mapping)
+      : new ValueReader(codes, plan.mapping);
   const reading = { stations, codes, values };
   if (plan.wide) {
     const columns = plan.wide.map(({ name }) => stations.add(name, plan.firstLine - 1));

@@ -1,7 +1,8 @@
 import type { CodeTable } from './code-table.ts';
 import { isMissingText } from './missing-codes.ts';
-import { parseDecimal } from './numbers.ts';
+import { parseDecimal, parseGrouped } from './numbers.ts';
 import { decodeText } from './text-encoding.ts';
+import type { Mapping } from './types.ts';
 
 const LESS_THAN = 60;
 
@@ -17,12 +18,13 @@ export class ValueReader {
   private readonly missingNumbers: Set<number>;
   private readonly decimal: number;
 
-  /** @param missing  texts that mean "no value" in this file beside the usual ones; numbers among them by their value */
+  /** @param mapping  says the signs of numbers, and texts that mean "no value" beside the usual ones; numbers among them
+   *                  by their value */
   constructor(
     private readonly codes: CodeTable,
-    decimal: '.' | ',',
-    missing: readonly string[],
+    private readonly mapping: Pick<Mapping, 'decimal' | 'missing' | 'thousands'>,
   ) {
+    const { decimal, missing } = mapping;
     this.decimal = decimal.charCodeAt(0);
     this.missingTexts = new Set(missing.map((text) => text.trim().toLowerCase()));
     const numbers = missing.map((text) => Number(text.trim() === '' ? Number.NaN : text.replace(',', '.')));
@@ -37,13 +39,19 @@ export class ValueReader {
       this.value = Number.NaN;
       return true;
     }
-    const value = parseDecimal(bytes, start, end, this.decimal);
+    const value = this.number(bytes, start, end);
     if (value >= 0 && this.missingNumbers.size === 0) {
       // A negative zero would be another byte pattern for the same flow.
       this.value = value + 0;
       return true;
     }
     return this.readOther(bytes, start, end, value);
+  }
+
+  private number(bytes: Uint8Array, start: number, end: number): number {
+    const { thousands, decimal } = this.mapping;
+    if (thousands === undefined) return parseDecimal(bytes, start, end, this.decimal);
+    return end - start > 64 ? Number.NaN : parseGrouped(decodeText(bytes, start, end), decimal, thousands);
   }
 
   private readOther(bytes: Uint8Array, start: number, end: number, value: number): boolean {
@@ -66,7 +74,7 @@ export class ValueReader {
   private readBelow(bytes: Uint8Array, start: number, end: number): boolean {
     let first = start + 1;
     while (first < end && bytes[first] === 32) first++;
-    this.value = parseDecimal(bytes, first, end, this.decimal);
+    this.value = this.number(bytes, first, end);
     this.valueText = this.codes.valueText('<');
     return this.value >= 0;
   }
