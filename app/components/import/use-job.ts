@@ -2,30 +2,35 @@
 import { useEffect, useRef, useState } from 'react';
 import type { ImportOutcome, ImportProgress } from '@/lib/jobs/import-types';
 
-export interface ImportJob {
+/** What every job tells of itself. */
+export interface FollowedJob {
   id: string;
   state: 'waiting' | 'running' | 'done' | 'failed' | 'cancelled';
-  progress: ImportProgress | null;
-  result: ImportOutcome | null;
   error: string | null;
+}
+
+export interface ImportJob extends FollowedJob {
+  progress: ImportProgress | null;
+  /** with the region that the import made or came to */
+  result: (ImportOutcome & { regionId?: number | null }) | null;
 }
 
 const POLL_EVERY_MS = 1000;
 /** Failures in a row after which the stream is given up and the job is asked for instead. */
 const STREAM_FAILURES = 2;
 
-export const isOver = (job: ImportJob): boolean => ['done', 'failed', 'cancelled'].includes(job.state);
+export const isOver = (job: FollowedJob): boolean => ['done', 'failed', 'cancelled'].includes(job.state);
 
-export async function fetchJob(id: string): Promise<ImportJob> {
+export async function fetchJob<Job extends FollowedJob = ImportJob>(id: string): Promise<Job> {
   const response = await fetch(`/api/jobs/${encodeURIComponent(id)}`, { cache: 'no-store' });
   if (!response.ok) throw new Error(`job ${id}: ${response.status}`);
-  return (await response.json()) as ImportJob;
+  return (await response.json()) as Job;
 }
 
 /** Follows a job by its event stream, and by asking once a second where streams do not get through.
  *  `onOver` is called once, when the job is done, has failed or was cancelled. */
-export function useJob(id: string | null, onOver: (job: ImportJob) => void): ImportJob | null {
-  const [job, setJob] = useState<ImportJob | null>(null);
+export function useJob<Job extends FollowedJob = ImportJob>(id: string | null, onOver: (job: Job) => void): Job | null {
+  const [job, setJob] = useState<Job | null>(null);
   const over = useRef(onOver);
   over.current = onOver;
   useEffect(() => {
@@ -42,7 +47,7 @@ export function useJob(id: string | null, onOver: (job: ImportJob) => void): Imp
       stream.close();
       clearTimeout(timer);
     };
-    const take = (next: ImportJob) => {
+    const take = (next: Job) => {
       if (closed) return;
       setJob(next);
       if (!isOver(next)) return;
@@ -51,7 +56,7 @@ export function useJob(id: string | null, onOver: (job: ImportJob) => void): Imp
     };
     const poll = async () => {
       try {
-        take(await fetchJob(id));
+        take(await fetchJob<Job>(id));
       } catch {
         // the server may be starting anew; the next question will tell
       }
@@ -59,7 +64,7 @@ export function useJob(id: string | null, onOver: (job: ImportJob) => void): Imp
     };
     const onEvent = (event: MessageEvent<string>) => {
       failures = 0;
-      take(JSON.parse(event.data) as ImportJob);
+      take(JSON.parse(event.data) as Job);
     };
     stream.addEventListener('message', onEvent);
     stream.addEventListener('job', onEvent as EventListener);
