@@ -6,14 +6,21 @@ export async function followImport(jobId: string, signal: AbortSignal): Promise<
   const { stderr } = process;
   let said = '';
   for await (const { progress } of followJob(jobId, signal)) {
-    const { stage, file, fileNumber, files, share, rowsPerSecond } = progress as ImportProgress;
+    const { stage, file, fileNumber, files, share, rowsPerSecond, secondsLeft } = progress as ImportProgress;
     if (stage === 'waiting' || stage === 'recognising' || stage === 'done') continue;
     const what = stage === 'reading' ? `Reading ${file} (${fileNumber} of ${files})` : 'Storing';
     if (stderr.isTTY) {
       const rate = stage === 'reading' ? `, ${rowsPerSecond.toLocaleString('en')} rows/s` : '';
-      stderr.write(`\r\u001b[K${what}: ${Math.round(share * 100)} %${rate}`);
+      stderr.write(`\r\u001b[K${what}: ${Math.round(share * 100)} %${rate}${timeLeft(secondsLeft)}`);
     } else if (what !== said) stderr.write(`${what} …\n`);
     said = what;
   }
   if (stderr.isTTY && said !== '') stderr.write('\r\u001b[K');
+}
+
+/** Example: timeLeft(135) → ", 2 min 15 s left" */
+function timeLeft(seconds: number | null): string {
+  if (seconds === null) return '';
+  const minutes = Math.floor(seconds / 60);
+  return `, ${minutes > 0 ? `${minutes} min ` : ''}${seconds % 60} s left`;
 }

@@ -1,6 +1,7 @@
 import type { ImportReport } from '../intake/types.ts';
 import type { ImportOutcome, TakenFile } from '../jobs/import-types.ts';
 import { rejectedPath } from '../jobs/rejected-rows.ts';
+import type { Revisions } from '../store/revisions.ts';
 
 /** Rejected rows shown in words; all of them are in the file that the report names. */
 const SHOWN = 5;
@@ -12,7 +13,8 @@ const fileOfRejected = ({ rejectedFile }: ImportReport): string | null =>
 
 /** The report for programs: one entry a flow file, counts of that file, values as imported. Changed only by adding. */
 export function reportJson(outcome: ImportOutcome): string {
-  const files = reportsOf(outcome).map((report) => ({
+  const taken = outcome.taken.filter(({ report }) => report !== null);
+  const files = reportsOf(outcome).map((report, index) => ({
     file: report.file,
     layout: report.layout,
     unit: report.unit,
@@ -24,19 +26,41 @@ export function reportJson(outcome: ImportOutcome): string {
     stations: report.stations.map(({ code, values, missing, first, last, zeros, min, max }) => ({
       ...{ code, values, missing, first, last, zeros, min, max },
     })),
+    revisions: taken[index].revisions,
   }));
-  return `${JSON.stringify({ files }, null, 2)}\n`;
+  return `${JSON.stringify({ files, ...(outcome.dryRun ? { dryRun: true } : {}) }, null, 2)}\n`;
 }
 
 /** The report for people. */
 export function reportText(outcome: ImportOutcome): string {
-  return outcome.taken.map(fileText).join('');
+  return outcome.taken.map(fileText).join('') + (outcome.dryRun ? 'Only tried; nothing was changed.\n' : '');
 }
 
-function fileText({ file, kind, summary, report, warnings }: TakenFile): string {
-  const lines = [`${file}: ${kind}, ${summary}`, ...(report ? flowLines(report) : [])];
+function fileText({ file, kind, summary, report, warnings, revisions }: TakenFile): string {
+  const lines = [
+    `${file}: ${kind}, ${summary}`,
+    ...(report ? flowLines(report) : []),
+    ...(revisions ? revisionLines(revisions) : []),
+  ];
   return `${[...lines, ...warnings.map((warning) => `  ${warning}`)].join('\n')}\n`;
 }
+
+/** What a file does to days that stand; nothing for one that only brings new days. */
+export function revisionLines({ filled, equal, unlike, revised, extended, stations }: Revisions): string[] {
+  if (filled + equal + unlike === 0) return [];
+  const most = stations
+    .slice(0, SHOWN)
+    .map(
+      ({ code, unlike: days, largest: { date, standing, other, unit } }) =>
+        `    ${code}: ${days} unlike, most on ${date}: ${plain(standing)} ${unit}, in the file ${plain(other)}`,
+    );
+  return [
+    `  days that stand: ${equal} equal, ${unlike} unlike (${revised} take the new value); ${filled} gaps filled, ${extended} days added`,
+    ...most,
+  ];
+}
+
+const plain = (value: number): string => String(Number(value.toPrecision(10)));
 
 function flowLines(report: ImportReport): string[] {
   const { layout, unit, rows, accepted, rejectedTotal } = report;

@@ -64,7 +64,7 @@ async function inWorker({ id, signal, report }: JobContext, work: Work) {
     );
     if (outcome.problems.length > 0) throw new FailedWithResult(problemWords(outcome), outcome);
     // The worker's answer may overtake its last message.
-    report({ ...last, stage: 'done', file: null, share: 1 });
+    report({ ...last, stage: 'done', file: null, share: 1, secondsLeft: 0 });
     return outcome;
   } finally {
     signal.removeEventListener('abort', cancel);

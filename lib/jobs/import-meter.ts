@@ -5,6 +5,10 @@ const READING_SHARE = 0.9;
 /** Progress is told at most this often, milliseconds. */
 const TELL_EVERY_MS = 100;
 
+/** The time left is told when so much is done, and after so many seconds: before, it would only jump. */
+const TELLING_SHARE = 0.02;
+const TELLING_SECONDS = 1;
+
 export const NO_PROGRESS: ImportProgress = {
   stage: 'waiting',
   file: null,
@@ -15,6 +19,7 @@ export const NO_PROGRESS: ImportProgress = {
   totalBytes: 0,
   share: 0,
   rowsPerSecond: 0,
+  secondsLeft: null,
 };
 
 /** Keeps count of an import over all of its files and tells how far it is. */
@@ -43,7 +48,7 @@ export class ImportMeter {
   read(rows: number, bytes: number): void {
     const allRows = this.rowsBefore + rows;
     const allBytes = this.bytesBefore + bytes;
-    const seconds = (performance.now() - this.begun) / 1000;
+    const seconds = this.seconds();
     this.update({
       rows: allRows,
       bytes: allBytes,
@@ -68,8 +73,21 @@ export class ImportMeter {
     this.update({ stage: 'done', share: 1 }, true);
   }
 
+  private seconds(): number {
+    return (performance.now() - this.begun) / 1000;
+  }
+
+  private secondsLeft(): number | null {
+    const { share, stage } = this.progress;
+    const seconds = this.seconds();
+    if (stage === 'done') return 0;
+    if (share < TELLING_SHARE || seconds < TELLING_SECONDS) return null;
+    return Math.max(1, Math.round((seconds / share) * (1 - share)));
+  }
+
   private update(change: Partial<ImportProgress>, now = false): void {
     this.progress = { ...this.progress, ...change };
+    this.progress.secondsLeft = this.secondsLeft();
     if (!now && performance.now() - this.told < TELL_EVERY_MS) return;
     this.told = performance.now();
     this.tell(this.progress);

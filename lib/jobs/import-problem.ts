@@ -1,12 +1,13 @@
 import { inspectFile } from '../intake/inspect-file.ts';
 import { IntakeError, type KnownStation } from '../intake/types.ts';
 import { ImportRefused } from '../store/import-refused.ts';
+import { OverlapError } from '../store/overlap-error.ts';
 import type { GivenFile, ImportChoices, ImportProblem } from './import-types.ts';
 import { flowOptions } from './stage-file.ts';
 
 /** What of an import went wrong, in the form that a job keeps and a screen shows. A file that needs an answer is looked
  *  at once more, so that the person sees what it holds.
- *  @param about  the file at hand; null when all were read and could not be stored
+ *  @param about  the file at hand; null when all were read
  *  @throws the error itself when it is none that a person could put right */
 export async function problemOf(
   error: unknown,
@@ -20,6 +21,15 @@ export async function problemOf(
     problem,
     inspection: problem.needs && about ? await inspectionOf(about) : null,
   };
+}
+
+/** What keeps files that were all read well from being stored: a problem for each of them.
+ *  @throws the error itself when it is none that a person could put right */
+export async function refusalsOf(error: unknown): Promise<ImportProblem[]> {
+  if (!(error instanceof OverlapError)) return [await problemOf(error, null)];
+  return [error, ...error.others].map(({ message, problem, revisions }) => ({
+    ...{ file: problem.file, message, problem, inspection: null, revisions },
+  }));
 }
 
 async function inspectionOf(about: {

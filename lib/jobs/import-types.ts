@@ -62,6 +62,8 @@ export interface ImportProgress {
   /** 0 to 1 over all files: reading is nine tenths, storing the last one */
   share: number;
   rowsPerSecond: number;
+  /** by what has gone so far; null while that tells too little */
+  secondsLeft: number | null;
 }
 
 /** Why a file was not taken; all files are then left out, and the database is as it was. */

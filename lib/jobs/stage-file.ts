@@ -57,11 +57,11 @@ export function flowOptions(about: {
   choices: ImportChoices;
   registry: KnownStation[] | null;
 }): InspectOptions {
-  const { mapping, unit, station } = choicesFor(about.file, about.choices);
+  const { mapping, unit, station, matchCodes } = choicesFor(about.file, about.choices);
   return {
     fileName: about.file.name,
     ...(mapping === undefined ? {} : { mapping: parseMapping(mapping, about.file.name) }),
-    ...{ unit, station, knownStations: about.registry },
+    ...{ unit, station, matchCodes, knownStations: about.registry },
   };
 }
 
@@ -111,6 +111,7 @@ async function stageFlows(file: GivenFile, tools: StageTools): Promise<StagedFil
   }
   report = { ...report, rejectedFile: rejected.close() };
   const { sha256, layout, unit, mapping, rows, accepted, rejectedTotal } = report;
+  staging.stageFacts(number, report.facts ?? []);
   staging.describeFile(number, { sha256, layout, unit, mapping, rows, accepted, rejected: rejectedTotal, report });
   return {
     ...{ file, kind: 'flows', rows, report, warnings: report.warnings, registry: null },

@@ -1,4 +1,6 @@
+import type { OverlapRule } from './lay-parts.ts';
 import { openStore } from './open.ts';
+import type { Revisions } from './revisions.ts';
 
 export { type Undone, undoImport } from './undo-import.ts';
 
@@ -13,10 +15,12 @@ export interface ImportRow {
   layout: string;
   unit: string;
   /** what it does where values are unlike */
-  rule: string;
+  rule: OverlapRule;
   rows: number;
   accepted: number;
   rejected: number;
+  /** what it did to days that stood; null for registries, layers and imports of earlier versions */
+  revisions: Revisions | null;
   /** true while it is being undone */
   undoing: boolean;
 }
@@ -34,6 +38,7 @@ const COLUMNS = {
   rows: true,
   accepted: true,
   rejected: true,
+  revisions: true,
   state: true,
 } as const;
 
@@ -46,9 +51,11 @@ export async function listImports(regionId: number): Promise<ImportRow[]> {
     select: COLUMNS,
     orderBy: { id: 'desc' },
   });
-  return found.map(({ state, kind, ...row }) => ({
+  return found.map(({ state, kind, rule, revisions, ...row }) => ({
     ...row,
     kind: kind as ImportRow['kind'],
+    rule: rule as OverlapRule,
+    revisions: JSON.parse(revisions) as Revisions | null,
     undoing: state === 'undoing',
   }));
 }

@@ -1,15 +1,14 @@
 import { existsSync } from 'node:fs';
 import { basename, resolve } from 'node:path';
-import { parseMapping } from '../../intake/mapping.ts';
-import { FLOW_UNITS, IntakeError, type Mapping } from '../../intake/types.ts';
 import { launchImport } from '../../jobs/import-job.ts';
 import type { FileKind, GivenFile, ImportChoices, ImportOutcome } from '../../jobs/import-types.ts';
 import { CancelledError, cancelJob, FailedWithResult } from '../../jobs/live-jobs.ts';
 import { getRegion, slugOf } from '../../store/regions.ts';
-import { readJson, withWorkers } from '../analysis.ts';
+import { withWorkers } from '../analysis.ts';
 import { readArguments } from '../arguments.ts';
+import { CHOICE_OPTIONS, CHOICE_USAGE, choicesOf } from '../import-choices.ts';
 import { followImport } from '../import-progress.ts';
-import { reportJson, reportText } from '../import-report.ts';
+import { reportJson, reportText, revisionLines } from '../import-report.ts';
 import { UsageError } from '../usage-error.ts';
 
 export const usage = `Usage: npx hungerstone import --region NAME [options] FLOWFILE...
@@ -20,10 +19,7 @@ layout, dates, unit and stations of a flow file are recognised from what it hold
   --region NAME     the region
   --stations FILE   a station registry, CSV; may be given several times
   --layer FILE      a map layer, GeoJSON; may be given several times
-  --unit UNIT       unit of the flows: ${FLOW_UNITS.join(', ')} (mm/d over the drainage area)
-  --station CODE    the station of flow files that name none; else the file's name tells
-  --mapping FILE    JSON that says how the flow files are to be read
-  --revise          take the new values where they are unlike those that stand; else such a file is refused
+${CHOICE_USAGE}
   --json            the report as JSON
 
 Exit codes: 0 done, 1 failed and nothing changed, 2 wrong usage, 3 taken in, with rejected rows.
@@ -33,10 +29,7 @@ const OPTIONS = {
   region: { type: 'string' },
   stations: { type: 'string', multiple: true },
   layer: { type: 'string', multiple: true },
-  unit: { type: 'string' },
-  station: { type: 'string' },
-  mapping: { type: 'string' },
-  revise: { type: 'boolean', default: false },
+  ...CHOICE_OPTIONS,
   json: { type: 'boolean', default: false },
 } as const;
 
@@ -46,7 +39,7 @@ const WITH_REJECTED_ROWS = 3;
 
 export async function run(argv: string[]): Promise<number> {
   const { values, positionals } = readArguments(argv, OPTIONS, { name: 'FLOWFILE' });
-  const { region, unit, station, revise } = values;
+  const { region } = values;
   if (region === undefined || region.trim() === '') throw new UsageError('Name the region with --region NAME.');
   const files = [
     ...given(values.stations ?? [], 'registry'),
@@ -54,10 +47,7 @@ export async function run(argv: string[]): Promise<number> {
     ...given(positionals, 'flows'),
   ];
   if (files.length === 0) throw new UsageError('Give at least one FLOWFILE, --stations FILE or --layer FILE.');
-  const known = FLOW_UNITS.find((one) => one === unit);
-  if (unit !== undefined && !known) throw new UsageError(`--unit takes ${FLOW_UNITS.join(', ')}, not "${unit}".`);
-  const mapping = values.mapping === undefined ? undefined : mappingIn(values.mapping);
-  const choices: ImportChoices = { revise, by: 'import command', all: { unit: known, station, mapping } };
+  const choices = choicesOf(values);
   return withWorkers(async () => {
     try {
       const outcome = await imported(region, files, choices);
@@ -80,15 +70,6 @@ function given(paths: readonly string[], kind: FileKind): GivenFile[] {
   });
 }
 
-function mappingIn(path: string): Partial<Mapping> {
-  try {
-    return parseMapping(readJson('--mapping', path), basename(path));
-  } catch (error) {
-    if (error instanceof IntakeError) throw new UsageError(error.message, { cause: error });
-    throw error;
-  }
-}
-
 async function imported(name: string, files: GivenFile[], choices: ImportChoices): Promise<ImportOutcome> {
   const standing = await getRegion(slugOf(name));
   const region = standing ? { id: standing.id } : { name };
@@ -109,6 +90,8 @@ async function imported(name: string, files: GivenFile[], choices: ImportChoices
 }
 
 function sayProblems({ problems }: ImportOutcome): void {
-  for (const { message } of problems) process.stderr.write(`${message}\n`);
+  for (const { message, revisions } of problems) {
+    process.stderr.write(`${[message, ...(revisions ? revisionLines(revisions) : [])].join('\n')}\n`);
+  }
   process.stderr.write('Nothing was changed.\n');
 }

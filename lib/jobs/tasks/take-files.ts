@@ -4,7 +4,7 @@ import type { KnownStation } from '../../intake/types.ts';
 import { type Applied, applyStaging } from '../../store/apply-staging.ts';
 import { createStaging, type Staging } from '../../store/staging.ts';
 import { ImportMeter } from '../import-meter.ts';
-import { problemOf } from '../import-problem.ts';
+import { problemOf, refusalsOf } from '../import-problem.ts';
 import {
   FILE_KINDS,
   type GivenFile,
@@ -30,8 +30,8 @@ export interface TakeFiles {
 }
 
 /** Takes in the files of one import, or none of them: reads each into the staging database, registries before layers
- *  before flows whatever the order given, and when all are good copies them over.
- *  @returns  what was taken, or the problem of every file that cannot be taken
+ *  before flows whatever the order given, and when all are good copies them over. A dry run stops short of that.
+ *  @returns  what was taken, or would be, or the problem of every file that cannot be taken
  *  @throws the signal's reason when cancelled; nothing is then left behind */
 export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
   const cancel = new AbortController();
@@ -49,17 +49,17 @@ export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regi
     if (problems.length > 0) return { taken: [], problems, regionId: null };
     staging.seal();
     meter.store(0);
-    const { by, revise } = task.choices;
+    const { by, revise, rule, dryRun = false } = task.choices;
     const applied = await applyStaging(task.jobId, {
-      ...{ region: task.region, by, revise, signal },
+      ...{ region: task.region, by, revise, rule, dryRun, signal },
       onProgress: (share) => meter.store(share),
     });
-    taken = true;
+    taken = !dryRun;
     meter.done();
-    return { ...outcomeOf(staged, applied), regionId: applied.regionId };
+    return { ...outcomeOf(staged, applied, dryRun), regionId: taken ? applied.regionId : null };
   } catch (error) {
     signal.throwIfAborted();
-    return { taken: [], problems: [await problemOf(error, null)], regionId: null };
+    return { taken: [], problems: await refusalsOf(error), regionId: null };
   } finally {
     staging.discard();
     if (!taken) discardRejectedRows(staged.map(({ report }) => report?.rejectedFile ?? null));
@@ -102,16 +102,19 @@ async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Too
   return problems;
 }
 
-function outcomeOf(staged: readonly StagedFile[], applied: Applied): ImportOutcome {
+function outcomeOf(staged: readonly StagedFile[], applied: Applied, dryRun: boolean): ImportOutcome {
   return {
     taken: staged.map(({ file, kind, summary, report, warnings }, i) => {
-      const { id, stationsMade } = applied.imports[i];
+      const { id, stationsMade, revisions } = applied.imports[i];
       const made = stationsMade > 0 ? `, ${stationsMade} of them new` : '';
       return {
-        ...{ importId: id, file: file.name, kind, report, warnings, revisions: null },
+        ...{ importId: id, file: file.name, kind, warnings, revisions },
+        // A dry run keeps no file of rejected rows.
+        report: report && dryRun ? { ...report, rejectedFile: null } : report,
         summary: kind === 'registry' ? `${summary}${made}` : summary,
       };
     }),
     problems: [],
+    ...(dryRun ? { dryRun } : {}),
   };
 }

@@ -114,6 +114,7 @@ test('the same files by the screen and by the command come to equal data and equ
     'rejectedFile',
     'rejected',
     'stations',
+    'revisions',
   ]);
   for (const name of ['file', 'layout', 'unit', 'rows', 'accepted', 'rejectedTotal', 'rejected'] as const) {
     expect([name, byCommand[0][name]]).toEqual([name, onScreen[name]]);

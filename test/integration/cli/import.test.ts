@@ -1,6 +1,8 @@
 import { readFileSync } from 'node:fs';
 import { afterAll, beforeEach, expect, test } from 'vitest';
 import { closePool } from '../../../lib/jobs/pool.ts';
+import { listImports } from '../../../lib/store/imports.ts';
+import { readSeries } from '../../../lib/store/records.ts';
 import { getRegion, listRegions } from '../../../lib/store/regions.ts';
 import { listStations, stationRecords } from '../../../lib/store/stations.ts';
 import { databaseContent } from '../jobs/database-content.ts';
@@ -101,19 +103,65 @@ test('a failed first import leaves no region behind', async () => {
   expect(await listRegions()).toEqual([]);
 });
 
-test('unlike values are refused without --revise and taken with it', async () => {
+test('unlike values are refused without a rule; --dry-run tells what a rule would do, and the rule does it', async () => {
   await runCommand('import', ...REGION, files.flows);
-  const other = files.write('other.csv', 'station,date,discharge_m3s\nA1,1980-01-01,99\n');
+  const region = (await getRegion('upper-wethe'))!;
+  const other = files.write('other.csv', 'station,date,discharge_m3s\nA1,1980-01-01,99\nA1,2010-01-01,2\n');
   const refused = await runCommand('import', ...REGION, other);
   expect(refused.code).toBe(1);
-  expect(refused.stderr).toContain('1980-01-01');
-  expect((await runCommand('import', ...REGION, '--revise', other)).code).toBe(0);
+  expect(refused.stderr).toContain('--rule keep');
+  expect(refused.stderr).toMatch(/A1: 1 unlike, most on 1980-01-01: [\d.]+ m3\/s, in the file 99/);
+
+  const before = databaseContent(place.path);
+  const tried = await runCommand('import', ...REGION, '--rule', 'take-new', '--dry-run', '--json', other);
+  expect(tried.code).toBe(0);
+  const counts = { extended: 1, filled: 0, equal: 0, unlike: 1, unlikeProvisional: 0, revised: 1 };
+  expect(JSON.parse(tried.stdout)).toMatchObject({ dryRun: true, files: [{ revisions: counts }] });
+  expect(databaseContent(place.path)).toBe(before);
+
+  expect((await runCommand('import', ...REGION, '--rule', 'keep', other)).code).toBe(0);
+  const [{ id }] = await listStations(region.id);
+  const firstDay = () => {
+    let value = Number.NaN;
+    readSeries([id], (_id, { values }) => (value = values[0]));
+    return value;
+  };
+  expect(firstDay()).not.toBe(99);
+  const revised = await runCommand('import', ...REGION, '--revise', '--by', 'A. Hydrologist', other);
+  expect(revised.stdout).toContain('1 unlike (1 take the new value)');
+  expect(firstDay()).toBe(99);
+  expect(await listImports(region.id)).toMatchObject([
+    { by: 'A. Hydrologist', rule: 'take-new', revisions: { ...counts, extended: 0, equal: 1 } },
+    { by: 'import command', rule: 'keep', revisions: { ...counts, revised: 0 } },
+    { by: 'import command', revisions: { unlike: 0 } },
+  ]);
+});
+
+test('--choices says for single files how they are read', async () => {
+  const rows = longRows(['A1'])
+    .slice(0, 400)
+    .map((row) => row.split(',').slice(1).join(','));
+  const [one, two] = ['one.csv', 'two.csv'].map((name) => files.write(name, `date,flow\n${rows.join('\n')}\n`));
+  const choices = files.write(
+    'choices.json',
+    JSON.stringify({ 'one.csv': { unit: 'L/s', station: 'X' }, 'two.csv': { mapping: { unit: 'ft3/s' } } }),
+  );
+  const { code, stdout, stderr } = await runCommand('import', ...REGION, '--choices', choices, '--json', one, two);
+  expect([code, stderr.includes('Nothing was changed')]).toEqual([0, false]);
+  expect(JSON.parse(stdout).files).toMatchObject([
+    { file: 'one.csv', unit: 'L/s', stations: [{ code: 'X' }] },
+    { file: 'two.csv', unit: 'ft3/s', stations: [{ code: 'two' }] },
+  ]);
 });
 
 test.each([
   ['no region', ['flows.csv'], 'region'],
   ['no file', ['--region', 'A'], 'FLOWFILE'],
   ['an unknown unit', ['--region', 'A', '--unit', 'gallons', 'flows.csv'], 'gallons'],
+  ['an unknown rule', ['--region', 'A', '--rule', 'newest', 'flows.csv'], 'take-where-provisional'],
+  ['two rules', ['--region', 'A', '--rule', 'keep', '--revise', 'flows.csv'], '--revise'],
+  ['a share above 1', ['--region', 'A', '--daily-mean', '80', 'flows.csv'], 'from 0 to 1'],
+  ['an unknown correction', ['--region', 'A', '--correct', 'swap', 'flows.csv'], 'swap-coordinates'],
   ['an unknown option', ['--region', 'A', '--overwrite', 'flows.csv'], '--overwrite'],
 ])('import with %s ends with exit code 2', async (_what, argv, said) => {
   const given = argv.map((word) => (word === 'flows.csv' ? files.flows : word));

@@ -1,4 +1,4 @@
-import { expect, test } from 'vitest';
+import { expect, test, vi } from 'vitest';
 import { ImportMeter } from '../../../lib/jobs/import-meter.ts';
 import type { ImportProgress } from '../../../lib/jobs/import-types.ts';
 
@@ -29,4 +29,25 @@ test('the share never falls', () => {
   meter.store(1);
   meter.done();
   expect(shares).toEqual([...shares].sort((a, b) => a - b));
+});
+
+test('the time left follows from the share that is done and the time it took, once both tell something', () => {
+  vi.useFakeTimers({ toFake: ['performance'] });
+  try {
+    const told: ImportProgress[] = [];
+    const meter = new ImportMeter([1000], (progress) => told.push(progress));
+    meter.begin('a.csv', 1);
+    vi.advanceTimersByTime(500);
+    meter.read(10, 100);
+    expect(told.at(-1)!.secondsLeft).toBeNull();
+    vi.advanceTimersByTime(3500);
+    // 500 of 1,000 bytes are 45 % of the whole: 4 s went by, 4.9 are left
+    meter.read(50, 500);
+    expect(told.at(-1)!.secondsLeft).toBe(5);
+    meter.end(0, 100);
+    meter.done();
+    expect(told.at(-1)!.secondsLeft).toBe(0);
+  } finally {
+    vi.useRealTimers();
+  }
 });
