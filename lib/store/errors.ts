@@ -12,6 +12,7 @@ export type StoreProblem =
   | 'not-found'
   | 'in-use'
   | 'needed'
+  | 'changed'
   | 'lost';
 
 export class StoreError extends Error {

@@ -17,8 +17,12 @@ export interface LinkRow extends LinkInput {
   id: number;
 }
 
+/** Source of a pair that a person said is no link: it is kept so that nobody is asked again, and is not listed. */
+export const REJECTED = 'rejected';
+
 const LIST = `SELECT l.id, u.code, d.code, l.source FROM Link l JOIN Station u ON u.id = l.upstreamId
-  JOIN Station d ON d.id = l.downstreamId WHERE l.regionId = ? ORDER BY u.code, d.code`;
+  JOIN Station d ON d.id = l.downstreamId WHERE l.regionId = ? AND l.source <> '${REJECTED}'
+  ORDER BY u.code, d.code`;
 
 /** The links of a region, by the upper station's code. */
 export async function listLinks(regionId: number, path = databasePath()): Promise<LinkRow[]> {

@@ -10,6 +10,7 @@ import { refuseWhileOthersChange, reserveIds, VISIBLE } from './import-claim.ts'
 import { layParts } from './lay-parts.ts';
 import { loadParts, saveRecords, standingRecord, storeLaid } from './lay-record.ts';
 import { recipeProblem } from './recipes.ts';
+import { editionOfFacts } from './station-edition.ts';
 import { bareFacts, FACT_NAMES, type Facts, layFacts, type StationInput } from './station-facts.ts';
 import { checkStation, type StationPatch } from './station-values.ts';
 import { getStation, type StationRow } from './stations.ts';
@@ -20,11 +21,21 @@ export type { StationPatch };
 
 /** Changes what is known of a station. Where its drainage area changes, a record that mixes depths over it with other units
  *  is laid anew; where the area or the recipe changes, so are the records derived from it.
- *  @throws StoreError 'not-found', or 'bad-input' naming what cannot be taken; StoreBusyError while an import is stored */
-export async function editStation(regionId: number, code: string, patch: StationPatch): Promise<StationRow> {
+ *  @param edition  of the station as it was read, by editionOf: the change is refused when it is another one by now
+ *  @throws StoreError 'not-found', 'changed', or 'bad-input' naming what cannot be taken; StoreBusyError while an import is
+ *          stored */
+export async function editStation(
+  regionId: number,
+  code: string,
+  patch: StationPatch,
+  { edition = null }: { edition?: string | null } = {},
+): Promise<StationRow> {
   checkStation(patch);
   return changed(regionId, code, (connection) => {
     const { id, facts } = readStation(connection, regionId, code);
+    if (edition !== null && editionOfFacts(facts) !== edition) {
+      throw new StoreError('changed', `Station "${code}" was changed after it was read. Nothing was saved.`);
+    }
     const areaBefore = facts.areaKm2;
     lay(connection, regionId, { id, code }, facts, patch);
     updateStation(connection, { id, facts });

@@ -13,6 +13,7 @@ const PROBLEMS = {
   'cut-off': { status: 400, title: 'The upload did not arrive whole' },
   'not-found': { status: 404, title: 'There is no such thing here' },
   conflict: { status: 409, title: 'Something that is there stands against it' },
+  changed: { status: 412, title: 'It was changed meanwhile' },
   'too-large': { status: 413, title: 'The upload is too large' },
   'bad-file': { status: 422, title: 'The file cannot be taken' },
   busy: { status: 503, title: 'The database is busy' },
@@ -50,6 +51,7 @@ const OF_THE_STORE: Record<StoreProblem, ProblemCode> = {
   'bad-url': 'no-database',
   'in-use': 'busy',
   needed: 'conflict',
+  changed: 'changed',
   lost: 'unexpected',
 };
 

@@ -8,6 +8,7 @@ import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, 
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
 import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
+import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
 
 const TABLE = {
@@ -60,11 +61,16 @@ export const PATHS = {
         'text/csv': { schema: text },
       }),
     },
+    post: { ...STATION_CHANGES.add, parameters: [REGION] },
   },
   '/api/regions/{region}/ranking': table('Stations in order of trend in annual minima', [REGION], tableParameters),
   '/api/regions/{region}/minima': table('Annual minima', [REGION], tableParameters),
   '/api/regions/{region}/curves': table('Flow-duration curves', [REGION], curveParameters),
-  '/api/regions/{region}/stations/{code}': table('A station against its region', [REGION, STATION], {}, json(anything)),
+  '/api/regions/{region}/stations/{code}': {
+    ...table('A station against its region', [REGION, STATION], {}, json(anything)),
+    patch: { ...STATION_CHANGES.patch, parameters: [REGION, STATION, ...STATION_CHANGES.patch.parameters] },
+    delete: { ...STATION_CHANGES.delete, parameters: [REGION, STATION] },
+  },
   '/api/regions/{region}/stations/{code}/minima': table(
     'Annual minima of a station',
     [REGION, STATION],
@@ -82,6 +88,7 @@ export const PATHS = {
     { ...json(anything), 'text/csv': { schema: text } },
   ),
   ...DAY_PATHS,
+  ...STATION_PATHS,
   '/api/regions/{region}/layers': {
     get: { summary: 'Map layers', parameters: [REGION], responses: answers('the layers', json(listOf('Layer'))) },
   },

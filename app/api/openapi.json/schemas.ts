@@ -2,12 +2,15 @@ import * as z from 'zod';
 import { basisSchema } from '@/lib/basis';
 import { LAYOUTS, NEEDS } from '@/lib/intake/types';
 import { FILE_KINDS } from '@/lib/jobs/import-types';
+import { LINK_SOURCES } from '@/lib/region/link-suggestions';
 import { INFLUENCES } from '@/lib/region/ranking-types';
 import { UNITS } from '@/lib/series/quantities';
 import { JOB_STATES } from '@/lib/store/jobs';
 import { fileChoices, importChoices } from '../regions/[region]/imports/bodies';
 import { link } from '../regions/[region]/links/bodies';
+import { suggestionAnswer } from '../regions/[region]/links/suggested/bodies';
 import { mappingToKeep } from '../regions/[region]/mappings/bodies';
+import { newStation, stationPatch } from '../regions/[region]/stations/bodies';
 import { newRegion, regionChange } from '../regions/bodies';
 import { importOrder, previewOrder, uploadChange } from '../uploads/[upload]/bodies';
 
@@ -58,6 +61,22 @@ export const SCHEMAS = {
     river: z.string(),
     drainage_area_km2: z.number().nullable(),
     influence: z.enum(INFLUENCES),
+  }),
+  NewStation: newStation,
+  StationChange: stationPatch,
+  StationFacts: newStation.required(),
+  SuggestionAnswer: suggestionAnswer,
+  LinkSuggestions: z.object({
+    suggested: z.array(
+      z.object({
+        upstream: z.string(),
+        downstream: z.string(),
+        source: z.enum(LINK_SOURCES).exclude(['person']),
+        reason: z.string(),
+      }),
+    ),
+    rejected: z.array(z.object({ upstream: z.string(), downstream: z.string() })),
+    hasRivers: z.boolean().describe('whether the region has a layer of rivers'),
   }),
   Layer: z.object({ id: z.int(), name: z.string(), kind: z.string() }),
   Job: z.object({
