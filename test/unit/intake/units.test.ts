@@ -8,6 +8,8 @@ test.each([
   ['L/s', 0.001],
   ['ft3/s', 0.3048 ** 3],
   ['ML/d', 5 / 432],
+  ['Mgal/d', (231e6 * 0.0254 ** 3) / 86400],
+  ['acre-ft/d', (43560 * 0.3048 ** 3) / 86400],
 ] as [FlowUnit, number][])('toM3s(%s) is %d m³/s, whatever the area', (unit, factor) => {
   expect(toM3s(unit, null) / factor).toBeCloseTo(1, 14);
   expect(toM3s(unit, 12)).toBe(toM3s(unit, null));
@@ -41,16 +43,49 @@ test.each([
   ['runoff_mm_d', 'mm/d'],
   ['Q mm/day', 'mm/d'],
   ['ft³/s', 'ft3/s'],
+  ['flow m3/sec', 'm3/s'],
+  ['cubic metres per sec', 'm3/s'],
+  ['m3 s-1', 'm3/s'],
+  ['cu m/s', 'm3/s'],
+  ['L s-1', 'L/s'],
+  ['ft^3 per second', 'ft3/s'],
+  ['cu. ft./s', 'ft3/s'],
+  ['[cft_i]/s', 'ft3/s'],
+  ['[ft_i]3/s', 'ft3/s'],
+  ['ML d-1', 'ML/d'],
+  ['megalitres per day', 'ML/d'],
+  ['10^3 m3/day', 'ML/d'],
+  ['Flow (MGD)', 'Mgal/d'],
+  ['flow_mgal_d', 'Mgal/d'],
+  ['million gallons per day', 'Mgal/d'],
+  ['Mgal(US)/d', 'Mgal/d'],
+  ['10*6.[gal_us]/d', 'Mgal/d'],
+  ['acre-feet/day', 'acre-ft/d'],
+  ['flow_acre_ft_d', 'acre-ft/d'],
+  ['ac-ft per day', 'acre-ft/d'],
+  ['AF/day', 'acre-ft/d'],
 ])('unitNamedIn(“%s”) is %s', (text, unit) => {
   expect(unitNamedIn(text)).toBe(unit);
 });
 
-test.each(['flow', 'value', 'L/s/km²', 'm3/s/km2', 'cfsm', 'mm', 'stage_m', 'html', 'Discharge (m3)', 'specials'])(
-  'unitNamedIn(“%s”) is null: no flow unit',
-  (text) => {
-    expect(unitNamedIn(text)).toBeNull();
-  },
-);
+test.each([
+  'flow',
+  'value',
+  'L/s/km²',
+  'm3/s/km2',
+  'cfsm',
+  'mm',
+  'stage_m',
+  'html',
+  'Discharge (m3)',
+  'specials',
+  'mgd (imperial)',
+  'MGD UK',
+  'acre-ft',
+  'ft/s',
+])('unitNamedIn(“%s”) is null: no flow unit', (text) => {
+  expect(unitNamedIn(text)).toBeNull();
+});
 
 test('unitNamedIn is null where two units are named', () => {
   expect(unitsNamedIn('flow in cfs, converted from m3/s')).toEqual(['m3/s', 'ft3/s']);
