@@ -16,15 +16,16 @@ export function useCanvas(
   const canvas = useRef<HTMLCanvasElement | null>(null);
   const frame = useRef(0);
   const latest = useRef(() => {});
-  latest.current = () => {
-    frame.current = 0;
-    if (canvas.current) paint(canvas.current, width, height, draw);
-  };
   const redraw = useRef(() => {
     if (frame.current === 0) frame.current = requestAnimationFrame(() => latest.current());
   }).current;
-  // biome-ignore lint/correctness/useExhaustiveDependencies: what is drawn depends on these
-  useEffect(() => redraw(), [width, height, draw, redraw]);
+  useEffect(() => {
+    latest.current = () => {
+      frame.current = 0;
+      if (canvas.current) paint(canvas.current, width, height, draw);
+    };
+    redraw();
+  }, [width, height, draw, redraw]);
   useEffect(() => {
     const stopTheme = onThemeChange(redraw);
     const stopDensity = onDensityChange(redraw);

@@ -34,11 +34,13 @@ interface Props {
   onOpen(code: string, year: number): void;
 }
 
+const FOCUSABLE = { tabIndex: 0 };
+
 /** All stations by all years on one canvas that shows the part scrolled to. The pointer or the arrow keys move a cell
  *  cursor, whose counts stand above; a click or Enter opens the year. */
 export function YearChart({ records, span, rows, sort, units, open, onOpen }: Props) {
   const [box, size] = useBoxSize({ width: 960, height: 480 });
-  const [cursor, setCursor] = useState<CellPlace | null>(null);
+  const [pointed, setPointed] = useState<{ code: string; year: number } | null>(null);
   const scroll = useRef({ left: 0, top: 0 });
   const [first, last] = span;
   const layout = useMemo(
@@ -46,7 +48,19 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
     [size.width, rows.length, first, last],
   );
   const figures = useMemo(() => rows.map((row) => sortFigure(row, sort, units)), [rows, sort, units]);
-  const openRow = rows.findIndex(({ station }) => station.code === open.station);
+  const rowOf = useMemo(() => new Map(rows.map(({ station }, row) => [station.code, row])), [rows]);
+  const openRow = open.station === null ? -1 : (rowOf.get(open.station) ?? -1);
+  const cursorRow = pointed === null ? undefined : rowOf.get(pointed.code);
+  const cursor = useMemo(
+    () => (pointed && cursorRow !== undefined ? { row: cursorRow, year: pointed.year } : null),
+    [pointed, cursorRow],
+  );
+  const setCursor = (place: CellPlace | null) =>
+    setPointed((now) => {
+      if (place === null) return null;
+      const { code } = rows[place.row].station;
+      return now?.code === code && now.year === place.year ? now : { code, year: place.year };
+    });
 
   const draw = useCallback(
     (context: CanvasRenderingContext2D, width: number, height: number) => {
@@ -71,9 +85,6 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
   useEffect(() => {
     if (openRow >= 0) bringIntoSight({ row: openRow, year: open.year ?? last });
   }, [openRow, open.year, last, bringIntoSight]);
-  // another order or search: the cursor would stand on another station
-  // biome-ignore lint/correctness/useExhaustiveDependencies: `rows` is what it waits for
-  useEffect(() => setCursor(null), [rows]);
 
   const placeOf = (event: MouseEvent | PointerEvent) => {
     const { left, top } = event.currentTarget.getBoundingClientRect();
@@ -81,8 +92,7 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
   };
   const onPointerMove = (event: PointerEvent) => {
     if (event.pointerType === 'touch') return;
-    const place = placeOf(event);
-    setCursor((now) => (now?.row === place?.row && now?.year === place?.year ? now : place));
+    setCursor(placeOf(event));
   };
   const openPlace = (place: CellPlace | null) => {
     if (place) onOpen(rows[place.row].station.code, place.year);
@@ -102,16 +112,16 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
     event.preventDefault();
   };
 
-  const pointed = cursor && rows[cursor.row] ? { ...rows[cursor.row], year: cursor.year } : null;
-  const cell = pointed && yearCell(records, pointed.station, pointed.year);
+  const station = cursor && rows[cursor.row].station;
+  const cell = station && cursor && yearCell(records, station, cursor.year);
   return (
     <div className={styles.frame}>
       <p className={styles.readout} role="status" data-testid="year-readout">
-        {pointed ? (
+        {station && cursor ? (
           <>
-            <strong>{pointed.station.name}</strong>
-            {pointed.station.river && `, ${pointed.station.river}`} ({pointed.station.code}) ·{' '}
-            {cell ? cellWords(cell, records.basis.yearStart) : `${pointed.year}: outside the record`}
+            <strong>{station.name}</strong>
+            {station.river && `, ${station.river}`} ({station.code}) ·{' '}
+            {cell ? cellWords(cell, records.basis.yearStart) : `${cursor.year}: outside the record`}
           </>
         ) : (
           'Point at a year, or move with the arrow keys, for its counts; a click or Enter opens it.'
@@ -123,8 +133,7 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
         style={{ blockSize: `min(${layout.height + 2}px, max(15rem, 100dvh - 19rem))` }}
         role="application"
         aria-label={`Chart of ${rows.length} stations by years ${first} to ${last}. Arrow keys move from cell to cell, Enter opens the year. The table below holds the same.`}
-        // biome-ignore lint/a11y/noNoninteractiveTabindex: the cell cursor is moved by keys
-        tabIndex={0}
+        {...FOCUSABLE}
         onScroll={(event) => {
           scroll.current = { left: event.currentTarget.scrollLeft, top: event.currentTarget.scrollTop };
           redraw();

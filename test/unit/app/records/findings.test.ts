@@ -1,0 +1,69 @@
+import { expect, test } from 'vitest';
+import { figuresOf } from '@/app/regions/[region]/records/_findings/finding-words';
+import { countFindings, groupFindings, surroundings } from '@/app/regions/[region]/records/_findings/group-findings';
+import { findingOf } from './records-builder.ts';
+
+const stations = [
+  { code: 'A', name: 'Lom' },
+  { code: 'B', name: 'Žiri' },
+  { code: 'C', name: 'Obir' },
+];
+const findings = [
+  findingOf({ id: 1, code: 'A' }),
+  findingOf({ id: 2, code: 'B', kind: 'flat' }),
+  findingOf({ id: 3, code: 'B', state: 'rejected' }),
+  findingOf({ id: 4, code: 'B' }),
+];
+const all = { kind: null, state: null, search: '' };
+const shown = (filter: Partial<Parameters<typeof groupFindings>[2]>) =>
+  groupFindings(findings, stations, { ...all, ...filter }).map((group) => [
+    group.station.code,
+    ...group.findings.map(({ id }) => id),
+  ]);
+
+test('groupFindings puts the station with the most open findings first and leaves out those without any', () => {
+  expect(shown({})).toEqual([
+    ['B', 2, 3, 4],
+    ['A', 1],
+  ]);
+});
+
+test('groupFindings filters by kind, state and words', () => {
+  expect(shown({ kind: 'flat' })).toEqual([['B', 2]]);
+  expect(shown({ state: 'rejected' })).toEqual([['B', 3]]);
+  expect(shown({ search: 'ziri' })).toEqual([['B', 2, 3, 4]]);
+  expect(shown({ search: 'obir' })).toEqual([]);
+});
+
+test('countFindings counts by state', () => {
+  expect(countFindings(findings)).toEqual({ open: 3, rejected: 1, accepted: 0 });
+});
+
+test('surroundings: at least 20 days each side, as many as the stretch is long, at most 400, of at most ten years', () => {
+  expect(surroundings(1000, 1000)).toEqual([980, 1020]);
+  expect(surroundings(1000, 1049)).toEqual([950, 1099]);
+  expect(surroundings(1000, 1999)).toEqual([600, 2399]);
+  expect(surroundings(1000, 30_000)).toEqual([600, 1000 + 3652 + 400]);
+});
+
+test.each([
+  [
+    'jump',
+    { before: 0.412, value: 31.2, ratio: 75.73, limit: 12.4 },
+    /^0\.412 m³\/s before, 31\.2 m³\/s after: .*75\.7, beyond 12\.4$/,
+  ],
+  ['flat', { value: 1.5, share: 0.015 }, /^1\.50 m³\/s every day; 1\.5 % of the record/],
+  [
+    'step',
+    { meanBefore: 2, meanAfter: 1, yearsBefore: 20, yearsAfter: 1 },
+    /^mean 2\.00 m³\/s over 20 years before, 1\.00 m³\/s over 1 year after$/,
+  ],
+  ['unit-change', { factor: 35.3, ratio: 36.1 }, /^36\.1 times .* factor 35\.3/],
+  ['repeated', { copyOf: '1990-05-01' }, /1990-05-01/],
+  ['negative', { lowest: -0.2 }, /^lowest −0\.200 m³\/s$/],
+  ['future', { today: '2026-01-01' }, /2026-01-01/],
+  ['too-large', { highest: 4000, specific: 40 }, /^up to 4,000 m³\/s, 40,000 L\/s\/km²$/],
+  ['jump', { more: 312 }, /^312 findings of this kind/],
+] as const)('figuresOf a %s says its figures with units', (kind, detail, words) => {
+  expect(figuresOf({ kind, detail }, 'metric').replaceAll('\u00a0', ' ')).toMatch(words);
+});
