@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { FLAG } from '../series/daily-series.ts';
 
 export const MARK_KINDS = ['reject', 'accept', 'note'] as const;
@@ -9,6 +8,16 @@ export interface MarkSpan {
   firstDay: number;
   lastDay: number;
   kind: MarkKind;
+}
+
+/** Sets the suspect bit on the stretches that the checks found, changing `flags`; before any mark of a person.
+ *  @param stretches  first and last day of each, one after the other: day numbers, both included */
+export function laySuspect(flags: Uint8Array, firstDay: number, stretches: readonly number[]): void {
+  for (let i = 0; i + 1 < stretches.length; i += 2) {
+    const from = Math.max(0, stretches[i] - firstDay);
+    const to = Math.min(flags.length - 1, stretches[i + 1] - firstDay);
+    for (let day = from; day <= to; day++) flags[day] |= FLAG.suspect;
+  }
 }
 
 /** Lays a person's marks over flag bits, in the order given, changing `flags`: reject sets the rejected bit, accept
@@ -23,15 +32,4 @@ export function layMarks(flags: Uint8Array, firstDay: number, marks: readonly Ma
       else flags[day] &= ~(FLAG.rejected | FLAG.suspect);
     }
   }
-}
-
-/** Hash of a record as it is read: its own, and with it the marks on it and, for a depth over the drainage area, that
- *  area. Equal to the record's own hash when neither is there. */
-export function hashAsRead(hash: string, unit: string, areaKm2: number | null, marks: readonly MarkSpan[]): string {
-  const spans = marks.filter(({ kind }) => kind !== 'note').map((mark) => [mark.firstDay, mark.lastDay, mark.kind]);
-  if (spans.length === 0 && unit !== 'mm/d') return hash;
-  const area = unit === 'mm/d' ? areaKm2 : null;
-  return createHash('sha256')
-    .update(JSON.stringify([hash, area, spans]))
-    .digest('hex');
 }

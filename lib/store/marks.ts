@@ -1,30 +1,57 @@
 import { whenFree } from './busy.ts';
+import { type Connection, change, immediately, rows, sharedConnection, timestamp } from './connection.ts';
+import { databasePath } from './database-url.ts';
+import { rebuildDerived } from './derived.ts';
 import { StoreError } from './errors.ts';
 import { MARK_KINDS, type MarkKind, type MarkSpan } from './marks-on-flags.ts';
-import { openStore } from './open.ts';
+import { sweep } from './withdraw.ts';
 
 /** A person's rejection, acceptance or note on a stretch of days. Laid over the record on reading; taking it away puts
  *  the record back. */
 export interface MarkRow extends MarkSpan {
   id: number;
   stationId: number;
+  /** of the station */
+  code: string;
   quantity: string;
   reason: string;
   by: string;
   createdAt: Date;
 }
 
+const SELECT = `SELECT m.id, m.stationId, s.code, m.quantity, m.firstDay, m.lastDay, m.kind, m.reason, m."by", m.createdAt
+  FROM Mark m JOIN Station s ON s.id = m.stationId`;
+
+type Row = [number, number, string, string, number, number, MarkKind, string, string, string];
+
+const toMark = ([id, stationId, code, quantity, firstDay, lastDay, kind, reason, by, createdAt]: Row): MarkRow => ({
+  ...{ id, stationId, code, quantity, firstDay, lastDay, kind, reason, by, createdAt: new Date(createdAt) },
+});
+
 /** The marks on a station's record, in the order in which they are laid. */
 export async function listMarks(stationId: number, quantity = 'flow'): Promise<MarkRow[]> {
-  const found = await openStore().prisma.mark.findMany({ where: { stationId, quantity }, orderBy: { id: 'asc' } });
-  return found.map((row) => ({ ...row, kind: row.kind as MarkKind }));
+  const sql = `${SELECT} WHERE m.stationId = ? AND m.quantity = ? ORDER BY m.id`;
+  return (rows(sharedConnection(databasePath()), sql).all([stationId, quantity]) as Row[]).map(toMark);
 }
 
-/** Adds a mark on the days firstDay to lastDay (day numbers, both included).
- *  @throws StoreError 'bad-input' when the days run backwards, the kind is unknown or a rejection gives no reason */
-export async function addMark(
-  mark: MarkSpan & { stationId: number; quantity?: string; reason: string; by?: string },
-): Promise<MarkRow> {
+/** The marks on the records of a region, by station and then in the order in which they are laid. */
+export async function listRegionMarks(regionId: number): Promise<MarkRow[]> {
+  const sql = `${SELECT} WHERE s.regionId = ? ORDER BY s.code, m.id`;
+  return (rows(sharedConnection(databasePath()), sql).all([regionId]) as Row[]).map(toMark);
+}
+
+export interface NewMark extends MarkSpan {
+  stationId: number;
+  quantity?: string;
+  reason: string;
+  by?: string;
+}
+
+/** Adds a mark on the days firstDay to lastDay (day numbers, both included), and makes the records anew that are derived
+ *  from the marked one.
+ *  @throws StoreError 'bad-input' when the days run backwards, the kind is unknown or no reason is given, 'not-found' for a
+ *          station that is not there */
+export async function addMark(mark: NewMark): Promise<MarkRow> {
   const { stationId, quantity = 'flow', firstDay, lastDay, kind, by = '' } = mark;
   const reason = mark.reason.trim();
   if (!MARK_KINDS.includes(kind))
@@ -36,12 +63,37 @@ export async function addMark(
     );
   }
   if (reason === '') throw new StoreError('bad-input', 'A mark needs a reason.');
-  const data = { stationId, quantity, firstDay, lastDay, kind, reason, by };
-  return { ...(await whenFree(() => openStore().prisma.mark.create({ data }))), kind };
+  return changing((connection) => {
+    const insert = change(
+      connection,
+      `INSERT INTO Mark (stationId, quantity, firstDay, lastDay, kind, reason, "by", createdAt)
+       SELECT id, ?, ?, ?, ?, ?, ?, ? FROM Station WHERE id = ?`,
+    );
+    const values = [quantity, firstDay, lastDay, kind, reason, by, timestamp(), stationId];
+    const { changes, lastInsertRowid } = insert.run(values);
+    if (changes === 0) throw new StoreError('not-found', 'The station is not there any more.');
+    rebuildDerived(connection, [stationId]);
+    return toMark(rows(connection, `${SELECT} WHERE m.id = ?`).get([Number(lastInsertRowid)]) as Row);
+  });
 }
 
-/** Takes a mark away. @returns false when there is no such mark */
-export async function removeMark(id: number): Promise<boolean> {
-  const { count } = await whenFree(() => openStore().prisma.mark.deleteMany({ where: { id } }));
-  return count > 0;
+/** Takes a mark away, and makes the records anew that are derived from the one it was on.
+ *  @param stationId  the station that it must be on; any by default
+ *  @returns false when there is no such mark */
+export function removeMark(id: number, stationId?: number): Promise<boolean> {
+  return changing((connection) => {
+    const found = rows(connection, 'SELECT stationId FROM Mark WHERE id = ?').get([id]) as [number] | undefined;
+    if (!found || (stationId !== undefined && found[0] !== stationId)) return false;
+    change(connection, 'DELETE FROM Mark WHERE id = ?').run([id]);
+    rebuildDerived(connection, found);
+    return true;
+  });
+}
+
+/** One transaction, and then the days go that no record points to any more. */
+async function changing<Result>(write: (connection: Connection) => Result): Promise<Result> {
+  const connection = sharedConnection(databasePath());
+  const result = await whenFree(() => immediately(connection, () => write(connection)));
+  await sweep(connection);
+  return result;
 }

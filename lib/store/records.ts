@@ -6,10 +6,14 @@ import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Code, flagsOfCodes } from './codes.ts';
 import { rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
-import { hashAsRead, layMarks, type MarkSpan } from './marks-on-flags.ts';
+import { hashAsRead } from './hash-as-read.ts';
+import { layMarks, laySuspect, type MarkSpan } from './marks-on-flags.ts';
+
+/** The suspect stretches of a record as JSON; null for none. */
+const SUSPECT = "NULLIF(r.suspect, '[]')";
 
 const RECORD_SQL = `SELECT r.hash, r.unit, r.firstDay, s.areaKm2, p.codeList, COALESCE(l."values", p."values"),
-    COALESCE(l.flags, p.codes)
+    COALESCE(l.flags, p.codes), ${SUSPECT}
   FROM Record r JOIN Station s ON s.id = r.stationId
   LEFT JOIN Laid l ON l.id = r.laidId LEFT JOIN Part p ON p.id = r.partId
   WHERE r.stationId = ? AND r.quantity = ?`;
@@ -20,29 +24,54 @@ const MARKS_SQL = 'SELECT firstDay, lastDay, kind FROM Mark WHERE stationId = ? 
  *
  *  Synchronous, by libsql alone: good in worker threads. A station without a record is not visited.
  *  @param visit  gets the station's id, its days and the hash of the record as read. Values are m³/s; NaN throughout where
- *                they are a depth and the station has no drainage area. Rejected days carry the rejected bit. The arrays
- *                are the visitor's to keep. */
+ *                they are a depth and the station has no drainage area. Days that the checks found suspect carry that bit
+ *                unless a person accepted them; rejected days carry the rejected bit. The arrays are the visitor's to keep. */
 export function readSeries(
   stationIds: readonly number[] | Int32Array,
   visit: (stationId: number, series: DailySeries, hash: string) => void,
   { quantity = 'flow', path = databasePath() } = {},
 ): void {
-  const record = rows(sharedConnection(path), RECORD_SQL);
   const marksOf = rows(sharedConnection(path), MARKS_SQL);
+  readStored(
+    stationIds,
+    (stationId, series, { hash, ...record }) => {
+      const marks = marksOf.all([stationId, quantity]).map(toSpan);
+      if (record.suspect !== null) laySuspect(series.flags, series.firstDay, JSON.parse(record.suspect) as number[]);
+      layMarks(series.flags, series.firstDay, marks);
+      visit(stationId, series, hashAsRead(hash, { ...record, marks }));
+    },
+    { quantity, path },
+  );
+}
+
+/** What stands beside the days of a record. */
+export interface StoredRecord {
+  /** its own hash, whatever is laid over it */
+  hash: string;
+  unit: FlowUnit;
+  areaKm2: number | null;
+  suspect: string | null;
+}
+
+/** Reads records as they are stored, without suspect stretches and marks; otherwise as readSeries does. */
+export function readStored(
+  stationIds: readonly number[] | Int32Array,
+  visit: (stationId: number, series: DailySeries, record: StoredRecord) => void,
+  { quantity = 'flow', path = databasePath() } = {},
+): void {
+  const record = rows(sharedConnection(path), RECORD_SQL);
   for (const stationId of stationIds) {
     const row = record.get([stationId, quantity]) as
-      | [string, FlowUnit, number, number | null, string | null, Buffer, Buffer]
+      | [string, FlowUnit, number, number | null, string | null, Buffer, Buffer, string | null]
       | undefined;
     if (!row) continue;
-    const [hash, unit, firstDay, areaKm2, codeList, values, flags] = row;
-    const marks = marksOf.all([stationId, quantity]).map(toSpan);
+    const [hash, unit, firstDay, areaKm2, codeList, values, flags, suspect] = row;
     const series = {
       firstDay,
       values: quantity === 'flow' ? inM3s(valuesOfBlob(values), unit, areaKm2) : valuesOfBlob(values),
       flags: codeList === null ? bytesOfBlob(flags) : flagsOfCodes(bytesOfBlob(flags), JSON.parse(codeList) as Code[]),
     };
-    layMarks(series.flags, firstDay, marks);
-    visit(stationId, series, hashAsRead(hash, unit, areaKm2, marks));
+    visit(stationId, series, { hash, unit, areaKm2, suspect });
   }
 }
 
@@ -63,7 +92,7 @@ function inM3s(values: Float64Array, unit: FlowUnit, areaKm2: number | null): Fl
 export interface StationRecord {
   stationId: number;
   code: string;
-  /** of the record as read: days, flags, marks, and the area where values are a depth over it */
+  /** of the record as read: days, flags, suspect stretches, marks, and the area where values are a depth over it */
   hash: string;
   /** as the first part was written */
   unit: FlowUnit;
@@ -77,7 +106,7 @@ export interface StationRecord {
 }
 
 const HEADS_SQL = `SELECT s.id, s.code, s.areaKm2, r.hash, r.unit, r.firstDay, r.days, r.valueCount, r.firstValueDay,
-    r.lastValueDay, r.zeroCount
+    r.lastValueDay, r.zeroCount, ${SUSPECT}
   FROM Station s JOIN Record r ON r.stationId = s.id AND r.quantity = 'flow' WHERE s.regionId = ? ORDER BY s.code`;
 
 const REGION_MARKS_SQL = `SELECT m.firstDay, m.lastDay, m.kind, m.stationId FROM Mark m JOIN Station s ON s.id = m.stationId
@@ -95,10 +124,23 @@ function recordsOf(regionId: number, path: string): StationRecord[] {
     marks.set(stationId, [...(marks.get(stationId) ?? []), toSpan(row)]);
   }
   return (rows(sharedConnection(path), HEADS_SQL).all([regionId]) as HeadRow[]).map(
-    ([stationId, code, areaKm2, hash, unit, firstDay, days, valueCount, firstValueDay, lastValueDay, zeroCount]) => ({
+    ([
       stationId,
       code,
-      hash: hashAsRead(hash, unit, areaKm2, marks.get(stationId) ?? []),
+      areaKm2,
+      hash,
+      unit,
+      firstDay,
+      days,
+      valueCount,
+      firstValueDay,
+      lastValueDay,
+      zeroCount,
+      suspect,
+    ]) => ({
+      stationId,
+      code,
+      hash: hashAsRead(hash, { unit, areaKm2, suspect, marks: marks.get(stationId) ?? [] }),
       unit,
       firstDay,
       days,
@@ -122,9 +164,10 @@ type HeadRow = [
   firstValueDay: number | null,
   lastValueDay: number | null,
   zeroCount: number,
+  suspect: string | null,
 ];
 
-/** SHA-256, hexadecimal, of all that analyses read of a region: the facts of its stations and their records with marks.
+/** SHA-256, hexadecimal, of all that analyses read of a region: the facts of its stations and their records with marks and suspect stretches.
  *  Equal exactly when these are. */
 export function regionDataHash(regionId: number, path = databasePath()): string {
   const hash = createHash('sha256');
