@@ -13,9 +13,14 @@ export interface TextReading {
   onBytes?(bytes: Uint8Array): void;
 }
 
+/** The text of a file in pieces, see `decodedText`. */
+export function documentText(path: string, reading: TextReading): AsyncGenerator<string> {
+  return decodedText(createReadStream(path, { highWaterMark: CHUNK }), reading);
+}
+
 /** The text of a document in pieces, decoded strictly: bytes that its encoding does not have refuse it.
  *  @throws IntakeError naming the row of the first wrong byte; the signal's reason when aborted */
-export async function* documentText(path: string, reading: TextReading): AsyncGenerator<string> {
+export async function* decodedText(source: AsyncIterable<Buffer>, reading: TextReading): AsyncGenerator<string> {
   const { label, mark } = reading.encoding;
   const decoder = new TextDecoder(label, { fatal: true, ignoreBOM: true });
   let skip = mark;
@@ -28,9 +33,8 @@ export async function* documentText(path: string, reading: TextReading): AsyncGe
       throw wrongBytes(reading, row, bytes, cause);
     }
   };
-  for await (const chunk of createReadStream(path, { highWaterMark: CHUNK })) {
+  for await (const bytes of source) {
     reading.signal?.throwIfAborted();
-    const bytes = chunk as Buffer;
     reading.onBytes?.(bytes);
     const text = decoded(bytes.subarray(skip));
     skip = 0;

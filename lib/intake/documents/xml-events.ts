@@ -21,11 +21,16 @@ export interface ElementHandler {
 /** Reads an XML document in pieces and tells its elements. Entities of its own are never expanded: a document that
  *  brings a DOCTYPE is refused, and so is one that is not well-formed, too deep, or has endless tags or texts.
  *  @throws IntakeError with the row; the signal's reason when aborted */
-export async function readXml(path: string, reading: TextReading, handler: ElementHandler): Promise<void> {
+export function readXml(path: string, reading: TextReading, handler: ElementHandler): Promise<void> {
+  return parseXml(documentText(path, reading), reading.file, handler);
+}
+
+/** The same of text that is there already in pieces. */
+export async function parseXml(pieces: AsyncIterable<string>, file: string, handler: ElementHandler): Promise<void> {
   const parser = new SaxesParser({ xmlns: false });
   const refuse = (message: string, remedy: string, value?: string): never => {
     throw new IntakeError({
-      ...{ file: reading.file, row: parser.line, message, remedy },
+      ...{ file, row: parser.line, message, remedy },
       ...(value === undefined ? {} : { value: value.slice(0, 100) }),
     });
   };
@@ -82,7 +87,7 @@ export async function readXml(path: string, reading: TextReading, handler: Eleme
       cut ? 'Get it again, whole' : 'Get it again; it is damaged',
     );
   });
-  for await (const piece of documentText(path, reading)) {
+  for await (const piece of pieces) {
     parser.write(piece);
     if (parser.position - position > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
     if (handler.enough?.()) return;
