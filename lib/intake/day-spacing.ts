@@ -7,8 +7,9 @@ const SPACINGS: [string, number, number][] = [
   ['quarter of a year', 90, 92],
   ['year', 365, 366],
 ];
-/** Rows from which on their spacing says something: by three gaps a month is told from chance. */
+/** Rows from which on their spacing says something: by three gaps a month is told from chance, other steps by more. */
 const FEWEST_ROWS = 4;
+const FEWEST_OF_ANY = 12;
 
 /** How the days of a record are spaced, where that is regular and wider than a day: "one value a month".
  *  @param days  day numbers with a row, ascending
@@ -20,6 +21,7 @@ export function sparseSpacing(days: ArrayLike<number>): string | null {
   const share = (low: number, high: number) => gaps.filter((gap) => gap >= low && gap <= high).length / gaps.length;
   const named = SPACINGS.find(([, low, high]) => share(low, high) >= 0.9);
   if (named) return `one value a ${named[0]}`;
+  if (days.length < FEWEST_OF_ANY) return null;
   const usual = gaps.toSorted((a, b) => a - b)[gaps.length >> 1];
   return share(usual, usual) >= 0.9 ? `one value every ${usual} days` : null;
 }

@@ -36,11 +36,15 @@ export async function readTable(path: string, head: FileHead, options: ReadFlows
 
 /** The file's own mapping with another quantity's columns laid over. */
 function optionsFor(also: AlsoQuantity, { mapping }: ImportReport, options: ReadFlowsOptions): ReadFlowsOptions {
-  const { quantity, unit, value, flag = null, where } = also;
+  const { quantity, unit, value, flag, where } = also;
   const { also: _, ...own } = mapping;
   return {
     ...options,
-    mapping: { ...own, quantity, unit, value, flag, ...(where === undefined ? {} : { where }) },
+    mapping: {
+      ...{ ...own, quantity, unit, value },
+      ...(flag === undefined ? {} : { flag }),
+      ...(where === undefined ? {} : { where }),
+    },
     unit: undefined,
     onProgress: undefined,
     onRejected: undefined,

@@ -129,7 +129,7 @@ describe('a file of less than a value a day', () => {
     ['a month', Array.from({ length: 6 }, (_, at) => `2001-0${at + 1}-15`), 'one value a month'],
     ['a week', every(7, 6), 'one value a week'],
     ['a year', [1990, 1991, 1992, 1993].map((year) => `${year}-10-01`), 'one value a year'],
-    ['ten days', every(10, 6), 'one value every 10 days'],
+    ['ten days', every(10, 12), 'one value every 10 days'],
   ])('readFlows refuses one value %s as not daily', async (_, days, words) => {
     const { problem } = await refusal(
       table(
@@ -143,6 +143,7 @@ describe('a file of less than a value a day', () => {
   test.each([
     ['three rows', ['2001-01-01', '2001-02-01', '2001-03-01']],
     ['uneven days', ['2001-01-01', '2001-01-20', '2001-03-01', '2001-03-03', '2001-06-09']],
+    ['eleven rows every other day', every(2, 11)],
     ['daily values behind a few monthly ones', ['2001-01-01', '2001-02-01', '2001-03-01', '2001-04-01', '2001-04-02']],
   ])('readFlows takes %s', async (_, days) => {
     const { report } = await read(
