@@ -1,5 +1,7 @@
 import { CodeTable } from './code-table.ts';
+import { stationAbove } from './recognise/lines-above.ts';
 import type { TablePlan } from './recognise/table-plan.ts';
+import { CalendarRows } from './rows/calendar-rows.ts';
 import { FlowRows } from './rows/flow-rows.ts';
 import type { DaySink, RowReader } from './rows/row-reader.ts';
 import { WideRows } from './rows/wide-rows.ts';
@@ -46,8 +48,14 @@ export function tableReading(plan: TablePlan, options: InspectOptions, sink: Day
     return { ...reading, reader: new WideRows(plan, { ...reading, sink }, columns), leftOut: () => 0 };
   }
   const { station } = plan.mapping;
-  const name = station.from === 'given' ? station.code : stationInFileName(options.fileName);
+  const above = station.from === 'lines-above' ? stationAbove(plan.facts, options.knownStations) : null;
+  const name = station.from === 'given' ? station.code : (above ?? stationInFileName(options.fileName));
   const only = plan.places.station < 0 ? stations.add(name) : -1;
+  const { calendar } = plan;
+  if (calendar) {
+    const reader = new CalendarRows({ ...plan, calendar }, { ...reading, sink }, only);
+    return { ...reading, reader, leftOut: () => reader.leftOut };
+  }
   const reader = new FlowRows(plan, { ...reading, sink }, only);
   return { ...reading, reader, leftOut: () => reader.leftOut };
 }

@@ -3,13 +3,29 @@ import type { ColumnRoles, WideColumn } from './assign-columns.ts';
 import { unitProblem } from './find-unit.ts';
 
 /** A question that a mapping answers. */
-export function mappingProblem(file: string, message: string, value?: string): IntakeError {
+export function mappingProblem(
+  file: string,
+  message: string,
+  value?: string,
+  remedy = 'Choose the columns on the screen, or give a mapping such as {"value": {"column": "flow"}}',
+): IntakeError {
   return new IntakeError({
     file,
     ...(value ? { value } : {}),
     message,
-    remedy: 'Choose the columns on the screen, or give a mapping such as {"value": {"column": "flow"}}',
+    remedy,
     needs: 'mapping',
+  });
+}
+
+/** Rows of several quantities, of which none is known to be the flow. */
+export function quantityProblem(file: string, column: string): IntakeError {
+  return new IntakeError({
+    file,
+    value: column,
+    message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
+    remedy: `Give a mapping such as {"where": {"column": "${column}", "equals": "1"}}`,
+    needs: 'quantity',
   });
 }
 
@@ -64,16 +80,7 @@ export function problemsOf(
     problems.push(mappingProblem(file, message, shown));
   }
   if (roles.quantityColumn !== null && !mapping.where) {
-    const name = header?.[roles.quantityColumn] ?? '';
-    problems.push(
-      new IntakeError({
-        file,
-        value: name,
-        message: 'the file holds several quantities, told apart by a column; which of them is the flow is not said',
-        remedy: `Give a mapping such as {"where": {"column": "${name}", "equals": "1"}}`,
-        needs: 'quantity',
-      }),
-    );
+    problems.push(quantityProblem(file, header?.[roles.quantityColumn] ?? ''));
   }
   const twice = wide?.find(({ name }, at) => wide.findIndex((other) => other.name === name) < at);
   if (twice) {

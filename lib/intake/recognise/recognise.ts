@@ -2,6 +2,7 @@ import { type FileHead, LONGEST_LINE, lineEndOf, longLineError } from '../file-b
 import { hasUtf8Mark, refuseUnlessText } from '../text-encoding.ts';
 import { type InspectOptions, IntakeError } from '../types.ts';
 import { commentSign, isComment } from './comment-lines.ts';
+import { planCalendar } from './plan-calendar.ts';
 import { isSettled, planColumns } from './plan-columns.ts';
 import { planFixedWidth } from './plan-fixed.ts';
 import { detectDelimiter, sampleLines } from './sample.ts';
@@ -36,6 +37,8 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
   const asked = options.mapping?.layout;
   if (asked === 'fixed-width') return planFixedWidth(body, context) as TablePlan;
   const delimiter = asked === 'whitespace' ? null : (options.mapping?.delimiter ?? detectDelimiter(body, lineEnd));
+  const calendar = planCalendar(body, delimiter, context);
+  if (calendar !== null) return calendar;
   if (delimiter !== null || asked !== undefined) return planColumns(body, delimiter, context);
   const fixed = () => planFixedWidth(body, context);
   try {

@@ -20,7 +20,7 @@ export function mappingOf(
   const { header, delimiter, above, options } = found;
   const valueColumns = roles.wide?.map(({ value }) => value) ?? (roles.value === null ? [] : [roles.value]);
   const column = (at: number | null) => (at === null ? null : { column: at });
-  const where = quantityFilter(roles, data, above.remarks);
+  const where = roles.quantityColumn === null ? null : quantityFilter(roles.quantityColumn, data, above.remarks);
   return {
     layout: found.layout,
     station: stationOf(roles, options, above.facts),
@@ -77,13 +77,11 @@ export function signsOf(
 }
 
 /** Files that hold several quantities number them in a column; a title line says which number is discharge. */
-function quantityFilter(
-  roles: ColumnRoles,
+export function quantityFilter(
+  column: number,
   data: readonly SampleRow[],
   remarks: readonly string[],
-): Mapping['where'] | null {
-  const column = roles.quantityColumn;
-  if (column === null) return null;
+): NonNullable<Mapping['where']> | null {
   const titled = remarks
     .map((text) => /(?:discharge|flow)[^=]*\(\s*\w+\s*=\s*(\w+)\s*\)/i.exec(text)?.[1])
     .find(Boolean);
