@@ -5,5 +5,7 @@ export async function register(): Promise<void> {
     await recoverJobs();
     const { keepWorkersReady } = await import('./lib/jobs/pool.ts');
     keepWorkersReady();
+    const { startPendingChecks } = await import('./lib/jobs/recover.ts');
+    await startPendingChecks();
   }
 }

@@ -8,7 +8,12 @@ export async function followImport(jobId: string, signal: AbortSignal): Promise<
   for await (const { progress } of followJob(jobId, signal)) {
     const { stage, file, fileNumber, files, share, rowsPerSecond, secondsLeft } = progress as ImportProgress;
     if (stage === 'waiting' || stage === 'recognising' || stage === 'done') continue;
-    const what = stage === 'reading' ? `Reading ${file} (${fileNumber} of ${files})` : 'Storing';
+    const what =
+      stage === 'reading'
+        ? `Reading ${file} (${fileNumber} of ${files})`
+        : stage === 'checking'
+          ? 'Checking the records'
+          : 'Storing';
     if (stderr.isTTY) {
       const rate = stage === 'reading' ? `, ${rowsPerSecond.toLocaleString('en')} rows/s` : '';
       stderr.write(`\r\u001b[K${what}: ${Math.round(share * 100)} %${rate}${timeLeft(secondsLeft)}`);

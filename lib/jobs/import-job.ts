@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { MessageChannel } from 'node:worker_threads';
 import type { KnownStation } from '../intake/types.ts';
 import { knownStations } from '../store/known-stations.ts';
+import { checkUnchecked } from './checks.ts';
 import { NO_PROGRESS } from './import-meter.ts';
 import type { GivenFile, ImportChoices, ImportOutcome, ImportProgress } from './import-types.ts';
 import { FailedWithResult, type JobContext, launchJob } from './live-jobs.ts';
@@ -63,12 +64,35 @@ async function inWorker({ id, signal, report }: JobContext, work: Work) {
       { transfer: [port2] },
     );
     if (outcome.problems.length > 0) throw new FailedWithResult(problemWords(outcome), outcome);
+    if (outcome.regionId !== null)
+      outcome.findings = await findingsOf(outcome.regionId, signal, (share) =>
+        report({ ...last, stage: 'checking', file: null, share }),
+      );
     // The worker's answer may overtake its last message.
     report({ ...last, stage: 'done', file: null, share: 1, secondsLeft: 0 });
     return outcome;
   } finally {
     signal.removeEventListener('abort', cancel);
     port1.close();
+  }
+}
+
+/** Checks what the import touched. The import stands whatever comes of that: after a cancel, or when something goes wrong,
+ *  its records are unchecked till the next check. */
+async function findingsOf(
+  regionId: number,
+  signal: AbortSignal,
+  onShare: (share: number) => void,
+): Promise<ImportOutcome['findings']> {
+  try {
+    const { withFindings, findings } = await checkUnchecked(regionId, {
+      signal,
+      onProgress: ({ share }) => onShare(share),
+    });
+    return { stations: withFindings, findings };
+  } catch (error) {
+    if (!signal.aborted) process.emitWarning(error instanceof Error ? error : String(error));
+    return undefined;
   }
 }
 

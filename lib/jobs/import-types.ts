@@ -51,7 +51,7 @@ export interface GivenFile {
 
 /** Where an import stands; what the event stream of a job carries. */
 export interface ImportProgress {
-  stage: 'waiting' | 'recognising' | 'reading' | 'storing' | 'done';
+  stage: 'waiting' | 'recognising' | 'reading' | 'storing' | 'checking' | 'done';
   /** the file being read, and which of how many */
   file: string | null;
   fileNumber: number;
@@ -99,6 +99,7 @@ export interface ImportOutcome {
   problems: ImportProblem[];
   /** a dry run: `taken` is what would be taken, with import ids of 0 */
   dryRun?: boolean;
-  /** what the checks found on the records that the import touched */
+  /** what the checks found on the records that the import touched: stations with findings, and findings. Absent where they
+   *  were not checked; they are then at the next start or check */
   findings?: { stations: number; findings: number };
 }

@@ -1,5 +1,6 @@
 import { DEAD_AFTER_MS } from '../store/jobs.ts';
 import { recoverStore } from '../store/recover.ts';
+import { launchPendingChecks } from './checks.ts';
 import { discardRejectedRowsOfJob } from './rejected-rows.ts';
 import { discardAbandonedUploads, discardUpload } from './upload-folder.ts';
 
@@ -9,6 +10,11 @@ export async function recoverJobs(): Promise<void> {
   await clearUp();
   const later = setTimeout(() => void clearUp().catch(report), DEAD_AFTER_MS + 1000);
   later.unref();
+}
+
+/** Also for the start of a server: checks what was never checked as it stands, as jobs beside the answering of requests. */
+export async function startPendingChecks(): Promise<void> {
+  await launchPendingChecks().catch(report);
 }
 
 async function clearUp(): Promise<void> {
@@ -21,5 +27,5 @@ async function clearUp(): Promise<void> {
 }
 
 function report(error: unknown): void {
-  process.stderr.write(`Clearing up after unfinished work failed: ${String(error)}\n`);
+  process.stderr.write(`Taking up what was left unfinished failed: ${String(error)}\n`);
 }

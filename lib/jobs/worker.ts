@@ -1,5 +1,6 @@
 /** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
  *  worker starts quickly. */
+export { checkRecords } from './tasks/check-records.ts';
 export { coverage } from './tasks/coverage.ts';
 export { curves } from './tasks/curves.ts';
 export { lookAtFiles } from './tasks/look-at-files.ts';

@@ -1,14 +1,15 @@
 import type { ImportProgress } from '@/lib/jobs/import-types';
 import { count, fixed, percent } from '../format.ts';
 import ui from '../ui.module.css';
-import { sizeText } from './chosen-files.tsx';
 import styles from './import.module.css';
+import { sizeText } from './size-text.ts';
 
 const STAGES: Record<ImportProgress['stage'], string> = {
   waiting: 'Waiting for its turn',
   recognising: 'Looking at the files',
   reading: 'Reading',
   storing: 'Storing',
+  checking: 'Checking the records',
   done: 'Done',
 };
 
@@ -49,20 +50,34 @@ export function UploadBar({ sent, total, onCancel }: { sent: number; total: numb
   );
 }
 
+interface JobProps {
+  progress: Partial<ImportProgress> | null;
+  /** nothing is imported: the files are compared with what stands */
+  trial?: boolean;
+  onCancel(): void;
+}
+
 /** @param progress  as the job tells it; a job that has not begun yet tells nothing */
-export function JobBar({ progress, onCancel }: { progress: Partial<ImportProgress> | null; onCancel(): void }) {
+export function JobBar({ progress, trial = false, onCancel }: JobProps) {
   const { stage = 'waiting', file, fileNumber = 0, files = 0, rows = 0, rowsPerSecond = 0, share = 0 } = progress ?? {};
+  const secondsLeft = progress?.secondsLeft ?? null;
   const details = [
     files > 1 ? `file ${fileNumber} of ${files}` : '',
     rows > 0 ? count(rows, 'row') : '',
     rowsPerSecond > 0 ? `${fixed(rowsPerSecond)} rows a second` : '',
+    secondsLeft === null || stage === 'done' ? '' : timeWords(secondsLeft),
   ].filter(Boolean);
   return (
     <ProgressBar
       title={file ? `${STAGES[stage]} ${file}` : STAGES[stage]}
       share={share}
-      detail={[...details, 'the page may be closed: the import goes on'].join(' · ')}
+      detail={[...details, `the page may be closed: the ${trial ? 'comparison' : 'import'} goes on`].join(' · ')}
       onCancel={onCancel}
     />
   );
+}
+
+function timeWords(seconds: number): string {
+  if (seconds < 90) return `about ${count(Math.max(1, Math.round(seconds)), 'second')} left`;
+  return `about ${count(Math.round(seconds / 60), 'minute')} left`;
 }
