@@ -1,12 +1,19 @@
 import { ImportForm } from '@/app/components/import-form';
+import { uploadsOf } from '@/lib/jobs/open-upload';
 import { listRegions } from '@/lib/store/regions';
 import { Header } from './components/header.tsx';
+import { waitingOf } from './components/import/waiting.ts';
 import styles from './page.module.css';
 import { RegionTable } from './region-table.tsx';
 
+interface Props {
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+}
+
 /** Regions: the list, and a way to make one by dropping files. */
-export default async function RegionsPage() {
-  const regions = await listRegions();
+export default async function RegionsPage({ searchParams }: Props) {
+  const [regions, waiting, query] = await Promise.all([listRegions(), uploadsOf(null), searchParams]);
+  const upload = [query.upload].flat()[0];
   return (
     <>
       <Header />
@@ -27,22 +34,26 @@ export default async function RegionsPage() {
         )}
         <section aria-labelledby="new-region" className={styles.make}>
           <h2 id="new-region">{regions.length > 0 ? 'Make another region' : 'Make the first region'}</h2>
-          <div className={styles.steps}>
-            <ol>
-              <li>
-                <b>Daily flows</b>, the one thing needed: text files with a date and a flow, one for all stations or one
-                each. Layout and dates are recognised by content; where a unit is not written, you are asked.
-              </li>
-              <li>
-                <b>A registry of stations</b> as CSV: code, name, latitude, longitude, drainage area. It puts them on
-                the map and lets catchments of unlike size be compared.
-              </li>
-              <li>
-                <b>Rivers and catchments</b> as GeoJSON, to draw the ground.
-              </li>
-            </ol>
-            <ImportForm region={null} />
-          </div>
+          <ImportForm
+            region={null}
+            openUpload={upload ?? null}
+            waiting={waiting.map(waitingOf)}
+            beside={
+              <ol className={styles.steps}>
+                <li>
+                  <b>Daily flows</b>, the one thing needed: text, workbooks or WaterML, one file for all stations or one
+                  each. Layout and dates are recognised by content; where a unit is not written, you are asked.
+                </li>
+                <li>
+                  <b>A registry of stations</b> as CSV or GeoJSON: code, name, latitude, longitude, drainage area. It
+                  puts them on the map and lets catchments of unlike size be compared.
+                </li>
+                <li>
+                  <b>Rivers and catchments</b> as GeoJSON, to draw the ground.
+                </li>
+              </ol>
+            }
+          />
         </section>
       </main>
     </>

@@ -29,8 +29,8 @@ export async function viewUpload(id: string): Promise<UploadView | null> {
   return session && viewOf(session, await slugs());
 }
 
-/** The uploads that wait for a region, oldest first. */
-export async function uploadsOf(regionId: number): Promise<UploadView[]> {
+/** The uploads that wait for a region, or for one to be made (null), oldest first. */
+export async function uploadsOf(regionId: number | null): Promise<UploadView[]> {
   const sessions = (await listSessions()).filter((session) => session.regionId === regionId);
   const bySlug = await slugs();
   return Promise.all(sessions.map((session) => viewOf(session, bySlug)));

@@ -1,35 +1,28 @@
-import type { ImportReport, Layout } from '@/lib/intake/types';
+import type { ImportReport } from '@/lib/intake/types';
 import type { TakenFile } from '@/lib/jobs/import-types';
 import { count, fixed, significant } from '../format.ts';
 import { ScrollFrame } from '../scroll-frame.tsx';
 import styles from './import.module.css';
+import { revisionWords } from './revisions-table.tsx';
 import { unitText } from './unit-text.ts';
-
-const LAYOUT_WORDS: Record<Layout, string> = {
-  long: 'one row a station and day',
-  wide: 'one row a day, one column a station',
-  'agency-tab': 'tab-delimited with comment lines and qualifier columns',
-  whitespace: 'station, year, month, day, flow, parted by blanks',
-  'fixed-width': 'columns of fixed width',
-  'month-rows': 'a row a month, a column a day',
-  'day-rows': 'a row a day, a column a month',
-  'waterml-2': 'WaterML 2.0',
-  'waterml-1': 'WaterML 1.1',
-  'waterml-json': 'WaterML 1.1 as JSON',
-};
+import { LAYOUT_WORDS, QUANTITY_WORDS } from './words.ts';
 
 /** Rejected rows shown before the CSV file has to be opened. */
 const SHOWN_ROWS = 10;
 const SHOWN_STATIONS = 12;
 
-/** What became of one file. */
-export function FileReport({ file, rejectedHref }: { file: TakenFile; rejectedHref: string }) {
+/** What became of one file.
+ *  @param rejectedHref  where all rejected rows can be had; null while nothing has been imported */
+export function FileReport({ file, rejectedHref }: { file: TakenFile; rejectedHref: string | null }) {
   const { report } = file;
   return (
     <section className={styles.report} aria-label={`Report on ${file.file}`}>
       <h3>{file.file}</h3>
       <p className={styles.summary}>{report ? flowSummary(report) : file.summary}</p>
       {report && <Counts report={report} rejectedHref={rejectedHref} />}
+      {file.revisions && revisionWords(file.revisions) && (
+        <p className={styles.summary}>Against what stood before: {revisionWords(file.revisions)}.</p>
+      )}
       {[...new Set([...file.warnings, ...(report?.warnings ?? [])])].map((warning) => (
         <p key={warning} className={styles.caution}>
           <strong>Note</strong> {warning}
@@ -42,10 +35,15 @@ export function FileReport({ file, rejectedHref }: { file: TakenFile; rejectedHr
 }
 
 function flowSummary(report: ImportReport): string {
-  return `Daily flows in ${unitText(report.unit)}: ${LAYOUT_WORDS[report.layout]}.`;
+  const quantities = [...new Set(report.stations.map(({ quantity = 'flow' }) => QUANTITY_WORDS[quantity]))];
+  const what =
+    quantities.length > 1
+      ? `Daily values of ${quantities.join(', ')}`
+      : `Daily ${report.mapping.quantity && report.mapping.quantity !== 'flow' ? QUANTITY_WORDS[report.mapping.quantity] : 'flows'}`;
+  return `${what} in ${unitText(report.unit)}: ${LAYOUT_WORDS[report.layout]}.`;
 }
 
-function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: string }) {
+function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: string | null }) {
   return (
     <dl className={styles.counts}>
       <div>
@@ -58,7 +56,13 @@ function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: 
       </div>
       <div data-attention={report.rejectedTotal > 0 || undefined}>
         <dt>rejected</dt>
-        <dd>{report.rejectedTotal > 0 ? <a href={rejectedHref}>{fixed(report.rejectedTotal)}</a> : '0'}</dd>
+        <dd>
+          {report.rejectedTotal > 0 && rejectedHref ? (
+            <a href={rejectedHref}>{fixed(report.rejectedTotal)}</a>
+          ) : (
+            fixed(report.rejectedTotal)
+          )}
+        </dd>
       </div>
       <div>
         <dt>stations</dt>
@@ -72,7 +76,7 @@ function Counts({ report, rejectedHref }: { report: ImportReport; rejectedHref: 
   );
 }
 
-function Rejected({ report, href }: { report: ImportReport; href: string }) {
+function Rejected({ report, href }: { report: ImportReport; href: string | null }) {
   if (report.rejectedTotal === 0) return null;
   const rows = report.rejected.slice(0, SHOWN_ROWS);
   return (
@@ -82,9 +86,11 @@ function Rejected({ report, href }: { report: ImportReport; href: string }) {
           {report.rejectedTotal > rows.length
             ? `The first ${rows.length} of ${count(report.rejectedTotal, 'rejected row')}. `
             : `${count(report.rejectedTotal, 'rejected row')}. `}
-          <a href={href} download>
-            All of them as CSV
-          </a>
+          {href && (
+            <a href={href} download>
+              All of them as CSV
+            </a>
+          )}
         </caption>
         <thead>
           <tr>
@@ -135,8 +141,11 @@ function Stations({ report }: { report: ImportReport }) {
           </thead>
           <tbody>
             {stations.map((station) => (
-              <tr key={station.code}>
-                <th scope="row">{station.code}</th>
+              <tr key={`${station.code} ${station.quantity ?? 'flow'}`}>
+                <th scope="row">
+                  {station.code}
+                  {station.quantity && station.quantity !== 'flow' && `, ${QUANTITY_WORDS[station.quantity]}`}
+                </th>
                 <td>{fixed(station.values)}</td>
                 <td>{fixed(station.missing)}</td>
                 <td>{station.first ?? '–'}</td>

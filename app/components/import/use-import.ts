@@ -1,103 +1,204 @@
 'use client';
-import { useCallback, useRef, useState } from 'react';
-import type { ImportChoices, ImportOutcome } from '@/lib/jobs/import-types';
-import { type Answers, withAnswers } from './answers.ts';
-import { createRegion, UploadCancelled, type UploadHandle, upload } from './upload.ts';
-import { type ImportJob, useJob } from './use-job.ts';
+import { useCallback, useEffect, useRef, useState } from 'react';
+import type { ImportChoices, ImportOutcome, ImportProblem } from '@/lib/jobs/import-types';
+import type { UploadedFile, UploadView } from '@/lib/jobs/upload-types';
+import * as client from './upload-client.ts';
+import { fetchJob, type ImportJob, isOver, useJob } from './use-job.ts';
+import { wordsOf } from './use-looks.ts';
 
 /** Where an import on the screen stands. */
 export type ImportState =
-  | { stage: 'choosing'; error: string | null }
+  | { stage: 'choosing'; error: string | null; cancelled?: boolean }
   | { stage: 'sending'; sent: number; total: number }
-  | { stage: 'working'; jobId: string }
-  | { stage: 'taken'; outcome: ImportOutcome }
+  | { stage: 'opening' }
+  | { stage: 'mapping'; error: string | null; cancelled?: boolean }
+  | { stage: 'working'; jobId: string; dryRun: boolean }
+  /** a trial has told what would come of it, or unlike values wait for a rule */
+  | { stage: 'review'; outcome: ImportOutcome }
+  /** files that are no longer at hand were not taken */
   | { stage: 'refused'; outcome: ImportOutcome; error: string | null }
-  | { stage: 'cancelled' };
+  | { stage: 'taken'; outcome: ImportOutcome };
 
 interface Options {
-  /** null: a region is made first, of the name given to `start` */
+  /** null: the import makes a region */
   region: string | null;
   /** a job that was running when the page was opened */
   runningJob: string | null;
+  /** an upload that waits, to go on with */
+  openUpload: string | null;
   /** called when files were taken */
-  onTaken(slug: string): void;
+  onTaken(): void;
 }
 
-/** One import from chosen files to report, with answers and further tries in between. */
-export function useImport({ region, runningJob, onTaken }: Options) {
-  const [state, setState] = useState<ImportState>(
-    runningJob ? { stage: 'working', jobId: runningJob } : { stage: 'choosing', error: null },
+/** What of an import is chosen beside its files. */
+export interface Order {
+  by: string;
+  /** of the region to be made */
+  name: string;
+  rule?: ImportChoices['rule'];
+}
+
+/** One import from chosen files to report: sending, looking, trying, and what became of it. The files stay on the server
+ *  in between, and the address names them, so that the page may be closed and opened again. */
+export function useImport({ region, runningJob, openUpload, onTaken }: Options) {
+  const [state, setState] = useState<ImportState>(() =>
+    openUpload
+      ? { stage: 'opening' }
+      : runningJob
+        ? { stage: 'working', jobId: runningJob, dryRun: false }
+        : { stage: 'choosing', error: null },
   );
-  const [files, setFiles] = useState<File[]>([]);
-  const [slug, setSlug] = useState(region);
-  const choices = useRef<ImportChoices>({});
-  const handle = useRef<UploadHandle | null>(null);
+  const [upload, setUpload] = useState<UploadView | null>(null);
+  const [leftOut, setLeftOut] = useState<ReadonlySet<string>>(new Set());
+  const [refusals, setRefusals] = useState<Record<string, ImportProblem>>({});
+  const [madeRegion, setMadeRegion] = useState<string | null>(null);
+  const sending = useRef<client.Sending | null>(null);
+
+  const setFiles = useCallback((change: (now: readonly UploadedFile[]) => readonly UploadedFile[]) => {
+    setUpload((now) => now && { ...now, files: [...change(now.files)] });
+  }, []);
+
+  const show = useCallback((view: UploadView | null) => {
+    setUpload(view);
+    nameInAddress(view?.id ?? null);
+  }, []);
 
   const onOver = useCallback(
-    (job: ImportJob) => {
+    (job: ImportJob, dryRun: boolean, view: UploadView | null) => {
       const outcome = job.result ?? { taken: [], problems: [] };
-      if (job.state === 'cancelled') setState({ stage: 'cancelled' });
-      else if (job.state === 'failed') setState({ stage: 'refused', outcome, error: job.error });
-      else {
+      const lost = job.state === 'failed' && job.result === null ? (job.error ?? 'The import broke off.') : null;
+      if (job.state === 'cancelled') {
+        setState({ stage: view ? 'mapping' : 'choosing', error: null, cancelled: true });
+      } else if (job.state === 'failed') {
+        setRefusals(Object.fromEntries(outcome.problems.map((problem) => [problem.file, problem])));
+        const toReview = outcome.problems.length > 0 && outcome.problems.every(asksForRule);
+        if (!view) setState({ stage: 'refused', outcome, error: job.error });
+        else if (toReview) setState({ stage: 'review', outcome });
+        else setState({ stage: 'mapping', error: lost });
+      } else if (dryRun) {
+        setState({ stage: 'review', outcome });
+      } else {
         setState({ stage: 'taken', outcome });
-        setFiles([]);
-        if (slug) onTaken(slug);
+        show(null);
+        setRefusals({});
+        setLeftOut(new Set());
+        if (region === null) void slugOfRegion(job.result?.regionId ?? null).then(setMadeRegion);
+        onTaken();
       }
     },
-    [slug, onTaken],
+    [region, onTaken, show],
   );
-  const job = useJob(state.stage === 'working' ? state.jobId : null, onOver);
+  const working = state.stage === 'working' ? state : null;
+  const job = useJob(working?.jobId ?? null, (over) => onOver(over, working?.dryRun ?? false, upload));
 
-  const send = async (target: string, sending: readonly File[]) => {
-    const total = sending.reduce((sum, file) => sum + file.size, 0);
-    setState({ stage: 'sending', sent: 0, total });
-    handle.current = upload(target, sending, choices.current, (sent, all) =>
-      setState((now) => (now.stage === 'sending' ? { stage: 'sending', sent, total: all } : now)),
-    );
-    try {
-      setState({ stage: 'working', jobId: await handle.current.job });
-    } catch (error) {
-      if (error instanceof UploadCancelled) setState({ stage: 'cancelled' });
-      else setState({ stage: 'choosing', error: error instanceof Error ? error.message : String(error) });
-    }
-  };
+  const [toOpen, setToOpen] = useState(openUpload);
+  useEffect(() => {
+    if (toOpen === null) return;
+    let gone = false;
+    const open = async () => {
+      const view = await client.fetchUpload(toOpen);
+      const last = view.job && (await fetchJob(view.job.id));
+      if (gone) return;
+      setToOpen(null);
+      show(view);
+      if (!last || !view.job) setState({ stage: 'mapping', error: null });
+      else if (isOver(last)) onOver(last, view.job.dryRun, view);
+      else setState({ stage: 'working', jobId: last.id, dryRun: view.job.dryRun });
+    };
+    open().catch((error: unknown) => {
+      if (gone) return;
+      setToOpen(null);
+      nameInAddress(null);
+      setState({ stage: 'choosing', error: wordsOf(error) });
+    });
+    return () => {
+      gone = true;
+    };
+  }, [toOpen, show, onOver]);
 
   return {
-    state,
-    job,
-    files,
-    slug,
-    /** adds files; one of the same name takes the place of the earlier one */
-    addFiles(more: readonly File[]) {
-      const names = new Set(more.map((file) => file.name));
-      setFiles((now) => [...now.filter((file) => !names.has(file.name)), ...more]);
-      if (state.stage === 'taken' || state.stage === 'cancelled') setState({ stage: 'choosing', error: null });
-    },
-    removeFile: (file: File) => setFiles((now) => now.filter((other) => other !== file)),
-    async start(first: ImportChoices, name?: string) {
-      choices.current = first;
+    ...{ state, job, upload, setFiles, leftOut, refusals, madeRegion },
+    /** sends files: those of an upload that waits are joined by them */
+    async send(files: readonly File[]) {
+      const address = upload ? client.moreFilesAddress(upload.id) : client.uploadsAddress(region);
+      const total = files.reduce((sum, file) => sum + file.size, 0);
+      setState({ stage: 'sending', sent: 0, total });
+      sending.current = client.sendFiles(address, files, (sent, all) =>
+        setState((now) => (now.stage === 'sending' ? { stage: 'sending', sent, total: all } : now)),
+      );
       try {
-        const target = slug ?? (await createRegion(name ?? ''));
-        setSlug(target);
-        await send(target, files);
+        show(await sending.current.upload);
+        setState({ stage: 'mapping', error: null });
       } catch (error) {
-        setState({ stage: 'choosing', error: error instanceof Error ? error.message : String(error) });
+        const cancelled = error instanceof client.UploadCancelled;
+        setState({ stage: upload ? 'mapping' : 'choosing', error: cancelled ? null : wordsOf(error), cancelled });
       }
     },
-    async retry(answers: Answers) {
-      if (state.stage !== 'refused' || !slug) return;
-      choices.current = withAnswers(choices.current, state.outcome.problems, answers);
-      const kept = files.filter((file) => !answers[file.name]?.leaveOut);
-      setFiles(kept);
-      if (kept.length > 0) await send(slug, kept);
-      else setState({ stage: 'choosing', error: null });
+    /** goes on with an upload that waits */
+    open(id: string) {
+      setState({ stage: 'opening' });
+      setToOpen(id);
     },
-    async cancel() {
-      if (state.stage === 'sending') handle.current?.cancel();
-      else if (state.stage === 'working') {
-        await fetch(`/api/jobs/${encodeURIComponent(state.jobId)}`, { method: 'DELETE' }).catch(() => null);
+    cancelSending: () => sending.current?.cancel(),
+    leaveOut(file: string, out: boolean) {
+      setLeftOut((now) => new Set(out ? [...now, file] : [...now].filter((other) => other !== file)));
+    },
+    /** the stations that flows may name have changed: which files are to be looked at anew, the server knows */
+    async refresh() {
+      if (!upload) return;
+      const view = await client.fetchUpload(upload.id).catch(() => null);
+      if (view) setUpload(view);
+    },
+    /** what an import said of these files is of no account once they are read otherwise */
+    forgetRefusals(files: readonly string[]) {
+      setRefusals((now) => Object.fromEntries(Object.entries(now).filter(([file]) => !files.includes(file))));
+    },
+    fail: (error: string) => setState((now) => (now.stage === 'mapping' ? { ...now, error } : now)),
+    /** starts the import, or a trial of it that changes nothing */
+    async start({ by, name, rule }: Order, dryRun: boolean) {
+      if (!upload) return;
+      setRefusals({});
+      // A trial counts what is unlike and needs no rule for it; that which changes nothing stands for all.
+      const asked = dryRun ? 'keep' : rule;
+      const choices: ImportChoices = { ...(by ? { by } : {}), ...(asked ? { rule: asked } : {}) };
+      const target = region === null ? { region: { name } } : {};
+      try {
+        const jobId = await client.startImport(upload.id, { choices, leaveOut: [...leftOut], dryRun, ...target });
+        setState({ stage: 'working', jobId, dryRun });
+      } catch (error) {
+        setState({ stage: 'mapping', error: wordsOf(error) });
       }
     },
+    async cancelJob() {
+      if (!working) return;
+      // a job that cannot be cancelled any more tells its end itself
+      await client.cancelJob(working.jobId).catch(() => undefined);
+    },
+    async giveUp() {
+      if (upload) await client.discardUpload(upload.id).catch(() => undefined);
+      show(null);
+      setRefusals({});
+      setLeftOut(new Set());
+      setState({ stage: 'choosing', error: null });
+    },
+    backToFiles: () => setState({ stage: 'mapping', error: null }),
     again: () => setState({ stage: 'choosing', error: null }),
   };
+}
+
+const asksForRule = ({ problem }: ImportProblem): boolean => problem?.needs === 'revise';
+
+/** The address names the upload, so that a page opened anew goes on with it. */
+function nameInAddress(id: string | null): void {
+  const address = new URL(window.location.href);
+  if (id === null) address.searchParams.delete('upload');
+  else address.searchParams.set('upload', id);
+  window.history.replaceState(null, '', address);
+}
+
+/** Slug of the region that an import has made. */
+async function slugOfRegion(id: number | null): Promise<string | null> {
+  const response = await fetch('/api/regions', { cache: 'no-store' }).catch(() => null);
+  if (!response?.ok) return null;
+  return ((await response.json()) as { id: number; slug: string }[]).find((region) => region.id === id)?.slug ?? null;
 }

@@ -1,7 +1,11 @@
 import Link from 'next/link';
 import { count, fixed } from '@/app/components/format';
+import { revisionWords } from '@/app/components/import/revisions-table';
 import { unitText } from '@/app/components/import/unit-text';
+import { RULE_WORDS } from '@/app/components/import/words';
 import { ScrollFrame } from '@/app/components/scroll-frame';
+import type { OverlapRule } from '@/lib/store/lay-parts';
+import type { Revisions } from '@/lib/store/revisions';
 import styles from './import-page.module.css';
 import { UndoImport } from './undo-import';
 
@@ -16,6 +20,10 @@ export interface ListedImport {
   rows: number;
   accepted: number;
   rejected: number;
+  sha256: string;
+  rule: OverlapRule;
+  /** what it did to days that stood; null where nobody counted */
+  revisions: Revisions | null;
   /** is being taken back just now */
   undoing: boolean;
 }
@@ -47,6 +55,8 @@ export function ImportHistory({ slug, imports, shown, query }: Props) {
                 <th scope="col">What</th>
                 <th scope="col">When (UTC)</th>
                 <th scope="col">By</th>
+                <th scope="col">Hash</th>
+                <th scope="col">Against what stood</th>
                 <th scope="col">Rows</th>
                 <th scope="col">Accepted</th>
                 <th scope="col">Rejected</th>
@@ -73,6 +83,10 @@ export function ImportHistory({ slug, imports, shown, query }: Props) {
                     <time dateTime={entry.when}>{entry.when.slice(0, 16).replace('T', ' ')}</time>
                   </td>
                   <td>{entry.by || '–'}</td>
+                  <td>
+                    <code title={`SHA-256 of the file: ${entry.sha256}`}>{entry.sha256.slice(0, 8)}</code>
+                  </td>
+                  <td className={styles.against}>{againstWords(entry)}</td>
                   <td>{fixed(entry.rows)}</td>
                   <td>{fixed(entry.accepted)}</td>
                   <td>
@@ -88,13 +102,7 @@ export function ImportHistory({ slug, imports, shown, query }: Props) {
                       '0'
                     )}
                   </td>
-                  <td>
-                    {entry.undoing ? (
-                      'being undone'
-                    ) : (
-                      <UndoImport slug={slug} id={entry.id} fileName={entry.fileName} kind={entry.kind} />
-                    )}
-                  </td>
+                  <td>{entry.undoing ? 'being undone' : <UndoImport slug={slug} entry={entry} />}</td>
                 </tr>
               ))}
             </tbody>
@@ -109,4 +117,11 @@ function reportHref(query: string, id: number): string {
   const next = new URLSearchParams(query);
   next.set('report', String(id));
   return `?${next}`;
+}
+
+/** Example: "365 days added, 5 of 7 unlike days took the new value (take the new values)" */
+function againstWords({ revisions, rule }: ListedImport): string {
+  const words = revisions ? revisionWords(revisions) : '';
+  if (!words) return '–';
+  return revisions && revisions.unlike > 0 ? `${words} (${RULE_WORDS[rule].toLowerCase()})` : words;
 }

@@ -1,8 +1,10 @@
 import type { Metadata } from 'next';
 import { Header } from '@/app/components/header';
 import { FileReport } from '@/app/components/import/report-view';
+import { waitingOf } from '@/app/components/import/waiting';
 import { ImportForm } from '@/app/components/import-form';
 import type { ImportReport } from '@/lib/intake/types';
+import { uploadsOf } from '@/lib/jobs/open-upload';
 import { getImportReport, listImports } from '@/lib/store/imports';
 import { listJobs } from '@/lib/store/jobs';
 import { type PageQuery, pageRequest } from '../page-request';
@@ -19,8 +21,14 @@ interface Props {
 /** Bring files into a region, see what became of them, and take an import back. */
 export default async function ImportPage({ params, searchParams }: Props) {
   const { region, query } = await pageRequest((await params).region, await searchParams);
-  const [imports, jobs] = await Promise.all([listImports(region.id), listJobs({ regionId: region.id, limit: 20 })]);
+  const [imports, jobs, uploads] = await Promise.all([
+    listImports(region.id),
+    listJobs({ regionId: region.id, limit: 20 }),
+    uploadsOf(region.id),
+  ]);
   const running = jobs.find((job) => job.kind === 'import' && (job.state === 'waiting' || job.state === 'running'));
+  const importing = uploads.find(({ job }) => job && job.id === running?.id);
+  const upload = importing?.id ?? query.get('upload');
   const asked = imports.find((entry) => String(entry.id) === query.get('report'));
   const past = asked?.kind === 'flows' ? await getImportReport(region.id, asked.id) : null;
   return (
@@ -34,7 +42,13 @@ export default async function ImportPage({ params, searchParams }: Props) {
             silence: each rejected row is listed with its reason.
           </p>
         </header>
-        <ImportForm region={region.slug} runningJob={running?.id ?? null} />
+        <ImportForm
+          region={region.slug}
+          runningJob={running?.id ?? null}
+          openUpload={upload}
+          waiting={uploads.map(waitingOf)}
+          hasRecords={imports.some(({ kind }) => kind === 'flows')}
+        />
         {asked && past && (
           <FileReport
             file={{
@@ -44,7 +58,7 @@ export default async function ImportPage({ params, searchParams }: Props) {
               summary: '',
               report: past.report as ImportReport,
               warnings: [],
-              revisions: null,
+              revisions: asked.revisions,
             }}
             rejectedHref={`/api/regions/${encodeURIComponent(region.slug)}/imports/${asked.id}/rejected`}
           />
@@ -64,6 +78,9 @@ export default async function ImportPage({ params, searchParams }: Props) {
             accepted: entry.accepted,
             rejected: entry.rejected,
             undoing: entry.undoing,
+            sha256: entry.sha256,
+            rule: entry.rule,
+            revisions: entry.revisions,
           }))}
         />
       </main>

@@ -2,15 +2,15 @@
 import { AlertDialog } from '@base-ui/react/alert-dialog';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
+import { count } from '@/app/components/format';
 import { ErrorNote } from '@/app/components/notes';
 import ui from '@/app/components/ui.module.css';
+import type { ListedImport } from './import-history.tsx';
 import styles from './import-page.module.css';
 
 interface Props {
   slug: string;
-  id: number;
-  fileName: string;
-  kind: string;
+  entry: ListedImport;
 }
 
 const EFFECTS: Record<string, string> = {
@@ -21,7 +21,8 @@ const EFFECTS: Record<string, string> = {
 };
 
 /** Takes an import back, after asking. The answer stays in the dialog when it could not be done. */
-export function UndoImport({ slug, id, fileName, kind }: Props) {
+export function UndoImport({ slug, entry }: Props) {
+  const { id, fileName, kind } = entry;
   const router = useRouter();
   const [open, setOpen] = useState(false);
   const [busy, setBusy] = useState(false);
@@ -49,7 +50,9 @@ export function UndoImport({ slug, id, fileName, kind }: Props) {
         <AlertDialog.Backdrop className={styles.backdrop} />
         <AlertDialog.Popup className={styles.dialog}>
           <AlertDialog.Title render={<h2>Undo the import of {fileName}?</h2>} />
-          <AlertDialog.Description>{EFFECTS[kind] ?? 'What it brought goes.'}</AlertDialog.Description>
+          <AlertDialog.Description>
+            {[EFFECTS[kind] ?? 'What it brought goes.', ...lossWords(entry)].join(' ')}
+          </AlertDialog.Description>
           {problem && <ErrorNote>{problem}</ErrorNote>}
           <div className={styles.dialogButtons}>
             <AlertDialog.Close className={ui.button} disabled={busy}>
@@ -63,4 +66,16 @@ export function UndoImport({ slug, id, fileName, kind }: Props) {
       </AlertDialog.Portal>
     </AlertDialog.Root>
   );
+}
+
+/** What goes and what comes back, in numbers, as far as the import counted them when it was taken. */
+function lossWords({ revisions }: ListedImport): string[] {
+  if (revisions === null) return [];
+  const gained = revisions.extended + revisions.filled;
+  return [
+    gained > 0 ? `${count(gained, 'day')} had no value before it.` : '',
+    revisions.revised > 0
+      ? `${count(revisions.revised, 'value')} that it changed ${revisions.revised === 1 ? 'goes' : 'go'} back to what stood.`
+      : '',
+  ].filter(Boolean);
 }

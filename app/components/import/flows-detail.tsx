@@ -1,0 +1,141 @@
+'use client';
+import { useState } from 'react';
+import type { FoundFacts } from '@/lib/intake/types';
+import type { FileChoices } from '@/lib/jobs/import-types';
+import type { PreviewProblem } from '@/lib/jobs/upload-types';
+import { significant } from '../format.ts';
+import { askedOf, type Control, RARE } from './asked.ts';
+import { type ChoicesEdit, shownMapping } from './choices-edit.ts';
+import { CodeMatches } from './code-matches.tsx';
+import { Columns } from './columns.tsx';
+import { Choice } from './field.tsx';
+import { MainControls } from './main-controls.tsx';
+import styles from './mapping.module.css';
+import { OtherQuantities } from './other-quantities.tsx';
+import { ProblemNote } from './problem-note.tsx';
+import { RareControls } from './rare-controls.tsx';
+import { SavedMappings } from './saved-mappings.tsx';
+import type { FileSight } from './use-looks.ts';
+import { LAYOUT_WORDS, TEXT_LAYOUTS } from './words.ts';
+
+interface Props {
+  sight: FileSight;
+  /** as said so far; the sight may be of a moment before */
+  choices: FileChoices;
+  problems: readonly PreviewProblem[];
+  region: string | null;
+  change(edit: ChoicesEdit): void;
+}
+
+/** How a file of daily values is read: every term of it, and the first rows as they are understood by these. */
+export function FlowsDetail({ sight, choices, problems, region, change }: Props) {
+  const [changed, setChanged] = useState<Control | null>(null);
+  /** counts the changes that come from elsewhere than the controls, which then begin anew */
+  const [round, setRound] = useState(0);
+  const { inspection } = sight;
+  const recognised = inspection?.mapping ?? null;
+  const asked = askedOf(problems, !sight.stale, changed);
+  const renewed = (edit: ChoicesEdit) => {
+    setRound(round + 1);
+    change(edit);
+  };
+  const notes = problems.map((problem) => (
+    <ProblemNote key={problem.message} problem={problem} answeredHere={recognised !== null && isAnswerable(problem)}>
+      {problem.problem.needs === 'codes' && (
+        <CodeMatches pairs={problem.problem.pairs ?? []} onTake={() => change({ matchCodes: true })} />
+      )}
+    </ProblemNote>
+  ));
+  if (!inspection || !recognised) {
+    return (
+      <>
+        {notes}
+        <Unrecognised sight={sight} choices={choices} change={change} />
+      </>
+    );
+  }
+  const mapping = shownMapping(recognised, choices);
+  const say = (control: Control, edit: ChoicesEdit) => {
+    setChanged(control);
+    change(edit);
+  };
+  const controls = { inspection, mapping, choices, asked, change: say };
+  const isSaid = Object.keys(choices).length > 0;
+  return (
+    <>
+      {notes}
+      <div className={styles.controls} key={`main ${round}`}>
+        <MainControls {...controls} />
+      </div>
+      <details className={styles.rare} open={RARE.some((control) => asked[control] !== undefined) || undefined}>
+        <summary>Signs, missing values and other terms</summary>
+        <div className={styles.controls} key={`rare ${round}`}>
+          <RareControls {...controls} />
+        </div>
+      </details>
+      <Columns key={`columns ${round}`} {...controls} sight={sight} renewed={renewed} />
+      <OtherQuantities
+        key={`also ${round}`}
+        others={inspection.others}
+        mapping={mapping}
+        asked={asked.also}
+        onChange={(also) => say('also', { mapping: { also } })}
+      />
+      <Facts facts={inspection.facts} />
+      {isSaid && (
+        <p>
+          <button type="button" className={styles.reset} onClick={() => renewed({ reset: true })}>
+            Go back to what was recognised
+          </button>
+        </p>
+      )}
+      <SavedMappings region={region} mapping={mapping} onUse={(saved) => renewed({ reset: true, mapping: saved })} />
+    </>
+  );
+}
+
+/** Needs that a control on this screen answers; a missing area has to come in a station list. */
+const isAnswerable = ({ problem }: PreviewProblem): boolean =>
+  problem.needs !== undefined && problem.needs !== 'area' && problem.needs !== 'revise';
+
+/** A file whose layout is not told: a person may say what it is. */
+function Unrecognised({ sight, choices, change }: Pick<Props, 'sight' | 'choices' | 'change'>) {
+  const layout = TEXT_LAYOUTS.find((one) => one === choices.mapping?.layout) ?? null;
+  return (
+    <>
+      <div className={styles.controls}>
+        <Choice
+          label="Layout"
+          none="as recognised"
+          value={layout}
+          options={TEXT_LAYOUTS.map((value) => ({ value, words: LAYOUT_WORDS[value] }))}
+          onChange={(value) => change({ mapping: { layout: value ?? undefined } })}
+        />
+      </div>
+      {sight.lines.length > 0 && <pre className={styles.lines}>{sight.lines.join('\n')}</pre>}
+    </>
+  );
+}
+
+/** What the file says of its stations beside their days. */
+function Facts({ facts }: { facts: readonly FoundFacts[] }) {
+  if (facts.length === 0) return null;
+  return (
+    <section aria-label="Stations as the file describes them" className={styles.facts}>
+      <h4>The file says of its stations</h4>
+      <ul>
+        {facts.slice(0, 10).map((fact) => (
+          <li key={fact.code}>
+            <b>{fact.code}</b> {factWords(fact)}
+          </li>
+        ))}
+      </ul>
+    </section>
+  );
+}
+
+function factWords({ name, river, latitude, longitude, areaKm2 }: FoundFacts): string {
+  const place = latitude === undefined || longitude === undefined ? '' : `at ${latitude}, ${longitude}`;
+  const area = areaKm2 === undefined ? '' : `${significant(areaKm2, 5)} km²`;
+  return [name, river, place, area].filter(Boolean).join(', ');
+}

@@ -1,0 +1,46 @@
+import { expect, test } from 'vitest';
+import { firstRows } from '@/app/components/import/first-rows';
+import type { Inspection, UnderstoodRow } from '@/lib/intake/types';
+
+const value = (row: number, station = 'A'): UnderstoodRow => ({
+  ...{ row, station, date: '2001-01-01', value: 1, flag: '', bits: 0, problem: null },
+});
+const inspection = (change: Partial<Inspection>): Omit<Inspection, 'problems'> => ({
+  ...{ mapping: null, header: null, preview: [], valueCandidates: [], understood: [], others: [], facts: [] },
+  ...{ sheets: null, ...change },
+});
+
+test('firstRows puts each line beside its values and leaves the header away', () => {
+  const rows = firstRows(
+    inspection({
+      header: ['date', 'A', 'B'],
+      preview: [
+        ['date', 'A', 'B'],
+        ['1', '2', '3'],
+        ['x', '', ''],
+      ],
+      previewLines: [4, 5, 7],
+      understood: [value(5, 'A'), value(5, 'B')],
+    }),
+  );
+  expect(rows.map(({ line, fields, values }) => [line, fields?.[0], values.map(({ station }) => station)])).toEqual([
+    [5, '1', ['A', 'B']],
+    [7, 'x', []],
+  ]);
+});
+
+test('firstRows shows values whose line is not shown, and of a document the values alone', () => {
+  const rows = firstRows(inspection({ understood: [value(1), value(2)] }));
+  expect(rows.map(({ line, fields, values }) => [line, fields, values.length])).toEqual([
+    [1, null, 1],
+    [2, null, 1],
+  ]);
+});
+
+test('firstRows keeps to what fits on a screen: twelve values of a line, sixty in all', () => {
+  const understood = Array.from({ length: 20 }, (_, line) =>
+    Array.from({ length: 31 }, (_day, day) => value(line + 1, String(day))),
+  ).flat();
+  const rows = firstRows(inspection({ understood }));
+  expect(rows.map(({ values }) => values.length)).toEqual([12, 12, 12, 12, 12]);
+});
