@@ -33,7 +33,8 @@ export function reportJson(outcome: ImportOutcome): string {
 
 /** The report for people. */
 export function reportText(outcome: ImportOutcome): string {
-  return outcome.taken.map(fileText).join('') + (outcome.dryRun ? 'Only tried; nothing was changed.\n' : '');
+  const notes = (outcome.notes ?? []).map((note) => `${note}\n`).join('');
+  return notes + outcome.taken.map(fileText).join('') + (outcome.dryRun ? 'Only tried; nothing was changed.\n' : '');
 }
 
 function fileText({ file, kind, summary, report, warnings, revisions }: TakenFile): string {

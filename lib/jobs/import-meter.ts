@@ -3,7 +3,7 @@ import type { ImportProgress } from './import-types.ts';
 /** Reading is this share of an import, storing the rest. */
 const READING_SHARE = 0.9;
 /** Progress is told at most this often, milliseconds. */
-const TELL_EVERY_MS = 100;
+export const TELL_EVERY_MS = 100;
 
 /** The time left is told when so much is done, and after so many seconds: before, it would only jump. */
 const TELLING_SHARE = 0.02;

@@ -97,6 +97,8 @@ export interface TakenFile {
 export interface ImportOutcome {
   taken: TakenFile[];
   problems: ImportProblem[];
+  /** what was passed over in archives; absent when nothing was */
+  notes?: string[];
   /** a dry run: `taken` is what would be taken, with import ids of 0 */
   dryRun?: boolean;
   /** what the checks found on the records that the import touched: stations with findings, and findings. Absent where they

@@ -1,4 +1,3 @@
-import { open } from 'node:fs/promises';
 import { parseMapping } from '../intake/mapping.ts';
 import { readFlows } from '../intake/read-flows.ts';
 import { readLayer } from '../intake/read-layer.ts';
@@ -6,7 +5,7 @@ import { readRegistry } from '../intake/read-registry.ts';
 import type { ImportReport, InspectOptions, KnownStation } from '../intake/types.ts';
 import type { Staging } from '../store/staging.ts';
 import type { FileChoices, FileKind, GivenFile, ImportChoices } from './import-types.ts';
-import { LOOKED_AT, recogniseKind } from './recognise-kind.ts';
+import { recogniseFile } from './recognise-kind.ts';
 import { rejectedRowsFile } from './rejected-rows.ts';
 
 /** A file that waits in the staging database, found good. */
@@ -41,13 +40,13 @@ function choicesFor(file: GivenFile, choices: ImportChoices): FileChoices {
 export async function kindOf(file: GivenFile, choices: ImportChoices): Promise<FileKind> {
   const chosen = file.kind ?? choicesFor(file, choices).kind;
   if (chosen) return chosen;
-  const handle = await open(file.path);
-  try {
-    const { buffer, bytesRead } = await handle.read(Buffer.alloc(LOOKED_AT), 0, LOOKED_AT, 0);
-    return recogniseKind(buffer.subarray(0, bytesRead));
-  } finally {
-    await handle.close();
-  }
+  return await recogniseFile(file.path, file.name, sheetOf(file, choices));
+}
+
+/** The sheet of a workbook that a person chose. */
+function sheetOf(file: GivenFile, choices: ImportChoices): string | undefined {
+  const sheet: unknown = choicesFor(file, choices).mapping?.sheet;
+  return typeof sheet === 'string' ? sheet : undefined;
 }
 
 /** Options by which a flow file is looked at and read.

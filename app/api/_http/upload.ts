@@ -6,20 +6,14 @@ import { pipeline } from 'node:stream/promises';
 import type { ReadableStream as NodeReadableStream } from 'node:stream/web';
 import busboy from 'busboy';
 import type { GivenFile } from '@/lib/jobs/import-types';
+import { uploadLimit } from '@/lib/jobs/upload-limit';
 import { Problem } from './problem';
 
 const GIB = 2 ** 30;
-const DEFAULT_LIMIT = 4 * GIB;
 /** An import needs room for the upload, its staging database and the stored parts: about as much again each. */
 const ROOM_FACTOR = 3;
 const MOST_FILES = 5_000;
 const LONGEST_NAME = 200;
-
-/** Largest upload taken, bytes; HUNGERSTONE_MAX_UPLOAD sets another. */
-export function uploadLimit(): number {
-  const set = Number(process.env.HUNGERSTONE_MAX_UPLOAD);
-  return Number.isFinite(set) && set > 0 ? set : DEFAULT_LIMIT;
-}
 
 export interface Upload {
   files: GivenFile[];

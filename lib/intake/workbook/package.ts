@@ -75,6 +75,14 @@ export async function openWorkbook(path: string, file: string): Promise<Workbook
   throw new IntakeError({ file, message: `this is ${other}`, remedy: 'Save its table as .xlsx or as CSV' });
 }
 
+/** True for a workbook that can be read.
+ *  @throws IntakeError for workbooks of other kinds, by name */
+export async function isWorkbook(path: string, file: string): Promise<boolean> {
+  const workbook = await openWorkbook(path, file);
+  workbook?.close();
+  return workbook !== null;
+}
+
 const OLE = [0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1];
 
 async function firstBytes(path: string): Promise<Buffer> {

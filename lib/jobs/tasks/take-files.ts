@@ -3,10 +3,11 @@ import type { MessagePort } from 'node:worker_threads';
 import type { KnownStation } from '../../intake/types.ts';
 import { type Applied, applyStaging } from '../../store/apply-staging.ts';
 import { createStaging, type Staging } from '../../store/staging.ts';
-import { ImportMeter } from '../import-meter.ts';
+import { ImportMeter, NO_PROGRESS, TELL_EVERY_MS } from '../import-meter.ts';
 import { problemOf, refusalsOf } from '../import-problem.ts';
 import {
   FILE_KINDS,
+  type FileKind,
   type GivenFile,
   type ImportChoices,
   type ImportOutcome,
@@ -14,6 +15,7 @@ import {
 } from '../import-types.ts';
 import { discardRejectedRows } from '../rejected-rows.ts';
 import { kindOf, type StagedFile, stageFile } from '../stage-file.ts';
+import { discardUnpacked, type UnpackedFiles, unpackFiles } from '../unpack-files.ts';
 
 export interface TakeFiles {
   jobId: string;
@@ -34,11 +36,42 @@ export interface TakeFiles {
  *  @returns  what was taken, or would be, or the problem of every file that cannot be taken
  *  @throws the signal's reason when cancelled; nothing is then left behind */
 export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
+  try {
+    const { files, notes } = await unpack(task);
+    const outcome = await takeUnpacked({ ...task, files });
+    return notes.length > 0 ? { ...outcome, notes } : outcome;
+  } catch (error) {
+    if (isCancelled(task)) throw error;
+    return { taken: [], problems: await refusalsOf(error), regionId: null };
+  } finally {
+    await discardUnpacked(task.jobId);
+    task.progress.close();
+  }
+}
+
+const isCancelled = ({ cancelled }: TakeFiles): boolean => Atomics.load(cancelled, 0) !== 0;
+
+/** The files, with those of archives in the place of the archives. */
+async function unpack(task: TakeFiles): Promise<UnpackedFiles> {
+  const cancel = new AbortController();
+  let told = Number.NEGATIVE_INFINITY;
+  return await unpackFiles(task.files, {
+    ...{ jobId: task.jobId, signal: cancel.signal },
+    onProgress(file, bytes) {
+      if (isCancelled(task)) cancel.abort();
+      if (performance.now() - told < TELL_EVERY_MS) return;
+      told = performance.now();
+      task.progress.postMessage({ ...NO_PROGRESS, stage: 'recognising', file, files: task.files.length, bytes });
+    },
+  });
+}
+
+async function takeUnpacked(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
   const cancel = new AbortController();
   const sizes = await Promise.all(task.files.map(async ({ path }) => (await stat(path)).size));
   const meter = new ImportMeter(sizes, (progress) => {
     task.progress.postMessage(progress);
-    if (Atomics.load(task.cancelled, 0) !== 0) cancel.abort();
+    if (isCancelled(task)) cancel.abort();
   });
   const { signal } = cancel;
   const staging = createStaging(task.jobId);
@@ -63,7 +96,6 @@ export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regi
   } finally {
     staging.discard();
     if (!taken) discardRejectedRows(staged.map(({ report }) => report?.rejectedFile ?? null));
-    task.progress.close();
   }
 }
 
@@ -77,9 +109,11 @@ interface Tools {
 /** Reads every file, also after one was found bad, so that a person hears of all problems at once. */
 async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Tools): Promise<ImportProblem[]> {
   const problems: ImportProblem[] = [];
-  const files = await Promise.all(
-    task.files.map(async (file, index) => ({ file, index, kind: await kindOf(file, task.choices) })),
-  );
+  const files: { file: GivenFile; index: number; kind: FileKind }[] = [];
+  for (const [index, file] of task.files.entries()) {
+    signal.throwIfAborted();
+    files.push({ file, index, kind: await kindOf(file, task.choices) });
+  }
   files.sort((a, b) => FILE_KINDS.indexOf(a.kind) - FILE_KINDS.indexOf(b.kind) || a.index - b.index);
   let registry = task.registry;
   for (const [done, { file, index, kind }] of files.entries()) {
