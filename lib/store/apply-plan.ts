@@ -73,7 +73,7 @@ export function planImport(
     if (unknownStations === 'refuse') throw unknownStation(connection, file, code);
     stations.set(code, { id: 0, code, facts: bareFacts(code), madeBy: file, changed: false });
   }
-  const said = laySaid(connection, stations);
+  const said = laySaid(connection, stations, new Set(staged.map(({ file, code }) => `${file} ${code}`)));
   const made = [...stations.values()].filter(({ madeBy }) => madeBy !== null);
   const firstId = made.length > 0 ? idsFor(made.length) : 0;
   for (const [index, station] of made.entries()) station.id = firstId + index;
@@ -105,8 +105,13 @@ function makeRegistered(connection: Connection, stations: Map<string, PlannedSta
 }
 
 /** Lays what the files say of stations over their facts, in the order of the files: registries set a fact, files of flows
- *  fill one that is empty. */
-function laySaid(connection: Connection, stations: Map<string, PlannedStation>): Map<number, FactChange[]> {
+ *  fill one that is empty, of the stations that they hold days of.
+ *  @param withDays  "file code" of these */
+function laySaid(
+  connection: Connection,
+  stations: Map<string, PlannedStation>,
+  withDays: ReadonlySet<string>,
+): Map<number, FactChange[]> {
   const said = new Map<number, FactChange[]>();
   const staged = rows(
     connection,
@@ -118,8 +123,7 @@ function laySaid(connection: Connection, stations: Map<string, PlannedStation>):
     said.set(file, list);
     for (const input of JSON.parse(text) as (StationInput & FoundFacts)[]) {
       const station = stations.get(input.code);
-      // A file may state facts of a station of which it holds no day.
-      if (!station) continue;
+      if (!station || (given === null && !withDays.has(`${file} ${input.code}`))) continue;
       const what =
         given === null
           ? fillFacts(station.facts, input)

@@ -81,7 +81,7 @@ export async function removeStation(regionId: number, code: string, path = datab
     const user = derivedStations(connection, regionId).find(({ recipe }) => recipe.terms.some((t) => t.code === code));
     if (user) {
       throw new StoreError(
-        'in-use',
+        'needed',
         `The record of station "${user.code}" is derived from "${code}"; change that first.`,
       );
     }

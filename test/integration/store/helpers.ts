@@ -82,7 +82,7 @@ export interface SeenRecord {
 }
 
 /** The records of a region as readers see them, by code. */
-export async function seenRecords(regionId: number): Promise<Record<string, SeenRecord>> {
+export async function seenRecords(regionId: number, quantity: Quantity = 'flow'): Promise<Record<string, SeenRecord>> {
   const stations = await listStations(regionId);
   const seen: Record<string, SeenRecord> = {};
   readSeries(
@@ -91,6 +91,7 @@ export async function seenRecords(regionId: number): Promise<Record<string, Seen
       const { code } = stations.find(({ id }) => id === stationId)!;
       seen[code] = { firstDay, values: [...values], flags: [...flags], hash };
     },
+    { quantity },
   );
   return seen;
 }
