@@ -32,8 +32,8 @@ function isHeader(fields: readonly string[]): boolean {
 /** Rows behind the first with a date that are asked whether they have dates too. */
 const ROWS_ASKED = 10;
 
-/** The first row of data: it stands right below a header, or most rows behind it have dates as well, unlike behind a line
- *  such as "Period: 2001-01-01". */
+/** The first row of data: it stands right below a header, or most rows behind it have dates as well and no header stands
+ *  among them, unlike behind a line such as "Period: 2001-01-01". */
 function firstDated(rows: readonly SampleRow[], least: number): number {
   const dated = (row: SampleRow) => row.fields.length >= least && hasDate(row.fields);
   let first = -1;
@@ -43,7 +43,10 @@ function firstDated(rows: readonly SampleRow[], least: number): number {
     const above = rows[at - 1] !== undefined && isWidthRow(rows[at - 1].fields) ? rows[at - 2] : rows[at - 1];
     if (above !== undefined && isHeaderRow(above.fields)) return at;
     const behind = rows.slice(at + 1, at + 1 + ROWS_ASKED);
-    if (behind.filter(dated).length * 2 >= behind.length) return at;
+    const headed = behind.some(
+      (next, step) => step + 1 < behind.length && isHeaderRow(next.fields) && dated(behind[step + 1]),
+    );
+    if (!headed && behind.filter(dated).length * 2 >= behind.length) return at;
   }
   return first;
 }

@@ -1,7 +1,7 @@
 import type { KnownStation, StatedFacts } from '../types.ts';
 import { factOfKey } from './fact-words.ts';
 import type { SampleRow } from './sample.ts';
-import { factsIn, pairOf, pairsAcross, stationsListed } from './stated-facts.ts';
+import { factsIn, pairOf, pairsAcross, type StatedPair, stationsListed } from './stated-facts.ts';
 
 /** What the lines above a table say. */
 export interface LinesAbove {
@@ -20,10 +20,16 @@ export function readLinesAbove(
   delimiter: string | null,
 ): LinesAbove {
   const remarks = [...comments, ...titles.map(({ text }) => text)];
-  const pairs = remarks.flatMap((text) => pairOf(text, delimiter) ?? []);
+  const across: StatedPair[] = [];
+  // The lines of a small table are no pairs of their own.
+  const tables = new Set<string>();
   for (let at = 0; at + 1 < titles.length; at++) {
-    pairs.push(...pairsAcross(titles[at].row.fields, titles[at + 1].row.fields));
+    const found = pairsAcross(titles[at].row.fields, titles[at + 1].row.fields);
+    across.push(...found);
+    if (found.length > 0) for (const { text } of [titles[at], titles[at + 1]]) tables.add(text);
   }
+  const lines = remarks.filter((text) => !tables.has(text));
+  const pairs = [...lines.flatMap((text) => pairOf(text, delimiter) ?? []), ...across];
   const stated = factsIn(pairs);
   const listed = stationsListed(comments);
   const units = pairs.flatMap(({ key, value }) => (factOfKey(key) === 'unit' ? [value] : []));
