@@ -11,6 +11,7 @@ import { openStore } from '../../../lib/store/open.ts';
 import { recoverStore } from '../../../lib/store/recover.ts';
 import { deleteRegion } from '../../../lib/store/regions.ts';
 import { createStaging, discardStaging, stagingPath } from '../../../lib/store/staging.ts';
+import { addStation } from '../../../lib/store/station-edit.ts';
 import { listStations } from '../../../lib/store/stations.ts';
 import { bundleScript } from './bundle.ts';
 import { dump, importFiles, partOf, seenRecords } from './helpers.ts';
@@ -78,6 +79,80 @@ test('what a process leaves that is killed while it stores is never seen, and is
   expect(recovered.stagingFiles).toEqual(['hungerstone.db.staging-killed']);
   expect(dump(place.path).filter((row) => !row.startsWith('sqlite_sequence'))).toEqual(before);
 }, 120_000);
+
+/** The same of a file that also states facts and revises, over stations from which another is derived. */
+const REVISER = `
+  import { applyStaging } from '@/lib/store/apply-staging.ts';
+  import { createStaging } from '@/lib/store/staging.ts';
+  const staging = createStaging('reviser');
+  const file = staging.addFile({ kind: 'flows', fileName: 'reviser.csv' });
+  const codes = Array.from({ length: 60 }, (_, i) => 'S' + i);
+  for (const code of codes) {
+    staging.stagePart(file, { code, unit: 'm3/s', firstDay: 10, values: new Float64Array(30).fill(2),
+      codes: new Uint8Array(30), codeList: [{ text: '', bits: 0 }] });
+  }
+  staging.stageFacts(file, codes.map((code) => ({ code, name: 'Gauge ' + code, areaKm2: 12 })));
+  staging.seal();
+  process.stdout.write('begun\\n');
+  await applyStaging('reviser', { region: { name: 'Wethe' }, rule: 'take-new', sliceMs: 0 });
+  process.stdout.write('done\\n');`;
+
+test('a kill at any moment leaves records, facts and what is derived as before the import, or as after it', async () => {
+  const codes = Array.from({ length: 60 }, (_, i) => `S${i}`);
+  const { regionId } = await importFiles([codes.map((code) => ({ code, values: new Array<number>(20).fill(1) }))]);
+  const terms = codes.map((code) => ({ code, factor: 1, lagDays: 0 }));
+  await addStation(regionId, { code: 'Sum', derived: { quantity: 'flow', terms, note: '' } });
+  const look = async () => ({ records: await seenRecords(regionId), stations: await listStations(regionId) });
+  const before = await look();
+  const script = await bundleScript(REVISER, join(place.folder, 'reviser.mjs'));
+  const lasted = await reviseFor(script, null);
+  const after = await look();
+  expect(after.records.Sum.values).toEqual([...new Array(10).fill(60), ...new Array(30).fill(120)]);
+  expect(after.stations[0]).toMatchObject({ code: 'S0', name: 'Gauge S0', areaKm2: 12 });
+  const undoOne = async () => {
+    const [[importId]] = query("SELECT MAX(id) FROM Import WHERE state = 'applied'") as [[number]];
+    await undoImport(importId);
+  };
+  await undoOne();
+  expect(await look()).toEqual(before);
+
+  const ends = new Set<string>();
+  for (const share of [0.1, 0.35, 0.6, 0.8, 0.9, 0.95, 0.98, 1]) {
+    await reviseFor(script, share * lasted);
+    execute(`UPDATE Import SET heartbeat = '${timestamp(old)}' WHERE state = 'applying'`);
+    if (existsSync(stagingPath('reviser'))) utimesSync(stagingPath('reviser'), old, old);
+    const seen = await look();
+    const end = JSON.stringify(seen) === JSON.stringify(before) ? 'before' : 'after';
+    expect(seen).toEqual({ before, after }[end]);
+    ends.add(end);
+    await recoverStore();
+    expect(await look()).toEqual(seen);
+    if (end === 'after') await undoOne();
+    expect(
+      query('SELECT COUNT(*) FROM Laid WHERE id NOT IN (SELECT laidId FROM Record WHERE laidId IS NOT NULL)'),
+    ).toEqual([[0]]);
+    expect(query('SELECT COUNT(*) FROM Part')).toEqual([[60]]);
+  }
+  expect(ends).toContain('before');
+}, 120_000);
+
+/** Runs the reviser and kills it so long after it began to store. @returns how long it stored, ms */
+async function reviseFor(script: string, killAfterMs: number | null): Promise<number> {
+  const child = spawn(process.execPath, [script], { stdio: ['ignore', 'pipe', 'inherit'] });
+  let begun = 0;
+  let done = 0;
+  await new Promise<void>((resolve) => {
+    child.stdout.on('data', (data) => {
+      if (String(data).includes('begun')) {
+        begun = performance.now();
+        if (killAfterMs !== null) setTimeout(() => child.kill('SIGKILL'), killAfterMs);
+      }
+      if (String(data).includes('done')) done = performance.now();
+    });
+    child.on('exit', () => resolve());
+  });
+  return done - begun;
+}
 
 test('an undo that died leaves the import as it was, and it can be undone again', async () => {
   const { regionId, imports } = await importFiles([[{ code: 'A', values: [1] }]]);
