@@ -3,6 +3,8 @@ import { readFlows } from '../intake/read-flows.ts';
 import { readLayer } from '../intake/read-layer.ts';
 import { readRegistry } from '../intake/read-registry.ts';
 import type { ImportReport, InspectOptions, KnownStation } from '../intake/types.ts';
+import type { ArchivedImport } from '../store/archived-region.ts';
+import { timestamp } from '../store/connection.ts';
 import type { Staging } from '../store/staging.ts';
 import type { FileChoices, FileKind, GivenFile, ImportChoices } from './import-types.ts';
 import { recogniseFile } from './recognise-kind.ts';
@@ -82,8 +84,9 @@ async function stageRegistry(file: GivenFile, { staging }: StageTools): Promise<
   };
 }
 
-async function stageLayer(file: GivenFile, { staging }: StageTools): Promise<StagedFile> {
-  const { name, kind, geojson, features, bounds, sha256, warnings } = await readLayer(file.path, file.name);
+async function stageLayer(file: GivenFile, { staging, choices }: StageTools): Promise<StagedFile> {
+  const layer = { ...(await readLayer(file.path, file.name)), ...choicesFor(file, choices).layer };
+  const { name, kind, geojson, features, bounds, sha256, warnings } = layer;
   const number = staging.addFile({ kind: 'layer', fileName: file.name });
   staging.stageLayer(number, { name, kind, geojson });
   staging.describeFile(number, { sha256, rows: features, accepted: features, report: { warnings, bounds, kind } });
@@ -94,7 +97,8 @@ async function stageLayer(file: GivenFile, { staging }: StageTools): Promise<Sta
 async function stageFlows(file: GivenFile, tools: StageTools): Promise<StagedFile> {
   const { staging, jobId, fileNumber, signal, onProgress } = tools;
   const options = flowOptions({ file, choices: tools.choices, registry: tools.registry });
-  const number = staging.addFile({ kind: 'flows', fileName: file.name });
+  const { recorded } = choicesFor(file, tools.choices);
+  const number = staging.addFile({ kind: 'flows', fileName: recorded?.fileName ?? file.name });
   const rejected = rejectedRowsFile(jobId, fileNumber);
   let report: ImportReport;
   try {
@@ -111,11 +115,17 @@ async function stageFlows(file: GivenFile, tools: StageTools): Promise<StagedFil
   report = { ...report, rejectedFile: rejected.close() };
   const { sha256, layout, unit, mapping, rows, accepted, rejectedTotal } = report;
   staging.stageFacts(number, report.facts ?? []);
-  staging.describeFile(number, { sha256, layout, unit, mapping, rows, accepted, rejected: rejectedTotal, report });
+  const facts = { sha256, layout, unit, mapping, rows, accepted, rejected: rejectedTotal, report };
+  staging.describeFile(number, recorded ? { ...facts, ...asFirstImported(recorded) } : facts);
   return {
     ...{ file, kind: 'flows', rows, report, warnings: report.warnings, registry: null },
     summary: `${counted(report.stations.length, 'station')}, ${counted(accepted, 'row')}`,
   };
+}
+
+/** What the list of imports tells of a file that was imported elsewhere before: what it told there. */
+function asFirstImported({ fileName: _name, kind: _kind, file: _file, read: _read, ...first }: ArchivedImport) {
+  return { ...first, createdAt: timestamp(new Date(first.createdAt)) };
 }
 
 const counted = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? '' : 's'}`;

@@ -100,7 +100,8 @@ class Unpacking {
   private async takeZip(file: NamedFile, depth: number): Promise<void> {
     const zip = await openZip(file.path, file.name);
     try {
-      const wanted = zip.entries.filter((entry) => this.isWanted(file.name, entry));
+      const isCopy = saidTwice(zip.entries);
+      const wanted = zip.entries.filter((entry) => !isCopy(entry) && this.isWanted(file.name, entry));
       for (const entry of wanted) refuseEntry(file.name, entry);
       const inflated = wanted.reduce((sum, entry) => sum + entry.uncompressedSize, 0);
       refuseBomb(inflated, (await stat(file.path)).size, file.name);
@@ -162,6 +163,12 @@ async function* inflate(file: NamedFile, size: number): AsyncGenerator<Buffer> {
     source.destroy();
     gunzip.destroy();
   }
+}
+
+/** A region's archive says every record twice; its tables are what is read. */
+function saidTwice(entries: readonly Entry[]): (entry: Entry) => boolean {
+  const isRegion = ['region.json', 'imports.json'].every((name) => entries.some(({ fileName }) => fileName === name));
+  return ({ fileName }) => isRegion && fileName.startsWith('waterml/');
 }
 
 function refuseEntry(archive: string, entry: Entry): void {

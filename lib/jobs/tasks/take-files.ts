@@ -2,6 +2,7 @@ import { stat } from 'node:fs/promises';
 import type { MessagePort } from 'node:worker_threads';
 import type { KnownStation } from '../../intake/types.ts';
 import { type Applied, applyStaging } from '../../store/apply-staging.ts';
+import type { ArchivedRegion } from '../../store/archived-region.ts';
 import { createStaging, type Staging } from '../../store/staging.ts';
 import { ImportMeter, NO_PROGRESS, TELL_EVERY_MS } from '../import-meter.ts';
 import { problemOf, refusalsOf } from '../import-problem.ts';
@@ -13,6 +14,7 @@ import {
   type ImportOutcome,
   type ImportProblem,
 } from '../import-types.ts';
+import { type OpenedArchive, openRegionArchive } from '../region-archive.ts';
 import { discardRejectedRows } from '../rejected-rows.ts';
 import { kindOf, type StagedFile, stageFile } from '../stage-file.ts';
 import { discardUnpacked, type UnpackedFiles, unpackFiles } from '../unpack-files.ts';
@@ -38,7 +40,8 @@ export interface TakeFiles {
 export async function takeFiles(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
   try {
     const { files, notes } = await unpack(task);
-    const outcome = await takeUnpacked({ ...task, files });
+    const archive = await openRegionArchive(files);
+    const outcome = await takeUnpacked(archive ? fromArchive(task, archive) : { ...task, files });
     return notes.length > 0 ? { ...outcome, notes } : outcome;
   } catch (error) {
     if (isCancelled(task)) throw error;
@@ -66,7 +69,19 @@ async function unpack(task: TakeFiles): Promise<UnpackedFiles> {
   });
 }
 
-async function takeUnpacked(task: TakeFiles): Promise<ImportOutcome & { regionId: number | null }> {
+interface Unpacked extends TakeFiles {
+  /** what an archive says of the region itself */
+  archived?: ArchivedRegion;
+}
+
+/** The files of a region's archive, each with what its first import was; what a person chose for a file goes before. */
+function fromArchive(task: TakeFiles, { files, choices, region }: OpenedArchive): Unpacked {
+  const chosen = task.choices.files ?? {};
+  const merged = Object.entries(choices).map(([name, choice]) => [name, { ...choice, ...chosen[name] }] as const);
+  return { ...task, files, choices: { ...task.choices, files: Object.fromEntries(merged) }, archived: region };
+}
+
+async function takeUnpacked(task: Unpacked): Promise<ImportOutcome & { regionId: number | null }> {
   const cancel = new AbortController();
   const sizes = await Promise.all(task.files.map(async ({ path }) => (await stat(path)).size));
   const meter = new ImportMeter(sizes, (progress) => {
@@ -80,6 +95,7 @@ async function takeUnpacked(task: TakeFiles): Promise<ImportOutcome & { regionId
   try {
     const problems = await stageAll(task, { staging, staged, meter, signal });
     if (problems.length > 0) return { taken: [], problems, regionId: null };
+    if (task.archived) staging.stageRegion(task.archived);
     staging.seal();
     meter.store(0);
     const { by, revise, rule, dryRun = false } = task.choices;
