@@ -71,8 +71,9 @@ export interface FindingRow {
   last: string;
   days: number;
   detail: Record<string, number | string | null>;
-  /** open: nobody has answered; else what the last reject or accept mark over its whole stretch says */
-  state: 'open' | 'rejected' | 'accepted';
+  /** open: nobody has answered; else what the last reject or accept mark over its whole stretch says; noted: there are but
+   *  notes */
+  state: 'open' | 'rejected' | 'accepted' | 'noted';
 }
 
 /** A person's mark, as listed. */

@@ -5,7 +5,7 @@ import { SORTS } from './_chart/sort-stations.ts';
 export const SECTIONS = ['years', 'findings', 'periods'] as const;
 export type Section = (typeof SECTIONS)[number];
 
-export const FINDING_STATES = ['open', 'rejected', 'accepted'] as const;
+export const FINDING_STATES = ['open', 'rejected', 'accepted', 'noted'] as const;
 
 /** The page's state in its address. `station` and `q` are the map's too, and go along to it. */
 export const recordsState = {

@@ -36,7 +36,7 @@ test('groupFindings filters by kind, state and words', () => {
 });
 
 test('countFindings counts by state', () => {
-  expect(countFindings(findings)).toEqual({ open: 3, rejected: 1, accepted: 0 });
+  expect(countFindings(findings)).toEqual({ open: 3, rejected: 1, accepted: 0, noted: 0 });
 });
 
 test('surroundings: at least 20 days each side, as many as the stretch is long, at most 400, of at most ten years', () => {

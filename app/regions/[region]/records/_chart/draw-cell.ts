@@ -49,8 +49,10 @@ export function cellLook(context: CanvasRenderingContext2D, palette: ChartPalett
   tile.height = size;
   const pen = tile.getContext('2d');
   if (!pen) return { palette, hatch: palette.paper };
-  pen.strokeStyle = palette.paper;
-  pen.lineWidth = size * 0.36;
+  pen.fillStyle = palette.paper;
+  pen.fillRect(0, 0, size, size);
+  pen.strokeStyle = palette.full;
+  pen.lineWidth = size * 0.4;
   // three strokes, so that the diagonal goes on over the edges of the tile
   for (const shift of [-size, 0, size]) {
     pen.beginPath();

@@ -1,4 +1,5 @@
 import { area, count, percent, type Units } from '@/app/components/format';
+import { fold } from '../../row-filter.ts';
 import type { Sort, Sorted } from './sort-stations.ts';
 
 /** The figure by which a row is sorted, in words; '' where there is none. */
@@ -15,6 +16,7 @@ export function sortFigure({ station, span }: Sorted, sort: Sort, units: Units):
     case 'code':
       return station.code;
     default:
-      return station.river;
+      // most stations are named after their river: once is enough
+      return fold(station.name).includes(fold(station.river)) ? '' : station.river;
   }
 }

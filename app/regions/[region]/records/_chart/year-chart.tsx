@@ -55,6 +55,12 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
     () => (pointed && cursorRow !== undefined ? { row: cursorRow, year: pointed.year } : null),
     [pointed, cursorRow],
   );
+  // years that do not fit are looked at from the latest on
+  const isWide = layout.width > size.width;
+  useEffect(() => {
+    if (isWide && box.current) box.current.scrollLeft = box.current.scrollWidth;
+  }, [isWide, box]);
+
   const setCursor = (place: CellPlace | null) =>
     setPointed((now) => {
       if (place === null) return null;

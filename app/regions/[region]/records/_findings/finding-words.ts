@@ -17,6 +17,7 @@ export const STATE_WORDS: Record<FindingRow['state'], string> = {
   open: 'open',
   rejected: 'rejected',
   accepted: 'accepted',
+  noted: 'noted',
 };
 
 /** The figures behind a finding in words; '' where it has none.

@@ -99,7 +99,8 @@ export function FindingsSection({ slug, basis, stations, version, onChanged }: P
         </a>
       </div>
       <p className={styles.who} role="status">
-        {count(findings.length, 'finding')}: {counts.open} open, {counts.rejected} rejected, {counts.accepted} accepted
+        {count(findings.length, 'finding')}: {counts.open} open, {counts.rejected} rejected, {counts.accepted} accepted,{' '}
+        {counts.noted} noted
         {filtered < findings.length && ` · ${filtered} shown`}
       </p>
       {findings.length === 0 && (

@@ -42,8 +42,8 @@ export function groupFindings(
 }
 
 /** How many findings there are of each kind and state, whatever the filter. */
-export function countFindings(findings: readonly FindingRow[]): { open: number; rejected: number; accepted: number } {
-  const counts = { open: 0, rejected: 0, accepted: 0 };
+export function countFindings(findings: readonly FindingRow[]): Record<FindingRow['state'], number> {
+  const counts = { open: 0, rejected: 0, accepted: 0, noted: 0 };
   for (const { state } of findings) counts[state] += 1;
   return counts;
 }

@@ -33,9 +33,10 @@ export function drawPeriods(context: CanvasRenderingContext2D, picture: PeriodPi
     }
   }
   drawAxes(context, layout, palette);
-  if (picture.common) drawRing(context, layout, picture.common, palette.alert, 'common');
-  if (picture.current) drawRing(context, layout, picture.current, palette.ink, 'current');
-  if (picture.cursor) drawRing(context, layout, picture.cursor, palette.blue, 'cursor');
+  const { paper, alert, ink, blue } = palette;
+  if (picture.common) drawRing(context, layout, picture.common, [paper, alert], 'common');
+  if (picture.current) drawRing(context, layout, picture.current, [paper, ink], 'current');
+  if (picture.cursor) drawRing(context, layout, picture.cursor, [paper, blue], 'cursor');
 }
 
 function drawPeriod(
@@ -84,18 +85,25 @@ function drawAxes(context: CanvasRenderingContext2D, layout: PeriodLayout, palet
   }
 }
 
-/** Rings of unlike make, so that they are told apart where they lie on one cell: the common period's is the widest, the
+/** Rings of unlike make, rimmed with paper, so that they are told apart where they lie on one cell: the common period's is the widest, the
  *  basis's is dark and inside it. */
 function drawRing(
   context: CanvasRenderingContext2D,
   layout: PeriodLayout,
   [first, last]: readonly [number, number],
-  colour: string,
+  [rim, colour]: [string, string],
   kind: 'common' | 'current' | 'cursor',
 ) {
   const [x, y] = periodXY(layout, first, last);
   const out = { common: 3.5, current: 1, cursor: 1 }[kind];
+  const ring: [number, number, number, number] = [
+    ...([x - out, y - out] as const),
+    ...([layout.cellWidth - 1 + 2 * out, layout.cellHeight - 1 + 2 * out] as const),
+  ];
+  context.strokeStyle = rim;
+  context.lineWidth = 5;
+  context.strokeRect(...ring);
   context.strokeStyle = colour;
   context.lineWidth = kind === 'common' ? 2.5 : 2;
-  context.strokeRect(x - out, y - out, layout.cellWidth - 1 + 2 * out, layout.cellHeight - 1 + 2 * out);
+  context.strokeRect(...ring);
 }

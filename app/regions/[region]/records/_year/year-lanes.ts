@@ -6,7 +6,7 @@ import type { Lane } from './draw-days.ts';
 
 /** Names of findings that fit beside a lane. */
 const SHORT: Record<FindingKind, string> = {
-  negative: 'negative flow',
+  negative: 'negative',
   repeated: 'repeated',
   jump: 'jump',
   flat: 'flat run',
