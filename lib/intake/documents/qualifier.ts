@@ -51,7 +51,8 @@ export class Qualifier {
       point.flag = this.value;
       point.exact = true;
       point.bits = this.description.split(' ').reduce((bits, word) => {
-        const name = FLAG_NAMES.find((one) => one === word);
+        // A rejection is a person's mark on a record, not a word of its source.
+        const name = FLAG_NAMES.find((one) => one === word && one !== 'rejected');
         return name === undefined ? bits : bits | FLAG[name];
       }, 0);
       return;
