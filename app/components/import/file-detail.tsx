@@ -35,12 +35,12 @@ export function FileDetail({ file, sight, choices, refusal, busy, alike, togethe
     <article className={styles.detail} aria-label={file} aria-busy={busy}>
       <header className={styles.detailHead}>
         <h3>{file}</h3>
-        {sight && (
+        {sight?.kind && (
           <label className={styles.kind}>
             <span>is taken for</span>
             <select
               className={ui.select}
-              value={sight.kind ?? ''}
+              value={sight.kind}
               onChange={(event) => change({ own: true, kind: FILE_KINDS.find((kind) => kind === event.target.value) })}
             >
               {FILE_KINDS.map((kind) => (

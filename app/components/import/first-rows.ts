@@ -27,7 +27,11 @@ export function firstRows({ header, preview, previewLines, understood }: Omit<In
     rows.push({ line, fields, values: line === null ? [] : (byLine.get(line) ?? []) });
     if (line !== null) byLine.delete(line);
   }
-  for (const [line, values] of byLine) rows.push({ line, fields: null, values });
+  // Beyond the lines that are shown only what is wrong is of interest.
+  const shown = rows.some(({ values }) => values.length > 0);
+  for (const [line, values] of byLine) {
+    if (!shown || values.some(({ problem }) => problem !== null)) rows.push({ line, fields: null, values });
+  }
   return bounded(rows.sort((a, b) => (a.line ?? 0) - (b.line ?? 0)));
 }
 

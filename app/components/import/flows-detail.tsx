@@ -4,7 +4,7 @@ import type { FoundFacts } from '@/lib/intake/types';
 import type { FileChoices } from '@/lib/jobs/import-types';
 import type { PreviewProblem } from '@/lib/jobs/upload-types';
 import { significant } from '../format.ts';
-import { askedOf, type Control, RARE } from './asked.ts';
+import { type Asked, CONTROL_WORDS, CONTROLS, type Control, RARE, sortOut } from './asked.ts';
 import { type ChoicesEdit, shownMapping } from './choices-edit.ts';
 import { CodeMatches } from './code-matches.tsx';
 import { Columns } from './columns.tsx';
@@ -34,13 +34,16 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
   const [round, setRound] = useState(0);
   const { inspection } = sight;
   const recognised = inspection?.mapping ?? null;
-  const asked = askedOf(problems, !sight.stale, changed);
+  const station = recognised && shownMapping(recognised, choices).station.from;
+  const { asked, others } = recognised
+    ? sortOut(problems, { stale: sight.stale, changed, station })
+    : { asked: {}, others: problems };
   const renewed = (edit: ChoicesEdit) => {
     setRound(round + 1);
     change(edit);
   };
-  const notes = problems.map((problem) => (
-    <ProblemNote key={problem.message} problem={problem} answeredHere={recognised !== null && isAnswerable(problem)}>
+  const notes = others.map((problem) => (
+    <ProblemNote key={problem.message} problem={problem} answeredHere={problem.problem.needs === 'codes'}>
       {problem.problem.needs === 'codes' && (
         <CodeMatches pairs={problem.problem.pairs ?? []} onTake={() => change({ matchCodes: true })} />
       )}
@@ -64,6 +67,7 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
   return (
     <>
       {notes}
+      <ToAnswer asked={asked} />
       <div className={styles.controls} key={`main ${round}`}>
         <MainControls {...controls} />
       </div>
@@ -94,9 +98,16 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
   );
 }
 
-/** Needs that a control on this screen answers; a missing area has to come in a station list. */
-const isAnswerable = ({ problem }: PreviewProblem): boolean =>
-  problem.needs !== undefined && problem.needs !== 'area' && problem.needs !== 'revise';
+/** What is asked below, in short. */
+function ToAnswer({ asked }: { asked: Asked }) {
+  const controls = CONTROLS.filter((control) => asked[control] !== undefined);
+  if (controls.length === 0) return null;
+  return (
+    <p className={styles.toAnswer}>
+      <strong>To be answered:</strong> {controls.map((control) => CONTROL_WORDS[control]).join(', ')}.
+    </p>
+  );
+}
 
 /** A file whose layout is not told: a person may say what it is. */
 function Unrecognised({ sight, choices, change }: Pick<Props, 'sight' | 'choices' | 'change'>) {

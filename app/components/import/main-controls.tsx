@@ -110,7 +110,7 @@ function StationControl({ mapping, choices, asked, change }: ControlProps) {
         options={[...byContent.map((value) => ({ value, words: STATION_WORDS[value] })), ...possible]}
         onChange={setFrom}
       />
-      {(station.from === 'given' || asked.station !== undefined) && (
+      {(station.from === 'given' || asked.station) && (
         <Field label="Code of the station" hint="As in the station list; leading zeros count.">
           {(ids) => (
             <input

@@ -7,7 +7,7 @@ import type { OverlapRule } from '@/lib/store/lay-parts';
 export const LAYOUT_WORDS: Record<Layout, string> = {
   long: 'one row a station and day',
   wide: 'one row a day, one column a station',
-  'agency-tab': 'tab-delimited with comment lines and qualifier columns',
+  'agency-tab': 'tab-delimited, with qualifier columns',
   whitespace: 'columns parted by blanks',
   'fixed-width': 'columns of fixed width',
   'month-rows': 'a row a month, a column a day',
@@ -53,9 +53,9 @@ export const UNIT_WORDS: Record<Unit, string> = {
 };
 
 export const ORDER_WORDS: Record<Mapping['date']['order'], string> = {
-  dmy: 'day, month, year: 3/4/2010 is 3 April',
-  mdy: 'month, day, year: 3/4/2010 is 4 March',
-  ymd: 'year, month, day: 2010/3/4 is 4 March',
+  dmy: 'day first (3/4 is 3 April)',
+  mdy: 'month first (3/4 is 4 March)',
+  ymd: 'year first (2010-04-03)',
 };
 
 export const RULE_WORDS: Record<OverlapRule, string> = {

@@ -29,7 +29,12 @@ test('firstRows puts each line beside its values and leaves the header away', ()
   ]);
 });
 
-test('firstRows shows values whose line is not shown, and of a document the values alone', () => {
+test('firstRows shows of lines beyond those shown only what is wrong, and of a document the values alone', () => {
+  const bad = { ...value(9), problem: 'no date' };
+  const [shown, ...beyond] = firstRows(
+    inspection({ preview: [['1']], previewLines: [1], understood: [value(1), value(2), bad] }),
+  );
+  expect([shown.fields, beyond]).toEqual([['1'], [{ line: 9, fields: null, values: [bad] }]]);
   const rows = firstRows(inspection({ understood: [value(1), value(2)] }));
   expect(rows.map(({ line, fields, values }) => [line, fields, values.length])).toEqual([
     [1, null, 1],
