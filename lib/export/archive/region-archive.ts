@@ -50,7 +50,7 @@ export async function regionArchive(
     ...(withWaterml
       ? stations.map((station) => ({
           name: `waterml/${plainName(station.code)}-${station.id}.xml`,
-          text: () => waterml(station),
+          text: () => waterml(station, { generated: modified }),
         }))
       : []),
   ];
