@@ -3,7 +3,7 @@ import { inspectFile } from '../intake/inspect-file.ts';
 import { readLayer } from '../intake/read-layer.ts';
 import { readRegistry } from '../intake/read-registry.ts';
 import { decodeText } from '../intake/text-encoding.ts';
-import { CORRECTIONS, type Inspection, IntakeError, type KnownStation } from '../intake/types.ts';
+import { type Inspection, IntakeError, type KnownStation } from '../intake/types.ts';
 import type { FileChoices, FileKind, GivenFile } from './import-types.ts';
 import { flowOptions, kindOf } from './stage-file.ts';
 import type { FilePreview, LayerPreview, PreviewProblem, RegistryPreview } from './upload-types.ts';
@@ -20,6 +20,8 @@ export interface FileLook {
   choices: FileChoices;
   /** the stations that flows may name; null where flows make them */
   known: KnownStation[] | null;
+  /** why it cannot be taken, where that is known beforehand */
+  broken?: PreviewProblem;
 }
 
 /** What a look tells, and of a registry the stations that flows may name from now on. */
@@ -28,12 +30,19 @@ export interface Looked {
   names: KnownStation[] | null;
 }
 
+const brokenPreview = (file: string, size: number, choices: FileChoices, problem: PreviewProblem): FilePreview => ({
+  ...{ file, size, choices, problems: [problem], problem: problem.message, state: 'unreadable' as const, kind: null },
+  ...{ layout: null, unit: null, stations: [], count: null, needs: [], likeness: null },
+  ...{ inspection: null, registry: null, layer: null, lines: [] },
+});
+
 type Found = Pick<FilePreview, 'problems'> &
   Partial<Pick<FilePreview, 'inspection' | 'registry' | 'layer' | 'count'>> & { names?: KnownStation[] };
 
 /** Looks at a file's beginning under the choices made for it; a registry or layer is read whole.
  *  Changes nothing; whatever is wrong with the file or the choices stands in `problems`. */
-export async function lookAtFile({ file, size, choices, known }: FileLook): Promise<Looked> {
+export async function lookAtFile({ file, size, choices, known, broken }: FileLook): Promise<Looked> {
+  if (broken) return { preview: brokenPreview(file.name, size, choices, broken), names: null };
   const kind = await kindOf(file, { files: { [file.name]: choices } });
   const found = await foundIn(kind, file, choices, known).catch((error: unknown): Found => {
     if (!(error instanceof IntakeError)) throw error;
@@ -74,14 +83,17 @@ async function foundIn(
 
 async function registryIn(file: GivenFile, choices: FileChoices): Promise<Found> {
   try {
-    const { stations, given, warnings } = await readRegistry(file.path, file.name);
+    const { stations, given, warnings } = await readRegistry(file.path, file.name, {
+      corrections: choices.corrections,
+      sheet: choices.mapping?.sheet,
+    });
     const shown = stations.slice(0, SHOWN_STATIONS);
     const registry: RegistryPreview = { stations: shown, total: stations.length, given, warnings, offered: [] };
     const names = stations.map(({ code, name }) => ({ code, name }));
     return { problems: [], registry, count: stations.length, names };
   } catch (error) {
     if (!(error instanceof IntakeError) || error.problem.needs !== 'correction') throw error;
-    const offered = CORRECTIONS.filter((correction) => !choices.corrections?.includes(correction));
+    const offered = error.problem.corrections ?? [];
     const registry: RegistryPreview = { stations: [], total: 0, given: [], warnings: [], offered };
     return { problems: [problemIn(error)], registry };
   }

@@ -10,22 +10,35 @@ import { type FilePreview, inShort, type UploadedFile } from './upload-types.ts'
  *  @param choices  by file name; a file keeps what is said here until it is said anew
  *  @returns        a preview for each file named, in the order given; null when the upload is no longer there
  *  @throws RangeError for a name that is none of its files */
-export function lookAtUpload(id: string, choices: Record<string, FileChoices>): Promise<FilePreview[] | null> {
-  return inTurn(id, async () => {
-    const session = await readSession(id);
-    if (!session) return null;
-    const names = Object.keys(choices);
-    const looks = names.map((name) => lookOf(session, name, choices[name]));
-    const looked = await runTask('lookAtFiles', { looks, known: knownTo(session, names) });
-    await writeSession(withLooks(session, looked));
-    return looked.map(({ preview }) => preview);
-  });
+export async function lookAtUpload(id: string, choices: Record<string, FileChoices>): Promise<FilePreview[] | null> {
+  const names = Object.keys(choices);
+  const session = await changed(id, (now) => withChoices(now, choices));
+  if (!session) return null;
+  const looks = names.map((name) => lookOf(session, name, choices[name]));
+  // Nothing else waits for the look itself: one file's is short, that of forty is not.
+  const looked = await runTask('lookAtFiles', { looks, known: knownTo(session, names) });
+  await changed(id, (now) => withLooks(now, looked));
+  return looked.map(({ preview }) => preview);
 }
+
+const changed = (id: string, change: (now: UploadSession) => UploadSession): Promise<UploadSession | null> =>
+  inTurn(id, async () => {
+    const now = await readSession(id);
+    if (!now) return null;
+    const next = change(now);
+    await writeSession(next);
+    return next;
+  });
+
+const withChoices = (session: UploadSession, choices: Record<string, FileChoices>): UploadSession => ({
+  ...session,
+  seen: session.seen.map((one) => (choices[one.file] ? { ...one, choices: choices[one.file] } : one)),
+});
 
 function lookOf(session: UploadSession, name: string, choices: FileChoices) {
   const at = session.files.findIndex((file) => file.name === name);
   if (at < 0) throw new RangeError(`lookAtUpload: choices must name files of the upload, got "${name}"`);
-  return { file: session.files[at], size: session.seen[at].size, choices };
+  return { file: session.files[at], size: session.seen[at].size, choices, broken: session.broken[name] };
 }
 
 /** The region's stations with those of the upload's own registries, but for the ones that are looked at anew. */
@@ -46,7 +59,9 @@ function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSes
   const otherNames = JSON.stringify(names) !== JSON.stringify(session.names);
   const seen = session.seen.map((one) => {
     const anew: UploadedFile = otherNames && one.kind === 'flows' ? { ...one, state: 'unseen' } : one;
-    return fresh.get(one.file) ?? anew;
+    const look = fresh.get(one.file);
+    // A look that was overtaken by other choices is of no use.
+    return look && JSON.stringify(look.choices) === JSON.stringify(one.choices) ? look : anew;
   });
   return { ...session, names, seen };
 }

@@ -2,26 +2,38 @@ import { listRegions } from '../store/regions.ts';
 import type { GivenFile } from './import-types.ts';
 import { type JobView, viewJob } from './live-jobs.ts';
 import { lookAtUpload } from './look-at-upload.ts';
-import { inTurn, listSessions, readSession, type UploadSession, withFiles, writeSession } from './upload-session.ts';
+import { unpackUpload } from './unpack-upload.ts';
+import {
+  inTurn,
+  listSessions,
+  newSessionFolder,
+  readSession,
+  type UploadSession,
+  withFiles,
+  writeSession,
+} from './upload-session.ts';
 import type { UploadView } from './upload-types.ts';
 
 /** Files that are looked at before an upload is answered; the screen asks for the others, some at a time. */
 const LOOKED_AT_ONCE = 40;
 
-/** Opens a session for files that lie in its folder, or adds them to the one that is open. */
+/** Opens a session for files that lie in its folder, or adds them to the one that is open. Archives are unpacked. */
 export async function takeUpload(
   { id, regionId }: Pick<UploadSession, 'id' | 'regionId'>,
-  files: readonly GivenFile[],
+  given: readonly GivenFile[],
 ): Promise<void> {
+  const { files, broken } = await unpackUpload(given, newSessionFolder(id).folder);
   const first = await inTurn(id, async () => {
-    const createdAt = new Date().toISOString();
-    const open = (await readSession(id)) ?? { id, regionId, createdAt, files: [], seen: [], names: {}, job: null };
-    const session = await withFiles(open, files);
+    const session = await withFiles((await readSession(id)) ?? emptySession(id, regionId), files, broken);
     await writeSession(session);
     return session.seen.filter(({ state }) => state === 'unseen').slice(0, LOOKED_AT_ONCE);
   });
   if (first.length > 0) await lookAtUpload(id, Object.fromEntries(first.map(({ file, choices }) => [file, choices])));
 }
+
+const emptySession = (id: string, regionId: number | null): UploadSession => ({
+  ...{ id, regionId, createdAt: new Date().toISOString(), files: [], seen: [], names: {}, broken: {}, job: null },
+});
 
 /** An upload as it is shown; null when there is none of this id. */
 export async function viewUpload(id: string): Promise<UploadView | null> {

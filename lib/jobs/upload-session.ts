@@ -6,7 +6,7 @@ import type { KnownStation } from '../intake/types.ts';
 import { databasePath } from '../store/database-url.ts';
 import type { FileChoices, GivenFile } from './import-types.ts';
 import { discardUpload, uploadFolder } from './upload-folder.ts';
-import type { UploadedFile } from './upload-types.ts';
+import type { PreviewProblem, UploadedFile } from './upload-types.ts';
 
 /** An upload as it is kept on disk, beside its files, until it has been imported or is given up. */
 export interface UploadSession {
@@ -20,6 +20,8 @@ export interface UploadSession {
   seen: UploadedFile[];
   /** by registry file: the stations that flows may name */
   names: Record<string, KnownStation[]>;
+  /** by file: archives that could not be unpacked, and why */
+  broken: Record<string, PreviewProblem>;
   job: { id: string; dryRun: boolean } | null;
 }
 
@@ -80,16 +82,23 @@ export async function listSessions(): Promise<UploadSession[]> {
 /** Gives an upload up: its files go. */
 export const discardSession = (id: string): Promise<void> => discardUpload(id);
 
-/** Adds files to a session, each under a name of its own: choices are made by name. */
-export async function withFiles(session: UploadSession, more: readonly GivenFile[]): Promise<UploadSession> {
+/** Adds files to a session, each under a name of its own: choices are made by name.
+ *  @param unusable  by the name that they came with: files that cannot be taken, and why */
+export async function withFiles(
+  session: UploadSession,
+  more: readonly GivenFile[],
+  unusable: Readonly<Record<string, PreviewProblem>>,
+): Promise<UploadSession> {
   const taken = new Set(session.files.map(({ name }) => name));
+  const broken = { ...session.broken };
   const files = more.map((file) => {
     const name = freeName(file.name, taken);
     taken.add(name);
+    if (unusable[file.name]) broken[name] = unusable[file.name];
     return { ...file, name };
   });
   const seen = await Promise.all(files.map(async ({ name, path }) => unseen(name, (await stat(path)).size)));
-  return { ...session, files: [...session.files, ...files], seen: [...session.seen, ...seen] };
+  return { ...session, files: [...session.files, ...files], seen: [...session.seen, ...seen], broken };
 }
 
 /** Two files called alike come from two folders: the later one gets a number for its folder, since the name itself may

@@ -13,7 +13,9 @@ export async function lookAtFiles({
   looks: Omit<FileLook, 'known'>[];
   known: KnownStation[] | null;
 }): Promise<Looked[]> {
-  const kinds = await Promise.all(looks.map(({ file, choices }) => kindOf(file, { files: { [file.name]: choices } })));
+  const kinds = await Promise.all(
+    looks.map(({ file, choices, broken }) => (broken ? 'flows' : kindOf(file, { files: { [file.name]: choices } }))),
+  );
   const order = looks.map((_, at) => at).sort((a, b) => rank(kinds[a]) - rank(kinds[b]) || a - b);
   const out: Looked[] = new Array(looks.length);
   let named = known;

@@ -1,0 +1,29 @@
+import { expandArchives } from '../intake/archive/index.ts';
+import { IntakeError } from '../intake/types.ts';
+import type { GivenFile } from './import-types.ts';
+import { uploadLimit } from './upload-limit.ts';
+import type { PreviewProblem } from './upload-types.ts';
+
+/** The files of an upload with those of its archives in their place. */
+export interface UnpackedUpload {
+  files: GivenFile[];
+  /** by name: archives that cannot be taken, and why */
+  broken: Record<string, PreviewProblem>;
+}
+
+/** Unpacks the archives among files that were received. One that cannot be taken stays as it is and says why: the files
+ *  beside it are none the worse for it. */
+export async function unpackUpload(given: readonly GivenFile[], folder: string): Promise<UnpackedUpload> {
+  const files: GivenFile[] = [];
+  const broken: UnpackedUpload['broken'] = {};
+  for (const file of given) {
+    try {
+      files.push(...(await expandArchives([file], folder, { mostBytes: uploadLimit() })).files);
+    } catch (error) {
+      if (!(error instanceof IntakeError)) throw error;
+      files.push(file);
+      broken[file.name] = { message: error.message, problem: error.problem };
+    }
+  }
+  return { files, broken };
+}
