@@ -1,4 +1,4 @@
-import { regionsToCheck, uncheckedRecords } from '../store/checked-records.ts';
+import { allRegions, uncheckedRecords } from '../store/checked-records.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { listStations } from '../store/stations.ts';
 import { launchJob } from './live-jobs.ts';
@@ -60,10 +60,13 @@ export async function launchCheck(region: Pick<RegionRow, 'id'>, codes?: readonl
   return launch(region.id, () => ids);
 }
 
-/** For the start of a server: a job for every region with records that were never checked as they stand, because a process
- *  ended between an import and its checks, or because the checks have changed since. */
-export async function launchPendingChecks(): Promise<void> {
-  for (const regionId of regionsToCheck()) await launch(regionId, () => uncheckedRecords(regionId));
+/** A job for every region with records that were never checked as they stand: because a process ended between an import and
+ *  its checks, because the checks have changed since, or because a mark or a drainage area did.
+ *  @param regionIds  regions to look at; all by default, for the start of a server */
+export async function launchPendingChecks(regionIds: readonly number[] = allRegions()): Promise<void> {
+  for (const regionId of regionIds) {
+    if (uncheckedRecords(regionId).length > 0) await launch(regionId, () => uncheckedRecords(regionId));
+  }
 }
 
 function launch(regionId: number, stationIds: () => readonly number[]) {

@@ -66,8 +66,7 @@ export function uncheckedRecords(regionId: number, path = databasePath()): numbe
     .map(([stationId]) => stationId);
 }
 
-/** The regions with a record that was never checked as it stands. */
-export function regionsToCheck(path = databasePath()): number[] {
-  const all = rows(sharedConnection(path), 'SELECT id FROM Region ORDER BY id').all([]) as [number][];
-  return all.map(([id]) => id).filter((id) => uncheckedRecords(id, path).length > 0);
+/** Every region's id. */
+export function allRegions(path = databasePath()): number[] {
+  return rows(sharedConnection(path), 'SELECT id FROM Region ORDER BY id').all([]).flat() as number[];
 }

@@ -41,3 +41,8 @@ export function jsonAnswer(value: unknown, init: { status?: number; headers?: Re
     headers: { 'content-type': TYPES.json, 'cache-control': 'no-store', ...init.headers },
   });
 }
+
+/** A table that is never kept, as a file to be saved. */
+export function csvAnswer(text: string, headers: Record<string, string>): Response {
+  return new Response(text, { headers: { 'content-type': TYPES.csv, 'cache-control': 'no-store', ...headers } });
+}

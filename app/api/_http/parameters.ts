@@ -74,3 +74,11 @@ export async function readJson<Schema extends z.ZodType>(request: Request, schem
   }
   return schema.parse(body);
 }
+
+/** Reads a JSON body that may be left out: nothing stands for an empty object. */
+export async function readOptionalJson<Schema extends z.ZodType>(
+  request: Request,
+  schema: Schema,
+): Promise<z.output<Schema>> {
+  return request.body === null ? schema.parse({}) : readJson(request, schema);
+}

@@ -72,4 +72,5 @@ export const IMPORT = pathParameter('import', 'number of the import');
 export const JOB = pathParameter('job', 'id of the job');
 export const UPLOAD = pathParameter('upload', 'id of the upload');
 export const KEPT_MAPPING = pathParameter('mapping', 'number of the kept mapping');
+export const MARK = pathParameter('mark', 'number of the mark');
 export const LINK = pathParameter('link', 'number of the link');

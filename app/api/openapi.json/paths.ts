@@ -6,6 +6,7 @@ import { stationCurveParameters } from '../regions/[region]/stations/[code]/curv
 import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
+import { CHECK_PATHS } from './paths-checks';
 import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
@@ -87,6 +88,7 @@ export const PATHS = {
     coverageParameters,
     { ...json(anything), 'text/csv': { schema: text } },
   ),
+  ...CHECK_PATHS,
   ...DAY_PATHS,
   ...STATION_PATHS,
   '/api/regions/{region}/layers': {

@@ -1,15 +1,20 @@
 import * as z from 'zod';
 import { basisSchema } from '@/lib/basis';
+import { FINDING_KINDS } from '@/lib/checks/finding';
 import { LAYOUTS, NEEDS } from '@/lib/intake/types';
 import { FILE_KINDS } from '@/lib/jobs/import-types';
 import { LINK_SOURCES } from '@/lib/region/link-suggestions';
 import { INFLUENCES } from '@/lib/region/ranking-types';
-import { UNITS } from '@/lib/series/quantities';
+import { QUANTITIES, UNITS } from '@/lib/series/quantities';
+import { FINDING_STATES } from '@/lib/store/findings';
 import { JOB_STATES } from '@/lib/store/jobs';
+import { MARK_KINDS } from '@/lib/store/marks-on-flags';
+import { checkOrder } from '../regions/[region]/checks/bodies';
 import { fileChoices, importChoices } from '../regions/[region]/imports/bodies';
 import { link } from '../regions/[region]/links/bodies';
 import { suggestionAnswer } from '../regions/[region]/links/suggested/bodies';
 import { mappingToKeep } from '../regions/[region]/mappings/bodies';
+import { newMark } from '../regions/[region]/stations/[code]/marks/bodies';
 import { newStation, stationPatch } from '../regions/[region]/stations/bodies';
 import { newRegion, regionChange } from '../regions/bodies';
 import { importOrder, previewOrder, uploadChange } from '../uploads/[upload]/bodies';
@@ -112,4 +117,28 @@ export const SCHEMAS = {
     layer: z.looseObject({}).nullable(),
   }),
   ImportOrder: importOrder,
+  CheckOrder: checkOrder,
+  Finding: z.object({
+    id: z.int(),
+    code: z.string().describe('of the station'),
+    quantity: z.enum(QUANTITIES),
+    kind: z.enum(FINDING_KINDS),
+    first: z.iso.date(),
+    last: z.iso.date(),
+    days: z.int().describe('days of the stretch that are at fault'),
+    detail: z.looseObject({}).describe('the figures behind it, flows in m³/s'),
+    state: z.enum(FINDING_STATES),
+  }),
+  NewMark: newMark,
+  Mark: z.object({
+    id: z.int(),
+    code: z.string().describe('of the station'),
+    quantity: z.enum(QUANTITIES),
+    kind: z.enum(MARK_KINDS),
+    first: z.iso.date(),
+    last: z.iso.date(),
+    reason: z.string(),
+    by: z.string(),
+    createdAt: z.iso.datetime(),
+  }),
 } as const;
