@@ -4,7 +4,7 @@ import { LINK_SOURCES } from '../region/link-suggestions.ts';
 import { QUANTITIES } from '../series/quantities.ts';
 import { ARCHIVE_FORMAT } from '../store/archived-region.ts';
 import { OVERLAP_RULES } from '../store/lay-parts.ts';
-import { LAYER_KINDS } from '../store/layers.ts';
+import { LAYER_KINDS } from '../store/layer-kinds.ts';
 import { MARK_KINDS } from '../store/marks-on-flags.ts';
 
 const text = z.string().max(10_000);

@@ -1,7 +1,7 @@
 import type { Correction, ImportReport, Inspection, IntakeError, Mapping, Unit } from '../intake/types.ts';
 import type { ArchivedImport } from '../store/archived-region.ts';
 import type { OverlapRule } from '../store/lay-parts.ts';
-import type { LayerKind } from '../store/layers.ts';
+import type { LayerKind } from '../store/layer-kinds.ts';
 import type { Revisions } from '../store/revisions.ts';
 
 export const FILE_KINDS = ['registry', 'layer', 'flows'] as const;

@@ -34,6 +34,7 @@ export function resultKey(
   return hash.digest('hex');
 }
 
-function factsOf({ name, river, latitude, longitude, areaKm2, influence }: StationFacts) {
-  return [name, river, latitude, longitude, areaKm2, influence];
+function factsOf({ name, river, latitude, longitude, areaKm2, influence, derivedFrom }: StationFacts) {
+  const measured = [name, river, latitude, longitude, areaKm2, influence];
+  return derivedFrom === undefined ? measured : [...measured, derivedFrom];
 }

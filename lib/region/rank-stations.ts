@@ -183,6 +183,8 @@ function perArea(flowM3s: number | null, areaKm2: number | null): number | null 
 /** NaN is null in rows, and −0 is 0. */
 const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value + 0);
 
-function factsOf({ id, code, name, river, latitude, longitude, areaKm2, influence }: StationFacts): StationFacts {
-  return { id, code, name, river, latitude, longitude, areaKm2, influence };
+function factsOf(station: StationFacts): StationFacts {
+  const { id, code, name, river, latitude, longitude, areaKm2, influence, derivedFrom } = station;
+  const facts = { id, code, name, river, latitude, longitude, areaKm2, influence };
+  return derivedFrom === undefined ? facts : { ...facts, derivedFrom };
 }

@@ -22,6 +22,8 @@ export interface StationFacts {
   longitude: number | null;
   areaKm2: number | null;
   influence: Influence;
+  /** how the record comes from others, in words; absent where it was measured */
+  derivedFrom?: string;
 }
 
 /** One station's input to the ranking. */

@@ -11,10 +11,19 @@ const COARSE_BELOW_STEPS = 10;
 
 /** What a reader must know of one station's figures, as one line; empty when there is nothing. */
 export function noteOf(row: RankingRow, used: UsedYears, basis: ResolvedBasis): string {
-  const notes = [periodNote(row, basis), figureNote(row, basis), zeroNote(row), coarseNote(row, basis)];
+  const notes = [
+    derivedNote(row),
+    periodNote(row, basis),
+    figureNote(row, basis),
+    zeroNote(row),
+    coarseNote(row, basis),
+  ];
   notes.push(lowSeasonCut(used, basis));
   return notes.filter((note) => note !== null).join('; ');
 }
+
+const derivedNote = ({ derivedFrom }: RankingRow): string | null =>
+  derivedFrom === undefined ? null : `derived record, ${derivedFrom}`;
 
 function periodNote({ firstYear, lastYear }: RankingRow, { period }: ResolvedBasis): string | null {
   if (period !== null) return null;

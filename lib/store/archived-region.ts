@@ -1,6 +1,6 @@
 import { type Connection, change, rows } from './connection.ts';
 import type { OverlapRule } from './lay-parts.ts';
-import type { LayerKind } from './layers.ts';
+import type { LayerKind } from './layer-kinds.ts';
 import type { MarkKind } from './marks-on-flags.ts';
 
 /** What region.json of an archive begins with. */

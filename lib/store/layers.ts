@@ -1,8 +1,6 @@
 import { whenFree } from './busy.ts';
+import type { LayerKind } from './layer-kinds.ts';
 import { openStore } from './open.ts';
-
-export const LAYER_KINDS = ['river', 'catchment', 'other'] as const;
-export type LayerKind = (typeof LAYER_KINDS)[number];
 
 /** A map layer without its GeoJSON. */
 export interface LayerRow {

@@ -173,7 +173,8 @@ export function regionDataHash(regionId: number, path = databasePath()): string 
   const hash = createHash('sha256');
   const facts = rows(
     sharedConnection(path),
-    `SELECT code, name, river, latitude, longitude, areaKm2, influence FROM Station WHERE regionId = ? ORDER BY code`,
+    `SELECT code, name, river, latitude, longitude, areaKm2, influence, derived FROM Station WHERE regionId = ?
+     ORDER BY code`,
   );
   for (const row of facts.all([regionId])) hash.update(JSON.stringify(row)).update('\n');
   for (const record of recordsOf(regionId, path)) hash.update(`${record.code}\t${record.hash}\n`);

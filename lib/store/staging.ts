@@ -6,7 +6,7 @@ import { blobOf, blobOfValues } from './blobs.ts';
 import { flagsOfCodes } from './codes.ts';
 import { databasePath } from './database-url.ts';
 import type { OverlapRule } from './lay-parts.ts';
-import type { LayerKind } from './layers.ts';
+import type { LayerKind } from './layer-kinds.ts';
 import { summarise } from './record-summary.ts';
 import { FACT_NAMES, type FactName, type StationInput } from './station-facts.ts';
 

@@ -1,4 +1,5 @@
 import type { Influence, StationFacts } from '../region/ranking-types.ts';
+import { deriveText } from '../series/derive.ts';
 import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
 import { rows, sharedConnection } from './connection.ts';
 import { changesOf, namedFlowsOf, recipeOf } from './history-text.ts';
@@ -30,16 +31,20 @@ const FACTS = {
 
 const ALL = { ...FACTS, changes: true, notes: true, namedFlows: true, derived: true } as const;
 
-const LIST_SQL = `SELECT ${Object.keys(FACTS).join(', ')} FROM Station WHERE regionId = ? ORDER BY code`;
+const LIST_SQL = `SELECT ${Object.keys(FACTS).join(', ')}, derived FROM Station WHERE regionId = ? ORDER BY code`;
 
-type FactsRow = [number, string, string, string, number | null, number | null, number | null, Influence];
+type FactsRow = [
+  ...[number, string, string, string, number | null, number | null, number | null, Influence],
+  derived: string | null,
+];
 
 /** The facts of a region's stations, by code. By libsql alone: every answer about a region begins with them, and for
  *  2,000 stations Prisma takes twice as long. */
 export async function listStations(regionId: number): Promise<StationFacts[]> {
   const found = rows(sharedConnection(openStore().path), LIST_SQL).all([regionId]) as FactsRow[];
-  return found.map(([id, code, name, river, latitude, longitude, areaKm2, influence]) => ({
+  return found.map(([id, code, name, river, latitude, longitude, areaKm2, influence, derived]) => ({
     ...{ id, code, name, river, latitude, longitude, areaKm2, influence },
+    ...(derived === null ? {} : { derivedFrom: deriveText(recipeOf(derived)!) }),
   }));
 }
 

@@ -50,6 +50,21 @@ test('resultKey does not depend on the order of the stations', () => {
   );
 });
 
+test('resultKey tells a derived station by its recipe, and leaves a measured one as it was', () => {
+  fc.assert(
+    fc.property(basis, region, (values, stations) => {
+      if (stations.length === 0) return;
+      const derived = (text?: string) =>
+        key(
+          values,
+          stations.map(({ facts, dataHash }) => ({ facts: { ...facts, derivedFrom: text }, dataHash })),
+        );
+      expect(derived(undefined)).toBe(key(values, stations));
+      expect(new Set([derived(undefined), derived('flow: A + B'), derived('flow: A − B')]).size).toBe(3);
+    }),
+  );
+});
+
 test('resultKey without facts changes with records only', () => {
   fc.assert(
     fc.property(basis, region, fc.string(), (values, stations, name) => {

@@ -208,6 +208,17 @@ test('rankRegion gives no percentage of a mean that is not above 0', () => {
   expect(rows[1].note).toContain('mean minimum is not above 0');
 });
 
+test('rankRegion ranks a derived station like others and notes its recipe', () => {
+  const values = [5.013, 4.021, 3.007, 2.019, 1.003];
+  const derived = station('sum', { first: 2001, values }, { derivedFrom: 'flow: A + B' });
+  const { rows } = ranking([derived, rise]);
+  expect(rows.map(({ code, rank, note }) => [code, rank, note.startsWith('derived record, flow: A + B')])).toEqual([
+    ['sum', 1, true],
+    ['rise', 2, false],
+  ]);
+  expect('derivedFrom' in rows[1]).toBe(false);
+});
+
 test('rankRegion notes a year start that cuts the low season', () => {
   const edge = station('edge', { first: 2001, values: fine, dayOfYear: [5, 5, 5, 5, 5] });
   expect(ranking([edge]).rows[0].note).toBe(
