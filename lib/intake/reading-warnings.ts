@@ -15,6 +15,10 @@ export function readingWarnings(loop: RowLoop, reading: TableReading, sink: DayS
     [reading.leftOut(), (count) => `${count} rows of other quantities were left out.`],
     [filled, (count) => `${count} days stand twice, once with a value and once without; the value was taken.`],
     [otherCodes, (count) => `${count} days stand twice with equal values and unlike flags; the first flag was kept.`],
+    [
+      loop.headersAgain,
+      (count) => `The header stands again ${count} times between the rows; those lines were skipped.`,
+    ],
     [loop.endsOpen ? 1 : 0, () => 'The last row has no line end: make sure that the file was not cut short.'],
   ];
   return warnings.flatMap(([count, words]) => (count > 0 ? [words(count)] : []));

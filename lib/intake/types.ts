@@ -174,6 +174,8 @@ export class IntakeError extends Error {
       remedy: string;
       /** machine-readable: the screen asks for what is missing */
       needs?: Need;
+      /** with needs 'correction': what would put the rows right */
+      corrections?: Correction[];
       /** with needs 'codes': the codes as written and those of the registry that they may be */
       pairs?: CodePair[];
       /** every row at fault, where several are (a registry is taken whole or not at all) */
@@ -321,7 +323,21 @@ export interface RegistryStation {
   derived?: DerivedRecipe | null;
 }
 
-export type RegistryFact = 'name' | 'river' | 'latitude' | 'longitude' | 'areaKm2' | 'influence';
+export const REGISTRY_FACTS = [
+  ...(['name', 'river', 'latitude', 'longitude', 'areaKm2', 'influence'] as const),
+  ...(['changes', 'namedFlows', 'notes', 'derived'] as const),
+] as const;
+export type RegistryFact = (typeof REGISTRY_FACTS)[number];
+
+/** What a person says of a registry, and what is known beside it. */
+export interface RegistryOptions {
+  /** of its coordinates; without them a registry that seems to need one is refused */
+  corrections?: readonly Correction[];
+  /** name of the sheet of a workbook */
+  sheet?: string;
+  /** where the region lies by its layers and stations, as west, south, east, north: tells swapped coordinates */
+  near?: readonly [number, number, number, number] | null;
+}
 
 /** A registry file, read whole. A registry with any bad row is refused with all of its bad rows named. */
 export interface Registry {

@@ -72,8 +72,10 @@ export function stageFile(file: GivenFile, kind: FileKind, tools: StageTools): P
   return { registry: stageRegistry, layer: stageLayer, flows: stageFlows }[kind](file, tools);
 }
 
-async function stageRegistry(file: GivenFile, { staging }: StageTools): Promise<StagedFile> {
-  const { stations, rows, given, sha256, warnings } = await readRegistry(file.path, file.name);
+async function stageRegistry(file: GivenFile, { staging, choices }: StageTools): Promise<StagedFile> {
+  const { corrections, mapping } = choicesFor(file, choices);
+  const options = { corrections, sheet: mapping?.sheet };
+  const { stations, rows, given, sha256, warnings } = await readRegistry(file.path, file.name, options);
   const number = staging.addFile({ kind: 'registry', fileName: file.name });
   staging.stageRegistry(number, stations, given);
   staging.describeFile(number, { sha256, rows, accepted: stations.length, report: { warnings } });

@@ -1,27 +1,20 @@
 import type { RegistryFact } from '../types.ts';
+import { type NamedFlowColumn, namedFlowColumns } from './named-flow-columns.ts';
+import { plainHeading } from './plain-heading.ts';
 
 /** Which column of a registry holds which fact; −1 where none does. */
 export interface RegistryColumns extends Record<RegistryFact | 'code' | 'areaUnit', number> {
   /** further columns of areas, not read */
   otherAreas: number[];
-}
-
-/** "Drainage_Area (km²)" → "drainage area km2" */
-export function plainHeading(heading: string): string {
-  return heading
-    .replace(/(\p{Ll})(\p{Lu})/gu, '$1 $2')
-    .toLowerCase()
-    .replaceAll('²', '2')
-    .replaceAll('^', '')
-    .replace(/[^\p{L}\p{N}]+/gu, ' ')
-    .trim();
+  /** columns of one named flow each; `namedFlows` is a column that holds all of them as JSON */
+  flows: NamedFlowColumn[];
 }
 
 const NOUN = '(?:station|site|gauge|gage|stn|gauging station)';
 const NUMBER = '(?:code|id|no|number|nr|num|nummer|ref|reference)';
 
 /** What may head each column, best first: the first pattern that some heading fits decides. */
-const PATTERNS: Record<'code' | 'name' | 'river' | 'latitude' | 'longitude' | 'influence', RegExp[]> = {
+const PATTERNS: Record<Exclude<RegistryFact, 'areaKm2'> | 'code', RegExp[]> = {
   code: [
     new RegExp(`^${NOUN} ?${NUMBER}$`),
     /^(code|id)$/,
@@ -39,13 +32,18 @@ const PATTERNS: Record<'code' | 'name' | 'river' | 'latitude' | 'longitude' | 'i
     /^(river|stream|watercourse|waterbody|water body|river name|stream name|gewässer|fluss|cours d eau|río|rio)$/,
     /\b(river|stream|watercourse)\b/,
   ],
-  latitude: [/^(lat|latitude|breite)$/, /\b(lat|latitude)\b(?!.*\b(dms|datum|accuracy)\b)/, /^y$/],
+  latitude: [/^dec lat va$/, /^(lat|latitude|breite)$/, /\b(lat|latitude)\b(?!.*\b(dms|datum|accuracy)\b)/, /^y$/],
   longitude: [
+    /^dec long va$/,
     /^(lon|long|lng|longitude|länge)$/,
     /\b(lon|long|lng|longitude)\b(?!.*\b(dms|datum|accuracy|name)\b)/,
     /^x$/,
   ],
   influence: [/^(influence|influenced|flow influence|influence type)$/],
+  changes: [/^(dated )?changes$/],
+  namedFlows: [/^named flows$/],
+  notes: [/^(notes?|remarks?|comments?|bemerkung|bemerkungen)$/],
+  derived: [/^(derived|derived record|recipe)$/],
 };
 
 const AREA = /\b(area|catchment size|basin size|einzugsgebiet|superficie)\b/;
@@ -64,20 +62,27 @@ export function registryColumns(headings: readonly string[]): RegistryColumns {
     }
     return -1;
   };
+  const flows = namedFlowColumns(headings);
+  for (const { value, unitColumn, monthsColumn } of flows)
+    for (const at of [value, unitColumn, monthsColumn]) taken.add(at);
   const areaUnit = find([AREA_UNIT]);
-  const areas = plain.flatMap((heading, at) => (at !== areaUnit && AREA.test(heading) ? [at] : []));
+  const areas = plain.flatMap((heading, at) => (!taken.has(at) && AREA.test(heading) ? [at] : []));
   const withUnit = areas.filter((at) => areaFactorOf(headings[at]) !== null);
   const areaKm2 = withUnit[0] ?? areas[0] ?? -1;
   for (const at of areas) taken.add(at);
   // In this order, so that "station" names the station only when another column holds its code.
   const code = find(PATTERNS.code);
   return {
-    ...{ code, areaUnit, areaKm2, otherAreas: areas.filter((at) => at !== areaKm2) },
+    ...{ code, areaUnit, areaKm2, otherAreas: areas.filter((at) => at !== areaKm2), flows },
     latitude: find(PATTERNS.latitude),
     longitude: find(PATTERNS.longitude),
     name: find(PATTERNS.name),
     river: find(PATTERNS.river),
     influence: find(PATTERNS.influence),
+    changes: find(PATTERNS.changes),
+    namedFlows: find(PATTERNS.namedFlows),
+    notes: find(PATTERNS.notes),
+    derived: find(PATTERNS.derived),
   };
 }
 
