@@ -1,5 +1,12 @@
 import { FixedWidthLines } from '../rows/fixed-width.ts';
-import { type FieldPlace, type InspectOptions, IntakeError, type Mapping, type ValueCandidate } from '../types.ts';
+import {
+  type AlsoCandidate,
+  type FieldPlace,
+  type InspectOptions,
+  IntakeError,
+  type Mapping,
+  type ValueCandidate,
+} from '../types.ts';
 import { findUnit, unitProblem } from './find-unit.ts';
 import { findFixedSlices, type Slice } from './fixed-slices.ts';
 import { type SampleLine, splitSample } from './sample.ts';
@@ -65,8 +72,18 @@ export function planFixedWidth(
     preview: splitSample(body.slice(0, 8), new FixedWidthLines(shown, lineEnd)).map(({ fields }) => fields),
     previewLines: body.slice(0, 8).map(({ line }) => line),
     valueCandidates: (guess?.values ?? []).map((slice) => candidate(slice, body)),
+    others: mapping.value === null ? [] : otherSlices(guess?.values ?? [], mapping.value, body),
     warnings: [],
   };
+}
+
+/** The numbers that the mapping does not read; of what they are, only the file's makers know. */
+function otherSlices(slices: readonly Slice[], value: FieldPlace, body: readonly SampleLine[]): AlsoCandidate[] {
+  const taken = 'slice' in value ? value.slice[1] : -1;
+  return slices
+    .filter(([, end]) => end !== taken)
+    .map((slice) => ({ ...candidate(slice, body), quantity: null, unit: null, value: { slice }, flag: null }))
+    .map(({ place: _, ...other }) => other);
 }
 
 function candidate(slice: Slice, body: readonly SampleLine[]): ValueCandidate {
