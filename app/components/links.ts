@@ -60,6 +60,25 @@ export function yearHref(slug: string, station: string, year: number, query: URL
   return withQuery(`/regions/${encodeURIComponent(slug)}/records`, next);
 }
 
+/** The page on which a station's facts are changed. */
+export function stationEditHref(slug: string, code: string, query: URLSearchParams | string = ''): string {
+  const path = `/regions/${encodeURIComponent(slug)}/stations/${encodeURIComponent(code)}/edit`;
+  return withQuery(path, carried(query));
+}
+
+/** The page of the upstream–downstream links of a region. */
+export function linksHref(slug: string, query: URLSearchParams | string = ''): string {
+  return withQuery(`/regions/${encodeURIComponent(slug)}/links`, carried(query));
+}
+
+/** The page on which a station is derived from others.
+ *  @param from  code of a station that the recipe begins with */
+export function deriveHref(slug: string, from: string | null, query: URLSearchParams | string = ''): string {
+  const out = carried(query);
+  if (from !== null) out.set('from', from);
+  return withQuery(`/regions/${encodeURIComponent(slug)}/derive`, out);
+}
+
 /** The address of an API table with only the basis along. */
 export function apiHref(slug: string, table: string, query: URLSearchParams | string, format?: string): string {
   const from = new URLSearchParams(query);

@@ -8,6 +8,7 @@ import { CurveReadout } from './curve-readout';
 import styles from './duration-figure.module.css';
 import { EndLabels } from './end-labels';
 import { exceedanceText, tickText } from './figure-text.ts';
+import { FlowLevels } from './flow-levels';
 import { layOut } from './lay-out';
 import { lineLook } from './line-looks';
 import { nearestCurve } from './nearest-curve';
@@ -27,6 +28,11 @@ export interface FigureBand {
   p90: readonly (number | null)[];
 }
 
+export interface FigureLevel {
+  label: string;
+  flow: number;
+}
+
 interface Props {
   exceedances: readonly number[];
   /** at most 12, each with a label at its end */
@@ -34,6 +40,8 @@ interface Props {
   /** the others, thin and without a label */
   thin?: readonly FigureCurve[];
   band: FigureBand | null;
+  /** flows with a name, in the unit of the axis: a line across the figure each, where it is in range */
+  levels?: readonly FigureLevel[];
   /** what the flow axis shows, with its unit */
   flowLabel: string;
   x: ExceedanceAxis;
@@ -47,7 +55,18 @@ interface Props {
 const REACH = 10;
 
 /** Duration curves over the region's band. Hover reads every curve at that exceedance; a click opens the station. */
-export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel, x, y, height = 480, summary }: Props) {
+export function DurationFigure({
+  exceedances,
+  lines,
+  thin = [],
+  band,
+  levels = [],
+  flowLabel,
+  x,
+  y,
+  height = 480,
+  summary,
+}: Props) {
   const router = useRouter();
   const [frame, width, measured] = useWidth<HTMLDivElement>(960);
   const [near, setNear] = useState<string | null>(null);
@@ -170,6 +189,7 @@ export function DurationFigure({ exceedances, lines, thin = [], band, flowLabel,
             }
           />
         </ComposedChart>
+        {measured && <FlowLevels levels={levels} plan={plan} width={width} height={height} />}
         {measured && flow.breakAt !== null && (
           <span className={styles.axisBreak} style={{ left: plot.left, top: plan.toPixel(flow.breakAt) }} aria-hidden />
         )}

@@ -1,5 +1,12 @@
 'use client';
 import { scaleLinear } from 'd3-scale';
+import { ChangeMarks } from '@/app/components/change-marks/change-marks';
+import {
+  type MarkedChange,
+  placeChanges,
+  tabsHeight,
+  yearPosition,
+} from '@/app/components/change-marks/marked-changes';
 import { useWidth } from '@/app/components/use-width';
 import type { YearCoverage } from '@/lib/jobs/types';
 import styles from './coverage-strip.module.css';
@@ -10,6 +17,9 @@ import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
 
 interface Props {
+  changes: readonly MarkedChange[];
+  /** month in which the low-flow year begins */
+  yearStart: number;
   years: (YearCoverage & { label: string })[];
   /** first and last year of the axis, shared with the figure of the minima above */
   span: [number, number];
@@ -18,17 +28,18 @@ interface Props {
 
 const BAR = 44;
 const TOP = 4;
-const HEIGHT = TOP + BAR + 28;
 
 /** One bar a year, as tall as the share of its days that have a value: dark where the year counts, light where it does
  *  not, hatched for provisional days, a cross on the base line where there is nothing. */
-export function CoverageStrip({ years, span, summary }: Props) {
+export function CoverageStrip({ years, changes, yearStart, span, summary }: Props) {
   const [frame, width] = useWidth<HTMLDivElement>(960);
   const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, Math.max(PLOT.left + 1, width - PLOT.right)]);
   const reader = useYearReader(years.map((year) => year.year));
   const current = years.find((year) => year.year === reader.picked) ?? null;
   const barWidth = Math.max(1.5, (x(1) - x(0)) * 0.78);
-  const base = TOP + BAR;
+  const marks = placeChanges(changes, (day) => x(yearPosition(day, yearStart)), [PLOT.left, width - PLOT.right]);
+  const top = TOP + tabsHeight(marks);
+  const base = top + BAR;
 
   return (
     <div ref={frame} className={styles.frame}>
@@ -43,15 +54,16 @@ export function CoverageStrip({ years, span, summary }: Props) {
         onKeyDown={reader.onKeyDown}
         onLeave={reader.clear}
       >
-        <svg width={width} height={HEIGHT} aria-hidden="true">
+        <svg width={width} height={base + 28} aria-hidden="true">
           <Hatch />
-          <line className={styles.full} x1={PLOT.left} x2={width - PLOT.right} y1={TOP} y2={TOP} />
-          <text className={styles.axis} x={PLOT.left - 8} y={TOP} dy="0.6em" textAnchor="end">
+          <line className={styles.full} x1={PLOT.left} x2={width - PLOT.right} y1={top} y2={top} />
+          <text className={styles.axis} x={PLOT.left - 8} y={top} dy="0.6em" textAnchor="end">
             all days
           </text>
           {years.map((year) => (
-            <Bar key={year.year} year={year} x={x(year.year)} width={barWidth} picked={year === current} />
+            <Bar key={year.year} year={year} x={x(year.year)} width={barWidth} base={base} picked={year === current} />
           ))}
+          <ChangeMarks changes={marks} top={TOP} bottom={base} />
           <line className={styles.base} x1={PLOT.left} x2={width - PLOT.right} y1={base} y2={base} />
           {yearTicks(span[0], span[1], width - PLOT.left - PLOT.right).map((year) => (
             <text key={year} className={styles.axis} x={x(year)} y={base + 18} textAnchor="middle">
@@ -76,8 +88,15 @@ function Hatch() {
   );
 }
 
-function Bar({ year, x, width, picked }: { year: YearCoverage; x: number; width: number; picked: boolean }) {
-  const base = TOP + BAR;
+interface BarProps {
+  year: YearCoverage;
+  x: number;
+  width: number;
+  base: number;
+  picked: boolean;
+}
+
+function Bar({ year, x, width, base, picked }: BarProps) {
   const valued = year.days - year.missingDays;
   if (valued <= 0) return <path className={styles.absent} d={`M${x - 2.5},${base - 6}l5,5m0,-5l-5,5`} />;
   const height = (valued / year.days) * BAR;

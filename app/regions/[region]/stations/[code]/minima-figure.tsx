@@ -1,12 +1,20 @@
 'use client';
 import { scaleLinear } from 'd3-scale';
 import { useMemo } from 'react';
+import { ChangeMarks } from '@/app/components/change-marks/change-marks';
+import {
+  type MarkedChange,
+  placeChanges,
+  tabsHeight,
+  yearPosition,
+} from '@/app/components/change-marks/marked-changes';
 import { tickText } from '@/app/components/duration-figure/figure-text';
+import { LevelLines } from '@/app/components/level-lines/level-lines';
 import { useWidth } from '@/app/components/use-width';
 import type { SlopeLine } from '@/lib/jobs/types';
 import styles from './minima-figure.module.css';
 import type { MinimaPoint } from './minima-points';
-
+import type { NamedLevel } from './named-levels';
 import { PLOT } from './plot-box';
 import { readingText } from './reading-text';
 import { yearTicks } from './time-axis';
@@ -21,6 +29,11 @@ interface Props {
   factor: number;
   unit: string;
   days: number;
+  /** dated changes at the station, and the flows that mean something there */
+  changes: readonly MarkedChange[];
+  levels: readonly NamedLevel[];
+  /** month in which the low-flow year begins */
+  yearStart: number;
   /** first and last year of the axis, shared with the coverage strip below */
   span: [number, number];
   summary: string;
@@ -30,9 +43,25 @@ const HEIGHT = 340;
 
 /** Annual minima on a real time axis: filled marks for the years used, hollow ones that hang from a bar for years
  *  whose minimum is only an upper bound, with the slope.fitted and its interval. Arrow keys move through the years. */
-export function MinimaFigure({ points, slope, trend, factor, unit, days, span, summary }: Props) {
+export function MinimaFigure({
+  points,
+  slope,
+  trend,
+  factor,
+  unit,
+  days,
+  changes,
+  levels,
+  yearStart,
+  span,
+  summary,
+}: Props) {
   const [frame, width] = useWidth<HTMLDivElement>(960);
-  const { x, y } = useMemo(() => scales(points, slope, factor, span, width), [points, slope, factor, span, width]);
+  const { x, y, marks, top } = useMemo(
+    () => layOut({ points, slope, factor, changes, yearStart, span, width }),
+    [points, slope, factor, changes, yearStart, span, width],
+  );
+  const shown = levels.map(({ label, flow }) => ({ label, y: y(flow * factor) })).filter((level) => level.y >= top);
   const reader = useYearReader(points.map((point) => point.year));
   const current = points.find((point) => point.year === reader.picked) ?? null;
 
@@ -70,10 +99,16 @@ export function MinimaFigure({ points, slope, trend, factor, unit, days, span, s
               </text>
             </g>
           ))}
+          <LevelLines
+            levels={shown}
+            left={PLOT.left}
+            right={Math.max(PLOT.left, width - PLOT.right)}
+            top={top + 6}
+            bottom={bottom - 6}
+          />
+          <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
           {slope && <Slope slope={slope} x={x} y={(flow) => y(flow * factor)} />}
-          {current && (
-            <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={PLOT.top} y2={bottom} />
-          )}
+          {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
           {points.map((point) => (
             <Mark
               key={point.year}
@@ -92,18 +127,20 @@ export function MinimaFigure({ points, slope, trend, factor, unit, days, span, s
   );
 }
 
-function scales(
-  points: readonly MinimaPoint[],
-  slope: SlopeLine | null,
-  factor: number,
-  span: [number, number],
-  width: number,
-) {
-  const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, Math.max(PLOT.left + 1, width - PLOT.right)]);
+interface Contents extends Pick<Props, 'points' | 'slope' | 'factor' | 'changes' | 'yearStart' | 'span'> {
+  width: number;
+}
+
+/** Scales, and the marks of the changes with the room that their letters take above the plot. */
+function layOut({ points, slope, factor, changes, yearStart, span, width }: Contents) {
+  const right = Math.max(PLOT.left + 1, width - PLOT.right);
+  const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
+  const marks = placeChanges(changes, (day) => x(yearPosition(day, yearStart)), [PLOT.left, right]);
+  const top = PLOT.top + tabsHeight(marks);
   const flows = points.flatMap((point) => (point.minimum === null ? [] : [point.minimum * factor]));
   const highest = Math.max(0, ...flows, ...(slope?.fitted.map((flow) => flow * factor) ?? []));
-  const y = scaleLinear([0, highest || 1], [HEIGHT - PLOT.bottom, PLOT.top]).nice(5);
-  return { x, y };
+  const y = scaleLinear([0, highest || 1], [HEIGHT - PLOT.bottom, top]).nice(5);
+  return { x, y, marks, top };
 }
 
 type Position = (value: number) => number;

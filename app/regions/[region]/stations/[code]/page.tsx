@@ -7,6 +7,7 @@ import { rankingOf } from '@/lib/jobs/ranking';
 import { stationDetail } from '@/lib/jobs/station';
 import { getStation } from '@/lib/store/stations';
 import { type PageQuery, pageRequest } from '../../page-request';
+import { stationBackground } from './station-background';
 import { StationScreen } from './station-screen';
 
 interface Props {
@@ -26,8 +27,11 @@ export default async function StationPage({ params, searchParams }: Props) {
   const { region: slug, code: encoded } = await params;
   const code = decodeURIComponent(encoded);
   const { region, basis, basisProblem, query } = await pageRequest(slug, await searchParams);
-  const detail = await stationDetail(region, basis, code);
-  if (!detail) notFound();
+  const [detail, background] = await Promise.all([
+    stationDetail(region, basis, code),
+    stationBackground(region.id, code),
+  ]);
+  if (!detail || !background) notFound();
   const { ranking } = await rankingOf(region, basis);
   return (
     <>
@@ -36,7 +40,7 @@ export default async function StationPage({ params, searchParams }: Props) {
         <BasisSentence resolved={detail.basis} base={region.basis}>
           {basisProblem && <ErrorNote title="The region’s own terms are shown">{basisProblem}</ErrorNote>}
         </BasisSentence>
-        <StationScreen region={region} detail={detail} rows={ranking.rows} query={query} />
+        <StationScreen region={region} detail={detail} background={background} rows={ranking.rows} query={query} />
       </main>
     </>
   );

@@ -1,22 +1,24 @@
 import { area, count, type Units } from '@/app/components/format';
 import type { YearCoverage } from '@/lib/jobs/types';
 import type { StationFacts } from '@/lib/region/ranking-types';
+import type { NamedFlow } from '@/lib/series/station-history';
 import { InfluenceMark } from './influence-mark';
-import styles from './station-screen.module.css';
+import { namedFlowText } from './named-levels';
 
 interface Props {
   station: StationFacts;
+  namedFlows: readonly NamedFlow[];
   coverage: readonly YearCoverage[];
   units: Units;
   labelOf(year: number): string;
 }
 
-export function StationFactList({ station, coverage, units, labelOf }: Props) {
+export function StationFactList({ station, namedFlows, coverage, units, labelOf }: Props) {
   const { latitude, longitude } = station;
   const valued = coverage.filter((year) => year.state !== 'missing');
   const days = coverage.reduce((sum, year) => sum + year.days - year.missingDays, 0);
   return (
-    <dl className={styles.facts}>
+    <dl>
       <Fact name="Code">{station.code}</Fact>
       <Fact name="River">{station.river || 'not given'}</Fact>
       <Fact name="Drainage area">{station.areaKm2 === null ? 'not known' : area(station.areaKm2, units)}</Fact>
@@ -33,6 +35,11 @@ export function StationFactList({ station, coverage, units, labelOf }: Props) {
           ? 'no values'
           : `${labelOf(valued[0].year)} to ${labelOf(valued[valued.length - 1].year)}, ${count(days, 'day')}`}
       </Fact>
+      {namedFlows.map((flow) => (
+        <Fact key={flow.name} name={flow.name}>
+          {namedFlowText(flow)}
+        </Fact>
+      ))}
     </dl>
   );
 }

@@ -1,8 +1,9 @@
 import Link from 'next/link';
 import { Cautions } from '@/app/components/cautions';
-import { DurationFigure } from '@/app/components/duration-figure/duration-figure';
+import { ChangeLegend } from '@/app/components/change-marks/change-marks';
+import { markedChanges } from '@/app/components/change-marks/marked-changes';
 import { count, flowIn, UNIT_WORDS } from '@/app/components/format';
-import { apiHref, regionHref, stationHref } from '@/app/components/links';
+import { apiHref, deriveHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
 import ui from '@/app/components/ui.module.css';
@@ -10,15 +11,20 @@ import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import type { StationDetail } from '@/lib/jobs/types';
 import type { RankingRow } from '@/lib/region/ranking-types';
 import type { RegionRow } from '@/lib/store/regions';
-import { flowName, shownFlows } from '../../curves/curves-view';
+import { AlongRiver } from './along-river';
+import { BesideFigures } from './beside-figures';
 import { CoverageStrip } from './coverage-strip';
+import { DerivedNote } from './derived-note';
 import { MinimaFigure } from './minima-figure';
 import { minimaPoints } from './minima-points';
 import { MinimaTable } from './minima-table';
+import { namedLevels } from './named-levels';
 import { Neighbours } from './neighbours';
 import { PrintButton } from './print-button';
 import { placeOf } from './ranking-place';
 import { RankingSteps } from './ranking-steps';
+import type { StationBackground } from './station-background';
+import { StationCurve } from './station-curve';
 import { StationFactList } from './station-fact-list';
 import styles from './station-screen.module.css';
 import { TrendFigures } from './trend-figures';
@@ -26,17 +32,20 @@ import { TrendFigures } from './trend-figures';
 interface Props {
   region: Pick<RegionRow, 'slug' | 'name'>;
   detail: StationDetail;
+  background: StationBackground;
   rows: readonly RankingRow[];
   query: URLSearchParams;
 }
 
-export function StationScreen({ region, detail, rows, query }: Props) {
+export function StationScreen({ region, detail, background, rows, query }: Props) {
   const { station, row, basis, coverage } = detail;
   const needle = needleOf(row);
   const points = minimaPoints(detail.minima, basis.yearStart, row.years);
   const span = yearSpan(coverage.map((year) => year.year).concat(points.map((point) => point.year)));
   const place = placeOf(rows, station.code);
   const labelOf = (year: number) => lowFlowYearLabel(year, basis.yearStart);
+  const changes = markedChanges(background.station.changes);
+  const levels = namedLevels(background.station.namedFlows, station.areaKm2);
   const unit = UNIT_WORDS[basis.units].flow;
   const mapQuery = new URLSearchParams(query);
   mapQuery.set('station', station.code);
@@ -57,6 +66,12 @@ export function StationScreen({ region, detail, rows, query }: Props) {
               }
               next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
             />
+            <Link href={stationEditHref(region.slug, station.code, query)} prefetch={false}>
+              Edit
+            </Link>
+            <Link href={deriveHref(region.slug, station.code, query)} prefetch={false}>
+              Derive from it
+            </Link>
             <PrintButton />
           </span>
         </nav>
@@ -75,9 +90,19 @@ export function StationScreen({ region, detail, rows, query }: Props) {
         </div>
         <p className={styles.verdict}>{detail.verdict}</p>
         {row.note && <p className={styles.note}>{row.note}</p>}
+        <DerivedNote slug={region.slug} background={background} query={query} />
       </header>
 
-      <StationFactList station={station} coverage={coverage} units={basis.units} labelOf={labelOf} />
+      <div className={styles.facts}>
+        <StationFactList
+          station={station}
+          namedFlows={background.station.namedFlows}
+          coverage={coverage}
+          units={basis.units}
+          labelOf={labelOf}
+        />
+        {background.station.notes && <p className={styles.notes}>{background.station.notes}</p>}
+      </div>
 
       <section className={styles.figures} aria-labelledby="minima-title">
         <div className={styles.sectionHead}>
@@ -97,15 +122,21 @@ export function StationScreen({ region, detail, rows, query }: Props) {
               factor={flowIn(1, basis.units) ?? 1}
               unit={unit}
               days={basis.days}
+              changes={changes}
+              levels={levels}
+              yearStart={basis.yearStart}
               span={span}
               summary={`Annual ${basis.days}-day minima of ${station.name}, ${count(points.length, 'year')}.`}
             />
             <h3 className={styles.coverageTitle}>Days with a value</h3>
             <CoverageStrip
               years={coverage.map((year) => ({ ...year, label: labelOf(year.year) }))}
+              changes={changes}
+              yearStart={basis.yearStart}
               span={span}
               summary={`Days with a value in each year of the record of ${station.name}.`}
             />
+            <ChangeLegend changes={changes} />
             <MinimaTable points={points} units={basis.units} days={basis.days} />
           </>
         )}
@@ -113,6 +144,7 @@ export function StationScreen({ region, detail, rows, query }: Props) {
 
       <aside className={styles.side}>
         <TrendFigures row={row} units={basis.units} labelOf={labelOf} />
+        <AlongRiver slug={region.slug} background={background} query={query} />
         <Neighbours slug={region.slug} station={station} near={detail.neighbours} rows={rows} query={query} />
       </aside>
 
@@ -125,8 +157,16 @@ export function StationScreen({ region, detail, rows, query }: Props) {
             </a>
           )}
         </div>
-        <StationCurve slug={region.slug} detail={detail} query={query} />
+        <StationCurve slug={region.slug} detail={detail} levels={levels} query={query} />
       </section>
+
+      <BesideFigures
+        slug={region.slug}
+        code={station.code}
+        beside={background.beside}
+        changes={changes}
+        units={basis.units}
+      />
 
       <footer className={styles.foot}>
         <Cautions />
@@ -142,61 +182,4 @@ function yearSpan(years: readonly number[]): [number, number] {
   const last = Math.max(...years);
   const pad = Math.max(0, Math.ceil((4 - (last - first)) / 2));
   return [first - pad, last + pad];
-}
-
-function StationCurve({ slug, detail, query }: { slug: string; detail: StationDetail; query: URLSearchParams }) {
-  const { curve, station, basis, region } = detail;
-  const flowsOf = (flows: ArrayLike<number>) => shownFlows(flows, region.unit, basis.units);
-  if (!curve) {
-    const other = new URLSearchParams(query);
-    const ways = (['mean', 'median'] as const).filter((way) => way !== basis.normalise);
-    return (
-      <div className={styles.nothing}>
-        <p>No curve on these terms: {detail.noCurveReason ?? 'the record has no usable year in the period'}.</p>
-        {basis.normalise !== 'none' && detail.row.yearsUsed > 0 && (
-          <p className={styles.ways}>
-            {ways.map((way) => {
-              other.set('normalise', way);
-              return (
-                <Link key={way} className={ui.button} href={stationHref(slug, station.code, other)} prefetch={false}>
-                  Compare as a ratio to the {way} flow
-                </Link>
-              );
-            })}
-          </p>
-        )}
-      </div>
-    );
-  }
-  const { p10, p50, p90 } = region.band;
-  const line = {
-    code: station.code,
-    name: station.name,
-    href: stationHref(slug, station.code, query),
-    flows: flowsOf(curve.flows),
-  };
-  return (
-    <>
-      <DurationFigure
-        exceedances={Array.from(region.exceedances)}
-        lines={[line]}
-        band={{ p10: flowsOf(p10), p50: flowsOf(p50), p90: flowsOf(p90) }}
-        flowLabel={flowName(region.unit, basis.normalise, basis.units)}
-        x="normal"
-        y="log"
-        height={400}
-        summary={`Duration curve of ${station.name} over the band of the region’s stations.`}
-      />
-      <p className={styles.caption}>
-        {count(curve.days, 'day')} of {count(curve.years, 'usable year')}. Shaded: 10–90 % of the region’s stations;
-        dotted: their median.{' '}
-        <Link
-          href={`${regionHref(slug, 'curves', query)}${query.size ? '&' : '?'}stations=${encodeURIComponent(station.code)}`}
-          prefetch={false}
-        >
-          Compare with chosen stations
-        </Link>
-      </p>
-    </>
-  );
 }
