@@ -126,10 +126,32 @@ test('unlike values for days that stand are refused unless revised', async () =>
   await imported([files.flows]);
   const before = databaseContent(place.path);
   const other = files.write('other.csv', 'station,date,discharge_m3s\nA1,1980-01-01,99\nA1,1980-01-02,98\n');
-  const [{ problem }] = await refused([other]);
+  const [{ problem, revisions }] = await refused([other]);
   expect(problem?.needs).toBe('revise');
+  expect(revisions).toMatchObject({ unlike: 2, revised: 0, stations: [{ code: 'A1', unlike: 2 }] });
   expect(databaseContent(place.path)).toBe(before);
-  expect((await imported([other], { revise: true })).taken).toHaveLength(1);
+  const kept = await imported([other], { rule: 'keep' });
+  expect(kept.taken[0].revisions).toMatchObject({ unlike: 2, revised: 0 });
+  expect((await imported([other], { revise: true })).taken[0].revisions).toMatchObject({ unlike: 2, revised: 2 });
+});
+
+test('a dry run tells what an import would take, and leaves no region, no rejected rows and no staging', async () => {
+  const bad = files.write('bad.csv', 'station,date,discharge_m3s\nA1,2001-01-01,3\nA1,2001-02-31,4\n');
+  const { result } = await launchImport({
+    region: { name: 'Not yet' },
+    files: given(files.registry, bad),
+    choices: { dryRun: true },
+  });
+  const outcome = await result;
+  expect(outcome).toMatchObject({ dryRun: true, regionId: null, problems: [] });
+  expect(outcome.taken).toMatchObject([
+    { importId: 0, file: 'stations.csv', summary: '4 stations, 4 of them new', revisions: null },
+    { importId: 0, file: 'bad.csv', report: { rejectedTotal: 1, rejectedFile: null }, revisions: { extended: 1 } },
+  ]);
+  expect((await listRegions()).map(({ name }) => name)).toEqual(['Upper Wethe']);
+  expect(await listStations(region.id)).toEqual([]);
+  expect(readdirSync(place.folder).filter((name) => /staging|upload/.test(name))).toEqual([]);
+  expect(existsSync(rejectedFolder()) ? readdirSync(rejectedFolder()) : []).toEqual([]);
 });
 
 test('a cancelled import leaves nothing behind', async () => {
