@@ -23,7 +23,7 @@ describe('files that are refused', () => {
     ['UTF-16 big-endian', Buffer.from(utf16(GOOD)).swap16(), { message: /UTF-16/, value: 'FE FF at the start' }],
     ['UTF-16 without its mark', Buffer.from(GOOD, 'utf16le'), { message: /UTF-16/ }],
     ['a binary file', Buffer.from([0x7f, 0x45, 0x4c, 0x46, 10, 2, 1, 1, 7, 10]), { message: /binary/, row: 2 }],
-    ['a ZIP archive', Buffer.from([0x50, 0x4b, 3, 4, 20, 0, 0, 0]), { message: /ZIP/ }],
+    ['a ZIP archive', Buffer.from([0x50, 0x4b, 3, 4, 20, 0, 0, 0]), { message: /archive/ }],
     ['JSON', '{"flows": []}', { message: /JSON/, row: 1 }],
     ['XML', '<?xml version="1.0"?>\n<a/>', { message: /XML/, row: 1 }],
     ['a header and nothing else', 'station,date,flow_m3s,flag\n', { message: /no rows of data/, row: 1 }],

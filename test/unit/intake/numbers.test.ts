@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { parseDecimal } from '../../../lib/intake/numbers.ts';
+import { parseDecimal, parseGrouped } from '../../../lib/intake/numbers.ts';
 
 const POINT = 46;
 const COMMA = 44;
@@ -51,4 +51,33 @@ test('parseDecimal with a decimal comma reads 2,345 as 2.345, and takes no point
   expect(parse('1.234,5', COMMA)).toBeNaN();
   expect(parse('1.5', COMMA)).toBeNaN();
   expect(parse('1,2345678901234567', COMMA)).toBe(1.2345678901234567);
+});
+
+test.each([
+  ['1,234.5', '.', ',', 1234.5],
+  ['1,234,567', '.', ',', 1234567],
+  ['999', '.', ',', 999],
+  ['1234.5', '.', ',', 1234.5],
+  ['1.234,5', ',', '.', 1234.5],
+  ['-1 234,5', ',', ' ', -1234.5],
+  ['1\u202f234', '.', ' ', 1234],
+  ['1\u00a0234.25', '.', ' ', 1234.25],
+  ["12'345.5", '.', "'", 12345.5],
+  ['12’345', '.', "'", 12345],
+  ['1.5e3', '.', ',', 1500],
+] as const)('parseGrouped(“%s”) is a number of groups of three', (text, decimal, thousands, value) => {
+  expect(parseGrouped(text, decimal, thousands)).toBe(value);
+});
+
+test.each([
+  ['1,23', '.', ','],
+  ['1234,567', '.', ','],
+  ['1,234.567,8', '.', ','],
+  [',123', '.', ','],
+  ['1,,234', '.', ','],
+  ['1.234.5', ',', '.'],
+  ['1,2345', '.', ','],
+  ['', '.', ','],
+] as const)('parseGrouped(“%s”) is NaN', (text, decimal, thousands) => {
+  expect(parseGrouped(text, decimal, thousands)).toBeNaN();
 });
