@@ -2,8 +2,9 @@ import { expect, test } from 'vitest';
 import type { DerivedRecipe } from '../../../lib/series/station-history.ts';
 import { undoImport } from '../../../lib/store/imports.ts';
 import { addMark, removeMark } from '../../../lib/store/marks.ts';
-import { listQuantities } from '../../../lib/store/quantities.ts';
+import { readSeries } from '../../../lib/store/records.ts';
 import { addStation, editStation, removeStation } from '../../../lib/store/station-edit.ts';
+import { stationQuantities } from '../../../lib/store/station-quantities.ts';
 import { getStation, upsertRegistry } from '../../../lib/store/stations.ts';
 import { dump, importFiles, seenRecords } from './helpers.ts';
 import { temporaryDatabase } from './temporary-database.ts';
@@ -38,11 +39,10 @@ test('a derived record is the sum of its terms in m³/s, with their flags, and s
   const seen = await seenRecords(regionId);
   expect(seen.S).toMatchObject({ firstDay: 0, values: [2, gap, 6], flags: [2, 0, 0] });
   expect(seen.H).toMatchObject({ firstDay: 1, values: [1, gap, 3], flags: [2, 0, 0] });
-  expect(await listQuantities({ regionId })).toMatchObject([
-    { code: 'A', derived: false, valueCount: 3 },
-    { code: 'B', derived: false, unit: 'L/s', shownUnit: 'm3/s', valueCount: 2 },
-    { code: 'H', derived: true, unit: 'm3/s', valueCount: 2, firstValueDay: 1, lastValueDay: 3 },
-    { code: 'S', derived: true },
+  const { id, derived } = (await getStation(regionId, 'H'))!;
+  expect(derived).toEqual(recipe(['S', 0.5, 1]));
+  expect(stationQuantities(id)).toEqual([
+    { quantity: 'flow', unit: 'm3/s', valueCount: 2, firstValueDay: 1, lastValueDay: 3 },
   ]);
 });
 
@@ -139,11 +139,8 @@ test('stage derives from stage, in metres, and leaves flow alone', async () => {
   const derived = { ...recipe(['A', -1]), quantity: 'stage' as const };
   await addStation(regionId, { code: 'S', derived });
   // 10 ft = 3.048 m
-  expect(await listQuantities({ regionId })).toMatchObject([
-    { code: 'A', quantity: 'flow', valueCount: 1 },
-    { code: 'A', quantity: 'stage', unit: 'ft', shownUnit: 'm' },
-    { code: 'S', quantity: 'stage', unit: 'm', derived: true },
-  ]);
-  const { id: stationId } = (await getStation(regionId, 'A'))!;
-  expect(await listQuantities({ stationId })).toHaveLength(2);
+  const { id: stationId } = (await getStation(regionId, 'S'))!;
+  expect(stationQuantities(stationId)).toMatchObject([{ quantity: 'stage', unit: 'm', valueCount: 1 }]);
+  readSeries([stationId], (_id, { values }) => expect(values[0]).toBeCloseTo(-3.048, 12), { quantity: 'stage' });
+  expect(Object.keys(await seenRecords(regionId))).toEqual(['A']);
 });
