@@ -9,6 +9,7 @@ import { IntakeError } from '../types.ts';
 import type { ValueReader } from '../value-reader.ts';
 import { parseYearMonth, yearOfHeading } from '../year-month.ts';
 import type { Fields } from './fields.ts';
+import { FixedWidthLines } from './fixed-width.ts';
 import { type DaySink, fieldIs, NO_ROW_OF_DATA, type RowReader, textOf } from './row-reader.ts';
 import { UnitColumn } from './unit-column.ts';
 import { WhitespaceLines } from './whitespace.ts';
@@ -25,6 +26,7 @@ export class CalendarRows implements RowReader {
   private readonly calendar: CalendarPlan;
   private readonly where: Uint8Array;
   private readonly unit: UnitColumn;
+  private readonly fixed: FixedWidthLines | null;
   private year: number | null;
   private station: number;
   private statedStation: string | undefined;
@@ -38,6 +40,7 @@ export class CalendarRows implements RowReader {
     this.calendar = plan.calendar;
     this.where = new TextEncoder().encode(plan.mapping.where?.equals ?? '');
     this.unit = new UnitColumn(plan);
+    this.fixed = plan.splitter instanceof FixedWidthLines ? plan.splitter : null;
     this.year = plan.calendar.firstYear;
     this.station = onlyStation;
     const stated = plan.facts?.length === 1 ? plan.facts[0] : undefined;
@@ -127,8 +130,15 @@ export class CalendarRows implements RowReader {
     const bad: string[] = [];
     for (const cell of calendar.cells) {
       const { value } = cell;
-      if (value >= fields.count) continue;
+      // At fixed characters, cells behind the end of a line are blank like others.
+      if (value >= fields.count && !this.fixed) continue;
       const { day, date } = this.dayOf(cell, at);
+      if (this.fixed?.cuts(fields, value)) {
+        bad.push(
+          `“${decodeText(bytes, fields.start[value], fields.end[value])}” on ${date} is cut short by the end of the line`,
+        );
+        continue;
+      }
       if (!parts.values.read(bytes, fields.start[value], fields.end[value])) {
         bad.push(`“${textOf(bytes, fields, value)}” on ${date} is not a flow`);
         continue;
@@ -138,7 +148,7 @@ export class CalendarRows implements RowReader {
           bad.push(`“${textOf(bytes, fields, value)}” stands on ${date}, which is no day of the calendar`);
         continue;
       }
-      const hasFlag = cell.flag !== null && cell.flag < fields.count;
+      const hasFlag = cell.flag !== null && (this.fixed !== null || cell.flag < fields.count);
       const [start, end] = hasFlag ? [fields.start[cell.flag as number], fields.end[cell.flag as number]] : [0, 0];
       const code = parts.codes.code(bytes, start, end, parts.values.valueText, line);
       parts.sink.take(at.station, day, parts.values.value, code, line);

@@ -32,4 +32,10 @@ export class FixedWidthLines implements LineSplitter {
     fields.count = whole ? this.slices.length : this.slices.length - 1;
     return lineEnd + 1;
   }
+
+  /** True when the line ends within a field that holds something: numbers are padded on their left, so it was cut. */
+  cuts(fields: Fields, field: number): boolean {
+    const length = fields.lineEnd - fields.lineStart;
+    return fields.end[field] > fields.start[field] && length < this.slices[field][1];
+  }
 }
