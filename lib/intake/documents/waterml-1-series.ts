@@ -38,7 +38,7 @@ export function headOf(facts: Waterml1Facts): SeriesHead {
     facts: { ...(siteName === '' ? {} : { name: siteName }), ...(placed ? { latitude, longitude } : {}) },
     property: unescaped(facts.description || facts.variableName),
     propertyCode: facts.variableCode,
-    ...{ statistic: statisticNamed(statistic), statisticText: statistic },
+    ...{ statistic: statisticNamed(statistic), statisticText: facts.statisticName || statistic },
     unitText: unescaped(facts.unit) || unitInName(unescaped(facts.variableName)),
     meaning: 'instant',
     stepDays: /^\d{5}$/.test(statisticCode) && statisticCode !== INSTANT ? 1 : null,
