@@ -137,6 +137,12 @@ export function StationScreen({ region, detail, background, rows, query }: Props
               summary={`Days with a value in each year of the record of ${station.name}.`}
             />
             <ChangeLegend changes={changes} />
+            {levels.length > 0 && (
+              <p className={styles.caption}>
+                Named flows are screening values: permits and water rights need the authority’s own method, and local
+                codes come first.
+              </p>
+            )}
             <MinimaTable points={points} units={basis.units} days={basis.days} />
           </>
         )}
