@@ -29,7 +29,7 @@ export function refuseUnlessText(head: Uint8Array, file: string): void {
   }
   const known = SIGNATURES.find(([, bytes]) => bytes.every((byte, at) => head[at] === byte));
   if (known) throw new IntakeError({ file, message: `this is ${known[0]}, not a text file`, remedy: known[2] });
-  const zeros = head.reduce((count, byte) => count + (byte === 0 ? 1 : 0), 0);
+  const { zeros, strange } = oddBytes(head);
   const marked = (head[0] === 0xff && head[1] === 0xfe) || (head[0] === 0xfe && head[1] === 0xff);
   if (marked || zeros > head.length / 4) {
     throw new IntakeError({
@@ -40,7 +40,6 @@ export function refuseUnlessText(head: Uint8Array, file: string): void {
       remedy: 'Save it again as UTF-8 (in a spreadsheet: “CSV UTF-8”)',
     });
   }
-  const strange = head.findIndex((byte) => byte < 9 || (byte > 13 && byte < 32 && byte !== 26 && byte !== 27));
   if (strange >= 0) {
     throw new IntakeError({
       file,
@@ -50,6 +49,20 @@ export function refuseUnlessText(head: Uint8Array, file: string): void {
       remedy: 'Export the data as a text file such as CSV',
     });
   }
+}
+
+/** How many bytes are NUL, and the first control byte that no text has; −1 where there is none. A loop: this is done over a
+ *  megabyte at every look at a file. */
+function oddBytes(head: Uint8Array): { zeros: number; strange: number } {
+  let zeros = 0;
+  let strange = -1;
+  for (let at = 0; at < head.length; at++) {
+    const byte = head[at];
+    if (byte >= 32 || (byte >= 9 && byte <= 13) || byte === 26 || byte === 27) continue;
+    if (byte === 0) zeros++;
+    if (strange < 0) strange = at;
+  }
+  return { zeros, strange };
 }
 
 /** A file that is marked as UTF-8 must be it throughout: else its names would come out garbled.
