@@ -29,6 +29,13 @@ export interface StationYears {
   river: string;
   areaKm2: number | null;
   influence: Influence;
+  /** quantities of which the station has a record */
+  quantities: Quantity[];
+  /** ISO dates of the first and the last day with a flow; null without one */
+  first: string | null;
+  last: string | null;
+  /** days with a flow */
+  valueCount: number;
   /** low-flow year of each column's first entry; null without a record */
   firstYear: number | null;
   /** days with a value, whatever its flag */

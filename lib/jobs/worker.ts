@@ -1,6 +1,7 @@
 /** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
  *  worker starts quickly. */
 export { checkRecords } from './tasks/check-records.ts';
+export { commonPeriods } from './tasks/common-periods.ts';
 export { coverage } from './tasks/coverage.ts';
 export { curves } from './tasks/curves.ts';
 export { lookAtFiles } from './tasks/look-at-files.ts';
@@ -8,3 +9,4 @@ export { minima } from './tasks/minima.ts';
 export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';
 export { takeFiles } from './tasks/take-files.ts';
+export { yearDays } from './tasks/year-days.ts';

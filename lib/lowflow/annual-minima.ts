@@ -1,11 +1,12 @@
 import type { ExcludableFlag } from '../basis.ts';
-import { firstDayOfLowFlowYear, lowFlowYearOfDay } from '../calendar/low-flow-year.ts';
+import { firstDayOfLowFlowYear } from '../calendar/low-flow-year.ts';
 import { type Season, seasonSpan } from '../calendar/season.ts';
 import { type DailySeries, FLAG } from '../series/daily-series.ts';
 import { checkDays } from '../series/moving-average.ts';
 import { flagBitsPresent, usableFlow } from '../series/usable-flow.ts';
 import type { AnnualMinima } from './annual-minima-types.ts';
 import { unusableReason } from './usable-year.ts';
+import { valuedYears } from './valued-years.ts';
 import { yearMinimum } from './year-minimum.ts';
 
 /** The keys of the basis that annual minima read, with `auto` resolved. */
@@ -84,17 +85,6 @@ export function annualMinima(
     result.meanFlow[i] = seen.days === 0 ? Number.NaN : seen.sum / seen.days;
   }
   return result;
-}
-
-/** Low-flow years of the first and last day with a value, whatever its flag; null when there is none. */
-function valuedYears(series: DailySeries, yearStart: number): { first: number; last: number } | null {
-  const { values, firstDay } = series;
-  let first = 0;
-  while (first < values.length && Number.isNaN(values[first])) first += 1;
-  if (first === values.length) return null;
-  let last = values.length - 1;
-  while (Number.isNaN(values[last])) last -= 1;
-  return { first: lowFlowYearOfDay(firstDay + first, yearStart), last: lowFlowYearOfDay(firstDay + last, yearStart) };
 }
 
 /** Days with a value, their sum and the zeros among them, over the days from..to−1 of a record. */

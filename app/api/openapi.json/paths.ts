@@ -6,9 +6,11 @@ import { stationCurveParameters } from '../regions/[region]/stations/[code]/curv
 import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
+import { ARCHIVE_PATHS } from './paths-archive';
 import { CHECK_PATHS } from './paths-checks';
 import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
+import { RECORD_PATHS } from './paths-records';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
 
@@ -90,6 +92,7 @@ export const PATHS = {
   ),
   ...CHECK_PATHS,
   ...DAY_PATHS,
+  ...RECORD_PATHS,
   ...STATION_PATHS,
   '/api/regions/{region}/layers': {
     get: { summary: 'Map layers', parameters: [REGION], responses: answers('the layers', json(listOf('Layer'))) },
@@ -130,6 +133,7 @@ export const PATHS = {
   },
   ...KEPT_PATHS,
   ...UPLOAD_PATHS,
+  ...ARCHIVE_PATHS,
   '/api/jobs/{job}': {
     parameters: [JOB],
     get: { summary: 'A job', responses: answers('where it stands', json(reference('Job'))) },
