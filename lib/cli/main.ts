@@ -3,6 +3,7 @@ import { migrate } from '../store/migrate.ts';
 import type { Command, Host } from './command.ts';
 import * as backup from './commands/backup.ts';
 import * as curves from './commands/curves.ts';
+import * as exportCommand from './commands/export.ts';
 import * as importCommand from './commands/import.ts';
 import * as minima from './commands/minima.ts';
 import * as rank from './commands/rank.ts';
@@ -15,6 +16,7 @@ const COMMANDS: Record<string, Command> = {
   rank,
   minima,
   curves,
+  export: exportCommand,
   backup,
   restore,
   serve,

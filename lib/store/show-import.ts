@@ -20,14 +20,15 @@ export function showImport(connection: Connection, claim: Claim, plan: Plan, wor
     const about = { regionId, regionMade: newRegion !== null };
     writeArchivedRegion(connection, about, JSON.parse(archived[0]) as ArchivedRegion);
   }
+  // Before what is derived: records rest on the parts of applied imports.
+  const end = change(connection, "UPDATE Import SET state = 'applied' WHERE id = ?");
+  for (const id of imports.values()) end.run([id]);
   const touched = [...plan.stations.values()].filter(({ changed, madeBy }) => changed || madeBy !== null);
   const changed = [...work.heads.map(({ stationId }) => stationId), ...touched.map(({ id }) => id)];
   rebuildRegion(connection, regionId, new Set(changed));
   const flows = rows(connection, "SELECT id FROM staging.file WHERE kind = 'flows'").all([]).flat() as number[];
   const revised = change(connection, 'UPDATE Import SET revisions = ? WHERE id = ?');
   for (const file of flows) revised.run([JSON.stringify(work.counterOf(file).revisions()), imports.get(file)!]);
-  const end = change(connection, "UPDATE Import SET state = 'applied' WHERE id = ?");
-  for (const id of imports.values()) end.run([id]);
 }
 
 function insertRegion(connection: Connection, { regionId, slug, newRegion }: Claim): void {

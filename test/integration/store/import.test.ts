@@ -52,6 +52,14 @@ test('readSeries() turns what was written into m³/s, and readParts() gives it a
   expect(texts).toEqual(['P', null, 'A:e']);
 });
 
+test('two files of one import make one record of a station that is new', async () => {
+  const { regionId } = await importFiles([
+    [{ code: 'A', values: [1, NaN_, 3] }],
+    [{ code: 'A', firstDay: 1, values: [2, 3, 4, 5] }],
+  ]);
+  expect((await seenRecords(regionId)).A).toMatchObject({ firstDay: 0, values: [1, 2, 3, 4, 5] });
+});
+
 test('equal values of two imports merge, and the second fills what the first lacks', async () => {
   const { regionId } = await importFiles([[{ code: 'A', values: [1, NaN_, 3] }]]);
   await importFiles([[{ code: 'A', firstDay: 1, values: [2, 3, 4, 5] }]]);
