@@ -147,6 +147,6 @@ test('findings come as a file', async () => {
   let text = '';
   for await (const chunk of await (await download).createReadStream()) text += chunk;
   const [header, ...lines] = text.trim().split('\r\n');
-  expect(header.split(',').slice(0, 2)).toEqual(['station_code', 'kind']);
+  expect(header.split(',').slice(0, 2)).toEqual(['station_code', 'quantity']);
   expect(lines.length).toBe((await findings()).length);
 });

@@ -3,7 +3,7 @@ import { BasisSentence } from '@/app/components/basis-sentence';
 import { Header } from '@/app/components/header';
 import { ErrorNote } from '@/app/components/notes';
 import type { Basis } from '@/lib/basis';
-import { rankingOf } from '@/lib/jobs/ranking';
+import { recordsOf } from '@/lib/jobs/records';
 import { NoRecords } from '../no-records';
 import { type PageQuery, pageRequest } from '../page-request';
 import type { OwnTerms } from './_periods/use-basis-keys';
@@ -20,8 +20,8 @@ interface Props {
  *  compared. */
 export default async function RecordsPage({ params, searchParams }: Props) {
   const { region, basis, basisProblem } = await pageRequest((await params).region, await searchParams);
-  const { ranking } = await rankingOf(region, basis);
-  if (ranking.rows.length === 0) {
+  const { records } = await recordsOf(region, basis);
+  if (records.stations.length === 0) {
     return (
       <>
         <Header region={region} page="records" />
@@ -36,14 +36,14 @@ export default async function RecordsPage({ params, searchParams }: Props) {
       <Header region={region} page="records" />
       <main id="main">
         <h1 className="visually-hidden">Records of {region.name}</h1>
-        <BasisSentence resolved={ranking.basis} base={region.basis}>
+        <BasisSentence resolved={records.basis} base={region.basis}>
           {basisProblem && <ErrorNote title="The region’s own terms are shown">{basisProblem}</ErrorNote>}
         </BasisSentence>
         <RecordsScreen
           slug={region.slug}
-          basis={ranking.basis}
+          basis={records.basis}
           own={ownTerms(region.basis)}
-          stations={ranking.rows.map(({ code, name }) => ({ code, name }))}
+          stations={records.stations.map(({ code, name }) => ({ code, name }))}
         />
       </main>
     </>

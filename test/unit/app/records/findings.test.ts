@@ -39,11 +39,12 @@ test('countFindings counts by state', () => {
   expect(countFindings(findings)).toEqual({ open: 3, rejected: 1, accepted: 0, noted: 0 });
 });
 
-test('surroundings: at least 20 days each side, as many as the stretch is long, at most 400, of at most ten years', () => {
-  expect(surroundings(1000, 1000)).toEqual([980, 1020]);
-  expect(surroundings(1000, 1049)).toEqual([950, 1099]);
-  expect(surroundings(1000, 1999)).toEqual([600, 2399]);
-  expect(surroundings(1000, 30_000)).toEqual([600, 1000 + 3652 + 400]);
+test('surroundings: at least 20 days each side, as many as the stretch is long, at most 400, of at most ten years; a step ten years', () => {
+  expect(surroundings('jump', 1000, 1000)).toEqual([980, 1020]);
+  expect(surroundings('jump', 1000, 1049)).toEqual([950, 1099]);
+  expect(surroundings('jump', 1000, 1999)).toEqual([600, 2399]);
+  expect(surroundings('jump', 1000, 30_000)).toEqual([600, 1000 + 3652 + 400]);
+  expect(surroundings('step', 10_000, 10_000)).toEqual([10_000 - 3652, 10_000 + 3652]);
 });
 
 test.each([

@@ -2,6 +2,7 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
 import { isoDate, parseIsoDate } from '@/lib/calendar/day';
+import type { FindingRow } from '@/lib/jobs/records-types';
 import { type ChartPalette, readChartPalette } from '../_chart/chart-palette.ts';
 import { type DayColumns, type DaysAnswer, dayColumns } from '../_year/days-answer.ts';
 import { type FlowAxis, flowAxis } from '../_year/flow-axis.ts';
@@ -11,10 +12,7 @@ import { surroundings } from './group-findings.ts';
 
 interface Props {
   slug: string;
-  code: string;
-  /** ISO dates of the finding's stretch */
-  first: string;
-  last: string;
+  finding: FindingRow;
   version: number;
 }
 
@@ -22,9 +20,10 @@ const WIDTH = 260;
 const HEIGHT = 56;
 
 /** The stretch with the days around it, drawn once it comes into sight. */
-export function FindingSketch({ slug, code, first, last, version }: Props) {
+export function FindingSketch({ slug, finding, version }: Props) {
   const [frame, seen] = useSeen();
-  const [from, to] = surroundings(parseIsoDate(first), parseIsoDate(last));
+  const { code, kind, first, last } = finding;
+  const [from, to] = surroundings(kind, parseIsoDate(first), parseIsoDate(last));
   const address = `/api/regions/${encodeURIComponent(slug)}/stations/${encodeURIComponent(code)}/days?first=${isoDate(from)}&last=${isoDate(to)}`;
   const { value, problem } = useAnswer<DaysAnswer>(seen ? address : null, version);
   const columns = useMemo(() => dayColumns(value, from, to), [value, from, to]);

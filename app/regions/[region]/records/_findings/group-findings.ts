@@ -48,10 +48,14 @@ export function countFindings(findings: readonly FindingRow[]): Record<FindingRo
   return counts;
 }
 
+/** Days on each side of a step in the annual mean: ten years, or it could not be seen. */
+const STEP_ROOM = 3652;
+
 /** Days shown around a finding, so that it is seen against its neighbourhood: as many as it is long on each side, at
  *  least 20 and at most 400. A stretch longer than ten years is shown from its beginning.
  *  @returns day numbers, both included */
-export function surroundings(first: number, last: number): [number, number] {
+export function surroundings(kind: FindingKind, first: number, last: number): [number, number] {
+  if (kind === 'step') return [first - STEP_ROOM, last + STEP_ROOM];
   const end = Math.min(last, first + 3652);
   const room = Math.min(400, Math.max(20, end - first + 1));
   return [first - room, end + room];

@@ -67,13 +67,7 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
       <ul className={styles.findings}>
         {findings.slice(0, shown).map((finding) => (
           <li key={finding.id} className={styles.finding} data-state={finding.state}>
-            <FindingSketch
-              slug={slug}
-              code={station.code}
-              first={finding.first}
-              last={finding.last}
-              version={version}
-            />
+            <FindingSketch slug={slug} finding={finding} version={version} />
             <div className={styles.words}>
               <p>
                 <strong>{KIND_WORDS[finding.kind]}</strong>{' '}
@@ -90,7 +84,7 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
               <p className={styles.figures}>{figuresOf(finding, units)}</p>
             </div>
             <div className={styles.actions}>
-              {MARK_KINDS.map((kind) => (
+              {answersTo(finding).map((kind) => (
                 <button
                   key={kind}
                   type="button"
@@ -114,6 +108,9 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
     </section>
   );
 }
+
+/** A step in the mean speaks against no one day: there is nothing to reject at it. */
+const answersTo = ({ kind }: FindingRow) => MARK_KINDS.filter((answer) => kind !== 'step' || answer !== 'reject');
 
 /** All marks on a station's record, asked for when they are looked at. */
 function StationMarks({

@@ -1,6 +1,7 @@
 'use client';
 import { type KeyboardEvent, type PointerEvent, useCallback, useMemo, useRef, useState } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
+import type { MarkedChange } from '@/app/components/change-marks/marked-changes';
 import { useWidth } from '@/app/components/use-width';
 import { isoDate } from '@/lib/calendar/day';
 import { readChartPalette } from '../_chart/chart-palette.ts';
@@ -16,6 +17,8 @@ interface Props {
   label: string;
   columns: DayColumns;
   lanes: readonly Lane[];
+  /** dated changes of the station, drawn where they fall into the year */
+  changes: readonly MarkedChange[];
   season: DaySpan | null;
   kind: FlowAxisKind;
   flowText(value: number): string;
@@ -27,7 +30,7 @@ const FOCUSABLE = { tabIndex: 0 };
 
 /** A year's daily flows with what is said of them in lanes below. The pointer or the arrow keys read a day; a drag, or
  *  Shift with the arrow keys, chooses a stretch. */
-export function DayFigure({ label, columns, lanes, season, kind, flowText, selection, onSelect }: Props) {
+export function DayFigure({ label, columns, lanes, changes, season, kind, flowText, selection, onSelect }: Props) {
   const [frame, width] = useWidth<HTMLDivElement>(960);
   const [cursor, setCursor] = useState<number | null>(null);
   const dragged = useRef<number | null>(null);
@@ -38,8 +41,8 @@ export function DayFigure({ label, columns, lanes, season, kind, flowText, selec
   const axis = useMemo(() => flowAxis(values, kind, layout.floor - layout.top), [values, kind, layout]);
   const draw = useCallback(
     (context: CanvasRenderingContext2D) =>
-      drawDays(context, { layout, columns, axis, lanes, season, cursor, selection }, readChartPalette()),
-    [layout, columns, axis, lanes, season, cursor, selection],
+      drawDays(context, { layout, columns, axis, lanes, changes, season, cursor, selection }, readChartPalette()),
+    [layout, columns, axis, lanes, changes, season, cursor, selection],
   );
   const { canvas } = useCanvas(width, layout.height, draw);
 

@@ -1,3 +1,5 @@
+import { drawChangeMarks } from '@/app/components/change-marks/draw-change-marks';
+import { type MarkedChange, placeChanges } from '@/app/components/change-marks/marked-changes';
 import { significant } from '@/app/components/format';
 import { dateOfDay } from '@/lib/calendar/day';
 import { CHART_FONT, type ChartPalette } from '../_chart/chart-palette.ts';
@@ -21,6 +23,7 @@ export interface DayPicture {
   lanes: readonly Lane[];
   /** days outside the basis's season are shaded; null: all year */
   season: readonly [number, number] | null;
+  changes: readonly MarkedChange[];
   cursor: number | null;
   selection: readonly [number, number] | null;
 }
@@ -31,6 +34,7 @@ export function drawDays(context: CanvasRenderingContext2D, picture: DayPicture,
   drawAxes(context, picture, palette);
   drawLine(context, picture, palette);
   drawPoints(context, picture, palette);
+  drawChanges(context, picture, palette);
   for (const [index, lane] of picture.lanes.entries()) drawLane(context, picture, palette, lane, index);
   drawCursor(context, picture, palette);
 }
@@ -147,6 +151,12 @@ function drawPoints(context: CanvasRenderingContext2D, { layout, columns, axis }
       context.fill();
     }
   }
+}
+
+function drawChanges(context: CanvasRenderingContext2D, { layout, changes }: DayPicture, palette: ChartPalette) {
+  const placed = placeChanges(changes, (day) => dayX(layout, day), [layout.left, layout.right]);
+  const { ink, paper } = palette;
+  drawChangeMarks(context, placed, { top: layout.top, bottom: layout.floor, ink, paper });
 }
 
 function drawLane(

@@ -3,6 +3,7 @@ import Link from 'next/link';
 import { useSearchParams } from 'next/navigation';
 import { useQueryState } from 'nuqs';
 import { useEffect, useMemo, useRef, useState } from 'react';
+import { markedChanges } from '@/app/components/change-marks/marked-changes';
 import { flow, flowIn } from '@/app/components/format';
 import { stationHref } from '@/app/components/links';
 import { ErrorNote, Loading } from '@/app/components/notes';
@@ -13,6 +14,7 @@ import { isoDate, parseIsoDate } from '@/lib/calendar/day';
 import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import { seasonSpan } from '@/lib/calendar/season';
 import type { FindingRow, MarkView, StationYears } from '@/lib/jobs/records-types';
+import type { StationChange } from '@/lib/series/station-history';
 import { cellWords, type YearCell } from '../_chart/year-cell.ts';
 import { figuresOf, KIND_WORDS, STATE_WORDS } from '../_findings/finding-words.ts';
 import { MarkForm } from '../_marks/mark-form.tsx';
@@ -59,6 +61,9 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
     version,
   );
   const marks = useAnswer<{ marks: MarkView[] }>(marksAddress(slug, station.code), version);
+  const facts = useAnswer<{ changes: StationChange[] }>(`${region}/stations/${encodeURIComponent(station.code)}/facts`);
+  const changes = useMemo(() => markedChanges(facts.value?.changes ?? []), [facts.value]);
+  const changed = changes.filter(({ day }) => day >= first && day <= last);
   const label = lowFlowYearLabel(year, basis.yearStart);
 
   const columns = useMemo(
@@ -142,6 +147,7 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
           label={`Daily flows of ${station.name} in ${label}. Arrow keys move from day to day, with Shift they choose a stretch. The table below holds the same.`}
           columns={columns}
           lanes={lanes}
+          changes={changes}
           season={season && [season.first, season.last]}
           kind={kind}
           flowText={flowText}
@@ -150,6 +156,16 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
         />
       ) : (
         <Loading>Reading the days…</Loading>
+      )}
+      {changed.length > 0 && (
+        <ul className={styles.changes} aria-label="Changes at the station in this year">
+          {changed.map(({ letter, date, kind, note }) => (
+            <li key={letter}>
+              <strong>{letter}</strong> {date}: {kind}
+              {note && ` – ${note}`}
+            </li>
+          ))}
+        </ul>
       )}
       <div className={styles.below}>
         <MarkForm
