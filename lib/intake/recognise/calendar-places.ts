@@ -28,7 +28,8 @@ export function calendarPlaces(
   const { layout, date, value, flag } = mapping;
   const count = cellCount(layout);
   const number = (at: number) => (layout === 'month-rows' ? at + 1 : ((firstMonth - 1 + at) % 12) + 1);
-  if (value === null) throw mappingProblem(file, 'the mapping does not say where the first day or month stands');
+  // What is not known is asked for; until then there are no days.
+  if (value === null || date.columns.length === 0) return { cells: [], year: -1, row: -1, slices: null };
   if (date.columns.length > 2) throw mappingProblem(file, 'a calendar layout has no column of days for its date');
   const isFixed = 'slice' in value;
   const position = (place: number | string | [number, number]): number => {

@@ -122,7 +122,7 @@ function yearAndMonth(
 
 function isMonthRow(fields: readonly string[], { year, row }: RowPlaces): boolean {
   const text = fields[row] ?? '';
-  if (year >= 0) return isYear(fields[year] ?? '') && isMonth(text);
+  if (year >= 0) return /^\d{2}(?:\d{2})?$/.test(fields[year] ?? '') && isMonth(text);
   return parseYearMonth(text) !== null || isMonth(text);
 }
 

@@ -1,3 +1,4 @@
+import { unitNamedIn } from '../units.ts';
 import { isDay, isMonth, isYear, looksLikeDate } from './column-facts.ts';
 import { roleOfHeading } from './heading-roles.ts';
 import type { SampleRow } from './sample.ts';
@@ -13,6 +14,17 @@ export interface TableStart {
 /** `5s 15s 20d 14n 10s` */
 export function isWidthRow(fields: readonly string[]): boolean {
   return fields.length > 1 && fields.every((field) => /^\d+[sdn]$/.test(field));
+}
+
+/** A row under the header that says the columns' units: `;m³/s;cm` */
+function isUnitRow(fields: readonly string[]): boolean {
+  const filled = fields.filter((field) => field !== '');
+  return (
+    fields.length > 1 &&
+    !isHeader(fields) &&
+    filled.some((field) => unitNamedIn(field) !== null) &&
+    filled.every((field) => field.length <= 24 && !/^[\d.,-]+$/.test(field) && !looksLikeDate(field))
+  );
 }
 
 function hasDate(fields: readonly string[]): boolean {
@@ -40,7 +52,8 @@ function firstDated(rows: readonly SampleRow[], least: number): number {
   for (const [at, row] of rows.entries()) {
     if (!dated(row)) continue;
     if (first < 0) first = at;
-    const above = rows[at - 1] !== undefined && isWidthRow(rows[at - 1].fields) ? rows[at - 2] : rows[at - 1];
+    const apart = isWidthRow(rows[at - 1]?.fields ?? []) || isUnitRow(rows[at - 1]?.fields ?? []);
+    const above = rows[apart ? at - 2 : at - 1];
     if (above !== undefined && isHeaderRow(above.fields)) return at;
     const behind = rows.slice(at + 1, at + 1 + ROWS_ASKED);
     const headed = behind.some(
@@ -66,9 +79,13 @@ export function findTableStart(rows: readonly SampleRow[], count: number): Table
   const above = dated < 0 ? rows : rows.slice(0, dated);
   const headers = above.flatMap(({ fields }, at) => (isHeaderRow(fields) ? [at] : []));
   // Of several, the one right above the data: blocks of station facts may have keys such as "Time zone".
-  const below = (at: number) => (isWidthRow(rows[at + 1]?.fields ?? []) ? at + 2 : at + 1);
+  const below = (at: number) =>
+    at + (isWidthRow(rows[at + 1]?.fields ?? []) || isUnitRow(rows[at + 1]?.fields ?? []) ? 2 : 1);
   const named = headers.findLast((at) => below(at) === dated) ?? headers[0] ?? -1;
-  if (named >= 0) return { header: rows[named].fields, widthRow: below(named) > named + 1, firstRow: below(named) };
+  if (named >= 0) {
+    const widthRow = isWidthRow(rows[named + 1]?.fields ?? []);
+    return { header: rows[named].fields, widthRow, firstRow: below(named) };
+  }
   if (dated < 0) return { header: null, widthRow: false, firstRow: rows.length };
   const last = above.at(-1)?.fields ?? null;
   const isHeading =

@@ -2,7 +2,6 @@ import { longLineError } from '../file-blocks.ts';
 import { columnPosition } from '../mapping.ts';
 import type { LineSplitter } from '../rows/fields.ts';
 import { type InspectOptions, IntakeError, type Layout, type Mapping } from '../types.ts';
-import { unitNamedIn } from '../units.ts';
 import { agencyColumns } from './agency-columns.ts';
 import { assignColumns, type ColumnRoles, type WideColumn } from './assign-columns.ts';
 import { columnFacts, hasShortYear, looksLikeDate } from './column-facts.ts';
@@ -15,6 +14,7 @@ import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount }
 import { withoutSign } from './stated-facts.ts';
 import type { TablePlan } from './table-plan.ts';
 import { mixedUnits } from './unit-column.ts';
+import { unreadColumns, wideColumns } from './wide-columns.ts';
 
 export interface PlanContext {
   options: InspectOptions;
@@ -186,39 +186,12 @@ function layoutOf(roles: ColumnRoles, start: TableStart, delimiter: string | nul
   return delimiter === null ? 'whitespace' : 'long';
 }
 
-/** The columns of a wide table; with a mapping's layout "wide", every column that is not the date's. */
-function wideColumns(
-  roles: ColumnRoles,
-  header: string[] | null,
-  mapping: Mapping,
-  fieldCount: number,
-  position: (column: number | string | [number, number]) => number,
-): WideColumn[] {
-  const dates = mapping.date.columns.map(position);
-  const all = Array.from({ length: fieldCount }, (_, at) => at).filter((at) => !dates.includes(at));
-  const columns =
-    roles.wide ??
-    all.map((value) => ({ name: header?.[value] ?? '', value, flag: null })).filter(({ name }) => name !== '');
-  const sharedUnit = columns.length > 0 && columns.every(({ name }) => unitNamedIn(name) !== null);
-  return columns.map((column) => ({
-    ...column,
-    name: (sharedUnit ? column.name.replace(/\s*[([][^)\]]*[)\]]\s*$/, '') : column.name).trim(),
-  }));
-}
-
 /** The fewest fields that a fair share of rows have: some files leave an empty flag off. The last row may be cut. */
 function leastFields(data: readonly SampleRow[], fieldCount: number): number {
   const rows = data.slice(0, -1);
   const shares = new Map<number, number>();
   for (const { fields } of rows) shares.set(fields.length, (shares.get(fields.length) ?? 0) + 1 / rows.length);
   return Math.min(fieldCount, ...[...shares].filter(([, share]) => share >= 0.05).map(([count]) => count));
-}
-
-/** Columns of a wide table that are taken for no station must be named: they are left out for every day. */
-function unreadColumns(header: readonly string[], wide: readonly WideColumn[], dates: readonly number[]): string[] {
-  const used = new Set([...dates, ...wide.flatMap(({ value, flag }) => [value, flag ?? value])]);
-  const unread = header.filter((name, at) => name !== '' && !used.has(at)).map((name) => `“${name}”`);
-  return unread.length === 0 ? [] : [`Columns taken for no station, and not read: ${unread.join(', ')}.`];
 }
 
 function symbolColumn(header: readonly string[] | null, flag: number): boolean {

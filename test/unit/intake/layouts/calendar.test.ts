@@ -302,6 +302,51 @@ describe('a row a day', () => {
   });
 });
 
+test('readFlows reads rows of months, October first, under a line that names a hydrological year', async () => {
+  const order = [10, 11, 12, 1, 2, 3, 4, 5, 6, 7, 8, 9];
+  const rows = order.map((number) => [String(number), ...month(number >= 10 ? 2000 : 2001, number)]);
+  const table = csv([['month', ...DAYS.map(String)], ...rows]);
+  const { report, days } = await read(`Water year 2001\n${table}`, { unit: 'm3/s' });
+  expect(report.mapping.date.yearBegins).toEqual({ month: 10, named: 'last' });
+  expect(Object.keys(days)).toHaveLength(365);
+  expect(Object.keys(days)[0]).toBe('2000-10-01');
+  const error = await refusal(`2001\n${table}`, { unit: 'm3/s' });
+  expect(error.problem.message).toMatch(/the years do not begin in January/);
+});
+
+test('readFlows asks for the century of two-digit years, and reads them with the first year given', async () => {
+  const text = csv([
+    ['year', 'month', ...DAYS.map(String)],
+    ['98', '1', ...month(1998, 1)],
+  ]);
+  expect((await refusal(text, { unit: 'm3/s' })).problem).toMatchObject({ needs: 'century', value: '98' });
+  const { days } = await read(text, { unit: 'm3/s', mapping: { firstYear: 1930 } });
+  expect(Object.keys(days)[0]).toBe('1998-01-01');
+});
+
+test('readFlows rejects the cell in which a line of fixed characters ends early', async () => {
+  const line = (cells: string[]) => cells.map((cell, at) => cell.padStart(at === 0 ? 4 : 8)).join('');
+  const lines = ['Year 2001', line(['Day', ...MONTHS]), ...yearOfDays(2001).map(line)];
+  const { report, days } = await read(lines.join('\n').slice(0, -2), { unit: 'm3/s' });
+  expect(report.rejected[0]).toMatchObject({ row: 33, reason: expect.stringMatching(/on 2001-12-31 is cut short/) });
+  expect(Object.keys(days)).toHaveLength(364);
+});
+
+test('a mapping may call any table a calendar: what it leaves open is asked', async () => {
+  const text = csv([
+    ['a', 'b', ...DAYS.map((day) => `x${day}y`)],
+    ['2001', '1', ...month(2001, 1)],
+  ]);
+  const seen = await inspect(text, { unit: 'm3/s', mapping: { layout: 'month-rows' } });
+  expect(seen.mapping?.layout).toBe('month-rows');
+  expect(seen.problems.map(({ problem }) => problem.needs)).toEqual(['mapping']);
+  const date: Mapping['date'] = { columns: [0, 1], order: 'ymd' };
+  const value = await inspect(text, { unit: 'm3/s', mapping: { layout: 'month-rows', date } });
+  expect(value.problems.map(({ message }) => message).join()).toMatch(/no column is known to hold the first day/);
+  const { days } = await read(text, { unit: 'm3/s', mapping: { layout: 'month-rows', date, value: { column: 2 } } });
+  expect(days['2001-01-31']).toEqual([1.31, '']);
+});
+
 test('inspectFile of a calendar layout says how it is read, and its mapping reads it', async () => {
   const text = `Year 2001\n${csv([['Day', ...MONTHS], ...yearOfDays(2001)])}`;
   const seen = await inspect(text, { unit: 'm3/s' });

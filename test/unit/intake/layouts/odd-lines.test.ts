@@ -11,6 +11,13 @@ describe('lines between and behind the rows', () => {
     expect(report.warnings).toContain('The header stands again 2 times between the rows; those lines were skipped.');
   });
 
+  test('readFlows takes a row of units under the header for the unit', async () => {
+    const { report } = await read('date;flow;stage\n;m³/s;cm\n2001-01-01;1,5;30\n2001-01-02;2,5;40\n');
+    expect(report).toMatchObject({ unit: 'm3/s', rows: 2, accepted: 2, rejected: [] });
+    const wide = await read('date,A1,B2\n,L/s,L/s\n2001-01-01,1,2\n2001-01-02,3,4\n');
+    expect(wide.report).toMatchObject({ layout: 'wide', unit: 'L/s', rows: 2, accepted: 2 });
+  });
+
   test('readFlows refuses a header with other columns, which would move every value below it', async () => {
     const text = 'date,A,B\n2001-01-01,1,2\ndate,B,A\n2001-01-02,1,2\n';
     const error = await refusal(text, { unit: 'm3/s' });
