@@ -13,11 +13,12 @@ import { UsageError } from '../usage-error.ts';
 
 export const usage = `Usage: npx hungerstone import --region NAME [options] FLOWFILE...
 
-Takes in a station registry, map layers and daily flows: all of the files or none. Makes the region if it is new. The
-layout, dates, unit and stations of a flow file are recognised from what it holds.
+Takes in a station registry, map layers and daily flows: all of the files or none. Makes the region if it is new. Flow
+files are text tables, Excel workbooks or WaterML; their layout, dates, unit and stations are recognised from what they
+hold. Archives (.zip, .gz) are unpacked.
 
   --region NAME     the region
-  --stations FILE   a station registry, CSV; may be given several times
+  --stations FILE   a station registry: CSV, workbook or GeoJSON points; may be given several times
   --layer FILE      a map layer, GeoJSON; may be given several times
 ${CHOICE_USAGE}
   --json            the report as JSON

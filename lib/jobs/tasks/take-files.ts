@@ -141,7 +141,7 @@ async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Too
         onProgress: (rows, bytes) => meter.read(rows, bytes),
       });
       staged.push(one);
-      if (one.registry) registry = [...(registry ?? []), ...one.registry];
+      if (one.registry) registry = joined(registry ?? [], one.registry);
       meter.end(index, one.rows);
     } catch (error) {
       signal.throwIfAborted();
@@ -151,6 +151,11 @@ async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Too
   }
   return problems;
 }
+
+/** The stations of both lists, each once; where both have one, as the second names it. */
+const joined = (standing: readonly KnownStation[], given: readonly KnownStation[]): KnownStation[] => [
+  ...new Map([...standing, ...given].map((station) => [station.code, station])).values(),
+];
 
 function outcomeOf(staged: readonly StagedFile[], applied: Applied, dryRun: boolean): ImportOutcome {
   return {

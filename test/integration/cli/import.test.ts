@@ -137,6 +137,35 @@ test('unlike values are refused without a rule; --dry-run tells what a rule woul
   ]);
 });
 
+test('--match-codes and --daily-mean take what is refused without them', async () => {
+  const registry = files.write('codes.csv', 'code,name\n0042,Alder\nB2,Beck\n');
+  const rows = ['00:00', '06:00', '12:00', '18:00'].flatMap((time, i) =>
+    ['01', '02', '03'].map((day) => `42,2001-01-${day} ${time},${i}`),
+  );
+  const flows = files.write('hours.csv', `station,datetime,discharge_m3s\n${rows.sort().join('\n')}\n`);
+  const argv = [...REGION, '--stations', registry, flows];
+  expect((await runCommand('import', ...argv, '--daily-mean', '0.9')).stderr).toContain('--match-codes');
+  expect((await runCommand('import', ...argv, '--match-codes')).stderr).toContain('several values a day');
+  const taken = await runCommand('import', ...argv, '--match-codes', '--daily-mean', '0.9', '--json');
+  expect(taken.code).toBe(0);
+  // the mean of 0, 1, 2 and 3
+  expect(JSON.parse(taken.stdout).files[0].stations).toMatchObject([{ code: '0042', values: 3, min: 1.5, max: 1.5 }]);
+});
+
+test('--correct puts swapped coordinates right, which are refused without it', async () => {
+  const rows = ['A,Alder,8.5,97.2', 'B,Beck,8.6,97.3'];
+  const swapped = files.write('swapped.csv', `code,name,latitude,longitude\n${rows.join('\n')}\n`);
+  const turned = files.write('turned.csv', 'code,name,latitude,longitude\nA,Alder,97.2,8.5\nB,Beck,97.3,8.6\n');
+  expect((await runCommand('import', ...REGION, '--stations', turned)).stderr).toContain('--correct swap-coordinates');
+  const { code } = await runCommand('import', ...REGION, '--stations', turned, '--correct', 'swap-coordinates');
+  expect(code).toBe(0);
+  const { id } = (await getRegion('upper-wethe'))!;
+  const places = async () => (await listStations(id)).map(({ latitude, longitude }) => [latitude, longitude]);
+  const right = await places();
+  await runCommand('import', ...REGION, '--stations', swapped);
+  expect(await places()).toEqual(right);
+});
+
 test('--choices says for single files how they are read', async () => {
   const rows = longRows(['A1'])
     .slice(0, 400)
