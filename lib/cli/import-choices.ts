@@ -4,6 +4,7 @@ import { parseMapping } from '../intake/mapping.ts';
 import { CORRECTIONS, IntakeError, type Mapping } from '../intake/types.ts';
 import { fileChoices } from '../jobs/file-choices.ts';
 import type { FileChoices, ImportChoices } from '../jobs/import-types.ts';
+import { AREA_UNITS } from '../series/area-units.ts';
 import { UNITS } from '../series/quantities.ts';
 import { OVERLAP_RULES } from '../store/lay-parts.ts';
 import { readJson } from './analysis.ts';
@@ -18,6 +19,7 @@ export const CHOICE_OPTIONS = {
   'daily-mean': { type: 'string' },
   'match-codes': { type: 'boolean', default: false },
   correct: { type: 'string', multiple: true },
+  'area-unit': { type: 'string' },
   rule: { type: 'string' },
   revise: { type: 'boolean', default: false },
   'dry-run': { type: 'boolean', default: false },
@@ -32,6 +34,7 @@ export const CHOICE_USAGE = `  --unit UNIT       unit of the values: ${UNITS.joi
   --daily-mean SHARE  take the mean of several values a day, where at least this share of the day (0 to 1) is covered
   --match-codes     take codes that differ from the registry's by case or leading zeros for the registry's
   --correct WHAT    correct the registry's coordinates: ${CORRECTIONS.join(', ')}; may be given several times
+  --area-unit UNIT  unit of a registry's areas where it names none: ${AREA_UNITS.join(', ')}
   --rule RULE       what becomes of values unlike those that stand: ${OVERLAP_RULES.join(', ')};
                     without it such a file is refused, and says what it would change
   --revise          the same as --rule take-new
@@ -46,6 +49,7 @@ interface ChoiceValues {
   'daily-mean'?: string;
   'match-codes': boolean;
   correct?: string[];
+  'area-unit'?: string;
   rule?: string;
   revise: boolean;
   'dry-run': boolean;
@@ -65,6 +69,7 @@ export function choicesOf(values: ChoiceValues): ImportChoices {
     ...(values.unit !== undefined && { unit: oneOf('--unit', values.unit, UNITS) }),
     ...(values.station !== undefined && { station: values.station }),
     ...(values['match-codes'] && { matchCodes: true }),
+    ...(values['area-unit'] !== undefined && { areaUnit: oneOf('--area-unit', values['area-unit'], AREA_UNITS) }),
     ...(values.correct && { corrections: values.correct.map((what) => oneOf('--correct', what, CORRECTIONS)) }),
   };
   return {

@@ -15,7 +15,7 @@ import { type InspectOptions, IntakeError, type UnderstoodRow } from './types.ts
 const SHOWN_ROWS = 40;
 const SHOWN_VALUES = 160;
 /** Values that are looked at for what must be asked: enough to tell, and few enough to answer at every keystroke. */
-const MOST_VALUES = 20_000;
+const MOST_VALUES = 10_000;
 
 /** What the first rows of a table come to, read by the very readers that will read all of it. */
 export interface FirstLook {
@@ -64,7 +64,7 @@ class LookSink implements DaySink {
 
 /** Reads the first rows of a table. Nothing is thrown for what they hold: it stands in `problem` of the row, or among the
  *  problems.
- *  @param head       of the file; about 20,000 values of it are read
+ *  @param head       of the file; about 10,000 values of it are read
  *  @param orderOpen  nobody knows yet whether day or month comes first: a date that depends on it is null */
 export function firstLook(plan: TablePlan, head: FileHead, options: InspectOptions, orderOpen = false): FirstLook {
   if (plan.places.date.length === 0) return { understood: [], problems: [], codes: [] };

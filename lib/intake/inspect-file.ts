@@ -54,7 +54,9 @@ async function inspectTable(path: string, head: FileHead, options: InspectOption
     mapping.date = { ...mapping.date, order };
   }
   const look = firstLook(plan, head, options, orderOpen);
-  problems.push(...look.problems);
+  // What stands against reading the rows may have been found when they were looked at for their layout.
+  const known = new Set(problems.map(({ message }) => message));
+  problems.push(...look.problems.filter(({ message }) => !known.has(message)));
   const seen = { mapping, header, preview, previewLines, problems, valueCandidates };
   return { ...seen, understood: look.understood, others, facts: factsOf(plan.facts, look.codes), sheets: null };
 }

@@ -1,3 +1,4 @@
+import { type AreaUnit, KM2_OF } from '../series/area-units.ts';
 import { looksLikeRegistry } from './registry/looks-like-registry.ts';
 import { commaMeaning } from './registry/number-signs.ts';
 import { checkPositions, type PlacedRow } from './registry/positions.ts';
@@ -42,7 +43,7 @@ function registryOf(
   options: RegistryOptions,
 ): Registry {
   const table = registryTable(text, file);
-  const format = formatOf(table, file);
+  const format = formatOf(table, file, options.areaUnit);
   const { rows, problems } = readRows(table, format);
   const positions = checkPositions(rows, options);
   problems.push(
@@ -65,8 +66,14 @@ function registryOf(
 const hasFact = (fact: RegistryFact, columns: RegistryColumns): boolean =>
   columns[fact] >= 0 || (fact === 'namedFlows' && columns.flows.length > 0);
 
-function formatOf({ rows, columns, header, headerLine }: RegistryTable, file: string): RowFormat {
-  const areaFactor = columns.areaKm2 < 0 ? null : areaFactorOf(header[columns.areaKm2]);
+function formatOf(
+  { rows, columns, header, headerLine }: RegistryTable,
+  file: string,
+  areaUnit: AreaUnit | undefined,
+): RowFormat {
+  const stated = columns.areaKm2 < 0 ? null : areaFactorOf(header[columns.areaKm2]);
+  const said = areaUnit === undefined || columns.areaUnit >= 0 ? null : KM2_OF[areaUnit];
+  const areaFactor = stated ?? said;
   if (columns.areaKm2 >= 0 && areaFactor === null && columns.areaUnit < 0)
     throw refuseUnknownArea(header[columns.areaKm2], headerLine, file);
   const texts = (...places: number[]) =>

@@ -1,4 +1,5 @@
 import type { Influence } from '../region/ranking-types.ts';
+import type { AreaUnit } from '../series/area-units.ts';
 import type { FlagName } from '../series/daily-series.ts';
 import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 import type { Quantity, Unit } from '../series/quantities.ts';
@@ -240,6 +241,9 @@ export interface ReadFlowsOptions extends InspectOptions {
   /** every rejected row, also those beyond the 1,000 that the report holds */
   onRejected?(row: RejectedRow): void;
   signal?: AbortSignal;
+  /** path of a file that days go to for which there is no room in memory; it is gone afterwards. By default among the
+   *  system's temporary files */
+  scratch?: string;
   /** the last day that is not in the future, as a day number; by the clock where it is not given */
   today?: number;
   /** one part a station, in order of appearance, and only when the whole file has been found good; of a file with
@@ -335,6 +339,8 @@ export interface RegistryOptions {
   corrections?: readonly Correction[];
   /** name of the sheet of a workbook */
   sheet?: string;
+  /** unit of areas that the file does not name */
+  areaUnit?: AreaUnit;
   /** where the region lies by its layers and stations, as west, south, east, north: tells swapped coordinates */
   near?: readonly [number, number, number, number] | null;
 }

@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { CORRECTIONS } from '../intake/types.ts';
+import { AREA_UNITS } from '../series/area-units.ts';
 import { UNITS } from '../series/quantities.ts';
 import { FILE_KINDS } from './import-types.ts';
 
@@ -14,6 +15,7 @@ export const fileChoices = z
     unit: z.enum(UNITS).describe('unit of the values'),
     station: z.string().min(1).describe('code of the station of a file that names none'),
     matchCodes: z.boolean().describe('take codes that differ by case or leading zeros for those of the station list'),
+    areaUnit: z.enum(AREA_UNITS).describe('of the areas in a station list that does not name it'),
     corrections: z.array(z.enum(CORRECTIONS)).describe('of the coordinates in a station list'),
   })
   .partial();

@@ -1,4 +1,5 @@
 import type { Correction, ImportReport, Inspection, IntakeError, Mapping, Unit } from '../intake/types.ts';
+import type { AreaUnit } from '../series/area-units.ts';
 import type { ArchivedImport } from '../store/archived-region.ts';
 import type { OverlapRule } from '../store/lay-parts.ts';
 import type { LayerKind } from '../store/layer-kinds.ts';
@@ -19,6 +20,8 @@ export interface FileChoices {
   matchCodes?: boolean;
   /** of a registry's coordinates */
   corrections?: Correction[];
+  /** of a registry whose areas are in a unit that it does not name */
+  areaUnit?: AreaUnit;
   /** of a file of a region's archive: what its first import was */
   recorded?: ArchivedImport;
   /** of a layer of an archive */

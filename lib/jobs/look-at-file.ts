@@ -85,6 +85,7 @@ async function registryIn(file: GivenFile, choices: FileChoices): Promise<Found>
   try {
     const { stations, given, warnings } = await readRegistry(file.path, file.name, {
       corrections: choices.corrections,
+      areaUnit: choices.areaUnit,
       sheet: choices.mapping?.sheet,
     });
     const shown = stations.slice(0, SHOWN_STATIONS);

@@ -73,8 +73,8 @@ export function stageFile(file: GivenFile, kind: FileKind, tools: StageTools): P
 }
 
 async function stageRegistry(file: GivenFile, { staging, choices }: StageTools): Promise<StagedFile> {
-  const { corrections, mapping } = choicesFor(file, choices);
-  const options = { corrections, sheet: mapping?.sheet };
+  const { corrections, areaUnit, mapping } = choicesFor(file, choices);
+  const options = { corrections, areaUnit, sheet: mapping?.sheet };
   const { stations, rows, given, sha256, warnings } = await readRegistry(file.path, file.name, options);
   const number = staging.addFile({ kind: 'registry', fileName: file.name });
   staging.stageRegistry(number, stations, given);
@@ -106,7 +106,7 @@ async function stageFlows(file: GivenFile, tools: StageTools): Promise<StagedFil
   try {
     report = await readFlows(file.path, {
       ...options,
-      ...{ signal, onProgress },
+      ...{ signal, onProgress, scratch: `${staging.path}-pages` },
       onRejected: (row) => rejected.write(row),
       emit: (part) => staging.stagePart(number, part),
     });

@@ -1,5 +1,6 @@
 import type { Correction } from '@/lib/intake/types';
 import type { FilePreview, LayerPreview } from '@/lib/jobs/upload-types';
+import { AREA_UNITS } from '@/lib/series/area-units';
 import { count, fixed, significant } from '../format.ts';
 import { ScrollFrame } from '../scroll-frame.tsx';
 import ui from '../ui.module.css';
@@ -19,7 +20,25 @@ export function RegistryDetail({ preview, change }: { preview: FilePreview; chan
   return (
     <>
       {problems.map((problem) => (
-        <ProblemNote key={problem.message} problem={problem} answeredHere={problem.problem.needs === 'correction'}>
+        <ProblemNote
+          key={problem.message}
+          problem={problem}
+          answeredHere={problem.problem.needs === 'correction' || problem.problem.needs === 'area'}
+        >
+          {problem.problem.needs === 'area' && (
+            <p className={styles.actions}>
+              {AREA_UNITS.map((areaUnit) => (
+                <button
+                  key={areaUnit}
+                  type="button"
+                  className={ui.button}
+                  onClick={() => change({ own: true, areaUnit })}
+                >
+                  Areas are in {areaUnit}
+                </button>
+              ))}
+            </p>
+          )}
           {problem.problem.needs === 'correction' && (
             <p className={styles.actions}>
               {registry?.offered.map((correction) => (
@@ -31,6 +50,12 @@ export function RegistryDetail({ preview, change }: { preview: FilePreview; chan
           )}
         </ProblemNote>
       ))}
+      {choices.areaUnit && (
+        <label className={ui.check}>
+          <input type="checkbox" checked onChange={() => change({ own: true, areaUnit: undefined })} />
+          Areas are in {choices.areaUnit}
+        </label>
+      )}
       {chosen.map((correction) => (
         <label key={correction} className={ui.check}>
           <input type="checkbox" checked onChange={() => setTo(correction, false)} />

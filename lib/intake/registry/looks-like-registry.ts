@@ -1,37 +1,40 @@
 import { LF } from '../file-blocks.ts';
 import { looksLikeDate } from '../recognise/column-facts.ts';
+import { isWidthRow } from '../recognise/find-header.ts';
 import { roleOfHeading } from '../recognise/heading-roles.ts';
-import { detectDelimiter, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
+import { detectDelimiter, type SampleRow, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
+import { registryColumns } from './registry-columns.ts';
 
-const LATITUDE = /^(lat|latitude|breite|breitengrad)(_|\b)|_lat(itude)?$/i;
-const LONGITUDE = /^(lon|long|lng|longitude|länge|längengrad)(_|\b)|_(lon|long|lng|longitude)$/i;
-const OTHER_FACT = /area|name|river|fläche|superficie/i;
+/** Lines among which the header is looked for, below titles and comments, and rows below it that are looked through. */
+const MOST_TITLES = 30;
+const ROWS_LOOKED_AT = 50;
 
-/** Rows below the header that are looked through for dates. */
-const ROWS_LOOKED_AT = 20;
-
-const isFilled = (field: string): boolean => field.trim() !== '';
-
-/** Whether a table's first lines are those of a station registry: of stations, with their places or their areas and without
- *  dates.
+/** Whether a table's first lines are those of a station registry: a row a station, with its place, or with other facts and
+ *  no dates.
  *  @param head       the first bytes of the file, UTF-8
  *  @param wholeFile  they are all of it: also the last line is whole */
 export function looksLikeRegistry(head: Uint8Array, wholeFile: boolean): boolean {
   const lines = sampleLines(head, LF, wholeFile).filter(({ text }) => !text.startsWith('#'));
   const delimiter = lines.length > 0 ? detectDelimiter(lines, LF) : null;
   if (delimiter === null) return false;
-  const all = splitSample(lines.slice(0, ROWS_LOOKED_AT), splitterFor(delimiter, LF));
-  // Titles above the table stand alone in their rows.
-  const [header, ...rows] = all.slice(
-    Math.max(
-      0,
-      all.findIndex(({ fields }) => fields.filter(isFilled).length > 1),
-    ),
-  );
-  const headings = header.fields.map((field) => field.trim());
-  const roles = headings.map(roleOfHeading);
+  const rows = splitSample(lines.slice(0, MOST_TITLES + ROWS_LOOKED_AT), splitterFor(delimiter, LF));
+  return rows
+    .slice(0, MOST_TITLES)
+    .some(({ fields }, at) => fields.length > 1 && isRegistry(fields, rows.slice(at + 1, at + 1 + ROWS_LOOKED_AT)));
+}
+
+function isRegistry(header: readonly string[], below: readonly SampleRow[]): boolean {
+  const columns = registryColumns(header);
+  if (columns.code < 0) return false;
+  const rows = below.filter(({ fields }) => !isWidthRow(fields));
+  const roles = header.map(roleOfHeading);
+  const placed = columns.latitude >= 0 && columns.longitude >= 0;
+  const codes = rows.map(({ fields }) => fields[columns.code] ?? '');
+  // Flows of placed stations name each of them day after day; a list of stations may say when each was opened.
+  const onceEach = rows.length > 0 && new Set(codes).size === codes.length && !roles.includes('value');
+  if (placed && onceEach) return true;
   if (roles.includes('date') || rows.some(({ fields }) => fields.some(looksLikeDate))) return false;
-  const placed = headings.some((text) => LATITUDE.test(text)) && headings.some((text) => LONGITUDE.test(text));
   const named = roles.includes('station') || roles.includes('maybe-station');
-  return placed || (named && !roles.includes('value') && headings.some((text) => OTHER_FACT.test(text)));
+  const facts = columns.areaKm2 >= 0 || columns.name >= 0 || columns.river >= 0;
+  return placed || (named && facts && !roles.includes('value'));
 }

@@ -1,3 +1,4 @@
+import { AREA_UNITS } from '../../series/area-units.ts';
 import { type Correction, IntakeError, type RejectedRow } from '../types.ts';
 import type { PlacedRow } from './positions.ts';
 import type { RowProblem } from './row-problem.ts';
@@ -47,7 +48,7 @@ export function refuseUnknownArea(heading: string, row: number, file: string): I
   return new IntakeError({
     ...{ file, row, value: heading, needs: 'area' },
     message: 'the registry does not say in which unit its areas are',
-    remedy: `Name the column “${heading}_km2” (or _mi2, _ha, _acres, _m2), or add a column area_unit`,
+    remedy: `Say it: ${AREA_UNITS.join(', ')} (--area-unit); or name the column “${heading}_km2” (or _mi2, _ha, _acres, _m2), or add a column area_unit`,
   });
 }
 

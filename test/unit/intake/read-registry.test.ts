@@ -308,3 +308,11 @@ test('readRegistry reads thousands where decimals have a point, and names codes 
   expect(stations.map(({ areaKm2 }) => areaKm2)).toEqual([1234.5, 2500]);
   expect(warnings).toEqual(['Codes that differ only by case or leading zeros: “A1” and “a1”.']);
 });
+
+test('readRegistry asks for the unit of areas, and takes it where the file names none', async () => {
+  const text = 'id,area_total\nA,10\n';
+  expect((await refusal(text)).problem).toMatchObject({ needs: 'area', value: 'area_total' });
+  expect((await read(text, { areaUnit: 'mi²' })).stations[0].areaKm2).toBe(25.89988110336);
+  expect((await read('id,area_ha\nA,10\n', { areaUnit: 'mi²' })).stations[0].areaKm2).toBe(0.1);
+  expect((await read('id,area,area_unit\nA,10,acres\n', { areaUnit: 'mi²' })).stations[0].areaKm2).toBe(0.040468564224);
+});
