@@ -59,9 +59,26 @@ async function readQuantity(path: string, head: FileHead, options: ReadFlowsOpti
   const several = firstLook(plan, head, options).problems.find(({ problem }) => problem.needs === 'daily-mean');
   if (several) throw several;
 
+  const { sink, reading } = sinkAndReading(plan, options);
+  try {
+    return await readInto(sink, { path, head, plan, reading, options });
+  } finally {
+    if (sink instanceof RecordSink) sink.close();
+  }
+}
+
+interface Table {
+  path: string;
+  head: FileHead;
+  plan: TablePlan;
+  reading: TableReading;
+  options: ReadFlowsOptions;
+}
+
+async function readInto(sink: RecordSink | DailyMeans, table: Table): Promise<ImportReport> {
+  const { path, head, plan, reading, options } = table;
   const hash = createHash('sha256');
   const rejections = new Rejections(options.onRejected);
-  const { sink, reading } = sinkAndReading(plan, options);
   let bytesRead = 0;
   const loop = new RowLoop(plan, reading.reader, {
     ...{ signal: options.signal, rejections },
@@ -110,7 +127,7 @@ function sinkAndReading(
 ): { sink: RecordSink | DailyMeans; reading: TableReading } {
   const share = plan.mapping.dailyMean;
   if (share === undefined) {
-    const sink = new RecordSink();
+    const sink = new RecordSink({ scratch: options.scratch });
     return { sink, reading: tableReading(plan, options, sink) };
   }
   const means = new DailyMeans([], share);

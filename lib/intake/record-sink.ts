@@ -1,13 +1,19 @@
 import { DayConflict } from './day-conflict.ts';
+import { type PageLimits, PageMemory } from './page-memory.ts';
 import type { DaySink } from './rows/row-reader.ts';
-import { FILLED, OTHER_CODE, OTHER_VALUE, PageMemory, StationDays } from './station-days.ts';
+import { FILLED, OTHER_CODE, OTHER_VALUE, StationDays } from './station-days.ts';
 
 /** Lays the values of a file into one record of days for each station. */
 export class RecordSink implements DaySink {
   readonly records: StationDays[] = [];
   filled = 0;
   otherCodes = 0;
-  private readonly memory = new PageMemory();
+  private readonly memory: PageMemory;
+
+  /** @param limits  of the memory that the records share */
+  constructor(limits: PageLimits = {}) {
+    this.memory = new PageMemory(limits);
+  }
 
   /** @throws DayConflict when the day stands already with another value */
   take(station: number, day: number, value: number, code: number, line: number): void {
@@ -20,5 +26,10 @@ export class RecordSink implements DaySink {
     if (outcome === OTHER_VALUE) throw new DayConflict(station, day, value, line);
     if (outcome === FILLED) this.filled++;
     else if (outcome === OTHER_CODE) this.otherCodes++;
+  }
+
+  /** Ends the use of what the records lie in. */
+  close(): void {
+    this.memory.close();
   }
 }

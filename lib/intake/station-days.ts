@@ -1,24 +1,7 @@
-/** Code of a day that the file has no row for. */
-export const NO_ROW = 255;
+import type { PageMemory, StoredPage } from './page-memory.ts';
+import { NO_ROW, type OpenPage, PAGE, PAGE_BITS } from './pages.ts';
 
-/** Days to a page. A record is kept in pages, so that rows may come in any order, a stray date costs one page, and
- *  growing copies nothing. */
-const PAGE_BITS = 10;
-const PAGE = 1 << PAGE_BITS;
-const MISSING = -0x80000000;
-
-interface OpenPage {
-  values: Float64Array;
-  codes: Uint8Array;
-}
-
-/** A page that has been left: whole numbers of 10^−decimals, four bytes a day, NaN as MISSING. */
-interface PackedPage {
-  mantissas: Int32Array;
-  decimals: number;
-  /** one number when all days share a code */
-  codes: Uint8Array | number;
-}
+export { NO_ROW };
 
 /** What became of a row. */
 export const NEW_DAY = 0;
@@ -31,33 +14,6 @@ export const OTHER_VALUE = 3;
 /** as SAME_VALUE, but this row carries another flag; the first is kept */
 export const OTHER_CODE = 4;
 
-/** The pages that all stations of a file share a memory for. Up to the budget pages stay as they are; beyond it, those
- *  that their station has left are packed, which halves them. */
-export class PageMemory {
-  private readonly spare: OpenPage[] = [];
-  private open = 0;
-
-  /** @param budget  number of pages (9 kB each) that may stay open before pages that were left are packed */
-  constructor(private readonly budget: number = 8192) {}
-
-  take(): OpenPage {
-    this.open++;
-    const page = this.spare.pop() ?? { values: new Float64Array(PAGE), codes: new Uint8Array(PAGE) };
-    page.values.fill(Number.NaN);
-    page.codes.fill(NO_ROW);
-    return page;
-  }
-
-  give(page: OpenPage): void {
-    this.open--;
-    if (this.spare.length < 64) this.spare.push(page);
-  }
-
-  get full(): boolean {
-    return this.open > this.budget;
-  }
-}
-
 /** A run of consecutive days: what `StationDays.run` answers. */
 export interface DayRun {
   firstDay: number;
@@ -68,8 +24,8 @@ export interface DayRun {
 /** The daily values of one station as a file gives them, in any order. */
 export class StationDays {
   duplicates = 0;
-  private readonly pages = new Map<number, OpenPage | PackedPage>();
-  /** pages that were packed and needed again: rows come out of order here, so they stay open */
+  private readonly pages = new Map<number, StoredPage>();
+  /** pages that were put away and needed again: rows come out of order here, so they stay open while there is room */
   private readonly revisited = new Set<number>();
   private pageNumber = Number.NaN;
   private pageStart = -0x40000000;
@@ -108,12 +64,9 @@ export class StationDays {
 
   private turnTo(pageNumber: number): void {
     if (this.memory.full) this.leave();
-    let page = this.pages.get(pageNumber);
-    if (page === undefined) page = this.memory.take();
-    else if ('mantissas' in page) {
-      page = unpack(page, this.memory.take());
-      this.revisited.add(pageNumber);
-    }
+    const stored = this.pages.get(pageNumber);
+    const page = stored === undefined ? this.memory.take() : this.memory.open(stored);
+    if (stored !== undefined && page !== stored) this.revisited.add(pageNumber);
     this.pages.set(pageNumber, page);
     this.pageNumber = pageNumber;
     this.pageStart = pageNumber << PAGE_BITS;
@@ -123,18 +76,16 @@ export class StationDays {
 
   private leave(): void {
     const page = this.pages.get(this.pageNumber);
-    if (page === undefined || 'mantissas' in page || this.revisited.has(this.pageNumber)) return;
-    const packed = pack(page);
-    if (packed === null) return;
-    this.pages.set(this.pageNumber, packed);
-    this.memory.give(page);
+    if (page === undefined || !('values' in page)) return;
+    if (this.revisited.has(this.pageNumber) && !this.memory.overfull) return;
+    this.pages.set(this.pageNumber, this.memory.put(page));
+    this.pageStart = -0x40000000;
   }
 
   /** True when two days side by side have values: at once for a daily record, whose first page shows it. */
   hasNeighbours(): boolean {
     for (const page of this.pages.values()) {
-      const { values } =
-        'mantissas' in page ? unpack(page, { values: new Float64Array(PAGE), codes: new Uint8Array(PAGE) }) : page;
+      const { values } = this.memory.look(page);
       for (let at = 1; at < PAGE; at++) if (!Number.isNaN(values[at]) && !Number.isNaN(values[at - 1])) return true;
     }
     return false;
@@ -144,10 +95,7 @@ export class StationDays {
   run(): DayRun | null {
     const numbers = [...this.pages.keys()].sort((a, b) => a - b);
     if (numbers.length === 0) return null;
-    const opened = (number: number): OpenPage => {
-      const page = this.pages.get(number) as OpenPage | PackedPage;
-      return 'mantissas' in page ? unpack(page, { values: new Float64Array(PAGE), codes: new Uint8Array(PAGE) }) : page;
-    };
+    const opened = (number: number): OpenPage => this.memory.look(this.pages.get(number) as StoredPage);
     const head = opened(numbers[0]).codes;
     const tail = opened(numbers[numbers.length - 1]).codes;
     let first = 0;
@@ -171,45 +119,8 @@ export class StationDays {
 
   /** Gives the memory back; the station is empty afterwards. */
   clear(): void {
+    for (const page of this.pages.values()) this.memory.drop(page);
     this.pages.clear();
     this.pageStart = -0x40000000;
   }
-}
-
-/** Flows have few decimals: as whole numbers of 10^−decimals they fit in four bytes. A whole number divided by an exact
- *  power of ten gives back the very double that reading the text gave.
- *  @returns null when some value does not fit */
-function pack(page: OpenPage): PackedPage | null {
-  const mantissas = new Int32Array(PAGE);
-  let decimals = 0;
-  let scale = 1;
-  for (let at = 0; at < PAGE; at++) {
-    const value = page.values[at];
-    if (Number.isNaN(value)) continue;
-    while (Math.round(value * scale) / scale !== value) {
-      if (++decimals > 9) return null;
-      scale *= 10;
-    }
-  }
-  for (let at = 0; at < PAGE; at++) {
-    const value = page.values[at];
-    const mantissa = Math.round(value * scale);
-    if (Math.abs(mantissa) > 0x7fffffff || (value === 0 && Object.is(value, -0))) return null;
-    if (!Number.isNaN(value) && mantissa / scale !== value) return null;
-    mantissas[at] = Number.isNaN(value) ? MISSING : mantissa;
-  }
-  const first = page.codes[0];
-  const alike = page.codes.every((code) => code === first);
-  return { mantissas, decimals, codes: alike ? first : page.codes.slice() };
-}
-
-function unpack(packed: PackedPage, into: OpenPage): OpenPage {
-  const scale = 10 ** packed.decimals;
-  for (let at = 0; at < PAGE; at++) {
-    const mantissa = packed.mantissas[at];
-    into.values[at] = mantissa === MISSING ? Number.NaN : mantissa / scale;
-  }
-  if (typeof packed.codes === 'number') into.codes.fill(packed.codes);
-  else into.codes.set(packed.codes);
-  return into;
 }

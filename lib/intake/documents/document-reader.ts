@@ -66,34 +66,42 @@ export function readerOf(layout: DocumentLayout, head: FileHead, parse: Document
     },
     async read(path, options) {
       const sink = new SeriesSink(options, false);
-      const hash = createHash('sha256');
-      let bytes = 0;
-      const onBytes = (chunk: Uint8Array) => {
-        bytes += chunk.length;
-        hash.update(chunk);
-        options.onProgress?.(sink.rows, bytes, head.size);
-      };
-      const reading = { ...readingFor(options.fileName, sink), signal: options.signal, onBytes };
-      await parse(path, reading, sink, () => false);
-      const problem = nothingTaken(options.fileName, sink) ?? sink.stations.problem();
-      if (problem) throw problem;
-      const stations: StationReport[] = [];
-      let unit: Unit | null = null;
-      for (const [part, report] of sink.parts()) {
-        if ((part.quantity ?? 'flow') === sink.wanted.main) unit ??= part.unit;
-        stations.push(report);
-        options.emit(part);
+      try {
+        return await readInto(sink, path, options);
+      } finally {
+        sink.close();
       }
-      const facts = sink.foundFacts();
-      return {
-        ...{ file: options.fileName, layout, unit: unit ?? 'm3/s', mapping: mappingOf(layout, options, unit, sink) },
-        ...{ rows: sink.rows, accepted: sink.rows - sink.rejectedTotal, rejectedTotal: sink.rejectedTotal },
-        ...{ rejectedFile: null, rejected: sink.rejected, stations, sha256: hash.digest('hex') },
-        warnings: warningsOf(sink),
-        ...(facts.length > 0 ? { facts } : {}),
-      };
     },
   };
+
+  async function readInto(sink: SeriesSink, path: string, options: ReadFlowsOptions): Promise<ImportReport> {
+    const hash = createHash('sha256');
+    let bytes = 0;
+    const onBytes = (chunk: Uint8Array) => {
+      bytes += chunk.length;
+      hash.update(chunk);
+      options.onProgress?.(sink.rows, bytes, head.size);
+    };
+    const reading = { ...readingFor(options.fileName, sink), signal: options.signal, onBytes };
+    await parse(path, reading, sink, () => false);
+    const problem = nothingTaken(options.fileName, sink) ?? sink.stations.problem();
+    if (problem) throw problem;
+    const stations: StationReport[] = [];
+    let unit: Unit | null = null;
+    for (const [part, report] of sink.parts()) {
+      if ((part.quantity ?? 'flow') === sink.wanted.main) unit ??= part.unit;
+      stations.push(report);
+      options.emit(part);
+    }
+    const facts = sink.foundFacts();
+    return {
+      ...{ file: options.fileName, layout, unit: unit ?? 'm3/s', mapping: mappingOf(layout, options, unit, sink) },
+      ...{ rows: sink.rows, accepted: sink.rows - sink.rejectedTotal, rejectedTotal: sink.rejectedTotal },
+      ...{ rejectedFile: null, rejected: sink.rejected, stations, sha256: hash.digest('hex') },
+      warnings: warningsOf(sink),
+      ...(facts.length > 0 ? { facts } : {}),
+    };
+  }
 }
 
 function mappingOf(layout: DocumentLayout, options: InspectOptions, unit: Unit | null, sink: SeriesSink): Mapping {
@@ -142,7 +150,7 @@ function warningsOf(sink: SeriesSink): string[] {
 
 /** Why a document gave nothing; null when it gave something. */
 function nothingTaken(file: string, sink: SeriesSink): IntakeError | null {
-  if (sink.rows > sink.rejectedTotal) return null;
+  if (sink.hasMain && sink.rows > sink.rejectedTotal) return null;
   const first = sink.rejected[0];
   if (first !== undefined) {
     return new IntakeError({

@@ -1,8 +1,8 @@
 import { isoDate } from '../../calendar/day.ts';
+import { PageMemory } from '../page-memory.ts';
 import { REPORTED_ROWS } from '../rejections.ts';
 import { stationReport } from '../report.ts';
 import { StationCodes, stationInFileName } from '../station-codes.ts';
-import { PageMemory } from '../station-days.ts';
 import {
   type FoundFacts,
   type InspectOptions,
@@ -54,11 +54,13 @@ export class SeriesSink {
   emptyPoints = 0;
   /** false when a series of the main quantity names no station */
   namesStations = true;
+  /** a series of the main quantity has come */
+  hasMain = false;
   /** unit of the first series of the main quantity */
   mainUnit: Unit | null = null;
   private readonly values: ValueText;
   private readonly stamp = new TimeStamp();
-  private readonly memory = new PageMemory();
+  private readonly memory: PageMemory;
   private readonly records = new Map<string, SeriesRecord>();
   private readonly facts = new Map<string, FoundFacts>();
   /** what qualifiers mean, as the document explains them */
@@ -70,10 +72,11 @@ export class SeriesSink {
 
   /** @param look  only the first points are looked at: problems are gathered, and nothing is thrown for them */
   constructor(
-    private readonly options: InspectOptions & { onRejected?(row: RejectedRow): void },
+    private readonly options: InspectOptions & { onRejected?(row: RejectedRow): void; scratch?: string },
     private readonly look: boolean,
   ) {
     const { fileName, knownStations = null, matchCodes, mapping } = options;
+    this.memory = new PageMemory({ scratch: options.scratch });
     this.wanted = new WantedSeries(options);
     this.stations = new StationCodes(fileName, knownStations, { matchCodes, lenient: look });
     this.values = new ValueText(mapping?.missing ?? []);
@@ -82,6 +85,11 @@ export class SeriesSink {
   /** True when nothing more can be learnt by looking. */
   get seenEnough(): boolean {
     return this.understood.length >= SHOWN_POINTS;
+  }
+
+  /** Ends the use of what the records lie in. */
+  close(): void {
+    this.memory.close();
   }
 
   warn(text: string): void {
@@ -115,6 +123,7 @@ export class SeriesSink {
     }
     this.record = record;
     if (main) {
+      this.hasMain = true;
       this.learn(head);
       this.mainUnit ??= unit;
       if (head.names.length === 0) this.namesStations = false;

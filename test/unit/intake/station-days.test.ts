@@ -1,11 +1,11 @@
 import { expect, test } from 'vitest';
+import { PageMemory } from '../../../lib/intake/page-memory.ts';
 import {
   FILLED,
   NEW_DAY,
   NO_ROW,
   OTHER_CODE,
   OTHER_VALUE,
-  PageMemory,
   SAME_VALUE,
   StationDays,
 } from '../../../lib/intake/station-days.ts';
@@ -35,8 +35,13 @@ test('StationDays.put merges equal values, lets a value fill a missing day, and 
   expect([...(record.run()?.codes ?? [])]).toEqual([0, 0]);
 });
 
-test.each([0, 1_000_000])('StationDays gives back 40 years value for value with %i open pages allowed', (budget) => {
-  const memory = new PageMemory(budget);
+test.each([
+  ['in memory', {}],
+  ['packed', { open: 0 }],
+  ['in a file', { open: 0, packed: 0 }],
+  ['packed in part', { open: 2, packed: 3 }],
+])('StationDays gives back 40 years value for value, its pages %s', (_where, limits) => {
+  const memory = new PageMemory(limits);
   const records = [new StationDays(memory), new StationDays(memory)];
   const value = (day: number, station: number): number => {
     if (day % 97 === 0) return Number.NaN;
