@@ -8,13 +8,16 @@ export const BLOCK_DAYS = 28;
  *  or of coarse steps are all alike. */
 const WINDOW = 8;
 const CHANGES_IN_WINDOW = 4;
-/** Of a block's days at least this share must differ from the day before. */
+/** Of a block's days at least this share must differ from the day before… */
 const CHANGING_SHARE = 0.5;
+/** …and so many must be higher: a recession written in coarse steps runs the same way every time. */
+const LEAST_RISES = 3;
 
 /** Blocks of at least 28 days that repeat, value for value, a block that began at least 28 days earlier: days that stood
  *  twice in what was imported under different dates, such as a month or a year copied into the place of another. (Days
  *  that stand twice under the same date are met at the import: equal ones merge, unlike ones refuse the file.) At least
- *  half of a block's days must differ from the day before, so that dry spells and steady releases are no repetition.
+ *  half of a block's days must differ from the day before, and three be higher, so that dry spells, steady releases and
+ *  recessions in coarse steps are no repetition.
  *  @returns one finding for each block, over the later copy; detail: `copyOf`, the ISO date on which the first begins */
 export function repeatedBlocks({ firstDay, values }: DailySeries): Finding[] {
   const found: Finding[] = [];
@@ -27,7 +30,7 @@ export function repeatedBlocks({ firstDay, values }: DailySeries): Finding[] {
     while (earlier - (start - from) > 0 && from > after && same(values, from - 1, start - earlier)) from--;
     let end = start;
     while (end < values.length && same(values, end, start - earlier)) end++;
-    if (end - from < BLOCK_DAYS || changesIn(values, from, end) < CHANGING_SHARE * (end - from)) continue;
+    if (end - from < BLOCK_DAYS || !isLively(values, from, end)) continue;
     found.push({
       ...{ kind: 'repeated', firstDay: firstDay + from, lastDay: firstDay + end - 1, days: end - from },
       detail: { copyOf: isoDate(firstDay + from - (start - earlier)) },
@@ -39,10 +42,14 @@ export function repeatedBlocks({ firstDay, values }: DailySeries): Finding[] {
 
 const same = (values: Float64Array, day: number, lag: number): boolean => values[day] === values[day - lag];
 
-function changesIn(values: Float64Array, from: number, end: number): number {
+function isLively(values: Float64Array, from: number, end: number): boolean {
   let changes = 0;
-  for (let day = from + 1; day < end; day++) if (values[day] !== values[day - 1]) changes++;
-  return changes;
+  let rises = 0;
+  for (let day = from + 1; day < end; day++) {
+    if (values[day] !== values[day - 1]) changes++;
+    if (values[day] > values[day - 1]) rises++;
+  }
+  return changes >= CHANGING_SHARE * (end - from) && rises >= LEAST_RISES;
 }
 
 /** Windows of 8 days by where each was first met, in a table of open addresses. Every other window will do to find a block

@@ -36,7 +36,8 @@ const FAULTS: Fault[] = [
       for (let day = from; day < from + days; day++) values[day] *= 1000;
     },
   },
-  { kind: 'repeated', least: 28, lay: (values, from, days) => values.copyWithin(from, from - 700, from - 700 + days) },
+  // Long enough for three rises at any season: a shorter dry spell may be one recession.
+  { kind: 'repeated', least: 75, lay: (values, from, days) => values.copyWithin(from, from - 700, from - 700 + days) },
 ];
 
 for (const { kind, lay, least = 1 } of FAULTS) {

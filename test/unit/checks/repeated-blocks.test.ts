@@ -46,7 +46,7 @@ test('a missing day parts a block', () => {
   expect(repeatedBlocks(series).map(({ days }) => days)).toEqual([30, 30]);
 });
 
-test('dry spells, steady releases and weeks that are all alike are no repetition', () => {
+test('dry spells, steady releases, recessions in coarse steps and weeks that are all alike are no repetition', () => {
   const days = 4000;
   const record = (flow: (day: number) => number) => ({
     firstDay: 0,
@@ -56,4 +56,6 @@ test('dry spells, steady releases and weeks that are all alike are no repetition
   expect(repeatedBlocks(record(() => 0))).toEqual([]);
   expect(repeatedBlocks(record((day) => (Math.floor(day / 20) % 2 === 0 ? 3 : 5)))).toEqual([]);
   expect(repeatedBlocks(record((day) => (day % 7 < 5 ? 8 : 2)))).toEqual([]);
+  const recession = (day: number) => Math.round(100 * Math.exp(-(day % 200) / 70)) / 1000;
+  expect(repeatedBlocks(record(recession))).toEqual([]);
 });
