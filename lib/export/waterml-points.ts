@@ -46,7 +46,8 @@ export function usualCode({
  *  @returns       empty where there is nothing to say */
 export function pointMetadata(code: DayCode, missing: boolean, always = false): string {
   const { text, bits, valueText } = code;
-  const says = text !== '' || bits !== 0;
+  // Beside a text in the value's place also “none” is said: a reader must not take the text for a flag.
+  const says = text !== '' || bits !== 0 || valueText !== undefined;
   return [
     quality(bits),
     missing ? `<wml2:nilReason xlink:href="${NIL}/missing" xlink:title="missing"/>` : '',

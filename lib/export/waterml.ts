@@ -64,6 +64,7 @@ export function* watermlDocument(
     number++;
     let within = 0;
     for (const one of series) {
+      if (one.codes.every((code) => code === NO_ROW)) continue;
       within++;
       // The station stands in its first observation; the others refer to it.
       const feature =
@@ -81,7 +82,6 @@ function* observation(id: string, feature: string, series: WrittenSeries): Gener
   const { title, interpolation, words } = PROPERTIES[quantity];
   const first = codes.findIndex((code) => code !== NO_ROW);
   const last = codes.findLastIndex((code) => code !== NO_ROW);
-  if (first < 0) return;
   const [begin, end] = [isoDate(firstDay + first), isoDate(firstDay + last)];
   const usual = usualCode(series);
   yield `<wml2:observationMember><om:OM_Observation gml:id="observation-${id}">

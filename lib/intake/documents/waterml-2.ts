@@ -149,6 +149,7 @@ class Waterml2 implements ElementHandler {
     this.preset = newPoint();
     this.presetMaking = newMaking();
     this.begun = false;
+    this.quality = '';
     this.head = null;
     this.points = 0;
   }
