@@ -1,4 +1,5 @@
 import { isoDate } from '../calendar/day.ts';
+import { FLAG, FLAG_NAMES } from '../series/daily-series.ts';
 import type { DaySink } from './rows/row-reader.ts';
 import { NO_ROW } from './station-days.ts';
 import { NO_TIME } from './time-of-day.ts';
@@ -44,7 +45,7 @@ const emptyPage = (): Page => ({
  *  Readings stand at a usual interval, which is found for each month: that between most readings. A day's mean is that of
  *  its values, each of which stands for one interval; it counts where they cover at least a given share of the day, else
  *  the day is missing. A month of days with one reading each is of daily values. Flags of a day's values are joined bit
- *  by bit; their text is kept where all of them have the same. */
+ *  by bit; their text is kept where all of them have the same, else the flags stand in words. */
 export class DailyMeans implements DaySink {
   /** seconds since midnight of the row being read, for `take`; NO_TIME where it says none */
   second = NO_TIME;
@@ -152,7 +153,12 @@ function vote(page: Page, at: number, step: number): void {
   page.votes[at] += page.steps[at] === step ? 1 : -1;
 }
 
-/** The day's code: the one that all its rows share, else their bits without a text. */
+/** Flags in words that mean them wherever they are read. */
+const WORDS: [number, string][] = FLAG_NAMES.map((name) => [FLAG[name], name === 'below-detection' ? '<' : name]);
+
+const wordsOf = (bits: number): string => WORDS.flatMap(([bit, word]) => (bits & bit ? [word] : [])).join(' ');
+
+/** The day's code: the one that all its rows share, else their flags in words. */
 class CodeList {
   readonly codes: DayCode[] = [];
   private readonly numbers = new Map<string, number>();
@@ -163,14 +169,15 @@ class CodeList {
     const { text, valueText } = this.file[code];
     const hasText = !mixed && (written || text !== valueText);
     const day: DayCode = {
-      ...{ text: hasText ? text : '', bits },
+      ...{ text: hasText ? text : wordsOf(bits), bits },
       ...(hasText && written && valueText !== undefined ? { valueText } : {}),
     };
     const key = JSON.stringify([day.text, bits, day.valueText ?? null]);
     const known = this.numbers.get(key);
     if (known !== undefined) return known;
     // A byte tells 255 codes apart; beyond them the text gives way to the bits, of which there are fewer.
-    if (this.codes.length >= NO_ROW - 64 && day.text !== '') return this.number(code, bits, { mixed: true, written });
+    if (this.codes.length >= NO_ROW - 64 && hasText && text !== '')
+      return this.number(code, bits, { mixed: true, written });
     const number = this.codes.push(day) - 1;
     this.numbers.set(key, number);
     return number;

@@ -6,6 +6,7 @@ import { firstLook } from './first-look.ts';
 import { recognise } from './recognise/recognise.ts';
 import { factsOf } from './recognise/stated-facts.ts';
 import { type Inspection, type InspectOptions, IntakeError } from './types.ts';
+import { unitOfQuantityProblem } from './unit-of-quantity.ts';
 import { sheetAsText, workbookSheets } from './workbook/index.ts';
 
 /** Rows of a sheet that are looked at: as many as the first megabyte of most tables has. */
@@ -42,7 +43,8 @@ export async function inspectFile(path: string, options: InspectOptions): Promis
 async function inspectTable(path: string, head: FileHead, options: InspectOptions): Promise<Inspection> {
   const plan = recognise(head, options);
   const { mapping, header, preview, previewLines, valueCandidates, others = [] } = plan;
-  const problems = [...plan.problems];
+  const wrongUnit = unitOfQuantityProblem(plan.file, mapping);
+  const problems = [...plan.problems, ...(wrongUnit ? [wrongUnit] : [])];
   let orderOpen = false;
   if (plan.orderOpen) {
     const order = await findDateOrder(path, plan, { firstProof: true }).catch((error: unknown) => {

@@ -16,6 +16,7 @@ import { RowLoop } from './rows/row-loop.ts';
 import { type TableReading, tableReading } from './table-reading.ts';
 import { TimedRows } from './timed-rows.ts';
 import type { AlsoQuantity, ImportReport, ReadFlowsOptions, Unit } from './types.ts';
+import { unitOfQuantityProblem } from './unit-of-quantity.ts';
 
 /** Reads a table of text: the quantity that its mapping names, then each that the mapping asks for beside it, in a reading
  *  of its own. Counts of rows are those of the first.
@@ -53,7 +54,8 @@ function optionsFor(also: AlsoQuantity, { mapping }: ImportReport, options: Read
 
 async function readQuantity(path: string, head: FileHead, options: ReadFlowsOptions): Promise<ImportReport> {
   const plan = recognise(head, options);
-  if (plan.problems.length > 0) throw plan.problems[0];
+  const wrong = plan.problems[0] ?? unitOfQuantityProblem(plan.file, plan.mapping);
+  if (wrong) throw wrong;
   if (plan.orderOpen)
     plan.mapping.date = { ...plan.mapping.date, order: await findDateOrder(path, plan, { signal: options.signal }) };
   const several = firstLook(plan, head, options).problems.find(({ problem }) => problem.needs === 'daily-mean');

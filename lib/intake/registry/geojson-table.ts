@@ -49,7 +49,17 @@ export function geoJsonTable(text: string, file: string): RegistryTable {
 function textOf({ properties }: Json, name: string): string {
   const value = isObject(properties) && Object.hasOwn(properties, name) ? properties[name] : null;
   if (value === null || value === undefined) return '';
-  return typeof value === 'object' ? JSON.stringify(value) : String(value);
+  return typeof value === 'object' ? jsonText(value) : String(value);
+}
+
+/** A list or object as JSON; one nested too deep to be written says nothing that is read. */
+function jsonText(value: object): string {
+  try {
+    return JSON.stringify(value);
+  } catch (cause) {
+    if (!(cause instanceof RangeError)) throw cause;
+    return 'nested too deep';
+  }
 }
 
 /** Latitude and longitude; both empty for a feature without a place. */

@@ -92,6 +92,15 @@ describe('further quantities of one file', () => {
     expect(report.stations[0]).toMatchObject({ quantity: 'rainfall', zeros: 1, max: 5 });
   });
 
+  test('readFlows refuses a unit that is none of the quantity’s', async () => {
+    const { problem } = await refusal('date,flow\n2001-01-01,5\n', { unit: 'mm' });
+    expect(problem).toMatchObject({ value: 'mm', needs: 'unit', message: 'this is no unit of flow' });
+    const { parts } = await read('date,rain\n2001-01-01,5\n', {
+      ...{ unit: 'mm', mapping: { quantity: 'rainfall', value: { column: 1 } } },
+    });
+    expect(parts[0]).toMatchObject({ quantity: 'rainfall', unit: 'mm' });
+  });
+
   test('readFlows refuses the file when a further quantity contradicts itself', async () => {
     const twice = `${text}A,2001-01-01,5,9,e\n`;
     const also = [{ quantity: 'stage' as const, unit: 'ft' as const, value: { column: 'stage' } }];

@@ -57,7 +57,7 @@ describe('a file of several values a day', () => {
     const { parts } = await read(text, { mapping: { dailyMean: 0.75 } });
     expect(daysOf(parts[0])).toEqual({
       '2001-02-27': [4, 'e'],
-      '2001-02-28': [2, ''],
+      '2001-02-28': [2, 'estimated provisional'],
       '2001-03-01': [Number.NaN, '-999'],
     });
     expect([...parts[0].codes].map((code) => parts[0].codeList[code].bits)).toEqual([1, 3, 0]);
