@@ -123,7 +123,8 @@ function layOver(
   const { values: given, codes, rule } = part;
   const offset = part.firstDay - firstDay;
   const [first, last] = ends(values);
-  const counts: LaidCounts = { extended: 0, filled: 0, equal: 0, unlike: 0, unlikeProvisional: 0, revised: 0 };
+  // Plain numbers: this loop runs once a day of every record.
+  let [extended, filled, equal, unlike, unlikeProvisional, revised] = [0, 0, 0, 0, 0, 0];
   for (let day = 0; day < given.length; day++) {
     const code = codes[day];
     if (code === NO_ROW) continue;
@@ -135,19 +136,22 @@ function layOver(
     if (Number.isNaN(standing)) {
       values[at] = value;
       takesCode = !Number.isNaN(value) || stated[at] < STATED;
-      if (!Number.isNaN(value)) counts[at < first || at > last ? 'extended' : 'filled']++;
+      if (!Number.isNaN(value)) {
+        if (at < first || at > last) extended++;
+        else filled++;
+      }
     } else if (Number.isNaN(value)) {
       takesCode = false;
     } else if (isSame(standing, value, factor === 1)) {
-      counts.equal++;
+      equal++;
       takesCode =
         hasCode[code] === STATED ? replaces || stated[at] < STATED : replaces && rule === 'take-where-provisional';
     } else {
-      counts.unlike++;
-      if ((flags[at] & FLAG.provisional) !== 0) counts.unlikeProvisional++;
+      unlike++;
+      if ((flags[at] & FLAG.provisional) !== 0) unlikeProvisional++;
       if (replaces) {
         values[at] = value;
-        counts.revised++;
+        revised++;
       }
       takesCode = replaces;
       onUnlike({ day: firstDay + at, standing, other: value });
@@ -157,7 +161,7 @@ function layOver(
       stated[at] = hasCode[code];
     } else if (stated[at] === NONE) stated[at] = BLANK;
   }
-  return counts;
+  return { extended, filled, equal, unlike, unlikeProvisional, revised };
 }
 
 /** Places of the first and the last value; where there is none every day lies before the first. */

@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import { openConnection } from '../../../lib/store/connection.ts';
 import { listLinks, removeLink, setLink } from '../../../lib/store/links.ts';
 import { deleteRegion } from '../../../lib/store/regions.ts';
 import { listMappings, removeMapping, saveMapping } from '../../../lib/store/saved-mappings.ts';
@@ -33,7 +34,7 @@ test('setLink() refuses a station below itself, a circle by its way, an unknown 
   expect(dump(place.path)).toEqual(before);
 });
 
-test('saveMapping() replaces the one of that name, and deleteRegion() leaves no link and no mapping behind', async () => {
+test('saveMapping() replaces the one of that name, and deleteRegion() leaves no link, finding or mapping behind', async () => {
   const { regionId, slug } = await stations(['A', 'B']);
   const unlinked = await saveMapping(regionId, { name: ' Monthly ', mapping: { layout: 'long', unit: 'L/s' } });
   await saveMapping(regionId, { name: 'Monthly', mapping: { layout: 'month-rows' } });
@@ -43,6 +44,11 @@ test('saveMapping() replaces the one of that name, and deleteRegion() leaves no 
   await expect(saveMapping(regionId, { name: ' ', mapping: {} })).rejects.toMatchObject({ code: 'bad-input' });
   expect(await removeMapping(regionId, unlinked.id + 1)).toBe(false);
   await setLink(regionId, { upstream: 'A', downstream: 'B', source: 'person' });
+  const connection = openConnection(place.path);
+  connection.exec(
+    "INSERT INTO Finding (stationId, kind, firstDay, lastDay, days) SELECT id, 'jump', 0, 0, 1 FROM Station",
+  );
+  connection.close();
   await deleteRegion(slug);
   const left = dump(place.path).filter((row) => !/^(sqlite_sequence|_prisma_migrations)/.test(row));
   expect(left).toEqual([]);
