@@ -4,6 +4,7 @@ import { narrowingOf, readJson, readParameters } from '@/app/api/_http/parameter
 import { regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { stationsProduct } from '@/lib/export/stations-product';
+import { launchPendingChecks } from '@/lib/jobs/checks';
 import { addStation } from '@/lib/store/station-edit';
 import { listStations } from '@/lib/store/stations';
 import { newStation } from './bodies';
@@ -23,5 +24,8 @@ export const GET = route<{ region: string }>(async (request, params) => {
 export const POST = route<{ region: string }>(async (request, params) => {
   const station = await readJson(request, newStation);
   const region = await regionOf(params);
-  return stationAnswer(await addStation(region.id, station), 201);
+  const added = await addStation(region.id, station);
+  // A derived record is checked like any other.
+  await launchPendingChecks([region.id]);
+  return stationAnswer(added, 201);
 });
