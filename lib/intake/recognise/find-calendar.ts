@@ -72,7 +72,8 @@ function cellsOf(
 /** Finds a table with a column for each day of the month, or for each month; null when the rows are of another kind. */
 export function findCalendar(rows: readonly SampleRow[]): CalendarShape | null {
   for (const [at, { fields }] of rows.entries()) {
-    if (fields.length < 13) continue;
+    // A row of numbers alone is no header, whatever they are.
+    if (fields.length < 13 || !fields.some((field) => /\p{L}/u.test(field))) continue;
     const days = stepsThrough(fields, 31, numberIn);
     const shape = days ? monthRows(rows, at, days) : dayRows(rows, at);
     if (shape) return shape;
@@ -90,7 +91,8 @@ function monthRows(rows: readonly SampleRow[], headerRow: number, steps: Steps):
   const cells = cellsOf(steps, 31);
   const leading = header.map((_, at) => at).filter((at) => at < steps.start || at > cells[30].value + 1);
   const places = yearAndMonth(header, data, leading);
-  if (places === null) return null;
+  // With a day beside the month, the numbered columns are stations.
+  if (places === null || leading.some((at) => roleOfHeading(header[at]) === 'day')) return null;
   const first = data.findIndex((row) => isMonthRow(row.fields, places));
   return first < 0
     ? null
@@ -132,6 +134,7 @@ function dayRows(rows: readonly SampleRow[], headerRow: number): CalendarShape |
   if (steps === null || steps.start === 0) return null;
   const cells = cellsOf(steps, 12);
   const leading = header.map((_, at) => at).filter((at) => at < steps.start || at > cells[11].value + 1);
+  if (leading.some((at) => roleOfHeading(header[at]) === 'month')) return null;
   const data = rows.slice(headerRow + 1);
   const full = data.filter(({ fields }) => fields.length > 3);
   // Rows of totals stand among those of days, twelve for every 31 at most.
@@ -143,7 +146,6 @@ function dayRows(rows: readonly SampleRow[], headerRow: number): CalendarShape |
     leading.find((at) => roleOfHeading(header[at]) === 'year') ??
     leading.find((at) => at !== row && share(at, isYear)) ??
     -1;
-  // Months by name are plain; by number they must follow a column of days without a whole date beside it.
   const first = data.findIndex(({ fields }) => isDay(fields[row] ?? ''));
   if (first < 0 || !share(row, isDay)) return null;
   return {

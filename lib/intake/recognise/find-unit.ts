@@ -11,14 +11,16 @@ export function findUnit(found: {
   remarks: string[];
 }): FlowUnit | null {
   if (found.headings.length > 0 && found.headings.every((heading) => DAILY_DISCHARGE.test(heading))) return 'ft3/s';
+  const stated = new Set(found.units.flatMap(unitsNamedIn));
   const inHeadings = new Set(found.headings.map(unitNamedIn));
   if (inHeadings.size === 1) {
     const [unit] = inHeadings;
-    if (unit !== null) return unit;
+    // A line above that says otherwise leaves it open.
+    if (unit !== null) return stated.size === 1 && !stated.has(unit) ? null : unit;
   }
   if (found.unitText !== '') return unitNamedIn(found.unitText);
-  const stated = new Set(found.units.flatMap(unitsNamedIn));
-  if (stated.size > 0) return stated.size === 1 ? [...stated][0] : null;
+  // What the file calls its unit and is none of flow is another quantity's.
+  if (found.units.length > 0) return stated.size === 1 ? [...stated][0] : null;
   const inRemarks = new Set(found.remarks.flatMap(unitsNamedIn));
   return inRemarks.size === 1 ? [...inRemarks][0] : null;
 }

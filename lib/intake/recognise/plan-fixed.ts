@@ -1,14 +1,12 @@
 import { FixedWidthLines } from '../rows/fixed-width.ts';
-import {
-  type AlsoCandidate,
-  type FieldPlace,
-  type InspectOptions,
-  IntakeError,
-  type Mapping,
-  type ValueCandidate,
-} from '../types.ts';
+import { type AlsoCandidate, type FieldPlace, IntakeError, type Mapping, type ValueCandidate } from '../types.ts';
+import { isDay, isMonth, isYear } from './column-facts.ts';
 import { findUnit, unitProblem } from './find-unit.ts';
-import { findFixedSlices, type Slice } from './fixed-slices.ts';
+import { type FixedSlices, findFixedSlices, type Slice } from './fixed-slices.ts';
+import { readLinesAbove, stationAbove } from './lines-above.ts';
+import type { PlanContext } from './plan-columns.ts';
+import { stationProblem } from './plan-problems.ts';
+import { stationOf } from './recognised-mapping.ts';
 import { type SampleLine, splitSample } from './sample.ts';
 import type { TablePlan } from './table-plan.ts';
 
@@ -16,20 +14,19 @@ const words = ([start, end]: Slice): string => `characters ${start + 1}–${end}
 
 /** A plan for rows at fixed characters. The date is recognised; which of the numbers is the flow is never guessed.
  *  @returns null when the lines do not look like it and no mapping says that they are */
-export function planFixedWidth(
-  body: readonly SampleLine[],
-  context: { options: InspectOptions; lineEnd: number; marked: boolean; remarks: string[] },
-): TablePlan | null {
+export function planFixedWidth(lines: readonly SampleLine[], context: PlanContext): TablePlan | null {
   const { options, lineEnd, marked } = context;
   const given = options.mapping ?? {};
-  const guess = findFixedSlices(body);
+  const { guess, first } = belowTitles(lines) ?? { guess: null, first: 0 };
   if (given.layout !== 'fixed-width' && guess === null) return null;
   const file = options.fileName;
-  const unit =
-    options.unit ?? given.unit ?? findUnit({ headings: [], unitText: '', units: [], remarks: context.remarks });
+  const body = lines.slice(first);
+  const titles = lines.slice(0, first).map(({ line, text }) => ({ text, row: { line, fields: [text] } }));
+  const above = readLinesAbove(context.remarks, titles, null);
+  const unit = options.unit ?? given.unit ?? findUnit({ headings: [], unitText: '', ...above });
   const mapping: Mapping = {
     layout: 'fixed-width',
-    station: options.station ? { from: 'given', code: options.station } : { from: 'file-name' },
+    station: stationOf({ wide: null, station: null }, options, above.facts),
     date: { columns: guess?.date ?? [], order: 'ymd' },
     value: null,
     flag: null,
@@ -47,6 +44,8 @@ export function planFixedWidth(
     );
   }
   if (unit === null) problems.push(unitProblem(file, null));
+  if (mapping.station.from === 'lines-above' && stationAbove(above.facts, options.knownStations) === null)
+    problems.push(stationProblem(file));
 
   const slices = [...mapping.date.columns.map((place) => asSlice(place, file))];
   const place = (wanted: FieldPlace | null): number => {
@@ -63,6 +62,8 @@ export function planFixedWidth(
     ...{ file, mapping, lineEnd, marked, header: null, places, problems },
     splitter: new FixedWidthLines(slices, lineEnd),
     firstLine: body[0].line,
+    ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),
+    facts: above.facts,
     fieldCount: slices.length,
     leastFields: slices.length,
     wide: null,
@@ -84,6 +85,22 @@ function otherSlices(slices: readonly Slice[], value: FieldPlace, body: readonly
     .filter(([, end]) => end !== taken)
     .map((slice) => ({ ...candidate(slice, body), quantity: null, unit: null, value: { slice }, flag: null }))
     .map(({ place: _, ...other }) => other);
+}
+
+/** Title lines that are tried to be left out. */
+const MOST_TITLES = 60;
+
+/** Where the numbers stand, and the first line that has them: below any lines of titles. */
+function belowTitles(lines: readonly SampleLine[]): { guess: FixedSlices; first: number } | null {
+  for (let skipped = 0; skipped <= Math.min(MOST_TITLES, lines.length - 3); skipped++) {
+    const guess = findFixedSlices(lines.slice(skipped));
+    if (guess === null) continue;
+    const [year, month, day] = guess.date;
+    const isRow = ({ text }: SampleLine) =>
+      isYear(text.slice(...year)) && isMonth(text.slice(...month).trim()) && isDay(text.slice(...day).trim());
+    return { guess, first: Math.max(0, lines.findIndex(isRow)) };
+  }
+  return null;
 }
 
 function candidate(slice: Slice, body: readonly SampleLine[]): ValueCandidate {

@@ -1,7 +1,6 @@
 import { readBlocks } from '../file-blocks.ts';
 import { agencyColumns, seriesOf } from '../recognise/agency-columns.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
-import { roleOfHeading } from '../recognise/heading-roles.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import type { Rejections } from '../rejections.ts';
 import { decodeText, refuseUnlessUtf8 } from '../text-encoding.ts';
@@ -168,7 +167,7 @@ export class RowLoop {
       return true;
     }
     const words = texts.filter((text) => /^\p{L}/u.test(text)).length;
-    const isHeader = texts.length > 1 && texts.some((text) => roleOfHeading(text) === 'date') && words === texts.length;
+    const isHeader = texts.length > 1 && texts.includes(header[date]) && words === texts.length;
     if (!isHeader || plan.splitter instanceof FixedWidthLines) return false;
     throw new IntakeError({
       file: plan.file,

@@ -355,6 +355,16 @@ test('inspectFile of a calendar layout says how it is read, and its mapping read
   expect(seen.preview[0]).toEqual(['Day', ...MONTHS]);
 });
 
+test('a wide table with year, month and day in columns and stations called 1 to 12 or 31 stays one', async () => {
+  for (const stations of [12, 31]) {
+    const names = Array.from({ length: stations }, (_, at) => String(at + 1));
+    const rows = [1, 2, 3, 4].map((day) => ['2001', '5', String(day), ...names]);
+    const { report } = await read(csv([['year', 'month', 'day', ...names], ...rows]), { unit: 'm3/s' });
+    expect(report.layout).toBe('wide');
+    expect(report.stations).toHaveLength(stations);
+  }
+});
+
 test('a wide table of stations that are called by numbers stays one', async () => {
   const text = csv([
     ['date', ...DAYS.map(String)],

@@ -224,6 +224,25 @@ describe('facts in several languages', () => {
     expect((await read(`${line}\n${rows}`)).report.unit).toBe(unit);
   });
 
+  test('readFlows asks for the unit where heading and line disagree, or the line names another quantity’s', async () => {
+    const disagree = await refusal('Units: cfs\ndate,flow_m3s\n2001-01-01,1\n');
+    expect(disagree.problem.needs).toBe('unit');
+    const level = await refusal('Unit: cm\nLong-term flow: 3 m3/s\ndate,value\n2001-01-01,1\n');
+    expect(level.problem.needs).toBe('unit');
+  });
+
+  test('readFlows reads a block over rows at fixed characters', async () => {
+    const lines = dates('1948-01-01', 12).map((date, at) => {
+      const [year, month, day] = date.split('-').map(Number);
+      return `${year}${String(month).padStart(2)}${String(day).padStart(2)}${'0.5'.padStart(9)}${String(at).padStart(9)}`;
+    });
+    const text = ['Station number: 12', 'Daily values, made in 1950', 'Units: mm/d', ...lines].join('\n');
+    const { report, days, parts } = await read(text, { mapping: { value: { slice: [17, 26] } } });
+    expect(report).toMatchObject({ layout: 'fixed-width', unit: 'mm/d', rows: 12, accepted: 12, rejected: [] });
+    expect(parts[0].code).toBe('12');
+    expect(days['1948-01-12']).toEqual([11, '']);
+  });
+
   test('readFlows leaves out what is not plain: an area without its unit, or one that may have thousands; a place of one number', async () => {
     const bare = await factsOf(`Station no: 12\nName: Au\nCatchment area: 12.5\nLatitude: 51.2\n${rows}`);
     expect(bare).toEqual([{ code: '12', name: 'Au' }]);

@@ -25,6 +25,11 @@ describe('lines between and behind the rows', () => {
     expect(error.problem.message).toContain('the columns are others than those of the first header (date, A, B)');
   });
 
+  test('readFlows keeps a footer that looks like a header for a row that is rejected', async () => {
+    const { report } = await read(rows('2001-01-01,1', '2001-01-02,2', 'Data provider,Office'));
+    expect(report).toMatchObject({ accepted: 2, rejectedTotal: 1 });
+  });
+
   test.each([
     ['End of file', /1 of 2 fields/],
     ['Total,6', /“Total” is not a date/],
