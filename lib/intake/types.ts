@@ -150,8 +150,8 @@ export const NEEDS = [
 ] as const;
 export type Need = (typeof NEEDS)[number];
 
-/** Corrections of a registry's coordinates that a person may ask for. */
-export const CORRECTIONS = ['swap-coordinates', 'longitude-360'] as const;
+/** Corrections of a registry's coordinates that a person may ask for; `none`: unlikely ones stand as they are. */
+export const CORRECTIONS = ['swap-coordinates', 'longitude-360', 'none'] as const;
 export type Correction = (typeof CORRECTIONS)[number];
 
 /** A code as a file writes it, and that of the registry which it may be. */

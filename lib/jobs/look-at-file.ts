@@ -18,6 +18,8 @@ export interface FileLook {
   /** bytes */
   size: number;
   choices: FileChoices;
+  /** where the region lies: west, south, east, north; null where nobody knows */
+  near: [number, number, number, number] | null;
   /** the stations that flows may name; null where flows make them */
   known: KnownStation[] | null;
   /** why it cannot be taken, where that is known beforehand */
@@ -41,10 +43,10 @@ type Found = Pick<FilePreview, 'problems'> &
 
 /** Looks at a file's beginning under the choices made for it; a registry or layer is read whole.
  *  Changes nothing; whatever is wrong with the file or the choices stands in `problems`. */
-export async function lookAtFile({ file, size, choices, known, broken }: FileLook): Promise<Looked> {
+export async function lookAtFile({ file, size, choices, near, known, broken }: FileLook): Promise<Looked> {
   if (broken) return { preview: brokenPreview(file.name, size, choices, broken), names: null };
   const kind = await kindOf(file, { files: { [file.name]: choices } });
-  const found = await foundIn(kind, file, choices, known).catch((error: unknown): Found => {
+  const found = await foundIn(kind, { file, choices, near, known }).catch((error: unknown): Found => {
     if (!(error instanceof IntakeError)) throw error;
     return { problems: [problemIn(error)] };
   });
@@ -66,11 +68,9 @@ export async function lookAtFile({ file, size, choices, known, broken }: FileLoo
 
 async function foundIn(
   kind: FileKind,
-  file: GivenFile,
-  choices: FileChoices,
-  known: KnownStation[] | null,
+  { file, choices, near, known }: Pick<FileLook, 'file' | 'choices' | 'near' | 'known'>,
 ): Promise<Found> {
-  if (kind === 'registry') return registryIn(file, choices);
+  if (kind === 'registry') return registryIn(file, choices, near);
   if (kind === 'layer') {
     const { name, kind: shape, features, bounds, warnings } = await readLayer(file.path, file.name);
     const layer: LayerPreview = { name, kind: shape, features, bounds, warnings };
@@ -81,11 +81,12 @@ async function foundIn(
   return { problems: problems.map(problemIn), inspection };
 }
 
-async function registryIn(file: GivenFile, choices: FileChoices): Promise<Found> {
+async function registryIn(file: GivenFile, choices: FileChoices, near: FileLook['near']): Promise<Found> {
   try {
     const { stations, given, warnings } = await readRegistry(file.path, file.name, {
       corrections: choices.corrections,
       areaUnit: choices.areaUnit,
+      near,
       sheet: choices.mapping?.sheet,
     });
     const shown = stations.slice(0, SHOWN_STATIONS);

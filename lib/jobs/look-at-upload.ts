@@ -1,5 +1,6 @@
 import type { KnownStation } from '../intake/types.ts';
 import { knownStations } from '../store/known-stations.ts';
+import { regionBounds } from '../store/region-bounds.ts';
 import type { FileChoices } from './import-types.ts';
 import type { Looked } from './look-at-file.ts';
 import { runTask } from './pool.ts';
@@ -38,7 +39,8 @@ const withChoices = (session: UploadSession, choices: Record<string, FileChoices
 function lookOf(session: UploadSession, name: string, choices: FileChoices) {
   const at = session.files.findIndex((file) => file.name === name);
   if (at < 0) throw new RangeError(`lookAtUpload: choices must name files of the upload, got "${name}"`);
-  return { file: session.files[at], size: session.seen[at].size, choices, broken: session.broken[name] };
+  const near = session.regionId === null ? null : regionBounds(session.regionId);
+  return { file: session.files[at], size: session.seen[at].size, choices, near, broken: session.broken[name] };
 }
 
 /** The region's stations with those of the upload's own registries, but for the ones that are looked at anew. */

@@ -28,6 +28,8 @@ export interface StageTools {
   fileNumber: number;
   choices: ImportChoices;
   registry: KnownStation[] | null;
+  /** where the region lies: west, south, east, north; null where nobody knows */
+  near: [number, number, number, number] | null;
   staging: Staging;
   signal: AbortSignal;
   onProgress: (rows: number, bytes: number) => void;
@@ -72,9 +74,9 @@ export function stageFile(file: GivenFile, kind: FileKind, tools: StageTools): P
   return { registry: stageRegistry, layer: stageLayer, flows: stageFlows }[kind](file, tools);
 }
 
-async function stageRegistry(file: GivenFile, { staging, choices }: StageTools): Promise<StagedFile> {
+async function stageRegistry(file: GivenFile, { staging, choices, near }: StageTools): Promise<StagedFile> {
   const { corrections, areaUnit, mapping } = choicesFor(file, choices);
-  const options = { corrections, areaUnit, sheet: mapping?.sheet };
+  const options = { corrections, areaUnit, sheet: mapping?.sheet, near };
   const { stations, rows, given, sha256, warnings } = await readRegistry(file.path, file.name, options);
   const number = staging.addFile({ kind: 'registry', fileName: file.name });
   staging.stageRegistry(number, stations, given);

@@ -67,6 +67,7 @@ export const RULE_WORDS: Record<OverlapRule, string> = {
 export const CORRECTION_WORDS: Record<Correction, string> = {
   'swap-coordinates': 'Swap latitude and longitude',
   'longitude-360': 'Read longitudes from 0 to 360 as east of Greenwich, so that 350 is 10 degrees west',
+  none: 'Leave the coordinates as they are',
 };
 
 /** What flag bits were understood as: "estimated, ice"; empty for none. */

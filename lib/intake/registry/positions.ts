@@ -20,12 +20,21 @@ const PLAUSIBLE = 30;
  *  swapped a quarter as far. */
 const FAR = 15;
 
+/** Latitudes between which rivers flow, but for melt water in Antarctica. */
+const SOUTHERNMOST = -60;
+const NORTHERNMOST = 84;
+
 /** What became of the positions: rows put right as asked, and rows that ask for a correction or have none. */
 export interface Positions {
   rows: PlacedRow[];
   corrected: Partial<Record<Correction, number>>;
   /** what would put rows right, and the rows; the first of several that are needed */
-  asks: { correction: Correction; rows: PlacedRow[] } | null;
+  asks: {
+    correction: Exclude<Correction, 'none'>;
+    rows: PlacedRow[];
+    /** each of them may stand as it is, unlikely as it looks */
+    unlikely: boolean;
+  } | null;
   problems: { row: PlacedRow; problem: RowProblem }[];
 }
 
@@ -42,8 +51,10 @@ export function checkPositions(given: readonly PlacedRow[], options: RegistryOpt
     const wrong = new Set(swapped.length > 0 ? swapped : rows);
     rows = rows.map((row) => (wrong.has(row) ? withPlace(row, swap) : row));
     corrected['swap-coordinates'] = wrong.size;
-  } else if (swapped.length > 0) {
-    return { rows, corrected, asks: { correction: 'swap-coordinates', rows: swapped }, problems: [] };
+  } else {
+    const unlikely = swapped.every((row) => mayStand(row));
+    if (swapped.length > 0 && !(unlikely && asked.has('none')))
+      return { rows, corrected, asks: { correction: 'swap-coordinates', rows: swapped, unlikely }, problems: [] };
   }
   const wide = rowsPast180(rows);
   if (asked.has('longitude-360')) {
@@ -51,7 +62,7 @@ export function checkPositions(given: readonly PlacedRow[], options: RegistryOpt
     rows = rows.map((row) => (past.has(row) ? withPlace(row, turn) : row));
     corrected['longitude-360'] = wide.length;
   } else if (wide.length > 0) {
-    return { rows, corrected, asks: { correction: 'longitude-360', rows: wide }, problems: [] };
+    return { rows, corrected, asks: { correction: 'longitude-360', rows: wide, unlikely: false }, problems: [] };
   }
   const problems = rows.flatMap((row) => {
     const { latitude, longitude } = row.station;
@@ -73,6 +84,14 @@ const turn = ({ latitude, longitude }: Place): Place => ({
 });
 const isOnEarth = ({ latitude, longitude }: Place): boolean =>
   Math.abs(latitude) <= 90 && longitude >= -180 && longitude <= 360;
+
+const isOnRivers = (place: Place): boolean =>
+  isOnEarth(place) && place.latitude >= SOUTHERNMOST && place.latitude <= NORTHERNMOST;
+
+function mayStand(row: PlacedRow): boolean {
+  const place = placeOf(row);
+  return place !== null && isOnEarth(place);
+}
 
 function withPlace(row: PlacedRow, change: (place: Place) => Place): PlacedRow {
   const place = placeOf(row);
@@ -98,10 +117,10 @@ function distance(a: Place, b: Place): number {
 function swappedRows(rows: readonly PlacedRow[], near: RegistryOptions['near'] | null): PlacedRow[] {
   const placed = rows.flatMap((row) => {
     const place = placeOf(row);
-    return place === null ? [] : [{ row, place, other: swap(place), possible: isOnEarth(place) }];
+    return place === null ? [] : [{ row, place, other: swap(place), possible: isOnRivers(place) }];
   });
   const possible = placed.filter((one) => one.possible);
-  const impossible = placed.filter((one) => !one.possible && isOnEarth(one.other));
+  const impossible = placed.filter((one) => !one.possible && isOnRivers(one.other));
   // Where most rows can only be swapped, the columns are: all rows then lie together when they are swapped.
   const turned = impossible.length > possible.length ? middle(impossible.map(({ other }) => other)) : null;
   const columnsSwapped = turned !== null && possible.every(({ other }) => distance(other, turned) <= PLAUSIBLE * 1.5);
@@ -113,7 +132,7 @@ function swappedRows(rows: readonly PlacedRow[], near: RegistryOptions['near'] |
   const size = near ? Math.max(near[2] - near[0], near[3] - near[1]) / 2 : 0;
   const enough = near !== null || trusted.length >= 3;
   return placed.flatMap(({ row, place, other, possible }) => {
-    if (!isOnEarth(other)) return [];
+    if (!isOnRivers(other)) return [];
     const [here, there] = [place, other].map((one) => Math.max(0, distance(one, centre) - size));
     if (!possible) return there <= PLAUSIBLE ? [row] : [];
     const wrong = columnsSwapped ? there < here : here > FAR && there < here / 4 && there < FAR;

@@ -1,6 +1,6 @@
 import { AREA_UNITS } from '../../series/area-units.ts';
 import { type Correction, IntakeError, type RejectedRow } from '../types.ts';
-import type { PlacedRow } from './positions.ts';
+import type { Positions } from './positions.ts';
 import type { RowProblem } from './row-problem.ts';
 
 /** Why a registry is not taken: every row at fault is named. */
@@ -15,7 +15,7 @@ export function refuseRows(problems: readonly (RowProblem & RejectedRow)[], file
   });
 }
 
-const WORDS: Record<Correction, { reason: string; remedy: string }> = {
+const WORDS: Record<Exclude<Correction, 'none'>, { reason: string; remedy: string }> = {
   'swap-coordinates': {
     reason: 'latitude and longitude seem to be swapped',
     remedy: 'Say that they are to be swapped back (--correct swap-coordinates), or put the rows right',
@@ -28,7 +28,7 @@ const WORDS: Record<Correction, { reason: string; remedy: string }> = {
 
 /** Positions that a correction would put right: it is offered, not made. */
 export function refuseForCorrection(
-  { correction, rows }: { correction: Correction; rows: readonly PlacedRow[] },
+  { correction, rows, unlikely }: NonNullable<Positions['asks']>,
   file: string,
 ): IntakeError {
   const { reason, remedy } = WORDS[correction];
@@ -38,8 +38,14 @@ export function refuseForCorrection(
   const named =
     rows.length === 1 ? '' : ` in rows ${numbers.join(', ')}${rows.length > 10 ? ` and ${rows.length - 10} more` : ''}`;
   return new IntakeError({
-    ...{ file, row: first.line, value: `${latitude}, ${longitude}`, message: `${reason}${named}`, remedy },
-    ...{ needs: 'correction', corrections: [correction] },
+    ...{
+      file,
+      row: first.line,
+      value: `${latitude}, ${longitude}`,
+      message: `${reason}${named}`,
+      remedy: unlikely ? `${remedy}; or say that they stand as they should (--correct none)` : remedy,
+    },
+    ...{ needs: 'correction', corrections: unlikely ? [correction, 'none'] : [correction] },
     rows: rows.map(({ line, text }) => ({ row: line, text, reason })),
   });
 }

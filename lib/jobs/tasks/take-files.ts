@@ -3,6 +3,7 @@ import type { MessagePort } from 'node:worker_threads';
 import type { KnownStation } from '../../intake/types.ts';
 import { type Applied, applyStaging } from '../../store/apply-staging.ts';
 import type { ArchivedRegion } from '../../store/archived-region.ts';
+import { regionBounds } from '../../store/region-bounds.ts';
 import { createStaging, type Staging } from '../../store/staging.ts';
 import { ImportMeter, NO_PROGRESS, TELL_EVERY_MS } from '../import-meter.ts';
 import { problemOf, refusalsOf } from '../import-problem.ts';
@@ -138,6 +139,7 @@ async function stageAll(task: TakeFiles, { staging, staged, meter, signal }: Too
     try {
       const one = await stageFile(file, kind, {
         ...{ jobId: task.jobId, fileNumber: index + 1, choices: task.choices, registry, staging, signal },
+        near: 'id' in task.region ? regionBounds(task.region.id) : null,
         onProgress: (rows, bytes) => meter.read(rows, bytes),
       });
       staged.push(one);

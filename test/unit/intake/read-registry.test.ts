@@ -214,6 +214,24 @@ describe('coordinates', () => {
     ]);
   });
 
+  test('readRegistry doubts stations in Antarctica, and takes them where a person says so', async () => {
+    const text = places([
+      [-76.5, 39.25],
+      [-76.75, 39.5],
+    ]);
+    const { problem } = await refusal(text);
+    expect(problem.corrections).toEqual(['swap-coordinates', 'none']);
+    expect(positions(await read(text, { corrections: ['swap-coordinates'] }))[0]).toEqual([39.25, -76.5]);
+    expect(positions(await read(text, { corrections: ['none'] }))[0]).toEqual([-76.5, 39.25]);
+    const impossible = places([
+      [-100, 45],
+      [-101, 46],
+    ]);
+    expect((await refusal(impossible, { corrections: ['none'] })).problem.corrections).toEqual(['swap-coordinates']);
+    // Swapped, these would lie nowhere.
+    expect(positions(await read(places([[-77.5, 162.5]])))).toEqual([[-77.5, 162.5]]);
+  });
+
   test('readRegistry takes no slip of the pen for a swap', async () => {
     const error = await refusal(
       places([
