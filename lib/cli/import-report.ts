@@ -13,6 +13,7 @@ const fileOfRejected = ({ rejectedFile }: ImportReport): string | null =>
 
 /** The report for programs: one entry a flow file, counts of that file, values as imported. Changed only by adding. */
 export function reportJson(outcome: ImportOutcome): string {
+  const { findings } = outcome;
   const taken = outcome.taken.filter(({ report }) => report !== null);
   const files = reportsOf(outcome).map((report, index) => ({
     file: report.file,
@@ -28,13 +29,21 @@ export function reportJson(outcome: ImportOutcome): string {
     })),
     revisions: taken[index].revisions,
   }));
-  return `${JSON.stringify({ files, ...(outcome.dryRun ? { dryRun: true } : {}) }, null, 2)}\n`;
+  return `${JSON.stringify({ files, ...(outcome.dryRun ? { dryRun: true } : {}), ...(findings ? { findings } : {}) }, null, 2)}\n`;
 }
 
 /** The report for people. */
 export function reportText(outcome: ImportOutcome): string {
   const notes = (outcome.notes ?? []).map((note) => `${note}\n`).join('');
-  return notes + outcome.taken.map(fileText).join('') + (outcome.dryRun ? 'Only tried; nothing was changed.\n' : '');
+  const files = outcome.taken.map(fileText).join('');
+  return `${notes}${files}${checksText(outcome)}${outcome.dryRun ? 'Only tried; nothing was changed.\n' : ''}`;
+}
+
+function checksText({ findings }: ImportOutcome): string {
+  if (!findings || findings.findings === 0) return '';
+  const things = findings.findings === 1 ? '1 thing' : `${findings.findings} things`;
+  const where = findings.stations === 1 ? '1 station' : `${findings.stations} stations`;
+  return `The checks found ${things} to look at, at ${where}; values are marked as suspect, and none was changed.\n`;
 }
 
 function fileText({ file, kind, summary, report, warnings, revisions }: TakenFile): string {

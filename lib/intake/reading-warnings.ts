@@ -7,12 +7,13 @@ import { type ImportReport, IntakeError, type Quantity } from './types.ts';
 
 /** What a person should know of a file that has been read well. */
 export function readingWarnings(loop: RowLoop, reading: TableReading, sink: DaySink, quantity: Quantity): string[] {
-  const { filled, otherCodes } = sink instanceof RecordSink ? sink : { filled: 0, otherCodes: 0 };
+  const { filled, otherCodes, alike } = sink instanceof RecordSink ? sink : { filled: 0, otherCodes: 0, alike: 0 };
   // Levels below a gauge's zero are nothing unusual.
   const negatives = quantity === 'stage' ? 0 : reading.values.negatives;
   const warnings: [number, (count: number) => string][] = [
     [negatives, (count) => `${count} values are negative; they were taken as written.`],
     [reading.leftOut(), (count) => `${count} rows of other quantities were left out.`],
+    [alike, (count) => `${count} days stand twice with equal values; they were taken once.`],
     [filled, (count) => `${count} days stand twice, once with a value and once without; the value was taken.`],
     [otherCodes, (count) => `${count} days stand twice with equal values and unlike flags; the first flag was kept.`],
     [

@@ -257,6 +257,7 @@ describe('what rows say', () => {
     );
     expect(report).toMatchObject({ rows: 5, accepted: 5 });
     expect(report.stations[0]).toMatchObject({ values: 2, missing: 0, duplicates: 3 });
+    expect(report.warnings).toContain('1 days stand twice with equal values; they were taken once.');
     expect(report.warnings).toContain('1 days stand twice, once with a value and once without; the value was taken.');
     expect(report.warnings).toContain(
       '1 days stand twice with equal values and unlike flags; the first flag was kept.',

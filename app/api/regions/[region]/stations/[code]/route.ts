@@ -5,6 +5,7 @@ import { regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import type { StationParams } from '@/app/api/_http/station';
 import { jsonText } from '@/lib/export/json';
+import { launchPendingChecks } from '@/lib/jobs/checks';
 import { stationDetail } from '@/lib/jobs/station';
 import { editStation, removeStation } from '@/lib/store/station-edit';
 import { stationPatch } from '../bodies';
@@ -26,7 +27,10 @@ export const PATCH = route<StationParams>(async (request, params) => {
   const patch = await readJson(request, stationPatch);
   const region = await regionOf(params);
   const edition = editionAsked(request);
-  return stationAnswer(await editStation(region.id, params.code, patch, { edition }));
+  const station = await editStation(region.id, params.code, patch, { edition });
+  // What a catchment can give depends on its area.
+  await launchPendingChecks([region.id]);
+  return stationAnswer(station);
 });
 
 /** Takes away a station without imported days, such as a derived one. */
