@@ -1,4 +1,4 @@
-import { IntakeError } from './types.ts';
+import { IntakeError, type RejectedRow } from './types.ts';
 
 /** Regular steps that are longer than a day: the word, and the days that lie between rows. */
 const SPACINGS: [string, number, number][] = [
@@ -32,6 +32,18 @@ export function spacingProblem(file: string, code: string, spacing: string): Int
     file,
     value: code,
     message: `the file is not of daily flows: at station ${code} it has ${spacing}`,
-    remedy: 'Get the daily values from whoever keeps the record; means of longer times cannot be taken apart into days',
+    remedy: GET_DAILY,
+  });
+}
+
+const GET_DAILY =
+  'Get the daily values from whoever keeps the record; means of longer times cannot be taken apart into days';
+
+/** A file whose dates are months. */
+export function monthsProblem(file: string, { row, text }: RejectedRow): IntakeError {
+  return new IntakeError({
+    ...{ file, row, value: text.slice(0, 200) },
+    message: 'the file is not of daily flows: its dates are months',
+    remedy: GET_DAILY,
   });
 }

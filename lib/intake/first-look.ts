@@ -1,6 +1,7 @@
 import { isoDate } from '../calendar/day.ts';
 import { spacingProblem, sparseSpacing } from './day-spacing.ts';
 import type { FileHead } from './file-blocks.ts';
+import { nothingTaken } from './reading-warnings.ts';
 import type { TablePlan } from './recognise/table-plan.ts';
 import { Rejections } from './rejections.ts';
 import { RowLoop } from './rows/row-loop.ts';
@@ -96,6 +97,9 @@ function look(given: TablePlan, head: FileHead, options: InspectOptions): FirstL
     problems.push(error);
   }
   const { stations } = reading;
+  // Where the date is not known, or all is to be asked, a row cannot be read yet.
+  if (sink.values === 0 && rejections.total > 0 && plan.problems.length === 0)
+    problems.push(nothingTaken(plan.file, rejections.total, rejections));
   problems.push(...[...stations.strangers.values()].slice(0, 1));
   const asked = stations.problem();
   if (asked) problems.push(asked);

@@ -1,3 +1,4 @@
+import { monthsProblem } from './day-spacing.ts';
 import { RecordSink } from './record-sink.ts';
 import type { Rejections } from './rejections.ts';
 import type { RowLoop } from './rows/row-loop.ts';
@@ -31,6 +32,9 @@ export function unreadWarnings({ rejectedTotal, rejected }: ImportReport): strin
   return [`${rejectedTotal} rows cannot be read, the first of them row ${rejected[0].row}: ${rejected[0].reason}.`];
 }
 
+/** A row whose date is a month: 2001-03, 3/2001. */
+const MONTH = /(?:^|[,;\t "])(?:\d{4}[-/.]\d{1,2}|\d{1,2}[-/.]\d{4})(?=[,;\t "]|$)/;
+
 /** Refuses a file of which no row was taken. */
 export function nothingTaken(file: string, rows: number, rejections: Rejections): IntakeError {
   const first = rejections.first[0];
@@ -41,6 +45,7 @@ export function nothingTaken(file: string, rows: number, rejections: Rejections)
       remedy: 'Check that it is a file of daily flows, and the mapping if one was given',
     });
   }
+  if (rejections.first.every(({ text }) => MONTH.test(text))) return monthsProblem(file, first);
   return new IntakeError({
     file,
     row: first.row,

@@ -1,3 +1,4 @@
+import { parseWhole } from './dates.ts';
 import type { TablePlan } from './recognise/table-plan.ts';
 import type { Fields } from './rows/fields.ts';
 
@@ -47,18 +48,19 @@ function withNoon(parts: number[], bytes: Uint8Array, from: number, end: number)
 export class TimeOfDay {
   private readonly date: number;
   private readonly column: number;
+  /** column of the minutes beside one of hours; −1 where there is none */
+  private readonly minutes: number;
 
   constructor(plan: TablePlan) {
     this.date = plan.places.date.length === 1 ? plan.places.date[0] : -1;
     this.column = timeColumn(plan);
+    this.minutes = this.column < 0 ? -1 : headed(plan, MINUTES);
   }
 
   /** Seconds since midnight of a row that has been split; NO_TIME where it says none. */
   of(bytes: Uint8Array, fields: Fields): number {
     const { column, date } = this;
-    if (column >= 0) {
-      return column < fields.count ? secondOfDay(bytes, fields.start[column], fields.end[column]) : NO_TIME;
-    }
+    if (column >= 0) return this.inColumns(bytes, fields);
     if (date < 0 || date >= fields.count) return NO_TIME;
     const end = fields.end[date];
     for (let at = fields.start[date] + 6; at < end; at++) {
@@ -66,23 +68,40 @@ export class TimeOfDay {
     }
     return NO_TIME;
   }
+
+  private inColumns(bytes: Uint8Array, fields: Fields): number {
+    const { column, minutes } = this;
+    if (column >= fields.count) return NO_TIME;
+    const time = secondOfDay(bytes, fields.start[column], fields.end[column]);
+    if (time === NO_TIME || minutes < 0 || minutes >= fields.count) return time;
+    const minute = parseWhole(bytes, fields.start[minutes], fields.end[minutes]);
+    return minute >= 0 && minute < 60 ? time + minute * 60 : time;
+  }
 }
 
-const HEADING = /^(time|hour|hours|hh:?mm(:?ss)?|hr|hhmm|local ?time|time of day|uhrzeit|zeit|stunde|heure|hora)$/;
+const HEADING = /^(time|hour|hours|hh:?mm(:?ss)?|hh|hr|local ?time|time of day|uhrzeit|zeit|stunde|heure|hora)$/;
+const MINUTES = /^(minutes?|min|minuten?|minuto)$/;
 const CLOCK = /^([01]?\d|2[0-4]):[0-5]\d(:[0-5]\d(\.\d+)?)?(Z|[+-]\d\d:?\d\d)?( ?[AP]M)?$/i;
 
 /** The column of clock times: that with such a heading, else one in which every previewed row has a clock time; −1 where
  *  there is none. */
 function timeColumn(plan: TablePlan): number {
-  const { header, places, preview } = plan;
-  const used = [...places.date, places.station, places.value, places.flag];
-  const free = (at: number) => !used.includes(at);
-  const named =
-    header?.findIndex((name, at) => free(at) && HEADING.test(name.trim().toLowerCase().replaceAll('_', ' '))) ?? -1;
+  const { header, preview } = plan;
+  const named = headed(plan, HEADING);
   if (named >= 0) return named;
   const rows = header === null ? preview : preview.slice(1);
   for (let at = 0; at < plan.fieldCount; at++) {
-    if (free(at) && rows.length > 0 && rows.every((row) => CLOCK.test(row[at] ?? ''))) return at;
+    if (isFree(plan, at) && rows.length > 0 && rows.every((row) => CLOCK.test(row[at] ?? ''))) return at;
   }
   return -1;
+}
+
+/** The column with such a heading that holds nothing else; −1 where there is none. */
+function headed(plan: TablePlan, pattern: RegExp): number {
+  const plain = (name: string) => name.trim().toLowerCase().replaceAll('_', ' ');
+  return plan.header?.findIndex((name, at) => isFree(plan, at) && pattern.test(plain(name))) ?? -1;
+}
+
+function isFree({ places }: TablePlan, column: number): boolean {
+  return ![...places.date, places.station, places.value, places.flag].includes(column);
 }

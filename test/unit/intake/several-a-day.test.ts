@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { dates, daysOf, read, refusal } from './reading.ts';
+import { inspectFile } from '../../../lib/intake/inspect-file.ts';
+import { dates, daysOf, read, refusal, withFile } from './reading.ts';
 
 /** Rows of one station: a date, a clock time and a value, at equal steps through some days. */
 function readings(
@@ -100,6 +101,15 @@ describe('a file of several values a day', () => {
     ]);
   });
 
+  test('hours and minutes in columns of their own are one time', async () => {
+    const rows = [0, 15, 30, 45].flatMap((minute) => [5, 6].map((hour) => `2001,3,9,${hour},${minute},4`));
+    const text = table(rows.sort(), 'year,month,day,hour,minute,flow_m3s');
+    expect((await refusal(text)).problem.message).toContain('mostly every 15 minutes');
+    // Eight quarters of an hour are a twelfth of a day.
+    expect((await read(text, { mapping: { dailyMean: 0.083 } })).days).toEqual({ '2001-03-09': [4, ''] });
+    expect((await read(text, { mapping: { dailyMean: 0.084 } })).report.stations[0].values).toBe(0);
+  });
+
   test('readFlows finds readings that begin far behind the first rows, by their times', async () => {
     const daily = dates('1900-01-01', 30_000).map((date) => `${date} 09:00,5`);
     const late = readings(dates('2001-01-01', 2), 60, (minute) => String(minute));
@@ -138,6 +148,18 @@ describe('a file of less than a value a day', () => {
       ),
     );
     expect(problem.message).toBe(`the file is not of daily flows: at station gauge it has ${words}`);
+  });
+
+  test('readFlows and inspectFile refuse dates that are months', async () => {
+    const text = table(['2001-01,1', '2001-02,2', '2001-03,3'], 'date,flow_m3s');
+    expect((await refusal(text)).problem).toMatchObject({
+      row: 2,
+      message: 'the file is not of daily flows: its dates are months',
+    });
+    const seen = await withFile(text, (path) => inspectFile(path, { fileName: 'gauge.csv' }));
+    expect(seen.problems.map(({ problem }) => problem.message)).toEqual([
+      'the file is not of daily flows: its dates are months',
+    ]);
   });
 
   test.each([
