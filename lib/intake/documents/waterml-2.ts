@@ -40,6 +40,7 @@ class Waterml2 implements ElementHandler {
   private spacing = '';
   private preset: Point = newPoint();
   private presetMaking: Making = newMaking();
+  private inSeries = false;
   private begun = false;
   private points = 0;
   /** of the point */
@@ -100,7 +101,7 @@ class Waterml2 implements ElementHandler {
     else if (name === 'MeasurementTimeseries') this.beginSeries();
     else if (name === 'CategoricalTimeseries') this.sink.categories++;
     else if (name === 'defaultPointMetadata') this.inDefault = true;
-    else if (name === 'MeasurementTVP') this.beginPoint();
+    else if (name === 'MeasurementTVP' && this.inSeries) this.beginPoint();
   }
 
   close(name: string, text: string): void {
@@ -108,7 +109,7 @@ class Waterml2 implements ElementHandler {
     const parent = this.path.at(-1) ?? '';
     if (this.qualifier !== null) this.closeQualifier(name, text);
     else if (this.feature !== null) this.closeFeature(name, text, parent);
-    else if (name === 'MeasurementTVP') this.endPoint();
+    else if (name === 'MeasurementTVP' && this.point !== null) this.endPoint(this.point);
     else if (this.point !== null) {
       if (name === 'time') this.point.time = text.trim();
       else if (name === 'value' && parent === 'MeasurementTVP') this.point.value = text.trim();
@@ -119,7 +120,7 @@ class Waterml2 implements ElementHandler {
       else this.process.aggregation = text.trim();
     } else if (name === 'baseTime') this.base = text.trim();
     else if (name === 'spacing') this.spacing = text.trim();
-    else if (name === 'MeasurementTimeseries' && !this.begun) this.sink.emptySeries++;
+    else if (name === 'MeasurementTimeseries') this.endSeries();
   }
 
   private closeQualifier(name: string, text: string): void {
@@ -144,6 +145,7 @@ class Waterml2 implements ElementHandler {
   }
 
   private beginSeries(): void {
+    this.inSeries = true;
     this.base = '';
     this.spacing = '';
     this.preset = newPoint();
@@ -152,6 +154,11 @@ class Waterml2 implements ElementHandler {
     this.quality = '';
     this.head = null;
     this.points = 0;
+  }
+
+  private endSeries(): void {
+    this.inSeries = false;
+    if (!this.begun) this.sink.emptySeries++;
   }
 
   private endDefault(): void {
@@ -168,8 +175,7 @@ class Waterml2 implements ElementHandler {
     this.nilReason = '';
   }
 
-  private endPoint(): void {
-    const point = this.point as Point;
+  private endPoint(point: Point): void {
     this.point = null;
     const number = this.points++;
     if (point.time === '' && this.spacing !== '') point.time = this.spacedTime(number);

@@ -318,4 +318,12 @@ describe('documents without a series', () => {
     const { mapping, problems } = await inspect(documentOf(content));
     expect([mapping, problems.length]).toEqual([null, 1]);
   });
+
+  test('points within points and outside a series are none', async () => {
+    const inner = point('2001-01-02', '2').replace(/<\/?wml2:point>/g, '');
+    const nested = point('2001-01-01', '1').replace('</wml2:MeasurementTVP>', `${inner}</wml2:MeasurementTVP>`);
+    const outside = documentOf(point('2001-01-01', '1'));
+    expect((await read(collection({ points: [nested] }))).report.rows).toBe(1);
+    expect((await refusal(outside)).message).toMatch(/it holds no series/);
+  });
 });
