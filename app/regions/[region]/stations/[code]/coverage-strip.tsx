@@ -1,5 +1,6 @@
 'use client';
 import { scaleLinear } from 'd3-scale';
+import { useRouter, useSearchParams } from 'next/navigation';
 import { ChangeMarks } from '@/app/components/change-marks/change-marks';
 import {
   type MarkedChange,
@@ -7,6 +8,7 @@ import {
   tabsHeight,
   yearPosition,
 } from '@/app/components/change-marks/marked-changes';
+import { yearHref } from '@/app/components/links';
 import { useWidth } from '@/app/components/use-width';
 import type { YearCoverage } from '@/lib/jobs/types';
 import styles from './coverage-strip.module.css';
@@ -17,6 +19,9 @@ import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
 
 interface Props {
+  /** region and station, for the way to a year's days */
+  slug: string;
+  code: string;
   changes: readonly MarkedChange[];
   /** month in which the low-flow year begins */
   yearStart: number;
@@ -30,12 +35,18 @@ const BAR = 44;
 const TOP = 4;
 
 /** One bar a year, as tall as the share of its days that have a value: dark where the year counts, light where it does
- *  not, hatched for provisional days, a cross on the base line where there is nothing. */
-export function CoverageStrip({ years, changes, yearStart, span, summary }: Props) {
+ *  not, hatched for provisional days, a cross on the base line where there is nothing. A click or Enter opens the year's
+ *  days on the Records page. */
+export function CoverageStrip({ slug, code, years, changes, yearStart, span, summary }: Props) {
+  const router = useRouter();
+  const query = useSearchParams();
   const [frame, width] = useWidth<HTMLDivElement>(960);
   const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, Math.max(PLOT.left + 1, width - PLOT.right)]);
   const reader = useYearReader(years.map((year) => year.year));
   const current = years.find((year) => year.year === reader.picked) ?? null;
+  const open = () => {
+    if (current) router.push(yearHref(slug, code, current.year, query));
+  };
   const barWidth = Math.max(1.5, (x(1) - x(0)) * 0.78);
   const marks = placeChanges(changes, (day) => x(yearPosition(day, yearStart)), [PLOT.left, width - PLOT.right]);
   const top = TOP + tabsHeight(marks);
@@ -51,7 +62,8 @@ export function CoverageStrip({ years, changes, yearStart, span, summary }: Prop
         className={styles.strip}
         yearAt={x.invert}
         onYear={reader.pickNearest}
-        onKeyDown={reader.onKeyDown}
+        onKeyDown={(event) => (event.key === 'Enter' ? open() : reader.onKeyDown(event))}
+        onOpen={open}
         onLeave={reader.clear}
       >
         <svg width={width} height={base + 28} aria-hidden="true">
@@ -147,6 +159,7 @@ function Key({ years }: { years: readonly YearCoverage[] }) {
           no values
         </span>
       )}
+      <span>a click or Enter opens a year’s days</span>
     </span>
   );
 }

@@ -130,6 +130,8 @@ export function StationScreen({ region, detail, background, rows, query }: Props
             />
             <h3 className={styles.coverageTitle}>Days with a value</h3>
             <CoverageStrip
+              slug={region.slug}
+              code={station.code}
               years={coverage.map((year) => ({ ...year, label: labelOf(year.year) }))}
               changes={changes}
               yearStart={basis.yearStart}

@@ -13,6 +13,8 @@ interface Props {
   onYear(year: number): void;
   onKeyDown(event: KeyboardEvent): void;
   onLeave(): void;
+  /** a click by mouse or pen; a finger's tap only reads */
+  onOpen?(): void;
   children: ReactNode;
 }
 
@@ -27,6 +29,7 @@ export function YearSlider({
   onYear,
   onKeyDown,
   onLeave,
+  onOpen,
   children,
 }: Props) {
   const point = (event: PointerEvent<HTMLDivElement>) =>
@@ -43,6 +46,7 @@ export function YearSlider({
       aria-valuetext={text ?? 'No year chosen: the arrow keys move through the years'}
       onPointerMove={point}
       onPointerDown={point}
+      onPointerUp={(event) => event.pointerType !== 'touch' && onOpen?.()}
       onPointerLeave={onLeave}
       onBlur={onLeave}
       onKeyDown={onKeyDown}
