@@ -1,5 +1,6 @@
 import { LF } from '../file-blocks.ts';
 import { looksLikeDate } from '../recognise/column-facts.ts';
+import { findCalendar } from '../recognise/find-calendar.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
 import { roleOfHeading } from '../recognise/heading-roles.ts';
 import { detectDelimiter, type SampleRow, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
@@ -18,6 +19,8 @@ export function looksLikeRegistry(head: Uint8Array, wholeFile: boolean): boolean
   const delimiter = lines.length > 0 ? detectDelimiter(lines, LF) : null;
   if (delimiter === null) return false;
   const rows = splitSample(lines.slice(0, MOST_TITLES + ROWS_LOOKED_AT), splitterFor(delimiter, LF));
+  // Days by month have no dates to tell them by.
+  if (findCalendar(rows) !== null) return false;
   return rows
     .slice(0, MOST_TITLES)
     .some(({ fields }, at) => fields.length > 1 && isRegistry(fields, rows.slice(at + 1, at + 1 + ROWS_LOOKED_AT)));

@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import { looksLikeRegistry } from '../../../../lib/intake/registry/looks-like-registry.ts';
 
+const DAYS = Array.from({ length: 31 }, (_, at) => at + 1);
 const looks = (text: string) => looksLikeRegistry(Buffer.from(text), true);
 
 test.each([
@@ -23,6 +24,7 @@ test.each([
   ['flows', 'date,flow_m3s\n2001-01-01,5\n'],
   ['flows of stations with their positions', 'station,lat,lon,date,flow\nA,47,8,2001-01-01,5\nA,47,8,2001-01-02,6\n'],
   ['flows by station', 'station,date,flow\nA,2001-01-01,5\n'],
+  ['flows in a row a month', `id,name,year,month,${DAYS.join(',')}\nA,Mill,2001,1,${DAYS.join(',')}\n`],
   ['rows without a header', '1,2,3\n4,5,6\n'],
   ['words', 'nothing of the kind\n'],
   ['nothing', ''],
