@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { apiHref, BASIS_PARAMETERS, carried, regionHref, stationHref } from '@/app/components/links';
+import { apiHref, BASIS_PARAMETERS, carried, regionHref, stationHref, yearHref } from '@/app/components/links';
 import { BASIS_KEYS } from '@/lib/basis';
 
 test('links carry every key of the basis', () => {
@@ -15,6 +15,10 @@ test('regionHref keeps basis and map view and drops what belongs to one page', (
 
 test('stationHref takes codes with slashes and spaces as they are', () => {
   expect(stationHref('r', 'A/1 b', 'alpha=0.05')).toBe('/regions/r/stations/A%2F1%20b?alpha=0.05');
+});
+
+test('yearHref opens one year on the Records page, beside the basis', () => {
+  expect(yearHref('r', 'A/1', 1987, 'days=30&sort=area')).toBe('/regions/r/records?days=30&station=A%2F1&year=1987');
 });
 
 test('apiHref takes only the basis along', () => {
