@@ -33,6 +33,8 @@ interface Edge {
   month: number;
   /** logarithm of the factor, above 0 upwards */
   step: number;
+  /** the same as observed, by the days or else by the levels */
+  observed: number;
 }
 
 /** Whole years in another unit than the years around them.
@@ -63,7 +65,7 @@ export function unitChanges(series: DailySeries): Finding[] {
       {
         ...{ kind: 'unit-change', firstDay: series.firstDay + from, lastDay: series.firstDay + end - 1 },
         days: valuedDays(series.values, from, end),
-        detail: { factor: rounded(Math.exp(offset - usual)), ratio: Math.exp(step) },
+        detail: { factor: rounded(Math.exp(factorOf(edges, offsets, i, usual))), ratio: Math.exp(step) },
       },
     ];
   });
@@ -93,7 +95,9 @@ function edgeByDays(values: Float64Array, months: MonthlyLevels, month: number, 
   const step = nearestFactor(days);
   const misfit = Math.abs(days - step);
   const tolerance = Math.min(DAY_TOLERANCE, TOLERANCE_SHARE * Math.abs(step));
-  return misfit <= tolerance && Math.abs(step) >= NATURAL_SPREADS * spread ? { month, step, misfit } : null;
+  return misfit <= tolerance && Math.abs(step) >= NATURAL_SPREADS * spread
+    ? { month, step, observed: days, misfit }
+    : null;
 }
 
 /** An edge that only the level tells; of neighbours one whose days tell it is better. */
@@ -101,7 +105,9 @@ function edgeByMonths({ level }: MonthlyLevels, month: number, { difference, spr
   const step = nearestFactor(difference);
   if (Math.min(Math.abs(step), Math.abs(difference)) < SPREADS_WITHOUT_DAYS * spread) return null;
   const misfit = Math.abs(level[month] - level[month - 1] - step);
-  return misfit <= MONTH_TOLERANCE_SHARE * Math.abs(step) ? { month, step, misfit: DAY_TOLERANCE + misfit } : null;
+  return misfit <= MONTH_TOLERANCE_SHARE * Math.abs(step)
+    ? { month, step, observed: difference, misfit: DAY_TOLERANCE + misfit }
+    : null;
 }
 
 /** At every month that has 12 before it and 12 from it on: the level of the latter less that of the former. */
@@ -143,6 +149,15 @@ function usualOffset(starts: readonly number[], offsets: readonly number[]): num
     months.set(offset, (months.get(offset) ?? 0) + starts[i + 1] - starts[i]);
   });
   return [...months].reduce((best, one) => (one[1] > best[1] ? one : best))[0];
+}
+
+/** Logarithm of the factor of a stretch: the nearest to what its two edges say together, since 28.3 and 35.3 lie near each
+ *  other. */
+function factorOf(edges: readonly Edge[], offsets: readonly number[], i: number, usual: number): number {
+  const observed: number[] = [];
+  if (i > 0 && offsets[i - 1] === usual) observed.push(edges[i - 1].observed);
+  if (offsets[i + 1] === usual) observed.push(-edges[i].observed);
+  return observed.length === 0 ? offsets[i] - usual : nearestFactor(meanLevel(observed, 0, observed.length));
 }
 
 /** Mean level of the year on either side of a stretch, where that has the usual unit. */
