@@ -18,7 +18,7 @@ export interface LinkRow extends LinkInput {
 }
 
 /** Source of a pair that a person said is no link: it is kept so that nobody is asked again, and is not listed. */
-export const REJECTED = 'rejected';
+export const REJECTED = 'rejected' as const;
 
 const LIST = `SELECT l.id, u.code, d.code, l.source FROM Link l JOIN Station u ON u.id = l.upstreamId
   JOIN Station d ON d.id = l.downstreamId WHERE l.regionId = ? AND l.source <> '${REJECTED}'

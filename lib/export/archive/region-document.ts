@@ -9,7 +9,8 @@ import { listBases } from '../../store/bases.ts';
 import { getImportReport, type ImportRow, listImports } from '../../store/imports.ts';
 import type { OverlapRule } from '../../store/lay-parts.ts';
 import { listLayers } from '../../store/layers.ts';
-import { listLinks } from '../../store/links.ts';
+import { rejectedLinks } from '../../store/link-rejections.ts';
+import { listLinks, REJECTED } from '../../store/links.ts';
 import { listRegionMarks } from '../../store/marks.ts';
 import { importPartHeads } from '../../store/parts.ts';
 import type { RegionRow } from '../../store/regions.ts';
@@ -20,10 +21,11 @@ import { PROGRAM_VERSION } from '../program-version.ts';
 /** region.json of an archive: all of a region that is neither a station's fact, nor a layer, nor a day of a record. */
 export async function regionDocument(region: RegionRow): Promise<RegionDocument> {
   const { id, name, invented, basis, tileUrl, tileAttribution } = region;
-  const [bases, mappings, links, marks, layers] = await Promise.all([
+  const [bases, mappings, links, rejected, marks, layers] = await Promise.all([
     listBases(id),
     listMappings(id),
     listLinks(id),
+    rejectedLinks(id),
     listRegionMarks(id),
     listLayers(id),
   ]);
@@ -34,7 +36,10 @@ export async function regionDocument(region: RegionRow): Promise<RegionDocument>
     tiles: tileUrl === null ? null : { url: tileUrl, attribution: tileAttribution ?? '' },
     bases: bases.map((saved) => ({ name: saved.name, basis: { ...saved.basis } })),
     mappings: mappings.map((saved) => ({ name: saved.name, mapping: { ...saved.mapping } })),
-    links: links.map(({ upstream, downstream, source }) => ({ upstream, downstream, source })),
+    links: [
+      ...links.map(({ upstream, downstream, source }) => ({ upstream, downstream, source })),
+      ...rejected.map((pair) => ({ ...pair, source: REJECTED })),
+    ],
     marks: marks.map(({ code, quantity, firstDay, lastDay, kind, reason, by, createdAt }) => ({
       ...{ station: code, quantity, firstDay, lastDay, kind, reason, by, createdAt: createdAt.toISOString() },
     })),
