@@ -12,6 +12,7 @@ import {
 } from '../types.ts';
 import { encodingOf } from './decode-text.ts';
 import type { TextReading } from './read-text.ts';
+import { nothingTaken } from './series-problems.ts';
 import { SeriesSink } from './series-sink.ts';
 import type { DocumentLayout } from './sniff.ts';
 
@@ -146,39 +147,4 @@ function warningsOf(sink: SeriesSink): string[] {
   ];
   const texts = counted.flatMap(([count, words]) => (count > 0 ? [words(count)] : []));
   return [...sink.warnings, ...texts, ...sink.stations.warnings()];
-}
-
-/** Why a document gave nothing; null when it gave something. */
-function nothingTaken(file: string, sink: SeriesSink): IntakeError | null {
-  if (sink.hasMain && sink.rows > sink.rejectedTotal) return null;
-  const first = sink.rejected[0];
-  if (first !== undefined) {
-    return new IntakeError({
-      ...{ file, row: first.row, value: first.text.slice(0, 200), rows: sink.rejected },
-      message: `none of its ${sink.rows} points can be read; of the first, ${first.reason}`,
-      remedy: 'Check the document',
-    });
-  }
-  const { others, main } = sink.wanted;
-  const wanted = main === 'flow' ? 'daily flow' : `daily ${main.replace('-', ' ')}`;
-  if (others.size > 0) {
-    const names = [...others.keys()];
-    return new IntakeError({
-      ...{ file, value: names.slice(0, 5).join('; ') },
-      message: `the document holds no series of ${wanted}`,
-      remedy: 'Get the series of discharge, or choose another quantity of those that it holds',
-      ...([...others.values()].some(({ quantity }) => quantity !== null) ? { needs: 'quantity' } : {}),
-    });
-  }
-  const why =
-    sink.categories > 0
-      ? 'its series are of categories, not of numbers'
-      : sink.emptySeries > 0
-        ? `none of its ${sink.emptySeries} series has a value`
-        : 'it holds no series';
-  return new IntakeError({
-    file,
-    message: `the document gives no ${wanted}: ${why}`,
-    remedy: 'Get the series of discharge',
-  });
 }

@@ -15,7 +15,7 @@ import {
 } from '../types.ts';
 import { DayCodes, type PointCode } from './day-codes.ts';
 import type { SeriesHead } from './series-head.ts';
-import { labelOf } from './series-head.ts';
+import { stepProblem, unitsDiffer } from './series-problems.ts';
 import { SeriesRecord } from './series-record.ts';
 import { type StampMeaning, TimeStamp } from './time-stamp.ts';
 import { ValueText } from './value-text.ts';
@@ -253,21 +253,4 @@ export class SeriesSink {
       yield [part, part.quantity === undefined ? report : { ...report, quantity: part.quantity }];
     }
   }
-}
-
-function stepProblem(file: string, head: SeriesHead): IntakeError {
-  return new IntakeError({
-    file,
-    value: labelOf(head),
-    message: `its values stand for ${Math.round((head.stepDays ?? 0) * 10) / 10} days each, so they are no daily flows`,
-    remedy: 'Get the daily values from whoever keeps the record; means of longer times cannot be taken apart into days',
-  });
-}
-
-function unitsDiffer(file: string, station: string, first: Unit, second: Unit): IntakeError {
-  return new IntakeError({
-    ...{ file, value: second },
-    message: `station ${station} has two series of one quantity in different units, ${first} and ${second}`,
-    remedy: 'Import them from separate documents',
-  });
 }
