@@ -1,20 +1,20 @@
 import { longLineError } from '../file-blocks.ts';
-import { columnPosition } from '../mapping.ts';
 import type { LineSplitter } from '../rows/fields.ts';
 import { type InspectOptions, IntakeError, type Layout, type Mapping } from '../types.ts';
 import { agencyColumns } from './agency-columns.ts';
 import { assignColumns, type ColumnRoles, type WideColumn } from './assign-columns.ts';
 import { columnFacts, hasShortYear, looksLikeDate } from './column-facts.ts';
+import { columnPlaces } from './column-places.ts';
 import { findTableStart, headerInComment, isWidthRow, type TableStart } from './find-header.ts';
 import { readLinesAbove, stationAbove } from './lines-above.ts';
 import { otherQuantities } from './other-quantities.ts';
-import { centuryProblem, mappingProblem, problemsOf, stationProblem, thousandsProblem } from './plan-problems.ts';
+import { centuryProblem, problemsOf, stationProblem, thousandsProblem } from './plan-problems.ts';
 import { columnTexts, mappingOf, mostFrequent, signsOf } from './recognised-mapping.ts';
 import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount } from './sample.ts';
 import { withoutSign } from './stated-facts.ts';
 import type { TablePlan } from './table-plan.ts';
 import { mixedUnits } from './unit-column.ts';
-import { unreadColumns, wideColumns } from './wide-columns.ts';
+import { unreadColumns } from './wide-columns.ts';
 
 export interface PlanContext {
   options: InspectOptions;
@@ -46,21 +46,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const roles = rolesOf(data, start, fieldCount, options);
   const layout = layoutOf(roles, start, delimiter);
   const mapping = mappingOf(roles, data, { header, delimiter, above, options, layout });
-  const position = (column: number | string | [number, number]): number => {
-    if (typeof column !== 'object') return columnPosition(column, header, file);
-    throw mappingProblem(file, 'the mapping gives characters, but the file has delimited columns');
-  };
-  const placeOf = (place: Mapping['value']): number =>
-    place === null ? -1 : position('slice' in place ? place.slice : place.column);
-  const wide = mapping.layout === 'wide' ? wideColumns(roles, header, mapping, fieldCount, position) : null;
-  const places = {
-    date: mapping.date.columns.map(position),
-    station: mapping.station.from === 'column' ? position(mapping.station.column) : -1,
-    value: wide ? -1 : placeOf(mapping.value),
-    flag: wide ? -1 : placeOf(mapping.flag),
-    where: mapping.where ? position(mapping.where.column) : -1,
-    unit: wide ? -1 : (roles.unitColumn ?? -1),
-  };
+  const { places, wide } = columnPlaces(mapping, roles, { header, fieldCount, file });
   const { where } = mapping;
   const flows = where ? data.filter(({ fields }) => fields[places.where] === where.equals) : data;
   const valueTexts = (wide?.map(({ value }) => value) ?? [places.value]).flatMap((at) => columnTexts(flows, at));
