@@ -2,7 +2,7 @@ import { allRegions, uncheckedRecords } from '../store/checked-records.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { listStations } from '../store/stations.ts';
 import { launchJob } from './live-jobs.ts';
-import { runTask } from './pool.ts';
+import { runTask, THREADS } from './pool.ts';
 import { chunksOf } from './share-out.ts';
 import type { CheckCounts } from './tasks/check-records.ts';
 import { latestDayOnEarth } from './today.ts';
@@ -33,15 +33,20 @@ export async function checkStations(
   const today = latestDayOnEarth();
   const total: CheckCounts = { stations: 0, withFindings: 0, findings: 0 };
   let done = 0;
-  const check = async (chunk: number[]) => {
-    const counts = await runTask('checkRecords', { stationIds: chunk, today }, { signal });
-    total.stations += counts.stations;
-    total.withFindings += counts.withFindings;
-    total.findings += counts.findings;
-    done += chunk.length;
-    onProgress?.({ stage: 'checking', done, stations: stationIds.length, share: done / stationIds.length });
+  const chunks = chunksOf(stationIds).values();
+  // One task a worker at a time: what others ask of the workers waits for one chunk, and not for all of them.
+  const lane = async () => {
+    for (const chunk of chunks) {
+      signal?.throwIfAborted();
+      const counts = await runTask('checkRecords', { stationIds: chunk, today }, { signal });
+      total.stations += counts.stations;
+      total.withFindings += counts.withFindings;
+      total.findings += counts.findings;
+      done += chunk.length;
+      onProgress?.({ stage: 'checking', done, stations: stationIds.length, share: done / stationIds.length });
+    }
   };
-  await Promise.all(chunksOf(stationIds).map(check));
+  await Promise.all(Array.from({ length: THREADS }, lane));
   return total;
 }
 
