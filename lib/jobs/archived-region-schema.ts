@@ -5,6 +5,7 @@ import { QUANTITIES } from '../series/quantities.ts';
 import { ARCHIVE_FORMAT } from '../store/archived-region.ts';
 import { OVERLAP_RULES } from '../store/lay-parts.ts';
 import { LAYER_KINDS } from '../store/layer-kinds.ts';
+import { REJECTED } from '../store/links.ts';
 import { MARK_KINDS } from '../store/marks-on-flags.ts';
 
 const text = z.string().max(10_000);
@@ -31,7 +32,7 @@ export const regionDocumentSchema = z.object({
   tiles: z.object({ url: z.string().regex(/^https?:\/\/\S+$/), attribution: text }).nullable(),
   bases: z.array(z.object({ name, basis })),
   mappings: z.array(z.object({ name, mapping: object })),
-  links: z.array(z.object({ upstream: name, downstream: name, source: z.enum(LINK_SOURCES) })),
+  links: z.array(z.object({ upstream: name, downstream: name, source: z.enum([...LINK_SOURCES, REJECTED]) })),
   marks: z.array(
     z.object({
       ...{ station: name, quantity: z.enum(QUANTITIES), firstDay: z.int(), lastDay: z.int() },

@@ -31,7 +31,7 @@ export interface ArchivedRegion {
   tiles: { url: string; attribution: string } | null;
   bases: { name: string; basis: Record<string, unknown> }[];
   mappings: { name: string; mapping: Record<string, unknown> }[];
-  /** station codes, water flowing from the first to the second */
+  /** station codes, water flowing from the first to the second; or, with source "rejected", not so */
   links: { upstream: string; downstream: string; source: string }[];
   marks: ArchivedMark[];
 }

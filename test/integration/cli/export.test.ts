@@ -7,6 +7,7 @@ import { dayNumber, parseIsoDate } from '../../../lib/calendar/day.ts';
 import { closePool } from '../../../lib/jobs/pool.ts';
 import { openConnection, rows } from '../../../lib/store/connection.ts';
 import { listImports } from '../../../lib/store/imports.ts';
+import { rejectLink } from '../../../lib/store/link-rejections.ts';
 import { setLink } from '../../../lib/store/links.ts';
 import { addMark } from '../../../lib/store/marks.ts';
 import { migrate } from '../../../lib/store/migrate.ts';
@@ -54,6 +55,7 @@ async function fullRegion(): Promise<void> {
     notes: 'Read twice a day until 1990.',
   });
   await setLink(id, { upstream: 'A1', downstream: 'B2', source: 'person' });
+  await rejectLink(id, { upstream: 'C3', downstream: 'B2' }, true);
   const connection = openConnection(place.path);
   const [stationId] = rows(connection, "SELECT id FROM Station WHERE code = 'B2'").get([]) as [number];
   connection.close();
