@@ -105,6 +105,9 @@ function Cancelled() {
   );
 }
 
+/** Opens the list of findings on the Records page. */
+const FINDINGS = '?show=findings';
+
 const BY = 'hungerstone.imported-by';
 
 /** What is chosen beside the files. Who imports is remembered by this browser. */
@@ -136,7 +139,7 @@ function Taken({ slug, outcome }: { slug: string | null; outcome: ImportOutcome 
         {slug !== null && (
           <p className={styles.actions}>
             {findings && findings.findings > 0 && (
-              <a className={ui.button} href={regionHref(slug, 'records')}>
+              <a className={ui.button} href={regionHref(slug, 'records') + FINDINGS}>
                 Look at the findings
               </a>
             )}

@@ -17,7 +17,14 @@ export async function lookAtUpload(id: string, choices: Record<string, FileChoic
   if (!session) return null;
   const looks = names.map((name) => lookOf(session, name, choices[name]));
   // Nothing else waits for the look itself: one file's is short, that of forty is not.
-  const looked = await runTask('lookAtFiles', { looks, known: knownTo(session, names) });
+  const looked = await runTask('lookAtFiles', { looks, known: knownTo(session, names) }).catch(
+    async (error: unknown) => {
+      // Whoever gave the upload up meanwhile took the files away from under the look.
+      if (await readSession(id)) throw error;
+      return null;
+    },
+  );
+  if (looked === null) return null;
   await changed(id, (now) => withLooks(now, looked));
   return looked.map(({ preview }) => preview);
 }

@@ -9,6 +9,7 @@ import { type ChoicesEdit, shownMapping } from './choices-edit.ts';
 import { CodeMatches } from './code-matches.tsx';
 import { Columns } from './columns.tsx';
 import { Choice } from './field.tsx';
+import { FlagMeanings } from './flag-meanings.tsx';
 import { MainControls } from './main-controls.tsx';
 import styles from './mapping.module.css';
 import { OtherQuantities } from './other-quantities.tsx';
@@ -78,6 +79,11 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
         </div>
       </details>
       <Columns key={`columns ${round}`} {...controls} sight={sight} renewed={renewed} />
+      <FlagMeanings
+        understood={inspection.understood}
+        flags={mapping.flags}
+        onChange={(flags) => change({ mapping: { flags } })}
+      />
       <OtherQuantities
         key={`also ${round}`}
         others={inspection.others}

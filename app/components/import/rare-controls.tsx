@@ -39,7 +39,7 @@ export function RareControls({ mapping, inspection, asked, change }: ControlProp
           asked={asked.decimal}
           value={decimal}
           options={DECIMALS}
-          onChange={(value) => change('decimal', { mapping: { decimal: value ?? undefined } })}
+          onChange={(value) => change('decimal', { mapping: { decimal: value ?? undefined, thousands } })}
         />
       )}
       {text && (
@@ -49,7 +49,7 @@ export function RareControls({ mapping, inspection, asked, change }: ControlProp
           none="none"
           value={thousands ?? null}
           options={THOUSANDS}
-          onChange={(value) => change('thousands', { mapping: { thousands: value ?? undefined } })}
+          onChange={(value) => change('thousands', { mapping: { thousands: value ?? undefined, decimal } })}
         />
       )}
       {delimited && (
