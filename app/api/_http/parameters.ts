@@ -80,5 +80,7 @@ export async function readOptionalJson<Schema extends z.ZodType>(
   request: Request,
   schema: Schema,
 ): Promise<z.output<Schema>> {
-  return request.body === null ? schema.parse({}) : readJson(request, schema);
+  // a server hands on an empty body as a stream without bytes, not as none
+  const isEmpty = (await request.clone().text()).trim() === '';
+  return isEmpty ? schema.parse({}) : readJson(request, schema);
 }
