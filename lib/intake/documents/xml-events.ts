@@ -36,10 +36,11 @@ export async function parseXml(pieces: AsyncIterable<string>, file: string, hand
   };
   let depth = 0;
   let text = '';
-  let position = 0;
+  /** characters read since something was heard */
+  let silent = 0;
   const names = new Map<string, string>();
   const heard = () => {
-    position = parser.position;
+    silent = 0;
   };
   parser.on('doctype', (doctype) => {
     const entities = /<!ENTITY/i.test(doctype);
@@ -52,7 +53,7 @@ export async function parseXml(pieces: AsyncIterable<string>, file: string, hand
     );
   });
   parser.on('opentag', ({ name, attributes }) => {
-    heard();
+    silent = 0;
     if (++depth > DEEPEST) {
       refuse(`elements stand more than ${DEEPEST} deep in one another`, 'Check that it is a document of time series');
     }
@@ -60,20 +61,20 @@ export async function parseXml(pieces: AsyncIterable<string>, file: string, hand
     handler.open(localName(name, names), attributes, parser.line);
   });
   parser.on('text', (piece) => {
-    heard();
+    silent = 0;
     text += piece;
     // Comments between them may have parted endless pieces.
     if (text.length > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
   });
   parser.on('cdata', (piece) => {
-    heard();
+    silent = 0;
     text += piece;
     if (text.length > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
   });
   parser.on('comment', heard);
   parser.on('processinginstruction', heard);
   parser.on('closetag', ({ name }) => {
-    heard();
+    silent = 0;
     depth--;
     const content = text;
     text = '';
@@ -88,8 +89,9 @@ export async function parseXml(pieces: AsyncIterable<string>, file: string, hand
     );
   });
   for await (const piece of pieces) {
+    silent += piece.length;
     parser.write(piece);
-    if (parser.position - position > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
+    if (silent > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
     if (handler.enough?.()) return;
   }
   parser.close();
