@@ -21,10 +21,10 @@ const LEAST_RISES = 3;
  *  @returns one finding for each block, over the later copy; detail: `copyOf`, the ISO date on which the first begins */
 export function repeatedBlocks({ firstDay, values }: DailySeries): Finding[] {
   const found: Finding[] = [];
-  const windows = new FirstWindows(values);
+  const firsts = earlierWindows(values);
   let after = 0;
   for (let start = 0; start + WINDOW <= values.length; start++) {
-    const earlier = windows.meet(start);
+    const earlier = firsts[start];
     if (earlier < 0 || start < after || start - earlier < BLOCK_DAYS) continue;
     let from = start;
     while (earlier - (start - from) > 0 && from > after && same(values, from - 1, start - earlier)) from--;
@@ -52,74 +52,51 @@ function isLively(values: Float64Array, from: number, end: number): boolean {
   return changes >= CHANGING_SHARE * (end - from) && rises >= LEAST_RISES;
 }
 
-/** Windows of 8 days by where each was first met, in a table of open addresses. Every other window will do to find a block
- *  of 28 days, whichever those are, as long as they are the same in both copies: those whose hash is even. */
-class FirstWindows {
-  private readonly hashes: Int32Array;
-  private readonly changes: Uint8Array;
-  private readonly slots: Int32Array;
-  private readonly mask: number;
-
-  constructor(private readonly values: Float64Array) {
-    const size = 2 ** Math.ceil(Math.log2(Math.max(64, values.length)));
-    this.slots = new Int32Array(size);
-    this.mask = size - 1;
-    this.hashes = hashWindows(values);
-    this.changes = countChanges(values);
-  }
-
-  /** @returns index of the first window that looks like the one that starts here; −1 when this is the first, or when it has
-   *           a missing day or holds too few changes to be told from others */
-  meet(start: number): number {
-    const hash = this.hashes[start];
-    if ((hash & 1) === 1 || this.changes[start] < CHANGES_IN_WINDOW) return -1;
-    for (let slot = (hash >>> 1) & this.mask; ; slot = (slot + 1) & this.mask) {
-      const held = this.slots[slot] - 1;
-      if (held < 0) {
-        this.slots[slot] = start + 1;
-        return -1;
-      }
-      if (this.hashes[held] === hash && this.startsAlike(held, start)) return held;
-    }
-  }
-
-  private startsAlike(a: number, b: number): boolean {
-    for (let i = 0; i < WINDOW; i++) if (this.values[a + i] !== this.values[b + i]) return false;
-    return true;
-  }
-}
-
-/** A number for the window that starts on each day, from three of its days: those that share it are compared whole. */
-function hashWindows(values: Float64Array): Int32Array {
+/** For the window of 8 days that starts on each day: the first window that is like it, −1 when it is the first itself, or
+ *  when it has a missing day or holds too few changes to be told from others.
+ *
+ *  By a table of open addresses. Every other window will do to find a block of 28 days, whichever those are, as long as
+ *  they are the same in both copies: those whose hash is even. */
+function earlierWindows(values: Float64Array): Int32Array {
+  const earlier = new Int32Array(values.length).fill(-1);
   const words = new Int32Array(values.buffer, values.byteOffset, 2 * values.length);
-  const days = new Int32Array(values.length);
-  for (let day = 0; day < values.length; day++) {
-    const mixed = Math.imul(words[2 * day], 0x85ebca6b) ^ Math.imul(words[2 * day + 1], 0xc2b2ae35);
-    days[day] = mixed ^ (mixed >>> 15);
-  }
-  const hashes = new Int32Array(values.length);
-  for (let day = 0; day + WINDOW <= values.length; day++) {
-    const mixed = Math.imul(days[day], 0x01000193) + Math.imul(days[day + 3], 0x2c1b3c6d) + days[day + 7];
-    hashes[day] = mixed ^ (mixed >>> 16);
-  }
-  return hashes;
-}
-
-/** Changes from day to day in the window that starts on each day; 0 where one of its days is missing. */
-function countChanges(values: Float64Array): Uint8Array {
-  const counts = new Uint8Array(values.length);
+  const mask = 2 ** Math.ceil(Math.log2(Math.max(64, values.length))) - 1;
+  const slots = new Int32Array(mask + 1);
+  // changes into the window's days but its first, and its missing days
   let changes = 0;
   let missing = 0;
-  for (let day = 0; day < values.length; day++) {
-    if (values[day] !== values[day - 1]) changes++;
-    if (Number.isNaN(values[day])) missing++;
-    const start = day - WINDOW + 1;
+  for (let end = 0; end < values.length; end++) {
+    const start = end - WINDOW + 1;
+    const value = values[end];
+    if (end > 0 && value !== values[end - 1]) changes++;
+    if (Number.isNaN(value)) missing++;
     if (start > 0) {
-      // The change into the window's first day lies outside it.
-      if (values[start] !== values[start - 1]) changes--;
-      if (Number.isNaN(values[start - 1])) missing--;
-    } else if (day === 0) changes = 0;
-    if (start >= 0 && missing === 0) counts[start] = changes;
+      const left = values[start - 1];
+      if (values[start] !== left) changes--;
+      if (Number.isNaN(left)) missing--;
+    }
+    if (start < 0 || missing > 0 || changes < CHANGES_IN_WINDOW) continue;
+    const hash = hashOf(words, start);
+    if ((hash & 1) === 1) continue;
+    let slot = (hash >>> 1) & mask;
+    while (slots[slot] > 0 && !startAlike(values, slots[slot] - 1, start)) slot = (slot + 1) & mask;
+    if (slots[slot] > 0) earlier[start] = slots[slot] - 1;
+    else slots[slot] = start + 1;
   }
-  return counts;
+  return earlier;
+}
+
+/** From three of the window's days: windows that share it are compared whole. */
+function hashOf(words: Int32Array, start: number): number {
+  const last = start + WINDOW - 1;
+  const mixed =
+    Math.imul(words[2 * start] ^ Math.imul(words[2 * start + 1], 0xc2b2ae35), 0x01000193) +
+    Math.imul(words[2 * start + 6] ^ Math.imul(words[2 * start + 7], 0x85ebca6b), 0x2c1b3c6d) +
+    (words[2 * last] ^ Math.imul(words[2 * last + 1], 0x27d4eb2f));
+  return Math.imul(mixed ^ (mixed >>> 16), 0x85ebca6b) ^ (mixed >>> 13);
+}
+
+function startAlike(values: Float64Array, a: number, b: number): boolean {
+  for (let i = 0; i < WINDOW; i++) if (values[a + i] !== values[b + i]) return false;
+  return true;
 }
