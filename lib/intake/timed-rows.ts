@@ -17,6 +17,10 @@ export class TimedRows implements RowReader {
     this.times = new TimeOfDay(plan);
   }
 
+  comment(text: string, line: number): void {
+    this.inner.comment?.(text, line);
+  }
+
   read(bytes: Uint8Array, fields: Fields, line: number): string | null {
     this.clock.second = this.times.of(bytes, fields);
     return this.inner.read(bytes, fields, line);

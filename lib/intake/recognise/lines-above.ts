@@ -1,6 +1,6 @@
 import type { KnownStation, StatedFacts } from '../types.ts';
 import { factOfKey } from './fact-words.ts';
-import type { SampleRow } from './sample.ts';
+import type { SampleLine, SampleRow } from './sample.ts';
 import { factsIn, pairOf, pairsAcross, type StatedPair, stationsListed } from './stated-facts.ts';
 
 /** What the lines above a table say. */
@@ -8,18 +8,23 @@ export interface LinesAbove {
   /** comment and title lines as written */
   remarks: string[];
   facts: StatedFacts[];
+  /** every number of a station that stands above the table; offices have numbers of their own for one */
+  codes: string[];
   /** what stands behind "Unit:" and its like */
   units: string[];
 }
 
 /** Reads comment lines and the title lines above a table.
- *  @param titles  title lines, split like the table */
+ *  @param comments   of the whole sample; what they say of the station counts where they stand above the data
+ *  @param titles     title lines, split like the table
+ *  @param firstLine  line number of the first row of data */
 export function readLinesAbove(
-  comments: readonly string[],
+  comments: readonly SampleLine[],
   titles: readonly { text: string; row: SampleRow }[],
-  delimiter: string | null,
+  { delimiter, firstLine }: { delimiter: string | null; firstLine: number },
 ): LinesAbove {
-  const remarks = [...comments, ...titles.map(({ text }) => text)];
+  const texts = comments.map(({ text }) => text);
+  const remarks = [...texts, ...titles.map(({ text }) => text)];
   const across: StatedPair[] = [];
   // The lines of a small table are no pairs of their own.
   const tables = new Set<string>();
@@ -28,13 +33,16 @@ export function readLinesAbove(
     across.push(...found);
     if (found.length > 0) for (const { text } of [titles[at], titles[at + 1]]) tables.add(text);
   }
-  const lines = remarks.filter((text) => !tables.has(text));
+  const lines = [...comments.filter(({ line }) => line < firstLine), ...titles].flatMap(({ text }) =>
+    tables.has(text) ? [] : [text],
+  );
   const pairs = [...lines.flatMap((text) => pairOf(text, delimiter) ?? []), ...across];
   const stated = factsIn(pairs);
-  const listed = stationsListed(comments);
+  const listed = stationsListed(texts);
   const units = pairs.flatMap(({ key, value }) => (factOfKey(key) === 'unit' ? [value] : []));
-  if (stated.code === undefined && listed.length > 0) return { remarks, facts: listed, units };
-  return { remarks, facts: Object.keys(stated).length > 0 ? [stated] : [], units };
+  const codes = pairs.flatMap((pair) => factsIn([pair]).code ?? []);
+  const facts = Object.keys(stated).length > 0 ? [stated] : [];
+  return { remarks, facts: stated.code === undefined && listed.length > 0 ? listed : facts, codes, units };
 }
 
 /** The station that the lines above a table name: by its number, or by a name that the registry has; null when neither

@@ -40,8 +40,10 @@ export function planCalendar(
   const titles = words.flatMap((row, at) =>
     at < firstRow && row.fields !== header ? [{ text: body[at].text, row }] : [],
   );
-  const above = readLinesAbove(context.remarks, titles, delimiter);
-  const headings = shape === null ? [] : yearHeadings(words, context.remarks, shape);
+  const firstLine = words[firstRow]?.line ?? 1;
+  const above = readLinesAbove(context.comments, titles, { delimiter, firstLine });
+  const remarks = context.comments.filter(({ line }) => line < firstLine).map(({ text }) => text);
+  const headings = shape === null ? [] : yearHeadings(words, remarks, shape);
   const aligned = delimiter === null && shape !== null ? alignedSlices(body, shape) : null;
   const leading = leadingColumns(shape, words);
   const mapping = calendarMapping(shape, { leading, above, headings, words, options, delimiter, aligned });
@@ -72,7 +74,7 @@ export function planCalendar(
   return {
     ...{ file, mapping, splitter, lineEnd, marked, header, places, wide: null },
     ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),
-    firstLine: rows[firstRow]?.line ?? 1,
+    firstLine,
     fieldCount: days.slices?.length ?? Math.max(header?.length ?? 0, lastField(days) + 1),
     leastFields: Math.max(...places.date, places.station, places.value) + 1,
     unitText: mostFrequent(columnTexts(data, places.unit)),
@@ -86,7 +88,7 @@ export function planCalendar(
       firstYear: firstYearOf(mapping, headings, firstRow),
       begins: mapping.date.yearBegins ?? { month: 1, named: 'first' },
     },
-    facts: above.facts,
+    ...{ facts: above.facts, codesAbove: above.codes },
     problems: [
       ...(mixed === null ? [] : [mixed]),
       ...open,

@@ -21,7 +21,7 @@ export interface PlanContext {
   lineEnd: number;
   marked: boolean;
   /** comment lines, and the sign that they begin with where it is not `#` */
-  remarks: string[];
+  comments: SampleLine[];
   sign: string | null;
   /** the line that runs over the end of the sample; null when the sample is the whole file */
   openLine: Uint8Array | null;
@@ -33,7 +33,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
   const file = options.fileName;
   const splitter = splitterFor(delimiter, lineEnd);
   const rows = splitSample(body, splitter);
-  const start = tableStart(rows, splitter, context.remarks);
+  const start = tableStart(rows, splitter, context.comments);
   const data = rows.slice(start.firstRow);
   refuseWithoutRows(file, rows, start, data, context.openLine);
   const { header } = start;
@@ -42,7 +42,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
     .slice(0, start.firstRow)
     .map((row, at) => ({ text: body[at].text, row }))
     .filter(({ row }) => row.fields !== header && !isWidthRow(row.fields));
-  const above = readLinesAbove(context.remarks, titles, delimiter);
+  const above = readLinesAbove(context.comments, titles, { delimiter, firstLine: data[0].line });
   const roles = rolesOf(data, start, fieldCount, options);
   const layout = layoutOf(roles, start, delimiter);
   const mapping = mappingOf(roles, data, { header, delimiter, above, options, layout });
@@ -81,7 +81,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
       samples: data.slice(0, 5).map(({ fields }) => fields[column] ?? ''),
     })),
     others: otherQuantities(roles, { header, data, remarks: above.remarks, mapping, value: places.value }),
-    facts: above.facts,
+    ...{ facts: above.facts, codesAbove: above.codes },
     warnings: warningsOf(options, mapping, wide, header, places.date),
   };
 }
@@ -110,10 +110,11 @@ function shortYearIn(data: readonly SampleRow[], dates: readonly number[]): stri
   return short.length * 2 > texts.length ? short[0] : null;
 }
 
-function tableStart(rows: readonly SampleRow[], splitter: LineSplitter, remarks: readonly string[]): TableStart {
+function tableStart(rows: readonly SampleRow[], splitter: LineSplitter, comments: readonly SampleLine[]): TableStart {
   const count = usualCount(rows);
   const start = findTableStart(rows, count);
-  const last = remarks[remarks.length - 1];
+  const firstLine = rows[start.firstRow]?.line ?? 0;
+  const last = comments.findLast(({ line }) => line < firstLine)?.text;
   if (start.header !== null || last === undefined) return start;
   const bytes = new TextEncoder().encode(withoutSign(last));
   const [{ fields }] = splitSample([{ line: 0, text: last, bytes }], splitter);

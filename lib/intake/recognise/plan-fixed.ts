@@ -22,7 +22,7 @@ export function planFixedWidth(lines: readonly SampleLine[], context: PlanContex
   const file = options.fileName;
   const body = lines.slice(first);
   const titles = lines.slice(0, first).map(({ line, text }) => ({ text, row: { line, fields: [text] } }));
-  const above = readLinesAbove(context.remarks, titles, null);
+  const above = readLinesAbove(context.comments, titles, { delimiter: null, firstLine: body[0].line });
   const unit = options.unit ?? given.unit ?? findUnit({ headings: [], unitText: '', ...above });
   const mapping: Mapping = {
     layout: 'fixed-width',
@@ -63,7 +63,7 @@ export function planFixedWidth(lines: readonly SampleLine[], context: PlanContex
     splitter: new FixedWidthLines(slices, lineEnd),
     firstLine: body[0].line,
     ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),
-    facts: above.facts,
+    ...{ facts: above.facts, codesAbove: above.codes },
     fieldCount: slices.length,
     leastFields: slices.length,
     wide: null,

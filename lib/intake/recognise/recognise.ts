@@ -31,7 +31,7 @@ export function recognise(head: FileHead, options: InspectOptions): TablePlan {
   const openLine = wholeFile ? null : head.bytes.subarray(head.bytes.lastIndexOf(lineEnd) + 1);
   const context = {
     ...{ options, openLine, lineEnd, marked: hasUtf8Mark(head.bytes) },
-    remarks: lines.filter(({ text }) => isComment(text, sign)).map(({ text }) => text),
+    comments: lines.filter(({ text }) => isComment(text, sign)),
     sign,
   };
   const asked = options.mapping?.layout;

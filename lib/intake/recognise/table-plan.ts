@@ -37,6 +37,8 @@ export interface TablePlan {
   others?: AlsoCandidate[];
   /** stations' facts stated above the table; absent: none. `factsOf` gives them their codes */
   facts?: StatedFacts[];
+  /** every number of a station that those lines state; absent: none */
+  codesAbove?: string[];
   /** bytes that a comment line begins with, beside `#`; absent: none */
   comment?: Uint8Array;
   /** layouts with a column for each day or month; absent: others */

@@ -1,7 +1,7 @@
 import type { CodeTable } from '../code-table.ts';
 import { dayOfParts, fullYear, NO_DAY, parseMonth, parseWhole } from '../dates.ts';
 import type { CalendarCell, CalendarPlan } from '../recognise/calendar-plan.ts';
-import { factsIn, pairOf } from '../recognise/stated-facts.ts';
+import { factsIn, pairOf, withoutSign } from '../recognise/stated-facts.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import type { StationCodes } from '../station-codes.ts';
 import { decodeText } from '../text-encoding.ts';
@@ -74,6 +74,19 @@ export class CalendarRows implements RowReader {
       if (station < 0) return 'the row names no station';
     }
     return this.cells(bytes, fields, line, { ...place, year: place.year, station });
+  }
+
+  comment(text: string): void {
+    if (this.calendar.headings) this.turnToYear(withoutSign(text));
+  }
+
+  /** @returns false when the text names no year */
+  private turnToYear(text: string): boolean {
+    const heading = yearOfHeading(text);
+    if (heading === null) return false;
+    // Of two years that a heading names, the mapping counts from the one it goes by.
+    this.year = heading.spans && this.calendar.begins.named === 'last' ? heading.year + 1 : heading.year;
+    return true;
   }
 
   /** Without a delimiter, empty cells leave no trace: only a month that ends with its last day may be shorter. */
@@ -183,13 +196,8 @@ export class CalendarRows implements RowReader {
     if (/^[\s\p{P}\p{S}]*$/u.test(text)) return NO_ROW_OF_DATA;
     if (SUMMARY.test(text)) return NO_ROW_OF_DATA;
     const named = this.stationNamed(bytes, fields, line);
-    const heading = this.calendar.headings ? yearOfHeading(text) : null;
-    if (heading !== null) {
-      // Of two years that a heading names, the mapping counts from the one it goes by.
-      this.year = heading.spans && this.calendar.begins.named === 'last' ? heading.year + 1 : heading.year;
-      return NO_ROW_OF_DATA;
-    }
-    if (named) return NO_ROW_OF_DATA;
+    const dated = this.calendar.headings && this.turnToYear(text);
+    if (dated || named) return NO_ROW_OF_DATA;
     const shown = textOf(bytes, fields, this.calendar.row) || text.slice(0, 60);
     return `“${shown}” is not a ${mapping.layout === 'month-rows' ? 'month' : 'day of the month'}`;
   }

@@ -1,6 +1,7 @@
 import { readBlocks } from '../file-blocks.ts';
 import { agencyColumns, seriesOf } from '../recognise/agency-columns.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
+import { factsIn, pairOf } from '../recognise/stated-facts.ts';
 import type { TablePlan } from '../recognise/table-plan.ts';
 import type { Rejections } from '../rejections.ts';
 import { decodeText, refuseUnlessUtf8 } from '../text-encoding.ts';
@@ -10,6 +11,8 @@ import { FixedWidthLines } from './fixed-width.ts';
 import { isEmptyRow, NO_ROW_OF_DATA, type RowReader } from './row-reader.ts';
 
 const COMMENT = 35;
+/** Bytes of a line between the rows that are looked at. */
+const MOST_OF_REMARK = 200;
 
 type QuickReader = Required<RowReader>;
 
@@ -104,7 +107,11 @@ export class RowLoop {
       at = splitter.split(bytes, at, end, fields);
       // Set before reading, for a reader that refuses the file.
       const line = ++this.line;
-      if (line < firstLine || fields.lineEnd === fields.lineStart || this.isComment(bytes)) continue;
+      if (line < firstLine || fields.lineEnd === fields.lineStart) continue;
+      if (this.isComment(bytes)) {
+        this.remark(bytes, line);
+        continue;
+      }
       const reason = reader.read(bytes, fields, line);
       if (reason === null || (reason !== NO_ROW_OF_DATA && this.rejects(bytes, reason))) this.rows++;
       if (options.stop?.()) return false;
@@ -144,12 +151,40 @@ export class RowLoop {
     return comment?.every((byte, at) => bytes[lineStart + at] === byte) === true;
   }
 
+  private remark(bytes: Uint8Array, line: number): void {
+    const { fields, reader } = this;
+    const text = decodeText(bytes, fields.lineStart, Math.min(fields.lineEnd, fields.lineStart + MOST_OF_REMARK));
+    reader.comment?.(text, line);
+    this.refuseOtherStation(text, line);
+  }
+
+  /** A line between the rows may be the head of another station's.
+   *  @throws IntakeError when it is, and the rows have no column that would say so themselves */
+  private refuseOtherStation(text: string, line: number): void {
+    const { plan } = this;
+    const { codesAbove = [], places, wide } = plan;
+    if (codesAbove.length === 0 || places.station >= 0 || wide !== null) return;
+    const pair = pairOf(text, plan.mapping.delimiter ?? null);
+    const code = pair === null ? undefined : factsIn([pair]).code;
+    if (code === undefined || codesAbove.includes(code)) return;
+    throw new IntakeError({
+      file: plan.file,
+      row: line,
+      value: code,
+      message: `from this line on the file is of another station than ${codesAbove[0]}`,
+      remedy: 'Split the file by station, or give it a column that names the station',
+      needs: 'station',
+    });
+  }
+
   /** Rejects the row just split, unless it is no row at all.
    *  @returns whether it counts as a row */
   private rejects(bytes: Uint8Array, reason: string): boolean {
     const { fields, plan } = this;
     if (isEmptyRow(fields)) return false;
     if (plan.repeatsHeader ? this.isHeading(bytes) : this.isHeaderAgain(bytes)) return false;
+    const start = fields.lineStart;
+    this.refuseOtherStation(decodeText(bytes, start, Math.min(fields.lineEnd, start + MOST_OF_REMARK)), this.line);
     this.options.rejections?.add(bytes, fields.lineStart, fields.lineEnd, this.line, reason);
     return true;
   }

@@ -16,6 +16,8 @@ export const NO_ROW_OF_DATA = '';
 export interface RowReader {
   /** @returns null when the row was taken (or does not count), else why it was not; NO_ROW_OF_DATA for a line that is none */
   read(bytes: Uint8Array, fields: Fields, line: number): string | null;
+  /** Looks at a comment line between the rows. */
+  comment?(text: string, line: number): void;
   /** The quick way, where a table has one: takes the line that starts at `from` without splitting it.
    *  @returns first byte of the next line; −1 when the line must be split and read */
   readPlain?(bytes: Uint8Array, from: number, limit: number, line: number): number;

@@ -222,6 +222,13 @@ describe('a row a day', () => {
     expect(Object.keys(days)).toHaveLength(731);
   });
 
+  test('readFlows turns to the year of a comment line between blocks', async () => {
+    const blocks = [1999, 2000].map((year) => `# Year ${year}\n${csv([header, ...yearOfDays(year)])}`);
+    const { report, days } = await read(blocks.join('\n'), { unit: 'm3/s' });
+    expect(report).toMatchObject({ rows: 62, accepted: 62 });
+    expect(Object.keys(days)).toHaveLength(731);
+  });
+
   test('readFlows asks for the year where nothing says it, and reads with the one that is given', async () => {
     const text = csv([header, ...yearOfDays(1987)]);
     const error = await refusal(text, { unit: 'm3/s' });

@@ -273,6 +273,27 @@ describe('the station that a block names', () => {
     expect(named.report.mapping.station).toEqual({ from: 'lines-above' });
   });
 
+  test('must be the only one: a later head of another station refuses the file, wherever it stands', async () => {
+    const many = dates('1990-01-01', 9000).map((date) => `${date};1`);
+    const block = (code: string, rows: string[]) => [`# Station number: ${code}`, '# Office-No.: 7', ...rows];
+    const later = block('13', ['2016-01-01;2', '2016-01-02;3']);
+    const error = await refusal([...block('12', ['date;flow_m3s', ...many]), ...later].join('\n'));
+    expect(error.problem).toMatchObject({ row: 9004, value: '13', needs: 'station' });
+    const bare = await refusal(
+      [...block('12', ['date;flow_m3s', ...many]), 'Station number: 14', '2016-01-01;2'].join('\n'),
+    );
+    expect(bare.problem).toMatchObject({ row: 9004, value: '14', needs: 'station' });
+    const same = await read([...block('12', ['date;flow_m3s', ...many]), ...block('12', ['2016-01-01;2'])].join('\n'));
+    expect(same.report).toMatchObject({ rows: 9001, accepted: 9001 });
+    expect(same.parts[0].code).toBe('12');
+  });
+
+  test('stands above the data: a comment behind them is no header, and names no station', async () => {
+    const { report, parts } = await read('#date;flow_m3s\n2001-01-01;1\n2001-01-02;2\n# Station number: 99\n');
+    expect(report).toMatchObject({ rows: 2, accepted: 2 });
+    expect(parts[0].code).toBe('gauge');
+  });
+
   test('is asked for where a mapping promises it and the lines do not name it', async () => {
     const error = await refusal('date,flow_m3s\n2001-01-01,1\n', { mapping: { station: { from: 'lines-above' } } });
     expect(error.problem).toMatchObject({ needs: 'station' });
