@@ -48,7 +48,7 @@ export function readRegistryRow(
   const text = (column: number) => (column < 0 ? '' : (fields[column] ?? '').trim());
   const code = text(columns.code);
   if (code === '') return { value: '', reason: 'the row has no station code', remedy: 'Give every station a code' };
-  const position = positionOf(code, { latitude: text(columns.latitude), longitude: text(columns.longitude) }, format);
+  const position = positionOf(code, { latitude: text(columns.latitude), longitude: text(columns.longitude) });
   if (isProblem(position)) return position;
   const areaKm2 = areaOf(text(columns.areaKm2), text(columns.areaUnit), format);
   if (isProblem(areaKm2)) return areaKm2;
@@ -66,10 +66,10 @@ export function readRegistryRow(
 function positionOf(
   code: string,
   texts: { latitude: string; longitude: string },
-  { comma }: RowFormat,
 ): Fact<Pick<RegistryStation, 'latitude' | 'longitude'>> {
+  // Degrees are not counted in thousands: a comma without a point is the decimal sign.
   const read = (axis: 'latitude' | 'longitude') =>
-    isNothing(texts[axis]) ? null : parseDegrees(texts[axis], axis, comma === 'decimal');
+    isNothing(texts[axis]) ? null : parseDegrees(texts[axis], axis, !texts[axis].includes('.'));
   const [latitude, longitude] = [read('latitude'), read('longitude')];
   if (Number.isNaN(latitude)) return outside('latitude', texts.latitude);
   if (Number.isNaN(longitude)) return outside('longitude', texts.longitude);
