@@ -95,6 +95,6 @@ test('completeness is the basis’s: fewer years asked for, more periods to choo
 test('the list of the best periods needs no chart', async () => {
   const page = await periodsPage();
   const [, second] = periodsByWorth(periods);
-  await page.getByRole('button', { name: `Use ${second.first}–${second.last}` }).click();
+  await page.getByRole('button', { name: `Use it: ${second.first}–${second.last}` }).click();
   await expect.poll(() => new URL(page.url()).searchParams.get('period')).toBe(`${second.first}-${second.last}`);
 });

@@ -125,9 +125,9 @@ test('sorting by area puts the largest catchment first, the other way round the 
 test('a search leaves the stations that answer it, and says so when none does', async () => {
   const page = await chartPage();
   const [{ name }] = records.stations;
-  await page.getByLabel('Find').fill(name.toUpperCase());
+  await page.getByRole('searchbox', { name: 'Find' }).fill(name.toUpperCase());
   await page.getByText(new RegExp(`^1 of ${records.stations.length} stations$`)).waitFor();
-  await page.getByLabel('Find').fill('nowhere at all');
+  await page.getByRole('searchbox', { name: 'Find' }).fill('nowhere at all');
   await page.getByRole('heading', { name: 'No station answers the search' }).waitFor();
   await page.getByRole('button', { name: 'Show all stations' }).click();
   await chart(page).waitFor();
@@ -137,11 +137,11 @@ test('the table holds what the chart holds: a row a station, and the years of on
   const page = await chartPage('?sort=code');
   await page.getByText(/^As a table/).click();
   const table = page.getByRole('region', { name: 'Records by station' });
-  expect(await table.getByRole('row').count()).toBe(Math.min(100, records.stations.length) + 1);
+  await expect.poll(() => table.getByRole('row').count()).toBe(Math.min(100, records.stations.length) + 1);
   const station = records.stations.find(({ firstYear }) => firstYear !== null)!;
   await table.getByRole('button', { name: station.name, exact: true }).click();
   const years = page.getByRole('region', { name: `Years of ${station.name}` });
-  expect(await years.getByRole('row').count()).toBe(station.values.length + 1);
+  await expect.poll(() => years.getByRole('row').count()).toBe(station.values.length + 1);
   await years.getByRole('link').nth(2).click();
   await page.getByRole('heading', { level: 2, name: new RegExp(`^${literally(station.name)}, `) }).waitFor();
 });
@@ -151,7 +151,7 @@ test('an open year has its days as a table and as a file, steps to the next year
   const page = await chartPage(`?station=${code}&year=${year}`);
   await page.getByText('Days as a table').click();
   const table = page.getByRole('region', { name: /^Days of/ });
-  expect(await table.getByRole('row').count()).toBeGreaterThan(365);
+  await expect.poll(() => table.getByRole('row').count()).toBeGreaterThan(365);
   const download = page.waitForEvent('download');
   await page.getByRole('link', { name: 'Days CSV' }).click();
   let text = '';

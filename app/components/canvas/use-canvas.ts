@@ -1,11 +1,10 @@
 'use client';
 import { type RefObject, useEffect, useRef } from 'react';
-import { onThemeChange } from './tokens.ts';
 
 /** Draws in CSS pixels on a cleared canvas. */
 export type Draw = (context: CanvasRenderingContext2D, width: number, height: number) => void;
 
-/** A canvas that is as sharp as the screen, drawn anew when `draw`, its size, the theme or the screen's density changes.
+/** A canvas that is as sharp as the screen, drawn anew when `draw`, its size or the screen's density changes.
  *  @param draw  keep it between renderings (useCallback): a new one draws anew
  *  @returns     the canvas's ref, and a function that draws before the next frame, however often it is called */
 export function useCanvas(
@@ -27,11 +26,9 @@ export function useCanvas(
     redraw();
   }, [width, height, draw, redraw]);
   useEffect(() => {
-    const stopTheme = onThemeChange(redraw);
     const stopDensity = onDensityChange(redraw);
     void document.fonts.ready.then(redraw);
     return () => {
-      stopTheme();
       stopDensity();
       cancelAnimationFrame(frame.current);
       frame.current = 0;

@@ -1,8 +1,7 @@
 'use client';
 import { useCallback } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
-import { readChartPalette } from './chart-palette.ts';
-import { cellLook, drawCell } from './draw-cell.ts';
+import { drawCell, useCellLook } from './draw-cell.ts';
 import type { YearCell } from './year-cell.ts';
 import styles from './year-chart.module.css';
 
@@ -47,12 +46,12 @@ const WIDTH = 14;
 const HEIGHT = 17;
 
 function Swatch({ cell }: { cell: YearCell }) {
+  const lookOf = useCellLook();
   const draw = useCallback(
     (context: CanvasRenderingContext2D) => {
-      const look = cellLook(context, readChartPalette(), context.getTransform().a);
-      drawCell(context, cell, { x: 0, y: 0, width: WIDTH, height: HEIGHT }, look);
+      if (lookOf) drawCell(context, cell, { x: 0, y: 0, width: WIDTH, height: HEIGHT }, lookOf(context));
     },
-    [cell],
+    [cell, lookOf],
   );
   const { canvas } = useCanvas(WIDTH, HEIGHT, draw);
   return <canvas ref={canvas} style={{ inlineSize: WIDTH, blockSize: HEIGHT }} />;

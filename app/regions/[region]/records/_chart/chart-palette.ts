@@ -1,4 +1,6 @@
-import { readTokens } from '@/app/components/canvas/tokens';
+'use client';
+import { useEffect, useState } from 'react';
+import { onThemeChange, readTokens } from '@/app/components/canvas/tokens';
 
 const TOKENS = {
   paper: '--paper',
@@ -15,6 +17,16 @@ const TOKENS = {
 } as const;
 
 export type ChartPalette = Record<keyof typeof TOKENS, string>;
-export const readChartPalette = (): ChartPalette => readTokens(TOKENS);
+
+/** The colours of the theme that is shown, read anew when it changes; null before the page is there. */
+export function useChartPalette(): ChartPalette | null {
+  const [palette, setPalette] = useState<ChartPalette | null>(null);
+  useEffect(() => {
+    const read = () => setPalette(readTokens(TOKENS));
+    read();
+    return onThemeChange(read);
+  }, []);
+  return palette;
+}
 
 export const CHART_FONT = '"Inter Variable", system-ui, sans-serif';

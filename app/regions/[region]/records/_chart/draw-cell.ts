@@ -1,4 +1,5 @@
-import type { ChartPalette } from './chart-palette.ts';
+import { useMemo } from 'react';
+import { type ChartPalette, useChartPalette } from './chart-palette.ts';
 import type { YearCell } from './year-cell.ts';
 
 export interface Box {
@@ -40,9 +41,8 @@ export interface CellLook {
   hatch: CanvasPattern | string;
 }
 
-/** @param context  of the canvas that will be drawn on
- *  @param ratio    device pixels per CSS pixel: a pattern is not scaled with the canvas' own unit */
-export function cellLook(context: CanvasRenderingContext2D, palette: ChartPalette, ratio: number): CellLook {
+/** @param ratio  device pixels per CSS pixel: a pattern is not scaled with the canvas' own unit */
+function cellLook(palette: ChartPalette, ratio: number): CellLook {
   const size = Math.max(4, Math.round(4 * ratio));
   const tile = document.createElement('canvas');
   tile.width = size;
@@ -60,9 +60,24 @@ export function cellLook(context: CanvasRenderingContext2D, palette: ChartPalett
     pen.lineTo(shift + size, 0);
     pen.stroke();
   }
-  const hatch = context.createPattern(tile, 'repeat');
+  const hatch = pen.createPattern(tile, 'repeat');
   hatch?.setTransform(new DOMMatrix().scale(1 / ratio));
   return { palette, hatch: hatch ?? palette.paper };
+}
+
+/** The look in the theme that is shown, made once for each density of the screen; null before the page is there. */
+export function useCellLook(): ((context: CanvasRenderingContext2D) => CellLook) | null {
+  const palette = useChartPalette();
+  return useMemo(() => {
+    if (!palette) return null;
+    const made = new Map<number, CellLook>();
+    return (context) => {
+      const ratio = context.getTransform().a;
+      const look = made.get(ratio) ?? cellLook(palette, ratio);
+      made.set(ratio, look);
+      return look;
+    };
+  }, [palette]);
 }
 
 /** A triangle in the upper right corner, rimmed with paper so that it stands off from a full cell. */

@@ -12,6 +12,8 @@ export interface ChartPicture {
   rows: readonly Sorted[];
   /** second words of a row's label: the figure by which the rows are sorted */
   figures: readonly string[];
+  /** each row's name as it was cut to a width, kept between pictures */
+  names: { text: string; width: number }[];
   cursor: CellPlace | null;
   /** the year whose panel is open */
   open: CellPlace | null;
@@ -111,7 +113,7 @@ function drawOutline(
 
 function drawLabel(
   context: CanvasRenderingContext2D,
-  { layout, rows, figures, scroll }: ChartPicture,
+  { layout, rows, figures, names, scroll }: ChartPicture,
   { palette }: CellLook,
   row: number,
 ) {
@@ -130,7 +132,8 @@ function drawLabel(
   context.font = `500 12.5px ${CHART_FONT}`;
   context.fillStyle = palette.ink;
   context.textAlign = 'left';
-  context.fillText(shortened(context, rows[row].station.name, room), 4, y);
+  if (names[row].width !== room) names[row] = { text: shortened(context, rows[row].station.name, room), width: room };
+  context.fillText(names[row].text, 4, y);
 }
 
 /** Text cut to fit, its end as an ellipsis. */

@@ -21,13 +21,21 @@ export function yearCell(records: RegionRecords, station: StationYears, year: nu
   const at = station.firstYear === null ? -1 : year - station.firstYear;
   if (at < 0 || at >= station.values.length) return null;
   const values = station.values[at];
-  const flagged = Object.fromEntries(COUNTED_FLAGS.map((flag) => [flag, station.flagged[flag]?.[at] ?? 0]));
+  const days = (flag: CountedFlag) => station.flagged[flag]?.[at] ?? 0;
   return {
     year,
     days: records.yearDays[year - (records.firstYear ?? year)] ?? 365,
     values,
     missing: station.missing[at],
-    flagged: flagged as Record<CountedFlag, number>,
+    // written out: thousands of cells are looked at for every picture
+    flagged: {
+      provisional: days('provisional'),
+      estimated: days('estimated'),
+      ice: days('ice'),
+      belowDetection: days('belowDetection'),
+      suspect: days('suspect'),
+      rejected: days('rejected'),
+    },
     state: station.usable[at] === 1 ? 'counts' : values > 0 ? 'partly' : 'none',
     reason: records.reasons[station.reason[at]] ?? '',
   };

@@ -14,8 +14,7 @@ import type { Units } from '@/app/components/format';
 import type { RegionRecords } from '@/lib/jobs/records-types';
 import { type CellPlace, cellAfterKey, hitCell, layOutChart, scrollToCell } from './chart-layout.ts';
 import { ChartLegend } from './chart-legend.tsx';
-import { readChartPalette } from './chart-palette.ts';
-import { cellLook } from './draw-cell.ts';
+import { useCellLook } from './draw-cell.ts';
 import { drawChart } from './draw-chart.ts';
 import { sortFigure } from './sort-figure.ts';
 import type { Sort, Sorted } from './sort-stations.ts';
@@ -48,6 +47,9 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
     [size.width, rows.length, first, last],
   );
   const figures = useMemo(() => rows.map((row) => sortFigure(row, sort, units)), [rows, sort, units]);
+  // how each row's name was cut to fit, for as long as rows and room stay
+  const names = useMemo(() => figures.map(() => ({ text: '', width: -1 })), [figures]);
+  const lookOf = useCellLook();
   const rowOf = useMemo(() => new Map(rows.map(({ station }, row) => [station.code, row])), [rows]);
   const openRow = open.station === null ? -1 : (rowOf.get(open.station) ?? -1);
   const cursorRow = pointed === null ? undefined : rowOf.get(pointed.code);
@@ -70,12 +72,12 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
 
   const draw = useCallback(
     (context: CanvasRenderingContext2D, width: number, height: number) => {
-      const look = cellLook(context, readChartPalette(), context.getTransform().a);
+      if (!lookOf) return;
       const opened = openRow >= 0 && open.year !== null ? { row: openRow, year: open.year } : null;
-      const picture = { layout, records, rows, figures, cursor, open: opened, scroll: scroll.current };
-      drawChart(context, picture, look, width, height);
+      const picture = { layout, records, rows, figures, names, cursor, open: opened, scroll: scroll.current };
+      drawChart(context, picture, lookOf(context), width, height);
     },
-    [layout, records, rows, figures, cursor, openRow, open.year],
+    [lookOf, layout, records, rows, figures, names, cursor, openRow, open.year],
   );
   const { canvas, redraw } = useCanvas(size.width, size.height, draw);
 

@@ -26,7 +26,7 @@ export function CheckAgain({ slug, onChanged }: { slug: string; onChanged(): voi
   const start = async () => {
     setProblem(null);
     try {
-      const started = await send<{ id: string }>('POST', `/api/regions/${encodeURIComponent(slug)}/checks`);
+      const started = await send<{ id: string }>('POST', `/api/regions/${encodeURIComponent(slug)}/checks`, {});
       setId(started?.id ?? null);
     } catch (error) {
       if (!(error instanceof AnswerError)) throw error;

@@ -3,7 +3,7 @@ import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
 import { isoDate, parseIsoDate } from '@/lib/calendar/day';
 import type { FindingRow } from '@/lib/jobs/records-types';
-import { type ChartPalette, readChartPalette } from '../_chart/chart-palette.ts';
+import { type ChartPalette, useChartPalette } from '../_chart/chart-palette.ts';
 import { type DayColumns, type DaysAnswer, dayColumns } from '../_year/days-answer.ts';
 import { type FlowAxis, flowAxis } from '../_year/flow-axis.ts';
 import { useAnswer } from '../use-answer.ts';
@@ -28,10 +28,13 @@ export function FindingSketch({ slug, finding, version }: Props) {
   const { value, problem } = useAnswer<DaysAnswer>(seen ? address : null, version);
   const columns = useMemo(() => dayColumns(value, from, to), [value, from, to]);
   const axis = useMemo(() => flowAxis(columns.values, 'log', HEIGHT - 8), [columns]);
+  const palette = useChartPalette();
   const draw = useCallback(
-    (context: CanvasRenderingContext2D) =>
-      drawSketch(context, { columns, axis, stretch: [parseIsoDate(first), parseIsoDate(last)] }, readChartPalette()),
-    [columns, axis, first, last],
+    (context: CanvasRenderingContext2D) => {
+      const stretch: [number, number] = [parseIsoDate(first), parseIsoDate(last)];
+      if (palette) drawSketch(context, { columns, axis, stretch }, palette);
+    },
+    [palette, columns, axis, first, last],
   );
   const { canvas } = useCanvas(WIDTH, HEIGHT, draw);
   return (

@@ -4,7 +4,7 @@ import { useCanvas } from '@/app/components/canvas/use-canvas';
 import { range } from '@/app/components/format';
 import { useWidth } from '@/app/components/use-width';
 import type { CommonPeriods } from '@/lib/jobs/records-types';
-import { readChartPalette } from '../_chart/chart-palette.ts';
+import { useChartPalette } from '../_chart/chart-palette.ts';
 import { drawPeriods, TONES } from './draw-periods.ts';
 import { hitPeriod, layOutPeriods, periodAfterKey, periodCount, toneSteps } from './period-grid.ts';
 import { kept } from './period-words.ts';
@@ -26,13 +26,14 @@ export function PeriodFigure({ periods, current, onUse }: Props) {
   const layout = useMemo(() => layOutPeriods(periods, width), [periods, width]);
   const most = useMemo(() => periods.ranked.reduce((most, stations) => Math.max(most, stations), 0), [periods]);
   const steps = useMemo(() => toneSteps(most), [most]);
+  const palette = useChartPalette();
   const draw = useCallback(
     (context: CanvasRenderingContext2D) => {
-      if (!layout) return;
+      if (!layout || !palette) return;
       const { common } = periods;
-      drawPeriods(context, { layout, periods, steps, cursor, current, common }, readChartPalette());
+      drawPeriods(context, { layout, periods, steps, cursor, current, common }, palette);
     },
-    [layout, periods, steps, cursor, current],
+    [palette, layout, periods, steps, cursor, current],
   );
   const { canvas } = useCanvas(layout?.width ?? 1, layout?.height ?? 1, draw);
   if (!layout) return null;

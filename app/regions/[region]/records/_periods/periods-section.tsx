@@ -95,7 +95,7 @@ export function PeriodsSection({ slug, basis, own }: Props) {
                     <button
                       type="button"
                       className={ui.plain}
-                      aria-label={`Use ${range(period.first, period.last)}`}
+                      aria-label={`Use it: ${range(period.first, period.last)}`}
                       onClick={() => use(period.first, period.last)}
                     >
                       Use it

@@ -4,7 +4,7 @@ import { useCanvas } from '@/app/components/canvas/use-canvas';
 import type { MarkedChange } from '@/app/components/change-marks/marked-changes';
 import { useWidth } from '@/app/components/use-width';
 import { isoDate } from '@/lib/calendar/day';
-import { readChartPalette } from '../_chart/chart-palette.ts';
+import { useChartPalette } from '../_chart/chart-palette.ts';
 import { dayAt, layOutDays } from './day-layout.ts';
 import { type DayColumns, dayWords } from './days-answer.ts';
 import { drawDays, type Lane } from './draw-days.ts';
@@ -39,10 +39,12 @@ export function DayFigure({ label, columns, lanes, changes, season, kind, flowTe
   const days = values.length;
   const layout = useMemo(() => layOutDays(width, first, days, lanes.length), [width, first, days, lanes.length]);
   const axis = useMemo(() => flowAxis(values, kind, layout.floor - layout.top), [values, kind, layout]);
+  const palette = useChartPalette();
   const draw = useCallback(
-    (context: CanvasRenderingContext2D) =>
-      drawDays(context, { layout, columns, axis, lanes, changes, season, cursor, selection }, readChartPalette()),
-    [layout, columns, axis, lanes, changes, season, cursor, selection],
+    (context: CanvasRenderingContext2D) => {
+      if (palette) drawDays(context, { layout, columns, axis, lanes, changes, season, cursor, selection }, palette);
+    },
+    [palette, layout, columns, axis, lanes, changes, season, cursor, selection],
   );
   const { canvas } = useCanvas(width, layout.height, draw);
 

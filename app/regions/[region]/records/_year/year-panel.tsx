@@ -87,12 +87,13 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
 
   // Escape closes the panel from wherever in it the focus is
   useEffect(() => {
-    const element = panel.current;
-    const onKey = (event: globalThis.KeyboardEvent) => {
-      if (event.key === 'Escape') onClose();
+    const onKey = (event: KeyboardEvent) => {
+      // the figure takes the first one for its own selection
+      if (event.key !== 'Escape' || event.defaultPrevented) return;
+      if (event.target instanceof Node && panel.current?.contains(event.target)) onClose();
     };
-    element?.addEventListener('keydown', onKey);
-    return () => element?.removeEventListener('keydown', onKey);
+    document.addEventListener('keydown', onKey);
+    return () => document.removeEventListener('keydown', onKey);
   }, [onClose]);
 
   const choose = (from: string, to: string) => setDates({ year, first: from, last: to });
@@ -191,7 +192,7 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
                   type="button"
                   className={ui.plain}
                   onClick={() => choose(finding.first, finding.last)}
-                  aria-label={`Choose the days of ${KIND_WORDS[finding.kind]}, ${finding.first} to ${finding.last}`}
+                  aria-label={`Choose its days: ${KIND_WORDS[finding.kind]}, ${finding.first} to ${finding.last}`}
                 >
                   Choose its days
                 </button>
