@@ -20,6 +20,8 @@ beforeAll(() => {
   buildSync({
     entryPoints: [join(import.meta.dirname, 'intake-child.ts')],
     ...{ bundle: true, platform: 'node', format: 'esm', outfile: child, logLevel: 'error' },
+    // Packages that are not modules yet ask for require.
+    banner: { js: "import { createRequire } from 'node:module'; const require = createRequire(import.meta.url);" },
   });
 });
 afterAll(() => rmSync(folder, { recursive: true }));

@@ -51,7 +51,7 @@ type Random = () => number;
 type Mutation = (bytes: Uint8Array, random: Random, other: Uint8Array) => Uint8Array;
 
 const at = (random: Random, length: number): number => Math.floor(random() * Math.max(1, length));
-const join = (...pieces: Uint8Array[]): Uint8Array => Buffer.concat(pieces);
+const join = (...pieces: Uint8Array[]): Uint8Array => Uint8Array.from(Buffer.concat(pieces));
 /** A stretch, mostly short. */
 function stretch(random: Random, length: number): [number, number] {
   const start = at(random, length);
@@ -109,7 +109,8 @@ const MUTATIONS: readonly Mutation[] = [
  *  @param other  a second file, to be spliced in */
 export function mutate(bytes: Uint8Array, seed: number, other: Uint8Array): Uint8Array {
   const random = seeded(seed);
-  let out = bytes;
+  // A copy: slice() of a Buffer would share its memory.
+  let out = Uint8Array.from(bytes);
   const times = 1 + at(random, 4);
   for (let i = 0; i < times; i++) out = MUTATIONS[at(random, MUTATIONS.length)](out, random, other);
   return out;
