@@ -14,7 +14,7 @@ import {
   type Unit,
 } from '../types.ts';
 import { DayCodes, type PointCode } from './day-codes.ts';
-import type { SeriesHead } from './series-head.ts';
+import { labelOf, type SeriesHead, unitOfHead } from './series-head.ts';
 import { stepProblem, unitsDiffer } from './series-problems.ts';
 import { SeriesRecord } from './series-record.ts';
 import { type StampMeaning, TimeStamp } from './time-stamp.ts';
@@ -107,6 +107,10 @@ export class SeriesSink {
     const { fileName } = this.options;
     const unitProblem = this.wanted.unitProblem(fileName, head, this.current);
     if (unitProblem) this.refuse(unitProblem);
+    const own = unitOfHead(head, quantity);
+    if (own !== null && own !== this.current.unit) {
+      this.warn(`“${labelOf(head)}” says ${own}; its values were read as ${this.current.unit}, as given.`);
+    }
     if (head.stepDays !== null && head.stepDays > 1.5) this.refuse(stepProblem(fileName, head));
     this.station = this.stationOf(head);
     const unit = this.current.unit as Unit;

@@ -19,7 +19,8 @@ export interface Wanted {
 export class WantedSeries {
   /** series with points of quantities that were not asked for, by their words */
   readonly others = new Map<string, AlsoCandidate>();
-  private readonly asked: { quantity: Quantity; unit?: Unit; series?: string; main: boolean }[];
+  /** `said`: a person named the quantity, so that a series without a property may be taken for it by its unit */
+  private readonly asked: { quantity: Quantity; unit?: Unit; series?: string; main: boolean; said: boolean }[];
 
   constructor({ mapping, unit }: InspectOptions) {
     const seriesOf = (where: { column: number | string; equals: string } | undefined) =>
@@ -30,8 +31,9 @@ export class WantedSeries {
         unit: mapping?.unit ?? unit,
         series: seriesOf(mapping?.where),
         main: true,
+        said: mapping?.quantity !== undefined,
       },
-      ...(mapping?.also ?? []).map((also) => ({ ...also, series: seriesOf(also.where), main: false })),
+      ...(mapping?.also ?? []).map((also) => ({ ...also, series: seriesOf(also.where), main: false, said: true })),
     ];
   }
 
@@ -45,8 +47,10 @@ export class WantedSeries {
   choose(head: SeriesHead): Wanted | null {
     const label = labelOf(head);
     const quantity = quantityOf(head);
-    for (const { quantity: wanted, unit, series, main } of this.asked) {
-      const fits = series === undefined ? quantity === wanted && isDayValue(head, wanted) : series === label;
+    const unnamed = head.property === '' && head.propertyCode === '';
+    for (const { quantity: wanted, unit, series, main, said } of this.asked) {
+      const isOf = quantity === wanted || (said && unnamed && unitOfHead(head, wanted) !== null);
+      const fits = series === undefined ? isOf && isDayValue(head, wanted) : series === label;
       if (fits) return { quantity: wanted, unit: unit ?? unitOfHead(head, wanted), main };
     }
     this.offer(label, quantity, head);

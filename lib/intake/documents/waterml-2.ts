@@ -211,7 +211,8 @@ class Waterml2 implements ElementHandler {
       property: this.property.title,
       propertyCode: lastPart(this.property.href),
       statistic: statisticNamed(statistic),
-      statisticText: statistic,
+      // Of “MinPrec Minimum in preceding interval” the words say more.
+      statisticText: statistic.replace(/^(?:max|min)\w*\s+(?=\S)/i, ''),
       unitText: making.unit || this.making.unit,
       meaning: meaningOf(interpolation),
       stepDays:

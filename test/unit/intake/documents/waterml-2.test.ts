@@ -246,6 +246,23 @@ describe('units and quantities', () => {
     expect(problem.problem.value).toBe(property);
   });
 
+  test('a series without a property is of the quantity that a person names, where its unit can be', async () => {
+    const text = documentOf(
+      `<wml2:MeasurementTimeseries><wml2:defaultPointMetadata><wml2:DefaultTVPMeasurementMetadata><wml2:uom code="m"/></wml2:DefaultTVPMeasurementMetadata></wml2:defaultPointMetadata>${daily(['2', '3']).join('')}</wml2:MeasurementTimeseries>`,
+    );
+    expect((await refusal(text)).problem.value).toBe('series in m');
+    const { parts } = await read(text, { fileName: '0306.xml', mapping: { quantity: 'stage' } });
+    expect(parts.map(({ code, quantity, unit }) => [code, quantity, unit])).toEqual([['0306', 'stage', 'm']]);
+  });
+
+  test('a unit that was given goes before the document’s own, with a warning', async () => {
+    const { parts, report } = await read(collection({ points: daily(['1']) }), { unit: 'L/s' });
+    expect([parts[0].unit, report.warnings]).toEqual([
+      'L/s',
+      ['“Discharge” says m3/s; its values were read as L/s, as given.'],
+    ]);
+  });
+
   test('largest values of each day are no means, and are only offered', async () => {
     const text = collection({ interpolation: 'MaxPrec', points: daily(['1']) });
     expect((await refusal(text)).problem.needs).toBe('quantity');
@@ -290,6 +307,16 @@ describe('stations', () => {
     const { report } = await read(collection({ position, points: daily(['1']) }));
     expect(report.facts).toEqual([{ code: '0306', latitude: -41.8, longitude: 147.5 }]);
     expect(report.warnings.join()).toMatch(/other way round/);
+  });
+
+  test('an observation may refer to a station described elsewhere in the document', async () => {
+    const station = `<wml2:samplingFeatureMember><wml2:MonitoringPoint gml:id="mp1"><gml:identifier codeSpace="">G-17</gml:identifier><gml:name>Bridge</gml:name><sa:parameter><om:NamedValue><om:name xlink:title="Catchment area"/><om:value xsi:type="gml:MeasureType" uom="ha">250</om:value></om:NamedValue></sa:parameter></wml2:MonitoringPoint></wml2:samplingFeatureMember>`;
+    const text = collection({ points: daily(['1']) })
+      .replace(/<om:featureOfInterest>.*<\/om:featureOfInterest>/s, '<om:featureOfInterest xlink:href="#mp1"/>')
+      .replace('<wml2:observationMember>', `${station}<wml2:observationMember>`);
+    const { parts, report } = await read(text);
+    expect(parts[0].code).toBe('G-17');
+    expect(report.facts).toEqual([{ code: 'G-17', name: 'Bridge', areaKm2: 2.5 }]);
   });
 
   test('the registry is asked by code, then by name', async () => {
