@@ -22,3 +22,27 @@ test.each([
 ])('recogniseKind takes %s for what it is', (_what, text, expected) => {
   expect(kind(text)).toBe(expected);
 });
+
+test.each([
+  ['WaterML 2.0', '<?xml version="1.0"?><wml2:Collection xmlns:wml2="http://www.opengis.net/waterml/2.0"/>', 'flows'],
+  ['WaterML 1.1', '<ns1:timeSeriesResponse xmlns:ns1="http://www.cuahsi.org/waterML/1.1/"/>', 'flows'],
+  ['WaterML 1.1 as JSON', '{"name":"ns1:timeSeriesResponseType","value":{"timeSeries":[]}}', 'flows'],
+  [
+    'GeoJSON of points',
+    '{"type":"FeatureCollection","features":[{"type":"Feature","properties":{"code":"A"},"geometry":{"type":"Point","coordinates":[1,2]}}]}',
+    'registry',
+  ],
+  [
+    'GeoJSON of points and lines',
+    '{"type":"FeatureCollection","features":[{"type":"Feature","geometry":{"type":"Point","coordinates":[1,2]}},{"type":"Feature","geometry":{"type":"LineString","coordinates":[[1,2],[3,4]]}}]}',
+    'layer',
+  ],
+  ['GeoJSON of areas', '{"type":"Feature","geometry":{"type":"MultiPolygon","coordinates":[]}}', 'layer'],
+  [
+    'a list of stations under a title',
+    'Stations of the Ribble,,\ncode,name,area km2\nA1,Mill,12\nB2,Weir,34\n',
+    'registry',
+  ],
+])('recogniseKind tells %s by what it holds', (_what, text, expected) => {
+  expect(kind(text)).toBe(expected);
+});
