@@ -17,18 +17,24 @@ import type { UploadView } from './upload-types.ts';
 /** Files that are looked at before an upload is answered; the screen asks for the others, some at a time. */
 const LOOKED_AT_ONCE = 40;
 
-/** Opens a session for files that lie in its folder, or adds them to the one that is open. Archives are unpacked. */
+/** Opens a session for files that lie in its folder, or adds them to the one that is open. Archives are unpacked.
+ *  @param fresh  whether the session is a new one
+ *  @returns false when the one to add to was given up meanwhile */
 export async function takeUpload(
-  { id, regionId }: Pick<UploadSession, 'id' | 'regionId'>,
+  { id, regionId, fresh }: Pick<UploadSession, 'id' | 'regionId'> & { fresh: boolean },
   given: readonly GivenFile[],
-): Promise<void> {
+): Promise<boolean> {
   const { files, broken } = await unpackUpload(given, newSessionFolder(id).folder);
   const first = await inTurn(id, async () => {
-    const session = await withFiles((await readSession(id)) ?? emptySession(id, regionId), files, broken);
+    const open = fresh ? emptySession(id, regionId) : await readSession(id);
+    if (!open) return null;
+    const session = await withFiles(open, files, broken);
     await writeSession(session);
     return session.seen.filter(({ state }) => state === 'unseen').slice(0, LOOKED_AT_ONCE);
   });
+  if (first === null) return false;
   if (first.length > 0) await lookAtUpload(id, Object.fromEntries(first.map(({ file, choices }) => [file, choices])));
+  return true;
 }
 
 const emptySession = (id: string, regionId: number | null): UploadSession => ({

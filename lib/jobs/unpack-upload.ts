@@ -1,3 +1,4 @@
+import { rm } from 'node:fs/promises';
 import { expandArchives } from '../intake/archive/index.ts';
 import { IntakeError } from '../intake/types.ts';
 import type { GivenFile } from './import-types.ts';
@@ -18,7 +19,10 @@ export async function unpackUpload(given: readonly GivenFile[], folder: string):
   const broken: UnpackedUpload['broken'] = {};
   for (const file of given) {
     try {
-      files.push(...(await expandArchives([file], folder, { mostBytes: uploadLimit() })).files);
+      const unpacked = (await expandArchives([file], folder, { mostBytes: uploadLimit() })).files;
+      files.push(...unpacked);
+      // What came out of an archive stands in its place, on disk too.
+      if (unpacked.every(({ path }) => path !== file.path)) await rm(file.path, { force: true });
     } catch (error) {
       if (!(error instanceof IntakeError)) throw error;
       files.push(file);

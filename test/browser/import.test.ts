@@ -102,8 +102,7 @@ test('what only reading all of a file shows sends it back to its panel, and noth
   expect(await standing(page, 'flows.csv').textContent()).toContain('ready');
   await start(page);
   await standing(page, 'cannot be read').waitFor();
-  const panel = (await page.getByRole('article', { name: 'flows.csv' }).textContent()) ?? '';
-  expect(panel).toContain('9.5');
+  await expect.poll(() => page.getByRole('article', { name: 'flows.csv' }).textContent()).toContain('9.5');
   expect(await fetchJson(`/api/regions/${slug}/imports`)).toEqual([]);
 });
 

@@ -6,7 +6,7 @@ import { discardAbandonedUploads } from '@/lib/jobs/upload-folder';
 import { discardSession, listSessions, newSessionFolder, type UploadSession } from '@/lib/jobs/upload-session';
 import { jsonAnswer } from './answer';
 import { Problem } from './problem';
-import { present } from './session';
+import { gone, present } from './session';
 import { receiveUpload } from './upload';
 
 /** Uploads that may wait at a time, and files in one: a full disk would hurt more than a refusal. */
@@ -24,7 +24,7 @@ export async function openSession(request: Request, regionId: number | null): Pr
   }
   const { id } = newSessionFolder();
   try {
-    await receiveInto({ id, regionId, files: [] }, request);
+    await receiveInto({ id, regionId, files: [], fresh: true }, request);
   } catch (error) {
     await discardSession(id);
     throw error;
@@ -34,12 +34,12 @@ export async function openSession(request: Request, regionId: number | null): Pr
 
 /** Adds files to an upload that waits. */
 export async function addToSession(request: Request, session: UploadSession): Promise<Response> {
-  await receiveInto(session, request);
+  await receiveInto({ ...session, fresh: false }, request);
   return viewAnswer(session.id, 200);
 }
 
 async function receiveInto(
-  { id, regionId, files: before }: Pick<UploadSession, 'id' | 'regionId' | 'files'>,
+  { id, regionId, files: before, fresh }: Pick<UploadSession, 'id' | 'regionId' | 'files'> & { fresh: boolean },
   request: Request,
 ): Promise<void> {
   const folder = join(newSessionFolder(id).folder, randomUUID());
@@ -48,7 +48,7 @@ async function receiveInto(
     if (before.length + files.length > MOST_FILES) {
       throw new Problem('too-large', `At most ${MOST_FILES} files at once. Import them in parts.`);
     }
-    await takeUpload({ id, regionId }, files);
+    if (!(await takeUpload({ id, regionId, fresh }, files))) throw gone();
   } catch (error) {
     await rm(folder, { recursive: true, force: true });
     throw error;

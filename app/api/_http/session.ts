@@ -5,7 +5,9 @@ import { Problem } from './problem';
 
 export type UploadParams = { upload: string };
 
-const gone = () => new Problem('not-found', 'This upload is no longer here. Choose the files once more.');
+/** For an upload that was imported, given up, or never there. */
+export const gone = (): Problem =>
+  new Problem('not-found', 'This upload is no longer here. Choose the files once more.');
 
 /** The upload that an address names.
  *  @throws Problem 'not-found' */

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import type { FoundFacts } from '@/lib/intake/types';
 import type { FileChoices } from '@/lib/jobs/import-types';
 import type { PreviewProblem } from '@/lib/jobs/upload-types';
+import { QUANTITIES } from '@/lib/series/quantities';
 import { significant } from '../format.ts';
 import { type Asked, CONTROL_WORDS, CONTROLS, type Control, RARE, sortOut } from './asked.ts';
 import { type ChoicesEdit, shownMapping } from './choices-edit.ts';
@@ -17,7 +18,7 @@ import { ProblemNote } from './problem-note.tsx';
 import { RareControls } from './rare-controls.tsx';
 import { SavedMappings } from './saved-mappings.tsx';
 import type { FileSight } from './use-looks.ts';
-import { LAYOUT_WORDS, TEXT_LAYOUTS } from './words.ts';
+import { LAYOUT_WORDS, QUANTITY_WORDS, TEXT_LAYOUTS } from './words.ts';
 
 interface Props {
   sight: FileSight;
@@ -127,6 +128,12 @@ function Unrecognised({ sight, choices, change }: Pick<Props, 'sight' | 'choices
           value={layout}
           options={TEXT_LAYOUTS.map((value) => ({ value, words: LAYOUT_WORDS[value] }))}
           onChange={(value) => change({ mapping: { layout: value ?? undefined } })}
+        />
+        <Choice
+          label="Quantity"
+          value={choices.mapping?.quantity ?? 'flow'}
+          options={QUANTITIES.map((value) => ({ value, words: QUANTITY_WORDS[value] }))}
+          onChange={(quantity) => change({ mapping: { quantity: quantity ?? undefined } })}
         />
       </div>
       {sight.lines.length > 0 && <pre className={styles.lines}>{sight.lines.join('\n')}</pre>}

@@ -59,7 +59,7 @@ export function MainControls(props: ControlProps) {
       <Choice
         label="Quantity"
         asked={asked.quantity}
-        value={quantity}
+        value={asked.quantity && choices.mapping?.quantity === undefined ? null : quantity}
         options={QUANTITIES.map((value) => ({ value, words: QUANTITY_WORDS[value] }))}
         onChange={(value) => {
           const fits = mapping.unit !== null && UNITS_OF[value ?? 'flow'].includes(mapping.unit);

@@ -175,11 +175,12 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
       await client.cancelJob(working.jobId).catch(() => undefined);
     },
     async giveUp() {
-      if (upload) await client.discardUpload(upload.id).catch(() => undefined);
       show(null);
       setRefusals({});
       setLeftOut(new Set());
       setState({ stage: 'choosing', error: null });
+      // what could not be taken away now goes a day later
+      if (upload) await client.discardUpload(upload.id).catch(() => undefined);
     },
     backToFiles: () => setState({ stage: 'mapping', error: null }),
     again: () => setState({ stage: 'choosing', error: null }),

@@ -1,4 +1,5 @@
 import { existsSync, readdirSync } from 'node:fs';
+import { strToU8, zipSync } from 'fflate';
 import { afterAll, beforeEach, expect, test } from 'vitest';
 import { GET as job } from '../../../app/api/jobs/[job]/route.ts';
 import { GET as listed, POST as open } from '../../../app/api/regions/[region]/uploads/route.ts';
@@ -153,4 +154,35 @@ test.each(['../session', 'x', '00000000-0000-4000-8000-000000000000'])('an uploa
 test('an upload that is cut off or holds no file leaves no folder', async () => {
   await problemOf(await send(new FormData()), 400);
   expect(readdirSync(place.folder).filter((name) => name.includes('.upload-'))).toEqual([]);
+});
+
+test('an archive is unpacked in place; one that is damaged says why and leaves the others be', async () => {
+  const zip = zipSync({ 'deep/0001.csv': strToU8(rows('_m3s')) });
+  const body = new FormData();
+  body.append('files', new Blob([zip as Uint8Array<ArrayBuffer>]), 'good.zip');
+  body.append('files', new Blob([zip.slice(0, zip.length - 30) as Uint8Array<ArrayBuffer>]), 'cut.zip');
+  const { id, files }: UploadView = await (await send(body)).json();
+  expect(files.map(({ file, state }) => [file, state])).toEqual([
+    ['0001.csv', 'ready'],
+    ['cut.zip', 'unreadable'],
+  ]);
+  expect(files[1].problem).toContain('cut.zip');
+  const end = await imported(id, { leaveOut: ['cut.zip'] });
+  expect(end.result.taken.map(({ file }: { file: string }) => file)).toEqual(['0001.csv']);
+});
+
+test('files for an upload that was given up meanwhile are refused, and nothing stays', async () => {
+  const { id } = await opened({ 'flows.csv': rows('_m3s') });
+  await call(giveUp, ...at(id), { method: 'DELETE' });
+  await problemOf(await call(add, ...at(id, '/files'), { method: 'POST', body: form({ 'a.csv': rows('_m3s') }) }), 404);
+  expect(readdirSync(place.folder).filter((name) => name.includes('.upload-'))).toEqual([]);
+});
+
+test('a dry run changes nothing and keeps the files', async () => {
+  const { id } = await opened({ 'flows.csv': rows('_m3s') });
+  const { state, result } = await imported(id, { dryRun: true });
+  expect([state, result.dryRun, result.taken[0].revisions.extended]).toEqual(['done', true, 40]);
+  expect(existsSync(uploadFolder(id))).toBe(true);
+  const kept: UploadView = await (await call(view, ...at(id))).json();
+  expect(kept.job).toMatchObject({ state: 'done', dryRun: true });
 });
