@@ -1,12 +1,14 @@
 import { createHash } from 'node:crypto';
 import { mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { basename, join } from 'node:path';
+import { setTimeout as sleep } from 'node:timers/promises';
 import { gzipSync } from 'node:zlib';
 import { strToU8, zipSync } from 'fflate';
 import { afterAll, beforeEach, expect, test } from 'vitest';
 import { waterml } from '../../../lib/export/waterml.ts';
 import { launchImport } from '../../../lib/jobs/import-job.ts';
 import type { ImportOutcome } from '../../../lib/jobs/import-types.ts';
+import { CancelledError, cancelJob } from '../../../lib/jobs/live-jobs.ts';
 import { closePool } from '../../../lib/jobs/pool.ts';
 import { listImports } from '../../../lib/store/imports.ts';
 import { readParts } from '../../../lib/store/parts.ts';
@@ -190,4 +192,22 @@ test('a record written as WaterML and imported elsewhere is the same record', as
   expect(before.map(({ quantity }) => quantity)).toEqual(['flow', 'rainfall']);
   expect(again.name).toBe('Mill');
   expect(readFileSync(path, 'utf8').startsWith('<?xml')).toBe(true);
+});
+
+test('an import that is cancelled while it unpacks leaves nothing behind', async () => {
+  const path = file(
+    'long.csv.gz',
+    gzipSync(`station,date,flow m3/s\n${'A1,2001-01-01,1.5\n'.repeat(3_000_000)}`, { level: 1 }),
+  );
+  const { id, result } = await launchImport({
+    region: { id: region.id },
+    files: [{ path, name: 'long.csv.gz' }],
+    choices: {},
+  });
+  const outcome = expect(result).rejects.toBeInstanceOf(CancelledError);
+  while (!besides().some((name) => name.includes('-unpacked'))) await sleep(2);
+  await cancelJob(id);
+  await outcome;
+  expect(besides()).toEqual([]);
+  expect(await listStations(region.id)).toEqual([]);
 });
