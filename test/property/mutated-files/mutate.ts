@@ -110,7 +110,7 @@ const MUTATIONS: readonly Mutation[] = [
 export function mutate(bytes: Uint8Array, seed: number, other: Uint8Array): Uint8Array {
   const random = seeded(seed);
   // A copy: slice() of a Buffer would share its memory.
-  let out = Uint8Array.from(bytes);
+  let out: Uint8Array = Uint8Array.from(bytes);
   const times = 1 + at(random, 4);
   for (let i = 0; i < times; i++) out = MUTATIONS[at(random, MUTATIONS.length)](out, random, other);
   return out;
