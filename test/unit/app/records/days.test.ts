@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { dayAt, dayX, layOutDays } from '@/app/regions/[region]/records/_year/day-layout';
 import { dayColumns, dayWords, stretchesOf } from '@/app/regions/[region]/records/_year/days-answer';
-import { flowAxis } from '@/app/regions/[region]/records/_year/flow-axis';
+import { flowAxis, tickText } from '@/app/regions/[region]/records/_year/flow-axis';
 import { inYear, lanesOf } from '@/app/regions/[region]/records/_year/year-lanes';
 import { findingOf } from './records-builder.ts';
 
@@ -96,6 +96,12 @@ describe('flowAxis', () => {
       ),
     );
   });
+});
+
+test('tickText writes no digit more than the tick has', () => {
+  expect([0.05, 3, 30, 2000, -0.5, 0, 0.1 + 0.2].map(tickText)).toEqual([
+    ...['0.05', '3', '30', '2,000', '−0.5', '0', '0.3'],
+  ]);
 });
 
 test('lanesOf has a lane for each flag, kind of finding and mark that touches the days, and for no other', () => {

@@ -132,7 +132,7 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
             {cell ? cellWords(cell, records.basis.yearStart) : `${cursor.year}: outside the record`}
           </>
         ) : (
-          'Point at a year, or move with the arrow keys, for its counts; a click or Enter opens it.'
+          'Point at a year, or move with the arrow keys, for its counts; a click, a tap or Enter opens it.'
         )}
       </p>
       <div

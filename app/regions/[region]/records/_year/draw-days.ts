@@ -1,12 +1,12 @@
 import { drawChangeMarks } from '@/app/components/change-marks/draw-change-marks';
 import { type MarkedChange, placeChanges } from '@/app/components/change-marks/marked-changes';
-import { significant } from '@/app/components/format';
 import { dateOfDay } from '@/lib/calendar/day';
 import { CHART_FONT, type ChartPalette } from '../_chart/chart-palette.ts';
 import { shortened } from '../_chart/draw-chart.ts';
 import { type DayLayout, dayX } from './day-layout.ts';
 import { type DayColumns, hasFlag } from './days-answer.ts';
 import type { FlowAxis } from './flow-axis.ts';
+import { tickText } from './flow-axis.ts';
 
 /** A row below the hydrograph: what it is of, and the stretches of days that have it. */
 export interface Lane {
@@ -41,7 +41,10 @@ export function drawDays(context: CanvasRenderingContext2D, picture: DayPicture,
 
 function drawSelection(context: CanvasRenderingContext2D, { layout, selection }: DayPicture, palette: ChartPalette) {
   if (!selection) return;
-  const [from, to] = [dayX(layout, selection[0]), dayX(layout, selection[1] + 1)];
+  // a stretch may begin and end in other years
+  const from = Math.max(layout.left, dayX(layout, selection[0]));
+  const to = Math.min(layout.right, dayX(layout, selection[1] + 1));
+  if (to <= from) return;
   context.fillStyle = palette.wash;
   context.fillRect(from, layout.top, to - from, layout.height - layout.top);
   context.fillStyle = palette.blue;
@@ -80,7 +83,7 @@ function drawAxes(context: CanvasRenderingContext2D, { layout, axis }: DayPictur
     context.fillStyle = palette.rule;
     context.fillRect(left, y - 0.5, right - left, 1);
     context.fillStyle = palette.ink2;
-    context.fillText(significant(tick), left - 8, y);
+    context.fillText(tickText(tick), left - 8, y);
   }
   context.fillStyle = palette.edge;
   context.fillRect(left, floor, right - left, 1);

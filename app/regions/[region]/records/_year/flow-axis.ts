@@ -1,4 +1,5 @@
 import { scaleLinear, scaleLog } from 'd3-scale';
+import { fixed } from '@/app/components/format';
 
 export type FlowAxisKind = 'log' | 'linear';
 
@@ -50,4 +51,10 @@ function spaced(ticks: number[], scale: (value: number) => number, most: number)
     if (kept.length <= most && !close) return kept;
   }
   return ticks.filter((value) => leading(value) === 1).filter((_, i, all) => i % Math.ceil(all.length / most) === 0);
+}
+
+/** A tick in as few digits as it has. Example: 0.05 → "0.05", 2000 → "2,000" */
+export function tickText(tick: number): string {
+  const [, decimals = ''] = String(Number(tick.toPrecision(6))).split('.');
+  return fixed(tick, decimals.length);
 }
