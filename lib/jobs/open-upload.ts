@@ -4,6 +4,7 @@ import { type JobView, viewJob } from './live-jobs.ts';
 import { lookAtUpload } from './look-at-upload.ts';
 import { unpackUpload } from './unpack-upload.ts';
 import {
+  discardSession,
   inTurn,
   listSessions,
   newSessionFolder,
@@ -52,6 +53,15 @@ export async function uploadsOf(regionId: number | null): Promise<UploadView[]> 
   const sessions = (await listSessions()).filter((session) => session.regionId === regionId);
   const bySlug = await slugs();
   return Promise.all(sessions.map((session) => viewOf(session, bySlug)));
+}
+
+/** Gives up the uploads of regions that are no longer there.
+ *  @returns how many uploads wait after that */
+export async function discardOrphanedUploads(): Promise<number> {
+  const [sessions, bySlug] = await Promise.all([listSessions(), slugs()]);
+  const orphans = sessions.filter(({ regionId }) => regionId !== null && !bySlug.has(regionId));
+  for (const { id } of orphans) await discardSession(id);
+  return sessions.length - orphans.length;
 }
 
 const slugs = async () => new Map((await listRegions()).map(({ id, slug }) => [id, slug]));

@@ -1,9 +1,9 @@
 import { randomUUID } from 'node:crypto';
 import { rm } from 'node:fs/promises';
 import { join } from 'node:path';
-import { takeUpload, viewUpload } from '@/lib/jobs/open-upload';
+import { discardOrphanedUploads, takeUpload, viewUpload } from '@/lib/jobs/open-upload';
 import { discardAbandonedUploads } from '@/lib/jobs/upload-folder';
-import { discardSession, listSessions, newSessionFolder, type UploadSession } from '@/lib/jobs/upload-session';
+import { discardSession, newSessionFolder, type UploadSession } from '@/lib/jobs/upload-session';
 import { jsonAnswer } from './answer';
 import { Problem } from './problem';
 import { gone, present } from './session';
@@ -16,7 +16,7 @@ const MOST_FILES = 5_000;
 /** Receives files for a region, or for one to be made, as an upload that waits for its import. */
 export async function openSession(request: Request, regionId: number | null): Promise<Response> {
   await discardAbandonedUploads();
-  if ((await listSessions()).length >= MOST_SESSIONS) {
+  if ((await discardOrphanedUploads()) >= MOST_SESSIONS) {
     throw new Problem(
       'conflict',
       `${MOST_SESSIONS} uploads wait for their import. Import or give up one of them first.`,

@@ -12,7 +12,7 @@ import type { FileChoices } from '../../../lib/jobs/import-types.ts';
 import { closePool } from '../../../lib/jobs/pool.ts';
 import { uploadFolder } from '../../../lib/jobs/upload-folder.ts';
 import type { FilePreview, UploadView } from '../../../lib/jobs/upload-types.ts';
-import { createRegion, getRegion, listRegions } from '../../../lib/store/regions.ts';
+import { createRegion, deleteRegion, getRegion, listRegions } from '../../../lib/store/regions.ts';
 import { temporaryDatabase } from '../store/temporary-database.ts';
 import { call, problemOf } from './call.ts';
 
@@ -185,4 +185,12 @@ test('a dry run changes nothing and keeps the files', async () => {
   expect(existsSync(uploadFolder(id))).toBe(true);
   const kept: UploadView = await (await call(view, ...at(id))).json();
   expect(kept.job).toMatchObject({ state: 'done', dryRun: true });
+});
+
+test('an upload of a region that has gone goes with the next one', async () => {
+  const { id } = await opened({ 'flows.csv': rows('_m3s') });
+  await deleteRegion('upper-wethe');
+  await createRegion({ name: 'Upper Wethe' });
+  await opened({ 'flows.csv': rows('_m3s') });
+  expect(existsSync(uploadFolder(id))).toBe(false);
 });
