@@ -14,7 +14,7 @@ export interface MonthlyLevels {
 /** Days with flow above zero that a month must have. */
 const LEAST_DAYS = 10;
 const MONTHS = 12;
-/** Between these a product of flows is as exact as any number. */
+/** Between these a product of flows is as exact as numbers get. */
 const SMALLEST_PRODUCT = 1e-100;
 const LARGEST_PRODUCT = 1e100;
 
