@@ -1,4 +1,4 @@
-import type { ImportReport } from '../intake/types.ts';
+import type { ImportReport, Quantity } from '../intake/types.ts';
 import type { ImportOutcome, TakenFile } from '../jobs/import-types.ts';
 import { rejectedPath } from '../jobs/rejected-rows.ts';
 import type { Revisions } from '../store/revisions.ts';
@@ -24,8 +24,8 @@ export function reportJson(outcome: ImportOutcome): string {
     rejectedTotal: report.rejectedTotal,
     rejectedFile: fileOfRejected(report),
     rejected: report.rejected.map(({ row, text, reason }) => ({ row, text, reason })),
-    stations: report.stations.map(({ code, values, missing, first, last, zeros, min, max }) => ({
-      ...{ code, values, missing, first, last, zeros, min, max },
+    stations: report.stations.map(({ code, quantity, values, missing, first, last, zeros, min, max }) => ({
+      ...{ code, quantity, values, missing, first, last, zeros, min, max },
     })),
     revisions: taken[index].revisions,
   }));
@@ -43,7 +43,7 @@ function checksText({ findings }: ImportOutcome): string {
   if (!findings || findings.findings === 0) return '';
   const things = findings.findings === 1 ? '1 thing' : `${findings.findings} things`;
   const where = findings.stations === 1 ? '1 station' : `${findings.stations} stations`;
-  return `The checks found ${things} to look at, at ${where}; values are marked as suspect, and none was changed.\n`;
+  return `The checks found ${things} to look at, at ${where}; the Records page shows them, and no value was changed.\n`;
 }
 
 function fileText({ file, kind, summary, report, warnings, revisions }: TakenFile): string {
@@ -72,6 +72,10 @@ export function revisionLines({ filled, equal, unlike, revised, extended, statio
 
 const plain = (value: number): string => String(Number(value.toPrecision(10)));
 
+/** Names a record that is not of flow. */
+const besideFlow = (quantity: Quantity = 'flow'): string =>
+  quantity === 'flow' ? '' : `, ${quantity.replace('-', ' ')}`;
+
 function flowLines(report: ImportReport): string[] {
   const { layout, unit, rows, accepted, rejectedTotal } = report;
   const rejected = report.rejected
@@ -81,8 +85,8 @@ function flowLines(report: ImportReport): string[] {
   return [
     `  layout ${layout}, ${unit}; ${rows} rows read, ${accepted} accepted, ${rejectedTotal} rejected`,
     ...report.stations.map(
-      ({ code, values, missing, first, last, gaps, longestGapDays }) =>
-        `  ${code}: ${values} values${first === null ? '' : `, ${first} to ${last}`}, ${missing} missing, ${gaps} gaps${
+      ({ code, quantity, values, missing, first, last, gaps, longestGapDays }) =>
+        `  ${code}${besideFlow(quantity)}: ${values} values${first === null ? '' : `, ${first} to ${last}`}, ${missing} missing, ${gaps} gaps${
           gaps > 0 ? ` (longest ${longestGapDays} days)` : ''
         }`,
     ),

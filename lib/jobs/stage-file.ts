@@ -35,7 +35,7 @@ export interface StageTools {
   onProgress: (rows: number, bytes: number) => void;
 }
 
-/** What a person chose for one file; what is chosen for all holds for flow files only. */
+/** What a person chose for one file: its own choices before those for all. */
 function choicesFor(file: GivenFile, choices: ImportChoices): FileChoices {
   return { ...choices.all, ...choices.files?.[file.name] };
 }
@@ -123,7 +123,8 @@ async function stageFlows(file: GivenFile, tools: StageTools): Promise<StagedFil
   staging.describeFile(number, recorded ? { ...facts, ...asFirstImported(recorded) } : facts);
   return {
     ...{ file, kind: 'flows', rows, report, warnings: report.warnings, registry: null },
-    summary: `${counted(report.stations.length, 'station')}, ${counted(accepted, 'row')}`,
+    // a station stands once for each of its quantities
+    summary: `${counted(new Set(report.stations.map(({ code }) => code)).size, 'station')}, ${counted(accepted, 'row')}`,
   };
 }
 

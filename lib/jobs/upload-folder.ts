@@ -2,7 +2,7 @@ import { mkdir, readdir, rm, stat } from 'node:fs/promises';
 import { basename, dirname, join } from 'node:path';
 import { databasePath } from '../store/database-url.ts';
 
-/** An upload that is still there after this time, milliseconds, belongs to a process that died. */
+/** An upload that nobody has touched for this time, milliseconds, is given up, or belongs to a process that died. */
 const ABANDONED_MS = 24 * 3_600_000;
 
 /** Folder of an import's uploaded files, beside the database. */
@@ -18,7 +18,7 @@ export async function discardUpload(jobId: string): Promise<void> {
   await rm(uploadFolder(jobId), { recursive: true, force: true });
 }
 
-/** Removes the uploads that dead processes left. */
+/** Removes the uploads that were given up without a word, and what dead processes left. */
 export async function discardAbandonedUploads(now = Date.now()): Promise<void> {
   const path = databasePath();
   const folder = dirname(path);

@@ -25,7 +25,7 @@ test('import makes the region, takes registry, layer and flows, and prints the r
   expect(code).toBe(0);
   expect(stdout).toContain('stations.csv: registry, 4 stations');
   expect(stdout).toContain('A1: 10958 values, 1980-01-01 to 2009-12-31, 0 missing');
-  expect(stdout).toMatch(/The checks found \d+ things to look at, at [1-4] stations; values are marked as suspect/);
+  expect(stdout).toMatch(/The checks found \d+ things to look at, at [1-4] stations; the Records page shows them/);
   const region = (await getRegion('upper-wethe'))!;
   expect(await listStations(region.id)).toHaveLength(4);
 });
