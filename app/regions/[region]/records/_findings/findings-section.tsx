@@ -49,8 +49,9 @@ export function FindingsSection({ slug, basis, stations, version, onChanged }: P
   return (
     <div className={styles.section}>
       <p className={styles.plain}>
-        The program marks what looks wrong and never deletes a value. Days under a finding carry the suspect flag until
-        a person answers: rejected days count as missing, accepted ones count again, and every answer can be undone.
+        The program marks what looks wrong and never deletes a value. Days under a finding carry the suspect flag, which
+        the basis may exclude; a step says nothing against any one day. Rejected days count as missing, accepted ones
+        lose the flag, and every answer can be undone.
       </p>
       <div className={screen.tools}>
         <label className={ui.label}>
