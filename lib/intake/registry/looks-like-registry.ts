@@ -3,11 +3,11 @@ import { looksLikeDate } from '../recognise/column-facts.ts';
 import { findCalendar } from '../recognise/find-calendar.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
 import { roleOfHeading } from '../recognise/heading-roles.ts';
-import { detectDelimiter, type SampleRow, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
+import { type SampleRow, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
 import { registryColumns } from './registry-columns.ts';
+import { MOST_TITLES, registryDelimiter } from './registry-delimiter.ts';
 
-/** Lines among which the header is looked for, below titles and comments, and rows below it that are looked through. */
-const MOST_TITLES = 30;
+/** Rows below the header that are looked through. */
 const ROWS_LOOKED_AT = 50;
 
 /** Whether a table's first lines are those of a station registry: a row a station, with its place, or with other facts and
@@ -16,7 +16,7 @@ const ROWS_LOOKED_AT = 50;
  *  @param wholeFile  they are all of it: also the last line is whole */
 export function looksLikeRegistry(head: Uint8Array, wholeFile: boolean): boolean {
   const lines = sampleLines(head, LF, wholeFile).filter(({ text }) => !text.startsWith('#'));
-  const delimiter = lines.length > 0 ? detectDelimiter(lines, LF) : null;
+  const delimiter = registryDelimiter(lines);
   if (delimiter === null) return false;
   const rows = splitSample(lines.slice(0, MOST_TITLES + ROWS_LOOKED_AT), splitterFor(delimiter, LF));
   // Days by month have no dates to tell them by.

@@ -1,12 +1,10 @@
 import { type CsvError, parse } from 'csv-parse/sync';
 import { isWidthRow } from '../recognise/find-header.ts';
-import { detectDelimiter, sampleLines } from '../recognise/sample.ts';
+import { sampleLines } from '../recognise/sample.ts';
 import { IntakeError } from '../types.ts';
 import { geoJsonTable } from './geojson-table.ts';
 import { type RegistryColumns, registryColumns } from './registry-columns.ts';
-
-/** Title lines that may stand above the header. */
-const MOST_TITLES = 30;
+import { MOST_TITLES, registryDelimiter } from './registry-delimiter.ts';
 
 /** A row with the line it stands in; of GeoJSON, the number of its feature. */
 export interface TableRow {
@@ -46,12 +44,7 @@ function withRows(table: RegistryTable, file: string): RegistryTable {
 
 function delimiterOf(text: string): ',' | ';' | '\t' {
   const lines = sampleLines(Buffer.from(text.slice(0, 200_000)), 10, true);
-  return (
-    detectDelimiter(
-      lines.filter((line) => !line.text.startsWith('#')),
-      10,
-    ) ?? ','
-  );
+  return registryDelimiter(lines.filter((line) => !line.text.startsWith('#'))) ?? ',';
 }
 
 function split(text: string, delimiter: string, file: string): TableRow[] {

@@ -321,6 +321,15 @@ describe('what is known beyond the facts', () => {
   });
 });
 
+test('readRegistry keeps to the sign that parts the header, however many dated changes its rows hold', async () => {
+  const changes = '2001-05-01 dam: Upper Kell; 1999-01-01 gauge moved';
+  const { stations } = await read(`code,name,changes\nA,Mill,${changes}\nB,Ford,${changes}\n`);
+  expect(stations.map(({ code, name, changes: found }) => [code, name, found?.length])).toEqual([
+    ['A', 'Mill', 2],
+    ['B', 'Ford', 2],
+  ]);
+});
+
 test('readRegistry reads thousands where decimals have a point, and names codes that are alike', async () => {
   const { stations, warnings } = await read('id;lat;lon;area_km2\nA1;45.5;8.25;1,234.5\na1;45.6;8.3;2,500\n');
   expect(stations.map(({ areaKm2 }) => areaKm2)).toEqual([1234.5, 2500]);

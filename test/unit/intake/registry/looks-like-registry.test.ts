@@ -15,6 +15,10 @@ test.each([
     'positions and the day on which each station was opened',
     'id,lat,lon,opened,start_date\nA,47,8,1931-05-01,1931-05-01\nB,47,8,1950-01-01,1950-01-01\n',
   ],
+  [
+    'positions and as many dated changes in every row',
+    'id,lat,lon,changes\nA,47,8,2001-05-01 dam; 1999-01-01 gauge moved\nB,47,8,2002-05-01 dam; 1998-01-01 dam\n',
+  ],
   ['a title above the header', 'Stations of the Kell,,\n\nstation_no,station_name,area_km2\n1,Mill,20\n'],
 ])('looksLikeRegistry is true of %s', (_, text) => {
   expect(looks(text)).toBe(true);
