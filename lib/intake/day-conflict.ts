@@ -46,7 +46,7 @@ class ConflictSink implements DaySink {
     if (this.line < 0) return;
     if (line === wanted.line) this.times[1] = this.second;
     if (line > wanted.line) this.rowsBehind++;
-    this.rowsOfDays.add(station, day, this.second, line);
+    this.rowsOfDays.add(station, day, this.second, value, line);
   }
 }
 

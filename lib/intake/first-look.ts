@@ -38,7 +38,7 @@ class LookSink implements DaySink {
 
   take(station: number, day: number, value: number, code: number, line: number): void {
     this.values++;
-    this.rowsOfDays.add(station, day, this.second, line);
+    this.rowsOfDays.add(station, day, this.second, value, line);
     if (!Number.isNaN(value)) {
       const days = this.days.get(station);
       if (days === undefined) this.days.set(station, [day]);

@@ -67,7 +67,7 @@ export class SeriesRecord {
       return;
     }
     this.points++;
-    if (this.points <= PLAIN_AFTER) this.readings.add(0, stamp.day, seconds, number);
+    if (this.points <= PLAIN_AFTER) this.readings.add(0, stamp.day, seconds, value, number);
     if (stamp.day === this.lastDay && seconds !== this.lastSeconds) this.severalADay = true;
     this.lastDay = stamp.day;
     this.lastSeconds = seconds;

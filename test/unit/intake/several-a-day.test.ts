@@ -126,6 +126,20 @@ describe('a file of several values a day', () => {
     expect(report.warnings).toContain('1 readings stand twice; they were counted once.');
   });
 
+  test('equal rows of one day without times are repeated rows, and unlike ones are readings', async () => {
+    const four = Array.from({ length: 4 }, () => '2001-01-01,5');
+    const { days: once, report } = await read(table(four, 'date,flow_m3s'));
+    expect(once).toEqual({ '2001-01-01': [5, ''] });
+    expect(report).toMatchObject({ rows: 4, accepted: 4, stations: [{ values: 1, duplicates: 3 }] });
+    const blank = await read(table(['2001-01-01,', ...four], 'date,flow_m3s'));
+    expect(blank.days).toEqual({ '2001-01-01': [5, ''] });
+    const { problem } = await refusal(table(['2001-01-01,', ...four.slice(1), '2001-01-01,6'], 'date,flow_m3s'));
+    expect(problem).toMatchObject({ needs: 'daily-mean', row: 3 });
+    // Times make readings of them, whatever their values.
+    const timed = await refusal(table(readings(['2001-01-01'], 360, () => '5')));
+    expect(timed.problem.needs).toBe('daily-mean');
+  });
+
   test('daily values stay what they are when daily means are asked for', async () => {
     const rows = dates('2001-01-01', 40).map((date, at) => `${date},${at / 8}`);
     const asked = await read(table(rows), { mapping: { dailyMean: 1 } });
