@@ -25,11 +25,11 @@ export async function takeUpload(
   { id, regionId, fresh }: Pick<UploadSession, 'id' | 'regionId'> & { fresh: boolean },
   given: readonly GivenFile[],
 ): Promise<boolean> {
-  const { files, broken } = await unpackUpload(given, newSessionFolder(id).folder);
+  const unpacked = await unpackUpload(given, newSessionFolder(id).folder);
   const first = await inTurn(id, async () => {
     const open = fresh ? emptySession(id, regionId) : await readSession(id);
     if (!open) return null;
-    const session = await withFiles(open, files, broken);
+    const session = await withFiles(open, unpacked);
     await writeSession(session);
     return session.seen.filter(({ state }) => state === 'unseen').slice(0, LOOKED_AT_ONCE);
   });
@@ -39,7 +39,17 @@ export async function takeUpload(
 }
 
 const emptySession = (id: string, regionId: number | null): UploadSession => ({
-  ...{ id, regionId, createdAt: new Date().toISOString(), files: [], seen: [], names: {}, broken: {}, job: null },
+  ...{
+    id,
+    regionId,
+    createdAt: new Date().toISOString(),
+    files: [],
+    seen: [],
+    names: {},
+    broken: {},
+    notes: [],
+    job: null,
+  },
 });
 
 /** An upload as it is shown; null when there is none of this id. */
@@ -67,10 +77,10 @@ export async function discardOrphanedUploads(): Promise<number> {
 const slugs = async () => new Map((await listRegions()).map(({ id, slug }) => [id, slug]));
 
 async function viewOf(session: UploadSession, bySlug: Map<number, string>): Promise<UploadView> {
-  const { id, regionId, createdAt, seen, job } = session;
+  const { id, regionId, createdAt, seen, notes, job } = session;
   const view = job && (await viewJob(job.id));
   return {
-    ...{ id, createdAt, files: seen },
+    ...{ id, createdAt, files: seen, notes },
     region: regionId === null ? null : (bySlug.get(regionId) ?? null),
     job: job && view ? { ...job, state: view.state } : null,
   };

@@ -10,6 +10,8 @@ export interface UnpackedUpload {
   files: GivenFile[];
   /** by name: archives that cannot be taken, and why */
   broken: Record<string, PreviewProblem>;
+  /** what was passed over in the archives */
+  notes: string[];
 }
 
 /** Unpacks the archives among files that were received. One that cannot be taken stays as it is and says why: the files
@@ -17,17 +19,19 @@ export interface UnpackedUpload {
 export async function unpackUpload(given: readonly GivenFile[], folder: string): Promise<UnpackedUpload> {
   const files: GivenFile[] = [];
   const broken: UnpackedUpload['broken'] = {};
+  const notes: string[] = [];
   for (const file of given) {
     try {
-      const unpacked = (await expandArchives([file], folder, { mostBytes: uploadLimit() })).files;
-      files.push(...unpacked);
+      const unpacked = await expandArchives([file], folder, { mostBytes: uploadLimit() });
+      files.push(...unpacked.files);
+      notes.push(...unpacked.notes);
       // What came out of an archive stands in its place, on disk too.
-      if (unpacked.every(({ path }) => path !== file.path)) await rm(file.path, { force: true });
+      if (unpacked.files.every(({ path }) => path !== file.path)) await rm(file.path, { force: true });
     } catch (error) {
       if (!(error instanceof IntakeError)) throw error;
       files.push(file);
       broken[file.name] = { message: error.message, problem: error.problem };
     }
   }
-  return { files, broken };
+  return { files, broken, notes };
 }

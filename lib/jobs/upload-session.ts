@@ -5,6 +5,7 @@ import { basename, dirname, join } from 'node:path';
 import type { KnownStation } from '../intake/types.ts';
 import { databasePath } from '../store/database-url.ts';
 import type { FileChoices, GivenFile } from './import-types.ts';
+import type { UnpackedUpload } from './unpack-upload.ts';
 import { discardUpload, uploadFolder } from './upload-folder.ts';
 import type { PreviewProblem, UploadedFile } from './upload-types.ts';
 
@@ -22,6 +23,8 @@ export interface UploadSession {
   names: Record<string, KnownStation[]>;
   /** by file: archives that could not be unpacked, and why */
   broken: Record<string, PreviewProblem>;
+  /** what was passed over in archives */
+  notes: string[];
   job: { id: string; dryRun: boolean } | null;
 }
 
@@ -83,22 +86,19 @@ export async function listSessions(): Promise<UploadSession[]> {
 export const discardSession = (id: string): Promise<void> => discardUpload(id);
 
 /** Adds files to a session, each under a name of its own: choices are made by name.
- *  @param unusable  by the name that they came with: files that cannot be taken, and why */
-export async function withFiles(
-  session: UploadSession,
-  more: readonly GivenFile[],
-  unusable: Readonly<Record<string, PreviewProblem>>,
-): Promise<UploadSession> {
+ *  @param more  with `broken` by the names that they came with: files that cannot be taken, and why */
+export async function withFiles(session: UploadSession, more: Readonly<UnpackedUpload>): Promise<UploadSession> {
   const taken = new Set(session.files.map(({ name }) => name));
   const broken = { ...session.broken };
-  const files = more.map((file) => {
+  const files = more.files.map((file) => {
     const name = freeName(file.name, taken);
     taken.add(name);
-    if (unusable[file.name]) broken[name] = unusable[file.name];
+    if (more.broken[file.name]) broken[name] = more.broken[file.name];
     return { ...file, name };
   });
   const seen = await Promise.all(files.map(async ({ name, path }) => unseen(name, (await stat(path)).size)));
-  return { ...session, files: [...session.files, ...files], seen: [...session.seen, ...seen], broken };
+  const notes = [...session.notes, ...more.notes];
+  return { ...session, files: [...session.files, ...files], seen: [...session.seen, ...seen], broken, notes };
 }
 
 /** Two files called alike come from two folders: the later one gets a number for its folder, since the name itself may

@@ -88,6 +88,8 @@ export interface UploadView {
   /** ISO date and time */
   createdAt: string;
   files: UploadedFile[];
+  /** what was passed over in archives */
+  notes: string[];
   /** its last import, which may be under way */
   job: { id: string; state: JobState; dryRun: boolean } | null;
 }

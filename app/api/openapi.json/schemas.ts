@@ -104,6 +104,7 @@ export const SCHEMAS = {
     region: z.string().nullable().describe('null: its import makes a region'),
     createdAt: z.string(),
     files: z.array(uploadedFile),
+    notes: z.array(z.string()).describe('what was passed over in archives'),
     job: z.object({ id: z.string(), state: z.enum(JOB_STATES), dryRun: z.boolean() }).nullable(),
   }),
   UploadedFile: uploadedFile,

@@ -157,15 +157,16 @@ test('an upload that is cut off or holds no file leaves no folder', async () => 
 });
 
 test('an archive is unpacked in place; one that is damaged says why and leaves the others be', async () => {
-  const zip = zipSync({ 'deep/0001.csv': strToU8(rows('_m3s')) });
+  const zip = zipSync({ 'deep/0001.csv': strToU8(rows('_m3s')), 'README.txt': strToU8('Read me') });
   const body = new FormData();
   body.append('files', new Blob([zip as Uint8Array<ArrayBuffer>]), 'good.zip');
   body.append('files', new Blob([zip.slice(0, zip.length - 30) as Uint8Array<ArrayBuffer>]), 'cut.zip');
-  const { id, files }: UploadView = await (await send(body)).json();
+  const { id, files, notes }: UploadView = await (await send(body)).json();
   expect(files.map(({ file, state }) => [file, state])).toEqual([
     ['0001.csv', 'ready'],
     ['cut.zip', 'unreadable'],
   ]);
+  expect(notes).toEqual(['“README.txt” in good.zip was passed over: it explains others.']);
   expect(files[1].problem).toContain('cut.zip');
   const end = await imported(id, { leaveOut: ['cut.zip'] });
   expect(end.result.taken.map(({ file }: { file: string }) => file)).toEqual(['0001.csv']);

@@ -1,6 +1,9 @@
 import { openConnection, rows } from '../../../lib/store/connection.ts';
 
-const TABLES = ['Region', 'Station', 'Layer', 'Import', 'Part', 'Record', 'Mark', 'Laid'];
+const TABLES = [
+  ...['Region', 'Station', 'Link', 'Layer', 'SavedMapping', 'Basis'],
+  ...['Import', 'Part', 'Record', 'Laid', 'Mark', 'Finding'],
+];
 
 /** All that a person put into the database, as text: equal before and after something that must leave nothing behind.
  *  Jobs and results are not part of it. */
