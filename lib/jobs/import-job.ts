@@ -6,7 +6,7 @@ import { checkUnchecked } from './checks.ts';
 import { NO_PROGRESS } from './import-meter.ts';
 import type { GivenFile, ImportChoices, ImportOutcome, ImportProgress } from './import-types.ts';
 import { FailedWithResult, type JobContext, launchJob } from './live-jobs.ts';
-import { runTask } from './pool.ts';
+import { keepWorkersReady, runTask } from './pool.ts';
 
 export const IMPORT_JOB = 'import';
 
@@ -51,6 +51,8 @@ async function inWorker({ id, signal, report }: JobContext, work: Work) {
   const cancelled = new Int32Array(new SharedArrayBuffer(Int32Array.BYTES_PER_ELEMENT));
   const cancel = () => Atomics.store(cancelled, 0, 1);
   signal.addEventListener('abort', cancel, { once: true });
+  // One reads, and all check what was read: they load side by side.
+  keepWorkersReady();
   const { port1, port2 } = new MessageChannel();
   let last = NO_PROGRESS;
   port1.on('message', (progress: ImportProgress) => {
