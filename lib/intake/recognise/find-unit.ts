@@ -1,4 +1,5 @@
-import { FLOW_UNITS, type FlowUnit, IntakeError } from '../types.ts';
+import { UNITS_OF } from '../../series/quantities.ts';
+import { type FlowUnit, IntakeError, type Quantity } from '../types.ts';
 import { DAILY_DISCHARGE, unitNamedIn, unitsNamedIn } from '../units.ts';
 
 /** The unit that a file states, looked for where it is said most closely first: the value's heading, the column of
@@ -15,8 +16,10 @@ export function findUnit(found: {
   const inHeadings = new Set(found.headings.map(unitNamedIn));
   if (inHeadings.size === 1) {
     const [unit] = inHeadings;
-    // A line above that says otherwise leaves it open.
-    if (unit !== null) return stated.size === 1 && !stated.has(unit) ? null : unit;
+    const inRows = unitNamedIn(found.unitText);
+    // A line above, or the column of units, that says otherwise leaves it open.
+    const isDenied = (stated.size === 1 && unit !== null && !stated.has(unit)) || (inRows !== null && inRows !== unit);
+    if (unit !== null) return isDenied ? null : unit;
   }
   if (found.unitText !== '') return unitNamedIn(found.unitText);
   // What the file calls its unit and is none of flow is another quantity's.
@@ -25,12 +28,14 @@ export function findUnit(found: {
   return inRemarks.size === 1 ? [...inRemarks][0] : null;
 }
 
-export function unitProblem(file: string, heading: string | null): IntakeError {
+export function unitProblem(file: string, heading: string | null, quantity: Quantity = 'flow'): IntakeError {
+  const units = UNITS_OF[quantity].join(', ');
+  const isFlow = quantity === 'flow';
   return new IntakeError({
     file,
     ...(heading ? { value: heading } : {}),
-    message: 'the file does not say in which unit its flows are',
-    remedy: `Say it: ${FLOW_UNITS.join(', ')} (mm/d is a depth over the drainage area)`,
+    message: `the file does not say in which unit its ${isFlow ? 'flows' : 'values'} are`,
+    remedy: `Say it: ${units}${isFlow ? ' (mm/d is a depth over the drainage area)' : ''}`,
     needs: 'unit',
   });
 }

@@ -95,7 +95,7 @@ export function planCalendar(
       ...(shortYear === null ? [] : [centuryProblem(file, shortYear)]),
       ...(leading.quantity < 0 || where ? [] : [quantityProblem(file, header?.[leading.quantity] ?? '')]),
       ...(unclear === null ? [] : [thousandsProblem(file, unclear)]),
-      ...(mapping.unit === null ? [unitProblem(file, null)] : []),
+      ...(mapping.unit === null ? [unitProblem(file, null, mapping.quantity)] : []),
       ...(unnamed ? [stationProblem(file)] : []),
     ],
     warnings: [],

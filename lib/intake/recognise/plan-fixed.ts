@@ -43,7 +43,7 @@ export function planFixedWidth(lines: readonly SampleLine[], context: PlanContex
       mappingProblem(file, 'the rows hold several numbers at fixed characters; which are the flows is not said'),
     );
   }
-  if (unit === null) problems.push(unitProblem(file, null));
+  if (unit === null) problems.push(unitProblem(file, null, given.quantity));
   if (mapping.station.from === 'lines-above' && stationAbove(above.facts, options.knownStations) === null)
     problems.push(stationProblem(file));
 

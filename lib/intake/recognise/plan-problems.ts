@@ -95,7 +95,9 @@ export function problemsOf(
   }
   if (mapping.unit === null) {
     const heading = mapping.value && 'column' in mapping.value ? mapping.value.column : null;
-    problems.push(unitProblem(file, typeof heading === 'number' ? (header?.[heading] ?? null) : heading));
+    problems.push(
+      unitProblem(file, typeof heading === 'number' ? (header?.[heading] ?? null) : heading, mapping.quantity),
+    );
   }
   return problems;
 }

@@ -1,8 +1,9 @@
-import type { InspectOptions, Layout, Mapping, StatedFacts } from '../types.ts';
+import type { InspectOptions, Layout, Mapping, Quantity, StatedFacts, Unit } from '../types.ts';
 import type { ColumnRoles } from './assign-columns.ts';
 import { findUnit } from './find-unit.ts';
 import { type LinesAbove, stationAbove } from './lines-above.ts';
 import { type NumberSigns, numberSigns } from './number-signs.ts';
+import { otherQuantityIn } from './other-quantities.ts';
 import type { SampleRow } from './sample.ts';
 
 /** What was recognised, with what a person gave laid over it. */
@@ -18,7 +19,6 @@ export function mappingOf(
   },
 ): Mapping {
   const { header, delimiter, above, options } = found;
-  const valueColumns = roles.wide?.map(({ value }) => value) ?? (roles.value === null ? [] : [roles.value]);
   const column = (at: number | null) => (at === null ? null : { column: at });
   const where = roles.quantityColumn === null ? null : quantityFilter(roles.quantityColumn, data, above.remarks);
   return {
@@ -35,12 +35,31 @@ export function mappingOf(
     unit:
       options.unit ??
       options.mapping?.unit ??
-      findUnit({
-        headings: valueColumns.map((at) => header?.[at] ?? ''),
+      unitIn(options.mapping?.quantity ?? 'flow', {
+        headings: valueHeadings(roles, header, options.mapping?.value),
         unitText: mostFrequent(columnTexts(data, roles.unitColumn ?? -1)),
         ...above,
       }),
   };
+}
+
+/** The headings of the columns that are read: of the one that a person chose, where one did. */
+function valueHeadings(
+  roles: ColumnRoles,
+  header: readonly string[] | null,
+  chosen: Mapping['value'] | undefined,
+): string[] {
+  const headingOf = (column: number | string) => (typeof column === 'string' ? column : (header?.[column] ?? ''));
+  if (roles.wide) return roles.wide.map(({ value }) => headingOf(value));
+  if (chosen) return 'column' in chosen ? [headingOf(chosen.column)] : [];
+  return roles.value === null ? [] : [headingOf(roles.value)];
+}
+
+/** The unit that a file states for a quantity. That of another than flow stands in its heading, or is asked for. */
+function unitIn(quantity: Quantity, found: Parameters<typeof findUnit>[0]): Unit | null {
+  if (quantity === 'flow') return findUnit(found);
+  const named = found.headings.map(otherQuantityIn);
+  return named.length === 1 && named[0].quantity === quantity ? named[0].unit : null;
 }
 
 /** The station of a table that has no column for it. */

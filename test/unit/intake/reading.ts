@@ -1,6 +1,7 @@
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { expect } from 'vitest';
 import { isoDate, parseIsoDate } from '../../../lib/calendar/day.ts';
 import { readFlows } from '../../../lib/intake/read-flows.ts';
 import {
@@ -70,4 +71,12 @@ export async function refusal(content: string | Uint8Array, options: Given = {})
 export function dates(first: string, count: number): string[] {
   const day = parseIsoDate(first);
   return Array.from({ length: count }, (_, at) => isoDate(day + at));
+}
+
+/** Every refusal must name the file, say what is wrong and what to do. */
+export function expectSaysAll(error: IntakeError): void {
+  expect(error.message).toContain('gauge.csv');
+  expect(error.problem.message.length).toBeGreaterThan(10);
+  expect(error.problem.remedy.length).toBeGreaterThan(10);
+  expect(error.message).not.toContain('/tmp');
 }
