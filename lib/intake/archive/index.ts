@@ -62,14 +62,16 @@ class Unpacking {
   readonly notes: string[] = [];
   private readonly names: UnpackedNames;
   private written = 0;
+  /** the archive that was given, bytes, and what has come out of it, also of archives within it */
+  private given = { name: '', packed: 0, inflated: 0 };
 
   constructor(
     private readonly folder: string,
     private readonly budget: Budget,
-    given: readonly NamedFile[],
+    files: readonly NamedFile[],
     private readonly options: ExpandOptions,
   ) {
-    this.names = new UnpackedNames(given.map(({ name }) => name));
+    this.names = new UnpackedNames(files.map(({ name }) => name));
   }
 
   async take(file: NamedFile, packing: Packing, depth: number): Promise<void> {
@@ -83,6 +85,7 @@ class Unpacking {
         `this is ${packing === 'tar' ? 'a tar archive' : 'an archive of a kind that is not read'}`,
       );
     }
+    if (depth === 0) this.given = { name: file.name, packed: (await stat(file.path)).size, inflated: 0 };
     if (depth >= DEEPEST) throw refusal(file.name, `archives stand more than ${DEEPEST} deep in one another`);
     if (packing === 'gzip') await this.takeGzip(file, depth);
     else await this.takeZip(file, depth);
@@ -91,8 +94,7 @@ class Unpacking {
   private async takeGzip(file: NamedFile, depth: number): Promise<void> {
     const { size } = await stat(file.path);
     const path = this.nextPath();
-    const inflated = inflate(file, size);
-    await this.budget.write(inflated, path, file.name, this.options);
+    await this.budget.write(this.counted(inflate(file, size)), path, file.name, this.options);
     await this.takeUnpacked(file, path, file.name.replace(/\.(?:gz|gzip|z)$/i, ''), depth);
     if (depth > 0) await rm(file.path, { force: true });
   }
@@ -109,13 +111,22 @@ class Unpacking {
       if (wanted.length === 0) throw refusal(file.name, 'the archive holds no file that could be imported');
       for (const entry of wanted) {
         const path = this.nextPath();
-        await this.budget.write(zip.stream(entry), path, file.name, this.options);
+        await this.budget.write(this.counted(zip.stream(entry)), path, file.name, this.options);
         await this.takeUnpacked(file, path, entry.fileName, depth);
       }
     } finally {
       zip.close();
     }
     if (depth > 0) await rm(file.path, { force: true });
+  }
+
+  /** Archives within archives multiply: each may be harmless, and all of them a bomb. */
+  private async *counted(source: AsyncIterable<Buffer>): AsyncGenerator<Buffer> {
+    for await (const chunk of source) {
+      this.given.inflated += chunk.length;
+      refuseBomb(this.given.inflated, this.given.packed, this.given.name);
+      yield chunk;
+    }
   }
 
   private isWanted(archive: string, entry: Entry): boolean {

@@ -190,6 +190,16 @@ describe('expandArchives refuses', () => {
     );
   }, 30_000);
 
+  test('a bomb within an archive, though neither unpacks to a thousand times its size', async () => {
+    // Deflate packs zeros to a 1,032nd at most; fixed codes, as at level 1, to a 230th or so.
+    const within = gzipSync(new Uint8Array(101e6), { level: 1 });
+    expect(101e6 / within.length).toBeLessThan(1000);
+    const bomb = zip({ 'a.csv.gz': within });
+    expect(within.length / bomb.length).toBeLessThan(1000);
+    const { problem } = await refusalOf({ 'bomb.zip': bomb });
+    expect(problem).toMatchObject({ file: 'bomb.zip', message: 'it unpacks to more than 1000 times its size' });
+  }, 30_000);
+
   test('an entry that is larger than it says', async () => {
     const bytes = patched(zip({ 'a.csv': 'x'.repeat(10_000) }), CENTRAL, (view, at) =>
       view.setUint32(at + 24, 10, true),
