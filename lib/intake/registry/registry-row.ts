@@ -34,6 +34,9 @@ export interface RowFormat {
   comma: CommaMeaning;
 }
 
+/** No river drains more: the Amazon, which drains most, some 7 million km². */
+const LARGEST_KM2 = 1e7;
+
 type Fact<T> = T | RowProblem;
 const isProblem = <T>(fact: Fact<T>): fact is RowProblem =>
   typeof fact === 'object' && fact !== null && 'reason' in fact;
@@ -102,7 +105,13 @@ function areaOf(written: string, unit: string, { areaFactor, comma }: RowFormat)
   if (factor === null)
     return { value: unit, reason: 'the unit of the area is not known', remedy: 'Write km2, mi2, ha, acres or m2' };
   // Takes the binary tail off a converted area: 15 significant digits.
-  return Number((area * factor).toPrecision(15));
+  const areaKm2 = Number((area * factor).toPrecision(15));
+  if (areaKm2 <= LARGEST_KM2) return areaKm2;
+  return {
+    value: written,
+    reason: `a drainage area of ${Math.round(areaKm2)} km² is larger than that of any river`,
+    remedy: 'Correct it, or the unit that the file names: km², mi², ha, acres or m²',
+  };
 }
 
 type History = Pick<RegistryStation, 'changes' | 'namedFlows' | 'notes' | 'derived'>;

@@ -77,6 +77,13 @@ test.each([
   ['latitude as text', 'B,b,north,10,5,', 'north', /latitude/],
   ['a latitude alone', 'B,b,45,,5,', 'B', /latitude but no longitude/],
   ['area 0', 'B,b,45,10,0,', '0', /more than 0/],
+  // The Amazon drains about 7 million km².
+  [
+    'an area larger than any river’s',
+    'B,b,45,10,10000001,',
+    '10000001',
+    /10000001 km² is larger than that of any river/,
+  ],
   ['negative area', 'B,b,45,10,-3,', '-3', /more than 0/],
   ['area as text', 'B,b,45,10,large,', 'large', /not a number/],
   ['a repeated code', 'A,b,45,10,5,', 'A', /already in row 2/],
