@@ -16,7 +16,8 @@ export async function problemOf(
   if (!(error instanceof IntakeError || error instanceof ImportRefused)) throw error;
   const { message, problem } = error;
   return {
-    file: problem.file,
+    // A part of a workbook is of the file that a person gave.
+    file: about?.file.name ?? problem.file,
     message,
     problem,
     inspection: problem.needs && about ? await inspectionOf(about) : null,
