@@ -1,7 +1,8 @@
 import { dayNumber } from '../lib/calendar/day.ts';
+import { NO_ROW } from '../lib/series/day-codes.ts';
 import type { Quantity, Unit } from '../lib/series/quantities.ts';
 import type { Catchment } from './catchment-flow.ts';
-import { CODES, NO_ROW } from './observe.ts';
+import { CODES } from './observe.ts';
 import type { RandomStream } from './random.ts';
 import type { Traits } from './traits.ts';
 import type { Weather } from './weather.ts';

@@ -2,8 +2,8 @@ import { once } from 'node:events';
 import { createWriteStream } from 'node:fs';
 import { finished } from 'node:stream/promises';
 import { isoDate } from '../lib/calendar/day.ts';
+import { NO_ROW } from '../lib/series/day-codes.ts';
 import type { SeedRecord, SeedStation } from './generate.ts';
-import { NO_ROW } from './observe.ts';
 
 /** Writes records as one long table, station,date,flow,flag, flows in m³/s; a day without a value has an empty flow, a day
  *  without a row has none. One record is in memory at a time.

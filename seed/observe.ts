@@ -1,5 +1,6 @@
 import { dayNumber } from '../lib/calendar/day.ts';
 import { FLAG } from '../lib/series/daily-series.ts';
+import { NO_ROW } from '../lib/series/day-codes.ts';
 import type { RandomStream } from './random.ts';
 import type { Traits } from './traits.ts';
 import type { Weather } from './weather.ts';
@@ -21,7 +22,6 @@ export const CODES = [
   { text: 'ice', bits: FLAG.ice },
 ] as const;
 const [, ESTIMATED, PROVISIONAL, ICE] = [0, 1, 2, 3];
-export const NO_ROW = 255;
 
 const CUBIC_FEET = 35.3147;
 /** °C, mean of about a week, below which ice backs up the water at the gauge. */

@@ -1,6 +1,7 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { stationReport } from '../lib/intake/report.ts';
 import type { ImportReport, Mapping, StagedPart, StationReport } from '../lib/intake/types.ts';
+import { NO_ROW } from '../lib/series/day-codes.ts';
 import type { Quantity, Unit } from '../lib/series/quantities.ts';
 import { applyStaging } from '../lib/store/apply-staging.ts';
 import { blobOfValues } from '../lib/store/blobs.ts';
@@ -8,7 +9,6 @@ import { setLink } from '../lib/store/links.ts';
 import { createStaging, type Staging } from '../lib/store/staging.ts';
 import type { SeedBeside } from './beside.ts';
 import type { SeedRecord, SeedRegion } from './generate.ts';
-import { NO_ROW } from './observe.ts';
 
 /** How the flows would be read if they came as the file that writeFlowsCsv makes. */
 const MAPPING: Mapping = {

@@ -2,10 +2,10 @@ import { isoDate } from '../calendar/day.ts';
 import { csvLine } from '../intake/csv-line.ts';
 import { flagBits } from '../intake/flags.ts';
 import { isMissingText } from '../intake/missing-codes.ts';
-import type { AlsoQuantity, DayCode, Mapping, Quantity, StagedPart, Unit } from '../intake/types.ts';
+import type { AlsoQuantity, Mapping, Quantity, StagedPart, Unit } from '../intake/types.ts';
 import { FLAG, FLAG_NAMES } from '../series/daily-series.ts';
+import { type DayCode, NO_ROW } from '../series/day-codes.ts';
 
-const NO_ROW = 255;
 const HEADER = ['station_code', 'quantity', 'date', 'value', 'unit', 'flag'] as const;
 
 /** Days as a file had them, of one station and quantity. */

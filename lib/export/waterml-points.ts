@@ -1,6 +1,6 @@
 import { FLAG_DEFINITION, NO_FLAGS, VALUE_DEFINITION } from '../intake/documents/qualifier.ts';
-import type { DayCode } from '../intake/types.ts';
 import { FLAG, FLAG_NAMES } from '../series/daily-series.ts';
+import type { DayCode } from '../series/day-codes.ts';
 import { elementText } from './xml-text.ts';
 
 const QUALITY = 'http://www.opengis.net/def/waterml/2.0/quality';

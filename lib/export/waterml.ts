@@ -1,7 +1,7 @@
 import { isoDate } from '../calendar/day.ts';
 import { UCUM } from '../intake/documents/unit-code.ts';
-import type { DayCode } from '../intake/types.ts';
 import type { StationFacts } from '../region/ranking-types.ts';
+import { type DayCode, NO_ROW } from '../series/day-codes.ts';
 import type { Quantity, Unit } from '../series/quantities.ts';
 import { databasePath } from '../store/database-url.ts';
 import { DICTIONARY, pointMetadata, usualCode } from './waterml-points.ts';
@@ -9,7 +9,6 @@ import { recordsAsTheyStand } from './waterml-records.ts';
 import { attributeText, elementText } from './xml-text.ts';
 
 /** Code of a day that has no row, see StagedPart. */
-const NO_ROW = 255;
 const PIECE = 1 << 16;
 const INTERPOLATION = 'http://www.opengis.net/def/waterml/2.0/interpolationType';
 
@@ -21,7 +20,7 @@ export interface WrittenSeries {
   firstDay: number;
   /** NaN = missing */
   values: Float64Array;
-  /** index into `codeList` a day; 255 = no point is written for the day */
+  /** index into `codeList` a day; NO_ROW where no point is written for the day */
   codes: Uint8Array;
   codeList: readonly DayCode[];
 }

@@ -1,9 +1,9 @@
-import { FLAG } from '../series/daily-series.ts';
+import { bitsOfFlags } from '../series/daily-series.ts';
+import { type DayCode, NO_ROW } from '../series/day-codes.ts';
 import { ByteTable } from './byte-table.ts';
 import { flagBits } from './flags.ts';
-import { NO_ROW } from './station-days.ts';
 import { decodeText } from './text-encoding.ts';
-import { type DayCode, IntakeError, type Mapping } from './types.ts';
+import { IntakeError, type Mapping } from './types.ts';
 
 /** The day codes of one file: each pair of a flag and a text in the value's place gets one number, 0 to 254. */
 export class CodeTable {
@@ -67,6 +67,6 @@ export class CodeTable {
 
   private bitsOf(text: string, iceLetter?: string): number {
     if (!Object.hasOwn(this.meanings, text)) return flagBits(text, iceLetter);
-    return this.meanings[text].reduce((bits, name) => bits | FLAG[name], 0);
+    return bitsOfFlags(this.meanings[text]);
   }
 }

@@ -1,9 +1,9 @@
 import { isoDate } from '../calendar/day.ts';
 import { FLAG, FLAG_NAMES } from '../series/daily-series.ts';
+import { CodeNumbers, type DayCode, NO_ROW } from '../series/day-codes.ts';
 import type { DaySink } from './rows/row-reader.ts';
-import { NO_ROW } from './station-days.ts';
 import { NO_TIME } from './time-of-day.ts';
-import type { DayCode, StagedPart } from './types.ts';
+import type { StagedPart } from './types.ts';
 
 const DAY = 86_400;
 const PAGE_BITS = 8;
@@ -121,7 +121,7 @@ export class DailyMeans implements DaySink {
     const length = (numbers[numbers.length - 1] + 1 - numbers[0]) << PAGE_BITS;
     const values = new Float64Array(length).fill(Number.NaN);
     const codes = new Uint8Array(length).fill(NO_ROW);
-    const list = new CodeList(this.codes);
+    const numbered = new CodeNumbers();
     const expected = expectedReadings(record.pages);
     for (const number of numbers) {
       const page = record.pages.get(number) as Page;
@@ -133,7 +133,9 @@ export class DailyMeans implements DaySink {
         else if (page.counts[at] > 0) this.thinDays++;
         // What stood in the place of a value says nothing of a day whose values were too few.
         const written = enough || page.counts[at] === 0;
-        codes[day - start] = list.number(page.codes[at], page.bits[at], { mixed: page.mixed[at] === 1, written });
+        const bits = page.bits[at];
+        const code = dayCode(this.codes[page.codes[at]], bits, { mixed: page.mixed[at] === 1, written });
+        codes[day - start] = numbered.of(code, wordsOf(bits));
       }
     }
     const first = codes.findIndex((code) => code !== NO_ROW);
@@ -141,7 +143,7 @@ export class DailyMeans implements DaySink {
     return {
       ...about,
       ...{ firstDay: start + first, values: values.slice(first, last + 1), codes: codes.slice(first, last + 1) },
-      codeList: list.codes,
+      codeList: numbered.list,
     };
   }
 }
@@ -158,30 +160,15 @@ const WORDS: [number, string][] = FLAG_NAMES.map((name) => [FLAG[name], name ===
 
 const wordsOf = (bits: number): string => WORDS.flatMap(([bit, word]) => (bits & bit ? [word] : [])).join(' ');
 
-/** The day's code: the one that all its rows share, else their flags in words. */
-class CodeList {
-  readonly codes: DayCode[] = [];
-  private readonly numbers = new Map<string, number>();
-
-  constructor(private readonly file: readonly DayCode[]) {}
-
-  number(code: number, bits: number, { mixed, written }: { mixed: boolean; written: boolean }): number {
-    const { text, valueText } = this.file[code];
-    const hasText = !mixed && (written || text !== valueText);
-    const day: DayCode = {
-      ...{ text: hasText ? text : wordsOf(bits), bits },
-      ...(hasText && written && valueText !== undefined ? { valueText } : {}),
-    };
-    const key = JSON.stringify([day.text, bits, day.valueText ?? null]);
-    const known = this.numbers.get(key);
-    if (known !== undefined) return known;
-    // A byte tells 255 codes apart; beyond them the text gives way to the bits, of which there are fewer.
-    if (this.codes.length >= NO_ROW - 64 && hasText && text !== '')
-      return this.number(code, bits, { mixed: true, written });
-    const number = this.codes.push(day) - 1;
-    this.numbers.set(key, number);
-    return number;
-  }
+/** The day's code: the one that all its rows share, else their flags in words.
+ *  @param written  what stood in the place of a value is kept as well */
+function dayCode(
+  { text, valueText }: DayCode,
+  bits: number,
+  { mixed, written }: { mixed: boolean; written: boolean },
+): DayCode {
+  if (mixed || (!written && text === valueText)) return { text: wordsOf(bits), bits };
+  return { text, bits, ...(written && valueText !== undefined ? { valueText } : {}) };
 }
 
 /** How many readings a whole day has, by the usual step of its month, else by that of the whole record. */

@@ -1,5 +1,6 @@
+import { NO_ROW } from '../series/day-codes.ts';
 import { type FiledPage, PageFile } from './page-file.ts';
-import { emptyPage, NO_ROW, type OpenPage, type PackedPage, pack, unpack } from './pages.ts';
+import { emptyPage, type OpenPage, type PackedPage, pack, unpack } from './pages.ts';
 
 /** A page in any of its three states: open, packed, or written to a file. */
 export type StoredPage = OpenPage | PackedPage | FiledPage;

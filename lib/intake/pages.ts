@@ -2,8 +2,6 @@
  *  growing copies nothing. */
 export const PAGE_BITS = 10;
 export const PAGE = 1 << PAGE_BITS;
-/** Code of a day that the file has no row for. */
-export const NO_ROW = 255;
 const MISSING = -0x80000000;
 
 /** Days as they are written: a value and a code each. */

@@ -1,6 +1,7 @@
 import { isoDate } from '../calendar/day.ts';
-import { type DayRun, NO_ROW } from './station-days.ts';
-import type { DayCode, StagedPart, StationReport, Unit } from './types.ts';
+import { type DayCode, NO_ROW } from '../series/day-codes.ts';
+import type { DayRun } from './station-days.ts';
+import type { StagedPart, StationReport, Unit } from './types.ts';
 
 /** One station's days with the codes it uses, and no others. */
 export function stagedPart(code: string, unit: Unit, run: DayRun, fileCodes: readonly DayCode[]): StagedPart {

@@ -1,7 +1,6 @@
+import { NO_ROW } from '../series/day-codes.ts';
 import type { PageMemory, StoredPage } from './page-memory.ts';
-import { NO_ROW, type OpenPage, PAGE, PAGE_BITS } from './pages.ts';
-
-export { NO_ROW };
+import { type OpenPage, PAGE, PAGE_BITS } from './pages.ts';
 
 /** What became of a row. */
 export const NEW_DAY = 0;

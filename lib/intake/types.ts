@@ -1,3 +1,4 @@
+import type { DayCode } from '../series/day-codes.ts';
 import { FLOW_UNITS, type FlowUnit } from '../series/flow-units.ts';
 import type { Quantity, Unit } from '../series/quantities.ts';
 import type { RejectedRow } from './intake-error.ts';
@@ -70,20 +71,9 @@ export interface StagedPart {
   firstDay: number;
   /** in `unit`, NaN = missing */
   values: Float64Array;
-  /** index into `codeList` a day; 255 = the file has no row for this day */
+  /** index into `codeList` a day; NO_ROW where the file has no row for the day */
   codes: Uint8Array;
   codeList: DayCode[];
-}
-
-/** What a file says of a day beside its number. */
-export interface DayCode {
-  /** the flag as written; where the row has none, the text that stood in the value's place (`Ice`, `-99.0000`, `<`) */
-  text: string;
-  /** flag bits, see FLAG */
-  bits: number;
-  /** text in the value's place (`-999.00`, `Ice`), or before its number (`<`); absent when there was only a number
-   *  or nothing */
-  valueText?: string;
 }
 
 /** A station that flows may name. */

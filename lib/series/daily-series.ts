@@ -19,3 +19,6 @@ export const FLAG = {
 } as const;
 export type FlagName = keyof typeof FLAG;
 export const FLAG_NAMES = Object.keys(FLAG) as FlagName[];
+
+/** Flag bits by their names. */
+export const bitsOfFlags = (names: readonly FlagName[]): number => names.reduce((bits, name) => bits | FLAG[name], 0);

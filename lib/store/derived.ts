@@ -1,10 +1,10 @@
 import type { DailySeries } from '../series/daily-series.ts';
+import { type DayCode, flagsOfCodes } from '../series/day-codes.ts';
 import { type DerivedTerm, derive } from '../series/derive.ts';
 import { type Quantity, toShownUnit, UNITS_OF, type Unit } from '../series/quantities.ts';
 import type { DerivedRecipe } from '../series/station-history.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { whenFree } from './busy.ts';
-import { type Code, flagsOfCodes } from './codes.ts';
 import { type Connection, change, immediately, rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { recipeOf } from './history-text.ts';
@@ -131,7 +131,7 @@ function readShown(connection: Connection, stationId: number, quantity: Quantity
   const values = valuesOfBlob(blob);
   if (factor !== 1) for (let day = 0; day < values.length; day++) values[day] *= factor;
   const bytes = bytesOfBlob(codes);
-  const flags = codeList === null ? bytes : flagsOfCodes(bytes, JSON.parse(codeList) as Code[]);
+  const flags = codeList === null ? bytes : flagsOfCodes(bytes, JSON.parse(codeList) as DayCode[]);
   const marks = rows(connection, MARKS).all([stationId, quantity]) as [number, number, MarkSpan['kind']][];
   layMarks(
     flags,

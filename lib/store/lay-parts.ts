@@ -1,6 +1,6 @@
 import { FLAG } from '../series/daily-series.ts';
+import { type DayCode, NO_ROW } from '../series/day-codes.ts';
 import { type Quantity, toShownUnit, type Unit } from '../series/quantities.ts';
-import { type Code, NO_ROW } from './codes.ts';
 
 /** What an import does on a day that holds a value already, when its own is another one.
  *  keep: leave it · take-new: replace it · take-where-provisional: replace it when it is provisional */
@@ -13,7 +13,7 @@ export interface LayablePart {
   firstDay: number;
   values: Float64Array;
   codes: Uint8Array;
-  codeList: readonly Code[];
+  codeList: readonly DayCode[];
   rule: OverlapRule;
 }
 
@@ -58,8 +58,7 @@ export interface LayOptions {
   watcher?: LayWatcher;
 }
 
-/** Values of unlike units count as equal within this share of the larger: more than rounding in the conversion, less
- *  than the last digit of any gauge. */
+/** More than rounding in the conversion of units, less than the last digit of any gauge. */
 const UNIT_TOLERANCE = 1e-9;
 
 /** What is known of a day's quality code: nothing, a row without a code, a code. */
@@ -176,6 +175,7 @@ function ends(values: Float64Array): [number, number] {
 const mayReplace = (rule: OverlapRule, flags: number): boolean =>
   rule === 'take-new' || (rule === 'take-where-provisional' && (flags & FLAG.provisional) !== 0);
 
-function isSame(a: number, b: number, exactly: boolean): boolean {
+/** Equal values. After a conversion of units so within a billionth of the larger. */
+export function isSame(a: number, b: number, exactly: boolean): boolean {
   return a === b || (!exactly && Math.abs(a - b) <= UNIT_TOLERANCE * Math.max(Math.abs(a), Math.abs(b)));
 }

@@ -1,6 +1,6 @@
+import { type DayCode, flagsOfCodes } from '../series/day-codes.ts';
 import type { Quantity, Unit } from '../series/quantities.ts';
 import { blobOf, blobOfValues, bytesOfBlob, valuesOfBlob } from './blobs.ts';
-import { type Code, flagsOfCodes } from './codes.ts';
 import { type Connection, change, rows } from './connection.ts';
 import { VISIBLE } from './import-claim.ts';
 import type { LaidDays, LayablePart, OverlapRule } from './lay-parts.ts';
@@ -37,7 +37,7 @@ export function loadParts(connection: Connection, stationId: number, quantity: s
       importId,
       unit,
       firstDay,
-      codeList: JSON.parse(codeList) as Code[],
+      codeList: JSON.parse(codeList) as DayCode[],
       values: valuesOfBlob(values),
       codes: bytesOfBlob(codes),
       rule,

@@ -1,5 +1,8 @@
 import { FLAG } from '../series/daily-series.ts';
 
+/** Bits that a check or a person lays over what a file said. */
+export const LAID_OVER = FLAG.suspect | FLAG.rejected;
+
 export const MARK_KINDS = ['reject', 'accept', 'note'] as const;
 export type MarkKind = (typeof MARK_KINDS)[number];
 

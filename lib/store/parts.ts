@@ -1,4 +1,4 @@
-import type { DayCode } from '../intake/types.ts';
+import type { DayCode } from '../series/day-codes.ts';
 import type { Unit } from '../series/quantities.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import { type Connection, rows, sharedConnection } from './connection.ts';
@@ -15,7 +15,7 @@ export interface PartDays {
   firstDay: number;
   /** as written, in `unit`; NaN = missing */
   values: Float64Array;
-  /** index into codeList a day; 255 = the file has no row for this day */
+  /** index into codeList a day; NO_ROW where the file has no row for the day */
   codes: Uint8Array;
   /** the quality codes as written, each with the flag bits it was understood as */
   codeList: DayCode[];

@@ -1,9 +1,9 @@
 import { createHash } from 'node:crypto';
 import type { DailySeries } from '../series/daily-series.ts';
+import { type DayCode, flagsOfCodes } from '../series/day-codes.ts';
 import type { FlowUnit } from '../series/flow-units.ts';
 import { toM3s } from '../series/flow-units.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
-import { type Code, flagsOfCodes } from './codes.ts';
 import { rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
 import { hashAsRead } from './hash-as-read.ts';
@@ -69,7 +69,8 @@ export function readStored(
     const series = {
       firstDay,
       values: quantity === 'flow' ? inM3s(valuesOfBlob(values), unit, areaKm2) : valuesOfBlob(values),
-      flags: codeList === null ? bytesOfBlob(flags) : flagsOfCodes(bytesOfBlob(flags), JSON.parse(codeList) as Code[]),
+      flags:
+        codeList === null ? bytesOfBlob(flags) : flagsOfCodes(bytesOfBlob(flags), JSON.parse(codeList) as DayCode[]),
     };
     visit(stationId, series, { hash, unit, areaKm2, suspect });
   }

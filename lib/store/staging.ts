@@ -1,9 +1,9 @@
 import { existsSync, rmSync } from 'node:fs';
 import Database from 'libsql';
 import type { FoundFacts, StagedPart } from '../intake/types.ts';
+import { flagsOfCodes } from '../series/day-codes.ts';
 import type { ArchivedRegion } from './archived-region.ts';
 import { blobOf, blobOfValues } from './blobs.ts';
-import { flagsOfCodes } from './codes.ts';
 import { databasePath } from './database-url.ts';
 import type { OverlapRule } from './lay-parts.ts';
 import type { LayerKind } from './layer-kinds.ts';

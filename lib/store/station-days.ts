@@ -1,9 +1,10 @@
-import { FLAG } from '../series/daily-series.ts';
+import { NO_ROW } from '../series/day-codes.ts';
 import { type Quantity, toShownUnit, UNITS_OF, type Unit } from '../series/quantities.ts';
-import { NO_ROW } from './codes.ts';
 import { rows, sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
+import { isSame } from './lay-parts.ts';
 import { loadParts, type StoredPart } from './lay-record.ts';
+import { LAID_OVER } from './marks-on-flags.ts';
 import { readSeries } from './records.ts';
 
 /** A stretch of one station's days as they are read: marks and checks laid over them. */
@@ -60,11 +61,6 @@ export function stationDays(
   return found;
 }
 
-/** Bits that a person or a check may have changed since the file was read. */
-const LAID_OVER = FLAG.suspect | FLAG.rejected;
-/** Values of unlike units count as equal within this share, as where parts are laid over one another. */
-const UNIT_TOLERANCE = 1e-9;
-
 /** The text that stood beside each day's value: that of the last part which wrote this value with these flags. */
 function textsOf(
   { firstDay, values, flags }: StationDays,
@@ -80,11 +76,9 @@ function textsOf(
       if (at < 0 || at >= part.codes.length || part.codes[at] === NO_ROW) continue;
       const { text, bits } = part.codeList[part.codes[at]];
       if (text === '' || (bits & ~LAID_OVER) !== (flags[i] & ~LAID_OVER)) continue;
-      if (isSame(part.values[at] * factor, values[i])) texts[i] = text;
+      const value = part.values[at] * factor;
+      if (Object.is(value, values[i]) || isSame(value, values[i], false)) texts[i] = text;
     }
   }
   return texts;
 }
-
-const isSame = (a: number, b: number): boolean =>
-  Object.is(a, b) || Math.abs(a - b) <= UNIT_TOLERANCE * Math.max(Math.abs(a), Math.abs(b));

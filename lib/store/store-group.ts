@@ -1,9 +1,9 @@
+import type { DayCode } from '../series/day-codes.ts';
 import type { Unit } from '../series/quantities.ts';
 import type { Group } from './apply-plan.ts';
 import { refuseForArea } from './area-error.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import type { Claim } from './claim-import.ts';
-import type { Code } from './codes.ts';
 import { type Connection, change, rows } from './connection.ts';
 import { RevisionCounter } from './count-revisions.ts';
 import { type LaidCounts, type LayablePart, layParts, type OverlapRule } from './lay-parts.ts';
@@ -126,5 +126,5 @@ function stagedPart(connection: Connection, id: number, rule: OverlapRule): Laya
     'SELECT unit, firstDay, codeList, "values", codes FROM staging.part WHERE id = ?',
   ).get([id]) as [Unit, number, string, Buffer, Buffer];
   const days = { values: valuesOfBlob(values), codes: bytesOfBlob(codes) };
-  return { unit, firstDay, codeList: JSON.parse(codeList) as Code[], ...days, rule };
+  return { unit, firstDay, codeList: JSON.parse(codeList) as DayCode[], ...days, rule };
 }

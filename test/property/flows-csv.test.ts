@@ -2,10 +2,9 @@ import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { flowsCsv, flowsMapping } from '../../lib/export/flows-csv.ts';
 import { flagBits } from '../../lib/intake/flags.ts';
-import type { DayCode, StagedPart } from '../../lib/intake/types.ts';
+import type { StagedPart } from '../../lib/intake/types.ts';
+import { type DayCode, NO_ROW } from '../../lib/series/day-codes.ts';
 import { read } from '../unit/intake/reading.ts';
-
-const NO_ROW = 255;
 
 /** Codes as readers make them: a flag's text, or the text in the value's place where there was no flag. */
 const flag = fc.constantFrom('', 'A', 'A:e', 'P', 'B', 'note "x", y', 'Ice', 'ümlaut; 3');

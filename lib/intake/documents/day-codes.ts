@@ -1,7 +1,7 @@
-import { FLAG } from '../../series/daily-series.ts';
+import { bitsOfFlags } from '../../series/daily-series.ts';
+import { type DayCode, NO_ROW } from '../../series/day-codes.ts';
 import { flagBits } from '../flags.ts';
-import { NO_ROW } from '../station-days.ts';
-import { type DayCode, IntakeError, type Mapping } from '../types.ts';
+import { IntakeError, type Mapping } from '../types.ts';
 
 /** Longest text of a qualifier that is kept. */
 const KEPT_TEXT = 200;
@@ -53,7 +53,7 @@ export class DayCodes {
     const text = flag.slice(0, KEPT_TEXT);
     const said = Object.hasOwn(this.meanings, text) ? this.meanings[text] : undefined;
     const words = exact ? 0 : flagBits(text) | flagBits(valueText ?? '');
-    const all = said ? said.reduce((sum, name) => sum | FLAG[name], 0) : bits | words;
+    const all = said ? bitsOfFlags(said) : bits | words;
     return { text: text || (valueText ?? ''), bits: all, ...(valueText === undefined ? {} : { valueText }) };
   }
 

@@ -1,10 +1,11 @@
 import { isoDate } from '../../calendar/day.ts';
+import { NO_ROW } from '../../series/day-codes.ts';
 import { DailyMeans } from '../daily-means.ts';
 import { spacingProblem, sparseSpacing } from '../day-spacing.ts';
 import type { PageMemory } from '../page-memory.ts';
 import { stagedPart } from '../report.ts';
 import { RowsOfDays } from '../several-a-day.ts';
-import { NO_ROW, OTHER_VALUE, StationDays } from '../station-days.ts';
+import { OTHER_VALUE, StationDays } from '../station-days.ts';
 import { NO_TIME } from '../time-of-day.ts';
 import { IntakeError, type Quantity, type StagedPart, type Unit } from '../types.ts';
 import type { DayCodes, PointCode } from './day-codes.ts';

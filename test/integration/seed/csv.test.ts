@@ -2,9 +2,9 @@ import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, expect, test } from 'vitest';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 import { registryCsv, writeFlowsCsv } from '../../../seed/csv.ts';
 import { generateRegion } from '../../../seed/generate.ts';
-import { NO_ROW } from '../../../seed/observe.ts';
 
 let folder = '';
 beforeEach(() => {

@@ -1,14 +1,7 @@
 import { expect, test } from 'vitest';
 import { PageMemory } from '../../../lib/intake/page-memory.ts';
-import {
-  FILLED,
-  NEW_DAY,
-  NO_ROW,
-  OTHER_CODE,
-  OTHER_VALUE,
-  SAME_VALUE,
-  StationDays,
-} from '../../../lib/intake/station-days.ts';
+import { FILLED, NEW_DAY, OTHER_CODE, OTHER_VALUE, SAME_VALUE, StationDays } from '../../../lib/intake/station-days.ts';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 
 test('StationDays.run lays rows in any order on consecutive days, with NO_ROW and NaN between', () => {
   const record = new StationDays(new PageMemory());

@@ -3,9 +3,9 @@ import { expect, test } from 'vitest';
 import { DEFAULT_BASIS } from '../../../lib/basis.ts';
 import { isoDate, parseIsoDate } from '../../../lib/calendar/day.ts';
 import { annualMinima } from '../../../lib/lowflow/annual-minima.ts';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 import { median } from '../../../lib/statistics/quantile.ts';
 import { DEMO_SEED, generateRegion, type SeedRecord, type SeedStation } from '../../../seed/generate.ts';
-import { NO_ROW } from '../../../seed/observe.ts';
 
 const region = generateRegion({ seed: DEMO_SEED });
 const records = new Map([...region.records()].map((record) => [record.code, record]));

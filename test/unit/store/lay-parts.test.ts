@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 import { type LayablePart, layParts } from '../../../lib/store/lay-parts.ts';
 
 const CODES = [
@@ -7,7 +8,6 @@ const CODES = [
   { text: 'P', bits: 2 },
   { text: 'e', bits: 1 },
 ];
-const NO_ROW = 255;
 const NaN_ = Number.NaN;
 
 /** A part in m³/s; codes by their text, null where the file has no row. */
