@@ -5,6 +5,9 @@
 const DAYS_PER_CYCLE = 146097;
 const EPOCH_FROM_MARCH_YEAR_0 = 719468;
 
+/** Seconds of a day, leap seconds aside. */
+export const DAY_SECONDS = 86_400;
+
 const MONTH_LENGTHS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
 /** A day of the calendar: month 1–12, day 1–31. */

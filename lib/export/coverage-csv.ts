@@ -1,4 +1,5 @@
 import { type Column, csvTable } from './csv.ts';
+import { LOW_FLOW_YEAR, STATION_CODE } from './shared-columns.ts';
 
 /** One low-flow year of a record: how many days it has, and of what kind. */
 export interface CoverageRow {
@@ -19,13 +20,8 @@ const flagged = (name: keyof CoverageRow['flagged'], words: string): Column<Cove
 });
 
 export const COVERAGE_COLUMNS: readonly Column<CoverageRow>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
-  {
-    name: 'year',
-    datatype: 'integer',
-    description: 'low-flow year, named by the calendar year in which it begins',
-    value: (row) => row.year,
-  },
+  STATION_CODE,
+  LOW_FLOW_YEAR,
   { name: 'state', datatype: 'string', description: 'usable, partial or missing', value: (row) => row.state },
   { name: 'days', datatype: 'integer', description: 'days of the year or season', value: (row) => row.days },
   {

@@ -1,4 +1,5 @@
 import { type Column, csvTable } from './csv.ts';
+import { STATION_CODE } from './shared-columns.ts';
 
 /** One station's duration curve as it is written: flows at exceedances, in one unit. */
 export interface CurveToWrite {
@@ -18,7 +19,7 @@ export interface CurveRow {
 }
 
 export const CURVE_COLUMNS: readonly Column<CurveRow>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
+  STATION_CODE,
   {
     name: 'exceedance',
     datatype: 'number',

@@ -2,6 +2,7 @@ import { isoDate } from '../calendar/day.ts';
 import { FLAG, type FlagName } from '../series/daily-series.ts';
 import type { StationDays } from '../store/station-days.ts';
 import { type Column, csvTable } from './csv.ts';
+import { STATION_CODE } from './shared-columns.ts';
 
 interface DayRow {
   code: string;
@@ -17,7 +18,7 @@ export const flagWords = (bits: number): string =>
   (Object.keys(FLAG) as FlagName[]).filter((name) => (bits & FLAG[name]) !== 0).join(';');
 
 export const DAY_COLUMNS: readonly Column<DayRow>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
+  STATION_CODE,
   { name: 'date', datatype: 'date', description: 'day', value: (row) => row.date },
   {
     name: 'value',

@@ -1,14 +1,13 @@
-import { isoDate } from '../calendar/day.ts';
 import type { StoredFinding } from '../store/findings.ts';
 import type { MarkRow } from '../store/marks.ts';
 import { type Column, csvTable } from './csv.ts';
+import { QUANTITY, STATION_CODE, STRETCH } from './shared-columns.ts';
 
 export const FINDING_COLUMNS: readonly Column<StoredFinding>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
-  { name: 'quantity', datatype: 'string', description: 'of which record', value: (row) => row.quantity },
+  STATION_CODE,
+  QUANTITY,
   { name: 'kind', datatype: 'string', description: 'which check found it', value: (row) => row.kind },
-  { name: 'first', datatype: 'date', description: 'first day of the stretch', value: (row) => isoDate(row.firstDay) },
-  { name: 'last', datatype: 'date', description: 'last day of the stretch', value: (row) => isoDate(row.lastDay) },
+  ...STRETCH,
   { name: 'days', datatype: 'integer', description: 'days of the stretch that are at fault', value: (row) => row.days },
   {
     name: 'state',
@@ -28,11 +27,10 @@ export const FINDING_COLUMNS: readonly Column<StoredFinding>[] = [
 export const findingsCsv = (findings: readonly StoredFinding[]): string => csvTable(FINDING_COLUMNS, findings);
 
 export const MARK_COLUMNS: readonly Column<MarkRow>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
-  { name: 'quantity', datatype: 'string', description: 'of which record', value: (row) => row.quantity },
+  STATION_CODE,
+  QUANTITY,
   { name: 'kind', datatype: 'string', description: 'reject, accept or note', value: (row) => row.kind },
-  { name: 'first', datatype: 'date', description: 'first day of the stretch', value: (row) => isoDate(row.firstDay) },
-  { name: 'last', datatype: 'date', description: 'last day of the stretch', value: (row) => isoDate(row.lastDay) },
+  ...STRETCH,
   { name: 'reason', datatype: 'string', description: 'why', value: (row) => row.reason },
   { name: 'by', datatype: 'string', description: 'who', value: (row) => row.by },
   { name: 'at', datatype: 'string', description: 'when, UTC', value: (row) => row.createdAt.toISOString() },

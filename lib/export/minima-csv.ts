@@ -1,6 +1,7 @@
 import { isoDate } from '../calendar/day.ts';
 import type { StationMinima } from '../region/ranking-types.ts';
 import { type Column, csvTable } from './csv.ts';
+import { LOW_FLOW_YEAR, STATION_CODE } from './shared-columns.ts';
 
 /** One year of one station. */
 export interface MinimaRow {
@@ -17,13 +18,8 @@ export interface MinimaRow {
 }
 
 export const MINIMA_COLUMNS: readonly Column<MinimaRow>[] = [
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
-  {
-    name: 'year',
-    datatype: 'integer',
-    description: 'low-flow year, named by the calendar year in which it begins',
-    value: (row) => row.year,
-  },
+  STATION_CODE,
+  LOW_FLOW_YEAR,
   { name: 'usable', datatype: 'boolean', description: 'whether the year may be used', value: (row) => row.usable },
   { name: 'missing_days', datatype: 'integer', description: 'days without a value', value: (row) => row.missingDays },
   {

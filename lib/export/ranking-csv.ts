@@ -1,5 +1,6 @@
 import type { RankingRow } from '../region/ranking-types.ts';
 import { type Column, csvTable } from './csv.ts';
+import { STATION_CODE } from './shared-columns.ts';
 
 const M3S = 'm³/s';
 const SPECIFIC = 'L/s/km²';
@@ -25,7 +26,7 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
     description: 'upper end of the 90 % interval of the place; empty while not computed',
     value: (row) => row.rankHigh,
   },
-  { name: 'station_code', datatype: 'string', description: 'code of the gauging station', value: (row) => row.code },
+  STATION_CODE,
   { name: 'station_name', datatype: 'string', description: 'name of the gauging station', value: (row) => row.name },
   { name: 'river', datatype: 'string', description: 'river at the station', value: (row) => row.river },
   { name: 'latitude', datatype: 'number', unit: '°', description: 'latitude, WGS 84', value: (row) => row.latitude },

@@ -1,5 +1,6 @@
 import type { CommonPeriods, CountedFlag, RegionRecords, StationYears } from '../jobs/records-types.ts';
 import { type Column, csvTable } from './csv.ts';
+import { LOW_FLOW_YEAR, STATION_CODE } from './shared-columns.ts';
 
 /** One low-flow year of one station. */
 interface RecordYear {
@@ -19,18 +20,8 @@ const flagged = (name: string, flag: CountedFlag, words: string): Column<RecordY
 const yearOf = ({ station, at }: RecordYear): number => (station.firstYear ?? 0) + at;
 
 export const RECORD_COLUMNS: readonly Column<RecordYear>[] = [
-  {
-    name: 'station_code',
-    datatype: 'string',
-    description: 'code of the gauging station',
-    value: ({ station }) => station.code,
-  },
-  {
-    name: 'year',
-    datatype: 'integer',
-    description: 'low-flow year, named by the calendar year in which it begins',
-    value: yearOf,
-  },
+  { ...STATION_CODE, value: ({ station }) => station.code },
+  { ...LOW_FLOW_YEAR, value: yearOf },
   {
     name: 'days',
     datatype: 'integer',

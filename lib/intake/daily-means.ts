@@ -1,11 +1,10 @@
-import { isoDate } from '../calendar/day.ts';
+import { DAY_SECONDS, isoDate } from '../calendar/day.ts';
 import { FLAG, FLAG_NAMES } from '../series/daily-series.ts';
 import { CodeNumbers, type DayCode, NO_ROW } from '../series/day-codes.ts';
 import type { DaySink } from './rows/row-reader.ts';
 import { NO_TIME } from './time-of-day.ts';
 import type { StagedPart } from './types.ts';
 
-const DAY = 86_400;
 const PAGE_BITS = 8;
 const PAGE = 1 << PAGE_BITS;
 /** Days of a month with one reading each from which on that is taken for the station's way of measuring in that month. */
@@ -194,8 +193,8 @@ function expectedReadings(pages: ReadonlyMap<number, Page>): (day: number) => nu
   return (day) => {
     const month = months.get(monthOf(day));
     const step = mostFrequent(month?.steps ?? new Map());
-    if (step !== null) return DAY / step;
-    return (month?.singles ?? 0) >= SINGLE_READINGS ? 1 : DAY / usual;
+    if (step !== null) return DAY_SECONDS / step;
+    return (month?.singles ?? 0) >= SINGLE_READINGS ? 1 : DAY_SECONDS / usual;
   };
 }
 
@@ -215,5 +214,5 @@ function rowsADay(pages: ReadonlyMap<number, Page>): number {
   for (const page of pages.values()) {
     for (const rows of page.rows) if (rows > 0) counts.set(rows, (counts.get(rows) ?? 0) + 1);
   }
-  return DAY / (mostFrequent(counts) ?? 1);
+  return DAY_SECONDS / (mostFrequent(counts) ?? 1);
 }

@@ -1,4 +1,4 @@
-import { isoDate } from '../calendar/day.ts';
+import { DAY_SECONDS, isoDate } from '../calendar/day.ts';
 import { DailyMeans } from './daily-means.ts';
 import { spacingProblem, sparseSpacing } from './day-spacing.ts';
 import type { TablePlan } from './recognise/table-plan.ts';
@@ -80,7 +80,7 @@ function refuseSparse(file: string, sink: RecordSink, codes: readonly string[]):
 
 /** Number of the latest day that has begun anywhere on Earth, where clocks are at most 14 hours ahead. */
 function lastDayBegun(): number {
-  return Math.floor((Date.now() + 14 * 3600_000) / 86_400_000);
+  return Math.floor((Date.now() / 1000 + 14 * 3600) / DAY_SECONDS);
 }
 
 function daysBehind({ values, firstDay }: StagedPart, today: number): number {

@@ -1,3 +1,4 @@
+import { isJsonObject, jsonOrDeep } from './json-object.ts';
 import { IntakeError, type LayerFile } from './types.ts';
 import { readWholeText } from './whole-text.ts';
 
@@ -7,11 +8,6 @@ const DRAWN = ['LineString', 'MultiLineString', 'Polygon', 'MultiPolygon'];
 const DEPTHS: Record<string, number> = { LineString: 1, MultiLineString: 2, Polygon: 2, MultiPolygon: 3 };
 
 type Bounds = [number, number, number, number];
-type Json = Record<string, unknown>;
-
-const isObject = (value: unknown): value is Json =>
-  typeof value === 'object' && value !== null && !Array.isArray(value);
-
 /** Reads a map layer: a GeoJSON FeatureCollection (or one Feature) of lines or polygons in longitude and latitude
  *  (RFC 7946). Its kind is told by its shapes: lines are rivers, polygons catchments, a mixture other.
  *  @throws IntakeError naming the feature and the position that cannot be */
@@ -38,7 +34,7 @@ export async function readLayer(path: string, fileName: string): Promise<LayerFi
     name: fileName.replace(/^.*[\\/]/, '').replace(/(?<=.)\.[^.]*$/, ''),
     kind: kindOf([...shapes.keys()]),
     geojson:
-      isObject(parsed) && parsed.type === 'FeatureCollection'
+      isJsonObject(parsed) && parsed.type === 'FeatureCollection'
         ? text
         : JSON.stringify({ type: 'FeatureCollection', features }),
     ...{ features: features.length, bounds, sha256 },
@@ -48,15 +44,6 @@ export async function readLayer(path: string, fileName: string): Promise<LayerFi
 
 function problem(file: string, message: string, remedy: string, value?: string): IntakeError {
   return new IntakeError({ file, message, remedy, ...(value === undefined ? {} : { value: value.slice(0, 200) }) });
-}
-
-/** A value as JSON for a message; one nested too deep to be written is named as such. */
-function shown(value: unknown): string {
-  try {
-    return String(JSON.stringify(value));
-  } catch {
-    return 'nested too deep';
-  }
 }
 
 function parseJson(text: string, file: string): unknown {
@@ -78,12 +65,12 @@ function parseJson(text: string, file: string): unknown {
 }
 
 function featuresOf(parsed: unknown, file: string): unknown[] {
-  if (isObject(parsed) && parsed.type === 'FeatureCollection' && Array.isArray(parsed.features)) {
+  if (isJsonObject(parsed) && parsed.type === 'FeatureCollection' && Array.isArray(parsed.features)) {
     if (parsed.features.length > 0) return parsed.features;
     throw problem(file, 'the layer has no features', 'Export it again with the lines or polygons that it should hold');
   }
-  if (isObject(parsed) && parsed.type === 'Feature') return [parsed];
-  const type = isObject(parsed) ? String(parsed.type ?? 'an object without a type') : 'no object';
+  if (isJsonObject(parsed) && parsed.type === 'Feature') return [parsed];
+  const type = isJsonObject(parsed) ? String(parsed.type ?? 'an object without a type') : 'no object';
   throw problem(
     file,
     'the file is JSON but not a GeoJSON FeatureCollection',
@@ -94,18 +81,18 @@ function featuresOf(parsed: unknown, file: string): unknown[] {
 
 /** @returns the shape's type; null when the feature has none. Widens `bounds`. */
 function checkFeature(feature: unknown, number: number, file: string, bounds: Bounds): string | null {
-  if (!isObject(feature) || feature.type !== 'Feature') {
+  if (!isJsonObject(feature) || feature.type !== 'Feature') {
     throw problem(
       file,
       `feature ${number} is not a GeoJSON Feature`,
       'Export the layer again as GeoJSON',
-      shown(feature),
+      jsonOrDeep(feature),
     );
   }
   const { geometry } = feature;
   if (geometry === null || geometry === undefined) return null;
-  const type = isObject(geometry) ? String(geometry.type) : String(geometry);
-  if (!isObject(geometry) || !DRAWN.includes(type)) {
+  const type = isJsonObject(geometry) ? String(geometry.type) : String(geometry);
+  if (!isJsonObject(geometry) || !DRAWN.includes(type)) {
     throw problem(file, `feature ${number} is neither a line nor a polygon`, `Keep only ${DRAWN.join(', ')}`, type);
   }
   checkPositions(geometry.coordinates, DEPTHS[type], { number, file, bounds });
@@ -115,7 +102,12 @@ function checkFeature(feature: unknown, number: number, file: string, bounds: Bo
 function checkPositions(list: unknown, depth: number, about: { number: number; file: string; bounds: Bounds }): void {
   const { number, file, bounds } = about;
   if (!Array.isArray(list)) {
-    throw problem(file, `feature ${number} has no list of positions`, 'Export the layer again as GeoJSON', shown(list));
+    throw problem(
+      file,
+      `feature ${number} has no list of positions`,
+      'Export the layer again as GeoJSON',
+      jsonOrDeep(list),
+    );
   }
   if (depth > 0) {
     for (const inner of list) checkPositions(inner, depth - 1, about);
@@ -128,7 +120,7 @@ function checkPositions(list: unknown, depth: number, about: { number: number; f
       file,
       `feature ${number} has a position that is no longitude (−180 to 180) and latitude (−90 to 90)`,
       'Export the layer in WGS 84 (EPSG:4326), longitude first',
-      shown(list),
+      jsonOrDeep(list),
     );
   }
   bounds[0] = Math.min(bounds[0], longitude);

@@ -1,4 +1,4 @@
-import { DEAD_AFTER_MS } from '../store/jobs.ts';
+import { DEAD_AFTER_MS } from '../store/dead-after.ts';
 import { recoverStore } from '../store/recover.ts';
 import { launchPendingChecks } from './checks.ts';
 import { discardRejectedRowsOfJob } from './rejected-rows.ts';

@@ -1,5 +1,6 @@
 import { readFile, stat } from 'node:fs/promises';
 import type * as z from 'zod';
+import { lastPart } from '../intake/archive/kinds.ts';
 import { parseMapping } from '../intake/mapping.ts';
 import { IntakeError } from '../intake/types.ts';
 import { ARCHIVE_FORMAT, ARCHIVE_VERSION, type ArchivedRegion } from '../store/archived-region.ts';
@@ -62,8 +63,6 @@ export async function openRegionArchive(files: readonly GivenFile[]): Promise<Op
   }
   return opened;
 }
-
-const lastPart = (name: string): string => name.split('/').at(-1) ?? name;
 
 function isRegionDocument(json: unknown): json is Record<string, unknown> {
   return typeof json === 'object' && json !== null && (json as { format?: unknown }).format === ARCHIVE_FORMAT;

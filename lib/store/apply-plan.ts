@@ -5,6 +5,7 @@ import { type Connection, rows } from './connection.ts';
 import { VISIBLE } from './import-claim.ts';
 import { ImportRefused } from './import-refused.ts';
 import { refuseDerived } from './plan-derived.ts';
+import { stagedFileName } from './staged.ts';
 import {
   bareFacts,
   FACT_NAMES,
@@ -167,9 +168,8 @@ function groupsOf(
 }
 
 function unknownStation(connection: Connection, file: number, code: string): ImportRefused {
-  const [fileName] = rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string];
   return new ImportRefused({
-    file: fileName,
+    file: stagedFileName(connection, file),
     value: code,
     message: 'the region’s registry has no station of this code',
     remedy: 'Add the station to the registry, or name the station that the file is of',

@@ -19,8 +19,6 @@ export interface JobRow {
   finishedAt: Date | null;
 }
 
-export { DEAD_AFTER_MS };
-
 export async function createJob(job: { id: string; kind: string; regionId?: number | null }): Promise<JobRow> {
   const data = { id: job.id, kind: job.kind, regionId: job.regionId ?? null, state: 'waiting' };
   return toJob(await whenFree(() => openStore().prisma.job.create({ data })));

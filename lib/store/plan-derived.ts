@@ -4,6 +4,7 @@ import { type Connection, rows } from './connection.ts';
 import { recipeOf } from './history-text.ts';
 import { ImportRefused } from './import-refused.ts';
 import { recipeProblem } from './recipes.ts';
+import { stagedFileName } from './staged.ts';
 
 /** Refuses days of a station whose record of that quantity is derived from others, and recipes that cannot be followed.
  *  @throws ImportRefused naming file and station */
@@ -17,7 +18,7 @@ export function refuseDerived(connection: Connection, { stations, said, groups }
   for (const { station, quantity, staged } of groups) {
     if (recipes.get(station.code)?.quantity !== quantity || staged.length === 0) continue;
     throw new ImportRefused({
-      file: fileName(connection, staged[0].file),
+      file: stagedFileName(connection, staged[0].file),
       value: station.code,
       message: `the ${quantity} of this station is derived from other stations, and the file brings days of its own`,
       remedy: 'Give the measured days a station of their own, or take the recipe away first',
@@ -29,7 +30,7 @@ export function refuseDerived(connection: Connection, { stations, said, groups }
       const problem = recipe && problemOf(connection, stations.get(code)!, recipe, { stations, recipes });
       if (!problem) continue;
       throw new ImportRefused({
-        file: fileName(connection, file),
+        file: stagedFileName(connection, file),
         value: code,
         message: `the recipe of this station cannot be followed: ${problem}`,
         remedy: 'Correct the recipe in the registry, or leave it out',
@@ -48,6 +49,3 @@ function problemOf(
   if (measured.get([id, recipe.quantity])) return `The station has imported days of ${recipe.quantity}.`;
   return recipeProblem(code, recipe, { recipes, codes: stations });
 }
-
-const fileName = (connection: Connection, file: number): string =>
-  (rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string])[0];

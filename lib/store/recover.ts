@@ -3,7 +3,8 @@ import { basename, dirname, join } from 'node:path';
 import Database from 'libsql';
 import { sharedConnection } from './connection.ts';
 import { databasePath } from './database-url.ts';
-import { DEAD_AFTER_MS, failDeadJobs } from './jobs.ts';
+import { DEAD_AFTER_MS } from './dead-after.ts';
+import { failDeadJobs } from './jobs.ts';
 import { recoverImports } from './withdraw.ts';
 
 export interface Recovered {

@@ -1,14 +1,12 @@
-import type { DayCode } from '../series/day-codes.ts';
-import type { Unit } from '../series/quantities.ts';
 import type { Group } from './apply-plan.ts';
 import { refuseForArea } from './area-error.ts';
-import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
 import type { Claim } from './claim-import.ts';
-import { type Connection, change, rows } from './connection.ts';
+import { type Connection, change } from './connection.ts';
 import { RevisionCounter } from './count-revisions.ts';
-import { type LaidCounts, type LayablePart, layParts, type OverlapRule } from './lay-parts.ts';
+import { type LaidCounts, type LayablePart, layParts } from './lay-parts.ts';
 import { loadParts, type RecordHead, standingRecord, storeLaid } from './lay-record.ts';
 import { OverlapError } from './overlap-error.ts';
+import { registryFile, stagedFileName, stagedHead, stagedPart } from './staged.ts';
 
 /** Stores the records of an import one by one, for nobody to see yet, and counts what each file does to days that stand. */
 export class GroupWork {
@@ -52,7 +50,7 @@ export class GroupWork {
     }
     const areaKm2 = station.facts.areaKm2 as number | null;
     refuseForArea(parts, { code: station.code, areaKm2 }, () =>
-      fileName(this.connection, staged[0]?.file ?? registryFile(this.connection)),
+      stagedFileName(this.connection, staged[0]?.file ?? registryFile(this.connection)),
     );
     const { code } = station;
     const { unit } = parts[0];
@@ -78,7 +76,7 @@ export class GroupWork {
     if (!this.isRefused) return;
     const files = [...this.counters].filter(([file, { unlike }]) => unlike > 0 && this.claim.rules.get(file) === null);
     const [first, ...others] = files.map(
-      ([file, counter]) => [fileName(this.connection, file), counter.firstUnlike, counter.revisions()] as const,
+      ([file, counter]) => [stagedFileName(this.connection, file), counter.firstUnlike, counter.revisions()] as const,
     );
     throw new OverlapError(
       ...first,
@@ -104,27 +102,4 @@ export class GroupWork {
     );
     return Number(copy.run([this.claim.imports.get(file)!, stationId, id]).lastInsertRowid);
   }
-}
-
-const fileName = (connection: Connection, file: number): string =>
-  (rows(connection, 'SELECT fileName FROM staging.file WHERE id = ?').get([file]) as [string])[0];
-
-const registryFile = (connection: Connection): number =>
-  (rows(connection, 'SELECT MIN(file) FROM staging.registry').get([]) as [number])[0];
-
-function stagedHead(connection: Connection, id: number): Omit<RecordHead, 'stationId' | 'quantity' | 'partId'> {
-  const [unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount] = rows(
-    connection,
-    'SELECT unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount FROM staging.part WHERE id = ?',
-  ).get([id]) as [Unit, number, number, string, number, number | null, number | null, number];
-  return { unit, firstDay, days, hash, valueCount, firstValueDay, lastValueDay, zeroCount, laidId: null };
-}
-
-function stagedPart(connection: Connection, id: number, rule: OverlapRule): LayablePart {
-  const [unit, firstDay, codeList, values, codes] = rows(
-    connection,
-    'SELECT unit, firstDay, codeList, "values", codes FROM staging.part WHERE id = ?',
-  ).get([id]) as [Unit, number, string, Buffer, Buffer];
-  const days = { values: valuesOfBlob(values), codes: bytesOfBlob(codes) };
-  return { unit, firstDay, codeList: JSON.parse(codeList) as DayCode[], ...days, rule };
 }

@@ -56,6 +56,7 @@ export function isLink(entry: Entry): boolean {
   return entry.versionMadeBy >> 8 === UNIX && ((entry.externalFileAttributes >>> 16) & TYPE_OF_FILE) === SYMBOLIC_LINK;
 }
 
+/** The name of an archive's file without the folders that it lies in there. */
 export function lastPart(name: string): string {
   return name.split('/').at(-1) ?? name;
 }

@@ -1,17 +1,18 @@
+import { KM2_OF, KM2_OF_M2 } from '../../series/area-units.ts';
 import type { FoundFacts } from '../types.ts';
 import { type Attributes, attribute } from './xml-events.ts';
 
-/** Square kilometres in one unit of area: UCUM codes and common words. */
+/** UCUM codes and common words for units of area, and km² in one. */
 const AREA_UNITS: Record<string, number> = {
-  km2: 1,
-  'km²': 1,
-  sqkm: 1,
-  ha: 0.01,
-  har: 0.01,
-  m2: 1e-6,
-  mi2: 2.589988110336,
-  '[mi_i]2': 2.589988110336,
-  '[smi_us]': 2.589988110336,
+  km2: KM2_OF['km²'],
+  'km²': KM2_OF['km²'],
+  sqkm: KM2_OF['km²'],
+  ha: KM2_OF.ha,
+  har: KM2_OF.ha,
+  m2: KM2_OF_M2,
+  mi2: KM2_OF['mi²'],
+  '[mi_i]2': KM2_OF['mi²'],
+  '[smi_us]': KM2_OF['mi²'],
 };
 const AREA = /catchment area|drainage area|basin area|watershed area/i;
 /** Geographic systems whose difference from WGS 84 is less than the width of a gauge's neighbourhood on a map. */

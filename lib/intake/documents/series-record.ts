@@ -1,4 +1,4 @@
-import { isoDate } from '../../calendar/day.ts';
+import { DAY_SECONDS, isoDate } from '../../calendar/day.ts';
 import { NO_ROW } from '../../series/day-codes.ts';
 import { DailyMeans } from '../daily-means.ts';
 import { spacingProblem, sparseSpacing } from '../day-spacing.ts';
@@ -63,7 +63,7 @@ export class SeriesRecord {
       const isDaily = head.stepDays !== null && head.stepDays >= 0.99;
       // A reading of the time before midnight is the last of the day that it ends.
       const endsDay = !isDaily && head.meaning === 'end' && seconds === 0;
-      this.means.second = endsDay ? 86_400 : seconds;
+      this.means.second = endsDay ? DAY_SECONDS : seconds;
       this.means.take(0, isDaily ? day : endsDay ? stamp.day - 1 : stamp.day, value, code);
       return;
     }

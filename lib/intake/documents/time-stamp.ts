@@ -1,10 +1,10 @@
+import { DAY_SECONDS } from '../../calendar/day.ts';
 import { dateProblem, dayOfParts, NO_DAY } from '../dates.ts';
 
 /** Which days a value's time stamp stands for: the interval that begins with it, the one that ends with it, or the
  *  moment itself. */
 export type StampMeaning = 'start' | 'end' | 'instant';
 
-const DAY_SECONDS = 86_400;
 const NOON = DAY_SECONDS / 2;
 const STAMP = /^(-?\d{4,})-(\d\d)(?:-(\d\d)(?:T(\d\d):(\d\d)(?::(\d\d)(?:[.,]\d+)?)?)?)?\s*(?:Z|[+-]\d\d(?::?\d\d)?)?$/;
 

@@ -1,4 +1,4 @@
-import { isoDate } from '../../calendar/day.ts';
+import { DAY_SECONDS, isoDate } from '../../calendar/day.ts';
 import type { DocumentParser } from './document-reader.ts';
 import { lastPart, MonitoringPoint, stationNames } from './monitoring-point.ts';
 import { statisticNamed } from './observed-quantity.ts';
@@ -11,7 +11,6 @@ import { type Attributes, attribute, type ElementHandler, readXml } from './xml-
 /** More stations than any region has. */
 const MOST_FEATURES = 100_000;
 const FEATURES = new Set(['MonitoringPoint', 'SF_SpatialSamplingFeature', 'SF_SamplingFeature']);
-const DAY_SECONDS = 86_400;
 
 /** How values were made, which the observation, its process and the series each may say. */
 interface Making {

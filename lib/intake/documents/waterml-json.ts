@@ -1,14 +1,10 @@
 import { JSONParser } from '@streamparser/json';
 import { IntakeError } from '../types.ts';
 import type { DocumentParser } from './document-reader.ts';
+import { CHECK_DOCUMENT, DEEPEST, LONGEST_PIECE } from './limits.ts';
 import { documentText } from './read-text.ts';
 import type { SeriesSink } from './series-sink.ts';
 import { headOf, noFacts, qualifierBits, type Waterml1Facts } from './waterml-1-series.ts';
-
-/** Levels within one another, and characters of one text, beyond which a document is no set of time series but a means
- *  to fill the memory. */
-const DEEPEST = 200;
-const LONGEST_PIECE = 1 << 20;
 
 /** What is put together whole; all else passes by. Some keep the list of series without what a service wraps it in. */
 const PIECES = ['sourceInfo', 'variable', 'values.*.value.*', 'values.*.qualifier'];
@@ -30,7 +26,7 @@ export const parseWatermlJson: DocumentParser = async (path, reading, sink, enou
     sinceToken = 0;
     if (value === '{' || value === '[') depth++;
     else if (value === '}' || value === ']') depth--;
-    if (depth > DEEPEST) throw refuse(`lists stand more than ${DEEPEST} deep in one another`, CHECK);
+    if (depth > DEEPEST) throw refuse(`lists stand more than ${DEEPEST} deep in one another`, CHECK_DOCUMENT);
   };
   parser.onValue = ({ value, key, stack }) => series.take(value, [...stack.slice(1).map((one) => one.key), key]);
   parser.onError = (cause) => {
@@ -49,14 +45,12 @@ export const parseWatermlJson: DocumentParser = async (path, reading, sink, enou
     sinceToken += piece.length;
     parser.write(piece);
     read += piece.length;
-    if (sinceToken > LONGEST_PIECE) throw refuse(`a text is longer than ${LONGEST_PIECE / 1024} kB`, CHECK);
+    if (sinceToken > LONGEST_PIECE) throw refuse(`a text is longer than ${LONGEST_PIECE / 1024} kB`, CHECK_DOCUMENT);
     if (enough()) return;
   }
   if (!parser.isEnded) parser.end();
   series.end();
 };
-
-const CHECK = 'Check that it is a document of time series';
 
 /** Puts the pieces of one series after another together. */
 class JsonSeries {

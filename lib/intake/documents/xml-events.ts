@@ -1,11 +1,9 @@
 import { SaxesParser } from 'saxes';
 import { IntakeError } from '../types.ts';
+import { CHECK_DOCUMENT, DEEPEST, LONGEST_PIECE } from './limits.ts';
 import { documentText, type TextReading } from './read-text.ts';
 
-/** Levels of elements within one another, and characters of one tag or text, beyond which a document is no set of
- *  time series but a means to fill the memory. */
-const DEEPEST = 200;
-const LONGEST_PIECE = 1 << 20;
+const TOO_LONG = `a tag or a text is longer than ${LONGEST_PIECE / 1024} kB`;
 
 export type Attributes = Record<string, string>;
 
@@ -28,77 +26,80 @@ export function readXml(path: string, reading: TextReading, handler: ElementHand
 /** The same of text that is there already in pieces. */
 export async function parseXml(pieces: AsyncIterable<string>, file: string, handler: ElementHandler): Promise<void> {
   const parser = new SaxesParser({ xmlns: false });
-  const refuse = (message: string, remedy: string, value?: string): never => {
+  const refuse: Refuse = (message, remedy, value) => {
     throw new IntakeError({
       ...{ file, row: parser.line, message, remedy },
       ...(value === undefined ? {} : { value: value.slice(0, 100) }),
     });
   };
-  let depth = 0;
-  let text = '';
-  /** characters read since something was heard */
-  let silent = 0;
-  const names = new Map<string, string>();
-  const heard = () => {
-    silent = 0;
-  };
-  parser.on('doctype', (doctype) => {
-    const entities = /<!ENTITY/i.test(doctype);
-    refuse(
-      entities
-        ? 'the document declares entities of its own (DOCTYPE), which are never expanded'
-        : 'the document has a DOCTYPE, which documents of time series do not have',
-      'Get it without the DOCTYPE',
-      doctype.trim(),
-    );
-  });
-  parser.on('opentag', ({ name, attributes }) => {
-    silent = 0;
-    if (++depth > DEEPEST) {
-      refuse(`elements stand more than ${DEEPEST} deep in one another`, 'Check that it is a document of time series');
-    }
-    text = '';
-    handler.open(localName(name, names), attributes, parser.line);
-  });
-  parser.on('text', (piece) => {
-    silent = 0;
-    text += piece;
-    // Comments between them may have parted endless pieces.
-    if (text.length > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
-  });
-  parser.on('cdata', (piece) => {
-    silent = 0;
-    text += piece;
-    if (text.length > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
-  });
-  parser.on('comment', heard);
-  parser.on('processinginstruction', heard);
-  parser.on('closetag', ({ name }) => {
-    silent = 0;
-    depth--;
-    const content = text;
-    text = '';
-    handler.close(localName(name, names), content, parser.line);
-  });
-  parser.on('error', ({ message }) => {
-    const reason = message.replace(/^\d+:\d+: /, '').replace(/\.$/, '');
-    const cut = /unclosed tag|document must contain a root element|unexpected end/.test(reason);
-    refuse(
-      `the document ${cut ? 'is cut short' : 'is not well-formed XML'} (${reason})`,
-      cut ? 'Get it again, whole' : 'Get it again; it is damaged',
-    );
-  });
+  parser.on('doctype', (doctype) => refuseDoctype(doctype, refuse));
+  parser.on('error', ({ message }) => refuseBroken(message, refuse));
+  const elements = tellElements(parser, handler, refuse);
   for await (const piece of pieces) {
-    silent += piece.length;
+    elements.silent += piece.length;
     parser.write(piece);
-    if (silent > LONGEST_PIECE) refuse(TOO_LONG, CHECK);
+    if (elements.silent > LONGEST_PIECE) refuse(TOO_LONG, CHECK_DOCUMENT);
     if (handler.enough?.()) return;
   }
   parser.close();
 }
 
-const TOO_LONG = `a tag or a text is longer than ${LONGEST_PIECE / 1024} kB`;
-const CHECK = 'Check that it is a document of time series';
+type Refuse = (message: string, remedy: string, value?: string) => never;
+
+/** @returns `silent`: characters read since something was heard, to be counted up from outside */
+function tellElements(parser: SaxesParser, handler: ElementHandler, refuse: Refuse): { silent: number } {
+  const heard = { silent: 0 };
+  const names = new Map<string, string>();
+  let depth = 0;
+  let text = '';
+  parser.on('opentag', ({ name, attributes }) => {
+    heard.silent = 0;
+    if (++depth > DEEPEST) refuse(`elements stand more than ${DEEPEST} deep in one another`, CHECK_DOCUMENT);
+    text = '';
+    handler.open(localName(name, names), attributes, parser.line);
+  });
+  const addText = (piece: string) => {
+    heard.silent = 0;
+    text += piece;
+    // Comments between them may have parted endless pieces.
+    if (text.length > LONGEST_PIECE) refuse(TOO_LONG, CHECK_DOCUMENT);
+  };
+  parser.on('text', addText);
+  parser.on('cdata', addText);
+  const passOver = () => {
+    heard.silent = 0;
+  };
+  parser.on('comment', passOver);
+  parser.on('processinginstruction', passOver);
+  parser.on('closetag', ({ name }) => {
+    heard.silent = 0;
+    depth--;
+    const content = text;
+    text = '';
+    handler.close(localName(name, names), content, parser.line);
+  });
+  return heard;
+}
+
+function refuseDoctype(doctype: string, refuse: Refuse): never {
+  const entities = /<!ENTITY/i.test(doctype);
+  return refuse(
+    entities
+      ? 'the document declares entities of its own (DOCTYPE), which are never expanded'
+      : 'the document has a DOCTYPE, which documents of time series do not have',
+    'Get it without the DOCTYPE',
+    doctype.trim(),
+  );
+}
+
+function refuseBroken(message: string, refuse: Refuse): never {
+  const reason = message.replace(/^\d+:\d+: /, '').replace(/\.$/, '');
+  const cut = /unclosed tag|document must contain a root element|unexpected end/.test(reason);
+  return refuse(
+    `the document ${cut ? 'is cut short' : 'is not well-formed XML'} (${reason})`,
+    cut ? 'Get it again, whole' : 'Get it again; it is damaged',
+  );
+}
 
 function localName(name: string, known: Map<string, string>): string {
   const local = known.get(name);

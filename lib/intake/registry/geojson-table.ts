@@ -1,11 +1,7 @@
+import { isJsonObject, type JsonObject, jsonOrDeep } from '../json-object.ts';
 import { IntakeError } from '../types.ts';
 import { registryColumns } from './registry-columns.ts';
 import type { RegistryTable } from './registry-table.ts';
-
-type Json = Record<string, unknown>;
-
-const isObject = (value: unknown): value is Json =>
-  typeof value === 'object' && value !== null && !Array.isArray(value);
 
 /** GeoJSON points (RFC 7946) as a table: a column for each property, and the position of the point before any that the
  *  properties give. Lists and objects among the properties stand as JSON.
@@ -15,7 +11,7 @@ export function geoJsonTable(text: string, file: string): RegistryTable {
   const names = new Set<string>();
   const hasId = features.some(({ id }) => id !== undefined && id !== null);
   for (const { properties } of features)
-    for (const name of Object.keys(isObject(properties) ? properties : {})) names.add(name);
+    for (const name of Object.keys(isJsonObject(properties) ? properties : {})) names.add(name);
   const properties = [...names];
   const found = registryColumns(properties);
   // A point's own coordinates are longitude and latitude in WGS 84; what the properties repeat of them may be rounded.
@@ -46,41 +42,31 @@ export function geoJsonTable(text: string, file: string): RegistryTable {
   return { header, headerLine: 1, columns, rows, delimiter: ', ' };
 }
 
-function textOf({ properties }: Json, name: string): string {
-  const value = isObject(properties) && Object.hasOwn(properties, name) ? properties[name] : null;
+function textOf({ properties }: JsonObject, name: string): string {
+  const value = isJsonObject(properties) && Object.hasOwn(properties, name) ? properties[name] : null;
   if (value === null || value === undefined) return '';
-  return typeof value === 'object' ? jsonText(value) : String(value);
-}
-
-/** A list or object as JSON; one nested too deep to be written says nothing that is read. */
-function jsonText(value: object): string {
-  try {
-    return JSON.stringify(value);
-  } catch (cause) {
-    if (!(cause instanceof RangeError)) throw cause;
-    return 'nested too deep';
-  }
+  return typeof value === 'object' ? jsonOrDeep(value) : String(value);
 }
 
 /** Latitude and longitude; both empty for a feature without a place. */
-function positionOf({ geometry }: Json, number: number, file: string): [string, string] {
+function positionOf({ geometry }: JsonObject, number: number, file: string): [string, string] {
   if (geometry === null || geometry === undefined) return ['', ''];
-  const position = isObject(geometry) && geometry.type === 'Point' ? geometry.coordinates : null;
+  const position = isJsonObject(geometry) && geometry.type === 'Point' ? geometry.coordinates : null;
   if (Array.isArray(position) && typeof position[0] === 'number' && typeof position[1] === 'number')
     return [String(position[1]), String(position[0])];
   throw new IntakeError({
-    ...{ file, row: number, value: isObject(geometry) ? String(geometry.type) : String(geometry) },
+    ...{ file, row: number, value: isJsonObject(geometry) ? String(geometry.type) : String(geometry) },
     message: `feature ${number} is no point, so it is no station`,
     remedy: 'Give stations as points in longitude and latitude; lines and polygons belong into a layer of their own',
   });
 }
 
-function featuresOf(text: string, file: string): Json[] {
+function featuresOf(text: string, file: string): JsonObject[] {
   const parsed = parsedJson(text, file);
-  const list = isObject(parsed) && parsed.type === 'FeatureCollection' ? parsed.features : [parsed];
+  const list = isJsonObject(parsed) && parsed.type === 'FeatureCollection' ? parsed.features : [parsed];
   const features = Array.isArray(list) ? list : [];
-  const wrong = features.findIndex((feature) => !isObject(feature) || feature.type !== 'Feature');
-  if (features.length > 0 && wrong < 0) return features as Json[];
+  const wrong = features.findIndex((feature) => !isJsonObject(feature) || feature.type !== 'Feature');
+  if (features.length > 0 && wrong < 0) return features as JsonObject[];
   throw new IntakeError({
     file,
     ...(wrong < 0 ? {} : { row: wrong + 1 }),

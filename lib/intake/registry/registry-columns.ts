@@ -1,3 +1,4 @@
+import { KM2_OF, KM2_OF_M2 } from '../../series/area-units.ts';
 import type { RegistryFact } from '../types.ts';
 import { type NamedFlowColumn, namedFlowColumns } from './named-flow-columns.ts';
 import { plainHeading } from './plain-heading.ts';
@@ -86,15 +87,15 @@ export function registryColumns(headings: readonly string[]): RegistryColumns {
   };
 }
 
-/** km² in one unit of area, exact: a mile is 1609.344 m, an acre 4046.8564224 m² (NIST SP 811, 2008). */
+/** How headings and fields of registries write units of area, and km² in one. */
 const AREA_UNITS: [RegExp, number][] = [
-  [/\b(km ?2|sq ?km|square kilomet(?:er|re)s?|qkm)\b/, 1],
-  [/\b(mi ?2|sq ?mi|sq miles?|square miles?|miles? ?2)\b/, 2.589988110336],
-  [/\b(ha|hectares?|hektar)\b/, 0.01],
-  [/\b(acres?|ac)\b/, 0.0040468564224],
-  [/\b(m ?2|sq ?m|square met(?:er|re)s?)\b/, 1e-6],
+  [/\b(km ?2|sq ?km|square kilomet(?:er|re)s?|qkm)\b/, KM2_OF['km²']],
+  [/\b(mi ?2|sq ?mi|sq miles?|square miles?|miles? ?2)\b/, KM2_OF['mi²']],
+  [/\b(ha|hectares?|hektar)\b/, KM2_OF.ha],
+  [/\b(acres?|ac)\b/, KM2_OF.acres],
+  [/\b(m ?2|sq ?m|square met(?:er|re)s?)\b/, KM2_OF_M2],
   // A site table of a public agency that never states its unit: square miles.
-  [/^(contrib )?drain area va$/, 2.589988110336],
+  [/^(contrib )?drain area va$/, KM2_OF['mi²']],
 ];
 
 /** km² in one unit of the area that a heading, or a field of the unit column, names; null when it names none. */

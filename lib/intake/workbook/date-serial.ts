@@ -1,6 +1,5 @@
-import { dayNumber, isoDate } from '../../calendar/day.ts';
+import { DAY_SECONDS, dayNumber, isoDate } from '../../calendar/day.ts';
 
-const DAY_SECONDS = 86_400;
 /** Day 0 of the two systems of serial dates. In the older one the year 1900 has a 29 February that never was: serials
  *  from 61 on are one too high. Source: ECMA-376 (5th edition), part 1, 18.17.4.1. */
 const DAY_0_OF_1900 = dayNumber(1899, 12, 31);
