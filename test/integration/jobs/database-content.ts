@@ -10,9 +10,19 @@ const TABLES = [
 export function databaseContent(path: string): string {
   const connection = openConnection(path);
   try {
-    const tables = TABLES.map((table) => [table, rows(connection, `SELECT * FROM "${table}"`).all([])]);
-    return JSON.stringify(tables, (_, value) => (Buffer.isBuffer(value) ? value.toString('base64') : value));
+    const tables = TABLES.map((table) => {
+      const found = rows(connection, `SELECT * FROM "${table}"`).all([]) as unknown[][];
+      return [table, found.map((row) => row.map(plain))];
+    });
+    return JSON.stringify(tables);
   } finally {
     connection.close();
   }
 }
+
+/** Bytes as text, shorter than what JSON would make of them. */
+const plain = (value: unknown): unknown => {
+  if (value instanceof Uint8Array) return Buffer.from(value).toString('base64');
+  if (value instanceof ArrayBuffer) return Buffer.from(value).toString('base64');
+  return value;
+};
