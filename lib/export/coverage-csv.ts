@@ -19,7 +19,7 @@ const flagged = (name: keyof CoverageRow['flagged'], words: string): Column<Cove
   value: (row) => row.flagged[name],
 });
 
-export const COVERAGE_COLUMNS: readonly Column<CoverageRow>[] = [
+const COVERAGE_COLUMNS: readonly Column<CoverageRow>[] = [
   STATION_CODE,
   LOW_FLOW_YEAR,
   { name: 'state', datatype: 'string', description: 'usable, partial or missing', value: (row) => row.state },

@@ -33,11 +33,7 @@ function cellText(cell: Cell): string {
 
 /** A table as CSV text: UTF-8 without a mark, one header row, RFC 4180 quoting, no comment lines. */
 export function csvTable<Row>(columns: readonly Column<Row>[], rows: Iterable<Row>): string {
-  return [...csvRows(columns, rows)].join('');
-}
-
-/** The same, line by line, for tables too long to hold. */
-export function* csvRows<Row>(columns: readonly Column<Row>[], rows: Iterable<Row>): Generator<string> {
-  yield csvLine(columns.map((column) => column.name));
-  for (const row of rows) yield csvLine(columns.map((column) => cellText(column.value(row))));
+  let text = csvLine(columns.map((column) => column.name));
+  for (const row of rows) text += csvLine(columns.map((column) => cellText(column.value(row))));
+  return text;
 }

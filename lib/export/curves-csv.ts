@@ -35,7 +35,7 @@ export const CURVE_COLUMNS: readonly Column<CurveRow>[] = [
   { name: 'unit', datatype: 'string', description: 'unit of the flow; 1 for ratios', value: (row) => row.unit },
 ];
 
-export function* curveRows(curves: readonly CurveToWrite[]): Generator<CurveRow> {
+function* curveRows(curves: readonly CurveToWrite[]): Generator<CurveRow> {
   for (const { code, unit, exceedances, flows } of curves) {
     for (let i = 0; i < exceedances.length; i++) {
       yield { code, exceedance: exceedances[i], flow: flows[i], unit };

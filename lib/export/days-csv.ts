@@ -17,7 +17,7 @@ interface DayRow {
 export const flagWords = (bits: number): string =>
   (Object.keys(FLAG) as FlagName[]).filter((name) => (bits & FLAG[name]) !== 0).join(';');
 
-export const DAY_COLUMNS: readonly Column<DayRow>[] = [
+const DAY_COLUMNS: readonly Column<DayRow>[] = [
   STATION_CODE,
   { name: 'date', datatype: 'date', description: 'day', value: (row) => row.date },
   {

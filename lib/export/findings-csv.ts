@@ -3,7 +3,7 @@ import type { MarkRow } from '../store/marks.ts';
 import { type Column, csvTable } from './csv.ts';
 import { QUANTITY, STATION_CODE, STRETCH } from './shared-columns.ts';
 
-export const FINDING_COLUMNS: readonly Column<StoredFinding>[] = [
+const FINDING_COLUMNS: readonly Column<StoredFinding>[] = [
   STATION_CODE,
   QUANTITY,
   { name: 'kind', datatype: 'string', description: 'which check found it', value: (row) => row.kind },
@@ -26,7 +26,7 @@ export const FINDING_COLUMNS: readonly Column<StoredFinding>[] = [
 /** Findings as CSV. */
 export const findingsCsv = (findings: readonly StoredFinding[]): string => csvTable(FINDING_COLUMNS, findings);
 
-export const MARK_COLUMNS: readonly Column<MarkRow>[] = [
+const MARK_COLUMNS: readonly Column<MarkRow>[] = [
   STATION_CODE,
   QUANTITY,
   { name: 'kind', datatype: 'string', description: 'reject, accept or note', value: (row) => row.kind },

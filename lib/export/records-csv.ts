@@ -19,7 +19,7 @@ const flagged = (name: string, flag: CountedFlag, words: string): Column<RecordY
 
 const yearOf = ({ station, at }: RecordYear): number => (station.firstYear ?? 0) + at;
 
-export const RECORD_COLUMNS: readonly Column<RecordYear>[] = [
+const RECORD_COLUMNS: readonly Column<RecordYear>[] = [
   { ...STATION_CODE, value: ({ station }) => station.code },
   { ...LOW_FLOW_YEAR, value: yearOf },
   {
@@ -76,7 +76,7 @@ interface Period {
   complete: number;
 }
 
-export const PERIOD_COLUMNS: readonly Column<Period>[] = [
+const PERIOD_COLUMNS: readonly Column<Period>[] = [
   { name: 'first_year', datatype: 'integer', description: 'first low-flow year', value: ({ first }) => first },
   { name: 'last_year', datatype: 'integer', description: 'last low-flow year', value: ({ last }) => last },
   {

@@ -3,7 +3,7 @@
  *  The text is written exactly as it is. Spreadsheets take a text that begins with `=`, `+`, `-` or `@` for a formula;
  *  putting an apostrophe before it would change the data for every other program and would not survive being read back,
  *  so it is not done: a file that says what was imported must say it letter for letter. */
-export function csvField(text: string): string {
+function csvField(text: string): string {
   return /[",\r\n]/.test(text) || text !== text.trim() ? `"${text.replaceAll('"', '""')}"` : text;
 }
 

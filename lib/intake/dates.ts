@@ -26,7 +26,7 @@ const NO_SUCH_DAY = NO_DAY - 2;
 const YEAR_OUT_OF_RANGE = NO_DAY - 3;
 const SHORT_YEAR = NO_DAY - 4;
 /** Not a day as the file's order has it, but one the other way round. */
-export const OTHER_ORDER = NO_DAY - 5;
+const OTHER_ORDER = NO_DAY - 5;
 
 /** Day number of a year, month and day; below NO_DAY when there is no such day. */
 export function dayOfParts(year: number, month: number, day: number): number {

@@ -79,7 +79,7 @@ export class RowsOfDays {
 }
 
 /** An interval in words: "15 minutes", "1 hour". */
-export function inWords(seconds: number): string {
+function inWords(seconds: number): string {
   const [count, noun] =
     seconds % 3600 === 0
       ? [seconds / 3600, 'hour']

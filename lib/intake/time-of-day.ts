@@ -10,7 +10,7 @@ const isDigit = (byte: number): boolean => byte >= 48 && byte <= 57;
 /** Seconds since midnight of a clock time in bytes: `09:15`, `9:15:00`, `24:00`, `0915`, `12:30 PM`; what stands behind it
  *  (a fraction, `Z`, `+01:00`) is not used: the day of a value is that of the clock by which it was written.
  *  @returns NO_TIME when the bytes do not begin with one */
-export function secondOfDay(bytes: Uint8Array, start: number, end: number): number {
+function secondOfDay(bytes: Uint8Array, start: number, end: number): number {
   let at = start;
   while (at < end && !isDigit(bytes[at])) at++;
   const parts = [0, 0, 0];

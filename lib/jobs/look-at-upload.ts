@@ -1,6 +1,7 @@
 import type { KnownStation } from '../intake/types.ts';
 import { knownStations } from '../store/known-stations.ts';
 import { regionBounds } from '../store/region-bounds.ts';
+import { byFileName } from './by-file-name.ts';
 import type { FileChoices } from './import-types.ts';
 import type { Looked } from './look-at-file.ts';
 import { runTask } from './pool.ts';
@@ -40,14 +41,20 @@ const changed = (id: string, change: (now: UploadSession) => UploadSession): Pro
 
 const withChoices = (session: UploadSession, choices: Record<string, FileChoices>): UploadSession => ({
   ...session,
-  seen: session.seen.map((one) => (choices[one.file] ? { ...one, choices: choices[one.file] } : one)),
+  seen: session.seen.map((one) => ({ ...one, choices: byFileName(choices, one.file) ?? one.choices })),
 });
 
 function lookOf(session: UploadSession, name: string, choices: FileChoices) {
   const at = session.files.findIndex((file) => file.name === name);
   if (at < 0) throw new RangeError(`lookAtUpload: choices must name files of the upload, got "${name}"`);
   const near = session.regionId === null ? null : regionBounds(session.regionId);
-  return { file: session.files[at], size: session.seen[at].size, choices, near, broken: session.broken[name] };
+  return {
+    file: session.files[at],
+    size: session.seen[at].size,
+    choices,
+    near,
+    broken: byFileName(session.broken, name),
+  };
 }
 
 /** The region's stations with those of the upload's own registries, but for the ones that are looked at anew. */
@@ -60,11 +67,11 @@ function knownTo({ regionId, names }: UploadSession, anew: readonly string[]): K
 /** A registry that has come in, or reads otherwise now, changes what the flows may name: they are to be looked at anew. */
 function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSession {
   const fresh = new Map(looked.map(({ preview }) => [preview.file, inShort(preview)]));
-  const names = { ...session.names };
-  for (const { preview, names: stations } of looked) {
-    if (stations) names[preview.file] = stations;
-    else delete names[preview.file];
-  }
+  const others = Object.entries(session.names).filter(([file]) => !fresh.has(file));
+  const coming = looked.flatMap(({ preview, names: stations }) =>
+    stations ? [[preview.file, stations] as const] : [],
+  );
+  const names: UploadSession['names'] = Object.fromEntries([...others, ...coming]);
   const otherNames = JSON.stringify(names) !== JSON.stringify(session.names);
   const seen = session.seen.map((one) => {
     const anew: UploadedFile = otherNames && one.kind === 'flows' ? { ...one, state: 'unseen' } : one;

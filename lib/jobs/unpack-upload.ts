@@ -18,7 +18,7 @@ export interface UnpackedUpload {
  *  beside it are none the worse for it. */
 export async function unpackUpload(given: readonly GivenFile[], folder: string): Promise<UnpackedUpload> {
   const files: GivenFile[] = [];
-  const broken: UnpackedUpload['broken'] = {};
+  const broken: [string, PreviewProblem][] = [];
   const notes: string[] = [];
   for (const file of given) {
     try {
@@ -30,8 +30,8 @@ export async function unpackUpload(given: readonly GivenFile[], folder: string):
     } catch (error) {
       if (!(error instanceof IntakeError)) throw error;
       files.push(file);
-      broken[file.name] = { message: error.message, problem: error.problem };
+      broken.push([file.name, { message: error.message, problem: error.problem }]);
     }
   }
-  return { files, broken, notes };
+  return { files, broken: Object.fromEntries(broken), notes };
 }

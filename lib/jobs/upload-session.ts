@@ -4,6 +4,7 @@ import { readdir, readFile, rename, stat, writeFile } from 'node:fs/promises';
 import { basename, dirname, join } from 'node:path';
 import type { KnownStation } from '../intake/types.ts';
 import { databasePath } from '../store/database-url.ts';
+import { byFileName } from './by-file-name.ts';
 import type { FileChoices, GivenFile } from './import-types.ts';
 import type { UnpackedUpload } from './unpack-upload.ts';
 import { discardUpload, uploadFolder } from './upload-folder.ts';
@@ -89,14 +90,16 @@ export const discardSession = (id: string): Promise<void> => discardUpload(id);
  *  @param more  with `broken` by the names that they came with: files that cannot be taken, and why */
 export async function withFiles(session: UploadSession, more: Readonly<UnpackedUpload>): Promise<UploadSession> {
   const taken = new Set(session.files.map(({ name }) => name));
-  const broken = { ...session.broken };
+  const unusable: [string, PreviewProblem][] = [];
   const files = more.files.map((file) => {
     const name = freeName(file.name, taken);
     taken.add(name);
-    if (more.broken[file.name]) broken[name] = more.broken[file.name];
+    const why = byFileName(more.broken, file.name);
+    if (why) unusable.push([name, why]);
     return { ...file, name };
   });
   const seen = await Promise.all(files.map(async ({ name, path }) => unseen(name, (await stat(path)).size)));
+  const broken = { ...session.broken, ...Object.fromEntries(unusable) };
   const notes = [...session.notes, ...more.notes];
   return { ...session, files: [...session.files, ...files], seen: [...session.seen, ...seen], broken, notes };
 }

@@ -19,7 +19,7 @@ export interface LinkSuggestion {
 }
 
 /** How far from a line of the river layer a station may stand, km: coordinates are often rounded to 0.01°. */
-export const SNAP_KM = 1;
+const SNAP_KM = 1;
 
 /** Suggests, for each station that has no station below it yet, the next one downstream: along the river layer where the
  *  station stands on it, else by name of the river, area and place.

@@ -5,10 +5,10 @@ export const QUANTITIES = ['flow', 'stage', 'rainfall', 'potential-evaporation']
 export type Quantity = (typeof QUANTITIES)[number];
 
 /** Units of the quantities beside flow: levels, and depths of a day. */
-export const STAGE_UNITS = ['m', 'cm', 'mm', 'ft'] as const;
-export const DEPTH_UNITS = ['mm', 'in'] as const;
-export type StageUnit = (typeof STAGE_UNITS)[number];
-export type DepthUnit = (typeof DEPTH_UNITS)[number];
+const STAGE_UNITS = ['m', 'cm', 'mm', 'ft'] as const;
+const DEPTH_UNITS = ['mm', 'in'] as const;
+type StageUnit = (typeof STAGE_UNITS)[number];
+type DepthUnit = (typeof DEPTH_UNITS)[number];
 export type Unit = FlowUnit | StageUnit | DepthUnit;
 
 /** The units that each quantity may come in, the one it is shown in first. */

@@ -16,7 +16,7 @@ export class StoreBusyError extends Error {
 export const BLOCK_MS = 40;
 
 /** How long a change waits for others before it gives up, milliseconds. */
-export const WAIT_MS = 5_000;
+const WAIT_MS = 5_000;
 
 const PAUSE_MS = 15;
 

@@ -4,9 +4,7 @@ import { type DerivedTerm, derive } from '../series/derive.ts';
 import { type Quantity, toShownUnit, UNITS_OF, type Unit } from '../series/quantities.ts';
 import type { DerivedRecipe } from '../series/station-history.ts';
 import { bytesOfBlob, valuesOfBlob } from './blobs.ts';
-import { whenFree } from './busy.ts';
-import { type Connection, change, immediately, rows, sharedConnection } from './connection.ts';
-import { databasePath } from './database-url.ts';
+import { type Connection, change, rows } from './connection.ts';
 import { recipeOf } from './history-text.ts';
 import { VISIBLE } from './import-claim.ts';
 import { saveRecords, standingRecord, storeLaid } from './lay-record.ts';
@@ -39,12 +37,6 @@ export function rebuildDerived(connection: Connection, stationIds: Iterable<numb
   const regionOf = rows(connection, 'SELECT regionId FROM Station WHERE id = ?');
   const regions = new Set([...changed].flatMap((id) => (regionOf.get([id]) as [number] | undefined) ?? []));
   return [...regions].flatMap((regionId) => rebuildRegion(connection, regionId, changed));
-}
-
-/** The same in a transaction of its own, for a change that is written already. */
-export function refreshDerived(stationIds: Iterable<number>, path = databasePath()): Promise<number[]> {
-  const connection = sharedConnection(path);
-  return whenFree(() => immediately(connection, () => rebuildDerived(connection, stationIds)));
 }
 
 /** @param changed  of the region or not; null: rebuild all that the region derives */

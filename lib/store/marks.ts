@@ -47,33 +47,52 @@ export interface NewMark extends MarkSpan {
   by?: string;
 }
 
-/** Adds a mark on the days firstDay to lastDay (day numbers, both included), and makes the records anew that are derived
- *  from the marked one.
- *  @throws StoreError 'bad-input' when the days run backwards, the kind is unknown or no reason is given, 'not-found' for a
- *          station that is not there */
-export async function addMark(mark: NewMark): Promise<MarkRow> {
-  const { stationId, quantity = 'flow', firstDay, lastDay, kind, by = '' } = mark;
+/** One answer to several stretches of a record. */
+export interface NewMarks extends Omit<NewMark, 'firstDay' | 'lastDay'> {
+  /** day numbers, both included */
+  stretches: readonly Pick<MarkSpan, 'firstDay' | 'lastDay'>[];
+}
+
+/** Adds a mark on the days firstDay to lastDay (day numbers, both included). @throws as addMarks */
+export async function addMark({ firstDay, lastDay, ...mark }: NewMark): Promise<MarkRow> {
+  const [added] = await addMarks({ ...mark, stretches: [{ firstDay, lastDay }] });
+  return added;
+}
+
+/** Adds the same mark to each of the stretches, all of them or none, and makes the records anew that are derived from the
+ *  marked one.
+ *  @returns in the order of the stretches
+ *  @throws StoreError 'bad-input' when there is no stretch, the days of one run backwards, the kind is unknown or no reason
+ *          is given, 'not-found' for a station that is not there */
+export async function addMarks(mark: NewMarks): Promise<MarkRow[]> {
+  const { stationId, quantity = 'flow', stretches, kind, by = '' } = mark;
   const reason = mark.reason.trim();
   if (!MARK_KINDS.includes(kind))
     throw new StoreError('bad-input', `A mark is ${MARK_KINDS.join(', ')}, not "${kind}".`);
-  if (!(Number.isInteger(firstDay) && Number.isInteger(lastDay) && firstDay <= lastDay)) {
+  if (reason === '') throw new StoreError('bad-input', 'A mark needs a reason.');
+  if (stretches.length === 0) throw new StoreError('bad-input', 'A mark needs days to lie on.');
+  for (const { firstDay, lastDay } of stretches) {
+    if (Number.isInteger(firstDay) && Number.isInteger(lastDay) && firstDay <= lastDay) continue;
     throw new StoreError(
       'bad-input',
       `A mark runs from a first day to a last one, and ${firstDay}–${lastDay} does not.`,
     );
   }
-  if (reason === '') throw new StoreError('bad-input', 'A mark needs a reason.');
   return changing((connection) => {
     const insert = change(
       connection,
       `INSERT INTO Mark (stationId, quantity, firstDay, lastDay, kind, reason, "by", createdAt)
        SELECT id, ?, ?, ?, ?, ?, ?, ? FROM Station WHERE id = ?`,
     );
-    const values = [quantity, firstDay, lastDay, kind, reason, by, timestamp(), stationId];
-    const { changes, lastInsertRowid } = insert.run(values);
-    if (changes === 0) throw new StoreError('not-found', 'The station is not there any more.');
+    const read = rows(connection, `${SELECT} WHERE m.id = ?`);
+    const at = timestamp();
+    const added = stretches.map(({ firstDay, lastDay }) => {
+      const made = insert.run([quantity, firstDay, lastDay, kind, reason, by, at, stationId]);
+      if (made.changes === 0) throw new StoreError('not-found', 'The station is not there any more.');
+      return toMark(read.get([Number(made.lastInsertRowid)]) as Row);
+    });
     rebuildDerived(connection, [stationId]);
-    return toMark(rows(connection, `${SELECT} WHERE m.id = ?`).get([Number(lastInsertRowid)]) as Row);
+    return added;
   });
 }
 

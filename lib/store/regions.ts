@@ -66,12 +66,6 @@ export async function getRegion(slug: string): Promise<RegionRow | null> {
   return row && toRegion(row);
 }
 
-/** A region by its id, or null. */
-export async function getRegionById(id: number): Promise<RegionRow | null> {
-  const row = await openStore().prisma.region.findUnique({ where: { id } });
-  return row && toRegion(row);
-}
-
 /** Makes an empty region.
  *  @throws StoreError 'exists' when a region's name has the same slug, 'bad-input' when the name is empty */
 export async function createRegion({

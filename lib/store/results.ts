@@ -3,7 +3,7 @@ import { change, immediately, rows, sharedConnection, timestamp } from './connec
 import { databasePath } from './database-url.ts';
 
 /** Size of all stored results at most, bytes; the least recently used go first. */
-export const RESULTS_LIMIT = 256 * 2 ** 20;
+const RESULTS_LIMIT = 256 * 2 ** 20;
 
 /** How stale `lastUsed` may grow before a reading is noted, milliseconds: a write for every reading would cost more than
  *  it tells. */

@@ -51,7 +51,7 @@ export async function regionDocument(region: RegionRow): Promise<RegionDocument>
 export const layerFile = (name: string, id: number): string => `layers/${id}-${plainName(name)}.geojson`;
 
 /** Path of an import's days in the archive. */
-export const flowsFile = (place: number, fileName: string): string =>
+const flowsFile = (place: number, fileName: string): string =>
   `flows/${String(place).padStart(4, '0')}-${plainName(fileName)}.csv`;
 
 /** A name that is safe as a file's on every system. */

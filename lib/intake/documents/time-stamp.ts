@@ -1,4 +1,4 @@
-import { DAY_SECONDS } from '../../calendar/day.ts';
+import { DAY_SECONDS, isoDate } from '../../calendar/day.ts';
 import { dateProblem, dayOfParts, NO_DAY } from '../dates.ts';
 
 /** Which days a value's time stamp stands for: the interval that begins with it, the one that ends with it, or the
@@ -54,4 +54,21 @@ export function durationDays(text: string): number | null {
   const [years, months, weeks, days, hours, minutes, seconds] = parts.slice(1).map((part) => Number(part ?? 0));
   const length = years * 365 + months * 30 + weeks * 7 + days + (hours * 3600 + minutes * 60 + seconds) / DAY_SECONDS;
   return length > 0 ? length : null;
+}
+
+/** The time of a point that says none, in a series at equal steps.
+ *  @param series  time of its first point and ISO 8601 duration between two, as written
+ *  @param number  of the point, from 0
+ *  @returns '' where the series does not say both */
+export function spacedTime({ base, spacing }: { base: string; spacing: string }, number: number): string {
+  const step = durationDays(spacing);
+  const stamp = new TimeStamp();
+  if (step === null || stamp.read(base) !== null) return '';
+  const { day, seconds } = stamp;
+  const after = Math.max(0, seconds) + Math.round(step * DAY_SECONDS) * number;
+  const date = isoDate(day + Math.floor(after / DAY_SECONDS));
+  if (seconds < 0 && step >= 1) return date;
+  const two = (value: number) => String(Math.floor(value)).padStart(2, '0');
+  const rest = after % DAY_SECONDS;
+  return `${date}T${two(rest / 3600)}:${two((rest / 60) % 60)}:${two(rest % 60)}`;
 }

@@ -3,7 +3,7 @@ import { type AlsoCandidate, type InspectOptions, IntakeError } from '../types.t
 import { labelOf, quantityOf, type SeriesHead, unitOfHead } from './series-head.ts';
 
 /** Name of the column by which a mapping's `where` asks for a series of a document. */
-export const SERIES_COLUMN = 'series';
+const SERIES_COLUMN = 'series';
 const MOST_OTHERS = 100;
 const SAMPLES = 5;
 

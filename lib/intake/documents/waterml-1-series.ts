@@ -68,7 +68,7 @@ const NAMED: Record<string, string> = {
 };
 
 /** Text that was escaped for web pages before it was put into the document: “ft&#179;/s” → “ft³/s”. */
-export function unescaped(text: string): string {
+function unescaped(text: string): string {
   return text.replace(/&(?:#(\d{1,6})|#x([0-9a-f]{1,5})|([a-z]{2,5}\d?));/gi, (whole, decimal, hex, name) => {
     if (name !== undefined) return NAMED[name] ?? whole;
     const code = decimal === undefined ? Number.parseInt(hex, 16) : Number(decimal);

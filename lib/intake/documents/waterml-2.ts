@@ -1,11 +1,11 @@
-import { DAY_SECONDS, isoDate } from '../../calendar/day.ts';
 import type { DocumentParser } from './document-reader.ts';
+import { extremeOf, meaningOf } from './interpolation.ts';
 import { lastPart, MonitoringPoint, stationNames } from './monitoring-point.ts';
 import { statisticNamed } from './observed-quantity.ts';
 import { Qualifier, sentenceBits } from './qualifier.ts';
 import type { SeriesHead } from './series-head.ts';
 import type { Point, SeriesSink } from './series-sink.ts';
-import { durationDays, type StampMeaning, TimeStamp } from './time-stamp.ts';
+import { durationDays, spacedTime } from './time-stamp.ts';
 import { type Attributes, attribute, type ElementHandler, readXml } from './xml-events.ts';
 
 /** More stations than any region has. */
@@ -48,7 +48,6 @@ class Waterml2 implements ElementHandler {
   private quality = '';
   private nilReason = '';
   private head: SeriesHead | null = null;
-  private readonly stamp = new TimeStamp();
 
   constructor(
     private readonly sink: SeriesSink,
@@ -177,7 +176,8 @@ class Waterml2 implements ElementHandler {
   private endPoint(point: Point): void {
     this.point = null;
     const number = this.points++;
-    if (point.time === '' && this.spacing !== '') point.time = this.spacedTime(number);
+    if (point.time === '' && this.spacing !== '')
+      point.time = spacedTime({ base: this.base, spacing: this.spacing }, number);
     if (point.time === '' && point.value === '') {
       this.sink.emptyPoints++;
       return;
@@ -220,19 +220,6 @@ class Waterml2 implements ElementHandler {
     };
     this.sink.begin(this.head);
   }
-
-  /** The time of a point that says none, in a series at equal steps. */
-  private spacedTime(number: number): string {
-    const step = durationDays(this.spacing);
-    if (step === null || this.stamp.read(this.base) !== null) return '';
-    const { day, seconds } = this.stamp;
-    const after = Math.max(0, seconds) + Math.round(step * DAY_SECONDS) * number;
-    const date = isoDate(day + Math.floor(after / DAY_SECONDS));
-    if (seconds < 0 && step >= 1) return date;
-    const two = (value: number) => String(Math.floor(value)).padStart(2, '0');
-    const rest = after % DAY_SECONDS;
-    return `${date}T${two(rest / 3600)}:${two((rest / 60) % 60)}:${two(rest % 60)}`;
-  }
 }
 
 const newPoint = (): Point => ({ time: '', value: '', flag: '', bits: 0 });
@@ -243,15 +230,4 @@ function addQuality(point: Point, quality: string): void {
   if (quality === '' || point.exact) return;
   point.flag = point.flag === '' ? quality : `${point.flag}; ${quality}`;
   point.bits |= sentenceBits(quality);
-}
-
-/** What a time stamp means under an interpolation type: the end or the start of the value's interval, or a moment. */
-function meaningOf(interpolation: string): StampMeaning {
-  if (/prec(?![a-z])|prece/i.test(interpolation)) return 'end';
-  return /succ|follow/i.test(interpolation) ? 'start' : 'instant';
-}
-
-/** Largest or smallest values of their interval, in words; empty for means and moments. */
-function extremeOf(interpolation: string): string {
-  return /\b(?:max|min)/i.test(interpolation) ? interpolation : '';
 }

@@ -15,7 +15,7 @@ export interface CalendarPlaces {
 }
 
 /** Columns of a calendar layout, in the order of their days or months. */
-export const cellCount = (layout: Mapping['layout']): number => (layout === 'month-rows' ? 31 : 12);
+const cellCount = (layout: Mapping['layout']): number => (layout === 'month-rows' ? 31 : 12);
 
 /** @param firstMonth  month of the first column of a row a day
  *  @throws IntakeError for columns that the header does not have, and for places that do not go together */

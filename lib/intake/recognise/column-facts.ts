@@ -45,7 +45,7 @@ export function looksLikeNumber(text: string): boolean {
 }
 
 /** Whole number between two bounds, as a year, month or day in a column of its own. */
-export function isWholeBetween(text: string, low: number, high: number): boolean {
+function isWholeBetween(text: string, low: number, high: number): boolean {
   return /^\d{1,4}$/.test(text) && Number(text) >= low && Number(text) <= high;
 }
 

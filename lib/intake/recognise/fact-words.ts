@@ -42,7 +42,7 @@ const COMPOUNDS: [RegExp, FactKind][] = [
 ];
 
 /** "Catchment area (km²)" → catchment, area */
-export function keyWords(key: string): string[] {
+function keyWords(key: string): string[] {
   return key
     .replace(/[([][^)\]]*[)\]]/g, ' ')
     .replace(/(\p{Ll})(\p{Lu})/gu, '$1 $2')

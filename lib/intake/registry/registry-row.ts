@@ -20,7 +20,7 @@ const INFLUENCE_WORDS: [RegExp, Influence][] = [
 ];
 
 /** The influence that a text names; null when it names none. */
-export function influenceOf(text: string): Influence | null {
+function influenceOf(text: string): Influence | null {
   const plain = text.trim().toLowerCase();
   const exact = INFLUENCES.find((influence) => influence === plain);
   const words = plain.replace(/[-_\s]+/g, ' ');

@@ -9,7 +9,7 @@ const LAST_ROW = 1_048_576;
 const LAST_COLUMN = 16_383;
 
 /** What stands for a formula whose value the workbook does not hold. */
-export const NO_RESULT = 'formula without a stored value';
+const NO_RESULT = 'formula without a stored value';
 
 export interface SheetContent {
   file: string;
