@@ -95,6 +95,7 @@ export function readJson(option: string, path: string): unknown {
   }
 }
 
+/** What stands beside a command's figures so that they can be made again: region, basis, hash of the data, warnings. */
 export async function provenance(
   region: RegionRow,
   basis: ResolvedBasis,

@@ -47,6 +47,7 @@ export function pack(page: OpenPage): PackedPage | null {
   return { mantissas, decimals, codes: alike ? first : page.codes.slice() };
 }
 
+/** The inverse of pack. @returns `into`, overwritten */
 export function unpack(packed: PackedPage, into: OpenPage): OpenPage {
   const scale = 10 ** packed.decimals;
   for (let at = 0; at < PAGE; at++) {

@@ -15,6 +15,7 @@ export function minimaOptions(basis: Basis, yearStart: number): MinimaOptions {
   return { yearStart, season, days, maxMissingDays, exclude };
 }
 
+/** Key of the minima of all stations: equal exactly when all that they depend on is equal. */
 export function minimaKey(stations: readonly StationInput[], basis: Basis, yearStart: number): string {
   return resultKey('minima', { values: { ...basis, yearStart }, keys: KEYS }, stations, 'none');
 }

@@ -19,11 +19,13 @@ export interface JobRow {
   finishedAt: Date | null;
 }
 
+/** Notes a job that waits. */
 export async function createJob(job: { id: string; kind: string; regionId?: number | null }): Promise<JobRow> {
   const data = { id: job.id, kind: job.kind, regionId: job.regionId ?? null, state: 'waiting' };
   return toJob(await whenFree(() => openStore().prisma.job.create({ data })));
 }
 
+/** A job by its id, or null. */
 export async function getJob(id: string): Promise<JobRow | null> {
   const row = await openStore().prisma.job.findUnique({ where: { id } });
   return row && toJob(row);

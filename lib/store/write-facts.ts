@@ -20,6 +20,7 @@ export function writeFacts(
   }
 }
 
+/** @param createdBy  the import that brings the station, whose undo takes it away; null for one made by hand */
 export function insertStation(
   connection: Connection,
   regionId: number,
@@ -33,6 +34,7 @@ export function insertStation(
   ).run([id, regionId, code, createdBy, ...FACT_NAMES.map((name) => facts[name])]);
 }
 
+/** Writes all facts of a station that is there. */
 export function updateStation(connection: Connection, { id, facts }: Pick<PlannedStation, 'id' | 'facts'>): void {
   change(connection, `UPDATE Station SET ${FACT_NAMES.map((name) => `${name} = ?`).join(', ')} WHERE id = ?`).run([
     ...FACT_NAMES.map((name) => facts[name]),

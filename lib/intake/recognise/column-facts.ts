@@ -40,6 +40,7 @@ export function hasShortYear(text: string): boolean {
   return SHORT_YEAR.test(text) || (isNamedDate(text) && namedDate(text)?.short === true);
 }
 
+/** A number with whatever decimal sign and separators of thousands. */
 export function looksLikeNumber(text: string): boolean {
   return NUMBER.test(text) || GROUPED.test(text);
 }

@@ -28,6 +28,7 @@ export function findUnit(found: {
   return inRemarks.size === 1 ? [...inRemarks][0] : null;
 }
 
+/** The question in which unit the values are. @param heading  of their column; null where they have none */
 export function unitProblem(file: string, heading: string | null, quantity: Quantity = 'flow'): IntakeError {
   const units = UNITS_OF[quantity].join(', ');
   const isFlow = quantity === 'flow';

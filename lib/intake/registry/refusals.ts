@@ -50,6 +50,7 @@ export function refuseForCorrection(
   });
 }
 
+/** Areas of a column whose heading names no unit. */
 export function refuseUnknownArea(heading: string, row: number, file: string): IntakeError {
   return new IntakeError({
     ...{ file, row, value: heading, needs: 'area' },
@@ -58,6 +59,7 @@ export function refuseUnknownArea(heading: string, row: number, file: string): I
   });
 }
 
+/** Commas that may be decimal as well as between thousands. */
 export function refuseOpenCommas(value: string, file: string): IntakeError {
   return new IntakeError({
     ...{ file, value },

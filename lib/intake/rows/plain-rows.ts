@@ -64,7 +64,7 @@ export class PlainRows {
     return new PlainRows(steps, delimiter.charCodeAt(0), plan.lineEnd, parts, onlyStation);
   }
 
-  /** Reads the row that starts at `from`.
+  /** Reads the row that starts at `from`. One loop and no calls but for what changes: it runs once for every row.
    *  @returns first byte of the next line; −1 when the row is not plain, and nothing was taken */
   read(bytes: Uint8Array, from: number, limit: number, line: number): number {
     const { steps, delimiter, lineEnd } = this;
