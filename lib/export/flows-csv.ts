@@ -57,7 +57,7 @@ function valueText(value: number, written: string | undefined): string {
   if (Number.isNaN(value)) return written === undefined || written === '<' ? '' : csvLine([oneLine(written)]).trimEnd();
   const plain = String(value);
   // A flow of exactly −99 is a number here, and must not be taken for a missing one.
-  const text = isMissingText(plain) ? value.toExponential() : plain;
+  const text = value < 0 && isMissingText(plain) ? value.toExponential() : plain;
   return written === '<' ? `<${text}` : text;
 }
 
