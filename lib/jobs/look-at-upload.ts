@@ -67,11 +67,12 @@ function knownTo({ regionId, names }: UploadSession, anew: readonly string[]): K
 /** A registry that has come in, or reads otherwise now, changes what the flows may name: they are to be looked at anew. */
 function withLooks(session: UploadSession, looked: readonly Looked[]): UploadSession {
   const fresh = new Map(looked.map(({ preview }) => [preview.file, inShort(preview)]));
-  const others = Object.entries(session.names).filter(([file]) => !fresh.has(file));
-  const coming = looked.flatMap(({ preview, names: stations }) =>
-    stations ? [[preview.file, stations] as const] : [],
-  );
-  const names: UploadSession['names'] = Object.fromEntries([...others, ...coming]);
+  const byFile = new Map(Object.entries(session.names));
+  for (const { preview, names: stations } of looked) {
+    if (stations) byFile.set(preview.file, stations);
+    else byFile.delete(preview.file);
+  }
+  const names = Object.fromEntries(byFile);
   const otherNames = JSON.stringify(names) !== JSON.stringify(session.names);
   const seen = session.seen.map((one) => {
     const anew: UploadedFile = otherNames && one.kind === 'flows' ? { ...one, state: 'unseen' } : one;

@@ -26,7 +26,17 @@ export interface UploadSession {
   broken: Record<string, PreviewProblem>;
   /** what was passed over in archives */
   notes: string[];
-  job: { id: string; dryRun: boolean } | null;
+  job: UploadJob | null;
+}
+
+/** The last import of an upload, and what was ordered beside the choices for its files. */
+export interface UploadJob {
+  id: string;
+  dryRun: boolean;
+  /** names of files that stay out of it */
+  leaveOut: readonly string[];
+  /** the region that it makes; absent where the upload is for one */
+  name?: string;
 }
 
 const STATE_FILE = 'session.json';
