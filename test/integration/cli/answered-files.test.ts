@@ -25,22 +25,12 @@ const sheet = (name: string, value: number) => ({
     .join(''),
 });
 
-/** Runs `import` of one file: refused without the answer, with its file and remedy on stderr and nothing changed, and
- *  taken with it. */
-async function refusedThenTaken(name: string, content: Content, remedy: string, flags: string[]): Promise<void> {
+const given = (name: string, content: Content): string => {
   const path = join(place.folder, name);
   writeFileSync(path, content);
-  const kind = flags.some((flag) => flag === '--correct' || flag === '--area-unit') ? ['--stations'] : [];
-  const before = databaseContent(databasePath());
-  const refused = await runCommand('import', '--region', 'Upper Wethe', ...kind, path);
-  expect([refused.code, refused.stdout]).toEqual([1, '']);
-  expect(refused.stderr).toContain(name);
-  expect(refused.stderr).toContain(remedy);
-  expect(databaseContent(databasePath()) === before).toBe(true);
-  const { code, stdout } = await runCommand('import', '--region', 'Upper Wethe', ...flags, ...kind, path);
-  expect(code).toBe(0);
-  expect(stdout).toContain(name);
-}
+  return path;
+};
+const run = (...flags: string[]) => runCommand('import', '--region', 'Upper Wethe', ...flags);
 
 const MAPPED: [string, Content, remedy: string, Partial<Mapping>, Record<string, number>][] = [
   [
@@ -90,18 +80,33 @@ const MAPPED: [string, Content, remedy: string, Partial<Mapping>, Record<string,
   ],
 ];
 
-test.each(MAPPED)('import --mapping answers what %s leaves open', async (name, content, remedy, mapping, days) => {
+const LISTS: [string, Content, remedy: string][] = [
+  ['east.csv', 'station_id,latitude,longitude\nE1,50.4,252.75\n', '(--correct longitude-360)'],
+  ['areas.csv', 'station_id,drainage_area\nE1,100\n', 'km², mi², ha, acres (--area-unit)'],
+];
+
+test('import asks for what each of many files leaves open, and takes none of them', async () => {
+  const before = databaseContent(databasePath());
+  const lists = LISTS.map(([name, content]) => given(name, content)).flatMap((path) => ['--stations', path]);
+  const { code, stdout, stderr } = await run(...lists, ...MAPPED.map(([name, content]) => given(name, content)));
+  expect([code, stdout]).toEqual([1, '']);
+  for (const [name, , remedy] of [...LISTS, ...MAPPED])
+    expect(stderr.split('\n').filter((line) => line.includes(name) && line.includes(remedy))).not.toEqual([]);
+  expect(databaseContent(databasePath()) === before).toBe(true);
+});
+
+test.each(MAPPED)('import --mapping answers what %s leaves open', async (name, content, _remedy, mapping, days) => {
   const before = await storedDays(place, 'A1');
-  const file = join(place.folder, 'mapping.json');
-  writeFileSync(file, JSON.stringify(mapping));
-  await refusedThenTaken(name, content, remedy, ['--mapping', file]);
+  const flags = ['--mapping', given('mapping.json', JSON.stringify(mapping))];
+  const { code, stdout } = await run(...flags, given(name, content));
+  expect([code, stdout.includes(name)]).toEqual([0, true]);
   expect(await storedDays(place, 'A1')).toEqual({ ...before, ...days });
 });
 
 test('import --correct and --area-unit answer what a list of stations leaves open', async () => {
-  const east = 'station_id,latitude,longitude\nE1,50.4,252.75\n';
-  await refusedThenTaken('east.csv', east, '--correct longitude-360', ['--correct', 'longitude-360']);
-  await refusedThenTaken('areas.csv', 'station_id,drainage_area\nE1,100\n', '--area-unit', ['--area-unit', 'ha']);
+  const list = given('list.csv', 'station_id,latitude,longitude,drainage_area\nE1,50.4,252.75,100\n');
+  const { code } = await run('--correct', 'longitude-360', '--area-unit', 'ha', '--stations', list);
+  expect(code).toBe(0);
   // 1 ha = 0.01 km².
   expect(await getStation(place.region.id, 'E1')).toMatchObject({ longitude: -107.25, areaKm2: 1 });
 });
