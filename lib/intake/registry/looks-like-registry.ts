@@ -4,7 +4,7 @@ import { findCalendar } from '../recognise/find-calendar.ts';
 import { isWidthRow } from '../recognise/find-header.ts';
 import { roleOfHeading } from '../recognise/heading-roles.ts';
 import { type SampleRow, sampleLines, splitSample, splitterFor } from '../recognise/sample.ts';
-import { registryColumns } from './registry-columns.ts';
+import { holdsCodes, registryColumns } from './registry-columns.ts';
 import { MOST_TITLES, registryDelimiter } from './registry-delimiter.ts';
 
 /** Rows below the header that are looked through. */
@@ -27,8 +27,8 @@ export function looksLikeRegistry(head: Uint8Array, wholeFile: boolean): boolean
 }
 
 function isRegistry(header: readonly string[], below: readonly SampleRow[]): boolean {
+  if (!holdsCodes(header)) return false;
   const columns = registryColumns(header);
-  if (columns.code < 0) return false;
   const rows = below.filter(({ fields }) => !isWidthRow(fields));
   const roles = header.map(roleOfHeading);
   const placed = columns.latitude >= 0 && columns.longitude >= 0;

@@ -87,6 +87,13 @@ export function registryColumns(headings: readonly string[]): RegistryColumns {
   };
 }
 
+/** Whether some column holds codes. Nearly all rows that are asked are no headings, which a few patterns tell. */
+export function holdsCodes(headings: readonly string[]): boolean {
+  const plain = headings.map(plainHeading);
+  const mayHold = PATTERNS.code.some((pattern) => plain.some((heading) => pattern.test(heading)));
+  return mayHold && registryColumns(headings).code >= 0;
+}
+
 /** How headings and fields of registries write units of area, and km² in one. */
 const AREA_UNITS: [RegExp, number][] = [
   [/\b(km ?2|sq ?km|square kilomet(?:er|re)s?|qkm)\b/, KM2_OF['km²']],

@@ -1,6 +1,6 @@
 import { LF } from '../file-blocks.ts';
 import { detectDelimiter, type SampleLine, splitSample, splitterFor } from '../recognise/sample.ts';
-import { registryColumns } from './registry-columns.ts';
+import { holdsCodes } from './registry-columns.ts';
 
 /** Title lines that may stand above the header of a registry. */
 export const MOST_TITLES = 30;
@@ -14,8 +14,6 @@ export function registryDelimiter(lines: readonly SampleLine[]): ',' | ';' | '\t
   if (usual === null) return null;
   const top = lines.slice(0, MOST_TITLES);
   const namesCodes = (delimiter: string) =>
-    splitSample(top, splitterFor(delimiter, LF)).some(
-      ({ fields }) => fields.length > 1 && registryColumns(fields).code >= 0,
-    );
-  return ([usual, ',', ';', '\t'] as const).find(namesCodes) ?? usual;
+    splitSample(top, splitterFor(delimiter, LF)).some(({ fields }) => fields.length > 1 && holdsCodes(fields));
+  return [...new Set([usual, ',', ';', '\t'] as const)].find(namesCodes) ?? usual;
 }
