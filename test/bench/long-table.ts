@@ -1,24 +1,16 @@
 import { closeSync, openSync, writeSync } from 'node:fs';
 import { dayNumber, isoDate } from '../../lib/calendar/day.ts';
+import { seeded } from '../seeded.ts';
 
 const YEARS = 60;
 const FIRST_DAY = dayNumber(1960, 1, 1);
 const DAYS = Math.round(YEARS * 365.25);
 
-/** Seeded numbers from 0 to 1 (a linear congruence: evenness hardly matters here). */
-function seeded(): () => number {
-  let state = 20;
-  return () => {
-    state = (Math.imul(state, 1664525) + 1013904223) >>> 0;
-    return state / 2 ** 32;
-  };
-}
-
 /** Writes a long table of about so many bytes: whole stations one after another, or all stations day by day. */
 export function writeTable(path: string, order: 'by station' | 'by day', bytes: number): void {
   const dates = Array.from({ length: DAYS }, (_, at) => isoDate(FIRST_DAY + at));
   const stations = Math.max(1, Math.round(bytes / (DAYS * 28)));
-  const random = seeded();
+  const random = seeded(20);
   const file = openSync(path, 'w');
   let block = 'station,date,flow,flag\n';
   const row = (station: number, day: number): void => {

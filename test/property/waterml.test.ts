@@ -6,6 +6,7 @@ import { afterAll, beforeAll, expect, test } from 'vitest';
 import { type WrittenSeries, type WrittenStation, watermlDocument } from '../../lib/export/waterml.ts';
 import { readFlows } from '../../lib/intake/read-flows.ts';
 import type { AlsoQuantity, StagedPart } from '../../lib/intake/types.ts';
+import { NO_ROW } from '../../lib/series/day-codes.ts';
 import { type Quantity, UNITS_OF } from '../../lib/series/quantities.ts';
 
 let folder = '';
@@ -65,7 +66,7 @@ const series = (quantity: Quantity): fc.Arbitrary<WrittenSeries> =>
         )
         .map((days) => ({
           ...{ quantity, unit, firstDay, codeList },
-          values: Float64Array.from(days, ([one, number]) => (number === 255 ? Number.NaN : one)),
+          values: Float64Array.from(days, ([one, number]) => (number === NO_ROW ? Number.NaN : one)),
           codes: Uint8Array.from(days, ([, number]) => number),
         })),
     );
@@ -82,7 +83,7 @@ const station: fc.Arbitrary<WrittenStation> = fc.record({
 /** What is comparable of days: by day number, value and code; days without a row do not count. */
 function daysOf(part: Pick<StagedPart, 'firstDay' | 'values' | 'codes'> & { codeList: WrittenSeries['codeList'] }) {
   return [...part.codes].flatMap((number, at) => {
-    if (number === 255) return [];
+    if (number === NO_ROW) return [];
     const { text: flag, bits: flags, valueText } = part.codeList[number];
     return [[part.firstDay + at, part.values[at] + 0, flag || (valueText ?? ''), flags, valueText ?? null]];
   });

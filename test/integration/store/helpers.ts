@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import type { FoundFacts, StagedPart, Unit } from '../../../lib/intake/types.ts';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 import type { Quantity } from '../../../lib/series/quantities.ts';
 import { type Applied, type ApplyOptions, applyStaging } from '../../../lib/store/apply-staging.ts';
 import { openConnection, rows } from '../../../lib/store/connection.ts';
@@ -44,7 +45,7 @@ export function partOf({ code, firstDay = 0, values, codes, unit = 'm3/s', quant
     values: Float64Array.from(values),
     codes: Uint8Array.from(values, (_, day) => {
       const text = codes === undefined ? '' : codes[day];
-      return text === null ? 255 : texts.indexOf(text);
+      return text === null ? NO_ROW : texts.indexOf(text);
     }),
     codeList: texts.map((text) => ({ text, bits: BITS[text] ?? 0 })),
   };

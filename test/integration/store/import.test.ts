@@ -1,5 +1,6 @@
 import { readdirSync } from 'node:fs';
 import { expect, test } from 'vitest';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 import { applyStaging } from '../../../lib/store/apply-staging.ts';
 import { listImports } from '../../../lib/store/imports.ts';
 import { OverlapError } from '../../../lib/store/overlap-error.ts';
@@ -48,7 +49,7 @@ test('readSeries() turns what was written into m³/s, and readParts() gives it a
   const [{ id }] = await listStations(regionId);
   const [written] = [...readParts(id)];
   expect([written.unit, written.firstDay, [...written.values]]).toEqual(['L/s', -3, [100, NaN_, 250]]);
-  const texts = [...written.codes].map((code) => (code === 255 ? null : written.codeList[code].text));
+  const texts = [...written.codes].map((code) => (code === NO_ROW ? null : written.codeList[code].text));
   expect(texts).toEqual(['P', null, 'A:e']);
 });
 

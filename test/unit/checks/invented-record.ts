@@ -1,16 +1,6 @@
 import { dayNumber } from '../../../lib/calendar/day.ts';
 import type { DailySeries } from '../../../lib/series/daily-series.ts';
-
-/** Seeded numbers in 0..1 (mulberry32, by Tommy Ettinger, public domain). */
-export function seeded(seed: number): () => number {
-  let state = seed | 0;
-  return () => {
-    state = (state + 0x6d2b79f5) | 0;
-    let t = Math.imul(state ^ (state >>> 15), 1 | state);
-    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t;
-    return ((t ^ (t >>> 14)) >>> 0) / 2 ** 32;
-  };
-}
+import { seeded } from '../../seeded.ts';
 
 export interface RecordKind {
   years?: number;

@@ -1,10 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { inspectFile } from '../../../lib/intake/inspect-file.ts';
-import type { Inspection, InspectOptions } from '../../../lib/intake/types.ts';
-import { dates, withFile } from './reading.ts';
-
-const inspect = (text: string, options: Partial<InspectOptions> = {}): Promise<Inspection> =>
-  withFile(text, (path) => inspectFile(path, { fileName: 'gauge.csv', ...options }));
+import type { InspectOptions } from '../../../lib/intake/types.ts';
+import { dates, inspect } from './reading.ts';
 
 test('inspectFile says how a good file will be read, with its header and first rows, and no problems', async () => {
   const seen = await inspect('station,date,flow_cfs,flag\n007,2001-03-01,1.50,A\n');
@@ -60,6 +56,13 @@ test('inspectFile of a file that nothing can be made of has its problem and no m
   const seen = await inspect('');
   expect(seen).toMatchObject({ mapping: null, header: null, preview: [], valueCandidates: [] });
   expect(seen.problems[0].message).toMatch(/gauge.csv: the file is empty/);
+});
+
+test('inspectFile asks for the date order where dates contradict one another, if that shows in the first rows', async () => {
+  const rows = ['13/1/2001,5', '1/14/2001,6', '2/3/2001,7'];
+  const { problems, understood } = await inspect(`date,flow_m3s\n${rows.join('\n')}\n`);
+  expect(problems.map(({ problem }) => [problem.needs, problem.row])).toEqual([['date-order', 3]]);
+  expect(understood.map(({ date }) => date)).toEqual(['2001-01-13', '2001-01-14', null]);
 });
 
 test('inspectFile finds the date order, and asks for it where no date says it', async () => {

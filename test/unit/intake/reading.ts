@@ -3,14 +3,18 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { expect } from 'vitest';
 import { isoDate, parseIsoDate } from '../../../lib/calendar/day.ts';
+import { inspectFile } from '../../../lib/intake/inspect-file.ts';
 import { readFlows } from '../../../lib/intake/read-flows.ts';
 import {
   type ImportReport,
+  type Inspection,
+  type InspectOptions,
   IntakeError,
   type ReadFlowsOptions,
   type RejectedRow,
   type StagedPart,
 } from '../../../lib/intake/types.ts';
+import { NO_ROW } from '../../../lib/series/day-codes.ts';
 
 type Given = Partial<Omit<ReadFlowsOptions, 'emit'>>;
 
@@ -49,11 +53,16 @@ export function read(content: string | Uint8Array, options: Given = {}): Promise
   });
 }
 
+/** What inspecting a file of the given content says; it is called `gauge.csv` unless the options say otherwise. */
+export function inspect(content: string | Uint8Array, options: Partial<InspectOptions> = {}): Promise<Inspection> {
+  return withFile(content, (path) => inspectFile(path, { fileName: 'gauge.csv', ...options }));
+}
+
 /** The days of a part that the file had rows for. */
 export function daysOf(part: StagedPart): Record<string, [number, string]> {
   const days: Record<string, [number, string]> = {};
   for (const [at, code] of part.codes.entries()) {
-    if (code !== 255) days[isoDate(part.firstDay + at)] = [part.values[at], part.codeList[code].text];
+    if (code !== NO_ROW) days[isoDate(part.firstDay + at)] = [part.values[at], part.codeList[code].text];
   }
   return days;
 }

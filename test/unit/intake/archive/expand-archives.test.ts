@@ -2,10 +2,10 @@ import { existsSync, mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSy
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { gzipSync } from 'node:zlib';
-import { strToU8, type Zippable, zipSync } from 'fflate';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { expandArchives, type NamedFile } from '../../../../lib/intake/archive/index.ts';
 import { IntakeError } from '../../../../lib/intake/types.ts';
+import { zipped } from '../../../zipped.ts';
 import { handMade, rowOf } from '../workbook/workbook-parts.ts';
 
 let folder = '';
@@ -17,13 +17,6 @@ beforeEach(() => {
 afterEach(() => rmSync(folder, { recursive: true }));
 
 const CSV = 'date,flow\n2001-01-01,1\n';
-const zip = (files: Record<string, string | Uint8Array>): Uint8Array =>
-  zipSync(
-    Object.fromEntries(
-      Object.entries(files).map(([name, content]) => [name, typeof content === 'string' ? strToU8(content) : content]),
-    ) as Zippable,
-  );
-
 async function expand(
   given: Record<string, string | Uint8Array>,
   options: { mostBytes?: number; kind?: NamedFile['kind'] } = {},
@@ -64,7 +57,7 @@ describe('expandArchives', () => {
   test('puts the files of archives in their place, told by content and not by name', async () => {
     const { files } = await expand({
       'first.csv': CSV,
-      'set.bin': zip({ 'x/a.csv': 'A', 'b.csv': 'B' }),
+      'set.bin': zipped({ 'x/a.csv': 'A', 'b.csv': 'B' }),
       'c.csv.gz': gzipSync('C'),
       'd.gzip': gzipSync('D'),
     });
@@ -79,7 +72,7 @@ describe('expandArchives', () => {
 
   test('names of entries never become paths; files of one name keep their folder in it', async () => {
     const { files, paths } = await expand({
-      'set.zip': zip({ 'a/flows.csv': '1', 'b/flows.csv': '2' }),
+      'set.zip': zipped({ 'a/flows.csv': '1', 'b/flows.csv': '2' }),
       'flows.csv': '3',
     });
     expect(files.map(([name]) => name)).toEqual(['a/flows.csv', 'b/flows.csv', 'flows.csv']);
@@ -88,25 +81,25 @@ describe('expandArchives', () => {
 
   test('archives may stand in archives once, and no deeper', async () => {
     const { files } = await expand({
-      'set.zip': zip({ 'a.csv.gz': gzipSync('A'), 'more.zip': zip({ 'b.csv': 'B' }) }),
+      'set.zip': zipped({ 'a.csv.gz': gzipSync('A'), 'more.zip': zipped({ 'b.csv': 'B' }) }),
     });
     expect(files).toEqual([
       ['a.csv', 'A'],
       ['b.csv', 'B'],
     ]);
-    const deep = zip({ 'a.zip': zip({ 'b.zip': zip({ 'c.csv': 'C' }) }) });
+    const deep = zipped({ 'a.zip': zipped({ 'b.zip': zipped({ 'c.csv': 'C' }) }) });
     expect((await refusalOf({ 'deep.zip': deep })).message).toMatch(/b\.zip: archives stand more than 2 deep/);
   });
 
   test('a workbook is a file, also within an archive', async () => {
     const workbook = handMade({ sheets: [{ name: 'Flows', rows: rowOf(1, [1]) }] });
-    const { files } = await expand({ 'w.xlsx': workbook, 'set.zip': zip({ 'v.xlsx': workbook }) });
+    const { files } = await expand({ 'w.xlsx': workbook, 'set.zip': zipped({ 'v.xlsx': workbook }) });
     expect(files.map(([name]) => name)).toEqual(['w.xlsx', 'v.xlsx']);
   });
 
   test('folders, leavings of operating systems and read-me files are passed over, the latter with a note', async () => {
     const { files, notes } = await expand({
-      'set.zip': zip({
+      'set.zip': zipped({
         ...{ 'x/': '', 'a.csv': 'A', '__MACOSX/._a.csv': 'm', '.DS_Store': 'd', 'README.txt': 'r', 'licence.md': 'l' },
         ...{ 'map.pdf': 'p', 'readme-stations.csv': 'S' },
       }),
@@ -117,13 +110,13 @@ describe('expandArchives', () => {
   });
 
   test('a registry’s archive is of registries; flows may bring their registry along', async () => {
-    expect((await expand({ 's.zip': zip({ 'a.csv': 'A' }) }, { kind: 'registry' })).kinds).toEqual(['registry']);
-    expect((await expand({ 's.zip': zip({ 'a.csv': 'A' }) }, { kind: 'flows' })).kinds).toEqual([undefined]);
+    expect((await expand({ 's.zip': zipped({ 'a.csv': 'A' }) }, { kind: 'registry' })).kinds).toEqual(['registry']);
+    expect((await expand({ 's.zip': zipped({ 'a.csv': 'A' }) }, { kind: 'flows' })).kinds).toEqual([undefined]);
   });
 
   test('stops when it is told to, and leaves nothing behind', async () => {
     const path = join(folder, 'given');
-    writeFileSync(path, zip({ 'a.csv': CSV }));
+    writeFileSync(path, zipped({ 'a.csv': CSV }));
     const signal = AbortSignal.abort(new Error('stop'));
     const work = expandArchives([{ path, name: 'a.zip' }], upload, { mostBytes: 1e9, signal });
     await expect(work).rejects.toThrow('stop');
@@ -142,7 +135,7 @@ const CENTRAL = 0x02014b50;
 const renamed = (from: string, to: string) =>
   Uint8Array.from(
     Buffer.from(
-      Buffer.from(zip({ [from]: CSV }))
+      Buffer.from(zipped({ [from]: CSV }))
         .toString('latin1')
         .replaceAll(from, to),
       'latin1',
@@ -162,13 +155,13 @@ describe('expandArchives refuses', () => {
 
   test('encrypted entries', async () => {
     // General purpose bit 0.
-    const bytes = patched(zip({ 'a.csv': CSV }), CENTRAL, (view, at) => view.setUint16(at + 8, 1, true));
+    const bytes = patched(zipped({ 'a.csv': CSV }), CENTRAL, (view, at) => view.setUint16(at + 8, 1, true));
     expect((await refusalOf({ 'set.zip': bytes })).message).toMatch(/a file of the archive is encrypted \(“a\.csv”\)/);
   });
 
   test('links', async () => {
     // Made by Unix (3), mode 0120777: a symbolic link.
-    const bytes = patched(zip({ 'a.csv': '/etc/passwd' }), CENTRAL, (view, at) => {
+    const bytes = patched(zipped({ 'a.csv': '/etc/passwd' }), CENTRAL, (view, at) => {
       view.setUint8(at + 5, 3);
       view.setUint32(at + 38, 0o120777 * 0x10000, true);
     });
@@ -176,13 +169,13 @@ describe('expandArchives refuses', () => {
   });
 
   test('a way of packing that is not common', async () => {
-    const bytes = patched(zip({ 'a.csv': CSV }), CENTRAL, (view, at) => view.setUint16(at + 10, 98, true));
+    const bytes = patched(zipped({ 'a.csv': CSV }), CENTRAL, (view, at) => view.setUint16(at + 10, 98, true));
     expect((await refusalOf({ 'set.zip': bytes })).message).toMatch(/packed in a way that is not common/);
   });
 
   test('a zip bomb, before anything of it is written, and a gzip bomb', async () => {
     const zeros = new Uint8Array(101e6);
-    expect((await refusalOf({ 'bomb.zip': zip({ 'a.csv': zeros }) })).message).toMatch(
+    expect((await refusalOf({ 'bomb.zip': zipped({ 'a.csv': zeros }) })).message).toMatch(
       /unpacks to more than 1000 times/,
     );
     expect((await refusalOf({ 'bomb.gz': gzipSync(zeros, { level: 9 }) })).message).toMatch(
@@ -194,21 +187,21 @@ describe('expandArchives refuses', () => {
     // Deflate packs zeros to a 1,032nd at most; fixed codes, as at level 1, to a 230th or so.
     const within = gzipSync(new Uint8Array(101e6), { level: 1 });
     expect(101e6 / within.length).toBeLessThan(1000);
-    const bomb = zip({ 'a.csv.gz': within });
+    const bomb = zipped({ 'a.csv.gz': within });
     expect(within.length / bomb.length).toBeLessThan(1000);
     const { problem } = await refusalOf({ 'bomb.zip': bomb });
     expect(problem).toMatchObject({ file: 'bomb.zip', message: 'it unpacks to more than 1000 times its size' });
   }, 30_000);
 
   test('an entry that is larger than it says', async () => {
-    const bytes = patched(zip({ 'a.csv': 'x'.repeat(10_000) }), CENTRAL, (view, at) =>
+    const bytes = patched(zipped({ 'a.csv': 'x'.repeat(10_000) }), CENTRAL, (view, at) =>
       view.setUint32(at + 24, 10, true),
     );
     expect((await refusalOf({ 'set.zip': bytes })).message).toMatch(/the archive cannot be read/);
   });
 
   test('more than may be imported at once', async () => {
-    const given = { 'set.zip': zip({ 'a.csv': 'x'.repeat(600), 'b.csv': 'x'.repeat(600) }) };
+    const given = { 'set.zip': zipped({ 'a.csv': 'x'.repeat(600), 'b.csv': 'x'.repeat(600) }) };
     expect((await refusalOf(given, { mostBytes: 1000 })).message).toMatch(/larger than may be imported at once/);
     expect((await refusalOf({ 'a.gz': gzipSync('x'.repeat(1200)) }, { mostBytes: 1000 })).message).toMatch(
       /larger than may/,
@@ -217,10 +210,10 @@ describe('expandArchives refuses', () => {
   });
 
   test.each([
-    ['an archive that is cut short', zip({ 'a.csv': CSV }).slice(0, 60), /the archive cannot be read/],
+    ['an archive that is cut short', zipped({ 'a.csv': CSV }).slice(0, 60), /the archive cannot be read/],
     ['a gzipped file that is cut short', gzipSync(CSV).subarray(0, 20), /cannot be unpacked/],
-    ['an archive with nothing to import', zip({ 'README.txt': 'r' }), /holds no file that could be imported/],
-    ['an empty archive', zip({}), /holds no file that could be imported/],
+    ['an archive with nothing to import', zipped({ 'README.txt': 'r' }), /holds no file that could be imported/],
+    ['an empty archive', zipped({}), /holds no file that could be imported/],
     ['a tar archive', tar(), /this is a tar archive/],
     ['a gzipped tar archive', gzipSync(tar()), /this is a tar archive/],
     [

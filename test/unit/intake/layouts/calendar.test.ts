@@ -1,9 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { daysInMonth } from '../../../../lib/calendar/day.ts';
-import { inspectFile } from '../../../../lib/intake/inspect-file.ts';
 import type { Mapping } from '../../../../lib/intake/types.ts';
 import { FLAG } from '../../../../lib/series/daily-series.ts';
-import { daysOf, read, refusal, withFile } from '../reading.ts';
+import { daysOf, inspect, read, refusal } from '../reading.ts';
 
 const DAYS = Array.from({ length: 31 }, (_, at) => at + 1);
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
@@ -29,9 +28,6 @@ function yearOfDays(year: number, order = MONTHS.map((_, at) => at + 1), first =
 }
 
 const csv = (rows: string[][], delimiter = ','): string => rows.map((row) => row.join(delimiter)).join('\n');
-
-const inspect = (text: string, options = {}) =>
-  withFile(text, (path) => inspectFile(path, { fileName: 'gauge.csv', ...options }));
 
 describe('a row a month', () => {
   const header = ['station', 'year', 'month', ...DAYS.map(String)];

@@ -1,9 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { inspectFile } from '../../../../lib/intake/inspect-file.ts';
-import { daysOf, read, refusal, withFile } from '../reading.ts';
-
-const inspect = (text: string, options = {}) =>
-  withFile(text, (path) => inspectFile(path, { fileName: 'gauge.csv', ...options }));
+import { daysOf, inspect, read, refusal } from '../reading.ts';
 
 describe('agency tables of several series', () => {
   const header = (series: string[]) => {

@@ -1,4 +1,4 @@
-import { strToU8, zipSync } from 'fflate';
+import { zipped } from '../../../zipped.ts';
 
 /** A workbook put together by hand from its parts (ECMA-376), for what no writer would write. */
 export interface HandMade {
@@ -46,7 +46,7 @@ export function handMade({ sheets, strings = [], formats = [], from1904 = false 
     parts[`xl/worksheets/sheet${at + 1}.xml`] =
       `<worksheet ${MAIN}><dimension ref="A1"/><sheetData>${rows}</sheetData>${behind}</worksheet>`;
   }
-  return zipSync(Object.fromEntries(Object.entries(parts).map(([name, text]) => [name, strToU8(text)])));
+  return zipped(parts);
 }
 
 /** A row of cells: numbers, and texts in line; null leaves a cell out. */
