@@ -8,6 +8,9 @@ import { IntakeError } from './types.ts';
 const ORDERS = ['dmy', 'mdy', 'ymd'] as const;
 const ALL = ORDER_BITS.ymd | ORDER_BITS.dmy | ORDER_BITS.mdy;
 
+/** Rows that are looked at for contradictions where the first proof would do: quick, and most show themselves there. */
+const LOOKED_AT = 10_000;
+
 /** A date and its row. */
 interface Seen {
   line: number;
@@ -23,11 +26,13 @@ class OrderWitness implements RowReader {
   readonly narrowing: Seen[] = [];
   /** a date that means unlike days in the orders left */
   open = '';
+  rows = 0;
 
   constructor(private readonly column: number) {}
 
   read(bytes: Uint8Array, fields: Fields, line: number): null {
     const { column } = this;
+    this.rows++;
     if (column >= fields.count || this.possible === 0) return null;
     const bits = ordersOf(bytes, fields.start[column], fields.end[column]);
     if (bits === 0) return null;
@@ -46,7 +51,8 @@ const wordsOf = (bits: number): string =>
     .join(' or ');
 
 /** Finds in which order dates such as 4/3/2001 or 1/2/98 have day, month and year, from all dates of the file.
- *  @param firstProof  stop at the first date that decides it, and leave contradictions to the reading
+ *  @param firstProof  stop at the first date that decides it, and leave contradictions behind the first 10,000 rows to
+ *                     the reading
  *  @throws IntakeError when no date decides it, or dates contradict one another */
 export async function findDateOrder(
   path: string,
@@ -54,7 +60,8 @@ export async function findDateOrder(
   { signal, firstProof = false }: { signal?: AbortSignal; firstProof?: boolean } = {},
 ): Promise<DateOrder> {
   const witness = new OrderWitness(plan.places.date[0]);
-  const stop = () => witness.possible === 0 || (firstProof && ordersIn(witness.possible).length === 1);
+  const isEnough = () => firstProof && witness.rows >= LOOKED_AT && ordersIn(witness.possible).length === 1;
+  const stop = () => witness.possible === 0 || isEnough();
   await new RowLoop(plan, witness, { signal, stop }).read(path);
   if (witness.possible === 0) throw contradiction(plan, witness.narrowing);
   const left = ordersIn(witness.possible);
