@@ -49,6 +49,11 @@ export class DayCodes {
     return number;
   }
 
+  /** The code of a point. */
+  of(point: PointCode): DayCode {
+    return this.codes[this.number(point)];
+  }
+
   private dayCode({ flag, bits, exact, valueText }: PointCode): DayCode {
     const text = flag.slice(0, KEPT_TEXT);
     const said = Object.hasOwn(this.meanings, text) ? this.meanings[text] : undefined;

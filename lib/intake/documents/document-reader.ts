@@ -12,6 +12,7 @@ import {
 } from '../types.ts';
 import { encodingOf } from './decode-text.ts';
 import type { TextReading } from './read-text.ts';
+import { SeriesLook } from './series-look.ts';
 import { nothingTaken } from './series-problems.ts';
 import { SeriesSink } from './series-sink.ts';
 import type { DocumentLayout } from './sniff.ts';
@@ -48,25 +49,26 @@ export function readerOf(layout: DocumentLayout, head: FileHead, parse: Document
   return {
     layout,
     async inspect(path, options) {
-      const sink = new SeriesSink(options, true);
+      const look = new SeriesLook();
+      const sink = new SeriesSink(options, look);
       let bytes = 0;
       try {
         const reading = readingFor(options.fileName, sink);
         const onBytes = (chunk: Uint8Array) => {
           bytes += chunk.length;
         };
-        await parse(path, { ...reading, onBytes }, sink, () => bytes > LOOKED_AT && sink.seenEnough);
+        await parse(path, { ...reading, onBytes }, sink, () => bytes > LOOKED_AT && look.isFull);
         sink.checkRecords();
         const none = nothingTaken(options.fileName, sink);
-        if (none) sink.problems.push(none);
+        if (none) look.problems.push(none);
       } catch (error) {
         if (!(error instanceof IntakeError)) throw error;
-        sink.problems.push(error);
+        look.problems.push(error);
       }
-      return inspectionOf(layout, options, sink);
+      return inspectionOf(layout, options, { sink, look });
     },
     async read(path, options) {
-      const sink = new SeriesSink(options, false);
+      const sink = new SeriesSink(options);
       try {
         return await readInto(sink, path, options);
       } finally {
@@ -125,13 +127,17 @@ function stationOf(given: string | undefined, sink: SeriesSink): Mapping['statio
   return given === undefined ? { from: 'file-name' } : { from: 'given', code: given };
 }
 
-function inspectionOf(layout: DocumentLayout, options: InspectOptions, sink: SeriesSink): Inspection {
+function inspectionOf(
+  layout: DocumentLayout,
+  options: InspectOptions,
+  { sink, look }: { sink: SeriesSink; look: SeriesLook },
+): Inspection {
   const asked = sink.stations.problem();
-  const problems = [...sink.problems, ...[...sink.stations.strangers.values()].slice(0, 1), ...(asked ? [asked] : [])];
+  const problems = [...look.problems, ...[...sink.stations.strangers.values()].slice(0, 1), ...(asked ? [asked] : [])];
   const readable = problems.every(({ problem }) => problem.needs !== undefined);
   return {
     mapping: readable ? mappingOf(layout, options, sink.mainUnit, sink) : null,
-    ...{ header: null, preview: sink.preview, problems, valueCandidates: [], understood: sink.understood },
+    ...{ header: null, preview: look.preview, problems, valueCandidates: [], understood: look.understood },
     ...{ others: [...sink.wanted.others.values()], facts: sink.foundFacts(), sheets: null },
   };
 }

@@ -1,4 +1,5 @@
 import { isoDate } from '../../calendar/day.ts';
+import type { DayCode } from '../../series/day-codes.ts';
 import { PageMemory } from '../page-memory.ts';
 import { REPORTED_ROWS } from '../rejections.ts';
 import { stationReport } from '../report.ts';
@@ -10,19 +11,17 @@ import {
   type RejectedRow,
   type StagedPart,
   type StationReport,
-  type UnderstoodRow,
   type Unit,
 } from '../types.ts';
 import { DayCodes, type PointCode } from './day-codes.ts';
 import { labelOf, type SeriesHead, unitOfHead } from './series-head.ts';
+import type { SeriesLook } from './series-look.ts';
 import { stepProblem, unitsDiffer } from './series-problems.ts';
 import { SeriesRecord } from './series-record.ts';
 import { type StampMeaning, TimeStamp } from './time-stamp.ts';
 import { ValueText } from './value-text.ts';
 import { type Wanted, WantedSeries } from './wanted-series.ts';
 
-/** Points shown of a document before it is read. */
-const SHOWN_POINTS = 20;
 const MOST_WARNINGS = 50;
 
 /** A point of a series as the document writes it. */
@@ -38,9 +37,6 @@ export interface Point extends PointCode {
 export class SeriesSink {
   readonly wanted: WantedSeries;
   readonly warnings = new Set<string>();
-  readonly understood: UnderstoodRow[] = [];
-  readonly preview: string[][] = [];
-  readonly problems: IntakeError[] = [];
   readonly rejected: RejectedRow[] = [];
   readonly stations: StationCodes;
   rows = 0;
@@ -70,21 +66,16 @@ export class SeriesSink {
   private record: SeriesRecord | null = null;
   private current: Wanted | null = null;
 
-  /** @param look  only the first points are looked at: problems are gathered, and nothing is thrown for them */
+  /** @param look  where only the first points are looked at: gathers what they show, and problems in place of throwing them */
   constructor(
     private readonly options: InspectOptions & { onRejected?(row: RejectedRow): void; scratch?: string },
-    private readonly look: boolean,
+    private readonly look: SeriesLook | null = null,
   ) {
     const { fileName, knownStations = null, matchCodes, mapping } = options;
     this.memory = new PageMemory({ scratch: options.scratch });
     this.wanted = new WantedSeries(options);
-    this.stations = new StationCodes(fileName, knownStations, { matchCodes, lenient: look });
+    this.stations = new StationCodes(fileName, knownStations, { matchCodes, lenient: look !== null });
     this.values = new ValueText(mapping?.missing ?? []);
-  }
-
-  /** True when nothing more can be learnt by looking. */
-  get seenEnough(): boolean {
-    return this.understood.length >= SHOWN_POINTS;
   }
 
   /** Ends the use of what the records lie in. */
@@ -166,25 +157,22 @@ export class SeriesSink {
       (this.values.read(point.value, head.noData) ? null : `“${point.value.slice(0, 60)}” is not a number`);
     const valueText = point.valueText ?? this.values.text;
     const code: PointCode = { flag: point.flag, bits: point.bits, exact: point.exact, valueText };
-    if (this.look && this.understood.length < SHOWN_POINTS && this.current?.main)
-      this.show(point, code, record, problem);
+    if (this.look?.isFull === false && this.current?.main) this.show(this.look, point, record.codes.of(code), problem);
     if (problem === null) {
       try {
         const meant = point.meaning === undefined ? head : { ...head, meaning: point.meaning };
         record.put(meant, this.stamp, this.values.value, code, this.rows);
       } catch (error) {
-        if (!this.look || !(error instanceof IntakeError)) throw error;
+        if (this.look === null || !(error instanceof IntakeError)) throw error;
         this.refuse(error);
       }
     }
     return problem;
   }
 
-  private show(point: Point, code: PointCode, record: SeriesRecord, problem: string | null): void {
-    this.preview.push([this.station, point.time, point.value, point.flag]);
-    const { text, bits } = record.codes.codes[record.codes.number(code)];
+  private show(look: SeriesLook, point: Point, { text, bits }: DayCode, problem: string | null): void {
     const day = this.stamp.dailyDay(point.meaning ?? this.head?.meaning ?? 'instant');
-    this.understood.push({
+    look.show([this.station, point.time, point.value, point.flag], {
       ...{ row: this.rows, station: this.station, date: problem === null ? isoDate(day) : null },
       value: problem === null && !Number.isNaN(this.values.value) ? this.values.value : null,
       ...{ flag: text, bits, problem },
@@ -215,9 +203,8 @@ export class SeriesSink {
   }
 
   private refuse(problem: IntakeError): void {
-    if (!this.look) throw problem;
-    const same = (one: IntakeError) => one.problem.needs === problem.problem.needs && one.message === problem.message;
-    if (!this.problems.some(same)) this.problems.push(problem);
+    if (this.look === null) throw problem;
+    this.look.note(problem);
   }
 
   /** Adds to the problems what stands against the records themselves: several values a day, or one a month. */
