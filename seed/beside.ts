@@ -1,6 +1,7 @@
 import { dayNumber } from '../lib/calendar/day.ts';
 import { NO_ROW } from '../lib/series/day-codes.ts';
 import type { Quantity, Unit } from '../lib/series/quantities.ts';
+import type { MarkSpan } from '../lib/store/marks-on-flags.ts';
 import type { Catchment } from './catchment-flow.ts';
 import { CODES } from './observe.ts';
 import type { RandomStream } from './random.ts';
@@ -80,19 +81,42 @@ export function weatherBeside(
 /** Year from which the water works meters what it pumps: too few years to be ranked. */
 const METERED_FROM = 2009;
 
-/** What a water works pumps out of the river, L/s.
+/** What a water works pumps out of the river, L/s: about what is taken, more or less as the town drinks from day to day.
  *  @param taken  m³/s on every day of the weather */
-export function pumpedBeside(code: string, weather: Weather, taken: Float64Array, { lastDay }: Traits): SeedBeside {
+export function pumpedBeside(
+  code: string,
+  weather: Weather,
+  taken: Float64Array,
+  { lastDay }: Traits,
+  random: RandomStream,
+): SeedBeside {
   const first = dayNumber(METERED_FROM, 1, 1);
-  const values = taken
-    .subarray(first - weather.firstDay, lastDay + 1 - weather.firstDay)
-    .map((flow) => Math.round(1000 * flow));
+  let thirst = 0;
+  const values = taken.subarray(first - weather.firstDay, lastDay + 1 - weather.firstDay).map((flow) => {
+    thirst = 0.7 * thirst + 0.06 * (random.uniform() - 0.5);
+    return Math.round(1000 * flow * (1 + thirst));
+  });
   return dayFrom(code, 'flow', 'L/s', first, values);
 }
 
+/** m³/s from a square kilometre: metres of water on one day, more than ever fall. */
+const BURST_PER_KM2 = 40;
+/** Days that were copied into the place of others: a month. */
+const COPIED_DAYS = 31;
+
+/** What a person said of some days. */
+export interface SeedMark extends MarkSpan {
+  reason: string;
+  by: string;
+}
+
 /** Plants what the checks of a record should find, changing `values` and `codes`: days that the logger repeated, a slipped
- *  decimal point, and a few days below zero. */
-export function plantFaults({ values, codes }: { values: Float64Array; codes: Uint8Array }): void {
+ *  decimal point, a month copied over another, a day with more water than falls, and a few days below zero.
+ *  @returns what a person has said to two of them */
+export function plantFaults(
+  { firstDay, values, codes }: { firstDay: number; values: Float64Array; codes: Uint8Array },
+  areaKm2: number,
+): SeedMark[] {
   const at = (share: number) => {
     let day = Math.floor(share * values.length);
     while (!(values[day - 1] > 0 && values[day] > 0 && values[day + 1] > 0)) day += 1;
@@ -106,6 +130,26 @@ export function plantFaults({ values, codes }: { values: Float64Array; codes: Ui
   for (let k = 1; k < 17; k += 1) write(stuck + k, values[stuck]);
   const slipped = at(0.6);
   write(slipped, 100 * values[slipped]);
+  const copied = at(0.7);
+  // from the same season two years before: it looks right
+  for (let k = 0; k < COPIED_DAYS; k += 1) {
+    const earlier = values[copied + k - 2 * 365];
+    if (!Number.isNaN(earlier)) write(copied + k, earlier);
+  }
   const below = at(0.8);
   for (let k = 0; k < 4; k += 1) write(below + k, -0.02 - 0.01 * k);
+  const burst = at(0.9);
+  write(burst, BURST_PER_KM2 * areaKm2);
+  const mark = (from: number, days: number, kind: SeedMark['kind'], reason: string): SeedMark => ({
+    ...{ firstDay: firstDay + from, lastDay: firstDay + from + days - 1, kind, reason, by: 'seed' },
+  });
+  return [
+    mark(burst, 1, 'reject', 'No storm on that day, and the gauge below saw nothing: the sensor was being cleaned.'),
+    mark(
+      copied,
+      COPIED_DAYS,
+      'note',
+      'The same month stands two years before. The archive was asked for the right one.',
+    ),
+  ];
 }

@@ -8,7 +8,10 @@ import type { SeedRecord, SeedStation } from './generate.ts';
 /** Writes records as one long table, station,date,flow,flag, flows in m³/s; a day without a value has an empty flow, a day
  *  without a row has none. One record is in memory at a time.
  *  @returns rows written, the header not counted */
-export async function writeFlowsCsv(path: string, records: Iterable<Omit<SeedRecord, 'beside'>>): Promise<number> {
+export async function writeFlowsCsv(
+  path: string,
+  records: Iterable<Omit<SeedRecord, 'beside' | 'marks'>>,
+): Promise<number> {
   const out = createWriteStream(path, { highWaterMark: 1 << 20 });
   // A write that fails surfaces at `finished` as well; listening keeps it from ending the process before.
   const done = finished(out);

@@ -35,7 +35,8 @@ export function furnish(sites: readonly Site[], traits: readonly Traits[], stati
   );
   const [faulty = null] = find(({ notes }) => notes.includes('young'));
   if (faulty !== null) {
-    const told = 'Its logger has stuck, slipped a decimal point and written values below zero.';
+    const told =
+      'Its logger has stuck, slipped a decimal point and written values below zero; a month stands twice in its files.';
     stations[faulty].notes = `${stations[faulty].notes} ${told}`;
   }
   // The smallest river that is pumped from: there the difference shows most.
@@ -114,6 +115,8 @@ export function besideOf(
   if (gauged.includes(i)) {
     found.push(...weatherBeside(station.code, weather, land, traits, randomStream(seed, 'rain gauge', i)));
   }
-  if (works?.site === i && taken) found.push(pumpedBeside(works.code, weather, taken, traits));
+  if (works?.site === i && taken) {
+    found.push(pumpedBeside(works.code, weather, taken, traits, randomStream(seed, 'pump', i)));
+  }
   return found;
 }

@@ -9,7 +9,7 @@
  *  names, land, weather and flows come out of the seed, and its place is open ocean. */
 
 import { dateOfDay } from '../lib/calendar/day.ts';
-import { plantFaults, type SeedBeside } from './beside.ts';
+import { plantFaults, type SeedBeside, type SeedMark } from './beside.ts';
 import { type Catchment, runoffOf } from './catchment-flow.ts';
 import { describeStations, type SeedStation } from './describe.ts';
 import { type Drainage, layDrainage } from './drainage.ts';
@@ -53,6 +53,8 @@ export interface SeedRecord {
   codeList: { text: string; bits: number }[];
   /** further records that were kept there */
   beside: SeedBeside[];
+  /** what people have said of its days */
+  marks: SeedMark[];
 }
 
 export interface SeedRegion {
@@ -199,10 +201,11 @@ function* flowRecords(
       GAUGE_COOLER_ABOVE * site.height ** 2,
       randomStream(seed, 'gauge', i),
     );
-    if (furnishings.faulty === i) plantFaults(record);
+    const marks = furnishings.faulty === i ? plantFaults(record, site.cells * CELL_KM2) : [];
     const place = { seed, station: stations[i], traits: traits[i], flow: record, weather, land: catchment, taken };
     const codeList = CODES.map((code) => ({ ...code }));
-    yield { code: stations[i].code, unit: 'm3/s', ...record, codeList, beside: besideOf(furnishings, i, place) };
+    const beside = besideOf(furnishings, i, place);
+    yield { code: stations[i].code, unit: 'm3/s', ...record, codeList, beside, marks };
     return flow;
   }
 }

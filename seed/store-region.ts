@@ -6,7 +6,9 @@ import type { Quantity, Unit } from '../lib/series/quantities.ts';
 import { applyStaging } from '../lib/store/apply-staging.ts';
 import { blobOfValues } from '../lib/store/blobs.ts';
 import { setLink } from '../lib/store/links.ts';
+import { addMark } from '../lib/store/marks.ts';
 import { createStaging, type Staging } from '../lib/store/staging.ts';
+import { listStations } from '../lib/store/stations.ts';
 import type { SeedBeside } from './beside.ts';
 import type { SeedRecord, SeedRegion } from './generate.ts';
 
@@ -35,13 +37,23 @@ export async function storeRegion(
   const staging = createStaging(`seed-${randomUUID()}`);
   try {
     stageLand(staging, region);
-    stageFlows(staging, region, onProgress);
+    const marked = stageFlows(staging, region, onProgress);
     staging.seal();
     const { regionId, slug } = await applyStaging(staging.jobId, { region: { name, invented: true }, by: BY });
     for (const link of region.furnishings.links) await setLink(regionId, { ...link, source: 'river-layer' });
+    await markDays(regionId, marked);
     return slug;
   } finally {
     staging.discard();
+  }
+}
+
+type Marked = Pick<SeedRecord, 'code' | 'marks'>;
+
+async function markDays(regionId: number, marked: readonly Marked[]): Promise<void> {
+  const ids = new Map((await listStations(regionId)).map(({ code, id }) => [code, id]));
+  for (const { code, marks } of marked) {
+    for (const mark of marks) await addMark({ ...mark, stationId: ids.get(code)! });
   }
 }
 
@@ -60,8 +72,10 @@ function stageLand(staging: Staging, { stations: gauged, furnishings, layers }: 
   }
 }
 
-/** Flows first; what was kept beside them is small, and follows as a file a quantity. */
-function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: number) => void): void {
+/** Flows first; what was kept beside them is small, and follows as a file a quantity.
+ *  @returns what people said of the days */
+function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: number) => void): Marked[] {
+  const marked: Marked[] = [];
   const beside = new Map<string, SeedBeside[]>();
   let made = 0;
   function* flows(): Generator<SeedRecord> {
@@ -71,6 +85,7 @@ function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: nu
           other.quantity === 'flow' ? 'invented abstraction' : `invented ${other.quantity.replace('-', ' ')}`;
         beside.set(name, [...(beside.get(name) ?? []), other]);
       }
+      if (record.marks.length > 0) marked.push({ code: record.code, marks: record.marks });
       yield record;
       made += 1;
       onProgress(made / region.stations.length);
@@ -78,6 +93,7 @@ function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: nu
   }
   stageTable(staging, { fileName: 'invented flows', quantity: 'flow', unit: 'm3/s' }, flows());
   for (const [fileName, records] of beside) stageTable(staging, { fileName, ...records[0] }, records);
+  return marked;
 }
 
 function stageTable(

@@ -26,7 +26,7 @@ export function Header({ region = null, page = null }: HeaderProps) {
     <header className={styles.header}>
       <Link href="/" prefetch={false} className={styles.brand}>
         <Stone />
-        Hungerstone
+        <span className={region ? styles.word : undefined}>Hungerstone</span>
       </Link>
       {region && (
         <>

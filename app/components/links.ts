@@ -60,6 +60,20 @@ export function yearHref(slug: string, station: string, year: number, query: URL
   return withQuery(`/regions/${encodeURIComponent(slug)}/records`, next);
 }
 
+/** The Records page at one finding in the list of all.
+ *  @param finding  its id */
+export function findingHref(
+  slug: string,
+  { code, id }: { code: string; id: string },
+  query: URLSearchParams | string = '',
+): string {
+  const next = carried(query);
+  next.set('show', 'findings');
+  next.set('station', code);
+  next.set('finding', id);
+  return withQuery(`/regions/${encodeURIComponent(slug)}/records`, next);
+}
+
 /** The page on which a station's facts are changed. */
 export function stationEditHref(slug: string, code: string, query: URLSearchParams | string = ''): string {
   const path = `/regions/${encodeURIComponent(slug)}/stations/${encodeURIComponent(code)}/edit`;

@@ -2,6 +2,7 @@ import type { ResolvedBasis } from '../basis.ts';
 import type { FindingKind } from '../checks/finding.ts';
 import type { Influence } from '../region/ranking-types.ts';
 import type { Quantity } from '../series/quantities.ts';
+import type { StationChange } from '../series/station-history.ts';
 import type { MarkKind } from '../store/marks-on-flags.ts';
 
 /** Flags that are counted by year, in the order in which they are told. */
@@ -29,6 +30,8 @@ export interface StationYears {
   river: string;
   areaKm2: number | null;
   influence: Influence;
+  /** what was done to the river or the gauge, and when */
+  changes: StationChange[];
   /** quantities of which the station has a record */
   quantities: Quantity[];
   /** ISO dates of the first and the last day with a flow; null without one */
@@ -69,7 +72,8 @@ export interface CommonPeriods {
 
 /** A finding with the marks that answer it. */
 export interface FindingRow {
-  id: number;
+  /** kind and first day: the same after every check that finds it, and the only such one on its record */
+  id: string;
   code: string;
   quantity: Quantity;
   kind: FindingKind;
@@ -78,8 +82,7 @@ export interface FindingRow {
   last: string;
   days: number;
   detail: Record<string, number | string | null>;
-  /** open: nobody has answered; else what the last reject or accept mark over its whole stretch says; noted: there are but
-   *  notes */
+  /** by the marks over its days, whether one or several; open while a day of it has none */
   state: 'open' | 'rejected' | 'accepted' | 'noted';
 }
 

@@ -4,6 +4,7 @@ import { isoDate } from '../calendar/day.ts';
 import { seasonSpan } from '../calendar/season.ts';
 import type { AnnualMinima } from '../lowflow/annual-minima-types.ts';
 import type { FlagName } from '../series/daily-series.ts';
+import { changesPresent } from '../store/changes-present.ts';
 import { quantitiesPresent } from '../store/quantities-present.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { type StationRecord, stationRecords } from '../store/stations.ts';
@@ -37,11 +38,13 @@ export async function recordsOf(
     ]);
     const heads = new Map((await stationRecords(region.id)).map((record) => [record.stationId, record]));
     const quantities = quantitiesPresent(region.id);
+    const changes = changesPresent(region.id);
     const byStation = unpackMinima(minima.packed);
     const reasons = new Map<string, number>();
     const stations = inputs.map(
       ({ facts: { id, code, name, river, areaKm2, influence } }, i): StationYears => ({
         ...{ code, name, river, areaKm2, influence, quantities: quantities.get(id) ?? [] },
+        changes: changes.get(id) ?? [],
         ...spanOf(heads.get(id)),
         ...yearsOf(byStation.get(id)!, days, i, reasons),
       }),
@@ -56,7 +59,7 @@ export async function recordsOf(
     const minimaKeyNow = minimaKey(inputs, basis, yearStart);
     const key = createHash('sha256')
       .update(JSON.stringify([resultKey('records', { values: basis, keys: [] }, inputs), minimaKeyNow, periodsKey]))
-      .update(JSON.stringify([basis, [...quantities]]))
+      .update(JSON.stringify([basis, [...quantities], [...changes]]))
       .digest('hex');
     return { records, key };
   });

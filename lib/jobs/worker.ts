@@ -8,5 +8,6 @@ export { lookAtFiles } from './tasks/look-at-files.ts';
 export { minima } from './tasks/minima.ts';
 export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';
+export { suggestLinks } from './tasks/suggest-links.ts';
 export { takeFiles } from './tasks/take-files.ts';
 export { yearDays } from './tasks/year-days.ts';

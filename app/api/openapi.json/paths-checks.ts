@@ -17,6 +17,15 @@ export const CHECK_PATHS = {
       }),
     },
   },
+  '/api/regions/{region}/findings/stations': {
+    get: {
+      summary: 'How many findings of which kind and state each station has; those without one are left out',
+      parameters: [REGION],
+      responses: answers('the counts by station', {
+        ...json({ type: 'object', properties: { stations: listOf('FindingCounts') } }),
+      }),
+    },
+  },
   '/api/regions/{region}/checks': {
     parameters: [REGION],
     post: {
@@ -33,9 +42,13 @@ export const CHECK_PATHS = {
       responses: answers('the marks', { ...json({ type: 'object', properties: { marks: listOf('Mark') } }), ...csv }),
     },
     post: {
-      summary: 'Reject, accept or note a stretch of days; nothing is deleted',
+      summary: 'Reject, accept or note a stretch of days, or several, all of them or none; nothing is deleted',
       requestBody: { required: true, content: json(reference('NewMark')) },
-      responses: answers('the mark', json(reference('Mark')), '201'),
+      responses: answers(
+        'the mark; where stretches were given, an object with the marks',
+        json({ anyOf: [reference('Mark'), { type: 'object', properties: { marks: listOf('Mark') } }] }),
+        '201',
+      ),
     },
   },
   '/api/regions/{region}/stations/{code}/marks/{mark}': {

@@ -120,7 +120,7 @@ export const SCHEMAS = {
   ImportOrder: importOrder,
   CheckOrder: checkOrder,
   Finding: z.object({
-    id: z.int(),
+    id: z.string().describe('kind and first day: the same after every check that finds it'),
     code: z.string().describe('of the station'),
     quantity: z.enum(QUANTITIES),
     kind: z.enum(FINDING_KINDS),
@@ -129,6 +129,10 @@ export const SCHEMAS = {
     days: z.int().describe('days of the stretch that are at fault'),
     detail: z.looseObject({}).describe('the figures behind it, flows in m³/s'),
     state: z.enum(FINDING_STATES),
+  }),
+  FindingCounts: z.object({
+    code: z.string().describe('of the station'),
+    counts: z.array(z.object({ kind: z.enum(FINDING_KINDS), state: z.enum(FINDING_STATES), count: z.int() })),
   }),
   NewMark: newMark,
   Mark: z.object({

@@ -3,12 +3,14 @@ import { afterAll, afterEach, beforeEach, expect, test } from 'vitest';
 import { GET as job } from '../../../app/api/jobs/[job]/route.ts';
 import { POST as check } from '../../../app/api/regions/[region]/checks/route.ts';
 import { GET as findings } from '../../../app/api/regions/[region]/findings/route.ts';
+import { GET as findingCounts } from '../../../app/api/regions/[region]/findings/stations/route.ts';
 import { DELETE as removeMark } from '../../../app/api/regions/[region]/stations/[code]/marks/[mark]/route.ts';
 import { POST as addMark, GET as marks } from '../../../app/api/regions/[region]/stations/[code]/marks/route.ts';
 import { dayNumber } from '../../../lib/calendar/day.ts';
 import { forgetResults } from '../../../lib/jobs/cached.ts';
-import { checkUnchecked } from '../../../lib/jobs/checks.ts';
+import { checkStations, checkUnchecked } from '../../../lib/jobs/checks.ts';
 import { closePool } from '../../../lib/jobs/pool.ts';
+import { listStations } from '../../../lib/store/stations.ts';
 import { importFiles, seenRecords } from '../store/helpers.ts';
 import { temporaryDatabase } from '../store/temporary-database.ts';
 import { call, problemOf } from './call.ts';
@@ -101,12 +103,58 @@ test('GET marks?format=csv lists who, when and why', async () => {
   expect(await (await call(marks, `${marksUrl}?quantity=stage`, A1)).json()).toEqual({ marks: [] });
 });
 
+test('a finding keeps its id when the record is checked anew, and is the only one of it on its record', async () => {
+  const before = await list();
+  expect(before.map(({ id }: { id: string }) => id)).toEqual([
+    'negative:2001-01-02',
+    'flat:2001-01-04',
+    'negative:2001-01-04',
+  ]);
+  await checkStations((await listStations(regionId)).map(({ id }) => id));
+  expect(await list()).toEqual(before);
+});
+
+test('GET findings/stations counts by station, kind and state', async () => {
+  await post(REJECT);
+  const counts = await (await call(findingCounts, `${url}/findings/stations`, region)).json();
+  const flat = { kind: 'flat', state: 'open', count: 1 };
+  expect(counts).toEqual({
+    stations: [
+      { code: 'A1', counts: [{ kind: 'negative', state: 'rejected', count: 1 }, flat] },
+      { code: 'B/2', counts: [{ kind: 'negative', state: 'open', count: 1 }] },
+    ],
+  });
+  await problemOf(await call(findingCounts, `${url}/findings/stations?kind=flat`, region), 400);
+});
+
+test('POST marks with several stretches marks all of them, or none when one is wrong', async () => {
+  const { first, last, ...rest } = REJECT;
+  const stretches = [
+    { first, last },
+    { first: '2001-01-04', last: '2001-01-15' },
+  ];
+  const response = await post({ ...rest, stretches });
+  expect(response.status).toBe(201);
+  const { marks: added } = await response.json();
+  expect(added).toMatchObject(stretches.map((stretch) => ({ ...stretch, kind: 'reject', code: 'A1' })));
+  expect(await list('?state=rejected')).toHaveLength(2);
+
+  const wrong = [...stretches, { first: '2001-01-09', last: '2001-01-08' }];
+  expect((await problemOf(await post({ ...rest, stretches: wrong }), 400)).detail).toContain('"stretches.2.last"');
+  await problemOf(await post({ ...rest, stretches: [] }), 400);
+  await problemOf(await post({ ...REJECT, stretches }), 400);
+  await problemOf(await post(rest), 400);
+  expect((await (await call(marks, marksUrl, A1)).json()).marks).toHaveLength(2);
+});
+
 test('POST marks refuses days that do not exist or run backwards, no reason, an unknown kind or field, another station', async () => {
   const refused = async (change: Record<string, unknown>, word: string) =>
     expect((await problemOf(await post({ ...REJECT, ...change }), 400)).detail).toContain(word);
   await refused({ first: '2001-02-30' }, '"first"');
   await refused({ first: '02.01.2001' }, 'YYYY-MM-DD');
   await refused({ first: '2001-01-03' }, '"last"');
+  await refused({ first: undefined }, '"first"');
+  await refused({ last: undefined }, '"last"');
   await refused({ reason: '  ' }, '"reason"');
   await refused({ kind: 'drop' }, '"kind"');
   await refused({ colour: 'red' }, 'colour');

@@ -1,4 +1,4 @@
-import { beforeEach, expect, test } from 'vitest';
+import { afterAll, afterEach, beforeEach, expect, test } from 'vitest';
 import { GET as getLinks, POST as postLink } from '../../../app/api/regions/[region]/links/route.ts';
 import {
   POST as answerSuggestion,
@@ -7,6 +7,8 @@ import {
 import { GET as getFacts } from '../../../app/api/regions/[region]/stations/[code]/facts/route.ts';
 import { DELETE, PATCH } from '../../../app/api/regions/[region]/stations/[code]/route.ts';
 import { POST } from '../../../app/api/regions/[region]/stations/route.ts';
+import { forgetResults } from '../../../lib/jobs/cached.ts';
+import { closePool } from '../../../lib/jobs/pool.ts';
 import { putLayer } from '../../../lib/store/layers.ts';
 import { stationRecords } from '../../../lib/store/records.ts';
 import { createRegion } from '../../../lib/store/regions.ts';
@@ -15,6 +17,8 @@ import { temporaryDatabase } from '../store/temporary-database.ts';
 import { call } from './call.ts';
 
 temporaryDatabase();
+afterAll(closePool);
+afterEach(forgetResults);
 
 const REGION = { region: 'weir-brook' };
 let regionId: number;

@@ -2,6 +2,7 @@ import { expect, test } from 'vitest';
 import { getImportReport, listImports } from '../../../lib/store/imports.ts';
 import { getLayer, listLayers } from '../../../lib/store/layers.ts';
 import { listLinks } from '../../../lib/store/links.ts';
+import { listMarks } from '../../../lib/store/marks.ts';
 import { readSeries, stationRecords } from '../../../lib/store/records.ts';
 import { createRegion, listRegions } from '../../../lib/store/regions.ts';
 import { getStation, listStations } from '../../../lib/store/stations.ts';
@@ -34,6 +35,10 @@ test('seedDemo() stores the invented region once, as it was generated', async ()
   const recordOf = async (wanted: string) =>
     (await stationRecords(found.id)).find((candidate) => candidate.code === wanted)!;
   expect((await recordOf(derived.code)).firstValueDay).toBe((await recordOf(pump.code)).firstDay);
+
+  const [marked] = [...generated.records()].filter(({ marks }) => marks.length > 0);
+  const marks = await listMarks((await recordOf(marked.code)).stationId);
+  expect(marks).toMatchObject(marked.marks);
 
   const kinds = (await listLayers(found.id)).map(({ name, kind }) => [name, kind]);
   expect(kinds).toEqual([

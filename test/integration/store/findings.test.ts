@@ -97,15 +97,21 @@ test('another drainage area makes a record unchecked; its findings stay meanwhil
   expect(listFindings(regionId)).toHaveLength(1);
 });
 
-test('stateOf: the last reject or accept over the whole stretch answers, a note only notes, a mark on a part does not', () => {
+test('stateOf: the last reject or accept on each day answers, in one mark or in several; a part alone does not; a note only notes', () => {
   const span = { firstDay: 5, lastDay: 9 };
   const mark = (kind: 'reject' | 'accept' | 'note', firstDay = 5, lastDay = 9) => ({ kind, firstDay, lastDay });
   expect(stateOf(span, [])).toBe('open');
   expect(stateOf(span, [mark('note')])).toBe('noted');
   expect(stateOf(span, [mark('reject'), mark('note')])).toBe('rejected');
   expect(stateOf(span, [mark('reject'), mark('accept')])).toBe('accepted');
-  expect(stateOf(span, [mark('accept', 0, 20), mark('reject', 6, 9)])).toBe('accepted');
-  expect(stateOf(span, [mark('reject', 6, 9), mark('reject', 5, 8)])).toBe('open');
+  expect(stateOf(span, [mark('accept', 0, 20), mark('reject', 6, 9)])).toBe('rejected');
+  expect(stateOf(span, [mark('reject', 6, 9), mark('accept', 0, 20)])).toBe('accepted');
+  expect(stateOf(span, [mark('reject', 6, 9)])).toBe('open');
+  expect(stateOf(span, [mark('reject', 6, 9), mark('reject', 5, 5)])).toBe('rejected');
+  expect(stateOf(span, [mark('accept', 8, 12), mark('accept', 1, 7)])).toBe('accepted');
+  expect(stateOf(span, [mark('accept', 8, 12), mark('accept', 1, 6)])).toBe('open');
+  expect(stateOf(span, [mark('note'), mark('accept', 8, 12)])).toBe('noted');
+  expect(stateOf(span, [mark('reject', 0, 4), mark('reject', 10, 12)])).toBe('open');
 });
 
 test('listFindings narrows by station, kind and state; listRegionMarks names the stations', async () => {

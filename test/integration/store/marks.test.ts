@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { addMark, listMarks, removeMark } from '../../../lib/store/marks.ts';
+import { addMark, addMarks, listMarks, removeMark } from '../../../lib/store/marks.ts';
 import { regionDataHash, stationRecords } from '../../../lib/store/records.ts';
 import { listStations, upsertRegistry } from '../../../lib/store/stations.ts';
 import { importFiles, seenRecords } from './helpers.ts';
@@ -35,6 +35,20 @@ test('a note changes neither days nor hash', async () => {
   const before = await seenRecords(regionId);
   await addMark({ stationId, firstDay: 0, lastDay: 0, kind: 'note', reason: 'weir cleaned' });
   expect(await seenRecords(regionId)).toEqual(before);
+});
+
+test('addMarks() lays one mark on each stretch, or none at all when a stretch is wrong', async () => {
+  const { regionId } = await importFiles([[{ code: 'A', values: [1, 2, 3] }]]);
+  const [{ id: stationId }] = await listStations(regionId);
+  const mark = { stationId, kind: 'reject', reason: 'silt' } as const;
+  const [first, third] = [0, 2].map((day) => ({ firstDay: day, lastDay: day }));
+  expect(await addMarks({ ...mark, stretches: [third, first] })).toMatchObject([third, first]);
+  expect((await seenRecords(regionId)).A.flags.map((bits) => bits & 32)).toEqual([32, 0, 32]);
+  const backwards = { firstDay: 1, lastDay: 0 };
+  await expect(addMarks({ ...mark, stretches: [first, backwards] })).rejects.toMatchObject({ code: 'bad-input' });
+  await expect(addMarks({ ...mark, stretches: [] })).rejects.toMatchObject({ code: 'bad-input' });
+  await expect(addMarks({ ...mark, stationId: 99, stretches: [first] })).rejects.toMatchObject({ code: 'not-found' });
+  expect(await listMarks(stationId)).toHaveLength(2);
 });
 
 test('addMark() refuses days that run backwards, unknown kinds and an empty reason', async () => {

@@ -17,17 +17,38 @@ test('a furnished region has the flows of the plain one, value for value, but wh
   expect(plain.furnishings.extras).toEqual([]);
 });
 
+const foundIn = ({ firstDay, values }: Pick<SeedRecord, 'firstDay' | 'values'>, areaKm2: number | null = null) => {
+  const series = { firstDay, values, flags: new Uint8Array(values.length) };
+  return checkRecord(series, { areaKm2, today: firstDay + values.length }).findings;
+};
+
 test('the planted faults are found by the checks, and nothing of the kind at a sound station', () => {
-  const kindsAt = ({ firstDay, values }: SeedRecord) => {
-    const series = { firstDay, values, flags: new Uint8Array(values.length) };
-    const terms = { areaKm2: null, today: firstDay + values.length };
-    return checkRecord(series, terms).findings.map(({ kind }) => kind);
-  };
-  expect(kindsAt(records.get(faulty.code)!)).toEqual(expect.arrayContaining(['negative', 'flat', 'jump']));
+  const kindsAt = (record: SeedRecord) => foundIn(record).map(({ kind }) => kind);
+  const found = foundIn(records.get(faulty.code)!, faulty.areaKm2);
+  const kinds = ['negative', 'flat', 'jump', 'repeated', 'too-large'];
+  expect(found.map(({ kind }) => kind)).toEqual(expect.arrayContaining(kinds));
   const [slipped] = region.stations.filter(({ notes }) => notes.includes('another archive'));
   expect(kindsAt(records.get(slipped.code)!)).toContain('unit-change');
   const sound = kindsAt(records.get(region.stations[0].code)!);
   expect(sound.filter((kind) => ['negative', 'jump', 'unit-change'].includes(kind))).toEqual([]);
+});
+
+test('a person has rejected the day that is too large, and noted the month that stands twice', () => {
+  const found = foundIn(records.get(faulty.code)!, faulty.areaKm2);
+  const { marks } = records.get(faulty.code)!;
+  const over = (of: string) => found.find(({ kind }) => kind === of)!;
+  expect(marks.map(({ kind }) => kind)).toEqual(['reject', 'note']);
+  for (const [i, kind] of ['too-large', 'repeated'].entries()) {
+    expect(marks[i].firstDay).toBeLessThanOrEqual(over(kind).firstDay);
+    expect(marks[i].lastDay).toBeGreaterThanOrEqual(over(kind).lastDay);
+  }
+  expect([...records.values()].filter((record) => record.marks.length > 0)).toHaveLength(1);
+});
+
+test('what the water works meters neither repeats itself nor runs flat', () => {
+  const [pump] = region.furnishings.extras;
+  const found = foundIn(beside.find(({ code }) => code === pump.code)!);
+  expect(found.filter(({ kind }) => kind !== 'step')).toEqual([]);
 });
 
 test('stage at three stations rises and falls with the flow, weather is kept at several', () => {

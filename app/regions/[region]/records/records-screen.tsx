@@ -1,10 +1,11 @@
 'use client';
 import dynamic from 'next/dynamic';
+import Link from 'next/link';
 import { useSearchParams } from 'next/navigation';
 import { useQueryStates } from 'nuqs';
 import { useState } from 'react';
 import { Cautions } from '@/app/components/cautions';
-import { apiHref } from '@/app/components/links';
+import { apiHref, deriveHref, linksHref } from '@/app/components/links';
 import { ErrorNote, Loading } from '@/app/components/notes';
 import { Segmented } from '@/app/components/segmented';
 import type { ResolvedBasis } from '@/lib/basis';
@@ -52,7 +53,20 @@ export function RecordsScreen({ slug, basis, own, stations }: Props) {
   return (
     <div className={styles.screen}>
       <div className={styles.sections}>
-        <Segmented label="Show" value={show} options={SECTIONS} onChange={(value) => void set({ show: value })} />
+        <Segmented
+          label="Show"
+          value={show}
+          options={SECTIONS}
+          onChange={(value) => void set({ show: value, finding: null })}
+        />
+        <nav className={styles.ways} aria-label="More on the stations">
+          <Link href={linksHref(slug, query)} prefetch={false}>
+            Upstream and downstream
+          </Link>
+          <Link href={deriveHref(slug, null, query)} prefetch={false}>
+            Derive a record
+          </Link>
+        </nav>
       </div>
       {show === 'years' &&
         (records.problem ? (

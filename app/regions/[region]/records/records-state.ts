@@ -18,4 +18,6 @@ export const recordsState = {
   y: parseAsStringLiteral(['log', 'linear'] as const).withDefault('log'),
   kind: parseAsStringLiteral(FINDING_KINDS),
   state: parseAsStringLiteral(FINDING_STATES),
+  /** id of a finding at `station` that a link leads to */
+  finding: parseAsString,
 };

@@ -1,42 +1,55 @@
 import { expect, test } from 'vitest';
 import { figuresOf } from '@/app/regions/[region]/records/_findings/finding-words';
-import { countFindings, groupFindings, surroundings } from '@/app/regions/[region]/records/_findings/group-findings';
-import { findingOf } from './records-builder.ts';
+import {
+  countFindings,
+  groupFindings,
+  type StationCounts,
+  surroundings,
+} from '@/app/regions/[region]/records/_findings/group-findings';
 
 const stations = [
   { code: 'A', name: 'Lom' },
   { code: 'B', name: 'Žiri' },
   { code: 'C', name: 'Obir' },
 ];
-const findings = [
-  findingOf({ id: 1, code: 'A' }),
-  findingOf({ id: 2, code: 'B', kind: 'flat' }),
-  findingOf({ id: 3, code: 'B', state: 'rejected' }),
-  findingOf({ id: 4, code: 'B' }),
+const byStation: StationCounts[] = [
+  { code: 'A', counts: [{ kind: 'jump', state: 'open', count: 1 }] },
+  {
+    code: 'B',
+    counts: [
+      { kind: 'flat', state: 'open', count: 2 },
+      { kind: 'jump', state: 'rejected', count: 3 },
+    ],
+  },
+  { code: 'gone', counts: [{ kind: 'jump', state: 'open', count: 9 }] },
 ];
 const all = { kind: null, state: null, search: '' };
-const shown = (filter: Partial<Parameters<typeof groupFindings>[2]>) =>
-  groupFindings(findings, stations, { ...all, ...filter }).map((group) => [
-    group.station.code,
-    ...group.findings.map(({ id }) => id),
+const shown = (filter: Partial<Parameters<typeof groupFindings>[2]>, first?: string) =>
+  groupFindings(byStation, stations, { ...all, ...filter }, first).map(({ station, count, open }) => [
+    ...[station.code, count, open],
   ]);
 
 test('groupFindings puts the station with the most open findings first and leaves out those without any', () => {
   expect(shown({})).toEqual([
-    ['B', 2, 3, 4],
-    ['A', 1],
+    ['B', 5, 2],
+    ['A', 1, 1],
   ]);
 });
 
+test('groupFindings puts the station that a link leads to before all others, whatever is searched for', () => {
+  expect(shown({}, 'A').map(([code]) => code)).toEqual(['A', 'B']);
+  expect(shown({ search: 'ziri' }, 'A').map(([code]) => code)).toEqual(['A', 'B']);
+});
+
 test('groupFindings filters by kind, state and words', () => {
-  expect(shown({ kind: 'flat' })).toEqual([['B', 2]]);
-  expect(shown({ state: 'rejected' })).toEqual([['B', 3]]);
-  expect(shown({ search: 'ziri' })).toEqual([['B', 2, 3, 4]]);
+  expect(shown({ kind: 'flat' })).toEqual([['B', 2, 2]]);
+  expect(shown({ state: 'rejected' })).toEqual([['B', 3, 0]]);
+  expect(shown({ search: 'ziri' })).toEqual([['B', 5, 2]]);
   expect(shown({ search: 'obir' })).toEqual([]);
 });
 
 test('countFindings counts by state', () => {
-  expect(countFindings(findings)).toEqual({ open: 3, rejected: 1, accepted: 0, noted: 0 });
+  expect(countFindings(byStation.slice(0, 2))).toEqual({ open: 3, rejected: 3, accepted: 0, noted: 0 });
 });
 
 test('surroundings: at least 20 days each side, as many as the stretch is long, at most 400, of at most ten years; a step ten years', () => {
@@ -54,6 +67,7 @@ test.each([
     /^0\.412 m³\/s before, 31\.2 m³\/s after: .*75\.7, beyond 12\.4$/,
   ],
   ['flat', { value: 1.5, share: 0.015 }, /^1\.50 m³\/s every day; 1\.5 % of the record/],
+  ['flat', { value: 1.5, share: 0.0004 }, /; less than 0\.1 % of the record/],
   [
     'step',
     { meanBefore: 2, meanAfter: 1, yearsBefore: 20, yearsAfter: 1 },

@@ -11,6 +11,7 @@ export function stationOf(code: string, values: number[], more: Partial<StationY
     river: '',
     areaKm2: null,
     influence: 'unknown',
+    changes: [],
     quantities: ['flow'],
     first: values.length > 0 ? '2000-04-01' : null,
     last: values.length > 0 ? `${2000 + values.length}-03-31` : null,
@@ -60,7 +61,7 @@ export function periodsOf(
 
 export function findingOf(more: Partial<FindingRow>): FindingRow {
   return {
-    id: 1,
+    id: 'jump:2001-05-01',
     code: 'A',
     quantity: 'flow',
     kind: 'jump',

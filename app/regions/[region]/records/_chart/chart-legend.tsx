@@ -1,9 +1,12 @@
 'use client';
 import { useCallback } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
-import { drawCell, useCellLook } from './draw-cell.ts';
+import { type CellLook, drawCell, drawChange, useCellLook } from './draw-cell.ts';
 import type { YearCell } from './year-cell.ts';
 import styles from './year-chart.module.css';
+
+const WIDTH = 14;
+const HEIGHT = 17;
 
 const NO_FLAGS = { provisional: 0, estimated: 0, ice: 0, belowDetection: 0, suspect: 0, rejected: 0 };
 const WHOLE: YearCell = {
@@ -16,25 +19,36 @@ const WHOLE: YearCell = {
   reason: '',
 };
 
-const ENTRIES: { words: string; cell: YearCell }[] = [
-  { words: 'complete: the year counts', cell: WHOLE },
+type Pen = (context: CanvasRenderingContext2D, look: CellLook) => void;
+
+const penOf =
+  (cell: YearCell): Pen =>
+  (context, look) =>
+    drawCell(context, cell, { x: 0, y: 0, width: WIDTH, height: HEIGHT }, look);
+
+const ENTRIES: { words: string; draw: Pen }[] = [
+  { words: 'complete: the year counts', draw: penOf(WHOLE) },
   {
     words: 'partly: filled as far as there are days, does not count',
-    cell: { ...WHOLE, values: 170, state: 'partly' },
+    draw: penOf({ ...WHOLE, values: 170, state: 'partly' }),
   },
-  { words: 'no values', cell: { ...WHOLE, values: 0, state: 'none' } },
-  { words: 'provisional days', cell: { ...WHOLE, state: 'partly', flagged: { ...NO_FLAGS, provisional: 366 } } },
-  { words: 'suspect days, marked by a check', cell: { ...WHOLE, flagged: { ...NO_FLAGS, suspect: 1 } } },
-  { words: 'days rejected by a person', cell: { ...WHOLE, flagged: { ...NO_FLAGS, rejected: 1 } } },
+  { words: 'no values', draw: penOf({ ...WHOLE, values: 0, state: 'none' }) },
+  { words: 'provisional days', draw: penOf({ ...WHOLE, state: 'partly', flagged: { ...NO_FLAGS, provisional: 366 } }) },
+  { words: 'suspect days, marked by a check', draw: penOf({ ...WHOLE, flagged: { ...NO_FLAGS, suspect: 1 } }) },
+  { words: 'days rejected by a person', draw: penOf({ ...WHOLE, flagged: { ...NO_FLAGS, rejected: 1 } }) },
+  {
+    words: 'dated change: a dam, a new weir, a moved gauge…',
+    draw: (context, look) => drawChange(context, 4, [0, HEIGHT], look),
+  },
 ];
 
 /** What the cells of the chart mean, drawn by the chart's own pen. */
 export function ChartLegend() {
   return (
     <ul className={styles.legend} aria-label="What the cells mean">
-      {ENTRIES.map(({ words, cell }) => (
+      {ENTRIES.map(({ words, draw }) => (
         <li key={words}>
-          <Swatch cell={cell} />
+          <Swatch draw={draw} />
           {words}
         </li>
       ))}
@@ -42,17 +56,14 @@ export function ChartLegend() {
   );
 }
 
-const WIDTH = 14;
-const HEIGHT = 17;
-
-function Swatch({ cell }: { cell: YearCell }) {
+function Swatch({ draw }: { draw(context: CanvasRenderingContext2D, look: CellLook): void }) {
   const lookOf = useCellLook();
-  const draw = useCallback(
+  const paint = useCallback(
     (context: CanvasRenderingContext2D) => {
-      if (lookOf) drawCell(context, cell, { x: 0, y: 0, width: WIDTH, height: HEIGHT }, lookOf(context));
+      if (lookOf) draw(context, lookOf(context));
     },
-    [cell, lookOf],
+    [draw, lookOf],
   );
-  const { canvas } = useCanvas(WIDTH, HEIGHT, draw);
+  const { canvas } = useCanvas(WIDTH, HEIGHT, paint);
   return <canvas ref={canvas} style={{ inlineSize: WIDTH, blockSize: HEIGHT }} />;
 }

@@ -36,6 +36,28 @@ export function drawCell(context: CanvasRenderingContext2D, cell: YearCell, box:
   if (cell.flagged.rejected > 0) drawCross(context, box, palette);
 }
 
+/** A dated change of the river or the gauge: a stroke down the row under a flag, both rimmed with paper.
+ *  @param row  upper edge and height of the row */
+export function drawChange(
+  context: CanvasRenderingContext2D,
+  x: number,
+  [y, height]: [number, number],
+  look: CellLook,
+) {
+  const { palette } = look;
+  context.fillStyle = palette.paper;
+  context.fillRect(x - 1.5, y, 4, height);
+  context.fillRect(x - 1.5, y, 8, 8);
+  context.fillStyle = palette.ink;
+  context.fillRect(x - 0.5, y, 2, height);
+  context.beginPath();
+  context.moveTo(x - 0.5, y);
+  context.lineTo(x + 6, y + 3.25);
+  context.lineTo(x - 0.5, y + 6.5);
+  context.closePath();
+  context.fill();
+}
+
 export interface CellLook {
   palette: ChartPalette;
   hatch: CanvasPattern | string;

@@ -1,8 +1,9 @@
+import { markedChanges, yearPosition } from '@/app/components/change-marks/marked-changes';
 import type { RegionRecords } from '@/lib/jobs/records-types';
 import { yearTicks } from '../../stations/[code]/time-axis.ts';
 import { type CellPlace, type ChartLayout, rowY, type Scroll, visibleRows, yearX } from './chart-layout.ts';
 import { CHART_FONT } from './chart-palette.ts';
-import { type CellLook, drawCell } from './draw-cell.ts';
+import { type CellLook, drawCell, drawChange } from './draw-cell.ts';
 import type { Sorted } from './sort-stations.ts';
 import { yearCell } from './year-cell.ts';
 
@@ -34,7 +35,10 @@ export function drawChart(
     for (let row = from; row < to; row++) drawGround(context, picture, look, row, width);
     drawGrid(context, picture, look, width, height);
     clipped(context, [layout.gutter, layout.axis, width - layout.gutter, height], () => {
-      for (let row = from; row < to; row++) drawRow(context, picture, look, row, width);
+      for (let row = from; row < to; row++) {
+        drawRow(context, picture, look, row, width);
+        drawChanges(context, picture, look, row);
+      }
       for (const [place, colour] of outlines(picture, look)) drawOutline(context, picture, place, colour);
     });
     for (let row = from; row < to; row++) drawLabel(context, picture, look, row);
@@ -87,6 +91,23 @@ function drawRow(
     if (!cell) continue;
     const x = snap(left);
     drawCell(context, cell, { x, y, width: snap(left + layout.cell - gap) - x, height: layout.rowHeight - 5 }, look);
+  }
+}
+
+/** A row's dated changes, each at its day. */
+function drawChanges(
+  context: CanvasRenderingContext2D,
+  { layout, records, rows, scroll }: ChartPicture,
+  look: CellLook,
+  row: number,
+) {
+  const { changes } = rows[row].station;
+  if (changes.length === 0) return;
+  const y = rowY(layout, row, scroll);
+  for (const { day } of markedChanges(changes)) {
+    const year = yearPosition(day, records.basis.yearStart) + 0.5;
+    if (year < layout.firstYear || year > layout.lastYear + 1) continue;
+    drawChange(context, Math.round(yearX(layout, year, scroll)), [y + 1, layout.rowHeight - 2], look);
   }
 }
 

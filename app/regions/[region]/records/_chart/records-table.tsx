@@ -1,6 +1,7 @@
 'use client';
 import Link from 'next/link';
 import { useState } from 'react';
+import { changeText } from '@/app/components/change-marks/marked-changes';
 import { areaNumber, count, fixed, percent, UNIT_WORDS, type Units } from '@/app/components/format';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import ui from '@/app/components/ui.module.css';
@@ -8,7 +9,7 @@ import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import { COUNTED_FLAGS, type RegionRecords } from '@/lib/jobs/records-types';
 import styles from './records-table.module.css';
 import type { Sorted } from './sort-stations.ts';
-import { FLAG_WORDS, stateWords, yearCell } from './year-cell.ts';
+import { changesIn, FLAG_WORDS, stateWords, yearCell } from './year-cell.ts';
 
 interface Props {
   records: RegionRecords;
@@ -123,7 +124,9 @@ function YearsTable({ records, row, yearHref }: { records: RegionRecords; row: S
                 {flags.map((flag) => (
                   <td key={flag}>{cell.flagged[flag]}</td>
                 ))}
-                <td className={styles.words}>{stateWords(cell)}</td>
+                <td className={styles.words}>
+                  {[stateWords(cell), ...changesIn(station, year, records.basis.yearStart).map(changeText)].join('; ')}
+                </td>
               </tr>
             );
           })}

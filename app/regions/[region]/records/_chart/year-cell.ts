@@ -1,5 +1,6 @@
+import { type MarkedChange, markedChanges } from '@/app/components/change-marks/marked-changes';
 import { count } from '@/app/components/format';
-import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
+import { lowFlowYearLabel, lowFlowYearOfDay } from '@/lib/calendar/low-flow-year';
 import { COUNTED_FLAGS, type CountedFlag, type RegionRecords, type StationYears } from '@/lib/jobs/records-types';
 
 /** One station's low-flow year. */
@@ -62,6 +63,10 @@ export function cellWords(cell: YearCell, yearStart: number): string {
   ];
   return parts.filter(Boolean).join('; ');
 }
+
+/** A station's dated changes that fall into a low-flow year. */
+export const changesIn = (station: StationYears, year: number, yearStart: number): MarkedChange[] =>
+  markedChanges(station.changes).filter(({ day }) => lowFlowYearOfDay(day, yearStart) === year);
 
 export function stateWords({ state, reason }: YearCell): string {
   if (state === 'counts') return 'the year counts';

@@ -10,6 +10,7 @@ import {
   useState,
 } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
+import { changeText } from '@/app/components/change-marks/marked-changes';
 import type { Units } from '@/app/components/format';
 import type { RegionRecords } from '@/lib/jobs/records-types';
 import { type CellPlace, cellAfterKey, hitCell, layOutChart, scrollToCell } from './chart-layout.ts';
@@ -19,7 +20,7 @@ import { drawChart } from './draw-chart.ts';
 import { sortFigure } from './sort-figure.ts';
 import type { Sort, Sorted } from './sort-stations.ts';
 import { useBoxSize } from './use-box-size.ts';
-import { cellWords, yearCell } from './year-cell.ts';
+import { cellWords, changesIn, yearCell } from './year-cell.ts';
 import styles from './year-chart.module.css';
 
 interface Props {
@@ -122,6 +123,7 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
 
   const station = cursor && rows[cursor.row].station;
   const cell = station && cursor && yearCell(records, station, cursor.year);
+  const changed = station && cursor ? changesIn(station, cursor.year, records.basis.yearStart) : [];
   return (
     <div className={styles.frame}>
       <p className={styles.readout} role="status" data-testid="year-readout">
@@ -130,6 +132,9 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
             <strong>{station.name}</strong>
             {station.river && `, ${station.river}`} ({station.code}) ·{' '}
             {cell ? cellWords(cell, records.basis.yearStart) : `${cursor.year}: outside the record`}
+            {changed.map((change) => (
+              <span key={change.letter}> · {changeText(change)}</span>
+            ))}
           </>
         ) : (
           'Point at a year, or move with the arrow keys, for its counts; a click, a tap or Enter opens it.'

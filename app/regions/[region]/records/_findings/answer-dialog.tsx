@@ -7,7 +7,7 @@ import ui from '@/app/components/ui.module.css';
 import { useWho } from '@/app/components/use-who';
 import type { FindingRow } from '@/lib/jobs/records-types';
 import type { MarkKind } from '@/lib/store/marks-on-flags';
-import { addMark, MARK_WORDS } from '../_marks/marks-address.ts';
+import { addMarks, MARK_WORDS } from '../_marks/marks-address.ts';
 import { useChange } from '../_marks/use-change.ts';
 import { KIND_WORDS } from './finding-words.ts';
 import styles from './findings.module.css';
@@ -46,17 +46,15 @@ function AnswerForm({ slug, asked, onClose, onChanged }: Props & { asked: AskedA
   const { busy, problem, make } = useChange(onChanged);
   const { verb, effect } = MARK_WORDS[asked.kind];
   const { findings } = asked;
-  const [{ first, last, kind }] = findings;
+  const [{ code, first, last, kind }] = findings;
   const what = findings.length > 1 ? count(findings.length, 'finding') : `${first} to ${last}`;
 
   const submit = async (event: FormEvent) => {
     event.preventDefault();
-    const done = await make(async () => {
-      for (const finding of findings) {
-        const { code, first, last } = finding;
-        await addMark(slug, code, { kind: asked.kind, first, last, reason: reason.trim(), by: by.trim() });
-      }
-    });
+    const stretches = findings.map(({ first, last }) => ({ first, last }));
+    const done = await make(() =>
+      addMarks(slug, code, { kind: asked.kind, stretches, reason: reason.trim(), by: by.trim() }),
+    );
     if (done) onClose();
   };
 

@@ -20,6 +20,10 @@ export const STATE_WORDS: Record<FindingRow['state'], string> = {
   noted: 'noted',
 };
 
+/** A share that is not nothing is not written as nothing. */
+const shareOf = (share: number | null) =>
+  share !== null && share > 0 && share < 0.0005 ? 'less than 0.1 %' : percent(share, 1);
+
 /** The figures behind a finding in words; '' where it has none.
  *  Example: a jump → "0.412 m³/s before, 31.2 m³/s after: 75.7 times as much; beyond 12.4 times" */
 export function figuresOf({ kind, detail }: Pick<FindingRow, 'kind' | 'detail'>, units: Units): string {
@@ -38,7 +42,7 @@ export function figuresOf({ kind, detail }: Pick<FindingRow, 'kind' | 'detail'>,
     case 'jump':
       return `${water('before')} before, ${water('value')} after: a ratio of ${significant(number('ratio'))}, beyond ${significant(number('limit'))}`;
     case 'flat':
-      return `${water('value')} every day; ${percent(number('share'), 1)} of the record lies in flat runs`;
+      return `${water('value')} every day; ${shareOf(number('share'))} of the record lies in flat runs`;
     case 'step':
       return `mean ${water('meanBefore')} over ${count(number('yearsBefore') ?? 0, 'year')} before, ${water('meanAfter')} over ${count(number('yearsAfter') ?? 0, 'year')} after`;
     case 'unit-change':

@@ -15,7 +15,7 @@ import { AnswerDialog, type AskedAnswer } from './answer-dialog.tsx';
 import { CheckAgain } from './check-again.tsx';
 import { KIND_WORDS, STATE_WORDS } from './finding-words.ts';
 import styles from './findings.module.css';
-import { countFindings, groupFindings } from './group-findings.ts';
+import { countFindings, groupFindings, type StationCounts } from './group-findings.ts';
 import { StationFindings } from './station-findings.tsx';
 
 interface Props {
@@ -31,20 +31,22 @@ const PAGE = 15;
 
 /** What the checks found on the region's records, and what people answered. */
 export function FindingsSection({ slug, basis, stations, version, onChanged }: Props) {
-  const [{ kind, state, q }, set] = useQueryStates(recordsState);
+  const [{ kind, state, q, station, finding }, set] = useQueryStates(recordsState);
   const [shown, setShown] = useState(PAGE);
   const [asked, setAsked] = useState<AskedAnswer | null>(null);
   const address = `/api/regions/${encodeURIComponent(slug)}/findings`;
-  const { value, problem } = useAnswer<{ findings: FindingRow[] }>(address, version);
-  const findings = value?.findings;
+  const { value, problem } = useAnswer<{ stations: StationCounts[] }>(`${address}/stations`, version);
+  const byStation = value?.stations;
+  const led = finding === null ? null : station;
   const groups = useMemo(
-    () => groupFindings(findings ?? [], stations, { kind, state, search: q }),
-    [findings, stations, kind, state, q],
+    () => groupFindings(byStation ?? [], stations, { kind, state, search: q }, led),
+    [byStation, stations, kind, state, q, led],
   );
   if (problem) return <ErrorNote title="The findings could not be read">{problem}</ErrorNote>;
-  if (!findings) return <Loading>Reading the findings…</Loading>;
-  const counts = countFindings(findings);
-  const filtered = groups.reduce((sum, group) => sum + group.findings.length, 0);
+  if (!byStation) return <Loading>Reading the findings…</Loading>;
+  const counts = countFindings(byStation);
+  const total = counts.open + counts.rejected + counts.accepted + counts.noted;
+  const filtered = groups.reduce((sum, group) => sum + group.count, 0);
 
   return (
     <div className={styles.section}>
@@ -100,16 +102,16 @@ export function FindingsSection({ slug, basis, stations, version, onChanged }: P
         </a>
       </div>
       <p className={styles.who} role="status">
-        {count(findings.length, 'finding')}: {counts.open} open, {counts.rejected} rejected, {counts.accepted} accepted,{' '}
+        {count(total, 'finding')}: {counts.open} open, {counts.rejected} rejected, {counts.accepted} accepted,{' '}
         {counts.noted} noted
-        {filtered < findings.length && ` · ${filtered} shown`}
+        {filtered < total && ` · ${filtered} shown`}
       </p>
-      {findings.length === 0 && (
+      {total === 0 && (
         <Empty title="The checks found nothing">
           <p>No record has a negative flow, a repeated block, a jump, a flat run or anything else they look for.</p>
         </Empty>
       )}
-      {findings.length > 0 && groups.length === 0 && (
+      {total > 0 && groups.length === 0 && (
         <Empty title="No finding answers the filter">
           <p>
             <button type="button" className={ui.plain} onClick={() => void set({ kind: null, state: null, q: null })}>
@@ -123,6 +125,8 @@ export function FindingsSection({ slug, basis, stations, version, onChanged }: P
           key={group.station.code}
           slug={slug}
           group={group}
+          filter={{ kind, state }}
+          led={group.station.code === led ? finding : null}
           units={basis.units}
           yearStart={basis.yearStart}
           version={version}

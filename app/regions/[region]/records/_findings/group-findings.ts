@@ -1,5 +1,6 @@
 import type { FindingKind } from '@/lib/checks/finding';
 import type { FindingRow } from '@/lib/jobs/records-types';
+import type { FindingCount } from '@/lib/store/findings';
 import { fold } from '../../row-filter.ts';
 import type { NamedStation } from '../records-screen.tsx';
 
@@ -10,41 +11,57 @@ export interface FindingFilter {
   search: string;
 }
 
-export interface StationFindings {
-  station: NamedStation;
-  findings: FindingRow[];
+/** How many findings a station has. */
+export interface StationCounts {
+  code: string;
+  counts: readonly FindingCount[];
 }
 
-/** Findings that answer the filter, by station, the station with the most open ones first. */
+export interface FindingGroup {
+  station: NamedStation;
+  /** findings that answer the filter, and how many of them are open */
+  count: number;
+  open: number;
+}
+
+/** Whether a finding, or a count of such, is one that is asked for. */
+export const answersFilter = (
+  finding: Pick<FindingRow, 'kind' | 'state'>,
+  { kind, state }: Pick<FindingFilter, 'kind' | 'state'>,
+): boolean => (kind === null || finding.kind === kind) && (state === null || finding.state === state);
+
+/** Stations with findings that answer the filter, the one with the most open ones first.
+ *  @param first  code of a station that a link leads to: it stands before all others, whatever the search */
 export function groupFindings(
-  findings: readonly FindingRow[],
+  byStation: readonly StationCounts[],
   stations: readonly NamedStation[],
-  { kind, state, search }: FindingFilter,
-): StationFindings[] {
-  const words = fold(search).split(/\s+/).filter(Boolean);
-  const groups = new Map<string, StationFindings>();
-  for (const station of stations) {
-    const text = fold(`${station.code} ${station.name}`);
-    if (words.every((word) => text.includes(word))) groups.set(station.code, { station, findings: [] });
-  }
-  for (const finding of findings) {
-    if (kind !== null && finding.kind !== kind) continue;
-    if (state !== null && finding.state !== state) continue;
-    groups.get(finding.code)?.findings.push(finding);
-  }
-  const open = (group: StationFindings) => group.findings.filter((finding) => finding.state === 'open').length;
-  return [...groups.values()]
-    .filter((group) => group.findings.length > 0)
+  filter: FindingFilter,
+  first: string | null = null,
+): FindingGroup[] {
+  const words = fold(filter.search).split(/\s+/).filter(Boolean);
+  const known = new Map(stations.map((station) => [station.code, station]));
+  const groups = byStation.flatMap(({ code, counts }): FindingGroup[] => {
+    const station = known.get(code);
+    if (!station) return [];
+    const text = fold(`${code} ${station.name}`);
+    if (code !== first && !words.every((word) => text.includes(word))) return [];
+    const sum = (some: readonly FindingCount[]) => some.reduce((total, { count }) => total + count, 0);
+    const asked = counts.filter((one) => answersFilter(one, filter));
+    return [{ station, count: sum(asked), open: sum(asked.filter(({ state }) => state === 'open')) }];
+  });
+  const place = ({ station }: FindingGroup) => (station.code === first ? 0 : 1);
+  return groups
+    .filter(({ count }) => count > 0)
     .sort(
       (a, b) =>
-        open(b) - open(a) || b.findings.length - a.findings.length || (a.station.code < b.station.code ? -1 : 1),
+        place(a) - place(b) || b.open - a.open || b.count - a.count || (a.station.code < b.station.code ? -1 : 1),
     );
 }
 
-/** How many findings there are of each kind and state, whatever the filter. */
-export function countFindings(findings: readonly FindingRow[]): Record<FindingRow['state'], number> {
+/** How many findings there are of each state, whatever the filter. */
+export function countFindings(byStation: readonly StationCounts[]): Record<FindingRow['state'], number> {
   const counts = { open: 0, rejected: 0, accepted: 0, noted: 0 };
-  for (const { state } of findings) counts[state] += 1;
+  for (const { state, count } of byStation.flatMap((station) => station.counts)) counts[state] += count;
   return counts;
 }
 

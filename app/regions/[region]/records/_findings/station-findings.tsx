@@ -1,9 +1,10 @@
 'use client';
 import Link from 'next/link';
 import { useSearchParams } from 'next/navigation';
-import { useState } from 'react';
+import { useCallback, useState } from 'react';
 import { count, type Units } from '@/app/components/format';
 import { stationHref, yearHref } from '@/app/components/links';
+import { ErrorNote, Loading } from '@/app/components/notes';
 import ui from '@/app/components/ui.module.css';
 import { parseIsoDate } from '@/lib/calendar/day';
 import { lowFlowYearOfDay } from '@/lib/calendar/low-flow-year';
@@ -17,11 +18,14 @@ import type { AskedAnswer } from './answer-dialog.tsx';
 import { FindingSketch } from './finding-sketch.tsx';
 import { figuresOf, KIND_WORDS, STATE_WORDS } from './finding-words.ts';
 import styles from './findings.module.css';
-import type { StationFindings as Group } from './group-findings.ts';
+import { answersFilter, type FindingFilter, type FindingGroup as Group } from './group-findings.ts';
 
 interface Props {
   slug: string;
   group: Group;
+  filter: Pick<FindingFilter, 'kind' | 'state'>;
+  /** id of the finding that a link leads to */
+  led: string | null;
   units: Units;
   yearStart: number;
   version: number;
@@ -33,10 +37,18 @@ interface Props {
 const PAGE = 20;
 
 /** What the checks found on one record: each stretch drawn, its figures, what was answered, and the answers to give. */
-export function StationFindings({ slug, group, units, yearStart, version, onAnswer, onChanged }: Props) {
+export function StationFindings({ slug, group, filter, led, units, yearStart, version, onAnswer, onChanged }: Props) {
   const query = useSearchParams();
   const [shown, setShown] = useState(PAGE);
-  const { station, findings } = group;
+  const { station } = group;
+  const { value, problem } = useAnswer<{ findings: FindingRow[] }>(
+    `/api/regions/${encodeURIComponent(slug)}/findings?station=${encodeURIComponent(station.code)}`,
+    version,
+  );
+  const findings = (value?.findings ?? []).filter((finding) => answersFilter(finding, filter));
+  const upTo = Math.max(shown, findings.findIndex(({ id }) => id === led) + 1);
+  // where a link leads is brought into sight, once
+  const bring = useCallback((element: HTMLElement | null) => element?.scrollIntoView({ block: 'center' }), []);
   const several = FINDING_KINDS.map((kind) =>
     findings.filter((one) => one.kind === kind && one.state === 'open'),
   ).filter((some) => some.length > 1);
@@ -52,7 +64,7 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
           </Link>{' '}
           <small>{station.code}</small>
         </h2>
-        <p>{count(findings.length, 'finding')}</p>
+        <p>{count(group.count, 'finding')}</p>
         {several.map((some) => (
           <button
             key={some[0].kind}
@@ -64,9 +76,17 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
           </button>
         ))}
       </header>
+      {problem && <ErrorNote>{problem}</ErrorNote>}
+      {!value && !problem && <Loading>Reading its findings…</Loading>}
       <ul className={styles.findings}>
-        {findings.slice(0, shown).map((finding) => (
-          <li key={finding.id} className={styles.finding} data-state={finding.state}>
+        {findings.slice(0, upTo).map((finding) => (
+          <li
+            key={finding.id}
+            ref={finding.id === led ? bring : undefined}
+            className={styles.finding}
+            data-state={finding.state}
+            aria-current={finding.id === led ? true : undefined}
+          >
             <FindingSketch slug={slug} finding={finding} version={version} />
             <div className={styles.words}>
               <p>
@@ -99,9 +119,9 @@ export function StationFindings({ slug, group, units, yearStart, version, onAnsw
           </li>
         ))}
       </ul>
-      {shown < findings.length && (
-        <button type="button" className={ui.button} onClick={() => setShown(shown + PAGE)}>
-          Show {Math.min(PAGE, findings.length - shown)} more of {findings.length}
+      {upTo < findings.length && (
+        <button type="button" className={ui.button} onClick={() => setShown(upTo + PAGE)}>
+          Show {Math.min(PAGE, findings.length - upTo)} more of {findings.length}
         </button>
       )}
       <StationMarks slug={slug} station={station} version={version} onChanged={onChanged} />

@@ -17,6 +17,14 @@ export const marksAddress = (slug: string, code: string): string =>
 /** @throws AnswerError with the server's reason */
 export const addMark = (slug: string, code: string, mark: NewMark) => send('POST', marksAddress(slug, code), mark);
 
+/** The same mark on several stretches of one record: all of them or none.
+ *  @throws AnswerError with the server's reason */
+export const addMarks = (
+  slug: string,
+  code: string,
+  mark: Omit<NewMark, 'first' | 'last'> & { stretches: Pick<NewMark, 'first' | 'last'>[] },
+) => send('POST', marksAddress(slug, code), mark);
+
 /** @throws AnswerError with the server's reason */
 export const undoMark = (slug: string, code: string, id: number) => send('DELETE', `${marksAddress(slug, code)}/${id}`);
 

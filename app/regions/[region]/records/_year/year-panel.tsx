@@ -5,7 +5,7 @@ import { useQueryState } from 'nuqs';
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { markedChanges } from '@/app/components/change-marks/marked-changes';
 import { flow, flowIn } from '@/app/components/format';
-import { stationHref } from '@/app/components/links';
+import { findingHref, stationHref } from '@/app/components/links';
 import { ErrorNote, Loading } from '@/app/components/notes';
 import { Segmented } from '@/app/components/segmented';
 import ui from '@/app/components/ui.module.css';
@@ -185,7 +185,10 @@ export function YearPanel({ slug, station, year, cell, basis, version, onYear, o
             {found.map((finding) => (
               <li key={finding.id}>
                 <span>
-                  <strong>{KIND_WORDS[finding.kind]}</strong>, {finding.first} to {finding.last} (
+                  <Link href={findingHref(slug, finding, query)} prefetch={false}>
+                    {KIND_WORDS[finding.kind]}
+                  </Link>
+                  , {finding.first === finding.last ? finding.first : `${finding.first} to ${finding.last}`} (
                   {STATE_WORDS[finding.state]}): {figuresOf(finding, basis.units)}
                 </span>
                 <button

@@ -105,6 +105,7 @@ export function MinimaFigure({
             right={Math.max(PLOT.left, width - PLOT.right)}
             top={top + 6}
             bottom={bottom - 6}
+            points={points.map(({ year, minimum }) => ({ x: x(year), y: y((minimum ?? 0) * factor) }))}
           />
           <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
           {slope && <Slope slope={slope} x={x} y={(flow) => y(flow * factor)} />}

@@ -3,12 +3,11 @@ import { readJson, readParameters } from '@/app/api/_http/parameters';
 import { regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { type StationParams, stationOf } from '@/app/api/_http/station';
-import { parseIsoDate } from '@/lib/calendar/day';
 import { marksCsv } from '@/lib/export/findings-csv';
 import { launchPendingChecks } from '@/lib/jobs/checks';
 import { markView } from '@/lib/jobs/finding-rows';
-import { addMark, listMarks } from '@/lib/store/marks';
-import { markParameters, newMark } from './bodies';
+import { addMarks, listMarks } from '@/lib/store/marks';
+import { markParameters, newMark, stretchesOf } from './bodies';
 
 /** The marks that people laid on a station's record, in the order in which they hold. */
 export const GET = route<StationParams>(async (request, params) => {
@@ -21,13 +20,15 @@ export const GET = route<StationParams>(async (request, params) => {
     : jsonAnswer({ marks: marks.map(markView) });
 });
 
-/** Rejects, accepts or notes a stretch of days. */
+/** Rejects, accepts or notes a stretch of days, or several stretches at once: all of them or none. */
 export const POST = route<StationParams>(async (request, params) => {
   const region = await regionOf(params);
   const { id: stationId } = await stationOf(region, params);
-  const { first, last, ...mark } = await readJson(request, newMark);
-  const added = await addMark({ ...mark, stationId, firstDay: parseIsoDate(first), lastDay: parseIsoDate(last) });
+  const body = await readJson(request, newMark);
+  const { kind, reason, by, quantity } = body;
+  const added = await addMarks({ stationId, kind, reason, by, quantity, stretches: stretchesOf(body) });
   // Records derived from this one are other records now.
   await launchPendingChecks([region.id]);
-  return jsonAnswer(markView(added), { status: 201 });
+  const marks = added.map(markView);
+  return jsonAnswer(body.stretches ? { marks } : marks[0], { status: 201 });
 });
