@@ -7,11 +7,10 @@ import { discardSession, newSessionFolder, type UploadSession } from '@/lib/jobs
 import { jsonAnswer } from './answer';
 import { Problem } from './problem';
 import { gone, present } from './session';
-import { receiveUpload } from './upload';
+import { MOST_FILES, receiveUpload } from './upload';
 
-/** Uploads that may wait at a time, and files in one: a full disk would hurt more than a refusal. */
+/** Uploads that may wait at a time: a full disk would hurt more than a refusal. */
 const MOST_SESSIONS = 50;
-const MOST_FILES = 5_000;
 
 /** Receives files for a region, or for one to be made, as an upload that waits for its import. */
 export async function openSession(request: Request, regionId: number | null): Promise<Response> {

@@ -12,7 +12,8 @@ import { Problem } from './problem';
 const GIB = 2 ** 30;
 /** An import needs room for the upload, its staging database and the stored parts: about as much again each. */
 const ROOM_FACTOR = 3;
-const MOST_FILES = 5_000;
+/** Files at once. */
+export const MOST_FILES = 5_000;
 const LONGEST_NAME = 200;
 
 export interface Upload {

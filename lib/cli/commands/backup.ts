@@ -1,7 +1,6 @@
-import { existsSync } from 'node:fs';
 import { backup } from '../../store/backup.ts';
 import { readArguments } from '../arguments.ts';
-import { UsageError } from '../usage-error.ts';
+import { newFile } from '../new-file.ts';
 
 export const usage = `Usage: npx hungerstone backup --out FILE
 
@@ -12,9 +11,8 @@ Writes the whole database to one new file, also while a server is running.
 
 export async function run(argv: string[]): Promise<number> {
   const { values } = readArguments(argv, { out: { type: 'string' } });
-  if (!values.out) throw new UsageError('Say where to with --out FILE.');
-  if (existsSync(values.out)) throw new UsageError(`${values.out} exists already; give --out a new name.`);
-  await backup(values.out);
-  process.stderr.write(`The database is in ${values.out}.\n`);
+  const out = newFile(values.out, 'FILE');
+  await backup(out);
+  process.stderr.write(`The database is in ${out}.\n`);
   return 0;
 }

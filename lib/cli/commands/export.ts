@@ -1,9 +1,10 @@
-import { createWriteStream, existsSync, renameSync, rmSync } from 'node:fs';
+import { createWriteStream, renameSync, rmSync } from 'node:fs';
 import { pipeline } from 'node:stream/promises';
 import { regionArchive } from '../../export/archive/region-archive.ts';
 import { namedRegion } from '../analysis.ts';
 import { readArguments } from '../arguments.ts';
-import { UsageError } from '../usage-error.ts';
+import { untilInterrupted } from '../interrupt.ts';
+import { newFile } from '../new-file.ts';
 
 export const usage = `Usage: npx hungerstone export --region NAME --out FILE.zip [options]
 
@@ -24,27 +25,24 @@ const OPTIONS = {
 
 export async function run(argv: string[]): Promise<number> {
   const { values } = readArguments(argv, OPTIONS);
-  const { out } = values;
-  if (!out) throw new UsageError('Say where to with --out FILE.zip.');
-  if (existsSync(out)) throw new UsageError(`${out} exists already; give --out a new name.`);
+  const out = newFile(values.out, 'FILE.zip');
   const region = await namedRegion(values.region);
   const part = `${out}.${process.pid}.part`;
   const cancel = new AbortController();
   const abort = () => cancel.abort(new Error('Cancelled; nothing was written.'));
-  process.once('SIGINT', abort);
-  process.once('SIGTERM', abort);
-  try {
+  const write = async () => {
     const archive = await regionArchive(region, {
       ...{ withWaterml: !values['no-waterml'], signal: cancel.signal, onProgress: sayProgress() },
     });
     await pipeline(archive, createWriteStream(part), { signal: cancel.signal });
     renameSync(part, out);
+  };
+  try {
+    await untilInterrupted(abort, write);
   } catch (error) {
     rmSync(part, { force: true });
     throw cancel.signal.aborted ? cancel.signal.reason : error;
   } finally {
-    process.off('SIGINT', abort);
-    process.off('SIGTERM', abort);
     if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
   }
   process.stderr.write(`${region.name} is in ${out}.\n`);

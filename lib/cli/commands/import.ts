@@ -9,6 +9,7 @@ import { readArguments } from '../arguments.ts';
 import { CHOICE_OPTIONS, CHOICE_USAGE, choicesOf } from '../import-choices.ts';
 import { followImport } from '../import-progress.ts';
 import { reportJson, reportText, revisionLines } from '../import-report.ts';
+import { untilInterrupted } from '../interrupt.ts';
 import { UsageError } from '../usage-error.ts';
 
 export const usage = `Usage: npx hungerstone import --region NAME [options] FLOWFILE...
@@ -75,19 +76,17 @@ async function imported(name: string, files: GivenFile[], choices: ImportChoices
   const standing = await getRegion(slugOf(name));
   const region = standing ? { id: standing.id } : { name };
   const { id, result } = await launchImport({ region, files, choices });
-  const cancel = () => void cancelJob(id);
-  process.once('SIGINT', cancel);
-  process.once('SIGTERM', cancel);
   const over = new AbortController();
   const telling = followImport(id, over.signal);
-  try {
-    return await result;
-  } finally {
-    over.abort();
-    await telling;
-    process.off('SIGINT', cancel);
-    process.off('SIGTERM', cancel);
-  }
+  const cancel = () => void cancelJob(id);
+  return untilInterrupted(cancel, async () => {
+    try {
+      return await result;
+    } finally {
+      over.abort();
+      await telling;
+    }
+  });
 }
 
 function sayProblems({ problems }: ImportOutcome): void {
