@@ -1,17 +1,10 @@
-import type { Influence } from '../region/ranking-types.ts';
+import type { StationFacts } from '../region/ranking-types.ts';
 import type { AreaUnit } from '../series/area-units.ts';
 import type { DerivedRecipe, NamedFlow, StationChange } from '../series/station-history.ts';
 import type { Correction } from './intake-error.ts';
 
 /** One row of a station registry. */
-export interface RegistryStation {
-  code: string;
-  name: string;
-  river: string;
-  latitude: number | null;
-  longitude: number | null;
-  areaKm2: number | null;
-  influence: Influence;
+export interface RegistryStation extends Omit<StationFacts, 'id' | 'derivedFrom'> {
   changes?: StationChange[];
   namedFlows?: NamedFlow[];
   notes?: string;

@@ -32,7 +32,8 @@ export interface LaidCounts {
   filled: number;
   /** days whose value is equal to the one that stood */
   equal: number;
-  /** days whose value is unlike the one that stood, those of them that stood as provisional, and those taken */
+  /** days whose value is unlike the one that stood, those of them that stood as provisional, and those that take the new
+   *  value under the rule */
   unlike: number;
   unlikeProvisional: number;
   revised: number;

@@ -5,6 +5,7 @@ import { listImports } from '../../../lib/store/imports.ts';
 import { readSeries } from '../../../lib/store/records.ts';
 import { getRegion, listRegions } from '../../../lib/store/regions.ts';
 import { listStations, stationRecords } from '../../../lib/store/stations.ts';
+import { FIXED_WIDTH } from '../../fixed-width.ts';
 import { databaseContent } from '../jobs/database-content.ts';
 import { longRows, type SampleFiles, sampleFiles } from '../jobs/sample-files.ts';
 import { temporaryDatabase } from '../store/temporary-database.ts';
@@ -60,23 +61,7 @@ test('import --mapping, --unit and --station read a file that names neither', as
   const fixed = files.write('fixed.dly', `${rows.join('\n')}\n`);
   const mapping = files.write(
     'mapping.json',
-    JSON.stringify({
-      layout: 'fixed-width',
-      station: { from: 'file-name' },
-      date: {
-        columns: [
-          [0, 4],
-          [4, 6],
-          [6, 8],
-        ],
-        order: 'ymd',
-      },
-      value: { slice: [9, 19] },
-      flag: null,
-      unit: 'L/s',
-      missing: ['-99'],
-      decimal: '.',
-    }),
+    JSON.stringify({ ...FIXED_WIDTH, value: { slice: [9, 19] }, unit: 'L/s', missing: ['-99'] }),
   );
   const { code, stdout, stderr } = await runCommand('import', ...REGION, '--mapping', mapping, '--json', fixed);
   expect([code, stderr.includes('Nothing was changed')]).toEqual([0, false]);

@@ -2,6 +2,8 @@ import { gzipSync } from 'node:zlib';
 import { strToU8, zipSync } from 'fflate';
 import { isoDate } from '../../../lib/calendar/day.ts';
 import type { Mapping } from '../../../lib/intake/types.ts';
+import { DATE_AT_START } from '../../fixed-width.ts';
+import { LAYER } from '../../integration/jobs/sample-files.ts';
 
 /** A small good file of some layout, to be spoilt. */
 export interface SeedFile {
@@ -42,14 +44,7 @@ const blanks = text(
 const fixed: SeedFile = {
   mapping: {
     layout: 'fixed-width',
-    date: {
-      columns: [
-        [0, 4],
-        [4, 6],
-        [6, 8],
-      ],
-      order: 'ymd',
-    },
+    date: DATE_AT_START,
     value: { slice: [8, 18] },
   },
   ...text(
@@ -119,22 +114,7 @@ const points = geojson(
   ],
   'stations.geojson',
 );
-const lines = geojson(
-  [
-    {
-      type: 'Feature',
-      properties: { name: 'Wethe' },
-      geometry: {
-        type: 'LineString',
-        coordinates: [
-          [7.1, 50.1],
-          [7.2, 50.2],
-        ],
-      },
-    },
-  ],
-  'rivers.geojson',
-);
+const lines = text('rivers.geojson', [LAYER]);
 
 /** WaterML 2.0 (OGC 10-126r4), as short as it can be. */
 const waterml2 = text('series.xml', [

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import type { InspectOptions } from '../../../lib/intake/types.ts';
+import { DATE_AT_START } from '../../fixed-width.ts';
 import { dates, inspect } from './reading.ts';
 
 test('inspectFile says how a good file will be read, with its header and first rows, and no problems', async () => {
@@ -27,14 +28,7 @@ test('inspectFile offers the slices of a fixed-width file and asks for column an
   const seen = await inspect(lines.join('\n'), { fileName: 'x.dly' });
   expect(seen.mapping).toMatchObject({
     ...{ layout: 'fixed-width', station: { from: 'file-name' }, value: null, unit: null },
-    date: {
-      columns: [
-        [0, 4],
-        [4, 6],
-        [6, 8],
-      ],
-      order: 'ymd',
-    },
+    date: DATE_AT_START,
   });
   expect(seen.problems.map(({ problem }) => problem.needs)).toEqual(['mapping', 'unit']);
   expect(seen.valueCandidates).toEqual([

@@ -1,25 +1,10 @@
 import { expect, test } from 'vitest';
 import { columnPosition, parseMapping } from '../../../lib/intake/mapping.ts';
 import { IntakeError } from '../../../lib/intake/types.ts';
+import { FIXED_WIDTH } from '../../fixed-width.ts';
 
 test('parseMapping takes a whole mapping, any subset of its keys, and nothing at all', () => {
-  const whole = {
-    layout: 'fixed-width',
-    station: { from: 'file-name' },
-    date: {
-      columns: [
-        [0, 4],
-        [4, 6],
-        [6, 8],
-      ],
-      order: 'ymd',
-    },
-    value: { slice: [28, 38] },
-    flag: null,
-    unit: 'mm/d',
-    missing: ['-99.0000'],
-    decimal: '.',
-  };
+  const whole = { ...FIXED_WIDTH, missing: ['-99.0000'] };
   expect(parseMapping(whole, 'm.json')).toEqual(whole);
   expect(parseMapping({ value: { column: 'flow' } }, 'm.json')).toEqual({ value: { column: 'flow' } });
   expect(parseMapping({}, 'm.json')).toEqual({});

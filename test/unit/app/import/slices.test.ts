@@ -1,27 +1,9 @@
 import { expect, test } from 'vitest';
 import { type NamedSlice, piecesOf, placesOfSlices, sliceFrom, slicesOf } from '@/app/components/import/slices';
-import type { Mapping } from '@/lib/intake/types';
-
-const MAPPING: Mapping = {
-  layout: 'fixed-width',
-  station: { from: 'file-name' },
-  date: {
-    columns: [
-      [0, 4],
-      [4, 6],
-      [6, 8],
-    ],
-    order: 'ymd',
-  },
-  value: { slice: [28, 38] },
-  flag: null,
-  unit: 'mm/d',
-  missing: [],
-  decimal: '.',
-};
+import { FIXED_WIDTH } from '../../../fixed-width.ts';
 
 test('slicesOf names the slices of a mapping, and placesOfSlices is its inverse', () => {
-  const slices = slicesOf(MAPPING);
+  const slices = slicesOf(FIXED_WIDTH);
   expect(slices).toEqual([
     { name: 'year', slice: [0, 4] },
     { name: 'month', slice: [4, 6] },
@@ -29,16 +11,16 @@ test('slicesOf names the slices of a mapping, and placesOfSlices is its inverse'
     { name: 'value', slice: [28, 38] },
     { name: 'flag', slice: null },
   ]);
-  const { layout, date, value, flag } = MAPPING;
-  expect(placesOfSlices(slices, MAPPING)).toEqual({ layout, date, value, flag });
+  const { layout, date, value, flag } = FIXED_WIDTH;
+  expect(placesOfSlices(slices, FIXED_WIDTH)).toEqual({ layout, date, value, flag });
 });
 
 test('slicesOf of a whole date, and of a file of which nothing is known', () => {
-  const whole = { ...MAPPING, date: { columns: [[0, 10] as [number, number]], order: 'dmy' as const } };
+  const whole = { ...FIXED_WIDTH, date: { columns: [[0, 10] as [number, number]], order: 'dmy' as const } };
   expect(slicesOf(whole).map(({ name }) => name)).toEqual(['date', 'value', 'flag']);
-  const nothing = slicesOf({ ...MAPPING, date: { columns: [], order: 'ymd' }, value: null });
+  const nothing = slicesOf({ ...FIXED_WIDTH, date: { columns: [], order: 'ymd' }, value: null });
   expect(nothing.every(({ slice }) => slice === null)).toBe(true);
-  expect(placesOfSlices(nothing, MAPPING)).toBeNull();
+  expect(placesOfSlices(nothing, FIXED_WIDTH)).toBeNull();
 });
 
 test.each([
