@@ -62,7 +62,7 @@ function storeProblem({ code, message }: StoreError): Problem {
 }
 
 /** Any error as a problem. One that nobody foresaw gets a neutral sentence: it may hold paths or data. */
-export function problemFrom(error: unknown): Problem {
+function problemFrom(error: unknown): Problem {
   if (error instanceof Problem) return error;
   if (error instanceof BasisError) return new Problem('bad-basis', error.message);
   if (error instanceof IntakeError || error instanceof ImportRefused) {

@@ -7,7 +7,7 @@ import { attachment, taggedAnswer } from './answer';
 import { narrowingParameters } from './parameters';
 
 /** `metadata` answers the description of the CSV file: columns, units, basis, data hash, program version. */
-export const TABLE_FORMATS = [...FORMATS, 'metadata'] as const;
+const TABLE_FORMATS = [...FORMATS, 'metadata'] as const;
 export type TableFormat = (typeof TABLE_FORMATS)[number];
 
 export const formatParameter = {

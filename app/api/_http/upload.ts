@@ -102,7 +102,7 @@ function tooLarge(limit: number): Problem {
 }
 
 /** A file's name as it may be shown and stored: no folders, no control characters, no endless length. */
-export function safeName(name: string | undefined): string {
+function safeName(name: string | undefined): string {
   const last = (name ?? '').split(/[/\\]/).at(-1)!;
   const clean = last.replace(/\p{Cc}|\p{Cf}/gu, '').trim();
   return clean.length > LONGEST_NAME ? clean.slice(-LONGEST_NAME) : clean || 'unnamed';

@@ -7,7 +7,7 @@ const FIRST_DAY = dayNumber(1980, 1, 1);
 const LAST_DAY = dayNumber(2009, 12, 31);
 
 /** A made-up daily flow that falls slowly at A1, rises at B2 and is level elsewhere: wet in spring, low in autumn. */
-export function sampleFlow(station: string, day: number): number {
+function sampleFlow(station: string, day: number): number {
   const year = (day - FIRST_DAY) / 365.25;
   const drift = { A1: -0.02, B2: 0.02 }[station] ?? 0;
   const season = 1.2 + Math.cos(2 * Math.PI * (year - 0.25));
