@@ -1,8 +1,8 @@
 'use client';
 import dynamic from 'next/dynamic';
 import { useRouter } from 'next/navigation';
-import { type ReactNode, useCallback, useEffect, useState } from 'react';
-import type { ImportOutcome } from '@/lib/jobs/import-types';
+import { type ReactNode, useCallback, useState } from 'react';
+import type { ImportOutcome, TakenFile } from '@/lib/jobs/import-types';
 import type { OverlapRule } from '@/lib/store/lay-parts';
 import { count } from './format.ts';
 import { FileDrop } from './import/file-drop.tsx';
@@ -10,12 +10,14 @@ import styles from './import/import.module.css';
 import { JobBar, UploadBar } from './import/job-progress.tsx';
 import { ProblemNote } from './import/problem-note.tsx';
 import { FileReport } from './import/report-view.tsx';
+import { reportId, TakenTable } from './import/taken-table.tsx';
 import { type Order, useImport } from './import/use-import.ts';
 import type { Waiting } from './import/waiting.ts';
 import { WaitingUploads } from './import/waiting-uploads.tsx';
 import { regionHref } from './links.ts';
 import { ErrorNote, Loading } from './notes.tsx';
 import ui from './ui.module.css';
+import { useWho } from './use-who.ts';
 
 const opening = () => <Loading>Opening the files…</Loading>;
 const MappingStep = dynamic(() => import('./import/mapping-step.tsx').then((module) => module.MappingStep), {
@@ -45,8 +47,11 @@ export function ImportForm(props: Props) {
   const { region, runningJob = null, openUpload = null, waiting = [], hasRecords = false, beside } = props;
   const router = useRouter();
   const onTaken = useCallback(() => router.refresh(), [router]);
-  const flow = useImport({ region, runningJob, openUpload, onTaken });
-  const [order, setOrder] = useOrder();
+  const [by, setBy] = useWho();
+  const [name, setName] = useState('');
+  const onOrdered = useCallback((said: { name?: string }) => setName((now) => said.name ?? now), []);
+  const flow = useImport({ region, runningJob, openUpload, onOrdered, onTaken });
+  const order: Order = { by, name };
   const { state } = flow;
   const drop = <FileDrop onFiles={(files) => void flow.send(files)} />;
   switch (state.stage) {
@@ -58,7 +63,7 @@ export function ImportForm(props: Props) {
       return (
         <>
           {state.cancelled && <Cancelled />}
-          <MappingStep {...{ flow, region, order, setOrder }} comparable={hasRecords} />
+          <MappingStep {...{ flow, region, order, setBy, setName }} comparable={hasRecords} />
         </>
       );
     case 'working':
@@ -69,6 +74,7 @@ export function ImportForm(props: Props) {
       return (
         <ReviewStep
           outcome={state.outcome}
+          files={flow.taken}
           onApply={(rule?: OverlapRule) => void flow.start({ ...order, rule }, false)}
           onBack={flow.backToFiles}
         />
@@ -108,20 +114,8 @@ function Cancelled() {
 /** Opens the list of findings on the Records page. */
 const FINDINGS = '?show=findings';
 
-const BY = 'hungerstone.imported-by';
-
-/** What is chosen beside the files. Who imports is remembered by this browser. */
-function useOrder(): [Order, (order: Order) => void] {
-  const [order, setOrder] = useState<Order>({ by: '', name: '' });
-  useEffect(() => setOrder((now) => ({ ...now, by: window.localStorage.getItem(BY) ?? '' })), []);
-  return [
-    order,
-    (next) => {
-      window.localStorage.setItem(BY, next.by);
-      setOrder(next);
-    },
-  ];
-}
+/** From this many files on they stand in one table, and the report of each below it is folded. */
+const TABLE_FROM = 4;
 
 function Taken({ slug, outcome }: { slug: string | null; outcome: ImportOutcome }) {
   const { findings, taken } = outcome;
@@ -149,16 +143,28 @@ function Taken({ slug, outcome }: { slug: string | null; outcome: ImportOutcome 
           </p>
         )}
       </div>
+      {taken.length >= TABLE_FROM && <TakenTable files={taken} />}
       {taken.map((file) => (
-        <FileReport
+        <Report
           key={file.importId}
           file={file}
-          rejectedHref={
-            slug === null ? null : `/api/regions/${encodeURIComponent(slug)}/imports/${file.importId}/rejected`
-          }
+          folded={taken.length >= TABLE_FROM}
+          rejectedHref={slug && `/api/regions/${encodeURIComponent(slug)}/imports/${file.importId}/rejected`}
         />
       ))}
     </div>
+  );
+}
+
+function Report({ folded, ...report }: { file: TakenFile; rejectedHref: string | null; folded: boolean }) {
+  if (!folded) return <FileReport {...report} />;
+  return (
+    <details className={styles.one}>
+      <summary>Report on {report.file.file}</summary>
+      <div id={reportId(report.file)}>
+        <FileReport {...report} />
+      </div>
+    </details>
   );
 }
 

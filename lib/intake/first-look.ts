@@ -12,9 +12,9 @@ import { NO_TIME } from './time-of-day.ts';
 import { TimedRows } from './timed-rows.ts';
 import { type InspectOptions, IntakeError, type UnderstoodRow } from './types.ts';
 
-/** Rows that are shown as understood, and values of them: a row of a wide table has many. */
+/** Rows that are shown as understood, and the most values of one: those of a month. */
 const SHOWN_ROWS = 40;
-const SHOWN_VALUES = 160;
+const SHOWN_OF_A_ROW = 31;
 /** Values that are looked at for what must be asked: enough to tell, and few enough to answer at every keystroke. */
 const MOST_VALUES = 10_000;
 
@@ -53,12 +53,13 @@ class LookSink implements DaySink {
     if (this.hasRoom(row)) this.rows.push({ row, station: -1, date: null, value: null, code: -1, problem });
   }
 
-  private shownRows = new Set<number>();
+  /** values shown, by row */
+  private readonly shown = new Map<number, number>();
 
   private hasRoom(row: number): boolean {
-    if (this.rows.length >= SHOWN_VALUES) return false;
-    if (this.shownRows.size >= SHOWN_ROWS && !this.shownRows.has(row)) return false;
-    this.shownRows.add(row);
+    const values = this.shown.get(row) ?? 0;
+    if (values >= SHOWN_OF_A_ROW || (values === 0 && this.shown.size >= SHOWN_ROWS)) return false;
+    this.shown.set(row, values + 1);
     return true;
   }
 }

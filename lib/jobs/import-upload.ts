@@ -25,7 +25,8 @@ export async function importUpload(session: UploadSession, { choices, leaveOut, 
   const said: Record<string, FileChoices> = Object.fromEntries(
     session.seen.map(({ file, choices: own }) => [file, own]),
   );
-  await noteJob(session.id, { id: jobId, dryRun });
+  const job = { id: jobId, dryRun, ...('name' in region ? { name: region.name } : {}) };
+  await noteOrder(session.id, { job, leaveOut });
   const { result } = await launchImport({
     ...{ region, files, jobId },
     choices: { ...choices, files: { ...said, ...choices.files } },
@@ -38,8 +39,8 @@ export async function importUpload(session: UploadSession, { choices, leaveOut, 
   return jobId;
 }
 
-const noteJob = (id: string, job: UploadSession['job']): Promise<void> =>
+const noteOrder = (id: string, order: Pick<UploadSession, 'job' | 'leaveOut'>): Promise<void> =>
   inTurn(id, async () => {
     const now = await readSession(id);
-    if (now) await writeSession({ ...now, job });
+    if (now) await writeSession({ ...now, ...order });
   });

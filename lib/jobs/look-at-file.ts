@@ -103,12 +103,19 @@ async function registryIn(file: GivenFile, choices: FileChoices, near: FileLook[
 
 const problemIn = (error: IntakeError): PreviewProblem => ({ message: error.message, problem: error.problem });
 
-/** Files of one layout with one header are laid out alike; a wide file's header names its stations, which differ. */
-function likenessOf(kind: FileKind, inspection: Pick<Inspection, 'mapping' | 'header' | 'preview'> | null) {
+type Look = Pick<Inspection, 'mapping' | 'header' | 'preview' | 'others'>;
+
+/** Files of one layout with one header are laid out alike. A wide file's header names its stations, which differ: there
+ *  the columns of the date count. Documents are alike when they hold the same series beside the one that is read. */
+function likenessOf(kind: FileKind, inspection: Look | null): string | null {
   const mapping = inspection?.mapping;
   if (kind !== 'flows' || !mapping) return null;
-  const columns = mapping.layout === 'wide' ? null : (inspection.header ?? inspection.preview[0]?.length ?? 0);
-  return JSON.stringify([mapping.layout, mapping.delimiter ?? null, columns]);
+  const { layout, delimiter = null, date } = mapping;
+  const { header, preview, others } = inspection;
+  const series = layout.startsWith('waterml') ? others.map(({ label }) => label).sort() : [];
+  const nameOf = (column: unknown) => (typeof column === 'number' ? (header?.[column] ?? column) : column);
+  const columns = layout === 'wide' ? date.columns.map(nameOf) : (header ?? preview[0]?.length ?? 0);
+  return JSON.stringify([layout, delimiter, columns, series]);
 }
 
 async function firstLines(file: GivenFile): Promise<string[]> {

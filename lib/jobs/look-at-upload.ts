@@ -14,6 +14,7 @@ import { type FilePreview, inShort, type UploadedFile } from './upload-types.ts'
  *  @throws RangeError for a name that is none of its files */
 export async function lookAtUpload(id: string, choices: Record<string, FileChoices>): Promise<FilePreview[] | null> {
   const names = Object.keys(choices);
+  if (names.length === 0) return (await readSession(id)) && [];
   const session = await changed(id, (now) => withChoices(now, choices));
   if (!session) return null;
   const looks = names.map((name) => lookOf(session, name, choices[name]));
@@ -28,6 +29,21 @@ export async function lookAtUpload(id: string, choices: Record<string, FileChoic
   if (looked === null) return null;
   await changed(id, (now) => withLooks(now, looked));
   return looked.map(({ preview }) => preview);
+}
+
+/** Keeps which files of an upload are to stay out of its import. A registry that is left out, or taken after all, changes
+ *  what the flows may name.
+ *  @throws RangeError for a name that is none of its files */
+export async function leaveOutOfUpload(id: string, leaveOut: readonly string[]): Promise<void> {
+  await changed(id, (now) => {
+    const stranger = leaveOut.find((name) => !now.files.some((file) => file.name === name));
+    if (stranger !== undefined)
+      throw new RangeError(`leaveOutOfUpload: leaveOut must name files of the upload, got "${stranger}"`);
+    const other = ({ file }: UploadedFile) => leaveOut.includes(file) !== now.leaveOut.includes(file);
+    const renamed = now.seen.some((one) => one.kind === 'registry' && other(one));
+    const seen = now.seen.map((one) => (renamed && one.kind === 'flows' ? { ...one, state: 'unseen' as const } : one));
+    return { ...now, seen, leaveOut };
+  });
 }
 
 const changed = (id: string, change: (now: UploadSession) => UploadSession): Promise<UploadSession | null> =>
@@ -57,10 +73,13 @@ function lookOf(session: UploadSession, name: string, choices: FileChoices) {
   };
 }
 
-/** The region's stations with those of the upload's own registries, but for the ones that are looked at anew. */
-function knownTo({ regionId, names }: UploadSession, anew: readonly string[]): KnownStation[] | null {
+/** The region's stations with those of the upload's own registries, but for the ones that are left out or looked at
+ *  anew. */
+function knownTo({ regionId, names, leaveOut }: UploadSession, anew: readonly string[]): KnownStation[] | null {
   const standing = regionId === null ? null : knownStations(regionId);
-  const coming = Object.keys(names).flatMap((file) => (anew.includes(file) ? [] : names[file]));
+  const coming = Object.keys(names).flatMap((file) =>
+    anew.includes(file) || leaveOut.includes(file) ? [] : names[file],
+  );
   return standing === null && coming.length === 0 ? null : [...(standing ?? []), ...coming];
 }
 

@@ -3,6 +3,7 @@ import type { GivenFile } from './import-types.ts';
 import { type JobView, viewJob } from './live-jobs.ts';
 import { lookAtUpload } from './look-at-upload.ts';
 import { unpackUpload } from './unpack-upload.ts';
+import { withArchive } from './upload-archive.ts';
 import {
   discardSession,
   inTurn,
@@ -29,7 +30,7 @@ export async function takeUpload(
   const first = await inTurn(id, async () => {
     const open = fresh ? emptySession(id, regionId) : await readSession(id);
     if (!open) return null;
-    const session = await withFiles(open, unpacked);
+    const session = await withArchive(await withFiles(open, unpacked));
     await writeSession(session);
     return session.seen.filter(({ state }) => state === 'unseen').slice(0, LOOKED_AT_ONCE);
   });
@@ -48,6 +49,8 @@ const emptySession = (id: string, regionId: number | null): UploadSession => ({
     names: {},
     broken: {},
     notes: [],
+    archive: null,
+    leaveOut: [],
     job: null,
   },
 });
@@ -77,10 +80,10 @@ export async function discardOrphanedUploads(): Promise<number> {
 const slugs = async () => new Map((await listRegions()).map(({ id, slug }) => [id, slug]));
 
 async function viewOf(session: UploadSession, bySlug: Map<number, string>): Promise<UploadView> {
-  const { id, regionId, createdAt, seen, notes, job } = session;
+  const { id, regionId, createdAt, seen, notes, archive, leaveOut, job } = session;
   const view = job && (await viewJob(job.id));
   return {
-    ...{ id, createdAt, files: seen, notes },
+    ...{ id, createdAt, files: seen, notes, archive, leaveOut },
     region: regionId === null ? null : (bySlug.get(regionId) ?? null),
     job: job && view ? { ...job, state: view.state } : null,
   };

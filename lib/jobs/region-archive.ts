@@ -18,6 +18,8 @@ export interface OpenedArchive {
   files: GivenFile[];
   /** by file name */
   choices: Record<string, FileChoices>;
+  /** as the region was called */
+  name: string;
   region: ArchivedRegion;
 }
 
@@ -50,7 +52,7 @@ export async function openRegionArchive(files: readonly GivenFile[]): Promise<Op
   const document = checked(regionDocumentSchema, region, about);
   const list = need(IMPORTS);
   const imports = checked(importsDocumentSchema, await jsonOf(list), list);
-  const opened: OpenedArchive = { files: [], choices: {}, region: document };
+  const opened: OpenedArchive = { files: [], choices: {}, name: document.name, region: document };
   const add = (file: GivenFile, choices: FileChoices) => {
     opened.files.push(file);
     opened.choices[file.name] = choices;

@@ -8,7 +8,7 @@ import { byFileName } from './by-file-name.ts';
 import type { FileChoices, GivenFile } from './import-types.ts';
 import type { UnpackedUpload } from './unpack-upload.ts';
 import { discardUpload, uploadFolder } from './upload-folder.ts';
-import type { PreviewProblem, UploadedFile } from './upload-types.ts';
+import type { ArchiveInShort, PreviewProblem, UploadedFile } from './upload-types.ts';
 
 /** An upload as it is kept on disk, beside its files, until it has been imported or is given up. */
 export interface UploadSession {
@@ -26,15 +26,17 @@ export interface UploadSession {
   broken: Record<string, PreviewProblem>;
   /** what was passed over in archives */
   notes: string[];
+  /** what the files are together, where they are those of a region's archive */
+  archive: ArchiveInShort | null;
+  /** names of files that are to stay out of the import */
+  leaveOut: readonly string[];
   job: UploadJob | null;
 }
 
-/** The last import of an upload, and what was ordered beside the choices for its files. */
+/** The last import of an upload. */
 export interface UploadJob {
   id: string;
   dryRun: boolean;
-  /** names of files that stay out of it */
-  leaveOut: readonly string[];
   /** the region that it makes; absent where the upload is for one */
   name?: string;
 }

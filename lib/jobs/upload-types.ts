@@ -80,6 +80,20 @@ export interface LayerPreview {
   warnings: string[];
 }
 
+/** A region's archive among the files of an upload: it is imported whole, as it says itself. */
+export interface ArchiveInShort {
+  /** as the region was called */
+  name: string;
+  /** files of the archive that are read: the station list, layers, and the days of each import */
+  stations: number;
+  layers: number;
+  flows: number;
+  /** WaterML documents, which say the same days a second time: they are not read */
+  documents: number;
+  /** names of other files, which are no part of it: they are not read either */
+  unread: string[];
+}
+
 /** An upload that waits on the server for its import. */
 export interface UploadView {
   id: string;
@@ -90,6 +104,9 @@ export interface UploadView {
   files: UploadedFile[];
   /** what was passed over in archives */
   notes: string[];
-  /** its last import, which may be under way */
-  job: { id: string; state: JobState; dryRun: boolean } | null;
+  archive: ArchiveInShort | null;
+  /** names of files that are to stay out of the import */
+  leaveOut: readonly string[];
+  /** its last import, which may be under way, and the name of the region that it makes */
+  job: { id: string; state: JobState; dryRun: boolean; name?: string } | null;
 }

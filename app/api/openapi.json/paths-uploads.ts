@@ -36,7 +36,7 @@ export const UPLOAD_PATHS = {
     parameters: [UPLOAD],
     get: { summary: 'An upload that waits', responses: answers('the upload', json(reference('Upload'))) },
     patch: {
-      summary: 'Say how some of its files are to be read, and look at them anew',
+      summary: 'Say how some of its files are to be read, looking at them anew, and which stay out of the import',
       requestBody: { required: true, content: json(reference('UploadChange')) },
       responses: answers('these files in short', json(listOf('UploadedFile'))),
     },

@@ -28,6 +28,8 @@ interface Sight {
   stale: boolean;
   /** the control that was changed last: choices that cannot be read are its doing */
   changed: Control | null;
+  /** the file is a document, whose series are chosen as a whole */
+  document: boolean;
   /** where the file's stations come from; null where that is not known */
   station: Mapping['station']['from'] | null;
 }
@@ -49,10 +51,12 @@ export function sortOut(
   return { asked, others };
 }
 
-function controlOf(needs: Need | undefined, { stale, changed, station }: Sight): Control | null {
+function controlOf(needs: Need | undefined, { stale, changed, document, station }: Sight): Control | null {
   if (needs === 'mapping' && stale && changed) return changed;
   // codes that stand in the file are not answered by one code
   if (needs === 'station' && (station === null || station === 'column' || station === 'header')) return null;
+  // quantities that a column of a table tells apart are told apart by its rows
+  if (needs === 'quantity' && !document) return 'where';
   return (needs && CONTROL_OF[needs]) ?? null;
 }
 

@@ -11,9 +11,9 @@ export interface FirstRow {
 }
 
 /** Values shown of one line: a wide file has as many as it has stations. */
-const VALUES_OF_A_LINE = 12;
-/** Values shown in all. */
-const VALUES = 60;
+const VALUES_OF_A_LINE = 6;
+/** Values shown in all: those of some twenty lines. */
+const VALUES = 120;
 
 /** Lines in the order of the file, each with its values. A header row is no row. */
 export function firstRows({ header, preview, previewLines, understood }: Omit<Inspection, 'problems'>): FirstRow[] {
@@ -21,7 +21,7 @@ export function firstRows({ header, preview, previewLines, understood }: Omit<In
   for (const row of understood) byLine.set(row.row, [...(byLine.get(row.row) ?? []), row]);
   const isHeader = header !== null && preview[0]?.join('\t') === header.join('\t');
   const rows: FirstRow[] = [];
-  for (const [at, fields] of preview.entries()) {
+  for (const [at, fields] of previewLines ? preview.entries() : []) {
     if (at === 0 && isHeader) continue;
     const line = previewLines?.[at] ?? null;
     rows.push({ line, fields, values: line === null ? [] : (byLine.get(line) ?? []) });

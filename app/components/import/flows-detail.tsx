@@ -17,8 +17,9 @@ import { OtherQuantities } from './other-quantities.tsx';
 import { ProblemNote } from './problem-note.tsx';
 import { RareControls } from './rare-controls.tsx';
 import { SavedMappings } from './saved-mappings.tsx';
+import { SeriesChoice } from './series-choice.tsx';
 import type { FileSight } from './use-looks.ts';
-import { LAYOUT_WORDS, QUANTITY_WORDS, TEXT_LAYOUTS } from './words.ts';
+import { isDocument, LAYOUT_WORDS, QUANTITY_WORDS, TEXT_LAYOUTS } from './words.ts';
 
 interface Props {
   sight: FileSight;
@@ -38,7 +39,7 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
   const recognised = inspection?.mapping ?? null;
   const station = recognised && shownMapping(recognised, choices).station.from;
   const { asked, others } = recognised
-    ? sortOut(problems, { stale: sight.stale, changed, station })
+    ? sortOut(problems, { stale: sight.stale, changed, document: isDocument(recognised.layout), station })
     : { asked: {}, others: problems };
   const renewed = (edit: ChoicesEdit) => {
     setRound(round + 1);
@@ -70,6 +71,9 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
     <>
       {notes}
       <ToAnswer asked={asked} />
+      {asked.quantity && isDocument(mapping.layout) && (
+        <SeriesChoice series={inspection.others} onTake={(taken) => renewed({ mapping: taken })} />
+      )}
       <div className={styles.controls} key={`main ${round}`}>
         <MainControls {...controls} />
       </div>
@@ -85,13 +89,15 @@ export function FlowsDetail({ sight, choices, problems, region, change }: Props)
         flags={mapping.flags}
         onChange={(flags) => change({ mapping: { flags } })}
       />
-      <OtherQuantities
-        key={`also ${round}`}
-        others={inspection.others}
-        mapping={mapping}
-        asked={asked.also}
-        onChange={(also) => say('also', { mapping: { also } })}
-      />
+      {!(asked.quantity && isDocument(mapping.layout)) && (
+        <OtherQuantities
+          key={`also ${round}`}
+          others={inspection.others}
+          mapping={mapping}
+          asked={asked.also}
+          onChange={(also) => say('also', { mapping: { also } })}
+        />
+      )}
       <Facts facts={inspection.facts} />
       {isSaid && (
         <p>
@@ -116,8 +122,9 @@ function ToAnswer({ asked }: { asked: Asked }) {
   );
 }
 
-/** A file whose layout is not told: a person may say what it is. */
+/** A file whose layout is not told: a person may say what it is, unless it is a document, which says so itself. */
 function Unrecognised({ sight, choices, change }: Pick<Props, 'sight' | 'choices' | 'change'>) {
+  if (/^\s*[<{]/.test(sight.lines.join('\n'))) return <FirstLines lines={sight.lines} />;
   const layout = TEXT_LAYOUTS.find((one) => one === choices.mapping?.layout) ?? null;
   return (
     <>
@@ -136,9 +143,13 @@ function Unrecognised({ sight, choices, change }: Pick<Props, 'sight' | 'choices
           onChange={(quantity) => change({ mapping: { quantity: quantity ?? undefined } })}
         />
       </div>
-      {sight.lines.length > 0 && <pre className={styles.lines}>{sight.lines.join('\n')}</pre>}
+      <FirstLines lines={sight.lines} />
     </>
   );
+}
+
+function FirstLines({ lines }: { lines: readonly string[] }) {
+  return lines.length === 0 ? null : <pre className={styles.lines}>{lines.join('\n')}</pre>;
 }
 
 /** What the file says of its stations beside their days. */

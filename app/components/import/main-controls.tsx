@@ -88,8 +88,11 @@ const STATION_WORDS: Record<Mapping['station']['from'], string> = {
 function StationControl({ mapping, choices, asked, change }: ControlProps) {
   const { station } = mapping;
   const [code, setCode] = useState(choices.station ?? (station.from === 'given' ? station.code : ''));
+  /** a code is to be given; until one is, the file is read as before */
+  const [giving, setGiving] = useState(station.from === 'given');
   const own = true;
   const setFrom = (from: Mapping['station']['from'] | null) => {
+    setGiving(from === 'given');
     if (from === 'given') change('station', { own, ...(code ? { station: code } : {}), mapping: givenCode(code) });
     else if (from === 'column') change('station', { station: undefined, mapping: { station: undefined } });
     else if (from) change('station', { station: undefined, mapping: { station: { from } } });
@@ -106,12 +109,16 @@ function StationControl({ mapping, choices, asked, change }: ControlProps) {
         label="Station comes from"
         asked={asked.station}
         hint={station.from === 'column' ? 'Which column, its heading below says.' : undefined}
-        value={station.from}
+        value={giving ? 'given' : station.from}
         options={[...byContent.map((value) => ({ value, words: STATION_WORDS[value] })), ...possible]}
         onChange={setFrom}
       />
-      {(station.from === 'given' || asked.station) && (
-        <Field label="Code of the station" hint="As in the station list; leading zeros count.">
+      {(giving || asked.station) && (
+        <Field
+          label="Code of the station"
+          asked={giving && code.trim() === '' ? 'This has to be told.' : null}
+          hint="As in the station list; leading zeros count."
+        >
           {(ids) => (
             <input
               {...ids}

@@ -4,6 +4,7 @@ import type { UploadedFile } from '@/lib/jobs/upload-types';
 import { count } from '../format.ts';
 import { ErrorNote } from '../notes.tsx';
 import ui from '../ui.module.css';
+import { ArchiveNote } from './archive-note.tsx';
 import type { ChoicesEdit } from './choices-edit.ts';
 import { FileDetail } from './file-detail.tsx';
 import { FilePicker } from './file-drop.tsx';
@@ -19,18 +20,25 @@ interface Props {
   /** whether records stand that the files may be unlike */
   comparable: boolean;
   order: Order;
-  setOrder(order: Order): void;
+  setBy(by: string): void;
+  setName(name: string): void;
 }
 
 /** Every file of an upload as it is understood, before anything is imported. */
-export function MappingStep({ flow, region, comparable, order, setOrder }: Props) {
+export function MappingStep({ flow, region, comparable, order, setBy, setName }: Props) {
   const { upload, leftOut, refusals, state } = flow;
   const files = upload?.files ?? [];
   const [chosen, setChosen] = useState<string | null>(null);
   const selected = files.some(({ file }) => file === chosen) ? chosen : firstToSee(files, refusals);
   const [together, setTogether] = useState(true);
   const looks = useLooks({
-    ...{ id: upload?.id ?? null, files, setFiles: flow.setFiles, selected, onError: flow.fail },
+    ...{
+      id: upload?.archive ? null : (upload?.id ?? null),
+      files,
+      setFiles: flow.setFiles,
+      selected,
+      onError: flow.fail,
+    },
     onRegistry: () => void flow.refresh(),
   });
   // What is selected stays so, also when its question has been answered.
@@ -45,7 +53,6 @@ export function MappingStep({ flow, region, comparable, order, setOrder }: Props
     looks.change(edit, others);
   };
   const stands = files.map((file) => standsOf(file, leftOut.has(file.file), refusals[file.file]));
-  const taken = stands.filter((one) => one !== 'out').length;
   const open = stands.filter((one) => one === 'asks' || one === 'unreadable').length;
   const error = state.stage === 'mapping' ? state.error : null;
   return (
@@ -53,7 +60,7 @@ export function MappingStep({ flow, region, comparable, order, setOrder }: Props
       <header className={styles.stepHead}>
         <div role="status">
           <h2>{count(files.length, 'file')} to import</h2>
-          <p>{statusWords(open, looks.waiting)}</p>
+          <p>{upload?.archive ? 'Nothing has been imported yet.' : statusWords(open, looks.waiting)}</p>
         </div>
         <p className={styles.actions}>
           <FilePicker onFiles={(more) => void flow.send(more)} words="Add files…" />
@@ -63,23 +70,32 @@ export function MappingStep({ flow, region, comparable, order, setOrder }: Props
         </p>
       </header>
       {error && <ErrorNote>{error}</ErrorNote>}
-      <div className={styles.body}>
-        <FileList {...{ files, leftOut, refusals, selected }} onSelect={setChosen} onLeaveOut={flow.leaveOut} />
-        {current && (
-          <FileDetail
-            file={current.file}
-            sight={looks.preview}
-            choices={current.choices}
-            refusal={refusals[current.file]}
-            busy={looks.busy}
-            {...{ region, together, change }}
-            alike={alike.length}
-            onTogether={setTogether}
+      {upload?.archive ? (
+        <ArchiveNote archive={upload.archive} />
+      ) : (
+        <div className={styles.body}>
+          <FileList
+            {...{ files, leftOut, refusals, selected }}
+            onSelect={setChosen}
+            onLeaveOut={(file, out) => void flow.leaveOut(file, out)}
           />
-        )}
-      </div>
+          {current && (
+            <FileDetail
+              file={current.file}
+              sight={looks.preview}
+              choices={current.choices}
+              refusal={refusals[current.file]}
+              busy={looks.busy}
+              {...{ region, together, change }}
+              alike={alike.length}
+              onTogether={setTogether}
+            />
+          )}
+        </div>
+      )}
       <OrderBar
-        {...{ order, setOrder, comparable, taken }}
+        {...{ order, setBy, setName, comparable }}
+        taken={flow.taken}
         newRegion={region === null}
         open={open}
         onStart={() => void flow.start(order, comparable)}
@@ -101,9 +117,7 @@ function statusWords(open: number, waiting: number): string {
   return `This is how they are understood. Nothing has been imported yet.${looking}`;
 }
 
-interface OrderBarProps {
-  order: Order;
-  setOrder(order: Order): void;
+interface OrderBarProps extends Pick<Props, 'order' | 'setBy' | 'setName'> {
   newRegion: boolean;
   comparable: boolean;
   taken: number;
@@ -111,7 +125,7 @@ interface OrderBarProps {
   onStart(): void;
 }
 
-function OrderBar({ order, setOrder, newRegion, comparable, taken, open, onStart }: OrderBarProps) {
+function OrderBar({ order, setBy, setName, newRegion, comparable, taken, open, onStart }: OrderBarProps) {
   const submit = (event: FormEvent) => {
     event.preventDefault();
     onStart();
@@ -126,7 +140,7 @@ function OrderBar({ order, setOrder, newRegion, comparable, taken, open, onStart
             required
             maxLength={80}
             value={order.name}
-            onChange={(event) => setOrder({ ...order, name: event.target.value })}
+            onChange={(event) => setName(event.target.value)}
           />
         </label>
       )}
@@ -137,7 +151,7 @@ function OrderBar({ order, setOrder, newRegion, comparable, taken, open, onStart
           maxLength={80}
           autoComplete="name"
           value={order.by}
-          onChange={(event) => setOrder({ ...order, by: event.target.value })}
+          onChange={(event) => setBy(event.target.value)}
         />
       </label>
       <button type="submit" className={ui.primary} disabled={taken === 0 || open > 0}>

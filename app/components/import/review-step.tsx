@@ -12,21 +12,30 @@ import { RULE_WORDS } from './words.ts';
 
 interface Props {
   outcome: ImportOutcome;
+  /** how many files are to be imported */
+  files: number;
   onApply(rule: OverlapRule | undefined): void;
   onBack(): void;
 }
 
 /** What an import would do to the records that stand, and the choice of what becomes of unlike values. */
-export function ReviewStep({ outcome, onApply, onBack }: Props) {
+export function ReviewStep({ outcome, files: all, onApply, onBack }: Props) {
   const [rule, setRule] = useState<OverlapRule | null>(null);
   const files = comparedFiles(outcome);
   const sum = sumOf(files.map(({ revisions }) => revisions));
   const asks = sum.unlike > 0;
+  // An import that was held up by unlike values tells of the files that have them, and of no other.
+  const refused = outcome.problems.length > 0;
   return (
     <section className={styles.review} aria-label="What the import would do">
       <div role="status">
         <h2>What the import would do</h2>
-        <p>{reviewWords(sum)} Nothing has been changed yet.</p>
+        <p>
+          {reviewWords(sum)} Nothing has been changed yet.
+          {refused && all > files.length && (
+            <> Nothing stands against the {count(all - files.length, 'other file')}, which would come along.</>
+          )}
+        </p>
       </div>
       {files.length > 0 && <RevisionsTable files={files} />}
       {files.map(({ file, revisions }) => (
@@ -40,19 +49,21 @@ export function ReviewStep({ outcome, onApply, onBack }: Props) {
           disabled={asks && rule === null}
           onClick={() => onApply(asks ? (rule ?? undefined) : undefined)}
         >
-          Import {count(outcome.taken.length || files.length, 'file')}
+          Import {count(all, 'file')}
         </button>
         <button type="button" className={ui.button} onClick={onBack}>
           Back to the files
         </button>
         {asks && rule === null && <span className={ui.hint}>Choose first what becomes of the unlike values.</span>}
       </p>
-      <details className={styles.reports}>
-        <summary>Reports of the files</summary>
-        {outcome.taken.map((file) => (
-          <FileReport key={file.file} file={file} rejectedHref={null} />
-        ))}
-      </details>
+      {outcome.taken.length > 0 && (
+        <details className={styles.reports}>
+          <summary>Reports of the files</summary>
+          {outcome.taken.map((file) => (
+            <FileReport key={file.file} file={file} rejectedHref={null} />
+          ))}
+        </details>
+      )}
     </section>
   );
 }

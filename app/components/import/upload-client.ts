@@ -83,6 +83,10 @@ export const discardUpload = (id: string): Promise<unknown> => ask(uploadAddress
 export const lookAtFiles = (id: string, files: Record<string, FileChoices>): Promise<UploadedFile[]> =>
   ask(uploadAddress(id), body('PATCH', { files }));
 
+/** Says which files of an upload are to stay out of its import. */
+export const leaveOut = (id: string, files: readonly string[]): Promise<unknown> =>
+  ask(uploadAddress(id), body('PATCH', { leaveOut: files }));
+
 export const lookAtFile = (
   id: string,
   file: string,

@@ -26,6 +26,8 @@ interface Options {
   runningJob: string | null;
   /** an upload that waits, to go on with */
   openUpload: string | null;
+  /** called with the name that the region is to have, where the upload says it */
+  onOrdered(order: { name?: string }): void;
   /** called when files were taken */
   onTaken(): void;
 }
@@ -40,7 +42,7 @@ export interface Order {
 
 /** One import from chosen files to report: sending, looking, trying, and what became of it. The files stay on the server
  *  in between, and the address names them, so that the page may be closed and opened again. */
-export function useImport({ region, runningJob, openUpload, onTaken }: Options) {
+export function useImport({ region, runningJob, openUpload, onOrdered, onTaken }: Options) {
   const [state, setState] = useState<ImportState>(() =>
     openUpload
       ? { stage: 'opening' }
@@ -70,8 +72,10 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
       if (job.state === 'cancelled') {
         setState({ stage: view ? 'mapping' : 'choosing', error: null, cancelled: true });
       } else if (job.state === 'failed') {
-        setRefusals(Object.fromEntries(outcome.problems.map((problem) => [problem.file, problem])));
-        const toReview = outcome.problems.length > 0 && outcome.problems.every(asksForRule);
+        // What becomes of unlike values is chosen in the review: it holds nothing up among the files.
+        const refused = outcome.problems.filter((problem) => !asksForRule(problem));
+        setRefusals(Object.fromEntries(refused.map((problem) => [problem.file, problem])));
+        const toReview = outcome.problems.length > 0 && refused.length === 0;
         if (!view) setState({ stage: 'refused', outcome, error: job.error });
         else if (toReview) setState({ stage: 'review', outcome });
         else setState({ stage: 'mapping', error: lost });
@@ -101,6 +105,8 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
       if (gone) return;
       setToOpen(null);
       show(view);
+      setLeftOut(new Set(view.leaveOut));
+      onOrdered({ name: view.job?.name ?? view.archive?.name });
       if (!last || !view.job) setState({ stage: 'mapping', error: null });
       else if (isOver(last)) onOver(last, view.job.dryRun, view);
       else setState({ stage: 'working', jobId: last.id, dryRun: view.job.dryRun });
@@ -114,10 +120,21 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
     return () => {
       gone = true;
     };
-  }, [toOpen, show, onOver]);
+  }, [toOpen, show, onOver, onOrdered]);
+
+  const fail = (error: string) => setState((now) => (now.stage === 'mapping' ? { ...now, error } : now));
+
+  /** The stations that flows may name have changed: which files are to be looked at anew, the server knows. */
+  const refresh = async () => {
+    if (!upload) return;
+    const view = await client.fetchUpload(upload.id).catch(() => null);
+    if (view) setUpload(view);
+  };
 
   return {
     ...{ state, job, upload, setFiles, leftOut, refusals, madeRegion },
+    /** how many files are to be imported */
+    taken: numberTaken(upload, leftOut),
     /** sends files: those of an upload that waits are joined by them */
     async send(files: readonly File[]) {
       const address = upload ? client.moreFilesAddress(upload.id) : client.uploadsAddress(region);
@@ -127,7 +144,9 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
         setState((now) => (now.stage === 'sending' ? { stage: 'sending', sent, total: all } : now)),
       );
       try {
-        show(await sending.current.upload);
+        const view = await sending.current.upload;
+        show(view);
+        if (view.archive) onOrdered(view.archive);
         setState({ stage: 'mapping', error: null });
       } catch (error) {
         const cancelled = error instanceof client.UploadCancelled;
@@ -140,20 +159,24 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
       setToOpen(id);
     },
     cancelSending: () => sending.current?.cancel(),
-    leaveOut(file: string, out: boolean) {
-      setLeftOut((now) => new Set(out ? [...now, file] : [...now].filter((other) => other !== file)));
-    },
-    /** the stations that flows may name have changed: which files are to be looked at anew, the server knows */
-    async refresh() {
+    async leaveOut(file: string, out: boolean) {
+      const next = out ? [...leftOut, file] : [...leftOut].filter((other) => other !== file);
+      setLeftOut(new Set(next));
       if (!upload) return;
-      const view = await client.fetchUpload(upload.id).catch(() => null);
-      if (view) setUpload(view);
+      try {
+        await client.leaveOut(upload.id, next);
+        // flows may name other stations now
+        if (upload.files.some((one) => one.file === file && one.kind === 'registry')) await refresh();
+      } catch (error) {
+        fail(wordsOf(error));
+      }
     },
+    refresh,
     /** what an import said of these files is of no account once they are read otherwise */
     forgetRefusals(files: readonly string[]) {
       setRefusals((now) => Object.fromEntries(Object.entries(now).filter(([file]) => !files.includes(file))));
     },
-    fail: (error: string) => setState((now) => (now.stage === 'mapping' ? { ...now, error } : now)),
+    fail,
     /** starts the import, or a trial of it that changes nothing */
     async start({ by, name, rule }: Order, dryRun: boolean) {
       if (!upload) return;
@@ -185,6 +208,14 @@ export function useImport({ region, runningJob, openUpload, onTaken }: Options) 
     backToFiles: () => setState({ stage: 'mapping', error: null }),
     again: () => setState({ stage: 'choosing', error: null }),
   };
+}
+
+function numberTaken(upload: UploadView | null, leftOut: ReadonlySet<string>): number {
+  if (!upload) return 0;
+  const { archive, files } = upload;
+  return archive
+    ? archive.stations + archive.layers + archive.flows
+    : files.filter(({ file }) => !leftOut.has(file)).length;
 }
 
 const asksForRule = ({ problem }: ImportProblem): boolean => problem?.needs === 'revise';

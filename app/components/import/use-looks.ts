@@ -63,6 +63,12 @@ export function useLooks({ id, files, setFiles, selected, onRegistry, onError }:
     };
   }, [id, selected, asked, latest]);
 
+  // The selected file, too, is to be looked at anew when the server has forgotten its look.
+  const unseen = files.some(({ state, file }) => state === 'unseen' && file === selected);
+  useEffect(() => {
+    if (unseen) setAsked((count) => count + 1);
+  }, [unseen]);
+
   const waiting = files.filter(({ state, file }) => state === 'unseen' && file !== selected).length;
   /** counts the requests for the others that have come to an end */
   const [ended, setEnded] = useState(0);

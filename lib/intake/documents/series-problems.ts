@@ -1,3 +1,4 @@
+import { QUANTITIES } from '../../series/quantities.ts';
 import { IntakeError, type Unit } from '../types.ts';
 import { labelOf, type SeriesHead } from './series-head.ts';
 import type { SeriesSink } from './series-sink.ts';
@@ -35,12 +36,17 @@ export function nothingTaken(file: string, sink: SeriesSink): IntakeError | null
   const { others, main } = sink.wanted;
   const wanted = main === 'flow' ? 'daily flow' : `daily ${main.replace('-', ' ')}`;
   if (others.size > 0) {
-    const names = [...others.keys()];
+    // A series of a quantity that is kept, or of a unit that one of these may have, can be taken when a person says so.
+    const takeable = [...others.values()].some(({ quantity, unit }) => quantity !== null || unit !== null);
     return new IntakeError({
-      ...{ file, value: names.slice(0, 5).join('; ') },
-      message: `the document holds no series of ${wanted}`,
-      remedy: 'Get the series of discharge, or choose another quantity of those that it holds',
-      ...([...others.values()].some(({ quantity }) => quantity !== null) ? { needs: 'quantity' } : {}),
+      ...{ file, value: [...others.keys()].slice(0, 5).join('; ') },
+      message: takeable
+        ? `the document holds no series of ${wanted}`
+        : `the document holds no series of ${wanted}, and none of another quantity that is kept here`,
+      remedy: takeable
+        ? 'Get the series of discharge, or say which series is to be taken, and as what'
+        : `Get the series of discharge. What is kept: ${QUANTITIES.join(', ').replaceAll('-', ' ')}`,
+      ...(takeable ? { needs: 'quantity' } : {}),
     });
   }
   const why =

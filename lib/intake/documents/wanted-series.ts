@@ -1,4 +1,4 @@
-import { type Quantity, UNITS_OF, type Unit } from '../../series/quantities.ts';
+import { QUANTITIES, type Quantity, UNITS_OF, type Unit } from '../../series/quantities.ts';
 import { type AlsoCandidate, type InspectOptions, IntakeError } from '../types.ts';
 import { labelOf, quantityOf, type SeriesHead, unitOfHead } from './series-head.ts';
 
@@ -47,7 +47,7 @@ export class WantedSeries {
   choose(head: SeriesHead): Wanted | null {
     const label = labelOf(head);
     const quantity = quantityOf(head);
-    const unnamed = head.property === '' && head.propertyCode === '';
+    const unnamed = isUnnamed(head);
     for (const { quantity: wanted, unit, series, main, said } of this.asked) {
       const isOf = quantity === wanted || (said && unnamed && unitOfHead(head, wanted) !== null);
       const fits = series === undefined ? isOf && isDayValue(head, wanted) : series === label;
@@ -60,7 +60,7 @@ export class WantedSeries {
   private offer(label: string, quantity: Quantity | null, head: SeriesHead): void {
     if (this.others.has(label) || this.others.size >= MOST_OTHERS) return;
     this.others.set(label, {
-      ...{ label, samples: [], quantity, unit: quantity === null ? null : unitOfHead(head, quantity) },
+      ...{ label, samples: [], quantity, unit: quantity === null ? unitUnnamed(head) : unitOfHead(head, quantity) },
       ...{ value: { column: 'value' }, flag: { column: 'qualifier' }, where: { column: SERIES_COLUMN, equals: label } },
     });
   }
@@ -87,6 +87,14 @@ export class WantedSeries {
     });
   }
 }
+
+/** The unit of a series whose property the document does not say, where it may be of a quantity that is kept. */
+function unitUnnamed(head: SeriesHead): Unit | null {
+  if (!isUnnamed(head)) return null;
+  return QUANTITIES.map((quantity) => unitOfHead(head, quantity)).find((unit) => unit !== null) ?? null;
+}
+
+const isUnnamed = ({ property, propertyCode }: SeriesHead): boolean => property === '' && propertyCode === '';
 
 /** Flows and levels are wanted as means of the day, depths as its sums. */
 function isDayValue({ statistic, statisticText }: SeriesHead, quantity: Quantity): boolean {

@@ -13,7 +13,7 @@ import type { PlanContext } from './plan-columns.ts';
 import { centuryProblem, quantityProblem, stationProblem, thousandsProblem } from './plan-problems.ts';
 import { columnTexts, mostFrequent, signsOf } from './recognised-mapping.ts';
 import { type SampleLine, type SampleRow, splitSample, splitterFor } from './sample.ts';
-import type { TablePlan } from './table-plan.ts';
+import { SHOWN_ROWS, type TablePlan } from './table-plan.ts';
 import { mixedUnits } from './unit-column.ts';
 
 /** Rows of the sample whose values are asked for their signs. */
@@ -70,7 +70,7 @@ export function planCalendar(
   const shortYear = mapping.firstYear === undefined ? shortYearIn(data, days.year) : null;
   const mixed = mixedUnits(file, data, places, header, null);
   const unnamed = station.from === 'lines-above' && stationAbove(above.facts, options.knownStations) === null;
-  const shown = rows.slice(Math.max(0, firstRow - 1), firstRow + 7);
+  const shown = rows.slice(Math.max(0, firstRow - 1), firstRow + SHOWN_ROWS);
   return {
     ...{ file, mapping, splitter, lineEnd, marked, header, places, wide: null },
     ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),

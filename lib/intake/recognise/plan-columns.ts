@@ -12,7 +12,7 @@ import { centuryProblem, problemsOf, stationProblem, thousandsProblem } from './
 import { columnTexts, mappingOf, mostFrequent, signsOf } from './recognised-mapping.ts';
 import { type SampleLine, type SampleRow, splitSample, splitterFor, usualCount } from './sample.ts';
 import { withoutSign } from './stated-facts.ts';
-import type { TablePlan } from './table-plan.ts';
+import { SHOWN_ROWS, type TablePlan } from './table-plan.ts';
 import { mixedUnits } from './unit-column.ts';
 import { unreadColumns } from './wide-columns.ts';
 
@@ -63,7 +63,7 @@ export function planColumns(body: readonly SampleLine[], delimiter: string | nul
 
   const required = Math.max(...places.date, places.station, places.value, places.where) + 1;
   const dateTexts = places.date.length === 1 ? columnTexts(data, places.date[0]) : [];
-  const shown = rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + 7);
+  const shown = rows.slice(Math.max(0, start.firstRow - 1), start.firstRow + SHOWN_ROWS);
   return {
     ...{ file, mapping, splitter, lineEnd, marked, header, places, wide, fieldCount, problems },
     ...(context.sign === null ? {} : { comment: new TextEncoder().encode(context.sign) }),

@@ -8,7 +8,7 @@ import type { PlanContext } from './plan-columns.ts';
 import { stationProblem } from './plan-problems.ts';
 import { stationOf } from './recognised-mapping.ts';
 import { type SampleLine, splitSample } from './sample.ts';
-import type { TablePlan } from './table-plan.ts';
+import { SHOWN_ROWS, type TablePlan } from './table-plan.ts';
 
 const words = ([start, end]: Slice): string => `characters ${start + 1}–${end}`;
 
@@ -70,8 +70,8 @@ export function planFixedWidth(lines: readonly SampleLine[], context: PlanContex
     unitText: '',
     orderOpen: false,
     repeatsHeader: false,
-    preview: splitSample(body.slice(0, 8), new FixedWidthLines(shown, lineEnd)).map(({ fields }) => fields),
-    previewLines: body.slice(0, 8).map(({ line }) => line),
+    preview: splitSample(body.slice(0, SHOWN_ROWS), new FixedWidthLines(shown, lineEnd)).map(({ fields }) => fields),
+    previewLines: body.slice(0, SHOWN_ROWS).map(({ line }) => line),
     valueCandidates: (guess?.values ?? []).map((slice) => candidate(slice, body)),
     others: mapping.value === null ? [] : otherSlices(guess?.values ?? [], mapping.value, body),
     warnings: [],

@@ -4,6 +4,9 @@ import type { AlsoCandidate, IntakeError, Mapping, StatedFacts, ValueCandidate }
 import type { WideColumn } from './assign-columns.ts';
 import type { CalendarPlan } from './calendar-plan.ts';
 
+/** Rows that a person is shown as they stand in the file, beside its header. */
+export const SHOWN_ROWS = 20;
+
 /** How a file is going to be read: the mapping, worked out to positions. */
 export interface TablePlan {
   file: string;

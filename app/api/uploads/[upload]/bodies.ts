@@ -8,7 +8,9 @@ export const uploadChange = z.strictObject({
   files: z
     .record(z.string(), fileChoices)
     .refine((files) => Object.keys(files).length <= MOST_AT_ONCE, `takes at most ${MOST_AT_ONCE} files at once`)
+    .default({})
     .describe('by file name; each is looked at anew'),
+  leaveOut: z.array(z.string()).optional().describe('names of all files that are to stay out of the import'),
 });
 
 export const previewOrder = z.strictObject({

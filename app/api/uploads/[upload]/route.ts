@@ -5,7 +5,7 @@ import { idleSessionOf, present, type UploadParams } from '@/app/api/_http/sessi
 import { viewUpload } from '@/lib/jobs/open-upload';
 import { discardSession } from '@/lib/jobs/upload-session';
 import { inShort } from '@/lib/jobs/upload-types';
-import { lookedAt } from '../look';
+import { leftOut, lookedAt } from '../look';
 import { uploadChange } from './bodies';
 
 /** An upload that waits: its files in short, and its last import. */
@@ -14,10 +14,11 @@ export const GET = route<UploadParams>(async (request, { upload }) => {
   return jsonAnswer(present(await viewUpload(upload)));
 });
 
-/** Says how some of its files are to be read, and answers what they look like then. */
+/** Says how some of its files are to be read, and which stay out; answers what the former look like then. */
 export const PATCH = route<UploadParams>(async (request, params) => {
   const { id } = await idleSessionOf(params);
-  const { files } = await readJson(request, uploadChange);
+  const { files, leaveOut } = await readJson(request, uploadChange);
+  if (leaveOut) await leftOut(id, leaveOut);
   return jsonAnswer((await lookedAt(id, files)).map(inShort));
 });
 

@@ -10,6 +10,7 @@ import { listJobs } from '@/lib/store/jobs';
 import { type PageQuery, pageRequest } from '../page-request';
 import { ImportHistory } from './import-history';
 import styles from './import-page.module.css';
+import { TakeAlong } from './take-along';
 
 export const metadata: Metadata = { title: 'Import' };
 
@@ -83,6 +84,7 @@ export default async function ImportPage({ params, searchParams }: Props) {
             revisions: entry.revisions,
           }))}
         />
+        {imports.length > 0 && <TakeAlong slug={region.slug} />}
       </main>
     </>
   );

@@ -6,7 +6,7 @@ const problem = (change: Partial<PreviewProblem['problem']>): PreviewProblem => 
   message: 'words for the batch command',
   problem: { file: 'a.csv', message: 'something is open', remedy: 'Say it', ...change },
 });
-const SIGHT = { stale: false, changed: null, station: 'file-name' } as const;
+const SIGHT = { stale: false, changed: null, document: false, station: 'file-name' } as const;
 
 test('sortOut puts each problem beside the control that answers it, with row and value', () => {
   const { asked, others } = sortOut(
@@ -28,6 +28,12 @@ test('sortOut puts each problem beside the control that answers it, with row and
 test('sortOut leaves to others what no control answers: an area, codes, a fault in the file', () => {
   const given = [problem({ needs: 'area' }), problem({ needs: 'codes' }), problem({ row: 3 })];
   expect(sortOut(given, SIGHT)).toEqual({ asked: {}, others: given });
+});
+
+test('several quantities are told apart by the rows of a table, and by the series of a document', () => {
+  const given = [problem({ needs: 'quantity' })];
+  expect(Object.keys(sortOut(given, SIGHT).asked)).toEqual(['where']);
+  expect(Object.keys(sortOut(given, { ...SIGHT, document: true }).asked)).toEqual(['quantity']);
 });
 
 test('an unknown station is asked for where the file names none, and not where its codes stand in it', () => {

@@ -35,17 +35,17 @@ test('firstRows shows of lines beyond those shown only what is wrong, and of a d
     inspection({ preview: [['1']], previewLines: [1], understood: [value(1), value(2), bad] }),
   );
   expect([shown.fields, beyond]).toEqual([['1'], [{ line: 9, fields: null, values: [bad] }]]);
-  const rows = firstRows(inspection({ understood: [value(1), value(2)] }));
+  const rows = firstRows(inspection({ preview: [['A', '2001-01-01']], understood: [value(1), value(2)] }));
   expect(rows.map(({ line, fields, values }) => [line, fields, values.length])).toEqual([
     [1, null, 1],
     [2, null, 1],
   ]);
 });
 
-test('firstRows keeps to what fits on a screen: twelve values of a line, sixty in all', () => {
-  const understood = Array.from({ length: 20 }, (_, line) =>
+test('firstRows keeps to what fits on a screen: six values of a line, those of twenty lines in all', () => {
+  const understood = Array.from({ length: 30 }, (_, line) =>
     Array.from({ length: 31 }, (_day, day) => value(line + 1, String(day))),
   ).flat();
   const rows = firstRows(inspection({ understood }));
-  expect(rows.map(({ values }) => values.length)).toEqual([12, 12, 12, 12, 12]);
+  expect(rows.map(({ values }) => values.length)).toEqual(Array.from({ length: 20 }, () => 6));
 });
