@@ -2,7 +2,7 @@ import { createHash, randomUUID } from 'node:crypto';
 import { stationReport } from '../lib/intake/report.ts';
 import type { ImportReport, Mapping, StagedPart, StationReport } from '../lib/intake/types.ts';
 import { NO_ROW } from '../lib/series/day-codes.ts';
-import type { Quantity, Unit } from '../lib/series/quantities.ts';
+import { type Quantity, quantityWords, type Unit } from '../lib/series/quantities.ts';
 import { applyStaging } from '../lib/store/apply-staging.ts';
 import { blobOfValues } from '../lib/store/blobs.ts';
 import { setLink } from '../lib/store/links.ts';
@@ -81,8 +81,7 @@ function stageFlows(staging: Staging, region: SeedRegion, onProgress: (share: nu
   function* flows(): Generator<SeedRecord> {
     for (const record of region.records()) {
       for (const other of record.beside) {
-        const name =
-          other.quantity === 'flow' ? 'invented abstraction' : `invented ${other.quantity.replace('-', ' ')}`;
+        const name = other.quantity === 'flow' ? 'invented abstraction' : `invented ${quantityWords(other.quantity)}`;
         beside.set(name, [...(beside.get(name) ?? []), other]);
       }
       if (record.marks.length > 0) marked.push({ code: record.code, marks: record.marks });
@@ -116,7 +115,7 @@ function stageTable(
   const report: ImportReport = {
     ...{ file: fileName, layout: mapping.layout, unit, mapping, rows, accepted: rows, sha256 },
     ...{ rejectedTotal: 0, rejectedFile: null, rejected: [], stations },
-    warnings: [`Made by a generator: no ${quantity.replace('-', ' ')} in this region was ever measured.`],
+    warnings: [`Made by a generator: no ${quantityWords(quantity)} in this region was ever measured.`],
   };
   staging.describeFile(file, { sha256, layout: mapping.layout, unit, mapping, rows, accepted: rows, report });
 }

@@ -1,6 +1,7 @@
 import type { ImportReport, Quantity } from '../intake/types.ts';
 import type { ImportOutcome, TakenFile } from '../jobs/import-types.ts';
 import { rejectedPath } from '../jobs/rejected-rows.ts';
+import { quantityWords } from '../series/quantities.ts';
 import type { Revisions } from '../store/revisions.ts';
 
 /** Rejected rows shown in words; all of them are in the file that the report names. */
@@ -73,8 +74,7 @@ export function revisionLines({ filled, equal, unlike, revised, extended, statio
 const plain = (value: number): string => String(Number(value.toPrecision(10)));
 
 /** Names a record that is not of flow. */
-const besideFlow = (quantity: Quantity = 'flow'): string =>
-  quantity === 'flow' ? '' : `, ${quantity.replace('-', ' ')}`;
+const besideFlow = (quantity: Quantity = 'flow'): string => (quantity === 'flow' ? '' : `, ${quantityWords(quantity)}`);
 
 function flowLines(report: ImportReport): string[] {
   const { layout, unit, rows, accepted, rejectedTotal } = report;

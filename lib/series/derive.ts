@@ -1,4 +1,5 @@
 import type { DailySeries } from './daily-series.ts';
+import { quantityWords } from './quantities.ts';
 import type { DerivedRecipe } from './station-history.ts';
 import { missingMask } from './usable-flow.ts';
 
@@ -76,7 +77,7 @@ export function deriveText({ quantity, terms }: Pick<DerivedRecipe, 'quantity' |
     const size = Math.abs(factor) === 1 ? '' : `${Math.abs(factor)} × `;
     return `${sign}${size}${code}${lagText(lagDays)}`;
   });
-  return `${quantity.replace('-', ' ')}: ${words.join('')}`;
+  return `${quantityWords(quantity)}: ${words.join('')}`;
 }
 
 function lagText(lagDays: number): string {

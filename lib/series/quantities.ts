@@ -4,6 +4,9 @@ import { FLOW_UNITS, type FlowUnit, toM3s } from './flow-units.ts';
 export const QUANTITIES = ['flow', 'stage', 'rainfall', 'potential-evaporation'] as const;
 export type Quantity = (typeof QUANTITIES)[number];
 
+/** A quantity as a text names it. Example: 'potential-evaporation' → 'potential evaporation' */
+export const quantityWords = (quantity: Quantity): string => quantity.replace('-', ' ');
+
 /** Units of the quantities beside flow: levels, and depths of a day. */
 const STAGE_UNITS = ['m', 'cm', 'mm', 'ft'] as const;
 const DEPTH_UNITS = ['mm', 'in'] as const;

@@ -3,7 +3,7 @@ import { useId } from 'react';
 import { FormField } from '@/app/components/form-field';
 import ui from '@/app/components/ui.module.css';
 import { deriveText } from '@/lib/series/derive';
-import { QUANTITIES, type Quantity } from '@/lib/series/quantities';
+import { QUANTITIES, type Quantity, quantityWords } from '@/lib/series/quantities';
 import { newTerm, offered, type RecipeDraft, readRecipe, type StationChoice, type TermDraft } from './recipe-draft.ts';
 import styles from './station-form.module.css';
 
@@ -40,7 +40,7 @@ export function RecipeFields({ draft, stations, problems, onChange }: Props) {
             >
               {QUANTITIES.map((quantity) => (
                 <option key={quantity} value={quantity}>
-                  {quantity.replace('-', ' ')}
+                  {quantityWords(quantity)}
                 </option>
               ))}
             </select>

@@ -7,6 +7,7 @@ import { type StationParams, stationOf } from '@/app/api/_http/station';
 import { isoDate, parseIsoDate } from '@/lib/calendar/day';
 import { daysCsv } from '@/lib/export/days-csv';
 import { jsonText } from '@/lib/export/json';
+import { quantityWords } from '@/lib/series/quantities';
 import { stationDays } from '@/lib/store/station-days';
 import { daysParameters } from './parameters';
 
@@ -25,7 +26,7 @@ export const GET = route<StationParams>(async (request, params) => {
     throw new Problem('bad-parameter', `${first} to ${last} is more than 100 years: ask for them in two stretches.`);
   }
   const days = stationDays({ stationId: id, quantity, first: from, last: to });
-  if (!days) throw new Problem('not-found', `${code} has no daily ${quantity.replace('-', ' ')}.`);
+  if (!days) throw new Problem('not-found', `${code} has no daily ${quantityWords(quantity)}.`);
   const tag = `${days.hash}-${first}-${last}-${quantity}-${format}`;
   const headers = format === 'csv' ? attachment(`${region.slug}-${code}-${quantity}-${first}-${last}.csv`) : undefined;
   return taggedAnswer(request, { tag, type: format, headers }, () => {
