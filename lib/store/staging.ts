@@ -82,16 +82,7 @@ export function stagingPath(jobId: string, path = databasePath()): string {
 export function createStaging(jobId: string, path = databasePath()): Staging {
   const file = stagingPath(jobId, path);
   discardStaging(jobId, path);
-  // A connection's own file stays open, and locked, until its last statement is collected; an attached one closes when
-  // it is detached.
-  const connection = new Database(':memory:');
-  connection.prepare('ATTACH DATABASE ? AS staging').run([file]);
-  // It is thrown away whole when anything fails: no journal. The lock, held to the end, tells that its maker lives.
-  for (const pragma of ['locking_mode=EXCLUSIVE', 'journal_mode=OFF', 'synchronous=OFF']) {
-    connection.exec(`PRAGMA staging.${pragma}`);
-  }
-  connection.exec('BEGIN EXCLUSIVE');
-  connection.exec(TABLES);
+  const connection = newDatabase(file);
   const insertFile = connection.prepare('INSERT INTO file (kind, fileName) VALUES (?, ?)');
   const insertPart = connection.prepare(
     `INSERT INTO part (file, code, quantity, firstDay, days, unit, hash, valueCount, firstValueDay, lastValueDay,
@@ -158,6 +149,21 @@ export function createStaging(jobId: string, path = databasePath()): Staging {
       discardStaging(jobId, path);
     },
   };
+}
+
+/** An empty staging database, attached as `staging` and locked, in a transaction that lasts until it is sealed. */
+function newDatabase(file: string): Database.Database {
+  // A connection's own file stays open, and locked, until its last statement is collected; an attached one closes when
+  // it is detached.
+  const connection = new Database(':memory:');
+  connection.prepare('ATTACH DATABASE ? AS staging').run([file]);
+  // It is thrown away whole when anything fails: no journal. The lock, held to the end, tells that its maker lives.
+  for (const pragma of ['locking_mode=EXCLUSIVE', 'journal_mode=OFF', 'synchronous=OFF']) {
+    connection.exec(`PRAGMA staging.${pragma}`);
+  }
+  connection.exec('BEGIN EXCLUSIVE');
+  connection.exec(TABLES);
+  return connection;
 }
 
 /** Removes a job's staging database, if there is one. What was staged is gone; the main database knows nothing of it. */
