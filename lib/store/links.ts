@@ -34,30 +34,50 @@ export async function listLinks(regionId: number, path = databasePath()): Promis
  *  @throws StoreError 'not-found' for a code the region does not have, 'bad-input' for a link that would let water run in
  *          a circle, or an unknown source */
 export async function setLink(regionId: number, link: LinkInput, path = databasePath()): Promise<LinkRow> {
-  const { upstream, downstream, source } = link;
-  if (!LINK_SOURCES.includes(source)) {
-    throw new StoreError('bad-input', `A link comes from ${LINK_SOURCES.join(', ')}, not from "${source}".`);
+  const [set] = await setLinks(regionId, [link], path);
+  return set;
+}
+
+/** Says of several pairs that one station lies below the other: all of them or none.
+ *  @returns in the order given
+ *  @throws as setLink */
+export async function setLinks(
+  regionId: number,
+  links: readonly LinkInput[],
+  path = databasePath(),
+): Promise<LinkRow[]> {
+  for (const { upstream, downstream, source } of links) {
+    if (!LINK_SOURCES.includes(source)) {
+      throw new StoreError('bad-input', `A link comes from ${LINK_SOURCES.join(', ')}, not from "${source}".`);
+    }
+    if (upstream === downstream) throw new StoreError('bad-input', `Station "${upstream}" cannot lie below itself.`);
   }
-  if (upstream === downstream) throw new StoreError('bad-input', `Station "${upstream}" cannot lie below itself.`);
   const connection = sharedConnection(path);
   const write = () => {
-    const [upperId, lowerId] = [upstream, downstream].map((code) => idOf(connection, regionId, code));
-    const way = wayDown(connection, regionId, downstream, upstream);
-    if (way) {
+    const set = links.map((link) => ({ id: put(connection, regionId, link), ...link }));
+    const below = stationsBelow(connection, regionId);
+    for (const { upstream, downstream } of links) {
+      const way = wayDown(below, downstream, upstream);
+      if (!way) continue;
       throw new StoreError(
         'bad-input',
         `Water would run in a circle: ${[upstream, ...way].join(' → ')}. Take one of these links away first.`,
       );
     }
-    change(
-      connection,
-      `INSERT INTO Link (regionId, upstreamId, downstreamId, source) VALUES (?, ?, ?, ?)
-       ON CONFLICT (upstreamId, downstreamId) DO UPDATE SET source = excluded.source`,
-    ).run([regionId, upperId, lowerId, source]);
-    const find = rows(connection, 'SELECT id FROM Link WHERE upstreamId = ? AND downstreamId = ?');
-    return (find.get([upperId, lowerId]) as [number])[0];
+    return set;
   };
-  return { id: await whenFree(() => immediately(connection, write)), ...link };
+  return whenFree(() => immediately(connection, write));
+}
+
+function put(connection: Connection, regionId: number, { upstream, downstream, source }: LinkInput): number {
+  const [upperId, lowerId] = [upstream, downstream].map((code) => idOf(connection, regionId, code));
+  change(
+    connection,
+    `INSERT INTO Link (regionId, upstreamId, downstreamId, source) VALUES (?, ?, ?, ?)
+     ON CONFLICT (upstreamId, downstreamId) DO UPDATE SET source = excluded.source`,
+  ).run([regionId, upperId, lowerId, source]);
+  const find = rows(connection, 'SELECT id FROM Link WHERE upstreamId = ? AND downstreamId = ?');
+  return (find.get([upperId, lowerId]) as [number])[0];
 }
 
 /** Takes a link away. @returns false when the region has no such link */
@@ -74,12 +94,17 @@ function idOf(connection: Connection, regionId: number, code: string): number {
   return found[0];
 }
 
-/** The stations by which water comes from one to another, both included; null when it does not. */
-function wayDown(connection: Connection, regionId: number, from: string, to: string): string[] | null {
+/** The stations next below each station. */
+function stationsBelow(connection: Connection, regionId: number): Map<string, string[]> {
   const below = new Map<string, string[]>();
   for (const [, upper, lower] of rows(connection, LIST).all([regionId]) as [number, string, string, string][]) {
     below.set(upper, [...(below.get(upper) ?? []), lower]);
   }
+  return below;
+}
+
+/** The stations by which water comes from one to another, both included; null when it does not. */
+function wayDown(below: ReadonlyMap<string, string[]>, from: string, to: string): string[] | null {
   const cameFrom = new Map<string, string | null>([[from, null]]);
   const queue = [from];
   for (const at of queue) {

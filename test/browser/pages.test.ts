@@ -17,6 +17,12 @@ const PAGES: [string, () => string][] = [
   ['map and ranking', () => `/regions/${region}`],
   ['curves', () => `/regions/${region}/curves`],
   ['station', () => `/regions/${region}/stations/${encodeURIComponent(station)}`],
+  ['records: years', () => `/regions/${region}/records`],
+  ['records: findings', () => `/regions/${region}/records?show=findings`],
+  ['records: common period', () => `/regions/${region}/records?show=periods`],
+  ['edit a station', () => `/regions/${region}/stations/${encodeURIComponent(station)}/edit`],
+  ['links between stations', () => `/regions/${region}/links`],
+  ['derive a station', () => `/regions/${region}/derive`],
   ['import', () => `/regions/${region}/import`],
 ];
 
@@ -37,6 +43,13 @@ describe.each(PAGES)('the page %s', (_, pathOf) => {
     await hydrated(page);
     expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(390);
   });
+});
+
+test('the map page is as tall as the window, and only its list scrolls', async () => {
+  const page = await newPage(`/regions/${region}`);
+  await hydrated(page);
+  await page.getByRole('row').nth(5).waitFor();
+  expect(await page.evaluate(() => document.documentElement.scrollHeight)).toBe(900);
 });
 
 test('the map page loads at most 300 kB of compressed script before anyone touches it', async () => {

@@ -87,12 +87,29 @@ test('all findings of a kind at a station are accepted at once', async () => {
   const jumps = (await findings()).filter(({ kind }) => kind === 'jump');
   expect(jumps.length).toBeGreaterThan(1);
   const page = await open('?show=findings&kind=jump');
+  const asked: string[] = [];
+  page.on('request', (request) => {
+    if (request.method() === 'POST') asked.push(new URL(request.url()).pathname);
+  });
   await page.getByRole('button', { name: `Accept all ${jumps.length}: jump from day to day` }).click();
   await page.getByRole('dialog').getByLabel('Reason').fill('cloudbursts');
   await page.getByRole('dialog').getByRole('button', { name: 'Accept' }).click();
   await page.getByText(new RegExp(`${jumps.length} accepted`)).waitFor();
   expect((await findings()).filter(({ state }) => state === 'accepted').length).toBe(jumps.length);
   expect(await flagsOf('A1', JUMPS[0])).toBe(0);
+  expect(asked, 'all in one request').toEqual([`/api/regions/${slug}/stations/A1/marks`]);
+});
+
+test('a finding has a link of its own, from the year’s panel to its place in the list', async () => {
+  const page = await open(`?station=A1&year=${new Date(FLAT[0]).getUTCFullYear()}`);
+  await page
+    .getByRole('region', { name: /^Lom at the weir/ })
+    .getByRole('link', { name: 'Flat run' })
+    .click();
+  const led = page.locator('li[aria-current]');
+  await led.getByText('Flat run', { exact: true }).waitFor();
+  expect(new URL(page.url()).searchParams.get('finding')).toBe(`flat:${FLAT[0]}`);
+  expect(await led.getByRole('link', { name: FLAT.join(' to ') }).count()).toBe(1);
 });
 
 test('days chosen freely are noted, then rejected, from the year’s panel; the chart counts them', async () => {

@@ -3,6 +3,8 @@ import { beforeAll, expect, test } from 'vitest';
 import { layOutChart, rowY, yearX } from '../../app/regions/[region]/records/_chart/chart-layout.ts';
 import { type Sort, sortStations } from '../../app/regions/[region]/records/_chart/sort-stations.ts';
 import { yearCell } from '../../app/regions/[region]/records/_chart/year-cell.ts';
+import { parseIsoDate } from '../../lib/calendar/day.ts';
+import { lowFlowYearOfDay } from '../../lib/calendar/low-flow-year.ts';
 import type { RegionRecords } from '../../lib/jobs/records-types.ts';
 import { deleteRegion, demoRegion, fetchJson, newRegion } from './demo-region.ts';
 import { accessibilityProblems, hydrated, newPage } from './harness.ts';
@@ -16,7 +18,7 @@ beforeAll(async () => {
   records = (await fetchJson(`/api/regions/${slug}/records`)) as RegionRecords;
 });
 
-const chart = (page: Page) => page.getByRole('application', { name: /^Chart of \d+ stations/ });
+const chart = (page: Page) => page.getByRole('application', { name: /^Chart of \d+ stations?/ });
 const readout = (page: Page) => page.getByTestId('year-readout');
 
 async function recordsPage(query = '', options = {}, region = slug) {
@@ -74,6 +76,22 @@ test('the pointer reads a year’s counts and why it does not count, and a click
   await page.getByRole('heading', { level: 2, name: new RegExp(`^${literally(name)}, ${year}`) }).waitFor();
   const { searchParams } = new URL(page.url());
   expect([searchParams.get('station'), searchParams.get('year')]).toEqual([code, String(year)]);
+});
+
+test('a dated change is named in the readout of its year', async () => {
+  const { basis, stations } = records;
+  const [one] = stations.filter(({ changes }) => changes.length > 0);
+  const { code, name, changes } = one;
+  const year = lowFlowYearOfDay(parseIsoDate(changes[0].date), basis.yearStart);
+  const page = await chartPage(`?q=${code}`);
+  await expect.poll(() => chart(page).getAttribute('aria-label')).toContain('Chart of 1 station by');
+  const width = await chart(page).evaluate((element) => element.clientWidth);
+  const layout = layOutChart(width, 1, records.firstYear ?? 0, records.lastYear ?? 0);
+  const none = { left: 0, top: 0 };
+  const position = { x: yearX(layout, year, none) + layout.cell / 2, y: rowY(layout, 0, none) + layout.rowHeight / 2 };
+  await chart(page).hover({ position });
+  await expect.poll(() => readout(page).textContent()).toContain(`${changes[0].date}, ${changes[0].kind}`);
+  expect(await readout(page).textContent()).toContain(name);
 });
 
 test('by keyboard alone: from the chart to a year, along its days, and back', async () => {

@@ -20,9 +20,13 @@ export const KEPT_PATHS = {
     parameters: [REGION],
     get: { summary: 'Which station lies below which', responses: answers('the links', json(listOf('Link'))) },
     post: {
-      summary: 'Say that one station lies below another',
+      summary: 'Say that one station lies below another, or that of several pairs, all of them or none',
       requestBody: { required: true, content: json(reference('NewLink')) },
-      responses: answers('the link', json(reference('Link')), '201'),
+      responses: answers(
+        'the link; where links were given, an object with them',
+        json({ anyOf: [reference('Link'), { type: 'object', properties: { links: listOf('Link') } }] }),
+        '201',
+      ),
     },
   },
   '/api/regions/{region}/links/{link}': {

@@ -11,7 +11,7 @@ import { JOB_STATES } from '@/lib/store/jobs';
 import { MARK_KINDS } from '@/lib/store/marks-on-flags';
 import { checkOrder } from '../regions/[region]/checks/bodies';
 import { fileChoices, importChoices } from '../regions/[region]/imports/bodies';
-import { link } from '../regions/[region]/links/bodies';
+import { link, newLinks } from '../regions/[region]/links/bodies';
 import { suggestionAnswer } from '../regions/[region]/links/suggested/bodies';
 import { mappingToKeep } from '../regions/[region]/mappings/bodies';
 import { newMark } from '../regions/[region]/stations/[code]/marks/bodies';
@@ -97,7 +97,7 @@ export const SCHEMAS = {
   ImportChoices: importChoices,
   MappingToKeep: mappingToKeep,
   SavedMapping: mappingToKeep.extend({ id: z.int(), createdAt: z.string() }),
-  NewLink: link,
+  NewLink: newLinks,
   Link: link.extend({ id: z.int() }),
   Upload: z.object({
     id: z.string(),

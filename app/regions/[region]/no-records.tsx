@@ -8,8 +8,9 @@ export function NoRecords({ slug, name }: { slug: string; name: string }) {
   return (
     <Empty title={`${name} has no stations yet`}>
       <p>
-        Bring daily mean flows as text files, one for all stations or one each. A registry with codes, names,
-        coordinates and drainage areas puts the stations on the map; rivers and catchments as GeoJSON draw the ground.
+        Bring daily mean flows as text files, workbooks or WaterML, one for all stations or one each, packed or not. A
+        registry with codes, names, coordinates and drainage areas puts the stations on the map; rivers and catchments
+        as GeoJSON draw the ground.
       </p>
       <p>
         <Link href={regionHref(slug, 'import')} prefetch={false} className={ui.primary}>

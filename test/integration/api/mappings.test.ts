@@ -51,6 +51,17 @@ test('POST links says which station lies below which; a circle is refused in wor
   expect(await (await call(links, `${AT}/links`, region)).json()).toEqual([
     { id, upstream: 'A', downstream: 'B', source: 'person' },
   ]);
+  const both = [
+    { upstream: 'A', downstream: 'B', source: 'river-layer' },
+    { upstream: 'B', downstream: 'A' },
+  ];
+  await problemOf(await call(setLink, `${AT}/links`, region, send({ links: both })), 400);
+  const [one] = both;
+  const several = await call(setLink, `${AT}/links`, region, send({ links: [one] }));
+  expect([several.status, await several.json()]).toEqual([201, { links: [{ id, ...one }] }]);
+  for (const wrong of [{ links: [] }, { ...one, links: [one] }, { upstream: 'A' }, {}]) {
+    await problemOf(await call(setLink, `${AT}/links`, region, send(wrong)), 400);
+  }
   const params = { ...region, link: String(id) };
   expect((await call(unlink, `${AT}/links/${id}`, params, { method: 'DELETE' })).status).toBe(204);
   await problemOf(await call(unlink, `${AT}/links/${id}`, params, { method: 'DELETE' }), 404);

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { openConnection } from '../../../lib/store/connection.ts';
-import { listLinks, removeLink, setLink } from '../../../lib/store/links.ts';
+import { listLinks, removeLink, setLink, setLinks } from '../../../lib/store/links.ts';
 import { deleteRegion } from '../../../lib/store/regions.ts';
 import { listMappings, removeMapping, saveMapping } from '../../../lib/store/saved-mappings.ts';
 import { dump, importFiles } from './helpers.ts';
@@ -32,6 +32,18 @@ test('setLink() refuses a station below itself, a circle by its way, an unknown 
   await expect(link('A', 'Z')).rejects.toMatchObject({ code: 'not-found', message: expect.stringContaining('"Z"') });
   await expect(link('D', 'C', 'hearsay')).rejects.toMatchObject({ code: 'bad-input' });
   expect(dump(place.path)).toEqual(before);
+});
+
+test('setLinks() makes all links or none, and sees a circle that they make among themselves', async () => {
+  const { regionId } = await stations(['A', 'B', 'C']);
+  const links = (pairs: string[]) =>
+    pairs.map(([upstream, downstream]) => ({ upstream, downstream, source: 'river-layer' as const }));
+  const before = dump(place.path);
+  await expect(setLinks(regionId, links(['AB', 'BC', 'CA']))).rejects.toThrow('A → B → C → A');
+  await expect(setLinks(regionId, links(['AB', 'BZ']))).rejects.toMatchObject({ code: 'not-found' });
+  expect(dump(place.path)).toEqual(before);
+  expect(await setLinks(regionId, links(['BC', 'AB']))).toMatchObject(links(['BC', 'AB']));
+  expect(await listLinks(regionId)).toMatchObject(links(['AB', 'BC']));
 });
 
 test('saveMapping() replaces the one of that name, and deleteRegion() leaves no link, finding or mapping behind', async () => {

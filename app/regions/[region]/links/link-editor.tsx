@@ -1,9 +1,7 @@
 'use client';
-import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useId, useState } from 'react';
 import { FormField } from '@/app/components/form-field';
-import { stationHref } from '@/app/components/links';
 import { ErrorNote } from '@/app/components/notes';
 import { offered, type StationChoice } from '@/app/components/station-form/recipe-draft';
 import { sendStation } from '@/app/components/station-form/send-station';
@@ -11,11 +9,7 @@ import form from '@/app/components/station-form/station-form.module.css';
 import ui from '@/app/components/ui.module.css';
 import type { LinkSuggestion } from '@/lib/region/link-suggestions';
 import styles from './link-editor.module.css';
-
-interface Pair {
-  upstream: string;
-  downstream: string;
-}
+import { type Pair, PairList, pairLabel } from './pair-list.tsx';
 
 interface Props {
   slug: string;
@@ -41,119 +35,85 @@ export function LinkEditor({ slug, station = null, stations, links, suggested, r
   const names = new Map(stations.map(({ code, name }) => [code, name]));
   const api = `/api/regions/${encodeURIComponent(slug)}/links`;
 
-  async function run(requests: (() => ReturnType<typeof sendStation>)[]) {
+  async function run(request: ReturnType<typeof sendStation>) {
     setBusy(true);
     setFailed(null);
-    for (const request of requests) {
-      const result = await request();
-      if (!result.ok) {
-        setFailed(result.detail);
-        break;
-      }
-    }
+    const result = await request;
+    if (!result.ok) setFailed(result.detail);
     router.refresh();
     setBusy(false);
   }
-  const confirm =
-    ({ upstream, downstream, source }: Pair & { source: string }) =>
-    () =>
-      sendStation(api, 'POST', { upstream, downstream, source });
-  const reject =
-    ({ upstream, downstream }: Pair, to: boolean) =>
-    () =>
-      sendStation(`${api}/suggested`, 'POST', { upstream, downstream, rejected: to });
-  const remove = (id: number) => () => sendStation(`${api}/${id}`, 'DELETE', undefined);
-  const words = ({ upstream, downstream }: Pair) => (
-    <span className={styles.pair}>
-      <StationLink slug={slug} code={upstream} name={names.get(upstream)} /> <span aria-hidden="true">→</span>
-      <span className="visually-hidden"> flows to </span>{' '}
-      <StationLink slug={slug} code={downstream} name={names.get(downstream)} />
-    </span>
+  const confirmed = ({ upstream, downstream, source }: Pair & { source: string }) => ({ upstream, downstream, source });
+  const confirm = (pair: Pair & { source: string }) => run(sendStation(api, 'POST', confirmed(pair)));
+  const reject = ({ upstream, downstream }: Pair, rejected: boolean) =>
+    run(sendStation(`${api}/suggested`, 'POST', { upstream, downstream, rejected }));
+  const action = (verb: string, pair: Pair, act: () => Promise<void>) => (
+    <button
+      type="button"
+      className={ui.button}
+      disabled={busy}
+      aria-label={`${verb} ${pairLabel(pair)}`}
+      onClick={() => void act()}
+    >
+      {verb}
+    </button>
   );
-  const label = ({ upstream, downstream }: Pair) => `${upstream} to ${downstream}`;
 
   return (
     <section className={form.section} aria-labelledby="links-title">
       <h2 id="links-title">Upstream and downstream</h2>
-      {failed && <ErrorNote title="This link was not changed">{failed}</ErrorNote>}
-      <h3>Suggested</h3>
-      {suggested.length === 0 ? (
+      {failed && <ErrorNote title="This was not changed">{failed}</ErrorNote>}
+      <h3>Suggested{suggested.length > 1 && ` (${suggested.length})`}</h3>
+      {suggested.length === 0 && (
         <p className={form.caution}>Nothing is suggested{station === null ? '' : ' for this station'}.</p>
-      ) : (
-        <ul className={styles.list} aria-label="Suggested links">
-          {suggested.map((pair) => (
-            <li key={label(pair)}>
-              <div>
-                {words(pair)}
-                <p className={styles.reason}>{pair.reason}</p>
-              </div>
-              <button
-                type="button"
-                className={ui.button}
-                disabled={busy}
-                aria-label={`Confirm ${label(pair)}`}
-                onClick={() => run([confirm(pair)])}
-              >
-                Confirm
-              </button>
-              <button
-                type="button"
-                className={ui.button}
-                disabled={busy}
-                aria-label={`Reject ${label(pair)}`}
-                onClick={() => run([reject(pair, true)])}
-              >
-                Reject
-              </button>
-            </li>
-          ))}
-        </ul>
       )}
       {suggested.length > 1 && (
-        <button type="button" className={ui.button} disabled={busy} onClick={() => run(suggested.map(confirm))}>
+        <button
+          type="button"
+          className={ui.button}
+          disabled={busy}
+          onClick={() => void run(sendStation(api, 'POST', { links: suggested.map(confirmed) }))}
+        >
           Confirm all {suggested.length}
         </button>
       )}
-      <h3>Confirmed</h3>
+      {suggested.length > 0 && (
+        <PairList
+          slug={slug}
+          label="Suggested links"
+          pairs={suggested}
+          names={names}
+          reasonOf={({ reason }) => reason}
+          actionsOf={(pair) => (
+            <>
+              {action('Confirm', pair, () => confirm(pair))}
+              {action('Reject', pair, () => reject(pair, true))}
+            </>
+          )}
+        />
+      )}
+      <h3>Confirmed{links.length > 1 && ` (${links.length})`}</h3>
       {links.length === 0 && <p className={form.caution}>No link yet.</p>}
-      <ul className={styles.list} aria-label="Confirmed links">
-        {links.map((link) => (
-          <li key={link.id}>
-            <div>
-              {words(link)}
-              <p className={styles.reason}>{SOURCE_WORDS[link.source] ?? link.source}</p>
-            </div>
-            <button
-              type="button"
-              className={ui.button}
-              disabled={busy}
-              aria-label={`Take away ${label(link)}`}
-              onClick={() => run([remove(link.id)])}
-            >
-              Take away
-            </button>
-          </li>
-        ))}
-      </ul>
+      <PairList
+        slug={slug}
+        label="Confirmed links"
+        pairs={links}
+        names={names}
+        reasonOf={({ source }) => SOURCE_WORDS[source] ?? source}
+        actionsOf={(link) =>
+          action('Take away', link, () => run(sendStation(`${api}/${link.id}`, 'DELETE', undefined)))
+        }
+      />
       {rejected.length > 0 && (
         <details>
           <summary>Rejected ({rejected.length})</summary>
-          <ul className={styles.list} aria-label="Rejected links">
-            {rejected.map((pair) => (
-              <li key={label(pair)}>
-                {words(pair)}
-                <button
-                  type="button"
-                  className={ui.button}
-                  disabled={busy}
-                  aria-label={`Suggest again ${label(pair)}`}
-                  onClick={() => run([reject(pair, false)])}
-                >
-                  Suggest again
-                </button>
-              </li>
-            ))}
-          </ul>
+          <PairList
+            slug={slug}
+            label="Rejected links"
+            pairs={rejected}
+            names={names}
+            actionsOf={(pair) => action('Suggest again', pair, () => reject(pair, false))}
+          />
         </details>
       )}
       <NewLink
@@ -161,17 +121,9 @@ export function LinkEditor({ slug, station = null, stations, links, suggested, r
         station={station}
         stations={stations}
         busy={busy}
-        onGiven={(pair) => run([confirm({ ...pair, source: 'person' })])}
+        onGiven={(pair) => confirm({ ...pair, source: 'person' })}
       />
     </section>
-  );
-}
-
-function StationLink({ slug, code, name }: { slug: string; code: string; name?: string }) {
-  return (
-    <Link href={stationHref(slug, code)} prefetch={false}>
-      {code} {name}
-    </Link>
   );
 }
 

@@ -80,6 +80,7 @@ describe('flowAxis', () => {
         const { y, ticks } = flowAxis(values, kind, 200);
         expect(y(0)).toBe(200);
         expect(ticks.length).toBeGreaterThan(0);
+        expect(new Set(ticks.map(tickText)).size).toBe(ticks.length);
       }
     }
   });

@@ -2,8 +2,8 @@ import { jsonAnswer } from '@/app/api/_http/answer';
 import { readJson, readParameters } from '@/app/api/_http/parameters';
 import { regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
-import { listLinks, setLink } from '@/lib/store/links';
-import { link } from './bodies';
+import { listLinks, setLink, setLinks } from '@/lib/store/links';
+import { newLinks } from './bodies';
 
 type Params = { region: string };
 
@@ -13,8 +13,12 @@ export const GET = route<Params>(async (request, params) => {
   return jsonAnswer(await listLinks((await regionOf(params)).id));
 });
 
-/** Says that one station lies below another. */
+/** Says that one station lies below another, or that of several pairs: all of them or none. */
 export const POST = route<Params>(async (request, params) => {
   const region = await regionOf(params);
-  return jsonAnswer(await setLink(region.id, await readJson(request, link)), { status: 201 });
+  const { upstream = '', downstream = '', source, links } = await readJson(request, newLinks);
+  const set = links
+    ? { links: await setLinks(region.id, links) }
+    : await setLink(region.id, { upstream, downstream, source });
+  return jsonAnswer(set, { status: 201 });
 });

@@ -11,7 +11,7 @@ import {
 } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
 import { changeText } from '@/app/components/change-marks/marked-changes';
-import type { Units } from '@/app/components/format';
+import { count, type Units } from '@/app/components/format';
 import type { RegionRecords } from '@/lib/jobs/records-types';
 import { type CellPlace, cellAfterKey, hitCell, layOutChart, scrollToCell } from './chart-layout.ts';
 import { ChartLegend } from './chart-legend.tsx';
@@ -145,7 +145,7 @@ export function YearChart({ records, span, rows, sort, units, open, onOpen }: Pr
         className={styles.box}
         style={{ blockSize: `min(${layout.height + 2}px, max(15rem, 100dvh - 19rem))` }}
         role="application"
-        aria-label={`Chart of ${rows.length} stations by years ${first} to ${last}. Arrow keys move from cell to cell, Enter opens the year. The table below holds the same.`}
+        aria-label={`Chart of ${count(rows.length, 'station')} by years ${first} to ${last}. Arrow keys move from cell to cell, Enter opens the year. The table below holds the same.`}
         {...FOCUSABLE}
         onScroll={(event) => {
           scroll.current = { left: event.currentTarget.scrollLeft, top: event.currentTarget.scrollTop };

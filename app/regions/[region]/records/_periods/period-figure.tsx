@@ -83,13 +83,13 @@ export function PeriodFigure({ periods, current, onUse }: Props) {
         <canvas ref={canvas} style={{ inlineSize: layout.width, blockSize: layout.height }} />
       </div>
       <ul className={styles.legend} aria-label="What the cells mean">
-        {steps.map((least, step) => (
+        {(most === 0 ? [] : steps).map((least, step) => (
           <li key={least}>
             <span className={styles.tone} aria-hidden="true">
               <span style={{ opacity: TONES[step] }} />
             </span>
             {range(least, (steps[step + 1] ?? most + 1) - 1).replace(/^(\d+)\u2013\1$/, '$1')}{' '}
-            {step === 0 && 'stations'}
+            {step === 0 && (most === 1 ? 'station' : 'stations')}
           </li>
         ))}
         <li>

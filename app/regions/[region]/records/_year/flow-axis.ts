@@ -37,7 +37,8 @@ export function flowAxis(values: ArrayLike<number>, kind: FlowAxisKind, height: 
       least,
     };
   }
-  const [low, high] = lowest > highest ? [0, 1] : [Math.min(0, lowest), Math.max(highest, lowest < 0 ? 0 : 1e-6)];
+  const [low, high] =
+    lowest > highest ? [0, 1] : [Math.min(0, lowest), highest > 0 || lowest < 0 ? Math.max(0, highest) : 1];
   const scale = scaleLinear([low, high], [height, 0]).nice(many);
   return { y: scale, ticks: scale.ticks(many), least: scale.domain()[0] };
 }
