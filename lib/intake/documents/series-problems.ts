@@ -1,4 +1,4 @@
-import { QUANTITIES } from '../../series/quantities.ts';
+import { QUANTITIES, quantityWords } from '../../series/quantities.ts';
 import { IntakeError, type Unit } from '../types.ts';
 import { labelOf, type SeriesHead } from './series-head.ts';
 import type { SeriesSink } from './series-sink.ts';
@@ -34,7 +34,7 @@ export function nothingTaken(file: string, sink: SeriesSink): IntakeError | null
     });
   }
   const { others, main } = sink.wanted;
-  const wanted = main === 'flow' ? 'daily flow' : `daily ${main.replace('-', ' ')}`;
+  const wanted = main === 'flow' ? 'daily flow' : `daily ${quantityWords(main)}`;
   if (others.size > 0) {
     // A series of a quantity that is kept, or of a unit that one of these may have, can be taken when a person says so.
     const takeable = [...others.values()].some(({ quantity, unit }) => quantity !== null || unit !== null);
@@ -45,7 +45,7 @@ export function nothingTaken(file: string, sink: SeriesSink): IntakeError | null
         : `the document holds no series of ${wanted}, and none of another quantity that is kept here`,
       remedy: takeable
         ? 'Get the series of discharge, or say which series is to be taken, and as what'
-        : `Get the series of discharge. What is kept: ${QUANTITIES.join(', ').replaceAll('-', ' ')}`,
+        : `Get the series of discharge. What is kept: ${QUANTITIES.map(quantityWords).join(', ')}`,
       ...(takeable ? { needs: 'quantity' } : {}),
     });
   }

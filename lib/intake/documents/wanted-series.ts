@@ -1,4 +1,4 @@
-import { QUANTITIES, type Quantity, UNITS_OF, type Unit } from '../../series/quantities.ts';
+import { QUANTITIES, type Quantity, quantityWords, UNITS_OF, type Unit } from '../../series/quantities.ts';
 import { type AlsoCandidate, type InspectOptions, IntakeError } from '../types.ts';
 import { labelOf, quantityOf, type SeriesHead, unitOfHead } from './series-head.ts';
 
@@ -81,7 +81,7 @@ export class WantedSeries {
       message:
         written === ''
           ? `the document does not say the unit of “${labelOf(head)}”`
-          : `the unit of “${labelOf(head)}” is none of ${quantity.replace('-', ' ')}`,
+          : `the unit of “${labelOf(head)}” is none of ${quantityWords(quantity)}`,
       remedy: `Say it: ${UNITS_OF[quantity].join(', ')}`,
       needs: 'unit',
     });

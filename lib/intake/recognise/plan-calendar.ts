@@ -27,41 +27,17 @@ export function planCalendar(
   context: PlanContext,
 ): TablePlan | null {
   const { options, lineEnd, marked } = context;
-  const asked = options.mapping?.layout === 'month-rows' || options.mapping?.layout === 'day-rows';
-  if (options.mapping?.layout !== undefined && !asked) return null;
+  const read = readShape(body, delimiter, context);
+  if (read === null) return null;
+  const { words, shape, firstRow, firstLine, header, above, headings, leading, mapping } = read;
   const file = options.fileName;
-  const words = splitSample(body, splitterFor(delimiter, lineEnd));
-  const found = findCalendar(words);
-  const shape = found !== null && (!asked || found.layout === options.mapping?.layout) ? found : null;
-  if (shape === null && !asked) return null;
-
-  const firstRow = shape?.firstRow ?? firstDataRow(words);
-  const header = shape === null ? (words[firstRow - 1]?.fields ?? null) : shape.header;
-  const titles = words.flatMap((row, at) =>
-    at < firstRow && row.fields !== header ? [{ text: body[at].text, row }] : [],
-  );
-  const firstLine = words[firstRow]?.line ?? 1;
-  const above = readLinesAbove(context.comments, titles, { delimiter, firstLine });
-  const remarks = context.comments.filter(({ line }) => line < firstLine).map(({ text }) => text);
-  const headings = shape === null ? [] : yearHeadings(words, remarks, shape);
-  const aligned = delimiter === null && shape !== null ? alignedSlices(body, shape) : null;
-  const leading = leadingColumns(shape, words);
-  const mapping = calendarMapping(shape, { leading, above, headings, words, options, delimiter, aligned });
-
   const firstMonth = mapping.date.yearBegins?.month ?? (shape === null ? 1 : firstMonthOf(shape, words, headings));
   const open = calendarProblems(file, mapping, headings, { firstMonth, header });
   const days = calendarPlaces(mapping, header, mapping.layout === 'day-rows' ? firstMonth : 1, file);
   const splitter = days.slices === null ? splitterFor(delimiter, lineEnd) : new FixedWidthLines(days.slices, lineEnd);
   const rows = days.slices === null ? words : splitSample(body, splitter);
   const { station, where } = mapping;
-  const places = {
-    date: [days.year, days.row].filter((at) => at >= 0),
-    station: station.from === 'column' ? columnPosition(station.column, header, file) : -1,
-    value: days.cells[0]?.value ?? -1,
-    flag: days.cells[0]?.flag ?? -1,
-    where: where === undefined ? -1 : columnPosition(where.column, header, file),
-    unit: days.slices === null ? leading.unit : -1,
-  };
+  const places = placesOf(mapping, days, { header, unit: days.slices === null ? leading.unit : -1, file });
   const data = rows
     .slice(firstRow)
     .filter(({ fields }) => where === undefined || fields[places.where] === where.equals);
@@ -99,6 +75,46 @@ export function planCalendar(
       ...(unnamed ? [stationProblem(file)] : []),
     ],
     warnings: [],
+  };
+}
+
+/** What the lines show of their layout, and the mapping that follows from it and from what is given.
+ *  @returns null when they are no calendar and no mapping says that they are */
+function readShape(body: readonly SampleLine[], delimiter: string | null, { options, lineEnd, comments }: PlanContext) {
+  const asked = options.mapping?.layout === 'month-rows' || options.mapping?.layout === 'day-rows';
+  if (options.mapping?.layout !== undefined && !asked) return null;
+  const words = splitSample(body, splitterFor(delimiter, lineEnd));
+  const found = findCalendar(words);
+  const shape = found !== null && (!asked || found.layout === options.mapping?.layout) ? found : null;
+  if (shape === null && !asked) return null;
+
+  const firstRow = shape?.firstRow ?? firstDataRow(words);
+  const header = shape === null ? (words[firstRow - 1]?.fields ?? null) : shape.header;
+  const titles = words.flatMap((row, at) =>
+    at < firstRow && row.fields !== header ? [{ text: body[at].text, row }] : [],
+  );
+  const firstLine = words[firstRow]?.line ?? 1;
+  const above = readLinesAbove(comments, titles, { delimiter, firstLine });
+  const remarks = comments.filter(({ line }) => line < firstLine).map(({ text }) => text);
+  const headings = shape === null ? [] : yearHeadings(words, remarks, shape);
+  const aligned = delimiter === null && shape !== null ? alignedSlices(body, shape) : null;
+  const leading = leadingColumns(shape, words);
+  const mapping = calendarMapping(shape, { leading, above, headings, words, options, delimiter, aligned });
+  return { words, shape, firstRow, firstLine, header, above, headings, leading, mapping };
+}
+
+function placesOf(
+  { station, where }: Mapping,
+  { year, row, cells }: CalendarPlaces,
+  { header, unit, file }: { header: readonly string[] | null; unit: number; file: string },
+): TablePlan['places'] {
+  return {
+    date: [year, row].filter((at) => at >= 0),
+    station: station.from === 'column' ? columnPosition(station.column, header, file) : -1,
+    value: cells[0]?.value ?? -1,
+    flag: cells[0]?.flag ?? -1,
+    where: where === undefined ? -1 : columnPosition(where.column, header, file),
+    unit,
   };
 }
 
