@@ -119,7 +119,7 @@ test('by keyboard alone: from the chart to a year, along its days, and back', as
   expect(await from.inputValue()).toBe('');
   await page.keyboard.press('Escape');
   await heading.waitFor({ state: 'detached' });
-  expect(new URL(page.url()).searchParams.has('year')).toBe(false);
+  await expect.poll(() => new URL(page.url()).searchParams.has('year')).toBe(false);
 });
 
 test('sorting by area puts the largest catchment first, the other way round the smallest; the address keeps it', async () => {
@@ -133,6 +133,7 @@ test('sorting by area puts the largest catchment first, the other way round the 
   await page.keyboard.press('ArrowRight');
   await expect.poll(() => readout(page).textContent()).toContain(`(${largest.code})`);
   await page.getByLabel('the other way round').check();
+  await expect.poll(() => new URL(page.url()).searchParams.get('reverse')).toBe('true');
   await page.reload();
   await hydrated(page);
   await chart(page).focus();

@@ -27,7 +27,10 @@ const READ = ROUTES.filter((route) => methodsOf(route)?.includes('get') ?? true)
 const CHANGED = ROUTES.filter((route) => !READ.includes(route));
 
 /** What a route needs beside its path. */
-const QUERIES: Record<string, string> = { '/map-outline': '?box=-10,40,10,60' };
+const QUERIES: Record<string, string> = {
+  '/map-outline': '?box=-10,40,10,60',
+  '/api/regions/[region]/stations/[code]/days': '?first=2001-05-01&last=2001-05-03',
+};
 
 let importRegion: string;
 
