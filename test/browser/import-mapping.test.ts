@@ -160,7 +160,7 @@ test('codes that differ by leading zeros are shown beside the list’s, and take
   const { page, slug } = await importPage();
   await send(page, file('stations.csv', REGISTRY), file('flows.csv', flows(days('1', 30, () => '1.5'))));
   const panel = await show(page, 'flows.csv');
-  const pair = panel.getByRole('row', { name: '1 0001' });
+  const pair = panel.getByRole('row', { name: '1 0001', exact: true });
   await pair.waitFor();
   await panel.getByRole('button', { name: 'Take them for the stations of the list' }).click();
   await expect.poll(() => standing(page, 'flows.csv').textContent()).toContain('ready');

@@ -159,7 +159,8 @@ test('a running import survives a closed page, can be cancelled, and leaves noth
   await page.getByRole('heading', { name: '1 file to import' }).waitFor();
   await page.getByRole('button', { name: 'Give up' }).click();
   await page.getByText('Drop files here').waitFor();
-  expect(await fetchJson(`/api/regions/${slug}/uploads`)).toEqual([]);
+  // the screen does not wait until so large a file has gone
+  await expect.poll(() => fetchJson(`/api/regions/${slug}/uploads`)).toEqual([]);
 }, 120_000);
 
 test('an upload waits: its address brings it back with what was said, and the page offers it', async () => {

@@ -40,79 +40,81 @@ export function FirstRowsTable({ file, rows, unit, columns, roles, offered, aske
           {offered.length > 0 && ' Say above the columns what each of them holds.'}
         </p>
       )}
-      <ScrollFrame className={styles.rows} label={`First rows of ${file}`}>
-        <table className={styles.firstRows}>
-          <thead>
-            {shown && understood && (
-              <tr>
-                <th scope="colgroup" colSpan={problems ? 6 : 5}>
-                  As understood
-                </th>
-                <th scope="colgroup" colSpan={shown.length} className={styles.raw}>
-                  As it stands in the file
-                </th>
-              </tr>
-            )}
-            <tr>
-              <th scope="col">Row</th>
-              {understood && (
-                <>
-                  <th scope="col">Station</th>
-                  <th scope="col">Date</th>
-                  <th scope="col" className={styles.number}>
-                    Value{unit && `, ${unitText(unit)}`}
+      {rows.length > 0 && (
+        <ScrollFrame className={styles.rows} label={`First rows of ${file}`}>
+          <table className={styles.firstRows}>
+            <thead>
+              {shown && understood && (
+                <tr>
+                  <th scope="colgroup" colSpan={problems ? 6 : 5}>
+                    As understood
                   </th>
-                  <th scope="col">Flag</th>
-                  {problems && <th scope="col">Not taken because</th>}
-                </>
-              )}
-              {shown?.map(({ name, column }) => (
-                <th key={column} scope="col" className={styles.raw} data-role={roles[column]}>
-                  <span className={styles.columnName}>{name || `column ${column + 1}`}</span>
-                  {offered.length > 0 && (
-                    <select
-                      aria-label={`Column ${column + 1}${name ? ` (${name})` : ''} holds`}
-                      aria-invalid={asked !== null}
-                      aria-describedby={asked ? 'columns-asked' : undefined}
-                      value={roles[column]}
-                      onChange={(event) => {
-                        const role = offered.find((one) => one.role === event.target.value)?.role;
-                        if (role) onRole(column, role);
-                      }}
-                    >
-                      {offered.map(({ role, words }) => (
-                        <option key={role} value={role}>
-                          {words}
-                        </option>
-                      ))}
-                    </select>
-                  )}
-                </th>
-              ))}
-            </tr>
-          </thead>
-          <tbody>
-            {rows.flatMap((row) =>
-              linesOf(row).map(({ value, at, all }) => (
-                <tr key={`${row.line} ${at}`} data-problem={value?.problem ? true : undefined}>
-                  {at === 0 && (
-                    <td rowSpan={all} className={styles.number}>
-                      {row.line === null ? '' : fixed(row.line)}
-                    </td>
-                  )}
-                  {understood && <Understood value={value} problems={problems} />}
-                  {at === 0 &&
-                    shown?.map(({ column }) => (
-                      <td key={column} rowSpan={all} className={styles.raw} data-role={roles[column]}>
-                        {row.fields?.[column] ?? ''}
-                      </td>
-                    ))}
+                  <th scope="colgroup" colSpan={shown.length} className={styles.raw}>
+                    As it stands in the file
+                  </th>
                 </tr>
-              )),
-            )}
-          </tbody>
-        </table>
-      </ScrollFrame>
+              )}
+              <tr>
+                <th scope="col">Row</th>
+                {understood && (
+                  <>
+                    <th scope="col">Station</th>
+                    <th scope="col">Date</th>
+                    <th scope="col" className={styles.number}>
+                      Value{unit && `, ${unitText(unit)}`}
+                    </th>
+                    <th scope="col">Flag</th>
+                    {problems && <th scope="col">Not taken because</th>}
+                  </>
+                )}
+                {shown?.map(({ name, column }) => (
+                  <th key={column} scope="col" className={styles.raw} data-role={roles[column]}>
+                    <span className={styles.columnName}>{name || `column ${column + 1}`}</span>
+                    {offered.length > 0 && (
+                      <select
+                        aria-label={`Column ${column + 1}${name ? ` (${name})` : ''} holds`}
+                        aria-invalid={asked !== null}
+                        aria-describedby={asked ? 'columns-asked' : undefined}
+                        value={roles[column]}
+                        onChange={(event) => {
+                          const role = offered.find((one) => one.role === event.target.value)?.role;
+                          if (role) onRole(column, role);
+                        }}
+                      >
+                        {offered.map(({ role, words }) => (
+                          <option key={role} value={role}>
+                            {words}
+                          </option>
+                        ))}
+                      </select>
+                    )}
+                  </th>
+                ))}
+              </tr>
+            </thead>
+            <tbody>
+              {rows.flatMap((row) =>
+                linesOf(row).map(({ value, at, all }) => (
+                  <tr key={`${row.line} ${at}`} data-problem={value?.problem ? true : undefined}>
+                    {at === 0 && (
+                      <td rowSpan={all} className={styles.number}>
+                        {row.line === null ? '' : fixed(row.line)}
+                      </td>
+                    )}
+                    {understood && <Understood value={value} problems={problems} />}
+                    {at === 0 &&
+                      shown?.map(({ column }) => (
+                        <td key={column} rowSpan={all} className={styles.raw} data-role={roles[column]}>
+                          {row.fields?.[column] ?? ''}
+                        </td>
+                      ))}
+                  </tr>
+                )),
+              )}
+            </tbody>
+          </table>
+        </ScrollFrame>
+      )}
       {columns && columns.length > MOST_COLUMNS && (
         <p className={styles.more}>and {fixed(columns.length - MOST_COLUMNS)} more columns</p>
       )}

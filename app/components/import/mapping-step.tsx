@@ -70,6 +70,7 @@ export function MappingStep({ flow, region, comparable, order, setBy, setName }:
         </p>
       </header>
       {error && <ErrorNote>{error}</ErrorNote>}
+      {upload && upload.notes.length > 0 && <PassedOver notes={upload.notes} />}
       {upload?.archive ? (
         <ArchiveNote archive={upload.archive} />
       ) : (
@@ -101,6 +102,22 @@ export function MappingStep({ flow, region, comparable, order, setBy, setName }:
         onStart={() => void flow.start(order, comparable)}
       />
     </section>
+  );
+}
+
+/** What of archives is no file to import. */
+function PassedOver({ notes }: { notes: readonly string[] }) {
+  const [first] = notes;
+  if (notes.length === 1) return <p className={styles.note}>{first}</p>;
+  return (
+    <details className={styles.reports}>
+      <summary>{count(notes.length, 'file')} of archives passed over</summary>
+      <ul className={styles.note}>
+        {notes.map((note) => (
+          <li key={note}>{note}</li>
+        ))}
+      </ul>
+    </details>
   );
 }
 

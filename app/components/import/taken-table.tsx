@@ -13,7 +13,7 @@ export const reportId = ({ importId }: TakenFile): string => `report-${importId}
 export function TakenTable({ files }: { files: readonly TakenFile[] }) {
   return (
     <ScrollFrame className={styles.scroll} label="Files taken">
-      <table className={styles.table}>
+      <table className={`${styles.table} ${styles.files}`}>
         <thead>
           <tr>
             <th scope="col">File</th>
