@@ -5,6 +5,9 @@ import { decodeText, hasUtf8Mark } from '../text-encoding.ts';
 
 /** Lines looked at to tell what a file is. */
 const SAMPLE_LINES = 3000;
+/** Of lines with hundreds of columns fewer will do: beyond so many bytes no more than these lines are looked at. */
+const SAMPLE_BYTES = 256 * 1024;
+const LEAST_LINES = 400;
 
 /** One line of the sample, with its number in the file. */
 export interface SampleLine {
@@ -23,7 +26,8 @@ export interface SampleRow {
 export function sampleLines(head: Uint8Array, lineEnd: number, wholeFile: boolean): SampleLine[] {
   const lines: SampleLine[] = [];
   let start = hasUtf8Mark(head) ? 3 : 0;
-  for (let line = 1; start < head.length && lines.length < SAMPLE_LINES; line++) {
+  const isEnough = () => lines.length >= SAMPLE_LINES || (lines.length >= LEAST_LINES && start > SAMPLE_BYTES);
+  for (let line = 1; start < head.length && !isEnough(); line++) {
     const found = head.indexOf(lineEnd, start);
     if (found < 0 && !wholeFile) break;
     const end = found < 0 ? head.length : found;
