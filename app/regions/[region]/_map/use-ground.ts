@@ -1,9 +1,9 @@
 import type { GeoJsonObject } from 'geojson';
 import type L from 'leaflet';
 import { useEffect, useMemo, useState } from 'react';
+import { onThemeChange } from '@/app/components/canvas/tokens';
 import { GroundLayer } from './ground-layer.ts';
 import type { GroundKind } from './ground-style.ts';
-import { onThemeChange } from '@/app/components/canvas/tokens';
 import { readPalette } from './palette.ts';
 
 export interface GroundSource {

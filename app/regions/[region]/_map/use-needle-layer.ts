@@ -1,11 +1,11 @@
 import type L from 'leaflet';
 import { useEffect, useMemo, useRef } from 'react';
+import { onThemeChange } from '@/app/components/canvas/tokens';
 import { needleOf } from '@/app/components/needle';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { hasPlace } from '../row-filter.ts';
 import { type Mark, NeedleLayer } from './needle-layer.ts';
-import { onThemeChange } from '@/app/components/canvas/tokens';
 import { readPalette } from './palette.ts';
 
 export interface DrawnStations {
