@@ -43,15 +43,25 @@ export function flowAxis(values: ArrayLike<number>, kind: FlowAxisKind, height: 
   return { y: scale, ticks: scale.ticks(many), least: scale.domain()[0] };
 }
 
-/** A logarithmic axis' ticks, at most so many: first 1, 2, 5 of each decade, then 1 and 3, then 1 alone. */
+/** Labels closer than this touch, pixels. */
+const LEAST_APART = 16;
+
+/** A logarithmic axis' ticks, at most so many: those that begin with 1, 2 or 5, with 1 or 3, with 1 alone, where these are
+ *  two at least and do not touch; else those of all that stand far enough apart. */
 function spaced(ticks: number[], scale: (value: number) => number, most: number): number[] {
   const leading = (value: number) => Math.round(value / 10 ** Math.floor(Math.log10(value) + 1e-9));
   for (const digits of [[1, 2, 3, 4, 5, 6, 7, 8, 9], [1, 2, 5], [1, 3], [1]]) {
     const kept = ticks.filter((value) => digits.includes(leading(value)));
-    const close = kept.some((value, i) => i > 0 && Math.abs(scale(value) - scale(kept[i - 1])) < 16);
-    if (kept.length <= most && !close) return kept;
+    const close = kept.some((value, i) => i > 0 && Math.abs(scale(value) - scale(kept[i - 1])) < LEAST_APART);
+    if (kept.length >= 2 && kept.length <= most && !close) return kept;
   }
-  return ticks.filter((value) => leading(value) === 1).filter((_, i, all) => i % Math.ceil(all.length / most) === 0);
+  const apart = Math.max(LEAST_APART, Math.abs(scale(ticks[0]) - scale(ticks[ticks.length - 1])) / most);
+  const kept: number[] = [];
+  for (const tick of ticks) {
+    const last = kept[kept.length - 1];
+    if (last === undefined || Math.abs(scale(tick) - scale(last)) >= apart) kept.push(tick);
+  }
+  return kept;
 }
 
 /** A tick in as few digits as it has. Example: 0.05 → "0.05", 2000 → "2,000" */
