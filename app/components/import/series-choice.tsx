@@ -13,7 +13,7 @@ interface Props {
   onTake(mapping: Partial<Mapping>): void;
 }
 
-/** The series of a document that holds none of the wanted quantity: any that is of a quantity kept here may be taken in
+/** The series of a document that holds none of the wanted quantity: one of a quantity that is kept here may be taken in
  *  its place. */
 export function SeriesChoice({ series, onTake }: Props) {
   return (
