@@ -13,6 +13,19 @@ enum Step {
   flag,
 }
 
+/** A station as rows name it. */
+interface NamedStation {
+  station: number;
+  key: Uint8Array;
+  /** the key's whole words, to be compared four bytes at a time */
+  words: Int32Array;
+  /** the one that came after it last time: a file that goes day by day names its stations in the same order every day */
+  next: NamedStation | null;
+}
+
+/** Before the first row. */
+const NOBODY: NamedStation = { station: -1, key: new Uint8Array(0), words: new Int32Array(0), next: null };
+
 /** Bytes of a station code that are compared four at a time; a longer one is read thoroughly. */
 const LONGEST_CODE = SPARE_BYTES / 2;
 
@@ -20,9 +33,12 @@ const LONGEST_CODE = SPARE_BYTES / 2;
  *  or blanks, an ISO date, a number of at most 15 digits) is read in one pass over its bytes, without looking for its
  *  fields first. Any other row is left to the thorough reader, which takes the very same rows in the same way. */
 export class PlainRows {
-  private station = -1;
-  private stationKey: Uint8Array = new Uint8Array(0);
-  private stationWords: Int32Array = new Int32Array(0);
+  private named: NamedStation = NOBODY;
+  /** those of `named`, to be compared with every row */
+  private stationKey: Uint8Array = NOBODY.key;
+  private stationWords: Int32Array = NOBODY.words;
+  /** by station, as it was last named */
+  private readonly known: NamedStation[] = [];
   /** the block last read from, to be looked at four bytes at a time */
   private block: Uint8Array = new Uint8Array(0);
   private view: DataView = new DataView(new ArrayBuffer(0));
@@ -77,6 +93,7 @@ export class PlainRows {
     let at = from;
     let day = NO_DAY;
     let value = 0;
+    let turned: NamedStation | null = null;
     let stationStart = -1;
     let stationEnd = -1;
     let flagStart = -1;
@@ -124,11 +141,22 @@ export class PlainRows {
           const words = this.stationWords;
           let word = 0;
           while (word < words.length && view.getInt32(at + word * 4) === words[word]) word++;
-          if (word === words.length && this.station >= 0) {
+          if (word === words.length && key.length > 0) {
             let same = word * 4;
             while (same < key.length && bytes[at + same] === key[same]) same++;
             if (same === key.length && bytes[at + same] === stop) {
               at += same;
+              break;
+            }
+          }
+          const { next } = this.named;
+          if (next !== null) {
+            const guess = next.key;
+            let same = 0;
+            while (same < guess.length && bytes[at + same] === guess[same]) same++;
+            if (same === guess.length && bytes[at + same] === stop) {
+              at += same;
+              turned = next;
               break;
             }
           }
@@ -162,24 +190,38 @@ export class PlainRows {
     if (bytes[at] === 13) at++;
     if (at >= limit || bytes[at] !== lineEnd) return -1;
 
-    if (stationStart >= 0) this.turnToStation(bytes, stationStart, stationEnd, line);
+    if (stationStart >= 0) turned = this.stationNamed(bytes, stationStart, stationEnd, line);
+    if (turned !== null) this.turnTo(turned);
     if (flagStart >= 0 || this.code < 0) {
       const [start, end] = flagStart >= 0 ? [flagStart, flagEnd] : [0, 0];
       this.code = this.parts.codes.code(bytes, start, end, 0, line);
       this.flagKey = this.parts.codes.lastFlag;
     }
-    const station = this.onlyStation >= 0 ? this.onlyStation : this.station;
+    const station = this.onlyStation >= 0 ? this.onlyStation : this.named.station;
     this.parts.sink.take(station, day, value, this.code, line);
     return at + 1;
   }
 
-  private turnToStation(bytes: Uint8Array, start: number, end: number, line: number): void {
-    this.station = this.parts.stations.ofField(bytes, start, end, line);
+  private turnTo(named: NamedStation): void {
+    this.named = named;
+    this.stationKey = named.key;
+    this.stationWords = named.words;
+  }
+
+  /** The station of a field that is not the one expected, which is expected after the last one from now on. */
+  private stationNamed(bytes: Uint8Array, start: number, end: number, line: number): NamedStation {
+    const station = this.parts.stations.ofField(bytes, start, end, line);
     const key = this.parts.stations.lastKey;
-    this.stationKey = key;
-    const words = key.length >> 2;
-    if (this.stationWords.length !== words) this.stationWords = new Int32Array(words);
-    for (let word = 0; word < words; word++) this.stationWords[word] = this.view.getInt32(start + word * 4);
+    let named = this.known[station];
+    // A station may be named by its code and by its name.
+    if (named === undefined || named.key !== key) {
+      const words = new Int32Array(key.length >> 2);
+      for (let word = 0; word < words.length; word++) words[word] = this.view.getInt32(start + word * 4);
+      named = { station, key, words, next: null };
+      this.known[station] = named;
+    }
+    if (this.named !== NOBODY) this.named.next = named;
+    return named;
   }
 
   /** Reads year and month of an ISO date, `2001-03-`.
