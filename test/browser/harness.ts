@@ -105,6 +105,8 @@ interface AxeResult {
 /** What breaks WCAG 2.2 AA on the page as it is now, one line a place.
  *  @param within  a selector, to look at one part only */
 export async function accessibilityProblems(page: Page, within = 'html'): Promise<string[]> {
+  // While a page is fetched anew its head is empty for a moment.
+  await page.waitForFunction(() => document.title !== '');
   // By the debugger, not by a script element: the page's own content policy stays as it is.
   await page.evaluate(await readFile(AXE, 'utf8'));
   const result = await page.evaluate(
@@ -119,11 +121,12 @@ export async function accessibilityProblems(page: Page, within = 'html'): Promis
   return violations.flatMap(({ id, help, nodes }) => nodes.map((node) => `${id}: ${help} (${node.target.join(' ')})`));
 }
 
-/** Waits until React has taken the page over: a control then does what it says. */
+/** Waits until React has taken over every control of the page: it then does what it says. Parts that were streamed come
+ *  alive one after another, so that some part being alive says nothing of the next. */
 export async function hydrated(page: Page): Promise<void> {
-  await page.waitForFunction(() =>
-    [...document.querySelectorAll('body, body *')].some((element) =>
-      Object.keys(element).some((key) => key.startsWith('__reactFiber') || key.startsWith('__reactProps')),
-    ),
-  );
+  await page.waitForFunction(() => {
+    const alive = (element: Element) => Object.keys(element).some((key) => key.startsWith('__reactProps'));
+    const controls = [...document.querySelectorAll('button, input, select, textarea')];
+    return controls.every(alive) && [...document.querySelectorAll('body *')].some(alive);
+  });
 }
