@@ -12,6 +12,19 @@ z.config({ jitless: true });
 export const EXCLUDABLE_FLAGS = ['estimated', 'provisional', 'ice', 'below-detection', 'suspect'] as const;
 export type ExcludableFlag = (typeof EXCLUDABLE_FLAGS)[number];
 
+/** What is tested for a trend: one figure a low-flow year. */
+export const INDICES = ['minimum', 'q95', 'mean-flow', 'zero-flow-days', 'bfi', 'minimum-date', 'deficit'] as const;
+export type AnnualIndexName = (typeof INDICES)[number];
+
+export const SERIAL_CORRECTIONS = [
+  'ar1-regional',
+  'ar1',
+  'none',
+  'all-lags',
+  'pre-whitened',
+  'block-bootstrap',
+] as const;
+
 const month = z.int().min(1).max(12);
 const year = z.int().min(1000).max(9999);
 
@@ -40,10 +53,12 @@ export const basisSchema = z
     normalise: z.enum(['area', 'mean', 'median', 'none']).default('area'),
     rankBy: z.enum(['percent-per-decade', 'specific-change', 'kendall-tau']).default('percent-per-decade'),
     trendTest: z.enum(['mann-kendall']).default('mann-kendall'),
-    serialCorrection: z.enum(['ar1-regional', 'ar1', 'none']).default('ar1-regional'),
+    serialCorrection: z.enum(SERIAL_CORRECTIONS).default('ar1-regional'),
     alpha: z.number().min(0.001).max(0.5).default(0.1),
     /** display only; stored and exported values are metric */
     units: z.enum(['metric', 'us']).default('metric'),
+    /** the annual figure that is tested and ranked; days and season shape the minimum and its date */
+    index: z.enum(INDICES).default('minimum'),
   })
   .superRefine((basis, context) => {
     const problem = seasonProblem(basis.season, basis.yearStart);
@@ -124,9 +139,10 @@ const ALLOWED: Record<BasisKey, string> = {
   normalise: 'area, mean, median or none',
   rankBy: 'percent-per-decade, specific-change or kendall-tau',
   trendTest: 'mann-kendall',
-  serialCorrection: 'ar1-regional, ar1 or none',
+  serialCorrection: 'ar1-regional, ar1, none, all-lags, pre-whitened or block-bootstrap',
   alpha: 'a number 0.001–0.5',
   units: 'metric or us',
+  index: 'minimum, q95, mean-flow, zero-flow-days, bfi, minimum-date or deficit',
 };
 
 function sortFlags(flags: readonly ExcludableFlag[]): ExcludableFlag[] {
@@ -230,7 +246,30 @@ const SERIAL_WORDS: Record<Basis['serialCorrection'], string> = {
   'ar1-regional': 'with regional serial correction',
   ar1: 'with each station’s serial correction',
   none: 'without serial correction',
+  'all-lags': 'corrected for all significant lags',
+  'pre-whitened': 'on trend-free pre-whitened series',
+  'block-bootstrap': 'by moving-block bootstrap',
 };
+
+/** What is compared, in words. */
+export function indexWords({ index, days }: Pick<Basis, 'index' | 'days'>): string {
+  switch (index) {
+    case 'minimum':
+      return `${days}-day minima`;
+    case 'minimum-date':
+      return `dates of the ${days}-day minimum`;
+    case 'q95':
+      return 'annual Q95';
+    case 'mean-flow':
+      return 'annual mean flow';
+    case 'zero-flow-days':
+      return 'zero-flow days a year';
+    case 'bfi':
+      return 'annual baseflow index';
+    case 'deficit':
+      return 'annual deficit volume below Q90';
+  }
+}
 
 const NORMALISE_WORDS: Record<Basis['normalise'], string> = {
   area: 'per unit of drainage area',
@@ -261,7 +300,7 @@ export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
       : `${basis.period[0]}–${basis.period[1]}${basis.asked.period === 'common' ? ' (the common period)' : ''}`;
   return [
     { text: 'Comparing ' },
-    { text: `${basis.days}-day minima`, term: 'days' },
+    { text: indexWords(basis), term: 'days' },
     { text: ' of ' },
     { text: `${whatOf}${from}`, term: 'yearStart' },
     { text: ', ' },

@@ -17,6 +17,7 @@ export const BASIS_PARAMETERS = [
   'serialCorrection',
   'alpha',
   'units',
+  'index',
 ] as const;
 
 /** View state of the map screen that links to and from other pages keep. */

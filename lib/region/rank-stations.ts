@@ -104,6 +104,12 @@ function entryOf({ station, minima }: StationMinima, basis: ResolvedBasis): Entr
     intercept: null,
     years: used.years,
     minima: used.minima,
+    values: used.minima,
+    meanValue: meanMinimum,
+    valueSlope: null,
+    valueSlopeLow: null,
+    valueSlopeHigh: null,
+    steadiness: null,
   };
   return { row, used, standing };
 }
@@ -120,6 +126,9 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
     row.slopeLow = orNull(low * YEARS_PER_DECADE);
     row.slopeHigh = orNull(high * YEARS_PER_DECADE);
     row.intercept = orNull(intercept);
+    row.valueSlope = row.slopePerDecade;
+    row.valueSlopeLow = row.slopeLow;
+    row.valueSlopeHigh = row.slopeHigh;
     // a mean below 0 (flow upstream) would turn the sign of the percentage
     row.percentPerDecade =
       meanMinimum !== null && meanMinimum > 0 ? orNull((100 * YEARS_PER_DECADE * slope) / meanMinimum) : null;

@@ -78,6 +78,15 @@ export interface RankingRow extends StationFacts {
   /** the usable years and their minima in m³/s: what the trend rests on */
   years: number[];
   minima: number[];
+  /** the annual figures that were tested and ranked: the minima, or those of the basis's other index, one a year of
+   *  `years`; mean and slope per decade with its 95 % interval in the index's own unit and sign */
+  values: number[];
+  meanValue: number | null;
+  valueSlope: number | null;
+  valueSlopeLow: number | null;
+  valueSlopeHigh: number | null;
+  /** share of the windows of at least 15 usable years whose sign is that of the whole period; null without either */
+  steadiness: number | null;
 }
 
 /** The whole ranking of a region under one basis: ranked rows first, then drying, then the other unranked ones. */
