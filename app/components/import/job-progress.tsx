@@ -77,7 +77,8 @@ export function JobBar({ progress, trial = false, onCancel }: JobProps) {
   );
 }
 
-function timeWords(seconds: number): string {
+/** Example: 42 → "about 42 seconds left" */
+export function timeWords(seconds: number): string {
   if (seconds < 90) return `about ${count(Math.max(1, Math.round(seconds)), 'second')} left`;
   return `about ${count(Math.round(seconds / 60), 'minute')} left`;
 }

@@ -8,12 +8,12 @@ import { Cautions } from '@/app/components/cautions';
 import { apiHref, deriveHref, linksHref } from '@/app/components/links';
 import { ErrorNote, Loading } from '@/app/components/notes';
 import { Segmented } from '@/app/components/segmented';
+import { useAnswer } from '@/app/components/use-answer';
 import type { ResolvedBasis } from '@/lib/basis';
 import type { RegionRecords } from '@/lib/jobs/records-types';
 import type { OwnTerms } from './_periods/use-basis-keys.ts';
 import styles from './records-screen.module.css';
 import { recordsState, type Section } from './records-state.ts';
-import { useAnswer } from './use-answer.ts';
 import { YearsSection } from './years-section.tsx';
 
 const FindingsSection = dynamic(() => import('./_findings/findings-section.tsx').then((part) => part.FindingsSection), {

@@ -4,7 +4,7 @@ import { count } from '@/app/components/format';
 import { type FollowedJob, useJob } from '@/app/components/import/use-job';
 import { ErrorNote } from '@/app/components/notes';
 import ui from '@/app/components/ui.module.css';
-import { AnswerError, send } from '../use-answer.ts';
+import { AnswerError, send } from '@/app/components/use-answer';
 import styles from './findings.module.css';
 
 interface CheckJob extends FollowedJob {

@@ -1,12 +1,12 @@
 'use client';
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { useCanvas } from '@/app/components/canvas/use-canvas';
+import { useAnswer } from '@/app/components/use-answer';
 import { isoDate, parseIsoDate } from '@/lib/calendar/day';
 import type { FindingRow } from '@/lib/jobs/records-types';
 import { type ChartPalette, useChartPalette } from '../_chart/chart-palette.ts';
 import { type DayColumns, type DaysAnswer, dayColumns } from '../_year/days-answer.ts';
 import { type FlowAxis, flowAxis } from '../_year/flow-axis.ts';
-import { useAnswer } from '../use-answer.ts';
 import styles from './findings.module.css';
 import { surroundings } from './group-findings.ts';
 

@@ -1,5 +1,5 @@
+import { send } from '@/app/components/use-answer';
 import type { MarkKind } from '@/lib/store/marks-on-flags';
-import { send } from '../use-answer.ts';
 
 /** What a person says about a stretch of days. */
 export interface NewMark {

@@ -1,7 +1,7 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { AnswerError } from '../use-answer.ts';
+import { AnswerError } from '@/app/components/use-answer';
 
 /** A change on its way to the server: whether it is under way, and what came of it.
  *  @param onChanged  called when it is made; the page's own figures are asked anew then too */

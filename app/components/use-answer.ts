@@ -40,7 +40,8 @@ export class AnswerError extends Error {
   override name = 'AnswerError';
 }
 
-const wordsOf = (error: unknown): string =>
+/** Why a request failed, in the server's words where it gave any. */
+export const wordsOf = (error: unknown): string =>
   error instanceof AnswerError ? error.message : 'The server could not be reached. Try again in a moment.';
 
 async function ask<Value>(address: string, signal: AbortSignal): Promise<Value> {
@@ -61,7 +62,8 @@ export async function send<Value>(method: 'POST' | 'DELETE', address: string, bo
   return response.status === 204 ? null : ((await response.json()) as Value);
 }
 
-async function detailOf(response: Response): Promise<string> {
+/** The server's own reason in an answer that is none. */
+export async function detailOf(response: Response): Promise<string> {
   const answer = (await response.json().catch(() => null)) as { detail?: string } | null;
   return answer?.detail ?? `The server answered ${response.status}.`;
 }
