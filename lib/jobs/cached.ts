@@ -32,27 +32,32 @@ function cache(): Cache {
  *  @param kind  name of the analysis, for the stored row
  *  @param key   see resultKey */
 export async function cached<Value>(kind: string, key: string, compute: () => Promise<Value>): Promise<Value> {
-  const { entries, inFlight } = cache();
-  const entry = entries.get(key);
-  if (entry) {
-    entries.delete(key);
-    entries.set(key, entry);
-    return entry.value as Value;
-  }
+  const { inFlight } = cache();
   const running = inFlight.get(key);
   if (running) return running as Promise<Value>;
-  const promise = fetchOrCompute(kind, key, compute).finally(() => inFlight.delete(key));
+  const kept = keptResult<Value>(kind, key);
+  if (kept) return kept.value;
+  const promise = computed(kind, key, compute).finally(() => inFlight.delete(key));
   inFlight.set(key, promise);
   return promise;
 }
 
-async function fetchOrCompute<Value>(kind: string, key: string, compute: () => Promise<Value>): Promise<Value> {
+/** A result that is there already, in memory or in the database, or null. `cached` without the computing. */
+export function keptResult<Value>(kind: string, key: string): { value: Value } | null {
+  const { entries } = cache();
+  const entry = entries.get(key);
+  if (entry) {
+    entries.delete(key);
+    entries.set(key, entry);
+    return { value: entry.value as Value };
+  }
   const stored = getResult(kind, key);
   const found = stored && decoded<Value>(stored);
-  if (stored && found) {
-    remember(key, found.value, stored.byteLength);
-    return found.value;
-  }
+  if (stored && found) remember(key, found.value, stored.byteLength);
+  return found;
+}
+
+async function computed<Value>(kind: string, key: string, compute: () => Promise<Value>): Promise<Value> {
   const value = await compute();
   const bytes = serialize(value);
   remember(key, value, bytes.byteLength);

@@ -79,20 +79,31 @@ export async function launchJob<Result>(
     changed: new EventEmitter().setMaxListeners(0),
     ended: Promise.resolve(),
   };
-  const turn = queues.get(kind) ?? Promise.resolve();
-  const result = turn.then(() => run(id, live, work, regionOf));
+  // Also while it waits its turn: a job without a heartbeat counts as dead.
+  const heartbeat = setInterval(() => void beatJob(id).catch(() => undefined), HEARTBEAT_MS);
+  const before = queues.get(kind) ?? Promise.resolve();
+  const turn = Promise.race([before, aborted(live.cancel.signal)]);
+  const result = turn.then(() => run(id, live, work, regionOf)).finally(() => clearInterval(heartbeat));
   live.ended = result.then(
     () => undefined,
     () => undefined,
   );
-  queues.set(kind, live.ended);
+  // One that was cancelled while it waited ends before the one it waited for; the next waits for both.
+  const queue = Promise.all([before, live.ended]).then(() => undefined);
+  queues.set(kind, queue);
   jobs.set(id, live);
+  void queue.then(() => {
+    if (queues.get(kind) === queue) queues.delete(kind);
+  });
   void live.ended.then(() => {
     jobs.delete(id);
-    if (queues.get(kind) === live.ended) queues.delete(kind);
     live.changed.emit('change');
   });
   return { id, result };
+}
+
+function aborted(signal: AbortSignal): Promise<void> {
+  return new Promise((resolve) => signal.addEventListener('abort', () => resolve(), { once: true }));
 }
 
 async function run<Result>(
@@ -102,7 +113,6 @@ async function run<Result>(
   regionOf: (result: Result) => number | undefined,
 ): Promise<Result> {
   const { signal } = live.cancel;
-  const heartbeat = setInterval(() => void beatJob(id).catch(() => undefined), HEARTBEAT_MS);
   let stored = 0;
   const report = (progress: unknown) => {
     live.progress = progress;
@@ -123,8 +133,6 @@ async function run<Result>(
     const ended = signal.aborted ? new CancelledError('Cancelled.', { cause: error }) : error;
     await finishJob(id, endOf(ended));
     throw ended;
-  } finally {
-    clearInterval(heartbeat);
   }
 }
 

@@ -34,6 +34,14 @@ export function resultKey(
   return hash.digest('hex');
 }
 
+/** Key of a result that is made of another one, and of nothing else but what is named here.
+ *  Example: derivedKey('certainty', rankingKey, 500) */
+export function derivedKey(analysis: string, key: string, ...terms: (string | number)[]): string {
+  return createHash('sha256')
+    .update(JSON.stringify([analysis, key, ...terms]))
+    .digest('hex');
+}
+
 function factsOf({ name, river, latitude, longitude, areaKm2, influence, derivedFrom }: StationFacts) {
   const measured = [name, river, latitude, longitude, areaKm2, influence];
   return derivedFrom === undefined ? measured : [...measured, derivedFrom];
