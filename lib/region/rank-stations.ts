@@ -6,6 +6,7 @@ import { byCode, placesOf } from './places.ts';
 import type { Ranking, RankingRow, StationFacts, StationMinima, Trend } from './ranking-types.ts';
 import { warningsOf } from './ranking-warnings.ts';
 import { noteOf, rankingFigure } from './row-notes.ts';
+import { steadinessOf } from './steadiness.ts';
 import { type TrendFigures, trendFamily } from './trend-family.ts';
 import { type UsedYears, usedYears } from './used-years.ts';
 
@@ -134,6 +135,7 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
       meanMinimum !== null && meanMinimum > 0 ? orNull((100 * YEARS_PER_DECADE * slope) / meanMinimum) : null;
     row.specificPerDecade = perArea(row.slopePerDecade, row.areaKm2);
     takeTest(row, figures[i], basis.alpha, 'minima');
+    row.steadiness = steadinessOf({ years: row.years, values: row.values }, basis.period).share;
   });
   const { order, place } = placesOf(
     entries.map(({ row }) => ({ figure: rankingFigure(row, basis.rankBy), code: row.code })),
@@ -150,12 +152,13 @@ function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
     entries.map(({ used }) => minusZeroDays(used)),
     basis.serialCorrection,
   );
-  entries.forEach(({ row }, i) => {
+  entries.forEach(({ row, used }, i) => {
     const { slope, low, high } = figures[i];
     row.zeroDaysPerDecade = orNull(-slope * YEARS_PER_DECADE);
     row.zeroDaysLow = orNull(-high * YEARS_PER_DECADE);
     row.zeroDaysHigh = orNull(-low * YEARS_PER_DECADE);
     takeTest(row, figures[i], basis.alpha, 'zero-days');
+    row.steadiness = steadinessOf(minusZeroDays(used), basis.period).share;
   });
   const { order } = placesOf(
     entries.map(({ row }) => ({
