@@ -1,7 +1,7 @@
 import type { ResolvedBasis } from '../basis.ts';
 import type { Ranking, RankingRow } from './ranking-types.ts';
 import { rankingFigure } from './row-notes.ts';
-import { FEWEST_FOR_REGIONAL } from './trend-family.ts';
+import { FEWEST_FOR_REGIONAL } from './serial-terms.ts';
 
 /** What a reader must know of a ranking as a whole, in sentences. */
 export function warningsOf(rows: readonly RankingRow[], basis: ResolvedBasis, counts: Ranking['counts']): string[] {

@@ -1,3 +1,4 @@
+import { type DatedValues, detrended } from './detrend.ts';
 import { averageRanks } from './ranks.ts';
 
 /** The bias correction divides by n − 4. */
@@ -6,18 +7,6 @@ const FEWEST_VALUES = 5;
 /** Upper cut of a lag-1 correlation, so that the variance factor stays finite in effect. */
 const LARGEST_LAG1 = 0.95;
 
-/** Detrended values are rounded to this many decimals, or ties would break in the last bit and move the ranks. */
-const DETREND_DECIMALS = 1e9;
-
-export interface DatedValues {
-  /** whole years, rising; gaps allowed */
-  years: ArrayLike<number>;
-  /** one value a year, none missing, same length as `years` */
-  values: ArrayLike<number>;
-  /** trend to take out, in units of `values` per year */
-  slope: number;
-}
-
 /** Lag-1 autocorrelation of the average ranks R of the detrended series, freed of its bias, not yet cut.
  *  r = Σ over pairs of consecutive years (R_t − R̄)(R_{t+1} − R̄) × n/(pairs + 1), over Σ (R − R̄)²; then
  *  (n·r + 1)/(n − 4), so a result may leave −1..1.
@@ -25,12 +14,10 @@ export interface DatedValues {
  *  @throws RangeError when lengths differ or years do not rise
  *  Source: Salas et al. 1980, Applied Modeling of Hydrologic Time Series (bias); ranks as in Hamed & Rao 1998,
  *  J. Hydrol. 204:182–196. */
-export function lag1OfRanks({ years, values, slope }: DatedValues): number {
-  const n = values.length;
-  if (years.length !== n) {
-    throw new RangeError(`lag1OfRanks: years and values must have the same length, got ${years.length} and ${n}`);
-  }
-  const ranks = averageRanks(detrended(years, values, slope));
+export function lag1OfRanks(series: DatedValues): number {
+  const { years } = series;
+  const ranks = averageRanks(detrended(series, 'lag1OfRanks'));
+  const n = ranks.length;
   const meanRank = (n + 1) / 2;
   let products = 0;
   let squares = 0;
@@ -38,26 +25,13 @@ export function lag1OfRanks({ years, values, slope }: DatedValues): number {
   for (let i = 0; i < n; i++) {
     const deviation = ranks[i] - meanRank;
     squares += deviation * deviation;
-    if (i === 0) continue;
-    if (!(years[i] > years[i - 1])) {
-      throw new RangeError(`lag1OfRanks: years must rise, got ${years[i]} after ${years[i - 1]}`);
-    }
-    if (years[i] !== years[i - 1] + 1) continue;
+    if (i === 0 || years[i] !== years[i - 1] + 1) continue;
     products += deviation * (ranks[i - 1] - meanRank);
     pairs++;
   }
   if (n < FEWEST_VALUES || pairs === 0 || squares === 0) return Number.NaN;
   const lag1 = ((products / squares) * n) / (pairs + 1);
   return (n * lag1 + 1) / (n - 4);
-}
-
-/** Time counts from the first year: with b·1985 in place of b·0 the last bits would differ. */
-function detrended(years: ArrayLike<number>, values: ArrayLike<number>, slope: number): Float64Array {
-  const rest = new Float64Array(values.length);
-  for (let i = 0; i < rest.length; i++) {
-    rest[i] = Math.round((values[i] - slope * (years[i] - years[0])) * DETREND_DECIMALS) / DETREND_DECIMALS;
-  }
-  return rest;
 }
 
 /** Draws lag-1 correlations of many series towards their mean, by what of their spread is not sampling error.

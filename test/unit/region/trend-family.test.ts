@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest';
-import { FEWEST_FOR_REGIONAL, trendFamily } from '../../../lib/region/trend-family.ts';
+import { FEWEST_FOR_REGIONAL } from '../../../lib/region/serial-terms.ts';
+import { trendFamily } from '../../../lib/region/trend-family.ts';
 import { mannKendall } from '../../../lib/statistics/mann-kendall.ts';
 import { senSlope } from '../../../lib/statistics/sen-slope.ts';
 import { ar1VarianceFactor, cutLag1, lag1OfRanks, shrinkLag1 } from '../../../lib/statistics/serial-correlation.ts';
