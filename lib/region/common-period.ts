@@ -1,6 +1,7 @@
-import type { AnnualMinima } from '../lowflow/annual-minima-types.ts';
 import { checkRule, commonPeriods, type PeriodCounts } from './common-periods.ts';
 import type { CompletenessRule } from './completeness.ts';
+import type { ZeroRule } from './index-facts.ts';
+import type { JudgedYears } from './used-years.ts';
 
 export interface CommonPeriod {
   /** [first, last] low-flow years; null when the usable years of the region span less than `minYears` */
@@ -14,10 +15,15 @@ export interface CommonPeriod {
  *  Only years between the first and the last usable year of any station are looked at. Where no period would let any
  *  station be ranked, those that only their zeros keep out count instead, so that intermittent rivers too are compared
  *  over common years.
+ *  @param zeroRule  see commonPeriods
  *  @throws RangeError when `minYears` is not a whole number of at least 1 or `minCoverage` not in 0..1 */
-export function commonPeriod(stations: readonly AnnualMinima[], rule: CompletenessRule): CommonPeriod {
+export function commonPeriod(
+  stations: readonly JudgedYears[],
+  rule: CompletenessRule,
+  zeroRule: ZeroRule = 'a-third',
+): CommonPeriod {
   checkRule('commonPeriod', rule);
-  return largestPeriod(commonPeriods(stations, rule), rule);
+  return largestPeriod(commonPeriods(stations, rule, zeroRule), rule);
 }
 
 /** The same where the counts of every period are known already, by the same rule. */

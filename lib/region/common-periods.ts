@@ -1,5 +1,6 @@
-import type { AnnualMinima } from '../lowflow/annual-minima-types.ts';
 import { type CompletenessRule, END_YEARS, tooManyZeros, yearsNeeded } from './completeness.ts';
+import type { ZeroRule } from './index-facts.ts';
+import type { JudgedYears } from './used-years.ts';
 
 /** How many stations would stay over every period. The counts of the period [firstYear + from, firstYear + to] stand at
  *  `from × years + to`; they are 0 where it is shorter than the rule's least, or runs backwards. */
@@ -10,20 +11,25 @@ export interface PeriodCounts {
   years: number;
   /** stations that would be ranked */
   ranked: Int32Array;
-  /** stations that would be complete enough, whatever their share of zero minima */
+  /** stations that would be complete enough, whatever their share of zeros */
   complete: Int32Array;
 }
 
 /** How many stations would be ranked over every period, by the rules by which they are ranked: usable years ≥ minYears, and
- *  ≥ minCoverage of the period, of its first ten and of its last ten years; fewer than a third of the minima zero.
+ *  ≥ minCoverage of the period, of its first ten and of its last ten years; not too many zeros among their figures.
+ *  @param zeroRule  how many zeros are too many: a third of the minima unless another index is compared
  *  @throws RangeError when `minYears` is not a whole number of at least 1 or `minCoverage` not in 0..1
  *  Time: stations × years², by running sums; 2,000 stations of 90 years take about a tenth of a second. */
-export function commonPeriods(stations: readonly AnnualMinima[], rule: CompletenessRule): PeriodCounts {
+export function commonPeriods(
+  stations: readonly JudgedYears[],
+  rule: CompletenessRule,
+  zeroRule: ZeroRule = 'a-third',
+): PeriodCounts {
   checkRule('commonPeriods', rule);
   const span = spanOfUsableYears(stations);
   if (span === null) return { firstYear: null, years: 0, ranked: new Int32Array(), complete: new Int32Array() };
   const years = span.last - span.first + 1;
-  return { firstYear: span.first, years, ...countStations(stations, span.first, years, rule) };
+  return { firstYear: span.first, years, ...countStations(stations, span.first, years, rule, zeroRule) };
 }
 
 /** @throws RangeError naming the caller for a rule that makes no sense */
@@ -36,7 +42,7 @@ export function checkRule(caller: string, { minYears, minCoverage }: Completenes
   }
 }
 
-function spanOfUsableYears(stations: readonly AnnualMinima[]): { first: number; last: number } | null {
+function spanOfUsableYears(stations: readonly JudgedYears[]): { first: number; last: number } | null {
   let first = Number.POSITIVE_INFINITY;
   let last = Number.NEGATIVE_INFINITY;
   for (const { years, usable } of stations) {
@@ -49,17 +55,18 @@ function spanOfUsableYears(stations: readonly AnnualMinima[]): { first: number; 
 }
 
 function countStations(
-  stations: readonly AnnualMinima[],
+  stations: readonly JudgedYears[],
   firstYear: number,
   years: number,
   { minYears, minCoverage }: CompletenessRule,
+  zeroRule: ZeroRule,
 ): { ranked: Int32Array; complete: Int32Array } {
   const ranked = new Int32Array(years * years);
   const complete = new Int32Array(years * years);
   const needed = Int32Array.from({ length: years + 1 }, (_, length) =>
     Math.max(minYears, yearsNeeded(minCoverage, length)),
   );
-  // usable years, and zero minima among them, before each year
+  // usable years, and zero figures among them, before each year
   const usableBefore = new Int32Array(years + 1);
   const zerosBefore = new Int32Array(years + 1);
   for (const station of stations) {
@@ -74,14 +81,14 @@ function countStations(
         if (usableBefore[from + end] - usableBefore[from] < neededOfEnd) continue;
         if (usableBefore[to + 1] - usableBefore[to + 1 - end] < neededOfEnd) continue;
         complete[from * years + to]++;
-        if (!tooManyZeros(zerosBefore[to + 1] - zerosBefore[from], usable)) ranked[from * years + to]++;
+        if (!tooManyZeros(zerosBefore[to + 1] - zerosBefore[from], usable, zeroRule)) ranked[from * years + to]++;
       }
     }
   }
   return { ranked, complete };
 }
 
-function runningSums(station: AnnualMinima, firstYear: number, usableBefore: Int32Array, zerosBefore: Int32Array) {
+function runningSums(station: JudgedYears, firstYear: number, usableBefore: Int32Array, zerosBefore: Int32Array) {
   usableBefore.fill(0);
   zerosBefore.fill(0);
   for (let i = 0; i < station.years.length; i++) {

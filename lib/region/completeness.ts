@@ -1,3 +1,5 @@
+import type { ZeroRule } from './index-facts.ts';
+
 /** How complete a station's years must be to be ranked. */
 export interface CompletenessRule {
   /** usable years needed */
@@ -16,7 +18,9 @@ export function yearsNeeded(minCoverage: number, length: number): number {
   return Math.max(0, Math.ceil(minCoverage * length - 1e-9));
 }
 
-/** True when a third or more of the minima are zero: a slope would then say little. */
-export function tooManyZeros(zeroMinima: number, years: number): boolean {
-  return years > 0 && 3 * zeroMinima >= years;
+/** True when zeros keep a station out of the ranking: a third or more of the annual figures, for a slope would then say
+ *  little; or, by the rule `all`, every one of them. */
+export function tooManyZeros(zeros: number, years: number, rule: ZeroRule = 'a-third'): boolean {
+  if (years <= 0 || rule === 'none') return false;
+  return rule === 'all' ? zeros >= years : 3 * zeros >= years;
 }

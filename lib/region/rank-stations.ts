@@ -2,13 +2,15 @@ import type { Basis, ResolvedBasis } from '../basis.ts';
 import { checkStartMonth } from '../calendar/low-flow-year.ts';
 import { commonPeriod } from './common-period.ts';
 import { type Standing, standingOf } from './eligibility.ts';
+import { INDEX_FACTS, isOfMinus, percentOfMean, testedSeries } from './index-facts.ts';
 import { byCode, placesOf } from './places.ts';
+import { rankingFigure } from './ranking-figure.ts';
 import type { Ranking, RankingRow, StationFacts, StationMinima, Trend } from './ranking-types.ts';
 import { warningsOf } from './ranking-warnings.ts';
-import { noteOf, rankingFigure } from './row-notes.ts';
+import { noteOf } from './row-notes.ts';
 import { steadinessOf } from './steadiness.ts';
 import { type TrendFigures, trendFamily } from './trend-family.ts';
-import { type UsedYears, usedYears } from './used-years.ts';
+import { judgedYears, type UsedYears, usedYears } from './used-years.ts';
 
 const YEARS_PER_DECADE = 10;
 const LITRES = 1000;
@@ -20,15 +22,19 @@ interface Entry {
   standing: Standing;
 }
 
-/** The stations of a region in order of the trend in their annual minima, most strongly declining first.
+/** The stations of a region in order of the trend in their annual minima, or in the basis's other index, most strongly
+ *  declining first. Where more of an index is drier (zero-flow days, deficit), minus the index is tested, so that
+ *  falling always is drier; slopes keep the index's own sign.
  *
  *  Resolves the common period, says who is ranked and why others are not, tests and adjusts over all ranked stations,
- *  and gives places by the basis's ranking figure. Stations with a third or more zero minima stand under Drying, in
- *  order of the change in zero-flow days per decade, most first: a family of tests of their own, on minus the days.
- *  @param stations   annual minima under the basis's days, season, completeness and `yearStart`; in any order
+ *  and gives places by the basis's ranking figure. Stations of which a third or more of the flows compared are zero
+ *  stand under Drying, in order of the change in zero-flow days per decade, most first: a family of tests of their own,
+ *  on minus the days.
+ *  @param stations   annual minima under the basis's days, season, completeness and `yearStart`, with the figures of an
+ *                    index that the minima do not bring along; in any order
  *  @param yearStart  start month of those low-flow years, resolved, 1–12
  *  @returns          a row for every station: ranked, then drying, then the others by code
- *  @throws RangeError when `yearStart` is no month
+ *  @throws RangeError when `yearStart` is no month, or such figures are missing
  *  Sources: Mann–Kendall, Theil–Sen, serial correction and false discovery rate at the functions of `lib/statistics`. */
 export function rankRegion(stations: readonly StationMinima[], basis: Basis, yearStart: number): Ranking {
   checkStartMonth('rankRegion', yearStart);
@@ -59,19 +65,20 @@ function resolveBasis(stations: readonly StationMinima[], basis: Basis, yearStar
   const period =
     basis.period === 'common'
       ? commonPeriod(
-          stations.map(({ minima }) => minima),
+          stations.map(({ minima, figures }) => judgedYears(minima, basis.index, figures ?? null)),
           basis,
+          INDEX_FACTS[basis.index].zeroRule,
         ).period
       : basis.period;
   return { ...basis, period, yearStart, asked: { period: basis.period, yearStart: basis.yearStart } };
 }
 
 /** A row with all that needs no test. */
-function entryOf({ station, minima }: StationMinima, basis: ResolvedBasis): Entry {
-  const used = usedYears(minima, basis.period);
+function entryOf({ station, minima, figures }: StationMinima, basis: ResolvedBasis): Entry {
+  const used = usedYears(minima, basis.period, basis.index, figures);
   const standing = standingOf(used, basis.period, basis);
   const n = used.years.length;
-  const meanMinimum = n ? used.minima.reduce((sum, minimum) => sum + minimum, 0) / n : null;
+  const meanMinimum = meanOf(used.minima);
   const row: RankingRow = {
     ...factsOf(station),
     rank: null,
@@ -105,8 +112,8 @@ function entryOf({ station, minima }: StationMinima, basis: ResolvedBasis): Entr
     intercept: null,
     years: used.years,
     minima: used.minima,
-    values: used.minima,
-    meanValue: meanMinimum,
+    values: used.values,
+    meanValue: meanOf(used.values),
     valueSlope: null,
     valueSlopeLow: null,
     valueSlopeHigh: null,
@@ -116,26 +123,20 @@ function entryOf({ station, minima }: StationMinima, basis: ResolvedBasis): Entr
 }
 
 function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
+  const trendOf = basis.index === 'minimum' ? 'minima' : basis.index;
   const figures = trendFamily(
-    entries.map(({ used }) => ({ years: used.years, values: used.minima })),
+    entries.map(({ row }) => ({ ...testedSeries({ ...row, trendOf }), label: row.code })),
     basis.serialCorrection,
   );
   entries.forEach(({ row }, i) => {
-    const { slope, low, high, intercept } = figures[i];
-    const { meanMinimum } = row;
-    row.slopePerDecade = orNull(slope * YEARS_PER_DECADE);
-    row.slopeLow = orNull(low * YEARS_PER_DECADE);
-    row.slopeHigh = orNull(high * YEARS_PER_DECADE);
-    row.intercept = orNull(intercept);
-    row.valueSlope = row.slopePerDecade;
-    row.valueSlopeLow = row.slopeLow;
-    row.valueSlopeHigh = row.slopeHigh;
-    // a mean below 0 (flow upstream) would turn the sign of the percentage
-    row.percentPerDecade =
-      meanMinimum !== null && meanMinimum > 0 ? orNull((100 * YEARS_PER_DECADE * slope) / meanMinimum) : null;
-    row.specificPerDecade = perArea(row.slopePerDecade, row.areaKm2);
-    takeTest(row, figures[i], basis.alpha, 'minima');
-    row.steadiness = steadinessOf({ years: row.years, values: row.values }, basis.period).share;
+    takeTest(row, figures[i], basis, trendOf);
+    row.percentPerDecade = percentOfMean(row.valueSlope, basis.index, row.meanValue);
+    if (INDEX_FACTS[basis.index].isFlow) {
+      row.slopePerDecade = row.valueSlope;
+      row.slopeLow = row.valueSlopeLow;
+      row.slopeHigh = row.valueSlopeHigh;
+      row.specificPerDecade = perArea(row.slopePerDecade, row.areaKm2);
+    }
   });
   const { order, place } = placesOf(
     entries.map(({ row }) => ({ figure: rankingFigure(row, basis.rankBy), code: row.code })),
@@ -147,18 +148,19 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
 }
 
 function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
-  // minus the days, so that a station that dries for longer is falling
+  for (const { row, used } of entries) {
+    row.values = used.zeroDays;
+    row.meanValue = meanOf(row.values);
+  }
   const figures = trendFamily(
-    entries.map(({ used }) => minusZeroDays(used)),
+    entries.map(({ row }) => ({ ...testedSeries({ ...row, trendOf: 'zero-days' }), label: row.code })),
     basis.serialCorrection,
   );
-  entries.forEach(({ row, used }, i) => {
-    const { slope, low, high } = figures[i];
-    row.zeroDaysPerDecade = orNull(-slope * YEARS_PER_DECADE);
-    row.zeroDaysLow = orNull(-high * YEARS_PER_DECADE);
-    row.zeroDaysHigh = orNull(-low * YEARS_PER_DECADE);
-    takeTest(row, figures[i], basis.alpha, 'zero-days');
-    row.steadiness = steadinessOf(minusZeroDays(used), basis.period).share;
+  entries.forEach(({ row }, i) => {
+    takeTest(row, figures[i], basis, 'zero-days');
+    row.zeroDaysPerDecade = row.valueSlope;
+    row.zeroDaysLow = row.valueSlopeLow;
+    row.zeroDaysHigh = row.valueSlopeHigh;
   });
   const { order } = placesOf(
     entries.map(({ row }) => ({
@@ -169,13 +171,14 @@ function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
   return order.map((i) => entries[i]);
 }
 
-function minusZeroDays({ years, zeroDays }: UsedYears): { years: number[]; values: number[] } {
-  const known = years.map((_, i) => i).filter((i) => !Number.isNaN(zeroDays[i]));
-  return { years: known.map((i) => years[i]), values: known.map((i) => -zeroDays[i]) };
-}
-
-function takeTest(row: RankingRow, figures: TrendFigures, alpha: number, trendOf: RankingRow['trendOf']): void {
-  const { z, p, tau, pAdjusted, r1, serialFactor } = figures;
+/** The figures of a test, slopes turned back to the sign of the values where minus the values were tested. */
+function takeTest(
+  row: RankingRow,
+  figures: TrendFigures,
+  { alpha, period }: ResolvedBasis,
+  trendOf: NonNullable<RankingRow['trendOf']>,
+): void {
+  const { z, p, tau, pAdjusted, r1, serialFactor, slope, low, high, intercept } = figures;
   row.z = orNull(z);
   row.p = orNull(p);
   row.tau = orNull(tau);
@@ -185,6 +188,17 @@ function takeTest(row: RankingRow, figures: TrendFigures, alpha: number, trendOf
   row.trendOf = trendOf;
   if (!(pAdjusted < alpha)) row.trend = 'none';
   else row.trend = z < 0 ? 'falling' : 'rising';
+  const turned = isOfMinus(trendOf);
+  const sign = turned ? -1 : 1;
+  row.valueSlope = orNull(sign * slope * YEARS_PER_DECADE);
+  row.valueSlopeLow = orNull(sign * (turned ? high : low) * YEARS_PER_DECADE);
+  row.valueSlopeHigh = orNull(sign * (turned ? low : high) * YEARS_PER_DECADE);
+  row.intercept = orNull(sign * intercept);
+  row.steadiness = steadinessOf(testedSeries(row), period).share;
+}
+
+function meanOf(values: readonly number[]): number | null {
+  return values.length ? values.reduce((sum, value) => sum + value, 0) / values.length : null;
 }
 
 /** m³/s over the drainage area, as L/s/km²; null without either. */

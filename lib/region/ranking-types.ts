@@ -1,4 +1,4 @@
-import type { ResolvedBasis } from '../basis.ts';
+import type { AnnualIndexName, ResolvedBasis } from '../basis.ts';
 import type { AnnualMinima } from '../lowflow/annual-minima-types.ts';
 
 export const INFLUENCES = [
@@ -30,6 +30,8 @@ export interface StationFacts {
 export interface StationMinima {
   station: StationFacts;
   minima: AnnualMinima;
+  /** one a year of the minima: the basis's index, where the minima do not bring it along; NaN where a year has none */
+  figures?: Float64Array;
 }
 
 export type Trend = 'falling' | 'rising' | 'none';
@@ -46,19 +48,21 @@ export interface RankingRow extends StationFacts {
   meanMinimum: number | null;
   /** L/s/km² */
   meanMinimumSpecific: number | null;
-  /** m³/s per decade, with its 95 % interval */
+  /** m³/s per decade, with its 95 % interval; null where what is compared is no flow */
   slopePerDecade: number | null;
   slopeLow: number | null;
   slopeHigh: number | null;
+  /** of the mean value, with the slope's sign; null where that mean is not above 0, for zero-flow days and for dates */
   percentPerDecade: number | null;
-  /** L/s/km² per decade */
+  /** L/s/km² per decade; null where what is compared is no flow */
   specificPerDecade: number | null;
   tau: number | null;
   z: number | null;
   p: number | null;
   pAdjusted: number | null;
   trend: Trend | null;
-  trendOf: 'minima' | 'zero-days' | null;
+  /** what z, p, tau and trend speak of: of minus the days, or volumes, for zero days and deficits */
+  trendOf: 'minima' | 'zero-days' | Exclude<AnnualIndexName, 'minimum'> | null;
   /** usable years with an n-day minimum of 0 */
   zeroFlowYears: number;
   /** for stations under Drying: days per decade, with its 95 % interval */
@@ -73,13 +77,14 @@ export interface RankingRow extends StationFacts {
   /** lag-1 correlation and variance factor that the test used */
   r1: number | null;
   serialFactor: number | null;
-  /** m³/s: level of the slope line at t = 0 (calendar year 0), median of x − b·t */
+  /** level of the slope line at t = 0 (calendar year 0), median of x − b·t; in the unit of the values */
   intercept: number | null;
   /** the usable years and their minima in m³/s: what the trend rests on */
   years: number[];
   minima: number[];
-  /** the annual figures that were tested and ranked: the minima, or those of the basis's other index, one a year of
-   *  `years`; mean and slope per decade with its 95 % interval in the index's own unit and sign */
+  /** the annual figures that were tested and ranked: the minima, or those of the basis's other index, or under Drying
+   *  the zero-flow days; one a year of `years`, with mean and slope per decade (95 % interval) in their own unit and
+   *  sign */
   values: number[];
   meanValue: number | null;
   valueSlope: number | null;

@@ -1,6 +1,6 @@
 import type { ResolvedBasis } from '../basis.ts';
+import { rankingFigure } from './ranking-figure.ts';
 import type { Ranking, RankingRow } from './ranking-types.ts';
-import { rankingFigure } from './row-notes.ts';
 import { FEWEST_FOR_REGIONAL } from './serial-terms.ts';
 
 /** What a reader must know of a ranking as a whole, in sentences. */

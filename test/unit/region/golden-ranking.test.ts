@@ -60,6 +60,7 @@ function frozen() {
       ...row,
       minima: row.minima.length,
       years: row.years.length,
+      values: row.values.length,
       verdict: verdict(row, rest.basis),
     })),
   }));

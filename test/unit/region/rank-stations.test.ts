@@ -158,7 +158,11 @@ test('rankRegion puts drying stations between, by change in zero-flow days, most
     zeroFlowYears: 3,
     slopePerDecade: null,
     percentPerDecade: null,
-    intercept: null,
+    // what its trend speaks of: days, with the line 10·(year − 2000) through them
+    values: [10, 20, 30, 40, 50],
+    meanValue: 30,
+    valueSlope: 100,
+    intercept: -20_000,
   });
   // exact p 1/60 twice and 1: 3/2 · 1/60, apart from the one ranked station, whose p stays 1/60
   expect(worse.pAdjusted).toBeCloseTo(1 / 40, 14);
