@@ -1,9 +1,9 @@
 import { describe, expect, test } from 'vitest';
+import { yearTicks } from '@/app/components/year-ticks';
 import { coverageText } from '@/app/regions/[region]/stations/[code]/coverage-text';
 import { minimaPoints } from '@/app/regions/[region]/stations/[code]/minima-points';
 import { placeOf } from '@/app/regions/[region]/stations/[code]/ranking-place';
 import { readingText } from '@/app/regions/[region]/stations/[code]/reading-text';
-import { yearTicks } from '@/app/regions/[region]/stations/[code]/time-axis';
 import type { AnnualMinima } from '@/lib/lowflow/annual-minima-types';
 import type { RankingRow } from '@/lib/region/ranking-types';
 

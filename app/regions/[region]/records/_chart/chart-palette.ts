@@ -1,6 +1,5 @@
 'use client';
-import { useEffect, useState } from 'react';
-import { onThemeChange, readTokens } from '@/app/components/canvas/tokens';
+import { CANVAS_FONT, useTokens } from '@/app/components/canvas/use-tokens';
 
 const TOKENS = {
   paper: '--paper',
@@ -19,14 +18,6 @@ const TOKENS = {
 export type ChartPalette = Record<keyof typeof TOKENS, string>;
 
 /** The colours of the theme that is shown, read anew when it changes; null before the page is there. */
-export function useChartPalette(): ChartPalette | null {
-  const [palette, setPalette] = useState<ChartPalette | null>(null);
-  useEffect(() => {
-    const read = () => setPalette(readTokens(TOKENS));
-    read();
-    return onThemeChange(read);
-  }, []);
-  return palette;
-}
+export const useChartPalette = (): ChartPalette | null => useTokens(TOKENS);
 
-export const CHART_FONT = '"Inter Variable", system-ui, sans-serif';
+export const CHART_FONT = CANVAS_FONT;

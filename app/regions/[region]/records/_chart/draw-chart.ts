@@ -1,6 +1,6 @@
 import { markedChanges, yearPosition } from '@/app/components/change-marks/marked-changes';
+import { yearTicks } from '@/app/components/year-ticks';
 import type { RegionRecords } from '@/lib/jobs/records-types';
-import { yearTicks } from '../../stations/[code]/time-axis.ts';
 import { type CellPlace, type ChartLayout, rowY, type Scroll, visibleRows, yearX } from './chart-layout.ts';
 import { CHART_FONT } from './chart-palette.ts';
 import { type CellLook, drawCell, drawChange } from './draw-cell.ts';

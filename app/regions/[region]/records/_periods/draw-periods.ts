@@ -1,5 +1,5 @@
+import { yearTicks } from '@/app/components/year-ticks';
 import type { CommonPeriods } from '@/lib/jobs/records-types';
-import { yearTicks } from '../../stations/[code]/time-axis.ts';
 import { CHART_FONT, type ChartPalette } from '../_chart/chart-palette.ts';
 import { type PeriodLayout, periodCount, periodXY } from './period-grid.ts';
 

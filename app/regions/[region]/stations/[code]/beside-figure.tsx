@@ -4,11 +4,11 @@ import { ChangeMarks } from '@/app/components/change-marks/change-marks';
 import { type MarkedChange, placeChanges, tabsHeight } from '@/app/components/change-marks/marked-changes';
 import { tickText } from '@/app/components/duration-figure/figure-text';
 import { useWidth } from '@/app/components/use-width';
+import { yearTicks } from '@/app/components/year-ticks';
 import { dateOfDay, dayNumber } from '@/lib/calendar/day';
 import type { BesideFlow, Columns } from '@/lib/jobs/beside-flow';
 import styles from './beside-figure.module.css';
 import { PLOT } from './plot-box';
-import { yearTicks } from './time-axis';
 
 interface Props extends BesideFlow {
   changes: readonly MarkedChange[];

@@ -10,11 +10,11 @@ import {
 } from '@/app/components/change-marks/marked-changes';
 import { yearHref } from '@/app/components/links';
 import { useWidth } from '@/app/components/use-width';
+import { yearTicks } from '@/app/components/year-ticks';
 import type { YearCoverage } from '@/lib/jobs/types';
 import styles from './coverage-strip.module.css';
 import { coverageText } from './coverage-text';
 import { PLOT } from './plot-box';
-import { yearTicks } from './time-axis';
 import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
 

@@ -11,13 +11,13 @@ import {
 import { tickText } from '@/app/components/duration-figure/figure-text';
 import { LevelLines } from '@/app/components/level-lines/level-lines';
 import { useWidth } from '@/app/components/use-width';
+import { yearTicks } from '@/app/components/year-ticks';
 import type { SlopeLine } from '@/lib/jobs/types';
 import styles from './minima-figure.module.css';
 import type { MinimaPoint } from './minima-points';
 import type { NamedLevel } from './named-levels';
 import { PLOT } from './plot-box';
 import { readingText } from './reading-text';
-import { yearTicks } from './time-axis';
 import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
 
