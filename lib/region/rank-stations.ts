@@ -1,4 +1,4 @@
-import type { Basis, ResolvedBasis } from '../basis.ts';
+import { type Basis, basisText, type ResolvedBasis } from '../basis.ts';
 import { checkStartMonth } from '../calendar/low-flow-year.ts';
 import { commonPeriod } from './common-period.ts';
 import { type Standing, standingOf } from './eligibility.ts';
@@ -127,6 +127,7 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
   const figures = trendFamily(
     entries.map(({ row }) => ({ ...testedSeries({ ...row, trendOf }), label: row.code })),
     basis.serialCorrection,
+    seedOf(basis),
   );
   entries.forEach(({ row }, i) => {
     takeTest(row, figures[i], basis, trendOf);
@@ -155,6 +156,7 @@ function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
   const figures = trendFamily(
     entries.map(({ row }) => ({ ...testedSeries({ ...row, trendOf: 'zero-days' }), label: row.code })),
     basis.serialCorrection,
+    seedOf(basis),
   );
   entries.forEach(({ row }, i) => {
     takeTest(row, figures[i], basis, 'zero-days');
@@ -200,6 +202,9 @@ function takeTest(
 function meanOf(values: readonly number[]): number | null {
   return values.length ? values.reduce((sum, value) => sum + value, 0) / values.length : null;
 }
+
+/** Names random draws together with a series' own values, so that what shaped these need not be named again. */
+const seedOf = (basis: ResolvedBasis): string => basisText(basis, ['index', 'serialCorrection']);
 
 /** m³/s over the drainage area, as L/s/km²; null without either. */
 function perArea(flowM3s: number | null, areaKm2: number | null): number | null {
