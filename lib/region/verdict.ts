@@ -1,5 +1,6 @@
 import { MONTHS, type ResolvedBasis } from '../basis.ts';
 import type { RankingRow } from './ranking-types.ts';
+import { intervalWords, plain, probability, signed } from './sentence-figures.ts';
 
 /** A station's trend in one sentence, with its figures and their uncertainty; why there is none, where there is none.
  *  Example: "Falling: the 7-day minimum lost 6.2 % of its mean per decade (95 % interval −9.1 to −2.8), 1985–2024,
@@ -48,27 +49,4 @@ function minimumWords({ days, season }: ResolvedBasis): string {
 
 function evidence({ firstYear, lastYear, yearsUsed, pAdjusted }: RankingRow): string {
   return `${firstYear}–${lastYear}, ${yearsUsed} usable years, adjusted p ${probability(pAdjusted)}`;
-}
-
-function intervalWords(low: number | null, high: number | null): string {
-  if (low === null || high === null) return 'too few years for a 95 % interval';
-  return `95 % interval ${signed(low)} to ${signed(high)}`;
-}
-
-function probability(p: number | null): string {
-  if (p === null) return 'none';
-  return p < 0.001 ? 'below 0.001' : plain(p);
-}
-
-/** Two significant digits, or all digits before the point: 6.2, 0.31, 128. */
-function plain(value: number): string {
-  if (Number.isNaN(value)) return 'an unknown amount';
-  return Math.abs(value) >= 100 ? String(Math.round(value)) : String(Number(value.toPrecision(2)));
-}
-
-/** With its sign, a true minus: −6.2, +1.7, 0. */
-function signed(value: number): string {
-  const text = plain(Math.abs(value));
-  if (!(Math.abs(value) > 0) || text === '0') return text;
-  return `${value < 0 ? '−' : '+'}${text}`;
 }

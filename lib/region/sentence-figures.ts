@@ -1,0 +1,26 @@
+/** Figures as they stand in sentences. */
+
+/** Two significant digits, or all digits before the point: 6.2, 0.31, 128. */
+export function plain(value: number): string {
+  if (Number.isNaN(value)) return 'an unknown amount';
+  return Math.abs(value) >= 100 ? String(Math.round(value)) : String(Number(value.toPrecision(2)));
+}
+
+/** With its sign, a true minus: −6.2, +1.7, 0. */
+export function signed(value: number): string {
+  const text = plain(Math.abs(value));
+  if (!(Math.abs(value) > 0) || text === '0') return text;
+  return `${value < 0 ? '−' : '+'}${text}`;
+}
+
+/** Example: "95 % interval −9.1 to −2.8" */
+export function intervalWords(low: number | null, high: number | null): string {
+  if (low === null || high === null) return 'too few years for a 95 % interval';
+  return `95 % interval ${signed(low)} to ${signed(high)}`;
+}
+
+/** A p-value: two significant digits, "below 0.001", or "none". */
+export function probability(p: number | null): string {
+  if (p === null) return 'none';
+  return p < 0.001 ? 'below 0.001' : plain(p);
+}
