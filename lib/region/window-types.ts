@@ -10,15 +10,26 @@ export interface StartEnd {
   ends: number[];
   /** NaN where the window has fewer than 15 usable years */
   z: Float32Array;
+  /** in percent of the window's mean, with the sign of the slope; NaN where the mean is not above 0, or where a percentage
+   *  means nothing */
   percentPerDecade: Float32Array;
+  /** unit and sign of the index itself: m³/s for minima, days under Drying. Z is below 0 where it gets drier */
+  slopePerDecade: Float32Array;
   /** unadjusted */
   p: Float32Array;
   /** share of the windows with the sign of the whole period; null without a sign or windows */
   steadiness: number | null;
+  /** pairs of a start and an end year with at least 15 usable years between */
   windows: number;
 }
 
-/** Start–end chart of a region: over the ranked stations that have the window. */
+/** A chart as it goes over HTTP: lists of numbers with 4 significant digits, null where there is none. */
+export type OnTheWire<Chart> = {
+  [Key in keyof Chart]: Chart[Key] extends ArrayBufferView ? (number | null)[] : Chart[Key];
+};
+
+/** Start–end chart of a region: over the ranked stations that have the window. Serial correction as in the stations'
+ *  own charts. */
 export interface RegionStartEnd {
   starts: number[];
   ends: number[];

@@ -13,6 +13,7 @@ import { KEPT_PATHS } from './paths-mappings';
 import { RECORD_PATHS } from './paths-records';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
+import { WINDOW_PATHS } from './paths-windows';
 
 const TABLE = {
   'application/json': { schema: anything },
@@ -94,6 +95,7 @@ export const PATHS = {
   ...DAY_PATHS,
   ...RECORD_PATHS,
   ...STATION_PATHS,
+  ...WINDOW_PATHS,
   '/api/regions/{region}/layers': {
     get: { summary: 'Map layers', parameters: [REGION], responses: answers('the layers', json(listOf('Layer'))) },
   },

@@ -1,0 +1,31 @@
+import type * as z from 'zod';
+import { plainFormatParameter } from '../_http/plain-table';
+import { BASIS_PARAMETERS, type Parameter, queryParameters, REGION, STATION } from './parameters';
+import { answers, anything, json, text } from './parts';
+
+/** A table under a basis whose rows are no places. */
+function plainTable(summary: string, path: Parameter[], shape: z.ZodRawShape, content: object = json(anything)) {
+  return {
+    get: {
+      summary,
+      parameters: [...path, ...queryParameters(shape), ...BASIS_PARAMETERS],
+      responses: {
+        ...answers('the table, with an ETag', {
+          ...content,
+          'text/csv': { schema: text },
+          'application/csvm+json': { schema: anything },
+        }),
+        '304': { description: 'unchanged since the entity tag of If-None-Match' },
+      },
+    },
+  };
+}
+
+/** How answers depend on the years and the other terms, and levels before and after. */
+export const WINDOW_PATHS = {
+  '/api/regions/{region}/stations/{code}/start-end': plainTable(
+    'Trend of a station for every start year and end year',
+    [REGION, STATION],
+    plainFormatParameter,
+  ),
+};
