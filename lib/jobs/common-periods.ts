@@ -2,6 +2,7 @@ import type { Basis, BasisKey, ResolvedBasis } from '../basis.ts';
 import type { PeriodCounts } from '../region/common-periods.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { cached } from './cached.ts';
+import { indexFiguresOf } from './index-figures.ts';
 import { packedMinimaOf, type RegionMinima } from './minima.ts';
 import { runTask } from './pool.ts';
 import type { CommonPeriods } from './records-types.ts';
@@ -9,7 +10,7 @@ import { withInputs } from './region-inputs.ts';
 import { resultKey, type StationInput } from './result-key.ts';
 
 const KEYS: readonly BasisKey[] = [
-  ...(['yearStart', 'season', 'days', 'maxMissingDays', 'exclude', 'minYears', 'minCoverage'] as const),
+  ...(['yearStart', 'season', 'days', 'maxMissingDays', 'exclude', 'minYears', 'minCoverage', 'index'] as const),
 ];
 
 /** Counts of every period, with the key that they stand under. */
@@ -41,13 +42,17 @@ export async function commonPeriodsOf(
 /** The counts as kept, or computed now in a worker. */
 export async function periodCountsOf(
   stations: readonly StationInput[],
-  { packed, yearStart }: RegionMinima,
+  regionMinima: RegionMinima,
   basis: Basis,
 ): Promise<KeyedPeriods> {
-  const { minYears, minCoverage } = basis;
+  const { packed, yearStart } = regionMinima;
+  const { minYears, minCoverage, index } = basis;
   const key = resultKey('common-periods', { values: { ...basis, yearStart }, keys: KEYS }, stations, 'none');
-  const rule = { minYears, minCoverage };
-  return { ...(await cached('common-periods', key, () => runTask('commonPeriods', { minima: packed, rule }))), key };
+  const counts = await cached('common-periods', key, async () => {
+    const figures = await indexFiguresOf(stations, regionMinima, basis);
+    return runTask('commonPeriods', { minima: packed, figures, index, rule: { minYears, minCoverage } });
+  });
+  return { ...counts, key };
 }
 
 /** The basis with what its `common` and `auto` come to, as the ranking resolves them. */

@@ -94,6 +94,14 @@ export function unpackMinima(packed: PackedMinima): Map<number, AnnualMinima> {
   return result;
 }
 
+/** Figures that run along a pack's years, by station; views into `figures`. */
+export function figuresByStation(
+  { stationIds, starts }: PackedMinima,
+  figures: Float64Array,
+): Map<number, Float64Array> {
+  return new Map(Array.from(stationIds, (id, i) => [id, figures.subarray(starts[i], starts[i + 1])]));
+}
+
 /** One pack of several, in their order. */
 export function joinPacked(packs: readonly PackedMinima[]): PackedMinima {
   const all = packs.flatMap((pack) => [...unpackMinima(pack)].map(([stationId, minima]) => ({ stationId, minima })));

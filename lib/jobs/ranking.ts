@@ -2,6 +2,7 @@ import { BASIS_KEYS, type Basis } from '../basis.ts';
 import type { Ranking } from '../region/ranking-types.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { cached } from './cached.ts';
+import { indexFiguresOf } from './index-figures.ts';
 import { packedMinimaOf } from './minima.ts';
 import { runTask } from './pool.ts';
 import { withInputs } from './region-inputs.ts';
@@ -20,8 +21,10 @@ export async function rankingOf(
   return withInputs(region.id, async (inputs) => {
     const key = resultKey('ranking', { values: basis, keys: KEYS }, inputs);
     const ranking = await cached('ranking', key, async () => {
-      const { packed, yearStart } = await packedMinimaOf(inputs, basis);
-      return runTask('rank', { stations: inputs.map(({ facts }) => facts), minima: packed, basis, yearStart });
+      const minima = await packedMinimaOf(inputs, basis);
+      const figures = await indexFiguresOf(inputs, minima, basis);
+      const { packed, yearStart } = minima;
+      return runTask('rank', { stations: inputs.map(({ facts }) => facts), minima: packed, figures, basis, yearStart });
     });
     const { normalise, units } = basis;
     return { ranking: { ...ranking, basis: { ...ranking.basis, normalise, units } }, key };

@@ -1,5 +1,6 @@
 /** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
  *  worker starts quickly. */
+export { annualIndex } from './tasks/annual-index.ts';
 export { checkRecords } from './tasks/check-records.ts';
 export { commonPeriods } from './tasks/common-periods.ts';
 export { coverage } from './tasks/coverage.ts';
