@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import styles from './cautions.module.css';
 
 /** What stands under every result. */
@@ -16,6 +17,11 @@ export function Cautions() {
         <li>Provisional data may change. Lows affected by ice are estimates; a new rating or weir makes a step.</li>
         <li>Low flows are measured to 10–20 % at best. Short or variable stations crowd both ends of any ranking.</li>
         <li>Spells of several decades can look like a trend, and no test here rules that out.</li>
+        <li>
+          <Link href="/methods" prefetch={false}>
+            Methods, their sources, and when not to trust them
+          </Link>
+        </li>
       </ul>
     </details>
   );

@@ -19,6 +19,7 @@ Usage: npx hungerstone COMMAND [options]
   test      every test
   check     types, format, import floors, sizes, licences
   bench     times and sizes
+  validate  what the methods promise, simulated
 
 npx hungerstone COMMAND --help tells the options of import to serve. Results go to stdout or --out, progress to stderr.
 Exit codes: 0 done, 1 failed and nothing changed, 2 wrong usage; import also 3: taken in, with rejected rows.

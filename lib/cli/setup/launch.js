@@ -11,6 +11,7 @@ const TASKS = {
   test: () => import('./tasks/test.js'),
   check: () => import('./tasks/check.js'),
   bench: () => import('./tasks/bench.js'),
+  validate: () => import('./tasks/validate.js'),
 };
 
 /** Runs one command line.

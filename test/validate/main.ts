@@ -1,0 +1,66 @@
+/** `npm run validate`: simulates, prints each figure beside what it is meant to be, and with --write keeps the figures
+ *  where the program, its methods page and the README take them from. Words given to it choose claims. */
+import { readFileSync, writeFileSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import { isMainThread, parentPort, Worker, workerData } from 'node:worker_threads';
+import { METHODS_VERSION } from '../../lib/region/methods-version.ts';
+import type { SimulatedFigure } from '../../lib/region/simulated-figures.ts';
+import { figureOf, isAsMeant } from './figure.ts';
+import { figuresTable, withTable } from './print.ts';
+import { SCENARIOS } from './scenarios.ts';
+
+const THREADS = 2;
+const FIGURES_FILE = 'lib/region/simulated-figures.json';
+const README = 'README.md';
+
+/** Runs one scenario in a thread of its own. */
+const inThread = (place: number): Promise<SimulatedFigure> =>
+  new Promise((resolve, reject) => {
+    const worker = new Worker(fileURLToPath(import.meta.url), { workerData: { place } });
+    worker.once('message', resolve);
+    worker.once('error', reject);
+  });
+
+async function main(argv: string[]): Promise<number> {
+  const write = argv.includes('--write');
+  const chosen = argv.filter((word) => !word.startsWith('--'));
+  const places = SCENARIOS.map((_, place) => place).filter(
+    (place) => chosen.length === 0 || chosen.includes(SCENARIOS[place].claim),
+  );
+  if (places.length === 0) {
+    const claims = [...new Set(SCENARIOS.map(({ claim }) => claim))];
+    process.stderr.write(`No such claim. The claims are ${claims.join(', ')}.\n`);
+    return 2;
+  }
+  const figures = new Map<number, SimulatedFigure>();
+  const queue = places.values();
+  const lane = async () => {
+    for (const place of queue) {
+      figures.set(place, await inThread(place));
+      process.stderr.write(`${figures.size} of ${places.length} simulated\n`);
+    }
+  };
+  await Promise.all(Array.from({ length: THREADS }, lane));
+  const got = places.map((place) => figures.get(place)!);
+  process.stdout.write(`${figuresTable(got)}\n`);
+  if (write) keep(got);
+  const off = got.filter((figure) => !isAsMeant(figure));
+  for (const { claim, of, setting, value } of off)
+    process.stdout.write(`NOT AS MEANT: ${claim}, ${of}, ${setting}: ${value}\n`);
+  return off.length === 0 ? 0 : 1;
+}
+
+/** Lays figures over those that are kept; the order is that of the scenarios. */
+function keep(got: readonly SimulatedFigure[]): void {
+  const nameOf = ({ claim, of, setting }: Pick<SimulatedFigure, 'claim' | 'of' | 'setting'>) =>
+    JSON.stringify([claim, of, setting]);
+  const before = JSON.parse(readFileSync(FIGURES_FILE, 'utf8')) as { figures: SimulatedFigure[] };
+  const all = new Map([...before.figures, ...got].map((figure) => [nameOf(figure), figure]));
+  const figures = SCENARIOS.flatMap((scenario) => all.get(nameOf(scenario)) ?? []);
+  const lines = figures.map((figure) => `    ${JSON.stringify(figure)}`).join(',\n');
+  writeFileSync(FIGURES_FILE, `{\n  "methodsVersion": ${METHODS_VERSION},\n  "figures": [\n${lines}\n  ]\n}\n`);
+  writeFileSync(README, withTable(readFileSync(README, 'utf8'), figuresTable(figures)));
+}
+
+if (isMainThread) process.exitCode = await main(process.argv.slice(2));
+else parentPort?.postMessage(figureOf(SCENARIOS[(workerData as { place: number }).place]));

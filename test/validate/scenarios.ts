@@ -1,0 +1,7 @@
+import { changePoints } from './change-points.ts';
+import { falseAlarms } from './false-alarms.ts';
+import type { Scenario } from './figure.ts';
+import { slopes } from './slopes.ts';
+
+/** All that is simulated, in the order of the table. */
+export const SCENARIOS: readonly Scenario[] = [...falseAlarms, ...slopes, ...changePoints];
