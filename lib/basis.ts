@@ -164,6 +164,11 @@ function keyToText(basis: Basis, key: BasisKey): string {
   }
 }
 
+/** Every key as it stands in an address. */
+export function basisTexts(basis: Basis): Record<BasisKey, string> {
+  return Object.fromEntries(BASIS_KEYS.map((key) => [key, keyToText(basis, key)])) as Record<BasisKey, string>;
+}
+
 /** Only the keys that differ from `base`, in the schema's order: what a link carries.
  *  Example: {days: 30, period: [1985, 2024]} → "period=1985-2024&days=30" */
 export function basisToQuery(basis: Basis, base: Basis = DEFAULT_BASIS): URLSearchParams {
@@ -236,11 +241,23 @@ export interface SentencePart {
   term?: 'days' | 'yearStart' | 'period' | 'completeness' | 'rankBy' | 'test' | 'exclude' | 'normalise';
 }
 
-const RANK_WORDS: Record<Basis['rankBy'], string> = {
-  'percent-per-decade': '% of the mean minimum per decade',
-  'specific-change': 'change in L/s/km² per decade',
-  'kendall-tau': 'Kendall’s tau',
+/** What a percentage is of, and the unit of a change per unit of area. */
+const RANK_WORDS: Record<Exclude<AnnualIndexName, 'zero-flow-days' | 'minimum-date'>, [string, string]> = {
+  minimum: ['mean minimum', 'change in L/s/km²'],
+  q95: ['mean annual Q95', 'change in L/s/km²'],
+  'mean-flow': ['mean flow', 'change in L/s/km²'],
+  bfi: ['mean baseflow index', 'change'],
+  deficit: ['mean deficit volume', 'change in mm'],
 };
+
+/** What stations are ranked by, in words. Example: "% of the mean minimum per decade" */
+export function rankWords({ rankBy, index }: Pick<Basis, 'rankBy' | 'index'>): string {
+  if (rankBy === 'kendall-tau') return 'Kendall’s tau';
+  // percentages of dates, or of a mean of few dry days, say nothing
+  if (index === 'zero-flow-days' || index === 'minimum-date') return 'days per decade';
+  const [mean, change] = RANK_WORDS[index];
+  return rankBy === 'percent-per-decade' ? `% of the ${mean} per decade` : `${change} per decade`;
+}
 
 const SERIAL_WORDS: Record<Basis['serialCorrection'], string> = {
   'ar1-regional': 'with regional serial correction',
@@ -263,11 +280,11 @@ export function indexWords({ index, days }: Pick<Basis, 'index' | 'days'>): stri
     case 'mean-flow':
       return 'annual mean flow';
     case 'zero-flow-days':
-      return 'zero-flow days a year';
+      return 'zero-flow days';
     case 'bfi':
-      return 'annual baseflow index';
+      return 'the baseflow index';
     case 'deficit':
-      return 'annual deficit volume below Q90';
+      return 'deficit volumes below Q90';
   }
 }
 
@@ -313,7 +330,7 @@ export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
       term: 'completeness',
     },
     { text: ', ranked by ' },
-    { text: RANK_WORDS[basis.rankBy], term: 'rankBy' },
+    { text: rankWords(basis), term: 'rankBy' },
     { text: ', tested by ' },
     {
       text: `Mann–Kendall ${SERIAL_WORDS[basis.serialCorrection]}, ${percent(basis.alpha)} % false discoveries`,

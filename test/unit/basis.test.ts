@@ -41,6 +41,7 @@ describe('parseBasis', () => {
       serialCorrection: 'ar1-regional',
       alpha: 0.1,
       units: 'metric',
+      index: 'minimum',
     });
   });
 
@@ -184,6 +185,12 @@ describe('basisToQuery and basisFromQuery', () => {
     ['season=5', '"season" cannot be "5"'],
     ['exclude=ice,frost', '"exclude" cannot be ["ice","frost"]'],
     ['yearStart=13', '"yearStart" cannot be 13'],
+    ['index=q90', '"index" cannot be "q90": minimum, q95, mean-flow, zero-flow-days, bfi, minimum-date or deficit'],
+    ['serialCorrection=ar2', '"serialCorrection" cannot be "ar2": ar1-regional, ar1, none, all-lags'],
+    ['alpha=0', '"alpha" cannot be 0: a number 0.001–0.5'],
+    ['alpha=1', '"alpha" cannot be 1: a number 0.001–0.5'],
+    ['alpha=Infinity', '"alpha" cannot be "Infinity"'],
+    ['minYears=Infinity', '"minYears" cannot be "Infinity"'],
   ])('refuses %s by name and value', (query, message) => {
     expect(() => basisFromQuery(new URLSearchParams(query))).toThrow(BasisError);
     expect(() => basisFromQuery(new URLSearchParams(query))).toThrow(message);
@@ -214,6 +221,7 @@ describe('basisHash', () => {
       { serialCorrection: 'none' },
       { alpha: 0.05 },
       { units: 'us' },
+      { index: 'q95' },
     ];
     const hashes = [{}, ...others].map((keys) => basisHash(parseBasis(keys)));
     expect(new Set(hashes).size).toBe(others.length + 1);
@@ -258,6 +266,34 @@ describe('basisSentence', () => {
         'tested by Mann–Kendall without serial correction, 0.1 % false discoveries; ' +
         'estimated, ice and suspect values count as missing, duration curves as a ratio to each station’s median flow.',
     );
+  });
+
+  test.each([
+    [{ index: 'q95' }, 'Comparing annual Q95 of April–March years', 'ranked by % of the mean annual Q95 per decade,'],
+    [{ index: 'mean-flow' }, 'Comparing annual mean flow of', 'ranked by % of the mean flow per decade,'],
+    [{ index: 'zero-flow-days' }, 'Comparing zero-flow days of', 'ranked by days per decade,'],
+    [{ index: 'bfi' }, 'Comparing the baseflow index of', 'ranked by % of the mean baseflow index per decade,'],
+    [{ index: 'minimum-date', days: 30 }, 'Comparing dates of the 30-day minimum of', 'ranked by days per decade,'],
+    [
+      { index: 'deficit' },
+      'Comparing deficit volumes below Q90 of',
+      'ranked by % of the mean deficit volume per decade,',
+    ],
+    [{ index: 'deficit', rankBy: 'specific-change' }, 'deficit volumes', 'ranked by change in mm per decade,'],
+    [{ index: 'bfi', rankBy: 'specific-change' }, 'baseflow index', 'ranked by change per decade,'],
+    [{ index: 'minimum-date', rankBy: 'kendall-tau' }, 'dates', 'ranked by Kendall’s tau,'],
+  ] as const)('of %o names the index and its own measure of change', (keys, compared, ranked) => {
+    const sentence = basisSentence(resolved(keys));
+    expect(sentence).toContain(compared);
+    expect(sentence).toContain(ranked);
+  });
+
+  test.each([
+    ['all-lags', 'corrected for all significant lags'],
+    ['pre-whitened', 'on trend-free pre-whitened series'],
+    ['block-bootstrap', 'by moving-block bootstrap'],
+  ] as const)('names the serial correction %s by what it does', (serialCorrection, words) => {
+    expect(basisSentence(resolved({ serialCorrection }))).toContain(`tested by Mann–Kendall ${words}, 10 %`);
   });
 
   test('says when every station has years of its own, and when there is no common period', () => {
