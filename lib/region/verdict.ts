@@ -1,4 +1,6 @@
-import { MONTHS, type ResolvedBasis } from '../basis.ts';
+import type { ResolvedBasis } from '../basis.ts';
+import { INDEX_FACTS, percentOfMean } from './index-facts.ts';
+import { INDEX_WORDS, indexOfYear } from './index-words.ts';
 import type { RankingRow } from './ranking-types.ts';
 import { intervalWords, plain, probability, signed } from './sentence-figures.ts';
 
@@ -8,16 +10,22 @@ import { intervalWords, plain, probability, signed } from './sentence-figures.ts
 export function verdict(row: RankingRow, basis: ResolvedBasis): string {
   if (row.drying && row.trend !== null) return dryingVerdict(row);
   if (row.trend === null) return `Not ranked: ${row.unrankedReason ?? 'no trend could be computed'}.`;
-  const { amount, unit, low, high } = changeOf(row);
-  const what = `the ${minimumWords(basis)}`;
+  const { amount, unit, low, high } = changeOf(row, basis);
+  const what = `the ${indexOfYear(basis)}`;
   const where = evidence(row);
   const interval = intervalWords(low, high);
   if (row.trend === 'none') {
-    return `No significant trend: ${what} changed by ${signed(amount)} ${unit} per decade (${interval}), ${where}. This does not show that nothing changed.`;
+    return `No significant trend: ${what} changed by ${signed(amount)}${unit} per decade (${interval}), ${where}. This does not show that nothing changed.`;
   }
-  const verb = row.trend === 'falling' ? 'lost' : 'gained';
-  const title = row.trend === 'falling' ? 'Falling' : 'Rising';
-  return `${title}: ${what} ${verb} ${plain(Math.abs(amount))} ${unit} per decade (${interval}), ${where}.`;
+  const title = capitalised(INDEX_WORDS[basis.index][row.trend]);
+  return `${title}: ${what} ${movedBy(amount, unit, basis)} per decade (${interval}), ${where}.`;
+}
+
+/** What happened, as a verb with its amount. Example: "lost 6.2 % of its mean" */
+function movedBy(amount: number, unit: string, { index }: ResolvedBasis): string {
+  const size = `${plain(Math.abs(amount))}${unit}`;
+  if (index === 'minimum-date') return `came ${size} ${amount < 0 ? 'earlier' : 'later'}`;
+  return `${amount < 0 ? 'lost' : 'gained'} ${size}`;
 }
 
 function dryingVerdict(row: RankingRow): string {
@@ -32,20 +40,27 @@ function dryingVerdict(row: RankingRow): string {
   return `Often dry, without a significant trend: ${change}, ${rest}`;
 }
 
-/** In percent of the mean where there is one, else in m³/s. */
-function changeOf(row: RankingRow): { amount: number; unit: string; low: number | null; high: number | null } {
-  const { percentPerDecade, meanMinimum, slopePerDecade, slopeLow, slopeHigh } = row;
-  if (percentPerDecade === null || meanMinimum === null) {
-    return { amount: slopePerDecade ?? Number.NaN, unit: 'm³/s', low: slopeLow, high: slopeHigh };
+/** In percent of the mean where there is one that means something, else in the index's own unit. */
+function changeOf(
+  row: RankingRow,
+  { index }: ResolvedBasis,
+): { amount: number; unit: string; low: number | null; high: number | null } {
+  const { percentPerDecade, meanValue, valueSlope, valueSlopeLow, valueSlopeHigh } = row;
+  if (percentPerDecade === null) {
+    const { slopeUnit } = INDEX_FACTS[index];
+    const unit = slopeUnit === '' ? '' : ` ${slopeUnit}`;
+    return { amount: valueSlope ?? Number.NaN, unit, low: valueSlopeLow, high: valueSlopeHigh };
   }
-  const percent = (slope: number | null) => (slope === null ? null : (100 * slope) / meanMinimum);
-  return { amount: percentPerDecade, unit: '% of its mean', low: percent(slopeLow), high: percent(slopeHigh) };
+  const percent = (slope: number | null) => percentOfMean(slope, index, meanValue);
+  return {
+    amount: percentPerDecade,
+    unit: ' % of its mean',
+    low: percent(valueSlopeLow),
+    high: percent(valueSlopeHigh),
+  };
 }
 
-function minimumWords({ days, season }: ResolvedBasis): string {
-  const months = season ? `${MONTHS[season[0] - 1]}–${MONTHS[season[1] - 1]} ` : '';
-  return `${months}${days}-day minimum`;
-}
+const capitalised = (words: string): string => words[0].toUpperCase() + words.slice(1);
 
 function evidence({ firstYear, lastYear, yearsUsed, pAdjusted }: RankingRow): string {
   return `${firstYear}–${lastYear}, ${yearsUsed} usable years, adjusted p ${probability(pAdjusted)}`;
