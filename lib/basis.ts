@@ -259,7 +259,8 @@ export function rankWords({ rankBy, index }: Pick<Basis, 'rankBy' | 'index'>): s
   return rankBy === 'percent-per-decade' ? `% of the ${mean} per decade` : `${change} per decade`;
 }
 
-const SERIAL_WORDS: Record<Basis['serialCorrection'], string> = {
+/** What each serial correction does, in words that follow "Mann–Kendall". */
+export const SERIAL_WORDS: Record<Basis['serialCorrection'], string> = {
   'ar1-regional': 'with regional serial correction',
   ar1: 'with each station’s serial correction',
   none: 'without serial correction',
