@@ -21,9 +21,9 @@ export const BASIS_PARAMETERS = [
 ] as const;
 
 /** View state of the map screen that links to and from other pages keep. */
-const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q', 'split'] as const;
+const MAP_PARAMETERS = ['view', 'station', 'follow', 'tab', 'q', 'split', 'k', 'fill'] as const;
 
-export type RegionPage = 'map' | 'curves' | 'records' | 'import';
+export type RegionPage = 'map' | 'evidence' | 'curves' | 'records' | 'import';
 
 /** What a link carries on: the basis and the map's view, and nothing that belongs to one page only. */
 export function carried(query: URLSearchParams | string): URLSearchParams {

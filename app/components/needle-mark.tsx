@@ -1,9 +1,9 @@
-import type { Needle } from './needle.ts';
+import { type Needle, sectorPath } from './needle.ts';
 import styles from './needle-mark.module.css';
 
 /** The map's mark as a small picture. Decoration beside words: give the words yourself (needleWords). */
 export function NeedleMark({ needle, size = 28 }: { needle: Needle; size?: number }) {
-  const { kind, side, significant, angle } = needle;
+  const { kind, side, significant, angle, share } = needle;
   const tone = kind === 'unranked' ? styles.unranked : styles[side];
   const fill = significant ? 'currentColor' : 'var(--paper)';
   return (
@@ -11,7 +11,7 @@ export function NeedleMark({ needle, size = 28 }: { needle: Needle; size?: numbe
       {kind === 'unranked' && (
         <circle r="6" fill="var(--paper)" stroke="currentColor" strokeWidth="1.4" strokeDasharray="2.2 2" />
       )}
-      {kind === 'ranked' && <circle r="6" fill={fill} stroke="currentColor" strokeWidth="1.8" />}
+      {kind === 'ranked' && share === undefined && <circle r="6" fill={fill} stroke="currentColor" strokeWidth="1.8" />}
       {kind === 'drying' && (
         <path
           d="M0-7.8 7.8 0 0 7.8-7.8 0Z"
@@ -24,8 +24,14 @@ export function NeedleMark({ needle, size = 28 }: { needle: Needle; size?: numbe
       {kind !== 'unranked' && (
         <g transform={`rotate(${((angle * 180) / Math.PI).toFixed(1)})`}>
           <path d="M-13 0H13" stroke="currentColor" strokeWidth="2.2" strokeLinecap="round" />
-          <circle r="2.1" fill={significant ? 'var(--paper)' : 'currentColor'} />
+          {share === undefined && <circle r="2.1" fill={significant ? 'var(--paper)' : 'currentColor'} />}
         </g>
+      )}
+      {kind === 'ranked' && share !== undefined && (
+        <>
+          <circle r="6.4" fill="var(--paper)" stroke="currentColor" strokeWidth="1.6" />
+          <path d={sectorPath(share, 6.4)} fill="currentColor" />
+        </>
       )}
     </svg>
   );

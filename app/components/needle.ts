@@ -11,6 +11,8 @@ export interface Needle {
   significant: boolean;
   /** radians from level, clockwise: positive = down to the right = falling */
   angle: number;
+  /** what part of the disc is filled, 0 to 1, where the filling says something other than significance */
+  share?: number;
 }
 
 /** A fall of this many percent per decade tilts the needle by 45°; steeper ones approach the upright. */
@@ -46,6 +48,24 @@ export function needleOf(row: NeedleFacts): Needle {
   }
   const tau = row.tau ?? 0;
   return { kind: 'ranked', side: sideOf(tau), significant, angle: -Math.asin(Math.max(-1, Math.min(1, tau))) };
+}
+
+/** A station's mark whose filling says a share, as a disc fills from the top clockwise. The drying have none: theirs stays
+ *  open.
+ *  @param share  0 to 1; null leaves the mark open too */
+export function sharedNeedle(needle: Needle, share: number | null): Needle {
+  return needle.kind === 'ranked' ? { ...needle, share: share ?? 0 } : { ...needle, significant: false };
+}
+
+/** The filled part of a disc about the origin, as an SVG path: from the top clockwise, to the nearest eighth, for no eye
+ *  tells finer ones apart at the size of a mark. */
+export function sectorPath(share: number, radius: number): string {
+  const eighths = Math.round(Math.max(0, Math.min(1, share)) * 8);
+  if (eighths === 0) return '';
+  if (eighths === 8) return `M0-${radius}a${radius} ${radius} 0 1 1-.01 0Z`;
+  const angle = (eighths / 4) * Math.PI;
+  const [x, y] = [Math.sin(angle) * radius, -Math.cos(angle) * radius];
+  return `M0 0V-${radius}A${radius} ${radius} 0 ${eighths > 4 ? 1 : 0} 1 ${x.toFixed(3)} ${y.toFixed(3)}Z`;
 }
 
 const sideOf = (change: number): NeedleSide =>

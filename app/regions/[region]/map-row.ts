@@ -28,6 +28,8 @@ export interface MapRow {
   spark: string;
   unrankedReason: string | null;
   note: string;
+  /** share of the windows of years that agree with the sign, 0 to 1 */
+  steadiness: number | null;
 }
 
 const round = (value: number | null, figures = 4): number | null =>
@@ -61,6 +63,7 @@ function mapRow(row: RankingRow, rankBy: Basis['rankBy']): MapRow {
     spark: encodeRatios(row.years, row.minima, row.meanMinimum ?? Number.NaN),
     unrankedReason: row.unrankedReason,
     note: row.note,
+    steadiness: round(row.steadiness, 3),
   };
 }
 

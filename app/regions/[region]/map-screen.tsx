@@ -4,15 +4,20 @@ import { useQueryStates } from 'nuqs';
 import { startTransition, useCallback, useMemo, useState } from 'react';
 import type { Units } from '@/app/components/format';
 import { apiHref } from '@/app/components/links';
+import { needleOf, sharedNeedle } from '@/app/components/needle';
 import { SplitPanes } from '@/app/components/split-panes';
 import type { Basis } from '@/lib/basis';
+import { filledShare } from './_certainty/certainty-view.ts';
+import { placeWords } from './_certainty/place-words.ts';
+import { useCertainty } from './_certainty/use-certainty.ts';
+import { useMovement } from './_certainty/use-movement.ts';
 import { Legend } from './_map/legend.tsx';
 import type { GroundSource } from './_map/use-ground.ts';
 import { RankingPanel } from './_ranking/ranking-panel.tsx';
 import { createHoverStore } from './hover-store.ts';
 import type { MapRow } from './map-row.ts';
 import styles from './map-screen.module.css';
-import { type MapView, mapState, type Tab, USUAL_SPLIT } from './map-state.ts';
+import { type Fill, type MapView, mapState, type Tab, USUAL_SPLIT } from './map-state.ts';
 import { hasPlace, matcher } from './row-filter.ts';
 import { SmallScreen } from './small-screen.tsx';
 import { useIsNarrow } from './use-is-narrow.ts';
@@ -34,12 +39,13 @@ interface MapScreenProps {
   rows: MapRow[];
   layers: { id: number; name: string; kind: string }[];
   rankBy: Basis['rankBy'];
+  index: Basis['index'];
   units: Units;
   span: [number, number];
 }
 
 /** Map and ranking, linked both ways. What is shown stands in the address: view, selection, following, list, search. */
-export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScreenProps) {
+export function MapScreen({ region, rows, layers, rankBy, index, units, span }: MapScreenProps) {
   const [state, setState] = useQueryStates(mapState, { history: 'replace', throttleMs: 150 });
   const [inView, setInView] = useState<Set<string> | null>(null);
   const [hover] = useState(createHoverStore);
@@ -56,11 +62,27 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
   const select = useCallback((station: string | null) => void setState({ station }), [setState]);
   const setFollow = useCallback((follow: boolean) => void setState({ follow }), [setState]);
   const setSearch = useCallback((q: string) => void setState({ q }), [setState]);
+  const setK = useCallback((k: number) => void setState({ k }), [setState]);
+  const setFill = useCallback((fill: Fill) => void setState({ fill }), [setState]);
   const setTab = useCallback((tab: Tab) => void setState({ tab }), [setState]);
   const showView = useCallback((view: MapView | null) => void setState({ view }), [setState]);
 
   // the lists follow in slices of a few milliseconds: the map never waits for them
   const showInView = useCallback((codes: Set<string>) => startTransition(() => setInView(codes)), []);
+
+  const ranked = useMemo(() => rows.filter(({ rank }) => rank !== null).length, [rows]);
+  const certainty = useCertainty(region.slug, ranked);
+  const movement = useMovement(region.slug).value;
+  const { k, fill } = state;
+  const { view } = certainty;
+  const markOf = useCallback(
+    (row: MapRow) => {
+      const needle = needleOf(row);
+      return view && fill !== 'significance' ? sharedNeedle(needle, filledShare(view, row.code, fill, k)) : needle;
+    },
+    [view, fill, k],
+  );
+  const placeOf = useCallback((row: MapRow) => placeWords(view, row, k, { index, units }), [view, k, index, units]);
 
   const ground = useMemo<GroundSource[]>(
     () =>
@@ -97,6 +119,8 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
           startView={startView}
           onView={showView}
           onInView={showInView}
+          markOf={markOf}
+          placeOf={placeOf}
         />
         {!hasPlaces && (
           <p className={styles.noPlaces}>
@@ -105,7 +129,17 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
           </p>
         )}
       </div>
-      {hasPlaces && <Legend rows={rows} startOpen={!narrow} key={narrow ? 'narrow' : 'wide'} />}
+      {hasPlaces && (
+        <Legend
+          key={narrow ? 'narrow' : 'wide'}
+          rows={rows}
+          startOpen={!narrow}
+          fill={fill}
+          isKnown={view !== null}
+          onFill={setFill}
+          k={k}
+        />
+      )}
     </section>
   );
 
@@ -123,11 +157,16 @@ export function MapScreen({ region, rows, layers, rankBy, units, span }: MapScre
       tab={state.tab}
       onTab={setTab}
       rankBy={rankBy}
+      index={index}
       units={units}
       span={span}
       hover={hover}
       selected={state.station}
       onSelect={select}
+      certainty={certainty}
+      k={k}
+      onK={setK}
+      movement={movement}
     />
   );
 

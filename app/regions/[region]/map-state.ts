@@ -1,4 +1,5 @@
 import { createParser, parseAsBoolean, parseAsInteger, parseAsString, parseAsStringLiteral } from 'nuqs';
+import { MOST_STEEPEST } from '@/lib/region/certainty-types';
 
 export interface MapView {
   latitude: number;
@@ -24,6 +25,18 @@ export type Tab = (typeof TABS)[number];
 /** Share of the width that the map has, percent. */
 export const USUAL_SPLIT = 44;
 
+const FILLS = ['significance', 'steepest', 'span'] as const;
+/** What the discs' filling says: whether a trend is significant, how likely the station is among the k steepest declines,
+ *  or how narrow its rank span is. */
+export type Fill = (typeof FILLS)[number];
+
+/** Of the steepest declines that a station may be among. */
+export const USUAL_STEEPEST = 5;
+
+/** "among the k steepest": a whole number from 1 to as many as are simulated; anything else is no number. */
+export const parseSteepest = (text: string): number | null =>
+  /^\d{1,3}$/.test(text) && Number(text) >= 1 && Number(text) <= MOST_STEEPEST ? Number(text) : null;
+
 /** The screen's state in its address. */
 export const mapState = {
   view: createParser<MapView>({ parse: parseView, serialize: viewText, eq: (a, b) => viewText(a) === viewText(b) }),
@@ -32,4 +45,6 @@ export const mapState = {
   tab: parseAsStringLiteral(TABS).withDefault('ranked'),
   q: parseAsString.withDefault(''),
   split: parseAsInteger.withDefault(USUAL_SPLIT),
+  k: createParser<number>({ parse: parseSteepest, serialize: String }).withDefault(USUAL_STEEPEST),
+  fill: parseAsStringLiteral(FILLS).withDefault('significance'),
 };

@@ -2,16 +2,14 @@ import type { Metadata } from 'next';
 import { BasisSentence } from '@/app/components/basis-sentence';
 import { Header } from '@/app/components/header';
 import { ErrorNote, WarningNote } from '@/app/components/notes';
-import { type Basis, BasisError } from '@/lib/basis';
-import { rankingOf } from '@/lib/jobs/ranking';
 import { listLayers } from '@/lib/store/layers';
-import type { RegionRow } from '@/lib/store/regions';
 import { besideRanking, headline } from './headline.ts';
 import { mapRows } from './map-row.ts';
 import { MapScreen } from './map-screen.tsx';
 import { NoRecords } from './no-records.tsx';
 import styles from './page.module.css';
 import { type PageQuery, pageRequest } from './page-request.ts';
+import { rankingOrRegionsOwn } from './ranking-request.ts';
 
 interface PageProps {
   params: Promise<{ region: string }>;
@@ -61,6 +59,7 @@ export default async function MapPage({ params, searchParams }: PageProps) {
               rows={rows}
               layers={layers}
               rankBy={ranking.basis.rankBy}
+              index={ranking.basis.index}
               units={ranking.basis.units}
               span={spanOf(ranking.basis.period, ranking.rows)}
             />
@@ -69,17 +68,6 @@ export default async function MapPage({ params, searchParams }: PageProps) {
       </main>
     </div>
   );
-}
-
-/** The ranking as asked. A basis that only turns out unusable on these records (a season that does not fit into the low-flow
- *  year they ask for) gives way to the region's own, and says so. */
-async function rankingOrRegionsOwn(region: RegionRow, basis: Basis, basisProblem: string | null) {
-  try {
-    return { ranking: (await rankingOf(region, basis)).ranking, problem: basisProblem };
-  } catch (error) {
-    if (!(error instanceof BasisError) || basis === region.basis) throw error;
-    return { ranking: (await rankingOf(region, region.basis)).ranking, problem: error.message };
-  }
 }
 
 /** The years on every row's axis: the period, or all years that any row used. */

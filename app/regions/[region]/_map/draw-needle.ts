@@ -1,4 +1,4 @@
-import type { Needle } from '@/app/components/needle';
+import { type Needle, sectorPath } from '@/app/components/needle';
 import type { Palette } from './palette.ts';
 
 /** Draws one mark: the canvas twin of app/components/needle-mark.tsx.
@@ -20,6 +20,11 @@ export function drawNeedle(
     // paper under the needle parts it from rivers and from other marks
     strokeLine(context, x - dx, y - dy, x + dx, y + dy, line * 1.3 + 2, palette.paper);
   }
+  if (needle.share !== undefined) {
+    strokeLine(context, x - dx, y - dy, x + dx, y + dy, line * 1.3, ink);
+    drawShare(context, needle.share, { x, y }, radius * 1.1, { line, ink, paper: palette.paper });
+    return;
+  }
   outline(context, needle, x, y, radius);
   context.lineWidth = line + 2;
   context.strokeStyle = palette.paper;
@@ -39,6 +44,31 @@ export function drawNeedle(
   context.arc(x, y, radius * 0.34, 0, 2 * Math.PI);
   context.fillStyle = needle.significant ? palette.paper : ink;
   context.fill();
+}
+
+/** A disc over the needle, filled from the top clockwise as far as its share goes. */
+function drawShare(
+  context: CanvasRenderingContext2D,
+  share: number,
+  place: { x: number; y: number },
+  radius: number,
+  { line, ink, paper }: { line: number; ink: string; paper: string },
+): void {
+  context.save();
+  context.translate(place.x, place.y);
+  context.beginPath();
+  context.arc(0, 0, radius, 0, 2 * Math.PI);
+  context.lineWidth = line + 2;
+  context.strokeStyle = paper;
+  context.stroke();
+  context.fillStyle = paper;
+  context.fill();
+  context.lineWidth = line * 0.9;
+  context.strokeStyle = ink;
+  context.stroke();
+  context.fillStyle = ink;
+  context.fill(new Path2D(sectorPath(share, radius)));
+  context.restore();
 }
 
 function outline(context: CanvasRenderingContext2D, needle: Needle, x: number, y: number, radius: number): void {

@@ -1,19 +1,27 @@
 'use client';
-import { useState } from 'react';
-import { fixed } from '@/app/components/format';
-import type { Needle } from '@/app/components/needle';
-import { needleOf, PERCENT_AT_45_DEGREES } from '@/app/components/needle';
+import { type ReactNode, useState } from 'react';
+import { fixed, percent } from '@/app/components/format';
+import { type Needle, needleOf, PERCENT_AT_45_DEGREES } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
+import { steepestWords } from '../_certainty/place-words.ts';
 import type { MapRow } from '../map-row.ts';
+import type { Fill } from '../map-state.ts';
 import styles from './legend.module.css';
 
 const TILT = 0.5;
-const ENTRIES: { words: string; needle: Needle; holds: (needle: Needle) => boolean }[] = [
+interface Entry {
+  words: string;
+  needle: Needle;
+  holds: (needle: Needle) => boolean;
+}
+const RANKED: Entry[] = [
   entry('falling, significant', { kind: 'ranked', side: 'falling', significant: true, angle: TILT }),
   entry('falling, may be chance', { kind: 'ranked', side: 'falling', significant: false, angle: TILT }),
   entry('level', { kind: 'ranked', side: 'level', significant: false, angle: 0 }),
   entry('rising, may be chance', { kind: 'ranked', side: 'rising', significant: false, angle: -TILT }),
   entry('rising, significant', { kind: 'ranked', side: 'rising', significant: true, angle: -TILT }),
+];
+const OTHERS: Entry[] = [
   {
     words: 'drying: days without flow',
     needle: { kind: 'drying', side: 'falling', significant: true, angle: TILT },
@@ -25,17 +33,32 @@ const ENTRIES: { words: string; needle: Needle; holds: (needle: Needle) => boole
     holds: (needle) => needle.kind === 'unranked',
   },
 ];
+const SHARES = [0, 0.25, 0.5, 0.75, 1];
 
-function entry(words: string, needle: Needle) {
+function entry(words: string, needle: Needle): Entry {
   const holds = (other: Needle) =>
     other.kind === needle.kind && other.side === needle.side && other.significant === needle.significant;
   return { words, needle, holds };
 }
 
-/** What the marks say, with how many there are of each; those that do not occur are left out. */
-export function Legend({ rows, startOpen }: { rows: MapRow[]; startOpen: boolean }) {
+interface LegendProps {
+  rows: MapRow[];
+  startOpen: boolean;
+  /** what was chosen, and whether it can be shown yet */
+  fill: Fill;
+  isKnown: boolean;
+  onFill: (fill: Fill) => void;
+  /** of the steepest declines */
+  k: number;
+}
+
+/** What the marks say, with how many there are of each; those that do not occur are left out. What fills the discs is
+ *  chosen here. */
+export function Legend({ rows, startOpen, fill, isKnown, onFill, k }: LegendProps) {
   const [open, setOpen] = useState(startOpen);
   const needles = rows.map(needleOf);
+  const shared = fill !== 'significance' && isKnown;
+  const entries = shared ? OTHERS.map(emptied) : [...RANKED, ...OTHERS];
   return (
     <div className={styles.legend}>
       <button type="button" className={styles.toggle} aria-expanded={open} onClick={() => setOpen(!open)}>
@@ -46,7 +69,19 @@ export function Legend({ rows, startOpen }: { rows: MapRow[]; startOpen: boolean
       </button>
       {open && (
         <ul>
-          {ENTRIES.map(({ words, needle, holds }) => {
+          <li>
+            <label className={styles.fill}>
+              Filled by{' '}
+              <select value={fill} onChange={(event) => onFill(event.currentTarget.value as Fill)}>
+                <option value="significance">significance</option>
+                <option value="steepest">chance to be among the {steepestWords(k)}</option>
+                <option value="span">how sure the place is</option>
+              </select>
+            </label>
+          </li>
+          {fill !== 'significance' && !isKnown && <li className={styles.tilt}>not known yet: significance so far</li>}
+          {shared && <Shares fill={fill} />}
+          {entries.map(({ words, needle, holds }) => {
             const number = needles.filter(holds).length;
             return number === 0 ? null : (
               <li key={words}>
@@ -62,5 +97,25 @@ export function Legend({ rows, startOpen }: { rows: MapRow[]; startOpen: boolean
         </ul>
       )}
     </div>
+  );
+}
+
+const emptied = (entry: Entry): Entry => ({ ...entry, needle: { ...entry.needle, significant: false } });
+
+/** The scale of what fills the discs. */
+function Shares({ fill }: { fill: Fill }): ReactNode {
+  const words = (share: number) => {
+    if (fill === 'steepest') return percent(share);
+    return share === 0 ? 'any place' : share === 1 ? 'one place' : '';
+  };
+  return (
+    <li className={styles.shares}>
+      {SHARES.map((share) => (
+        <span key={share}>
+          <NeedleMark needle={{ kind: 'ranked', side: 'falling', significant: false, angle: TILT, share }} size={24} />
+          {words(share)}
+        </span>
+      ))}
+    </li>
   );
 }

@@ -6,10 +6,9 @@ import { indexMarks, type MarkIndex } from './mark-index.ts';
 import { NeedleSprites } from './needle-sprites.ts';
 import type { Palette } from './palette.ts';
 
-export interface Mark {
+export interface Place {
   latitude: number;
   longitude: number;
-  needle: Needle;
 }
 
 /** How far the canvas reaches past each edge of the map, as a share of its size: dragging within it draws nothing. */
@@ -17,12 +16,13 @@ const OVERLAP = 0.3;
 /** Extra pixels about a disc that still count as on it: fingers and small discs. */
 const REACH = 8;
 
-/** All needles on one canvas. Marks are given in drawing order; the emphasised ones are drawn on a second canvas above,
+/** All needles on one canvas. They are given in drawing order; the emphasised ones are drawn on a second canvas above,
  *  so that hovering draws one mark and not two thousand. */
 export class NeedleLayer extends L.Layer {
   private readonly base = document.createElement('canvas');
   private readonly top = document.createElement('canvas');
-  private marks: Mark[] = [];
+  private stations: readonly Place[] = [];
+  private needles: readonly Needle[] = [];
   private faded: Uint8Array = new Uint8Array(0);
   private xs = new Float64Array(0);
   private ys = new Float64Array(0);
@@ -71,12 +71,19 @@ export class NeedleLayer extends L.Layer {
     };
   }
 
-  setMarks(marks: Mark[]): void {
-    this.marks = marks;
-    this.faded = new Uint8Array(marks.length);
+  /** Other stations. Their needles must follow (setNeedles): only then they are drawn. */
+  setPlaces(places: readonly Place[]): void {
+    this.stations = places;
+    this.needles = [];
+    this.faded = new Uint8Array(places.length);
     this.hovered = -1;
     this.selected = -1;
     this.project();
+  }
+
+  /** What stands at the places, one for each. */
+  setNeedles(needles: readonly Needle[]): void {
+    this.needles = needles;
     this.draw();
   }
 
@@ -123,10 +130,10 @@ export class NeedleLayer extends L.Layer {
 
   private project(): void {
     if (!this.map) return;
-    this.xs = new Float64Array(this.marks.length);
-    this.ys = new Float64Array(this.marks.length);
-    for (let i = 0; i < this.marks.length; i++) {
-      const point = this.map.latLngToLayerPoint([this.marks[i].latitude, this.marks[i].longitude]);
+    this.xs = new Float64Array(this.stations.length);
+    this.ys = new Float64Array(this.stations.length);
+    for (let i = 0; i < this.stations.length; i++) {
+      const point = this.map.latLngToLayerPoint([this.stations[i].latitude, this.stations[i].longitude]);
       this.xs[i] = point.x;
       this.ys[i] = point.y;
     }
@@ -156,7 +163,7 @@ export class NeedleLayer extends L.Layer {
     this.sprites.use(this.drawnRadius, pixelRatio(), this.palette);
     for (const i of this.index.inside(...this.area.box).sort((a, b) => a - b)) {
       context.globalAlpha = this.faded[i] ? 0.18 : 1;
-      this.sprites.draw(context, this.marks[i].needle, this.xs[i], this.ys[i]);
+      if (this.needles[i]) this.sprites.draw(context, this.needles[i], this.xs[i], this.ys[i]);
     }
     this.drawTop();
   }
@@ -166,7 +173,7 @@ export class NeedleLayer extends L.Layer {
     if (!context) return;
     const radius = this.drawnRadius;
     for (const i of new Set([this.selected, this.hovered])) {
-      if (i < 0 || i >= this.marks.length) continue;
+      if (i < 0 || i >= this.needles.length) continue;
       const place = { x: this.xs[i], y: this.ys[i] };
       const chosen = i === this.selected;
       context.beginPath();
@@ -178,7 +185,7 @@ export class NeedleLayer extends L.Layer {
       context.lineWidth = chosen ? 2.5 : 1.5;
       context.strokeStyle = this.palette.blue;
       context.stroke();
-      drawNeedle(context, this.marks[i].needle, place, Math.max(radius * 1.1, 6), this.palette);
+      drawNeedle(context, this.needles[i], place, Math.max(radius * 1.1, 6), this.palette);
     }
   }
 }

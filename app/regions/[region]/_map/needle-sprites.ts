@@ -34,7 +34,8 @@ export class NeedleSprites {
 
   private pictureOf(needle: Needle): HTMLCanvasElement {
     const degrees = Math.round((needle.angle * 180) / Math.PI / STEP) * STEP;
-    const key = `${needle.kind} ${needle.side} ${needle.significant} ${degrees}`;
+    const share = needle.share === undefined ? '' : Math.round(needle.share * 8);
+    const key = `${needle.kind} ${needle.side} ${needle.significant} ${degrees} ${share}`;
     let picture = this.pictures.get(key);
     if (!picture) {
       picture = this.paint({ ...needle, angle: (degrees * Math.PI) / 180 });

@@ -4,7 +4,7 @@ import { useSearchParams } from 'next/navigation';
 import { useEffect, useReducer, useRef } from 'react';
 import { area, interval, pValue, signed, type Units } from '@/app/components/format';
 import { stationHref } from '@/app/components/links';
-import { needleOf, needleWords } from '@/app/components/needle';
+import { type Needle, needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
 import { type HoverStore, useHovered } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
@@ -18,10 +18,14 @@ interface StationCalloutProps {
   hover: HoverStore;
   selected: string | null;
   units: Units;
+  markOf: (row: MapRow) => Needle;
+  /** how sure its place is, in words; empty while that is not known */
+  placeOf: (row: MapRow) => string;
 }
 
 /** Words beside the mark that is pointed at or chosen, and the same for screen readers. */
-export function StationCallout({ map, slug, drawn, hover, selected, units }: StationCalloutProps) {
+export function StationCallout(props: StationCalloutProps) {
+  const { map, slug, drawn, hover, selected, units, markOf, placeOf } = props;
   const hovered = useHovered(hover);
   const query = useSearchParams().toString();
   const card = useRef<HTMLDivElement>(null);
@@ -52,15 +56,16 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
   }, [map, row]);
 
   const words = row ? calloutWords(row) : '';
+  const place = row ? placeOf(row) : '';
   return (
     <>
       <p aria-live="polite" className="visually-hidden">
-        {row ? [row.name, words, row.note].filter(Boolean).join(', ') : ''}
+        {row ? [row.name, words, place, row.note].filter(Boolean).join(', ') : ''}
       </p>
       {row && (
         <div ref={card} className={styles.card} data-hovering={hovered !== null && hovered !== selected}>
           <p className={styles.cardName}>
-            <NeedleMark needle={needleOf(row)} size={22} />
+            <NeedleMark needle={markOf(row)} size={22} />
             <strong>{row.name}</strong>
           </p>
           <p className={styles.cardFacts}>
@@ -69,6 +74,7 @@ export function StationCallout({ map, slug, drawn, hover, selected, units }: Sta
               .join(' · ')}
           </p>
           <p>{words}</p>
+          {place && <p>{place}</p>}
           {row.note && <p className={styles.cardFacts}>{row.note}</p>}
           {code === selected && (
             <Link href={stationHref(slug, row.code, query)} prefetch={false}>

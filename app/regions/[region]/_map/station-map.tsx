@@ -5,6 +5,7 @@ import { memo, useEffect, useMemo, useState } from 'react';
 import { createPortal } from 'react-dom';
 import { AttributionControl, MapContainer, ScaleControl, TileLayer, useMap } from 'react-leaflet';
 import type { Units } from '@/app/components/format';
+import type { Needle } from '@/app/components/needle';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import type { MapView } from '../map-state.ts';
@@ -38,6 +39,9 @@ interface StationMapProps {
   onView: (view: MapView | null) => void;
   /** codes of the stations inside the map's frame */
   onInView: (codes: Set<string>) => void;
+  /** a station's mark, and what is said of its place beside it */
+  markOf: (row: MapRow) => Needle;
+  placeOf: (row: MapRow) => string;
 }
 
 const EVERYWHERE: L.LatLngBoundsExpression = [
@@ -82,11 +86,12 @@ interface InsideProps extends StationMapProps {
 function MapInside(props: InsideProps) {
   const { regionName, slug, units, rows, found, ground, hover, selected, onSelect, onView, onInView, bounds, outline } =
     props;
+  const { markOf, placeOf } = props;
   const map = useMap();
   useState(() => makePanes(map));
   const drawn = useMemo(() => drawingOrder(rows), [rows]);
   const layerOfGround = useGround(map);
-  const layer = useNeedleLayer({ map, drawn, found, hover, selected });
+  const layer = useNeedleLayer({ map, drawn, found, hover, selected, markOf });
   useMapPointer({ map, layer, drawn, hover, onSelect });
   useMapKeys({ map, layer, drawn, hover, selected, onSelect });
   useContainerWords(map, regionName, drawn.rows.length);
@@ -119,7 +124,7 @@ function MapInside(props: InsideProps) {
       {createPortal(
         <>
           <MapControls map={map} onShowAll={bounds ? showAll : null} />
-          <StationCallout map={map} slug={slug} drawn={drawn} hover={hover} selected={selected} units={units} />
+          <StationCallout {...{ map, slug, drawn, hover, selected, units, markOf, placeOf }} />
         </>,
         beside(map),
       )}

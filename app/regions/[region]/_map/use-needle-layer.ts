@@ -1,11 +1,11 @@
 import type L from 'leaflet';
 import { useEffect, useMemo, useRef } from 'react';
 import { onThemeChange } from '@/app/components/canvas/tokens';
-import { needleOf } from '@/app/components/needle';
+import type { Needle } from '@/app/components/needle';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { hasPlace } from '../row-filter.ts';
-import { type Mark, NeedleLayer } from './needle-layer.ts';
+import { NeedleLayer } from './needle-layer.ts';
 import { readPalette } from './palette.ts';
 
 export interface DrawnStations {
@@ -34,10 +34,12 @@ interface NeedleLayerState {
   found: Set<string> | null;
   hover: HoverStore;
   selected: string | null;
+  /** a station's mark; another function draws all anew */
+  markOf: (row: MapRow) => Needle;
 }
 
 /** Puts the needles on the map and keeps them in step with rows, search, hover, selection and theme. */
-export function useNeedleLayer({ map, drawn, found, hover, selected }: NeedleLayerState): NeedleLayer {
+export function useNeedleLayer({ map, drawn, found, hover, selected, markOf }: NeedleLayerState): NeedleLayer {
   const layer = useMemo(() => new NeedleLayer(readPalette()), []);
   const selectedIndex = useRef(-1);
 
@@ -50,11 +52,9 @@ export function useNeedleLayer({ map, drawn, found, hover, selected }: NeedleLay
     };
   }, [layer, map]);
 
-  useEffect(() => {
-    layer.setMarks(
-      drawn.rows.map((row): Mark => ({ latitude: row.latitude, longitude: row.longitude, needle: needleOf(row) })),
-    );
-  }, [layer, drawn]);
+  useEffect(() => layer.setPlaces(drawn.rows), [layer, drawn]);
+
+  useEffect(() => layer.setNeedles(drawn.rows.map(markOf)), [layer, drawn, markOf]);
 
   useEffect(() => {
     layer.setFaded(Uint8Array.from(drawn.rows, (row) => (found && !found.has(row.code) ? 1 : 0)));

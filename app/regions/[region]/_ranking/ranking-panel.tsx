@@ -1,10 +1,15 @@
 'use client';
 import { Tabs } from '@base-ui/react/tabs';
-import { memo, useMemo } from 'react';
+import { memo, useCallback, useMemo } from 'react';
 import { Cautions } from '@/app/components/cautions';
-import { fixed, type Units } from '@/app/components/format';
+import { fixed, MISSING, type Units } from '@/app/components/format';
+import { needleOf } from '@/app/components/needle';
 import ui from '@/app/components/ui.module.css';
 import type { Basis } from '@/lib/basis';
+import type { RankingMovement } from '@/lib/region/window-types';
+import { detectableText } from '../_certainty/detectable-text.ts';
+import { movementWords } from '../_certainty/movement-words.ts';
+import type { CertaintyAnswer } from '../_certainty/use-certainty.ts';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import type { Tab } from '../map-state.ts';
@@ -13,6 +18,8 @@ import { DownloadMenu } from './download-menu.tsx';
 import styles from './ranking-panel.module.css';
 import { RankingTable } from './ranking-table.tsx';
 import { ReasonList } from './reason-list.tsx';
+import type { Moved } from './station-row.tsx';
+import { SurenessBar } from './sureness-bar.tsx';
 
 interface RankingPanelProps {
   slug: string;
@@ -28,17 +35,24 @@ interface RankingPanelProps {
   tab: Tab;
   onTab: (tab: Tab) => void;
   rankBy: Basis['rankBy'];
+  index: Basis['index'];
   units: Units;
   span: [number, number];
   hover: HoverStore;
   selected: string | null;
   onSelect: (code: string | null) => void;
+  certainty: CertaintyAnswer;
+  /** of the steepest declines, and how it is changed */
+  k: number;
+  onK: (k: number) => void;
+  /** against the region's own terms; null while these are those */
+  movement: RankingMovement | null;
 }
 
 /** The lists beside the map: ranked, drying, not ranked; what is counted; search, following the map, files. */
 export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps) {
   const { slug, regionName, rows, found, inView, follow, onFollow, search, onSearch, tab, onTab } = props;
-  const { rankBy, units, span, hover, selected, onSelect } = props;
+  const { rankBy, index, units, span, hover, selected, onSelect, certainty, k, onK, movement } = props;
   const lists = useMemo(() => byTab(rows), [rows]);
   const shown = useMemo(() => {
     // a station without a place is never out of view
@@ -48,7 +62,20 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
   }, [rows, found, follow, inView]);
   const placed = useMemo(() => rows.filter(hasPlace), [rows]);
   const rankedInView = inView === null ? null : lists.ranked.filter((row) => inView.has(row.code)).length;
-  const table = { slug, units, span, hover, selected, onSelect };
+  const { view, pending } = certainty;
+  const sureness = useMemo(() => ({ view, waiting: pending, k }), [view, pending, k]);
+  const moved = useMemo(() => placesMoved(movement), [movement]);
+  const movedOf = useCallback((code: string) => moved.get(code) ?? null, [moved]);
+  const detectableOf = useCallback(
+    (row: MapRow) => {
+      const trend = view?.detectable.get(row.code);
+      if (!trend || needleOf(row).significant) return null;
+      const text = detectableText(trend, { index, units, drying: row.drying });
+      return text === MISSING ? null : text;
+    },
+    [view, index, units],
+  );
+  const table = { slug, units, span, hover, selected, onSelect, movedOf, detectableOf };
 
   return (
     <section aria-label="Ranking" className={styles.panel}>
@@ -80,6 +107,11 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
           <DownloadMenu slug={slug} shown={shown[tab].map((row) => row.code)} all={rows.length} />
         </div>
       </div>
+      {lists.ranked.length > 0 && (
+        <SurenessBar answer={certainty} places={lists.ranked.length} k={k} onK={onK}>
+          {movement && <p>{movementWords(movement)}</p>}
+        </SurenessBar>
+      )}
       <Tabs.Root value={tab} onValueChange={(value) => onTab(value as Tab)} className={styles.tabs}>
         <Tabs.List className={styles.tabList} aria-label="Lists">
           <Tabs.Tab value="ranked" className={styles.tab}>
@@ -105,6 +137,7 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
               rows={shown.ranked}
               all={lists.ranked}
               figure={rankBy}
+              sureness={sureness}
             />
           )}
         </Tabs.Panel>
@@ -121,6 +154,7 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
               rows={shown.drying}
               all={lists.drying}
               figure="zero-days"
+              sureness={null}
             />
           )}
         </Tabs.Panel>
@@ -133,6 +167,11 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
     </section>
   );
 });
+
+function placesMoved(movement: RankingMovement | null): Map<string, Moved> {
+  const compared = movement?.movements.filter(({ after }) => after !== null) ?? [];
+  return new Map(compared.map(({ code, moved, before }) => [code, { places: moved, before }]));
+}
 
 function byTab(rows: MapRow[]): Record<Tab, MapRow[]> {
   const lists: Record<Tab, MapRow[]> = { ranked: [], drying: [], unranked: [] };

@@ -9,7 +9,8 @@ import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { axisTicks, type FigureKind, figureWords } from './figure-words.ts';
 import styles from './ranking-table.module.css';
-import { StationRow } from './station-row.tsx';
+import { type Moved, StationRow } from './station-row.tsx';
+import type { Sureness } from './sureness-cells.tsx';
 
 /** Height of a row in pixels, the same in the style sheet: the list knows where each row lies without measuring. */
 const ROW = 48;
@@ -26,6 +27,11 @@ interface RankingTableProps {
   hover: HoverStore;
   selected: string | null;
   onSelect: (code: string | null) => void;
+  /** null for a list without places */
+  sureness: Sureness | null;
+  movedOf: (code: string) => Moved | null;
+  /** the trend that a record would have shown, for stations without a significant one */
+  detectableOf: (row: MapRow) => string | null;
 }
 
 /** The list of ranked (or drying) stations. Only rows in sight are in the page. Pointing at a row points at its mark;
@@ -33,6 +39,7 @@ interface RankingTableProps {
  *  Enter opens. */
 export function RankingTable(props: RankingTableProps) {
   const { slug, caption, rows, all, figure, units, span, hover, selected, onSelect } = props;
+  const { sureness, movedOf, detectableOf } = props;
   const query = useSearchParams().toString();
   const box = useRef<HTMLDivElement>(null);
   const [active, setActive] = useState(0);
@@ -151,6 +158,25 @@ export function RankingTable(props: RankingTableProps) {
                 <IntervalAxis scale={scale} ticks={axisTicks(scale)} />
               </th>
             )}
+            {sureness && (
+              <>
+                <th scope="col" className={styles.span}>
+                  Rank span
+                  <span className={styles.ends}>
+                    <span>1</span>
+                    <span>{all.length}</span>
+                  </span>
+                </th>
+                <th scope="col" className={styles.among}>
+                  Among the
+                  <span className={styles.under}>{sureness.k === 1 ? 'steepest' : `${sureness.k} steepest`}</span>
+                </th>
+              </>
+            )}
+            <th scope="col" className={styles.steady}>
+              Steady
+              <span className={styles.under}>windows</span>
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -168,6 +194,9 @@ export function RankingTable(props: RankingTableProps) {
               scale={scale}
               span={span}
               units={units}
+              sureness={sureness}
+              moved={movedOf(rows[index].code)}
+              detectable={detectableOf(rows[index])}
             />
           ))}
           {after > 0 && <tr style={{ height: after }} />}

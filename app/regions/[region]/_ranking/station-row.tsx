@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import { memo } from 'react';
-import { areaNumber, fixed, pValue, type Units } from '@/app/components/format';
+import { areaNumber, fixed, percent, pValue, type Units } from '@/app/components/format';
 import { IntervalFigure, type IntervalScale } from '@/app/components/interval-figure';
 import { needleOf } from '@/app/components/needle';
 import { decodeRatios } from '@/app/components/spark-code';
@@ -10,6 +10,7 @@ import type { MapRow } from '../map-row.ts';
 import { type FigureWords, trendWords } from './figure-words.ts';
 import { nameLines } from './name-lines.ts';
 import styles from './ranking-table.module.css';
+import { type Sureness, SurenessCells } from './sureness-cells.tsx';
 
 interface StationRowProps {
   row: MapRow;
@@ -25,11 +26,24 @@ interface StationRowProps {
   scale: IntervalScale | null;
   span: [number, number];
   units: Units;
+  /** null for a list without places */
+  sureness: Sureness | null;
+  /** how far its place moved against the region's own terms; null where there is nothing to compare */
+  moved: Moved | null;
+  /** the trend that the record would have shown; null where that is not known or not of interest */
+  detectable: string | null;
+}
+
+/** Places up (steeper decline) from the place on the region's own terms; null where it is not ranked there. */
+export interface Moved {
+  places: number | null;
+  before: number | null;
 }
 
 /** One ranked or drying station: figures in the row, words under the figures. */
 export const StationRow = memo(function StationRow(props: StationRowProps) {
   const { row, index, href, selected, tabbable, hover, words, scale, span, units } = props;
+  const { sureness, moved, detectable } = props;
   const hovered = useIsHovered(hover, row.code);
   const { side, significant } = needleOf(row);
   const [head, tail] = nameLines(row.name);
@@ -44,7 +58,10 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
       data-selected={selected || undefined}
       className={styles.row}
     >
-      <td className={styles.rank}>{row.rank ?? ''}</td>
+      <td className={styles.rank}>
+        {row.rank ?? ''}
+        {moved && <MovedMark {...moved} />}
+      </td>
       <th scope="row" className={styles.station}>
         <Link href={href} prefetch={false} tabIndex={tabbable ? 0 : -1} aria-current={selected || undefined}>
           <span className={styles.head}>{head}</span>{' '}
@@ -89,9 +106,35 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
             high={words.shown(row.figure.high)}
             significant={significant}
             side={side}
+            height={detectable ? 20 : undefined}
           />
+          {detectable && <span className={styles.detectable}>detectable {detectable}</span>}
         </td>
       )}
+      {sureness && <SurenessCells row={row} sureness={sureness} />}
+      <td className={styles.steady}>{percent(row.steadiness)}</td>
     </tr>
   );
 });
+
+/** Under a place: how many places further up or down it stands than on the region's own terms. */
+function MovedMark({ places, before }: Moved) {
+  if (places === null || before === null) {
+    return (
+      <span className={styles.moved}>
+        new<span className="visually-hidden">: not ranked on the region’s own terms</span>
+      </span>
+    );
+  }
+  if (places === 0) return null;
+  return (
+    <span className={styles.moved}>
+      <span aria-hidden="true">
+        {places > 0 ? '▲' : '▼'} {Math.abs(places)}
+      </span>
+      <span className="visually-hidden">
+        , {Math.abs(places)} {places > 0 ? 'up' : 'down'} from {before} on the region’s own terms
+      </span>
+    </span>
+  );
+}

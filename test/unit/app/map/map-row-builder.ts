@@ -23,5 +23,6 @@ export const mapRow = (given: Partial<MapRow>): MapRow => ({
   spark: '',
   unrankedReason: null,
   note: '',
+  steadiness: null,
   ...given,
 });

@@ -1,0 +1,39 @@
+'use client';
+import { useSearchParams } from 'next/navigation';
+import { useMemo } from 'react';
+import { apiHref } from '@/app/components/links';
+import { type LongResult, useLongResult } from '@/app/components/use-long-result';
+import type { Certainty } from '@/lib/region/certainty-types';
+import { type CertaintyView, certaintyView } from './certainty-view.ts';
+
+export interface CertaintyAnswer extends Omit<LongResult<Certainty>, 'value' | 'valueOf'> {
+  /** null until it is there: the ranking stands without */
+  view: CertaintyView | null;
+}
+
+/** How sure the places of a region's ranking are, on the terms in the address. Asked for when the page is alive.
+ *  @param ranked  stations that are ranked; with none there is nothing to ask */
+export function useCertainty(slug: string, ranked: number): CertaintyAnswer {
+  const query = useSearchParams().toString();
+  const address = ranked === 0 ? null : apiHref(slug, 'certainty', query);
+  const {
+    value,
+    valueOf: answered,
+    problem,
+    pending,
+    progress,
+    cancelled,
+    cancel,
+    retry,
+  } = useLongResult<Certainty>(address);
+  // that of other terms would say something untrue of these
+  const view = useMemo(
+    () => (value !== null && answered === address ? certaintyView(value) : null),
+    [value, answered, address],
+  );
+  // the same as long as nothing changed: lists of thousands hang on it
+  return useMemo(
+    () => ({ view, problem, pending, progress, cancelled, cancel, retry }),
+    [view, problem, pending, progress, cancelled, cancel, retry],
+  );
+}
