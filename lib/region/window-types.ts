@@ -45,9 +45,11 @@ export interface RegionStartEnd {
 export interface Movement {
   code: string;
   name: string;
+  /** its place in each ranking */
   before: number | null;
   after: number | null;
-  /** places moved up (steeper decline) in `after`; null where it is ranked in only one */
+  /** places moved up (steeper decline) in `after`, among the stations ranked in both, so that nobody moves for others that
+   *  come or go: where the same stations are ranked, before − after. Null where it is ranked in only one */
   moved: number | null;
   trendBefore: string | null;
   trendAfter: string | null;

@@ -1,5 +1,7 @@
 import type * as z from 'zod';
 import { plainFormatParameter } from '../_http/plain-table';
+import { alternativesParameters } from '../regions/[region]/alternatives/parameters';
+import { movementParameters } from '../regions/[region]/movement/parameters';
 import { BASIS_PARAMETERS, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, text } from './parts';
 
@@ -21,11 +23,28 @@ function plainTable(summary: string, path: Parameter[], shape: z.ZodRawShape, co
   };
 }
 
+/** Such a table that may take long. */
+function longTable(summary: string, path: Parameter[], shape: z.ZodRawShape) {
+  const { get } = plainTable(summary, path, shape);
+  const running = { description: 'the job that works on it: ask again when it is done', content: json(anything) };
+  return { get: { ...get, responses: { ...get.responses, '202': running } } };
+}
+
 /** How answers depend on the years and the other terms, and levels before and after. */
 export const WINDOW_PATHS = {
   '/api/regions/{region}/stations/{code}/start-end': plainTable(
     'Trend of a station for every start year and end year',
     [REGION, STATION],
     plainFormatParameter,
+  ),
+  '/api/regions/{region}/movement': plainTable(
+    'Who moved in the ranking, and how far, against other terms',
+    [REGION],
+    movementParameters,
+  ),
+  '/api/regions/{region}/alternatives': longTable(
+    'The ranking under other choices of each term',
+    [REGION],
+    alternativesParameters,
   ),
 };
