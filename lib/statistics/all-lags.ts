@@ -20,7 +20,7 @@ export interface AllLags {
  *  @returns factor 1 and no lags for fewer than 4 values or none that differ about the trend
  *  @throws RangeError when lengths differ or years do not rise
  *  Source: Hamed & Rao 1998, A modified Mann-Kendall trend test for autocorrelated data, J. Hydrol. 204:182–196, as
- *  published. It does not hold its level: see README.md. */
+ *  published. It gives too many false alarms, which `npm run validate` counts. */
 export function allLagsVarianceFactor(series: DatedValues): AllLags {
   const { years } = series;
   const ranks = averageRanks(detrended(series, 'allLagsVarianceFactor'));

@@ -37,19 +37,13 @@ export function blockBootstrapFactor(
   const blocks = Math.ceil(n / length);
   const lastLength = n - (blocks - 1) * length;
   const whole = signSums(rest, length, length);
-  const last = signSums(rest, length, lastLength);
+  const cut = signSums(rest, length, lastLength);
   const drawn = new Int32Array(blocks);
   let sum = 0;
   let squares = 0;
   for (let replicate = 0; replicate < replicates; replicate++) {
-    let s = 0;
-    for (let block = 0; block < blocks; block++) {
-      const start = random.below(starts);
-      const sums = block === blocks - 1 ? last : whole;
-      s += sums.within[start];
-      for (let before = 0; before < block; before++) s += sums.between[drawn[before] + start];
-      drawn[block] = start * starts;
-    }
+    for (let block = 0; block < blocks; block++) drawn[block] = random.below(starts);
+    const s = sumOfBlocks(drawn, whole, cut, starts);
     sum += s;
     squares += s * s;
   }
@@ -62,28 +56,51 @@ export function blockLength(n: number): number {
   return Math.ceil(Math.cbrt(n));
 }
 
-/** Sums of signs of later less earlier value, in a block cut to `laterLength`, and between a whole block and one so cut.
- *  Blocks are known by where they start; `between` stands at start of the earlier × starts + start of the later. */
-function signSums(x: Float64Array, length: number, laterLength: number) {
+interface SignSums {
+  within: Int32Array;
+  against: Int32Array;
+}
+
+/** S of the replicate whose blocks start where `drawn` says, the last one cut; whole numbers of 32 bits. */
+function sumOfBlocks(drawn: Int32Array, whole: SignSums, cut: SignSums, starts: number): number {
+  const last = drawn.length - 1;
+  const { within, against } = whole;
+  let s = 0;
+  for (let block = 0; block < last; block++) {
+    const row = Math.imul(drawn[block], starts);
+    s = (s + within[drawn[block]]) | 0;
+    for (let before = 0; before < block; before++) s = (s + against[row + drawn[before]]) | 0;
+  }
+  const row = Math.imul(drawn[last], starts);
+  s = (s + cut.within[drawn[last]]) | 0;
+  for (let before = 0; before < last; before++) s = (s + cut.against[row + drawn[before]]) | 0;
+  return s;
+}
+
+/** Sums of signs of later less earlier value: in a block cut to `laterLength`, and of one so cut against a whole block
+ *  before it. Blocks are known by where they start; `against` stands at later start × starts + earlier start. */
+function signSums(x: Float64Array, length: number, laterLength: number): SignSums {
   const starts = x.length - length + 1;
   const within = new Int32Array(starts);
-  const between = new Int32Array(starts * starts);
-  // of one value against the block that starts at each place, then summed over the values of the earlier block
-  const ofValue = new Int32Array(x.length * starts);
-  for (let i = 0; i < x.length; i++) {
-    for (let start = 0; start < starts; start++) {
-      let sum = 0;
-      for (let j = start; j < start + laterLength; j++) sum += Math.sign(x[j] - x[i]);
-      ofValue[i * starts + start] = sum;
+  const against = new Int32Array(starts * starts);
+  for (let later = 0; later < starts; later++) {
+    const row = later * starts;
+    const end = later + laterLength;
+    for (let j = later; j < end; j++) {
+      const value = x[j];
+      for (let i = later; i < j; i++) within[later] += sign(value, x[i]);
+      // a sum over a window of `length` that moves along
+      let windowSum = 0;
+      for (let i = 0; i < length; i++) windowSum += sign(value, x[i]);
+      against[row] += windowSum;
+      for (let earlier = 1; earlier < starts; earlier++) {
+        windowSum += sign(value, x[earlier + length - 1]) - sign(value, x[earlier - 1]);
+        against[row + earlier] += windowSum;
+      }
     }
   }
-  for (let earlier = 0; earlier < starts; earlier++) {
-    for (let i = earlier; i < earlier + length; i++) {
-      for (let later = 0; later < starts; later++) between[earlier * starts + later] += ofValue[i * starts + later];
-    }
-    for (let i = earlier; i < earlier + laterLength; i++) {
-      for (let j = i + 1; j < earlier + laterLength; j++) within[earlier] += Math.sign(x[j] - x[i]);
-    }
-  }
-  return { within, between };
+  return { within, against };
 }
+
+/** 1, 0 or −1, without a branch that could be guessed wrong. */
+const sign = (later: number, earlier: number): number => Number(later > earlier) - Number(later < earlier);

@@ -41,7 +41,7 @@ export function significantLag1(series: DatedValues): number {
  *  the series and the first after each gap are lost. The level of y has no meaning.
  *  @param r1  as from `significantLag1`, above −1 and below 1
  *  @throws RangeError when lengths differ, years do not rise or `r1` is outside its range
- *  Source: Yue et al. 2002 (as above). It does not cure false alarms: see README.md. */
+ *  Source: Yue et al. 2002 (as above). It does not cure false alarms, which `npm run validate` counts. */
 export function preWhitened(series: DatedValues, r1: number): { years: number[]; values: number[] } {
   if (!(r1 > -1 && r1 < 1)) throw new RangeError(`preWhitened: r1 must lie between −1 and 1, got ${r1}`);
   const { years, slope } = series;
