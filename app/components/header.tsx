@@ -7,6 +7,7 @@ import { ThemeSwitch } from './theme-switch.tsx';
 
 const PAGES: { page: RegionPage; label: string }[] = [
   { page: 'map', label: 'Map' },
+  { page: 'evidence', label: 'Evidence' },
   { page: 'curves', label: 'Curves' },
   { page: 'records', label: 'Records' },
   { page: 'import', label: 'Import' },

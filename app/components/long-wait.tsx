@@ -1,4 +1,3 @@
-import type { ReactNode } from 'react';
 import { ProgressBar, timeWords } from './import/job-progress.tsx';
 import { ErrorNote, Loading } from './notes.tsx';
 import ui from './ui.module.css';
@@ -10,14 +9,15 @@ interface Props {
   title: string;
   /** what could not be done. Example: "Chance could not be told" */
   failed: string;
-  /** why it takes a while, or what may be done meanwhile */
-  children?: ReactNode;
+  /** in few words: the full account stands elsewhere on the page */
+  brief?: boolean;
 }
 
 /** What stands in place of a long answer, or above an older one, until it is there: progress that can be cancelled, that it
  *  was cancelled, or why it failed. Nothing once it is there. */
-export function LongWait({ answer, title, failed, children }: Props) {
+export function LongWait({ answer, title, failed, brief = false }: Props) {
   const { pending, progress, problem, cancelled, cancel, retry } = answer;
+  if (brief) return problem !== null ? `${failed}.` : cancelled ? `${title}: cancelled.` : pending ? `${title}…` : null;
   if (problem !== null) {
     return (
       <ErrorNote title={failed}>
@@ -36,15 +36,12 @@ export function LongWait({ answer, title, failed, children }: Props) {
   if (progress !== null) {
     const left = progress.secondsLeft === null ? '' : timeWords(progress.secondsLeft);
     return (
-      <>
-        <ProgressBar
-          title={progress.share === null ? `${title}: waiting for its turn` : title}
-          share={progress.share ?? 0}
-          detail={[left, 'the page may be used meanwhile'].filter(Boolean).join(' · ')}
-          onCancel={cancel}
-        />
-        {children}
-      </>
+      <ProgressBar
+        title={progress.share === null ? `${title}: waiting for its turn` : title}
+        share={progress.share ?? 0}
+        detail={[left, 'the page may be used meanwhile'].filter(Boolean).join(' · ')}
+        onCancel={cancel}
+      />
     );
   }
   return pending ? <Loading>{title}…</Loading> : null;

@@ -18,8 +18,8 @@ export interface GroundShape {
 /** The poles are infinitely far on a Mercator map; it ends here, where it is square. */
 const HIGHEST_LATITUDE = 85.0511287798;
 
-const worldX = (longitude: number): number => (256 * (longitude + 180)) / 360;
-const worldY = (latitude: number): number => {
+export const worldX = (longitude: number): number => (256 * (longitude + 180)) / 360;
+export const worldY = (latitude: number): number => {
   const angle = (Math.max(-HIGHEST_LATITUDE, Math.min(HIGHEST_LATITUDE, latitude)) * Math.PI) / 180;
   return 128 * (1 - Math.log(Math.tan(Math.PI / 4 + angle / 2)) / Math.PI);
 };

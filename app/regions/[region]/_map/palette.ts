@@ -14,7 +14,7 @@ export interface Palette {
   border: string;
 }
 
-const TOKENS: Record<keyof Palette, string> = {
+export const MAP_TOKENS: Record<keyof Palette, string> = {
   paper: '--paper',
   falling: '--dry-fill',
   rising: '--wet-fill',
@@ -27,4 +27,4 @@ const TOKENS: Record<keyof Palette, string> = {
   border: '--rule-strong',
 };
 
-export const readPalette = (): Palette => readTokens(TOKENS);
+export const readPalette = (): Palette => readTokens(MAP_TOKENS);

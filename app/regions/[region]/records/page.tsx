@@ -6,7 +6,7 @@ import type { Basis } from '@/lib/basis';
 import { recordsOf } from '@/lib/jobs/records';
 import { NoRecords } from '../no-records';
 import { type PageQuery, pageRequest } from '../page-request';
-import type { OwnTerms } from './_periods/use-basis-keys';
+import type { OwnTerms } from './_periods/own-terms.ts';
 import { RecordsScreen } from './records-screen';
 
 export const metadata: Metadata = { title: 'Records' };

@@ -11,7 +11,7 @@ import { Segmented } from '@/app/components/segmented';
 import { useAnswer } from '@/app/components/use-answer';
 import type { ResolvedBasis } from '@/lib/basis';
 import type { RegionRecords } from '@/lib/jobs/records-types';
-import type { OwnTerms } from './_periods/use-basis-keys.ts';
+import type { OwnTerms } from './_periods/own-terms.ts';
 import styles from './records-screen.module.css';
 import { recordsState, type Section } from './records-state.ts';
 import { YearsSection } from './years-section.tsx';

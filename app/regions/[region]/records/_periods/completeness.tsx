@@ -2,8 +2,8 @@
 import { type FormEvent, useState } from 'react';
 import ui from '@/app/components/ui.module.css';
 import type { ResolvedBasis } from '@/lib/basis';
+import type { OwnTerms } from './own-terms.ts';
 import styles from './periods.module.css';
-import type { OwnTerms } from './use-basis-keys.ts';
 
 interface Props {
   basis: ResolvedBasis;

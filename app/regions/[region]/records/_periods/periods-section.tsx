@@ -6,15 +6,16 @@ import { apiHref } from '@/app/components/links';
 import { Empty, ErrorNote, Loading } from '@/app/components/notes';
 import ui from '@/app/components/ui.module.css';
 import { useAnswer } from '@/app/components/use-answer';
+import { useBasisKeys } from '@/app/components/use-basis-keys';
 import type { ResolvedBasis } from '@/lib/basis';
 import type { CommonPeriods } from '@/lib/jobs/records-types';
 import { Completeness } from './completeness.tsx';
+import type { OwnTerms } from './own-terms.ts';
 import { PeriodFigure } from './period-figure.tsx';
 import { layOutPeriods, periodCount, periodsByWorth } from './period-grid.ts';
 import { PeriodMatrix } from './period-matrix.tsx';
 import { kept } from './period-words.ts';
 import styles from './periods.module.css';
-import { type OwnTerms, useBasisKeys } from './use-basis-keys.ts';
 
 interface Props {
   slug: string;

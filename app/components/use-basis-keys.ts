@@ -2,23 +2,17 @@
 import { usePathname, useRouter, useSearchParams } from 'next/navigation';
 import { useTransition } from 'react';
 
-/** What a link leaves unsaid, as it stands in an address. */
-export interface OwnTerms {
-  period: string;
-  minYears: string;
-  minCoverage: string;
-}
-
 /** Writes keys of the basis into the address, beside all else that stands there; one that is the region's own is left
- *  out. */
-export function useBasisKeys(own: OwnTerms): { pending: boolean; set(keys: Partial<OwnTerms>): void } {
+ *  out.
+ *  @param own  the region's own terms as an address would write them */
+export function useBasisKeys<Terms extends object>(own: Terms): { pending: boolean; set(keys: Partial<Terms>): void } {
   const router = useRouter();
   const path = usePathname();
   const query = useSearchParams();
   const [pending, startTransition] = useTransition();
-  const set = (keys: Partial<OwnTerms>) => {
+  const set = (keys: Partial<Terms>) => {
     const next = new URLSearchParams(query);
-    for (const [key, value] of Object.entries(keys) as [keyof OwnTerms, string][]) {
+    for (const [key, value] of Object.entries(keys) as [keyof Terms & string, string][]) {
       if (value === own[key]) next.delete(key);
       else next.set(key, value);
     }
