@@ -1,4 +1,4 @@
-import { type AnnualIndexName, type Basis, MONTHS } from '../basis.ts';
+import type { AnnualIndexName } from '../basis.ts';
 
 /** An annual index in words, for sentences, headings and files. */
 export interface IndexWords {
@@ -34,25 +34,3 @@ export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
     none: 'no day below its Q90',
   },
 };
-
-/** One year's figure, by name, with the months that it is of. Example: "May–October 7-day minimum" */
-export function indexOfYear({ index, days, season }: Pick<Basis, 'index' | 'days' | 'season'>): string {
-  const months = season ? `${MONTHS[season[0] - 1]}–${MONTHS[season[1] - 1]}` : '';
-  const of = (figure: string, wholeYear = '') => [months || wholeYear, figure].filter(Boolean).join(' ');
-  switch (index) {
-    case 'minimum':
-      return of(`${days}-day minimum`);
-    case 'minimum-date':
-      return `date of the ${of(`${days}-day minimum`)}`;
-    case 'q95':
-      return of('Q95', 'annual');
-    case 'mean-flow':
-      return of('mean flow', 'annual');
-    case 'zero-flow-days':
-      return `number of ${of('zero-flow days')}`;
-    case 'bfi':
-      return of('baseflow index');
-    case 'deficit':
-      return of('deficit volume below Q90');
-  }
-}

@@ -1,4 +1,4 @@
-import { indexOfYear } from './index-words.ts';
+import { indexOfYear } from './index-of-year.ts';
 import type { PairSite, PairTerms } from './pair.ts';
 import { FEWEST_FOR_TREND } from './single-trend.ts';
 import { called, counted, listed } from './site-words.ts';

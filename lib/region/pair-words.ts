@@ -1,5 +1,5 @@
 import { INDEX_FACTS } from './index-facts.ts';
-import { indexOfYear } from './index-words.ts';
+import { indexOfYear } from './index-of-year.ts';
 import type { PairSite, PairTerms } from './pair.ts';
 import type { PairComparison, PairTrend } from './pair-types.ts';
 import { intervalWords, plain, probability, signed } from './sentence-figures.ts';

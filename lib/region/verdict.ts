@@ -1,6 +1,7 @@
 import type { ResolvedBasis } from '../basis.ts';
 import { INDEX_FACTS, percentOfMean } from './index-facts.ts';
-import { INDEX_WORDS, indexOfYear } from './index-words.ts';
+import { indexOfYear } from './index-of-year.ts';
+import { INDEX_WORDS } from './index-words.ts';
 import type { RankingRow } from './ranking-types.ts';
 import { intervalWords, plain, probability, signed } from './sentence-figures.ts';
 
