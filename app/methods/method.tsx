@@ -2,7 +2,7 @@ import { ScrollFrame } from '@/app/components/scroll-frame';
 import type { MethodDefinition } from '@/lib/region/methods/definition';
 import { Formula } from './formula.tsx';
 import styles from './page.module.css';
-import { SimulatedTable } from './simulated-table.tsx';
+import { SimulatedTables } from './simulated-table.tsx';
 
 /** One method: what it does, its formulas, what it assumes, when not to trust it, whose it is. */
 export function Method({ method }: { method: MethodDefinition }) {
@@ -25,7 +25,7 @@ export function Method({ method }: { method: MethodDefinition }) {
       ))}
       <Points title="It assumes" points={assumes} />
       <Points title="Do not lean on it" points={distrust} />
-      <SimulatedTable claims={simulated} title={title} />
+      <SimulatedTables claims={simulated} />
       <Points title="Sources" points={sources} small />
     </section>
   );

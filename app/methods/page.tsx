@@ -1,3 +1,4 @@
+import 'katex/dist/katex.min.css';
 import type { Metadata } from 'next';
 import { Cautions } from '@/app/components/cautions';
 import { Header } from '@/app/components/header';
@@ -18,7 +19,9 @@ export default function MethodsPage() {
           <h1>Methods</h1>
           <p>
             How each figure is made, from whom the method is, what it assumes, and when not to lean on it. Methods
-            version {METHODS_VERSION}; it rises with any figure that would come out otherwise.
+            version {METHODS_VERSION}; it rises with any figure that would come out otherwise. What is simulated stands
+            with one standard error: series of 40 years, regions of 40 stations that share weather with a correlation of
+            0.5, where the truth is known.
           </p>
         </header>
         <nav aria-label="Methods" className={styles.contents}>

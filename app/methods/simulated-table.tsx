@@ -1,40 +1,58 @@
 import { ScrollFrame } from '@/app/components/scroll-frame';
-import { aimWords, CLAIM_WORDS, SIMULATED, sharePercent } from '@/lib/region/simulated-figures';
+import { aimWords, CLAIM_WORDS, SIMULATED, type SimulatedFigure, sharePercent } from '@/lib/region/simulated-figures';
 import styles from './page.module.css';
 
-/** What `npm run validate` made of some claims. */
-export function SimulatedTable({ claims, title }: { claims: readonly string[]; title: string }) {
-  const figures = SIMULATED.figures.filter(({ claim }) => claims.includes(claim));
-  if (figures.length === 0) return null;
+const distinct = (words: readonly string[]): string[] => [...new Set(words)];
+
+/** What `npm run validate` made of some claims, a table each: methods down, settings across. */
+export function SimulatedTables({ claims }: { claims: readonly string[] }) {
+  return claims.map((claim) => {
+    const figures = SIMULATED.figures.filter((figure) => figure.claim === claim);
+    return figures.length > 0 && <ClaimTable key={claim} claim={claim} figures={figures} />;
+  });
+}
+
+function ClaimTable({ claim, figures }: { claim: string; figures: readonly SimulatedFigure[] }) {
+  const settings = distinct(figures.map(({ setting }) => setting));
+  const title = `Simulated: ${CLAIM_WORDS[claim] ?? claim}`;
   return (
-    <ScrollFrame label={`${title}, simulated`} className={styles.scroll}>
+    <ScrollFrame label={title} className={styles.scroll}>
       <table className={styles.table}>
-        <caption>
-          Simulated, with one standard error: 40 years a station, in regions 40 stations with correlation 0.5
-        </caption>
+        <caption>{title}</caption>
         <thead>
           <tr>
-            <th scope="col">How often</th>
-            <th scope="col">by</th>
-            <th scope="col">where</th>
-            <th scope="col">simulated</th>
-            <th scope="col">meant to be</th>
+            <th scope="col">method</th>
+            {settings.map((setting) => (
+              <th scope="col" key={setting}>
+                {setting}
+              </th>
+            ))}
           </tr>
         </thead>
         <tbody>
-          {figures.map((figure) => (
-            <tr key={`${figure.claim} ${figure.of} ${figure.setting}`}>
-              <td>{CLAIM_WORDS[figure.claim] ?? figure.claim}</td>
-              <td>{figure.of}</td>
-              <td>{figure.setting}</td>
-              <td>
-                {sharePercent(figure.value)} ± {sharePercent(figure.error)}
-              </td>
-              <td>{aimWords(figure)}</td>
+          {distinct(figures.map(({ of }) => of)).map((of) => (
+            <tr key={of}>
+              <th scope="row">{of}</th>
+              {settings.map((setting) => (
+                <td key={setting}>
+                  <Cell figure={figures.find((one) => one.of === of && one.setting === setting)} />
+                </td>
+              ))}
             </tr>
           ))}
         </tbody>
       </table>
     </ScrollFrame>
+  );
+}
+
+function Cell({ figure }: { figure: SimulatedFigure | undefined }) {
+  if (!figure) return '–';
+  const aim = aimWords(figure);
+  return (
+    <>
+      {sharePercent(figure.value)} <span className={styles.error}>± {(figure.error * 100).toFixed(1)}</span>
+      {aim && <span className={styles.aim}>meant: {aim}</span>}
+    </>
   );
 }
