@@ -20,7 +20,8 @@ export interface RegionalKendall {
   p: number;
   /** median of the stations' ranking figures, unit of the basis's rankBy */
   medianFigure: number | null;
-  /** mean of the stations' lag-1 correlations and the factor for it */
+  /** mean of the stations' lag-1 correlations, 0 to 0.95, and the factor for it, which the test uses under every serial
+   *  correction of the basis */
   r1: number;
   serialFactor: number;
 }
@@ -71,4 +72,6 @@ export interface RegionalAnswers {
   /** all, then by influence with at least one ranked station, then what was drawn; each for both sets */
   groups: GroupAnswer[];
   pairs: DependentPair[];
+  /** stations under Drying, which no group counts: told apart, by adjusted p among themselves; null when there is none */
+  drying: { stations: number; falling: number; rising: number; sentence: string } | null;
 }

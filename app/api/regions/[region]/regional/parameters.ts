@@ -1,0 +1,26 @@
+import * as z from 'zod';
+import { waitParameter } from '@/app/api/_http/long-answer';
+import { plainFormatParameter } from '@/app/api/_http/plain-table';
+import { areaFromText } from '@/lib/region/in-polygon';
+
+export const regionalParameters = {
+  ...plainFormatParameter,
+  ...waitParameter,
+  method: z
+    .enum(['permutation', 'sieve'])
+    .default('permutation')
+    .describe('how chance is imitated: years in random order, or drawn anew with their carry-over'),
+  area: z
+    .string()
+    .optional()
+    .describe(
+      'corners of a group’s area, longitude,latitude in degrees with ; between: the stations inside are answered too',
+    )
+    .transform((text, context) => {
+      if (text === undefined) return null;
+      const read = areaFromText(text);
+      if ('area' in read) return read.area;
+      context.addIssue(read.problem);
+      return z.NEVER;
+    }),
+};

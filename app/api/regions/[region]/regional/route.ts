@@ -1,0 +1,40 @@
+import { longAnswer } from '@/app/api/_http/long-answer';
+import { basisOf, readParameters } from '@/app/api/_http/parameters';
+import { plainTableAnswer } from '@/app/api/_http/plain-table';
+import { provenanceOf, regionOf } from '@/app/api/_http/region';
+import { route } from '@/app/api/_http/route';
+import { regionalMetadata, regionalProduct } from '@/lib/export/regional-product';
+import { rankingOf } from '@/lib/jobs/ranking';
+import { chanceIsKept, regionalKey, regionalOf } from '@/lib/jobs/regional';
+import { regionalParameters } from './parameters';
+
+/** What the ranked stations say together: how many fall and rise beyond chance, and whether they share one trend. */
+export const GET = route<{ region: string }>(async (request, params) => {
+  const { format, wait, method, area } = readParameters(request, regionalParameters, { withBasis: true });
+  const region = await regionOf(params);
+  const basis = basisOf(request, region);
+  const { ranking, key: rankingKey } = await rankingOf(region, basis);
+  const question = { method, area };
+  const key = regionalKey(rankingKey, question);
+  const from = await provenanceOf(region, ranking.basis, ranking.warnings);
+  const file = `${region.slug}-regional.csv`;
+  return longAnswer(
+    {
+      kind: 'regional',
+      regionId: region.id,
+      key,
+      // another area is only counted anew
+      stations: chanceIsKept(rankingKey, method) ? 0 : ranking.counts.ranked,
+      wait: wait === 'true' || format !== 'json',
+      compute: (context) => regionalOf(region, basis, question, context),
+    },
+    (answers) =>
+      plainTableAnswer(request, {
+        key,
+        format,
+        file,
+        product: (as) => regionalProduct(as, answers, from),
+        metadata: () => regionalMetadata(from, file),
+      }),
+  );
+});

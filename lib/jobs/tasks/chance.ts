@@ -1,0 +1,17 @@
+import type { Basis } from '../../basis.ts';
+import { type ChanceSeries, chanceSeries, type TestedRow } from '../../region/chance-series.ts';
+import { type PermutedKendallTask, permutedKendall } from '../../statistics/permuted-kendall.ts';
+import type { TrendBits } from '../../statistics/trend-bits.ts';
+
+/** The ranked stations as chance is tried on them. */
+export function seriesForChance(task: {
+  rows: TestedRow[];
+  basis: Pick<Basis, 'alpha' | 'serialCorrection'>;
+}): ChanceSeries {
+  return chanceSeries(task.rows, task.basis);
+}
+
+/** Tries some stations' series under random orders of the years. */
+export function permuteYears(task: PermutedKendallTask): TrendBits {
+  return permutedKendall(task);
+}
