@@ -6,6 +6,7 @@ import * as curves from './commands/curves.ts';
 import * as exportCommand from './commands/export.ts';
 import * as importCommand from './commands/import.ts';
 import * as minima from './commands/minima.ts';
+import * as pair from './commands/pair.ts';
 import * as rank from './commands/rank.ts';
 import * as restore from './commands/restore.ts';
 import * as serve from './commands/serve.ts';
@@ -16,6 +17,7 @@ const COMMANDS: Record<string, Command> = {
   rank,
   minima,
   curves,
+  pair,
   export: exportCommand,
   backup,
   restore,

@@ -25,6 +25,32 @@ export function stationQuantities(stationId: number, path = databasePath()): Qua
   }));
 }
 
+/** The records of some quantities in a region, by station and quantity, those without a value left out. */
+export function recordsOfQuantities<Wanted extends Quantity>(
+  regionId: number,
+  quantities: readonly Wanted[],
+  path = databasePath(),
+): {
+  stationId: number;
+  code: string;
+  name: string;
+  quantity: Wanted;
+  unit: Unit;
+  firstDay: number;
+  lastDay: number;
+}[] {
+  const found = rows(
+    sharedConnection(path),
+    `SELECT s.id, s.code, s.name, r.quantity, r.unit, r.firstValueDay, r.lastValueDay
+     FROM Record r JOIN Station s ON s.id = r.stationId
+     WHERE s.regionId = ? AND r.firstValueDay IS NOT NULL AND r.quantity IN (${quantities.map(() => '?').join(', ')})
+     ORDER BY s.code, r.quantity`,
+  ).all([regionId, ...quantities]) as [number, string, string, Wanted, Unit, number, number][];
+  return found.map(([stationId, code, name, quantity, unit, firstDay, lastDay]) => ({
+    ...{ stationId, code, name, quantity, unit, firstDay, lastDay },
+  }));
+}
+
 /** The stations of a region whose records are derived with that of a given one. */
 export function derivedWith(regionId: number, code: string, path = databasePath()): { code: string; name: string }[] {
   const found = rows(

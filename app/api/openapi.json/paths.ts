@@ -10,6 +10,7 @@ import { ARCHIVE_PATHS } from './paths-archive';
 import { CHECK_PATHS } from './paths-checks';
 import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
+import { PAIR_PATHS } from './paths-pair';
 import { RECORD_PATHS } from './paths-records';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
@@ -93,6 +94,7 @@ export const PATHS = {
   ),
   ...CHECK_PATHS,
   ...DAY_PATHS,
+  ...PAIR_PATHS,
   ...RECORD_PATHS,
   ...STATION_PATHS,
   ...WINDOW_PATHS,
