@@ -1,6 +1,5 @@
-import { aimWords, CLAIM_WORDS, sharePercent, type SimulatedFigure } from '../../lib/region/simulated-figures.ts';
+import { aimWords, CLAIM_WORDS, type SimulatedFigure, sharePercent } from '../../lib/region/simulated-figures.ts';
 import { isAsMeant } from './figure.ts';
-
 
 /** The figures as a Markdown table. */
 export function figuresTable(figures: readonly SimulatedFigure[]): string {

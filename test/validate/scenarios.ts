@@ -1,7 +1,8 @@
 import { changePoints } from './change-points.ts';
 import { falseAlarms } from './false-alarms.ts';
 import type { Scenario } from './figure.ts';
+import { regional } from './regional.ts';
 import { slopes } from './slopes.ts';
 
 /** All that is simulated, in the order of the table. */
-export const SCENARIOS: readonly Scenario[] = [...falseAlarms, ...slopes, ...changePoints];
+export const SCENARIOS: readonly Scenario[] = [...falseAlarms, ...slopes, ...changePoints, ...regional];
