@@ -1,4 +1,4 @@
-import { parseIsoDate } from '../lib/calendar/day.ts';
+import { dayNumber, parseIsoDate } from '../lib/calendar/day.ts';
 import type { DerivedRecipe } from '../lib/series/station-history.ts';
 import { pumpedBeside, type SeedBeside, stageBeside, weatherBeside } from './beside.ts';
 import type { Catchment } from './catchment-flow.ts';
@@ -26,7 +26,7 @@ export const BARE: Furnishings = { stage: [], weather: [], faulty: null, works: 
 
 /** Furnishes the demo region, and says so in the notes of the stations concerned (changing `stations`). */
 export function furnish(sites: readonly Site[], traits: readonly Traits[], stations: SeedStation[]): Furnishings {
-  const find = (wanted: (traits: Traits) => boolean) => {
+  const find = (wanted: (traits: Traits, i: number) => boolean) => {
     const at = traits.findIndex(wanted);
     return at < 0 ? [] : [at];
   };
@@ -43,10 +43,22 @@ export function furnish(sites: readonly Site[], traits: readonly Traits[], stati
   const [pumpedAt] = traits
     .flatMap((each, i) => (each.abstraction ? [i] : []))
     .sort((a, b) => sites[a].cells - sites[b].cells);
+  // Where nothing but the weather and the land act: its lows follow the rain that is gauged beside it.
+  const [followsRain] = find(({ influence, firstDay, gapYears, cubicFeetYears, dryShare, spring }, i) => {
+    const undisturbed = influence === 'natural' && !spring && dryShare === null;
+    const headwater = sites.every(({ below }) => below !== i);
+    return (
+      undisturbed && headwater && gapYears === null && cubicFeetYears === null && firstDay <= dayNumber(1975, 1, 1)
+    );
+  });
   const works = pumpedAt === undefined ? null : { site: pumpedAt, code: `${stations[pumpedAt].code}P` };
   return {
     stage: [...new Set([0, ...find(({ damYear }) => damYear !== null), ...(rebuilt < 0 ? [] : [rebuilt])])],
-    weather: [...find(({ spring }) => spring), ...find(({ returnFlow }) => returnFlow !== null)],
+    weather: [
+      ...find(({ spring }) => spring),
+      ...find(({ returnFlow }) => returnFlow !== null),
+      ...(followsRain === undefined ? [] : [followsRain]),
+    ],
     faulty,
     works,
     extras: works === null ? [] : worksOf(stations[works.site], works.code),

@@ -85,6 +85,8 @@ export interface WeatherTrend {
   weather: PairTrend | null;
   /** Spearman's, of minima and weather */
   correlation: number | null;
+  /** the same for other numbers of days, over the years that have each: a choice by it knows nothing of any trend */
+  choices: { antecedentDays: number; correlation: number | null }[];
   sentence: string;
   warnings: string[];
   problem: string | null;

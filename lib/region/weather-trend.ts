@@ -10,6 +10,9 @@ import { weatherSentence, weatherWarnings } from './weather-words.ts';
 /** A curve through fewer points follows each of them. */
 export const FEWEST_FOR_CURVE = 10;
 
+/** Numbers of days that are offered. */
+const OFFERED_DAYS = [30, 90, 180, 270, 365];
+
 export type WeatherTerms = Pick<ResolvedBasis, 'days' | 'period' | 'serialCorrection' | 'alpha'>;
 
 export interface WeatherInput {
@@ -36,7 +39,7 @@ export interface WeatherInput {
  *  Source: Helsel et al. 2020, USGS TM 4-A3, chapter 12 (Mann–Kendall test on residuals from LOWESS). */
 export function weatherTrend(input: WeatherInput, terms: WeatherTerms, seed: string): WeatherTrend {
   const { station, quantity, from, antecedentDays } = input;
-  const rows = yearsWithWeather(input);
+  const rows = yearsWithWeather(input, antecedentDays);
   const empty: WeatherTrend = {
     ...{ station, quantity, from, antecedentDays },
     years: [],
@@ -44,6 +47,7 @@ export function weatherTrend(input: WeatherInput, terms: WeatherTerms, seed: str
     adjusted: null,
     weather: null,
     correlation: null,
+    choices: OFFERED_DAYS.map((days) => ({ antecedentDays: days, correlation: correlationOver(input, days) })),
     sentence: '',
     warnings: [],
     problem: null,
@@ -84,7 +88,7 @@ export function weatherTrend(input: WeatherInput, terms: WeatherTerms, seed: str
   };
 }
 
-function yearsWithWeather({ minima, weather, antecedentDays }: WeatherInput) {
+function yearsWithWeather({ minima, weather }: WeatherInput, antecedentDays: number) {
   const { years, minima: values, days } = minima;
   if (years.length !== values.length || years.length !== days.length) {
     throw new RangeError(
@@ -97,6 +101,16 @@ function yearsWithWeather({ minima, weather, antecedentDays }: WeatherInput) {
       weather: antecedentSum(weather, days[i], antecedentDays),
     }))
     .filter((row) => !Number.isNaN(row.weather));
+}
+
+function correlationOver(input: WeatherInput, antecedentDays: number): number | null {
+  const rows = yearsWithWeather(input, antecedentDays);
+  return orNull(
+    rankCorrelation(
+      rows.map(({ weather }) => weather),
+      rows.map(({ minimum }) => minimum),
+    ),
+  );
 }
 
 function problemOf(

@@ -55,6 +55,10 @@ describe('weatherTrend', () => {
     expect(trend.adjusted?.low).toBeLessThan(-0.06);
     expect(trend.adjusted?.high).toBeGreaterThan(-0.06);
     expect(trend.correlation).toBeGreaterThan(0.8);
+    // the rain before the hundred days is the same in all years
+    expect(trend.choices.map(({ antecedentDays }) => antecedentDays)).toEqual([30, 90, 180, 270, 365]);
+    for (const { correlation } of trend.choices.slice(0, 3))
+      expect(correlation).toBeCloseTo(trend.correlation ?? 0, 10);
     expect(trend.sentence).toMatch(
       /^Given the rainfall of the 100 days before, the 7-day minimum of A at Ford lost .* % of its mean per decade \(95 % interval −.*; p below 0\.001\), 1981–2020, 40 years\. As it is, it changed by −/,
     );
@@ -113,7 +117,7 @@ describe('weatherTrend', () => {
 
   test('false alarms stay near the nominal 5 % where the weather trends and the river does not react to more', () => {
     let alarms = 0;
-    const cases = 400;
+    const cases = 250;
     for (let seed = 1; seed <= cases; seed++) {
       const draw = normals(seed);
       const depths = Array.from({ length: YEARS }, (_, i) => Math.max(20, 260 - 2 * i + 60 * draw()));
@@ -122,7 +126,7 @@ describe('weatherTrend', () => {
       if ((adjusted?.p ?? 1) < 0.05) alarms += 1;
     }
     // 5 % ± 3 standard errors above; below it may fall, for the curve takes part of chance trends with it
-    expect(alarms / cases).toBeLessThan(0.083);
+    expect(alarms / cases).toBeLessThan(0.09);
     expect(alarms / cases).toBeGreaterThan(0.005);
   });
 });

@@ -1,5 +1,8 @@
 import { expect, test } from 'vitest';
 import { checkRecord } from '../../../lib/checks/check-record.ts';
+import { annualMinima } from '../../../lib/lowflow/annual-minima.ts';
+import { usedYears } from '../../../lib/region/used-years.ts';
+import { weatherTrend } from '../../../lib/region/weather-trend.ts';
 import { toShownUnit } from '../../../lib/series/quantities.ts';
 import { DEMO_SEED, generateRegion, type SeedRecord } from '../../../seed/generate.ts';
 
@@ -68,13 +71,30 @@ test('stage at three stations rises and falls with the flow, weather is kept at 
     }
   }
   const codesOf = (quantity: string) => beside.filter((each) => each.quantity === quantity).map(({ code }) => code);
-  expect(codesOf('rainfall')).toHaveLength(2);
+  expect(codesOf('rainfall')).toHaveLength(3);
   expect(codesOf('potential-evaporation')).toEqual(codesOf('rainfall'));
   for (const { quantity, values } of beside.filter((each) => each.quantity !== 'flow' && each.quantity !== 'stage')) {
     const yearly = (365.25 * values.reduce((sum, value) => sum + (value || 0), 0)) / values.length;
     expect([quantity, yearly > 400 && yearly < 2500]).toEqual([quantity, true]);
     expect(values.every((value) => Number.isNaN(value) || value >= 0)).toBe(true);
   }
+});
+
+test('the lows of a natural headwater follow the rain gauged there', () => {
+  const gauged = beside.filter(({ quantity }) => quantity === 'rainfall').map(({ code }) => code);
+  const natural = region.stations.filter(({ code, influence }) => gauged.includes(code) && influence === 'natural');
+  expect(natural).toHaveLength(1);
+  const [{ code, name }] = natural;
+  const flow = records.get(code)!;
+  const options = { yearStart: 2, season: null, days: 7, maxMissingDays: 18, exclude: [] };
+  const minima = usedYears(annualMinima({ ...flow, flags: new Uint8Array(flow.values.length) }, options), null);
+  const weather = beside.find((each) => each.code === code && each.quantity === 'rainfall')!;
+  const site = { code, name };
+  const terms = { days: 7, period: null, serialCorrection: 'ar1', alpha: 0.1 } as const;
+  const input = { station: site, minima, quantity: 'rainfall', from: site, weather, antecedentDays: 270 } as const;
+  const { correlation, years } = weatherTrend(input, terms, '');
+  expect(years.length).toBeGreaterThan(40);
+  expect(correlation).toBeGreaterThan(0.7);
 });
 
 test('what the water works pumps, added to the flow at its gauge, is no less than the flow', () => {
