@@ -70,8 +70,8 @@ export function MapScreen({ region, rows, layers, rankBy, index, units, span }: 
   // the lists follow in slices of a few milliseconds: the map never waits for them
   const showInView = useCallback((codes: Set<string>) => startTransition(() => setInView(codes)), []);
 
-  const ranked = useMemo(() => rows.filter(({ rank }) => rank !== null).length, [rows]);
-  const certainty = useCertainty(region.slug, ranked);
+  const tested = useMemo(() => rows.filter(({ rank, drying }) => rank !== null || drying).length, [rows]);
+  const certainty = useCertainty(region.slug, tested);
   const movement = useMovement(region.slug).value;
   const { k, fill } = state;
   const { view } = certainty;
@@ -113,6 +113,7 @@ export function MapScreen({ region, rows, layers, rankBy, index, units, span }: 
           ground={ground}
           tiles={tiles}
           units={units}
+          index={index}
           hover={hover}
           selected={state.station}
           onSelect={select}
@@ -138,6 +139,7 @@ export function MapScreen({ region, rows, layers, rankBy, index, units, span }: 
           isKnown={view !== null}
           onFill={setFill}
           k={k}
+          index={index}
         />
       )}
     </section>

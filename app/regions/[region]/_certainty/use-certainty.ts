@@ -12,10 +12,10 @@ export interface CertaintyAnswer extends Omit<LongResult<Certainty>, 'value' | '
 }
 
 /** How sure the places of a region's ranking are, on the terms in the address. Asked for when the page is alive.
- *  @param ranked  stations that are ranked; with none there is nothing to ask */
-export function useCertainty(slug: string, ranked: number): CertaintyAnswer {
+ *  @param tested  stations that are ranked or drying; with none there is nothing to ask */
+export function useCertainty(slug: string, tested: number): CertaintyAnswer {
   const query = useSearchParams().toString();
-  const address = ranked === 0 ? null : apiHref(slug, 'certainty', query);
+  const address = tested === 0 ? null : apiHref(slug, 'certainty', query);
   const {
     value,
     valueOf: answered,

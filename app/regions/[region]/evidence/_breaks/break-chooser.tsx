@@ -10,10 +10,16 @@ interface Props {
   span: readonly [number, number];
   labelOf(year: number): string;
   onChange(years: number[]): void;
+  /** what holds while none is chosen, and the button back to it */
+  none?: string;
+  back?: string;
 }
 
+const NONE = 'No break is chosen: each station is parted at its own dated changes (a dam, an abstraction, a new weir).';
+const BACK = 'Back to each station’s own changes';
+
 /** Which breaks part the years: some that a person names, or each station's own dated changes. */
-export function BreakChooser({ years, span, labelOf, onChange }: Props) {
+export function BreakChooser({ years, span, labelOf, onChange, none = NONE, back = BACK }: Props) {
   const [text, setText] = useState('');
   const full = years.length >= MOST_BREAKS;
   const add = (event: FormEvent) => {
@@ -45,9 +51,7 @@ export function BreakChooser({ years, span, labelOf, onChange }: Props) {
         </button>
       </form>
       {years.length === 0 ? (
-        <p className={styles.hint}>
-          No break is chosen: each station is parted at its own dated changes (a dam, an abstraction, a new weir).
-        </p>
+        <p className={styles.hint}>{none}</p>
       ) : (
         <ul className={styles.chosen} aria-label="Chosen breaks">
           {years.map((year) => (
@@ -65,7 +69,7 @@ export function BreakChooser({ years, span, labelOf, onChange }: Props) {
           ))}
           <li>
             <button type="button" className={ui.plain} onClick={() => onChange([])}>
-              Back to each station’s own changes
+              {back}
             </button>
           </li>
         </ul>

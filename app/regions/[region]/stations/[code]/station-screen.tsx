@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Cautions } from '@/app/components/cautions';
 import { ChangeLegend } from '@/app/components/change-marks/change-marks';
 import { markedChanges } from '@/app/components/change-marks/marked-changes';
-import { count, flowIn, UNIT_WORDS } from '@/app/components/format';
+import { count, flowIn, percent, UNIT_WORDS } from '@/app/components/format';
 import { apiHref, deriveHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
@@ -11,6 +11,13 @@ import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import type { StationDetail } from '@/lib/jobs/types';
 import type { RankingRow } from '@/lib/region/ranking-types';
 import type { RegionRow } from '@/lib/store/regions';
+import { CertaintyProvider } from '../../_certainty/certainty-context';
+import { breaksData } from './_breaks/breaks-data';
+import { BreaksSection } from './_breaks/breaks-section';
+import { DetectableNote } from './_sureness/detectable-note';
+import { PlaceNote } from './_sureness/place-note';
+import { SurenessFigures } from './_sureness/sureness-figures';
+import { StartEndSection } from './_windows/start-end-section';
 import { AlongRiver } from './along-river';
 import { BesideFigures } from './beside-figures';
 import { CoverageStrip } from './coverage-strip';
@@ -52,134 +59,153 @@ export function StationScreen({ region, detail, background, rows, query }: Props
   const table = (name: string) =>
     apiHref(region.slug, `stations/${encodeURIComponent(station.code)}/${name}`, query, 'csv');
 
+  const terms = { index: basis.index, drying: row.drying, units: basis.units };
+  const tested = rows.filter((other) => other.rank !== null || other.drying).length;
+
   return (
-    <article className={styles.page}>
-      <header className={styles.head}>
-        <nav className={styles.steps} aria-label="Ways from here">
-          <Link href={regionHref(region.slug, 'map', mapQuery)} prefetch={false}>
-            ← Map and ranking
-          </Link>
-          <span className={styles.ranks}>
-            <RankingSteps
-              previous={
-                place.previous && { ...place.previous, href: stationHref(region.slug, place.previous.code, query) }
-              }
-              next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
-            />
-            <Link href={stationEditHref(region.slug, station.code, query)} prefetch={false}>
-              Edit
+    <CertaintyProvider slug={region.slug} tested={tested}>
+      <article className={styles.page}>
+        <header className={styles.head}>
+          <nav className={styles.steps} aria-label="Ways from here">
+            <Link href={regionHref(region.slug, 'map', mapQuery)} prefetch={false}>
+              ← Map and ranking
             </Link>
-            <Link href={deriveHref(region.slug, station.code, query)} prefetch={false}>
-              Derive from it
-            </Link>
-            <PrintButton />
-          </span>
-        </nav>
-        <div className={styles.title}>
-          <NeedleMark needle={needle} size={56} />
-          <div>
-            <h1>{station.name}</h1>
-            <p className={styles.place}>
-              {row.rank === null ? needleWords(needle) : `ranked ${row.rank} of ${detail.ranked}`}
-              {row.rankLow !== null &&
-                row.rankHigh !== null &&
-                `, place ${row.rankLow}–${row.rankHigh} with 90 % certainty`}
-              {row.rank !== null && ` · ${needleWords(needle)}`}
-            </p>
-          </div>
-        </div>
-        <p className={styles.verdict}>{detail.verdict}</p>
-        {row.note && <p className={styles.note}>{row.note}</p>}
-        <DerivedNote slug={region.slug} background={background} query={query} />
-      </header>
-
-      <div className={styles.facts}>
-        <StationFactList
-          station={station}
-          namedFlows={background.station.namedFlows}
-          coverage={coverage}
-          units={basis.units}
-          labelOf={labelOf}
-        />
-        {background.station.notes && <p className={styles.notes}>{background.station.notes}</p>}
-      </div>
-
-      <section className={styles.figures} aria-labelledby="minima-title">
-        <div className={styles.sectionHead}>
-          <h2 id="minima-title">Annual minima</h2>
-          <a className={ui.button} href={table('minima')} download>
-            Minima CSV
-          </a>
-        </div>
-        {points.length === 0 ? (
-          <p className={styles.nothing}>The record has no low-flow year with values.</p>
-        ) : (
-          <>
-            <MinimaFigure
-              points={points}
-              slope={row.trendOf === 'zero-days' ? null : detail.line}
-              trend={row.trend}
-              factor={flowIn(1, basis.units) ?? 1}
-              unit={unit}
-              days={basis.days}
-              changes={changes}
-              levels={levels}
-              yearStart={basis.yearStart}
-              span={span}
-              summary={`Annual ${basis.days}-day minima of ${station.name}, ${count(points.length, 'year')}.`}
-            />
-            <h3 className={styles.coverageTitle}>Days with a value</h3>
-            <CoverageStrip
-              slug={region.slug}
-              code={station.code}
-              years={coverage.map((year) => ({ ...year, label: labelOf(year.year) }))}
-              changes={changes}
-              yearStart={basis.yearStart}
-              span={span}
-              summary={`Days with a value in each year of the record of ${station.name}.`}
-            />
-            <ChangeLegend changes={changes} />
-            {levels.length > 0 && (
-              <p className={styles.caption}>
-                Named flows are screening values: permits and water rights need the authority’s own method, and local
-                codes come first.
+            <span className={styles.ranks}>
+              <RankingSteps
+                previous={
+                  place.previous && { ...place.previous, href: stationHref(region.slug, place.previous.code, query) }
+                }
+                next={place.next && { ...place.next, href: stationHref(region.slug, place.next.code, query) }}
+              />
+              <Link href={stationEditHref(region.slug, station.code, query)} prefetch={false}>
+                Edit
+              </Link>
+              <Link href={deriveHref(region.slug, station.code, query)} prefetch={false}>
+                Derive from it
+              </Link>
+              <PrintButton />
+            </span>
+          </nav>
+          <div className={styles.title}>
+            <NeedleMark needle={needle} size={56} />
+            <div>
+              <h1>{station.name}</h1>
+              <p className={styles.place}>
+                {row.rank === null ? needleWords(needle) : `ranked ${row.rank} of ${detail.ranked}`}
+                <PlaceNote code={station.code} />
+                {row.rank !== null && ` · ${needleWords(needle)}`}
               </p>
-            )}
-            <MinimaTable points={points} units={basis.units} days={basis.days} />
-          </>
-        )}
-      </section>
+            </div>
+          </div>
+          <p className={styles.verdict}>{detail.verdict}</p>
+          {row.trend === 'none' && <DetectableNote code={station.code} terms={terms} />}
+          {row.note && <p className={styles.note}>{row.note}</p>}
+          <DerivedNote slug={region.slug} background={background} query={query} />
+        </header>
 
-      <aside className={styles.side}>
-        <TrendFigures row={row} units={basis.units} labelOf={labelOf} />
-        <AlongRiver slug={region.slug} background={background} query={query} />
-        <Neighbours slug={region.slug} station={station} near={detail.neighbours} rows={rows} query={query} />
-      </aside>
-
-      <section className={styles.curve} aria-labelledby="curve-title">
-        <div className={styles.sectionHead}>
-          <h2 id="curve-title">Duration curve against the region</h2>
-          {detail.curve && (
-            <a className={ui.button} href={table('curve')} download>
-              Curve CSV
-            </a>
-          )}
+        <div className={styles.facts}>
+          <StationFactList
+            station={station}
+            namedFlows={background.station.namedFlows}
+            coverage={coverage}
+            units={basis.units}
+            labelOf={labelOf}
+          />
+          {background.station.notes && <p className={styles.notes}>{background.station.notes}</p>}
         </div>
-        <StationCurve slug={region.slug} detail={detail} levels={levels} query={query} />
-      </section>
 
-      <BesideFigures
-        slug={region.slug}
-        code={station.code}
-        beside={background.beside}
-        changes={changes}
-        units={basis.units}
-      />
+        <section className={styles.figures} aria-labelledby="minima-title">
+          <div className={styles.sectionHead}>
+            <h2 id="minima-title">Annual minima</h2>
+            <a className={ui.button} href={table('minima')} download>
+              Minima CSV
+            </a>
+          </div>
+          {points.length === 0 ? (
+            <p className={styles.nothing}>The record has no low-flow year with values.</p>
+          ) : (
+            <>
+              <MinimaFigure
+                points={points}
+                slope={row.trendOf === 'zero-days' ? null : detail.line}
+                trend={row.trend}
+                factor={flowIn(1, basis.units) ?? 1}
+                unit={unit}
+                days={basis.days}
+                changes={changes}
+                levels={levels}
+                yearStart={basis.yearStart}
+                span={span}
+                summary={`Annual ${basis.days}-day minima of ${station.name}, ${count(points.length, 'year')}.`}
+              />
+              <h3 className={styles.coverageTitle}>Days with a value</h3>
+              <CoverageStrip
+                slug={region.slug}
+                code={station.code}
+                years={coverage.map((year) => ({ ...year, label: labelOf(year.year) }))}
+                changes={changes}
+                yearStart={basis.yearStart}
+                span={span}
+                summary={`Days with a value in each year of the record of ${station.name}.`}
+              />
+              <ChangeLegend changes={changes} />
+              {levels.length > 0 && (
+                <p className={styles.caption}>
+                  Named flows are screening values: permits and water rights need the authority’s own method, and local
+                  codes come first.
+                </p>
+              )}
+              <MinimaTable points={points} units={basis.units} days={basis.days} />
+            </>
+          )}
+        </section>
 
-      <footer className={styles.foot}>
-        <Cautions />
-      </footer>
-    </article>
+        <aside className={styles.side}>
+          <TrendFigures row={row} units={basis.units} labelOf={labelOf} />
+          {row.trend !== null && (
+            <SurenessFigures code={station.code} rank={row.rank} steadiness={percent(row.steadiness)} terms={terms} />
+          )}
+          <AlongRiver slug={region.slug} background={background} query={query} />
+          <Neighbours slug={region.slug} station={station} near={detail.neighbours} rows={rows} query={query} />
+        </aside>
+
+        <section className={styles.curve} aria-labelledby="curve-title">
+          <div className={styles.sectionHead}>
+            <h2 id="curve-title">Duration curve against the region</h2>
+            {detail.curve && (
+              <a className={ui.button} href={table('curve')} download>
+                Curve CSV
+              </a>
+            )}
+          </div>
+          <StationCurve slug={region.slug} detail={detail} levels={levels} query={query} />
+        </section>
+
+        <StartEndSection slug={region.slug} code={station.code} name={station.name} alpha={basis.alpha} />
+
+        {row.trend !== null && (
+          <BreaksSection
+            slug={region.slug}
+            code={station.code}
+            data={breaksData(row, basis, span)}
+            yearStart={basis.yearStart}
+            alpha={basis.alpha}
+          />
+        )}
+
+        <BesideFigures
+          slug={region.slug}
+          code={station.code}
+          beside={background.beside}
+          changes={changes}
+          units={basis.units}
+        />
+
+        <footer className={styles.foot}>
+          <Cautions />
+        </footer>
+      </article>
+    </CertaintyProvider>
   );
 }
 

@@ -1,0 +1,110 @@
+'use client';
+import { scaleLinear } from 'd3-scale';
+import { tickText } from '@/app/components/duration-figure/figure-text';
+import { useWidth } from '@/app/components/use-width';
+import { yearTicks } from '@/app/components/year-ticks';
+import type { StationBreaks } from '@/lib/region/break-types';
+import { PLOT } from '../plot-box';
+import styles from './breaks-figure.module.css';
+
+export interface BreaksData {
+  years: readonly number[];
+  /** what is compared, one a year, in its own unit */
+  values: readonly number[];
+  /** from that unit to the one shown */
+  factor: number;
+  unit: string;
+  /** first and last year of the page's time axis */
+  span: [number, number];
+}
+
+interface Props {
+  data: BreaksData;
+  breaks: Pick<StationBreaks, 'segments' | 'steps' | 'suggested'>;
+  labelOf(year: number): string;
+}
+
+const HEIGHT = 220;
+
+/** Annual figures with the median of each part as a level, the breaks between them, and the one that the data suggest.
+ *  Decoration beside the table, which says the same. */
+export function BreaksFigure({ data, breaks, labelOf }: Props) {
+  const { years, values, factor, unit, span } = data;
+  const [frame, width] = useWidth<HTMLDivElement>(960);
+  if (years.length === 0) return null;
+  const right = Math.max(PLOT.left + 1, width - PLOT.right);
+  const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
+  const shown = values.map((value) => value * factor);
+  const low = Math.min(0, ...shown);
+  const y = scaleLinear([low, Math.max(low + 1e-9, ...shown)], [HEIGHT - PLOT.bottom, PLOT.top]).nice(5);
+  const { segments, steps, suggested } = breaks;
+  const bottom = HEIGHT - PLOT.bottom;
+  return (
+    <div ref={frame} className={styles.frame}>
+      <svg
+        width={width}
+        height={HEIGHT}
+        role="img"
+        aria-label={`Levels of ${segments.length || 1} part${segments.length > 1 ? 's' : ''} of the years${unit && `, ${unit}`}. The table below says the same.`}
+      >
+        {y.ticks(4).map((value) => (
+          <g key={value} className={value === 0 ? styles.zero : styles.grid}>
+            <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
+            <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
+              {tickText(value)}
+            </text>
+          </g>
+        ))}
+        {yearTicks(span[0], span[1], right - PLOT.left).map((year) => (
+          <text key={year} className={styles.year} x={x(year)} y={bottom + 19} textAnchor="middle">
+            {year}
+          </text>
+        ))}
+        {shown.map((value, i) => (
+          <circle key={years[i]} className={styles.value} cx={x(years[i])} cy={y(value)} r={2.6} />
+        ))}
+        {suggested && (
+          <g className={styles.suggested}>
+            <line x1={x(suggested.lastBefore + 0.5)} x2={x(suggested.lastBefore + 0.5)} y1={PLOT.top} y2={bottom} />
+            <text {...besideLine(x(suggested.lastBefore + 0.5), right)} y={bottom - 6}>
+              suggested, not tested
+            </text>
+          </g>
+        )}
+        {steps.map(({ break: { year } }) => (
+          <g key={year} className={styles.break}>
+            <line x1={x(year - 0.5)} x2={x(year - 0.5)} y1={PLOT.top} y2={bottom} />
+            <text {...besideLine(x(year - 0.5), right)} y={PLOT.top + 9}>
+              from {labelOf(year)}
+            </text>
+          </g>
+        ))}
+        {segments.map(({ first, last, median }) =>
+          median === null ? null : (
+            <line
+              key={first}
+              className={styles.level}
+              x1={x(first - 0.5)}
+              x2={x(last + 0.5)}
+              y1={y(median * factor)}
+              y2={y(median * factor)}
+            />
+          ),
+        )}
+      </svg>
+      <p className={styles.key}>
+        <span>
+          <svg width="18" height="8" aria-hidden="true">
+            <line className={styles.level} x1="0" x2="18" y1="4" y2="4" />
+          </svg>{' '}
+          median of the years between breaks
+        </span>
+      </p>
+    </div>
+  );
+}
+
+/** Words stand to the right of their line, or to its left where the figure ends. */
+function besideLine(x: number, right: number): { x: number; textAnchor: 'start' | 'end' } {
+  return x + 130 > right ? { x: x - 5, textAnchor: 'end' } : { x: x + 5, textAnchor: 'start' };
+}
