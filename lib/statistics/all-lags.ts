@@ -18,7 +18,7 @@ export interface AllLags {
  *  years apart, × n/(pairs + k), which is 1 in a full series. Negative correlations count as well, so that f may be below
  *  1; where it is not above 0 the method has no answer, and the factor is 1.
  *  @returns factor 1 and no lags for fewer than 4 values or none that differ about the trend
- *  @throws RangeError when lengths differ or years do not rise
+ *  @throws RangeError when lengths differ, years do not rise, or a number is not finite
  *  Source: Hamed & Rao 1998, A modified Mann-Kendall trend test for autocorrelated data, J. Hydrol. 204:182–196, as
  *  published. It gives too many false alarms, which `npm run validate` counts. */
 export function allLagsVarianceFactor(series: DatedValues): AllLags {

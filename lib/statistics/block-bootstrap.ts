@@ -16,7 +16,7 @@ export const BLOCK_REPLICATES = 2000;
  *  @param random      a stream of this series' own
  *  @param replicates  at least 2
  *  @returns           1 for fewer than 5 values, or none that differ about the trend
- *  @throws RangeError when lengths differ, years do not rise, or `replicates` is too small
+ *  @throws RangeError when lengths differ, years do not rise, a number is not finite, or `replicates` is too small
  *  Source: Künsch 1989, Ann. Stat. 17:1217–1241 (moving blocks, length of order n^{1/3}); for this test Önöz & Bayazit
  *  2012, Hydrol. Process. 26:3552–3560. */
 export function blockBootstrapFactor(

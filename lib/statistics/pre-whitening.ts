@@ -11,7 +11,7 @@ const LARGEST_LAG1 = 0.95;
  *  r = (Σ over pairs of consecutive years d_t·d_{t+1}/pairs)/(Σ d²/n), d centred; with N = pairs + 1 (the number of values
  *  of a full series) it is significant at 10 % outside (−1 ∓ 1.645·√(N − 2))/(N − 1). Cut to ±0.95.
  *  @returns NaN when there is none: inside the limits, fewer than 4 pairs, or no spread about the trend
- *  @throws RangeError when lengths differ or years do not rise
+ *  @throws RangeError when lengths differ, years do not rise, or a number is not finite
  *  Source: Yue, Pilon, Phinney & Cavadias 2002, Hydrol. Process. 16:1807–1829; limits of Anderson 1942, Ann. Math. Stat.
  *  13:1–13. */
 export function significantLag1(series: DatedValues): number {
@@ -40,7 +40,7 @@ export function significantLag1(series: DatedValues): number {
  *  y_t = (d_t − r1·d_{t−1}) + slope·t, rounded to 9 decimals, for every year whose year before exists: the first value of
  *  the series and the first after each gap are lost. The level of y has no meaning.
  *  @param r1  as from `significantLag1`, above −1 and below 1
- *  @throws RangeError when lengths differ, years do not rise or `r1` is outside its range
+ *  @throws RangeError when lengths differ, years do not rise, a number is not finite or `r1` is outside its range
  *  Source: Yue et al. 2002 (as above). It does not cure false alarms, which `npm run validate` counts. */
 export function preWhitened(series: DatedValues, r1: number): { years: number[]; values: number[] } {
   if (!(r1 > -1 && r1 < 1)) throw new RangeError(`preWhitened: r1 must lie between −1 and 1, got ${r1}`);

@@ -11,7 +11,7 @@ const LARGEST_LAG1 = 0.95;
  *  r = Σ over pairs of consecutive years (R_t − R̄)(R_{t+1} − R̄) × n/(pairs + 1), over Σ (R − R̄)²; then
  *  (n·r + 1)/(n − 4), so a result may leave −1..1.
  *  @returns NaN when there is no answer: fewer than 5 values, no two consecutive years, or no spread about the trend
- *  @throws RangeError when lengths differ or years do not rise
+ *  @throws RangeError when lengths differ, years do not rise, or a number is not finite
  *  Source: Salas et al. 1980, Applied Modeling of Hydrologic Time Series (bias); ranks as in Hamed & Rao 1998,
  *  J. Hydrol. 204:182–196. */
 export function lag1OfRanks(series: DatedValues): number {
