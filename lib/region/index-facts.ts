@@ -63,6 +63,19 @@ export function percentOfMean(amount: number | null, index: AnnualIndexName, mea
   return (100 * amount) / meanValue;
 }
 
+const LITRES_PER_M3 = 1000;
+/** m³ over km² are a thousandth of a millimetre each. */
+const MM_PER_M3_KM2 = 1e-3;
+
+/** An amount per unit of drainage area: L/s/km² of flows, mm of volumes, both in m³ before; of what has no part in an area
+ *  the amount itself. Null without an area above 0 where one is needed. */
+export function perArea(amount: number | null, index: AnnualIndexName, areaKm2: number | null): number | null {
+  const { isFlow, unit } = INDEX_FACTS[index];
+  if (!isFlow && unit !== 'm³') return amount;
+  if (amount === null || areaKm2 === null || !(areaKm2 > 0)) return null;
+  return isFlow ? (amount * LITRES_PER_M3) / areaKm2 : (amount / areaKm2) * MM_PER_M3_KM2;
+}
+
 /** What a ranked or drying station was tested on: its annual figures, turned so that falling is drier. */
 export function testedSeries({ years, values, trendOf }: Pick<RankingRow, 'years' | 'values' | 'trendOf'>): {
   years: number[];

@@ -9,28 +9,46 @@ export interface IndexWords {
   /** what a falling and a rising trend are called. Example: "earlier" for dates */
   falling: string;
   rising: string;
+  /** the same in a narrow column */
+  shortly: { falling: string; rising: string };
+  /** heading over their figures. Example: "Annual minima" */
+  heading: string;
   /** how a station without any is told; empty where that cannot be */
   none: string;
 }
 
+const FALLS = { falling: 'falling', rising: 'rising', shortly: { falling: 'falling', rising: 'rising' }, none: '' };
+
 export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
-  minimum: { many: 'minima', mean: 'mean minimum', falling: 'falling', rising: 'rising', none: '' },
-  q95: { many: 'annual Q95', mean: 'mean annual Q95', falling: 'falling', rising: 'rising', none: '' },
-  'mean-flow': { many: 'annual mean flows', mean: 'mean flow', falling: 'falling', rising: 'rising', none: '' },
+  minimum: { ...FALLS, many: 'minima', mean: 'mean minimum', heading: 'Annual minima' },
+  q95: { ...FALLS, many: 'annual Q95', mean: 'mean annual Q95', heading: 'Annual Q95' },
+  'mean-flow': { ...FALLS, many: 'annual mean flows', mean: 'mean flow', heading: 'Annual mean flows' },
   'zero-flow-days': {
     many: 'counts of zero-flow days',
     mean: 'mean number of zero-flow days',
     falling: 'drying for longer',
     rising: 'drying for shorter',
+    shortly: { falling: 'longer dry', rising: 'shorter dry' },
+    heading: 'Zero-flow days',
     none: 'no zero-flow day',
   },
-  bfi: { many: 'baseflow indices', mean: 'mean baseflow index', falling: 'falling', rising: 'rising', none: '' },
-  'minimum-date': { many: 'dates', mean: 'mean date', falling: 'earlier', rising: 'later', none: '' },
+  bfi: { ...FALLS, many: 'baseflow indices', mean: 'mean baseflow index', heading: 'Baseflow indices' },
+  'minimum-date': {
+    many: 'dates',
+    mean: 'mean date',
+    falling: 'earlier',
+    rising: 'later',
+    shortly: { falling: 'earlier', rising: 'later' },
+    heading: 'Dates of the minimum',
+    none: '',
+  },
   deficit: {
     many: 'deficit volumes',
     mean: 'mean deficit volume',
     falling: 'larger deficits',
     rising: 'smaller deficits',
+    shortly: { falling: 'larger', rising: 'smaller' },
+    heading: 'Deficit volumes',
     none: 'no day below its Q90',
   },
 };

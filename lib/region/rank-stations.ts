@@ -2,7 +2,7 @@ import { type Basis, basisText, type ResolvedBasis } from '../basis.ts';
 import { checkStartMonth } from '../calendar/low-flow-year.ts';
 import { commonPeriod } from './common-period.ts';
 import { type Standing, standingOf } from './eligibility.ts';
-import { INDEX_FACTS, isOfMinus, percentOfMean, testedSeries } from './index-facts.ts';
+import { INDEX_FACTS, isOfMinus, perArea, percentOfMean, testedSeries } from './index-facts.ts';
 import { byCode, placesOf } from './places.ts';
 import { rankingFigure } from './ranking-figure.ts';
 import type { Ranking, RankingRow, StationFacts, StationMinima, Trend } from './ranking-types.ts';
@@ -13,7 +13,6 @@ import { type TrendFigures, trendFamily } from './trend-family.ts';
 import { judgedYears, type UsedYears, usedYears } from './used-years.ts';
 
 const YEARS_PER_DECADE = 10;
-const LITRES = 1000;
 
 /** A station on its way through the ranking. */
 interface Entry {
@@ -88,7 +87,7 @@ function entryOf({ station, minima, figures }: StationMinima, basis: ResolvedBas
     firstYear: n ? used.years[0] : null,
     lastYear: n ? used.years[n - 1] : null,
     meanMinimum,
-    meanMinimumSpecific: perArea(meanMinimum, station.areaKm2),
+    meanMinimumSpecific: perArea(meanMinimum, 'minimum', station.areaKm2),
     slopePerDecade: null,
     slopeLow: null,
     slopeHigh: null,
@@ -136,7 +135,7 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
       row.slopePerDecade = row.valueSlope;
       row.slopeLow = row.valueSlopeLow;
       row.slopeHigh = row.valueSlopeHigh;
-      row.specificPerDecade = perArea(row.slopePerDecade, row.areaKm2);
+      row.specificPerDecade = perArea(row.slopePerDecade, basis.index, row.areaKm2);
     }
   });
   const { order, place } = placesOf(
@@ -205,11 +204,6 @@ function meanOf(values: readonly number[]): number | null {
 
 /** Names random draws together with a series' own values, so that what shaped these need not be named again. */
 const seedOf = (basis: ResolvedBasis): string => basisText(basis, ['index', 'serialCorrection']);
-
-/** m³/s over the drainage area, as L/s/km²; null without either. */
-function perArea(flowM3s: number | null, areaKm2: number | null): number | null {
-  return flowM3s === null || areaKm2 === null || !(areaKm2 > 0) ? null : (flowM3s * LITRES) / areaKm2;
-}
 
 /** NaN is null in rows, and −0 is 0. */
 const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value + 0);

@@ -42,7 +42,7 @@ export default async function MapPage({ params, searchParams }: PageProps) {
             <BasisSentence resolved={ranking.basis} base={region.basis}>
               {problem && <ErrorNote title="The region’s own terms are shown">{problem}</ErrorNote>}
               <p className={styles.answer}>
-                <strong>{headline(rows, ranking.basis.alpha)}</strong> {beside}
+                <strong>{headline(rows, ranking.basis.alpha, ranking.basis.index)}</strong> {beside}
               </p>
               {ranking.warnings.map((warning) => (
                 <WarningNote key={warning}>{warning}</WarningNote>

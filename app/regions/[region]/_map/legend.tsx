@@ -1,8 +1,10 @@
 'use client';
 import { type ReactNode, useState } from 'react';
 import { fixed, percent } from '@/app/components/format';
-import { type Needle, needleOf, PERCENT_AT_45_DEGREES } from '@/app/components/needle';
+import { DAYS_AT_45_DEGREES, type Needle, needleOf, needleWords, PERCENT_AT_45_DEGREES } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
+import type { AnnualIndexName } from '@/lib/basis';
+import { INDEX_FACTS } from '@/lib/region/index-facts';
 import { steepestWords } from '../_certainty/place-words.ts';
 import type { MapRow } from '../map-row.ts';
 import type { Fill } from '../map-state.ts';
@@ -14,12 +16,12 @@ interface Entry {
   needle: Needle;
   holds: (needle: Needle) => boolean;
 }
-const RANKED: Entry[] = [
-  entry('falling, significant', { kind: 'ranked', side: 'falling', significant: true, angle: TILT }),
-  entry('falling, may be chance', { kind: 'ranked', side: 'falling', significant: false, angle: TILT }),
-  entry('level', { kind: 'ranked', side: 'level', significant: false, angle: 0 }),
-  entry('rising, may be chance', { kind: 'ranked', side: 'rising', significant: false, angle: -TILT }),
-  entry('rising, significant', { kind: 'ranked', side: 'rising', significant: true, angle: -TILT }),
+const RANKED: Needle[] = [
+  { kind: 'ranked', side: 'falling', significant: true, angle: TILT },
+  { kind: 'ranked', side: 'falling', significant: false, angle: TILT },
+  { kind: 'ranked', side: 'level', significant: false, angle: 0 },
+  { kind: 'ranked', side: 'rising', significant: false, angle: -TILT },
+  { kind: 'ranked', side: 'rising', significant: true, angle: -TILT },
 ];
 const OTHERS: Entry[] = [
   {
@@ -35,10 +37,11 @@ const OTHERS: Entry[] = [
 ];
 const SHARES = [0, 0.25, 0.5, 0.75, 1];
 
-function entry(words: string, needle: Needle): Entry {
+function entry(needle: Needle, index: AnnualIndexName): Entry {
   const holds = (other: Needle) =>
     other.kind === needle.kind && other.side === needle.side && other.significant === needle.significant;
-  return { words, needle, holds };
+  // a level mark is no trend, significant or not
+  return { words: needle.side === 'level' ? 'level' : needleWords(needle, index), needle, holds };
 }
 
 interface LegendProps {
@@ -50,15 +53,17 @@ interface LegendProps {
   onFill: (fill: Fill) => void;
   /** of the steepest declines */
   k: number;
+  /** what is compared */
+  index: AnnualIndexName;
 }
 
 /** What the marks say, with how many there are of each; those that do not occur are left out. What fills the discs is
  *  chosen here. */
-export function Legend({ rows, startOpen, fill, isKnown, onFill, k }: LegendProps) {
+export function Legend({ rows, startOpen, fill, isKnown, onFill, k, index }: LegendProps) {
   const [open, setOpen] = useState(startOpen);
   const needles = rows.map(needleOf);
   const shared = fill !== 'significance' && isKnown;
-  const entries = shared ? OTHERS.map(emptied) : [...RANKED, ...OTHERS];
+  const entries = shared ? OTHERS.map(emptied) : [...RANKED.map((needle) => entry(needle, index)), ...OTHERS];
   return (
     <div className={styles.legend}>
       <button type="button" className={styles.toggle} aria-expanded={open} onClick={() => setOpen(!open)}>
@@ -92,7 +97,9 @@ export function Legend({ rows, startOpen, fill, isKnown, onFill, k }: LegendProp
             );
           })}
           <li className={styles.tilt}>
-            The steeper, the faster: {PERCENT_AT_45_DEGREES}&nbsp;% a decade stands at 45°
+            The steeper, the faster:{' '}
+            {INDEX_FACTS[index].hasPercent ? `${PERCENT_AT_45_DEGREES}\u00a0%` : `${DAYS_AT_45_DEGREES} days`} a decade
+            stands at 45°
           </li>
         </ul>
       )}

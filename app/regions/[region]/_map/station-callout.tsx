@@ -6,6 +6,9 @@ import { area, interval, pValue, signed, type Units } from '@/app/components/for
 import { stationHref } from '@/app/components/links';
 import { type Needle, needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
+import type { AnnualIndexName } from '@/lib/basis';
+import { INDEX_FACTS } from '@/lib/region/index-facts';
+import { INDEX_WORDS } from '@/lib/region/index-words';
 import { type HoverStore, useHovered } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import styles from './station-map.module.css';
@@ -18,6 +21,8 @@ interface StationCalloutProps {
   hover: HoverStore;
   selected: string | null;
   units: Units;
+  /** what is compared */
+  index: AnnualIndexName;
   markOf: (row: MapRow) => Needle;
   /** how sure its place is, in words; empty while that is not known */
   placeOf: (row: MapRow) => string;
@@ -25,7 +30,7 @@ interface StationCalloutProps {
 
 /** Words beside the mark that is pointed at or chosen, and the same for screen readers. */
 export function StationCallout(props: StationCalloutProps) {
-  const { map, slug, drawn, hover, selected, units, markOf, placeOf } = props;
+  const { map, slug, drawn, hover, selected, units, index, markOf, placeOf } = props;
   const hovered = useHovered(hover);
   const query = useSearchParams().toString();
   const card = useRef<HTMLDivElement>(null);
@@ -55,7 +60,7 @@ export function StationCallout(props: StationCalloutProps) {
     };
   }, [map, row]);
 
-  const words = row ? calloutWords(row) : '';
+  const words = row ? calloutWords(row, index) : '';
   const place = row ? placeOf(row) : '';
   return (
     <>
@@ -88,16 +93,19 @@ export function StationCallout(props: StationCalloutProps) {
 }
 
 /** Example: "rank 3: −9.3 % per decade (−12.1 to −6.4), adjusted p 0.003; falling, significant" */
-function calloutWords(row: MapRow): string {
+function calloutWords(row: MapRow, index: AnnualIndexName): string {
   if (row.drying) {
     const { value, low, high } = row.figure;
     const sure = needleOf(row).significant ? 'significant' : 'may be chance';
     return `drying: ${signed(value)} days without flow per decade (${interval(low, high)}), adjusted p ${pValue(row.pAdjusted)}; ${sure}`;
   }
   if (row.rank === null) return `not ranked: ${row.unrankedReason ?? 'no reason given'}`;
-  const change =
-    row.percentPerDecade === null
-      ? 'no percentage, its mean minimum is 0'
-      : `${signed(row.percentPerDecade)} % per decade (${interval(row.line?.low, row.line?.high)})`;
-  return `rank ${row.rank}: ${change}, adjusted p ${pValue(row.pAdjusted)}; ${needleWords(needleOf(row))}`;
+  return `rank ${row.rank}: ${changeWords(row, index)}, adjusted p ${pValue(row.pAdjusted)}; ${needleWords(needleOf(row), index)}`;
+}
+
+function changeWords(row: MapRow, index: AnnualIndexName): string {
+  const { change } = row;
+  if (change === null) return `no percentage, its ${INDEX_WORDS[index].mean} is not above 0`;
+  const unit = INDEX_FACTS[index].hasPercent ? '%' : 'days';
+  return `${signed(change.value)} ${unit} per decade (${interval(change.low, change.high)})`;
 }

@@ -6,6 +6,7 @@ import { createPortal } from 'react-dom';
 import { AttributionControl, MapContainer, ScaleControl, TileLayer, useMap } from 'react-leaflet';
 import type { Units } from '@/app/components/format';
 import type { Needle } from '@/app/components/needle';
+import type { AnnualIndexName } from '@/lib/basis';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import type { MapView } from '../map-state.ts';
@@ -30,6 +31,8 @@ interface StationMapProps {
   ground: GroundSource[];
   tiles: { url: string; attribution: string } | null;
   units: Units;
+  /** what is compared */
+  index: AnnualIndexName;
   hover: HoverStore;
   selected: string | null;
   onSelect: (code: string | null) => void;
@@ -84,8 +87,22 @@ interface InsideProps extends StationMapProps {
 }
 
 function MapInside(props: InsideProps) {
-  const { regionName, slug, units, rows, found, ground, hover, selected, onSelect, onView, onInView, bounds, outline } =
-    props;
+  const {
+    regionName,
+    slug,
+    units,
+    index,
+    rows,
+    found,
+    ground,
+    hover,
+    selected,
+    onSelect,
+    onView,
+    onInView,
+    bounds,
+    outline,
+  } = props;
   const { markOf, placeOf } = props;
   const map = useMap();
   useState(() => makePanes(map));
@@ -124,7 +141,7 @@ function MapInside(props: InsideProps) {
       {createPortal(
         <>
           <MapControls map={map} onShowAll={bounds ? showAll : null} />
-          <StationCallout {...{ map, slug, drawn, hover, selected, units, markOf, placeOf }} />
+          <StationCallout {...{ map, slug, drawn, hover, selected, units, index, markOf, placeOf }} />
         </>,
         beside(map),
       )}

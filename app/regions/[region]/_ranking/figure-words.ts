@@ -1,8 +1,20 @@
 import { interval, signed, significant, specificIn, UNIT_WORDS, type Units } from '@/app/components/format';
-import type { Basis } from '@/lib/basis';
+import type { AnnualIndexName, Basis } from '@/lib/basis';
+import { INDEX_FACTS } from '@/lib/region/index-facts';
+import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { MapRow } from '../map-row.ts';
 
-export type FigureKind = Basis['rankBy'] | 'zero-days';
+/** Days, millimetres and numbers without unit are what changes of dates, of deficits and of baseflow indices come in. */
+export type FigureKind = Basis['rankBy'] | 'zero-days' | 'days' | 'millimetres' | 'number';
+
+/** What the ranked list is ordered by under a basis. */
+export function figureKind({ rankBy, index }: Pick<Basis, 'rankBy' | 'index'>): FigureKind {
+  if (rankBy === 'kendall-tau') return rankBy;
+  const { hasPercent, isFlow } = INDEX_FACTS[index];
+  if (!hasPercent) return 'days';
+  if (rankBy === 'percent-per-decade' || isFlow) return rankBy;
+  return index === 'deficit' ? 'millimetres' : 'number';
+}
 
 /** How the figure a list is ordered by is headed, written and spoken. */
 export interface FigureWords {
@@ -16,6 +28,7 @@ export interface FigureWords {
 }
 
 const same = (value: number | null) => value;
+const plus = (value: number | null, written: string) => (value !== null && value > 0 ? `+${written}` : written);
 
 export function figureWords(kind: FigureKind, units: Units): FigureWords {
   switch (kind) {
@@ -24,16 +37,19 @@ export function figureWords(kind: FigureKind, units: Units): FigureWords {
     case 'specific-change': {
       const unit = UNIT_WORDS[units].specific;
       const convert = (value: number | null) => specificIn(value, units) ?? null;
-      const text = (value: number | null) => {
-        const written = significant(convert(value));
-        return value !== null && value > 0 ? `+${written}` : written;
-      };
+      const text = (value: number | null) => plus(value, significant(convert(value)));
       return figure(`${unit} / decade`, convert, text, `${unit} per decade`);
     }
     case 'kendall-tau':
       return { ...figure('Kendall’s tau', same, (value) => signed(value, 2), ''), intervalHeading: null };
     case 'zero-days':
       return figure('dry days / decade', same, (value) => signed(value, 1), 'days without flow per decade');
+    case 'days':
+      return figure('days / decade', same, (value) => signed(value, 1), 'days per decade');
+    case 'millimetres':
+      return figure('mm / decade', same, (value) => plus(value, significant(value, 2)), 'mm per decade');
+    case 'number':
+      return figure('change / decade', same, (value) => signed(value, 3), 'per decade');
   }
 }
 
@@ -50,12 +66,10 @@ function figure(heading: string, shown: FigureWords['shown'], text: FigureWords[
   };
 }
 
-/** Trend and adjusted p under the figure: "falling, p 0.003" or "may be chance, p 0.31". */
-export const trendWords: Record<NonNullable<MapRow['trend']>, string> = {
-  falling: 'falling',
-  rising: 'rising',
-  none: 'may be chance',
-};
+/** Trend under the figure, beside its adjusted p: "falling, p 0.003" or "may be chance, p 0.31". */
+export function trendWords(trend: NonNullable<MapRow['trend']>, index: AnnualIndexName): string {
+  return trend === 'none' ? 'may be chance' : INDEX_WORDS[index].shortly[trend];
+}
 
 /** Round marks for a column's scale: 0 and the outermost round number on each side that fits. */
 export function axisTicks({ low, high }: { low: number; high: number }): number[] {

@@ -6,6 +6,7 @@ import { fixed, MISSING, type Units } from '@/app/components/format';
 import { needleOf } from '@/app/components/needle';
 import ui from '@/app/components/ui.module.css';
 import type { Basis } from '@/lib/basis';
+import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { RankingMovement } from '@/lib/region/window-types';
 import { detectableText } from '../_certainty/detectable-text.ts';
 import { movementWords } from '../_certainty/movement-words.ts';
@@ -15,6 +16,7 @@ import type { MapRow } from '../map-row.ts';
 import type { Tab } from '../map-state.ts';
 import { hasPlace, tabOf } from '../row-filter.ts';
 import { DownloadMenu } from './download-menu.tsx';
+import { figureKind } from './figure-words.ts';
 import styles from './ranking-panel.module.css';
 import { RankingTable } from './ranking-table.tsx';
 import { ReasonList } from './reason-list.tsx';
@@ -136,15 +138,16 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
               caption={`Stations of ${regionName} in order of trend, most strongly declining first`}
               rows={shown.ranked}
               all={lists.ranked}
-              figure={rankBy}
+              figure={figureKind({ rankBy, index })}
+              index={index}
               sureness={sureness}
             />
           )}
         </Tabs.Panel>
         <Tabs.Panel value="drying" className={styles.list}>
           <p className={styles.lead}>
-            At these stations a third or more of the annual minima are 0, so a slope of minima says nothing. They are
-            ordered by the change in days without flow.
+            At these stations a third or more of the {INDEX_WORDS[index].many} are 0, so their slope says nothing. They
+            are ordered by the change in days without flow.
           </p>
           <NoneShown shown={shown.drying.length} of={lists.drying.length} list="drying" />
           {shown.drying.length > 0 && (
@@ -154,6 +157,7 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
               rows={shown.drying}
               all={lists.drying}
               figure="zero-days"
+              index="minimum"
               sureness={null}
             />
           )}

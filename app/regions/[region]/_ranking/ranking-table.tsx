@@ -5,6 +5,8 @@ import { type KeyboardEvent, type MouseEvent, type PointerEvent, useEffect, useM
 import { UNIT_WORDS, type Units } from '@/app/components/format';
 import { IntervalAxis, intervalScale } from '@/app/components/interval-figure';
 import { stationHref } from '@/app/components/links';
+import type { AnnualIndexName } from '@/lib/basis';
+import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { axisTicks, type FigureKind, figureWords } from './figure-words.ts';
@@ -22,6 +24,8 @@ interface RankingTableProps {
   /** all rows of the list, in view or not: the interval's scale must not change while the map moves */
   all: MapRow[];
   figure: FigureKind;
+  /** what is compared, and what the small figures show */
+  index: AnnualIndexName;
   units: Units;
   span: [number, number];
   hover: HoverStore;
@@ -38,7 +42,7 @@ interface RankingTableProps {
  *  a click selects it; the name leads to the station's page. By keyboard: arrows go through the rows, Space selects,
  *  Enter opens. */
 export function RankingTable(props: RankingTableProps) {
-  const { slug, caption, rows, all, figure, units, span, hover, selected, onSelect } = props;
+  const { slug, caption, rows, all, figure, units, span, hover, selected, onSelect, index } = props;
   const { sureness, movedOf, detectableOf } = props;
   const query = useSearchParams().toString();
   const box = useRef<HTMLDivElement>(null);
@@ -143,7 +147,7 @@ export function RankingTable(props: RankingTableProps) {
               Years
             </th>
             <th scope="col" className={styles.minima}>
-              Annual minima
+              {INDEX_WORDS[index].heading}
               <span className={styles.ends}>
                 <span>{span[0]}</span>
                 <span>{span[1]}</span>
@@ -174,29 +178,29 @@ export function RankingTable(props: RankingTableProps) {
               </>
             )}
             <th scope="col" className={styles.steady}>
-              Steady
-              <span className={styles.under}>windows</span>
+              Steadiness
             </th>
           </tr>
         </thead>
         <tbody>
           {before > 0 && <tr style={{ height: before }} />}
-          {items.map(({ index }) => (
+          {items.map(({ index: at }) => (
             <StationRow
-              key={rows[index].code}
-              row={rows[index]}
+              key={rows[at].code}
+              row={rows[at]}
+              at={at}
               index={index}
-              href={stationHref(slug, rows[index].code, query)}
-              selected={rows[index].code === selected}
-              tabbable={index === tabbable}
+              href={stationHref(slug, rows[at].code, query)}
+              selected={rows[at].code === selected}
+              tabbable={at === tabbable}
               hover={hover}
               words={words}
               scale={scale}
               span={span}
               units={units}
               sureness={sureness}
-              moved={movedOf(rows[index].code)}
-              detectable={detectableOf(rows[index])}
+              moved={movedOf(rows[at].code)}
+              detectable={detectableOf(rows[at])}
             />
           ))}
           {after > 0 && <tr style={{ height: after }} />}

@@ -5,17 +5,20 @@ import { IntervalFigure, type IntervalScale } from '@/app/components/interval-fi
 import { needleOf } from '@/app/components/needle';
 import { decodeRatios } from '@/app/components/spark-code';
 import { Sparkline } from '@/app/components/sparkline';
+import type { AnnualIndexName } from '@/lib/basis';
 import { type HoverStore, useIsHovered } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
 import { type FigureWords, trendWords } from './figure-words.ts';
 import { nameLines } from './name-lines.ts';
 import styles from './ranking-table.module.css';
-import { type Sureness, SurenessCells } from './sureness-cells.tsx';
+import { type Sureness, SurenessCells, spanText } from './sureness-cells.tsx';
 
 interface StationRowProps {
   row: MapRow;
   /** place in the list, from 0 */
-  index: number;
+  at: number;
+  /** what is compared */
+  index: AnnualIndexName;
   href: string;
   selected: boolean;
   /** the one row whose link the Tab key reaches */
@@ -42,8 +45,9 @@ export interface Moved {
 
 /** One ranked or drying station: figures in the row, words under the figures. */
 export const StationRow = memo(function StationRow(props: StationRowProps) {
-  const { row, index, href, selected, tabbable, hover, words, scale, span, units } = props;
+  const { row, at, index, href, selected, tabbable, hover, words, scale, span, units } = props;
   const { sureness, moved, detectable } = props;
+  const placeSpan = sureness?.view?.spans.get(row.code);
   const hovered = useIsHovered(hover, row.code);
   const { side, significant } = needleOf(row);
   const [head, tail] = nameLines(row.name);
@@ -52,7 +56,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
   const tone = significant ? styles[side] : undefined;
   return (
     <tr
-      aria-rowindex={index + 2}
+      aria-rowindex={at + 2}
       data-code={row.code}
       data-hovered={hovered || undefined}
       data-selected={selected || undefined}
@@ -60,6 +64,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
     >
       <td className={styles.rank}>
         {row.rank ?? ''}
+        {placeSpan && <span className={styles.spanText}>{spanText(placeSpan.rankLow, placeSpan.rankHigh)}</span>}
         {moved && <MovedMark {...moved} />}
       </td>
       <th scope="row" className={styles.station}>
@@ -89,7 +94,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
         <span className={`${styles.figure} ${tone ?? ''}`}>{words.text(row.figure.value)}</span>
         <span className={styles.trend}>
           {row.trend && (
-            <span className={significant ? `${styles.sure} ${tone}` : undefined}>{trendWords[row.trend]}</span>
+            <span className={significant ? `${styles.sure} ${tone}` : undefined}>{trendWords(row.trend, index)}</span>
           )}
           <span className={styles.p}>
             {row.trend && ', '}p {pValue(row.pAdjusted)}

@@ -46,3 +46,18 @@ test('needleOf gives an unranked station neither tilt nor side', () => {
   expect(needle).toEqual({ kind: 'unranked', side: 'level', significant: false, angle: 0 });
   expect(needleWords(needle)).toBe('not ranked');
 });
+
+test('needleOf of days compared tilts by days, more zero-flow days as a fall, and says so', () => {
+  const days = { percentPerDecade: null, trend: 'falling', trendOf: 'zero-flow-days', valueSlope: 10 } as const;
+  expect(degrees(days)).toBeCloseTo(45, 10);
+  const needle = needleOf({ ...ranked, ...days });
+  expect(needle.side).toBe('falling');
+  expect(needleWords(needle, 'zero-flow-days')).toBe('drying for longer, significant');
+  expect(degrees({ ...days, trendOf: 'minimum-date', valueSlope: -10 })).toBeCloseTo(45, 10);
+});
+
+test('needleOf of deficits tilts growing ones as a fall', () => {
+  const facts = { percentPerDecade: 10, trendOf: 'deficit' } as const;
+  expect(degrees(facts)).toBeCloseTo(45, 10);
+  expect(needleWords(needleOf({ ...ranked, ...facts }), 'deficit')).toBe('larger deficits, may be chance');
+});

@@ -43,3 +43,16 @@ test('besideRanking names what the ranking leaves out', () => {
   expect(besideRanking([drying, drying, unranked])).toBe('2 stations are listed as drying and 1 is not ranked.');
   expect(besideRanking([unranked])).toBe('1 station is not ranked.');
 });
+
+test('headline says in the words of the index what falling and rising are', () => {
+  expect(headline([falling, falling, rising], 0.1, 'zero-flow-days')).toMatch(
+    /^2 of 3 ranked stations are dry for longer and 1 is dry for shorter, with/,
+  );
+  expect(headline([falling, rising, rising], 0.1, 'minimum-date')).toMatch(
+    /^1 of 3 ranked stations has its low earlier and 2 have them later, with/,
+  );
+  expect(headline([falling, falling, chance], 0.1, 'deficit')).toMatch(
+    /^2 of 3 ranked stations have larger deficits and none has smaller ones, with/,
+  );
+  expect(headline([falling, chance], 0.1, 'bfi')).toMatch(/^1 of 2 ranked stations falls and none rises, with/);
+});

@@ -20,9 +20,10 @@ const row = rankedRow({
   lastYear: 2020,
   meanMinimum: 2,
   meanMinimumSpecific: 20,
-  slopePerDecade: -1,
-  slopeLow: -1.5,
-  slopeHigh: -0.5,
+  meanValue: 2,
+  valueSlope: -1,
+  valueSlopeLow: -1.5,
+  valueSlopeHigh: -0.5,
   percentPerDecade: -50,
   specificPerDecade: -10,
   tau: -1,
@@ -35,6 +36,7 @@ const row = rankedRow({
   intercept: 203,
   years: [2000, 2010, 2020],
   minima: [3, 2, 1],
+  values: [3, 2, 1],
 });
 const { period: _, yearStart: __, ...rest } = DEFAULT_BASIS;
 const basis: ResolvedBasis = {
@@ -64,8 +66,8 @@ test('mapRows gives days without flow under Drying, whatever the ranking is by',
 test('mapRows places the slope line by its height at mid-record, as a ratio to the mean', () => {
   // 203 − 0.1 × 2010 = 2, the mean itself
   expect(mapRows(ranking({}, 'percent-per-decade'))[0].line).toEqual({ percent: -50, low: -75, high: -25, middle: 1 });
-  expect(mapRows(ranking({ slopePerDecade: null, intercept: null }, 'percent-per-decade'))[0].line).toBeNull();
-  expect(mapRows(ranking({ meanMinimum: 0, percentPerDecade: null }, 'percent-per-decade'))[0].line).toBeNull();
+  expect(mapRows(ranking({ valueSlope: null, intercept: null }, 'percent-per-decade'))[0].line).toBeNull();
+  expect(mapRows(ranking({ meanValue: 0, percentPerDecade: null }, 'percent-per-decade'))[0].line).toBeNull();
 });
 
 test('mapRows keeps the minima as ratios to their mean', () => {
@@ -74,4 +76,42 @@ test('mapRows keeps the minima as ratios to their mean', () => {
   expect(sparkFirst).toBe(2000);
   expect(ratios).toHaveLength(21);
   expect([ratios[0], ratios[10], ratios[20]].map((ratio) => ratio.toFixed(1))).toEqual(['1.5', '1.0', '0.5']);
+});
+
+test('mapRows of zero-flow days gives days per decade as figure and change, with their own sign', () => {
+  const days = {
+    trendOf: 'zero-flow-days',
+    percentPerDecade: null,
+    valueSlope: 4,
+    valueSlopeLow: 1,
+    valueSlopeHigh: 8,
+  };
+  const given = { ...ranking({ ...days } as Partial<RankingRow>, 'percent-per-decade') };
+  const [shown] = mapRows({ ...given, basis: { ...given.basis, index: 'zero-flow-days' } });
+  expect(shown.figure).toEqual({ value: 4, low: 1, high: 8 });
+  expect(shown.change).toEqual({ value: 4, low: 1, high: 8 });
+});
+
+test('mapRows of deficits gives mm per decade under a change per area', () => {
+  // 100,000 m³ over 100 km² are 1 mm
+  const given = ranking(
+    { trendOf: 'deficit', valueSlope: 1e5, valueSlopeLow: 5e4, valueSlopeHigh: 2e5 },
+    'specific-change',
+  );
+  const [shown] = mapRows({ ...given, basis: { ...given.basis, index: 'deficit' } });
+  expect(shown.figure).toEqual({ value: 1, low: 0.5, high: 2 });
+});
+
+test('mapRows of dates draws them within half a year of their mean', () => {
+  const dates = { values: [10, -30, -70], meanValue: -30, valueSlope: -40, valueSlopeLow: -60, valueSlopeHigh: -20 };
+  // −30 at 2010 on a slope of −4 days a year
+  const given = ranking(
+    { ...dates, trendOf: 'minimum-date', percentPerDecade: null, intercept: 8010 },
+    'percent-per-decade',
+  );
+  const [shown] = mapRows({ ...given, basis: { ...given.basis, index: 'minimum-date' } });
+  const ratios = decodeRatios(shown.spark);
+  // 40 of 182.5 days are 0.22 of the half-height
+  expect([ratios[0], ratios[10], ratios[20]].map((ratio) => ratio.toFixed(1))).toEqual(['1.2', '1.0', '0.8']);
+  expect(shown.line).toMatchObject({ percent: -21.92, middle: 1 });
 });
