@@ -12,6 +12,7 @@ export { minima } from './tasks/minima.ts';
 export { pair } from './tasks/pair.ts';
 export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';
+export { regionBreaks } from './tasks/region-breaks.ts';
 export { regional } from './tasks/regional.ts';
 export { suggestLinks } from './tasks/suggest-links.ts';
 export { takeFiles } from './tasks/take-files.ts';

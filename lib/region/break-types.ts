@@ -8,6 +8,8 @@ export interface Break {
   from: 'change' | 'chosen';
   /** Example: "dam, 1968-05-01: Upper Weir dam" */
   words: string;
+  /** what it is summed up under: the kind of change, or the year. Examples: "dam", "from 1975/76 on" */
+  label: string;
 }
 
 /** The years between two breaks. */
@@ -36,6 +38,8 @@ export interface StepTest {
   /** rank-sum test with Var × serialFactor, two-sided */
   z: number | null;
   p: number | null;
+  /** Benjamini–Hochberg over all steps of the table */
+  pAdjusted: number | null;
   serialFactor: number;
   /** under 10 years a side, and the like; empty when there is nothing to say */
   warning: string;
@@ -56,8 +60,15 @@ export interface SuggestedBreak {
 
 export interface StationBreaks {
   code: string;
+  name: string;
+  /** what is compared, and its unit; empty for a number without unit. Examples: "7-day minima", "m³/s" */
+  tested: string;
+  unit: string;
+  /** one more than there are steps */
   segments: Segment[];
   steps: StepTest[];
+  /** breaks without usable years on both sides */
+  leftOut: { break: Break; reason: string }[];
   suggested: SuggestedBreak | null;
   /** why there is no answer; null when there is one */
   problem: string | null;
@@ -66,6 +77,7 @@ export interface StationBreaks {
 /** One chosen break (or each station's own changes) over all ranked stations. */
 export interface RegionBreaks {
   stations: StationBreaks[];
-  /** by break: stations tested, lower and higher after with adjusted p < alpha (family: all steps of the table) */
+  /** by label of the breaks: steps tested, lower and higher after with adjusted p < alpha (family: all steps of the table),
+   *  median of the steps in percent */
   summary: { label: string; tested: number; lower: number; higher: number; medianPercent: number | null }[];
 }

@@ -1,5 +1,6 @@
 import type { Basis } from '../basis.ts';
 import { pairwiseSlopes } from '../statistics/sen-slope.ts';
+import { ar1VarianceFactor, cutLag1 } from '../statistics/serial-correlation.ts';
 import { testedSeries } from './index-facts.ts';
 import type { RankingRow } from './ranking-types.ts';
 import { serialTerms } from './serial-terms.ts';
@@ -24,4 +25,10 @@ export function rowSerialTerms(
   const { slope } = pairwiseSlopes(series.years, series.values);
   const [{ r1, serialFactor }] = serialTerms([{ ...series, slope, label: row.code }], correction);
   return { correction, r1, serialFactor };
+}
+
+/** Factor of a part of `n` years: from the whole period's lag-1 correlation where there is one, else the whole period's. */
+export function factorOfPart(n: number, { correction, r1, serialFactor }: RowSerialTerms): number {
+  const byLag1 = correction === 'ar1' || correction === 'ar1-regional' || correction === 'pre-whitened';
+  return byLag1 && !Number.isNaN(r1) ? ar1VarianceFactor(n, cutLag1(r1)) : serialFactor;
 }

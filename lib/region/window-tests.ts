@@ -1,9 +1,8 @@
 import { mannKendall } from '../statistics/mann-kendall.ts';
 import { preWhitened } from '../statistics/pre-whitening.ts';
-import { ar1VarianceFactor } from '../statistics/serial-correlation.ts';
 import { windowScores, windowVariance } from '../statistics/window-scores.ts';
 import { windowSlopes } from '../statistics/window-slopes.ts';
-import type { RowSerialTerms } from './row-serial-terms.ts';
+import { factorOfPart, type RowSerialTerms } from './row-serial-terms.ts';
 import type { YearlySeries } from './trend-family.ts';
 
 /** Z and S of every window of a series, from usable year i to usable year j, at i·n + j. */
@@ -22,13 +21,12 @@ export interface WindowTests {
  *  @throws RangeError when a value is not a finite number
  *  Sources: at the functions of `lib/statistics`. */
 export function windowTests(series: YearlySeries, terms: RowSerialTerms, fewest: number): WindowTests {
-  const { years, values } = series;
-  const { s, ties, n } = windowScores(values);
+  const { s, ties, n } = windowScores(series.values);
   const z = new Float64Array(n * n).fill(Number.NaN);
   if (terms.correction === 'pre-whitened' && !Number.isNaN(terms.r1)) {
     return { n, s, z: whitenedZ(series, terms.r1, fewest, z) };
   }
-  const byLength = factorsByLength(years.length, terms);
+  const byLength = Float64Array.from({ length: n + 1 }, (_, length) => factorOfPart(length, terms));
   for (let i = 0; i + fewest <= n; i++) {
     for (let j = i + fewest - 1; j < n; j++) {
       const cell = i * n + j;
@@ -38,11 +36,6 @@ export function windowTests(series: YearlySeries, terms: RowSerialTerms, fewest:
     }
   }
   return { n, s, z };
-}
-
-function factorsByLength(n: number, { correction, r1, serialFactor }: RowSerialTerms): Float64Array {
-  const byLag1 = (correction === 'ar1' || correction === 'ar1-regional') && !Number.isNaN(r1);
-  return Float64Array.from({ length: n + 1 }, (_, length) => (byLag1 ? ar1VarianceFactor(length, r1) : serialFactor));
 }
 
 function whitenedZ({ years, values }: YearlySeries, r1: number, fewest: number, z: Float64Array): Float64Array {

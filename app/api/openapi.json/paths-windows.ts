@@ -1,6 +1,7 @@
 import type * as z from 'zod';
 import { plainFormatParameter } from '../_http/plain-table';
 import { alternativesParameters } from '../regions/[region]/alternatives/parameters';
+import { breaksParameters } from '../regions/[region]/breaks/parameters';
 import { movementParameters } from '../regions/[region]/movement/parameters';
 import { BASIS_PARAMETERS, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, text } from './parts';
@@ -46,5 +47,15 @@ export const WINDOW_PATHS = {
     'The ranking under other choices of each term',
     [REGION],
     alternativesParameters,
+  ),
+  '/api/regions/{region}/breaks': plainTable(
+    'Levels before and after a break at the ranked stations',
+    [REGION],
+    breaksParameters,
+  ),
+  '/api/regions/{region}/stations/{code}/breaks': plainTable(
+    'Levels of a station before and after breaks, and the change that its figures suggest',
+    [REGION, STATION],
+    breaksParameters,
   ),
 };

@@ -1,0 +1,43 @@
+import { basisText, type ResolvedBasis } from '../basis.ts';
+import { lowFlowYearLabel } from '../calendar/low-flow-year.ts';
+import { pettitt } from '../statistics/pettitt.ts';
+import { pettittSieveP } from '../statistics/pettitt-sieve.ts';
+import { randomStream } from '../statistics/random.ts';
+import { pairwiseSlopes } from '../statistics/sen-slope.ts';
+import type { SuggestedBreak } from './break-types.ts';
+import { testedSeries } from './index-facts.ts';
+import type { RankingRow } from './ranking-types.ts';
+import { rowSerialTerms } from './row-serial-terms.ts';
+import { probability } from './sentence-figures.ts';
+
+/** Fewer usable years suggest nothing. */
+const FEWEST_YEARS = 10;
+
+export type SuggestionRow = Pick<RankingRow, 'code' | 'years' | 'values' | 'trendOf' | 'trend' | 'r1' | 'serialFactor'>;
+
+/** The one change of level that a station's figures suggest, by Pettitt's K: shown, and never tested, for it was these
+ *  figures that chose it. Where the serial correction found r1 > 0 its p comes from the sieve, since carry-over makes steps
+ *  by itself; else from Pettitt's approximation. Beside a significant trend it says that step and trend are not told
+ *  apart. Draws are named by the station and its figures, so that they do not depend on the rest of the region.
+ *  @returns null with fewer than 10 usable years, or none that differ
+ *  Sources: at `pettitt`, `pettittSieveP`. */
+export function suggestedBreak(row: SuggestionRow, basis: ResolvedBasis): SuggestedBreak | null {
+  const series = testedSeries(row);
+  if (series.years.length < FEWEST_YEARS) return null;
+  const { k, at, p: approximate } = pettitt(series.values);
+  if (!(k > 0)) return null;
+  const { r1 } = rowSerialTerms(row, basis.serialCorrection);
+  const { slope } = pairwiseSlopes(series.years, series.values);
+  const terms = basisText(basis, ['index', 'serialCorrection']);
+  const random = randomStream(terms, 'change-point', row.code, ...series.years, ...series.values);
+  const resampled = r1 > 0 ? pettittSieveP({ ...series, slope }, { r1, random }) : Number.NaN;
+  const pBySieve = !Number.isNaN(resampled);
+  const p = pBySieve ? resampled : approximate;
+  const besideTrend = row.trend === 'falling' || row.trend === 'rising';
+  const lastBefore = series.years[at];
+  const words =
+    `The figures themselves would part after ${lowFlowYearLabel(lastBefore, basis.yearStart)} (Pettitt’s K = ${k}, ` +
+    `p = ${probability(p)}${pBySieve ? ', by resampling with carry-over' : ''})` +
+    `${besideTrend ? '; step or trend, not told apart' : ''}. Not tested: these figures chose the year.`;
+  return { lastBefore, k, p, pBySieve, besideTrend, words };
+}
