@@ -23,7 +23,7 @@ const TABS = ['ranked', 'drying', 'unranked'] as const;
 export type Tab = (typeof TABS)[number];
 
 /** Share of the width that the map has, percent. */
-export const USUAL_SPLIT = 44;
+export const USUAL_SPLIT = 40;
 
 const FILLS = ['significance', 'steepest', 'span'] as const;
 /** What the discs' filling says: whether a trend is significant, how likely the station is among the k steepest declines,

@@ -1,9 +1,9 @@
-import { fixed } from '@/app/components/format';
+import { count, fixed } from '@/app/components/format';
 import type { RankingMovement } from '@/lib/region/window-types';
 
 /** What the other terms did to the order, in one sentence. `before` of the movement is on the region's own terms.
  *  Example: "Against the region’s own terms, 28 of 33 stations ranked in both keep within a tenth of the places; Ambry at
- *  Sallow moved furthest, from 12 to 3." */
+ *  Sallow moved furthest, 9 places up." */
 export function movementWords({ rankedBoth, movedFar, movements }: RankingMovement): string {
   if (rankedBoth === 0) return 'No station is ranked both on these and on the region’s own terms.';
   const start = 'Against the region’s own terms, ';
@@ -13,5 +13,5 @@ export function movementWords({ rankedBoth, movedFar, movements }: RankingMoveme
   }
   const keep = rankedBoth - movedFar;
   const who = `${fixed(keep)} of ${fixed(rankedBoth)} stations ranked in both ${keep === 1 ? 'keeps' : 'keep'} within a tenth of the places`;
-  return `${start}${who}; ${furthest.name} moved furthest, from ${furthest.before} to ${furthest.after}.`;
+  return `${start}${who}; ${furthest.name} moved furthest, ${count(Math.abs(furthest.moved), 'place')} ${furthest.moved > 0 ? 'up' : 'down'}.`;
 }

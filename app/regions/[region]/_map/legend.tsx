@@ -79,8 +79,8 @@ export function Legend({ rows, startOpen, fill, isKnown, onFill, k, index }: Leg
               Filled by{' '}
               <select value={fill} onChange={(event) => onFill(event.currentTarget.value as Fill)}>
                 <option value="significance">significance</option>
-                <option value="steepest">chance to be among the {steepestWords(k)}</option>
-                <option value="span">how sure the place is</option>
+                <option value="steepest">chance of the {steepestWords(k)}</option>
+                <option value="span">how narrow the rank span is</option>
               </select>
             </label>
           </li>

@@ -10,6 +10,7 @@ import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { RankingMovement } from '@/lib/region/window-types';
 import { detectableText } from '../_certainty/detectable-text.ts';
 import { movementWords } from '../_certainty/movement-words.ts';
+import { toldApartWords } from '../_certainty/place-words.ts';
 import type { CertaintyAnswer } from '../_certainty/use-certainty.ts';
 import type { HoverStore } from '../hover-store.ts';
 import type { MapRow } from '../map-row.ts';
@@ -21,7 +22,7 @@ import styles from './ranking-panel.module.css';
 import { RankingTable } from './ranking-table.tsx';
 import { ReasonList } from './reason-list.tsx';
 import type { Moved } from './station-row.tsx';
-import { SurenessBar } from './sureness-bar.tsx';
+import { SurenessTools } from './sureness-tools.tsx';
 
 interface RankingPanelProps {
   slug: string;
@@ -109,27 +110,27 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
           <DownloadMenu slug={slug} shown={shown[tab].map((row) => row.code)} all={rows.length} />
         </div>
       </div>
-      {lists.ranked.length > 0 && (
-        <SurenessBar answer={certainty} places={lists.ranked.length} k={k} onK={onK}>
-          {movement && <p>{movementWords(movement)}</p>}
-        </SurenessBar>
-      )}
+      {view && !view.toldApart && <p className={styles.apart}>{toldApartWords(view)}</p>}
+      {movement && <p className={styles.moved}>{movementWords(movement)}</p>}
       <Tabs.Root value={tab} onValueChange={(value) => onTab(value as Tab)} className={styles.tabs}>
-        <Tabs.List className={styles.tabList} aria-label="Lists">
-          <Tabs.Tab value="ranked" className={styles.tab}>
-            Ranking <span>{fixed(shown.ranked.length)}</span>
-          </Tabs.Tab>
-          {(lists.drying.length > 0 || tab === 'drying') && (
-            <Tabs.Tab value="drying" className={styles.tab}>
-              Drying <span>{fixed(shown.drying.length)}</span>
+        <div className={styles.tabRow}>
+          <Tabs.List className={styles.tabList} aria-label="Lists">
+            <Tabs.Tab value="ranked" className={styles.tab}>
+              Ranking <span>{fixed(shown.ranked.length)}</span>
             </Tabs.Tab>
-          )}
-          {(lists.unranked.length > 0 || tab === 'unranked') && (
-            <Tabs.Tab value="unranked" className={styles.tab}>
-              Not ranked, and why <span>{fixed(shown.unranked.length)}</span>
-            </Tabs.Tab>
-          )}
-        </Tabs.List>
+            {(lists.drying.length > 0 || tab === 'drying') && (
+              <Tabs.Tab value="drying" className={styles.tab}>
+                Drying <span>{fixed(shown.drying.length)}</span>
+              </Tabs.Tab>
+            )}
+            {(lists.unranked.length > 0 || tab === 'unranked') && (
+              <Tabs.Tab value="unranked" className={styles.tab}>
+                Not ranked, and why <span>{fixed(shown.unranked.length)}</span>
+              </Tabs.Tab>
+            )}
+          </Tabs.List>
+          {lists.ranked.length > 0 && <SurenessTools answer={certainty} places={lists.ranked.length} k={k} onK={onK} />}
+        </div>
         <Tabs.Panel value="ranked" className={styles.list}>
           <NoneShown shown={shown.ranked.length} of={lists.ranked.length} list="ranked" />
           {shown.ranked.length > 0 && (

@@ -4,41 +4,29 @@ import type { ReactNode } from 'react';
 import { fixed, percent } from '@/app/components/format';
 import ui from '@/app/components/ui.module.css';
 import { MOST_STEEPEST } from '@/lib/region/certainty-types';
-import { toldApartWords } from '../_certainty/place-words.ts';
 import type { CertaintyAnswer } from '../_certainty/use-certainty.ts';
 import styles from './sureness.module.css';
 
-interface SurenessBarProps {
+interface SurenessToolsProps {
   answer: CertaintyAnswer;
   /** ranked stations */
   places: number;
   /** of the steepest declines */
   k: number;
   onK: (k: number) => void;
-  /** what else is to be said of the order */
-  children?: ReactNode;
 }
 
-/** Over the ranking: how far the rank spans are, or what they say of all; and how many of the steepest are asked after. */
-export function SurenessBar({ answer, places, k, onK, children }: SurenessBarProps) {
-  const { view } = answer;
+/** Beside the lists' tabs: how many of the steepest are asked after, how far the rank spans are, and what they say. */
+export function SurenessTools({ answer, places, k, onK }: SurenessToolsProps) {
   return (
-    <div className={styles.sureness}>
+    <div className={styles.tools}>
       <Steepest places={places} k={k} onK={onK} />
-      {view ? (
-        <>
-          {!view.toldApart && <p className={styles.apart}>{toldApartWords(view)}</p>}
-          <Help replicates={view.replicates} />
-        </>
-      ) : (
-        <Wait {...answer} />
-      )}
-      {children}
+      {answer.view ? <Help replicates={answer.view.replicates} /> : <Wait {...answer} />}
     </div>
   );
 }
 
-function Steepest({ places, k, onK }: Omit<SurenessBarProps, 'answer' | 'children'>) {
+function Steepest({ places, k, onK }: Omit<SurenessToolsProps, 'answer'>) {
   const most = Math.min(MOST_STEEPEST, places);
   return (
     <label className={styles.steepest}>
@@ -54,7 +42,7 @@ function Steepest({ places, k, onK }: Omit<SurenessBarProps, 'answer' | 'childre
           if (Number.isInteger(next) && next >= 1 && next <= most) onK(next);
         }}
       />
-      steepest declines
+      steepest<span className="visually-hidden"> declines</span>
     </label>
   );
 }
