@@ -19,9 +19,9 @@ export interface Difference {
 }
 
 /** Hodges–Lehmann difference of two parts of a series, after − before, with its rank-based interval.
- *  The median of all n1·n2 differences in rising order; with C = 2·z·√(varianceFactor·Var U), Var U corrected for ties, the
- *  limits stand at the ranks (n1·n2 − C)/2 and (n1·n2 + C)/2 + 1, interpolated: those values that the rank-sum test would
- *  not reject, as for the slope.
+ *  The median of all n1·n2 differences in rising order; with C = 2·z·√(varianceFactor·Var U) the limits stand at the ranks
+ *  (n1·n2 − C)/2 and (n1·n2 + C)/2 + 1, interpolated: the shifts that the rank-sum test would not reject. Var U is
+ *  corrected for ties within each part; those between the parts end when one is shifted.
  *  @param before  values of the one part and of the other, NaN where missing (left out); left unchanged
  *  @returns       NaN figures when a part has no value
  *  @throws RangeError when a value is infinite, varianceFactor is not a positive number, or confidence is not between 0 and
@@ -47,7 +47,8 @@ export function hodgesLehmann(
   let next = 0;
   for (const later of second) for (const earlier of first) differences[next++] = later - earlier;
   differences.sort();
-  const reach = 2 * normalQuantile(0.5 + confidence / 2) * Math.sqrt(varianceFactor * varianceOfU(first, second));
+  const variance = varianceOfU(first.length, second.length, [first, second]);
+  const reach = 2 * normalQuantile(0.5 + confidence / 2) * Math.sqrt(varianceFactor * variance);
   return {
     difference: medianOfSorted(differences),
     low: valueAtRank(differences, (pairs - reach) / 2),

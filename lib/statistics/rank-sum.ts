@@ -34,10 +34,14 @@ export function rankSum(before: ArrayLike<number>, after: ArrayLike<number>, var
   if (n1 === 0 || n2 === 0) {
     return { before: n1, after: n2, u: 0, variance: Number.NaN, z: Number.NaN, p: Number.NaN };
   }
-  const ranks = averageRanks(joined(first, second));
-  const rankSumAfter = ranks.subarray(n1).reduce((sum, rank) => sum + rank, 0);
+  const all = new Float64Array(n1 + n2);
+  all.set(first);
+  all.set(second, n1);
+  const rankSumAfter = averageRanks(all)
+    .subarray(n1)
+    .reduce((sum, rank) => sum + rank, 0);
   const u = rankSumAfter - (n2 * (n2 + 1)) / 2;
-  const variance = varianceOfU(first, second);
+  const variance = varianceOfU(n1, n2, [all]);
   const excess = u - (n1 * n2) / 2;
   // a half is what U moves by at least; z never crosses 0 by it
   const corrected = Math.sign(excess) * Math.max(0, Math.abs(excess) - 0.5);
@@ -45,19 +49,27 @@ export function rankSum(before: ArrayLike<number>, after: ArrayLike<number>, var
   return { before: n1, after: n2, u, variance, z, p: Math.min(1, twoSidedP(z)) };
 }
 
-/** Variance of U under no difference, corrected for ties. Neither part may be empty. */
-export function varianceOfU(first: Float64Array, second: Float64Array): number {
-  const sorted = joined(first, second).sort();
-  const all = sorted.length;
+/** Variance of U under no difference: `parts` is one array of all values, or several if values of different parts do not
+ *  count as tied.
+ *  @param n1  number of values of the one part and of the other, neither 0 */
+export function varianceOfU(n1: number, n2: number, parts: readonly Float64Array[]): number {
+  const all = n1 + n2;
+  const ties = parts.reduce((sum, part) => sum + tieTerm(part), 0);
+  return ((n1 * n2) / 12) * (all + 1 - ties / (all * (all - 1)));
+}
+
+/** Σ t(t² − 1) over groups of t equal values. */
+function tieTerm(values: Float64Array): number {
+  const sorted = values.slice().sort();
   let ties = 0;
-  for (let start = 0; start < all; ) {
+  for (let start = 0; start < sorted.length; ) {
     let end = start + 1;
-    while (end < all && sorted[end] === sorted[start]) end++;
+    while (end < sorted.length && sorted[end] === sorted[start]) end++;
     const tied = end - start;
     ties += tied * (tied * tied - 1);
     start = end;
   }
-  return ((first.length * second.length) / 12) * (all + 1 - ties / (all * (all - 1)));
+  return ties;
 }
 
 /** @throws RangeError naming `caller` when the factor is not a positive number */
@@ -65,11 +77,4 @@ export function checkFactor(caller: string, varianceFactor: number): void {
   if (!(varianceFactor > 0 && Number.isFinite(varianceFactor))) {
     throw new RangeError(`${caller}: varianceFactor must be a positive number, got ${varianceFactor}`);
   }
-}
-
-function joined(first: Float64Array, second: Float64Array): Float64Array {
-  const all = new Float64Array(first.length + second.length);
-  all.set(first);
-  all.set(second, first.length);
-  return all;
 }

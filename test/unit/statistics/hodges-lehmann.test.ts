@@ -40,8 +40,10 @@ describe('hodgesLehmann', () => {
     expect(hodgesLehmann([1, 2], [3, 4])).toEqual({ difference: 2, low: Number.NaN, high: Number.NaN });
   });
 
-  test('all equal: no difference, and none at the limits', () => {
-    expect(hodgesLehmann([2, 2, 2], [2, 2, 2])).toEqual({ difference: 0, low: 0, high: 0 });
+  test('all zero, or each part all equal: the difference at the limits too', () => {
+    const [twelve, nine] = [new Float64Array(12), new Float64Array(9)];
+    expect(hodgesLehmann(twelve, nine)).toEqual({ difference: 0, low: 0, high: 0 });
+    expect(hodgesLehmann(twelve.fill(1), nine.fill(4))).toEqual({ difference: 3, low: 3, high: 3 });
   });
 
   test('a part without a value has no answer; missing values are left out', () => {
