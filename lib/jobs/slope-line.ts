@@ -3,13 +3,19 @@ import type { SlopeLine } from './types.ts';
 
 const YEARS_PER_DECADE = 10;
 
-/** The slope line of a station's minima from its first to its last year used, with the lines of the slope's interval.
- *  The latter turn about the line's value at the median year, where the level is known best.
+/** What a slope line is drawn from; `years` those that it rests on. */
+export type Sloped = Pick<
+  RankingRow,
+  'firstYear' | 'lastYear' | 'valueSlope' | 'intercept' | 'valueSlopeLow' | 'valueSlopeHigh' | 'years'
+>;
+
+/** The slope line of a station's annual figures, in their unit, from its first to its last year used, with the lines of
+ *  the slope's interval. The latter turn about the line's value at the median year, where the level is known best.
  *  @returns null for a station without a slope */
-export function slopeLine(row: RankingRow): SlopeLine | null {
-  const { firstYear, lastYear, slopePerDecade, intercept, slopeLow, slopeHigh, years } = row;
-  if (firstYear === null || lastYear === null || slopePerDecade === null || intercept === null) return null;
-  const slope = slopePerDecade / YEARS_PER_DECADE;
+export function slopeLine(row: Sloped): SlopeLine | null {
+  const { firstYear, lastYear, valueSlope, intercept, valueSlopeLow, valueSlopeHigh, years } = row;
+  if (firstYear === null || lastYear === null || valueSlope === null || intercept === null) return null;
+  const slope = valueSlope / YEARS_PER_DECADE;
   const at = (year: number) => intercept + slope * year;
   const pivot = (years[Math.floor((years.length - 1) / 2)] + years[Math.floor(years.length / 2)]) / 2;
   const turned = (perDecade: number | null): [number, number] | null => {
@@ -21,7 +27,7 @@ export function slopeLine(row: RankingRow): SlopeLine | null {
     firstYear,
     lastYear,
     fitted: [at(firstYear), at(lastYear)],
-    low: turned(slopeLow),
-    high: turned(slopeHigh),
+    low: turned(valueSlopeLow),
+    high: turned(valueSlopeHigh),
   };
 }

@@ -39,7 +39,8 @@ export async function stationDetail(
     ranked: ranking.counts.ranked,
     verdict: verdict(row, ranking.basis),
     minima: minima.stations.find((candidate) => candidate.station.code === code)!.minima,
-    line: slopeLine(row),
+    // under Drying the slope is one of days, and the minima are shown
+    line: row.drying ? null : slopeLine(row),
     curve: curves.curves.find((candidate) => candidate.station.code === code) ?? null,
     noCurveReason: curves.leftOut.find((candidate) => candidate.station.code === code)?.reason ?? null,
     region: { unit: curves.unit, exceedances: curves.exceedances, band: curves.band },

@@ -69,7 +69,7 @@ export interface StationDetail {
   /** one sentence with figures and their uncertainty */
   verdict: string;
   minima: StationMinima['minima'];
-  /** the slope line at the first and last usable year, m³/s, with the lines of the 95 % interval; null when unranked */
+  /** the slope line at the first and last usable year, in the unit of what is compared, with the lines of the 95 % interval; null when unranked */
   line: SlopeLine | null;
   curve: StationCurveRow | null;
   /** why there is no curve; null when there is one */
@@ -83,7 +83,7 @@ export interface StationDetail {
 export interface SlopeLine {
   firstYear: number;
   lastYear: number;
-  /** at the first and last year, m³/s */
+  /** at the first and last year, in the unit of what is compared */
   fitted: [number, number];
   /** the same for the ends of the slope's interval, turning about the middle of the line; null without an interval */
   low: [number, number] | null;

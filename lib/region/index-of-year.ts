@@ -1,4 +1,5 @@
-import { type Basis, MONTHS } from '../basis.ts';
+import type { Basis } from '../basis.ts';
+import { MONTHS } from '../calendar/months.ts';
 
 /** One year's figure, by name, with the months that it is of. Example: "May–October 7-day minimum" */
 export function indexOfYear({

@@ -5,9 +5,9 @@ import type { RankingRow } from '../../../lib/region/ranking-types.ts';
 const row = {
   firstYear: 1990,
   lastYear: 2010,
-  slopePerDecade: -2,
-  slopeLow: -4,
-  slopeHigh: 1,
+  valueSlope: -2,
+  valueSlopeLow: -4,
+  valueSlopeHigh: 1,
   // 10 m³/s in 2000 on a slope of −0.2 a year
   intercept: 10 + 0.2 * 2000,
   years: [1990, 1995, 2000, 2005, 2010],
@@ -36,7 +36,7 @@ test('with an even number of years they turn about the middle of the middle two'
 });
 
 test('there is no line without a slope, and no interval where there is none', () => {
-  expect(slopeLine({ ...row, slopePerDecade: null })).toBeNull();
+  expect(slopeLine({ ...row, valueSlope: null })).toBeNull();
   expect(slopeLine({ ...row, firstYear: null })).toBeNull();
-  expect(slopeLine({ ...row, slopeLow: null })!.low).toBeNull();
+  expect(slopeLine({ ...row, valueSlopeLow: null })!.low).toBeNull();
 });

@@ -1,7 +1,15 @@
 import { describe, expect, test } from 'vitest';
 import { yearTicks } from '@/app/components/year-ticks';
 import { coverageText } from '@/app/regions/[region]/stations/[code]/coverage-text';
-import { minimaPoints } from '@/app/regions/[region]/stations/[code]/minima-points';
+import {
+  changeText,
+  changeUnit,
+  dateText,
+  dateTicks,
+  indexScale,
+  valueText,
+} from '@/app/regions/[region]/stations/[code]/index-scale';
+import { comparedPoints, minimaPoints } from '@/app/regions/[region]/stations/[code]/minima-points';
 import { placeOf } from '@/app/regions/[region]/stations/[code]/ranking-place';
 import { readingText } from '@/app/regions/[region]/stations/[code]/reading-text';
 import type { AnnualMinima } from '@/lib/lowflow/annual-minima-types';
@@ -48,13 +56,64 @@ describe('minimaPoints', () => {
 });
 
 test('readingText says an upper bound, the reason and what is missing', () => {
-  const [used, outside, bound, none] = minimaPoints(MINIMA, 4, [1999]).map((point) => readingText(point, 1, 'm³/s', 7));
+  const [used, outside, bound, none] = minimaPoints(MINIMA, 4, [1999]).map((point) =>
+    readingText(point, indexScale('minimum', 7, 'metric'), 7),
+  );
   expect(used).toBe('1999/00: 0 m³/s, in the 7 days to 2000-01-01; 0 days missing');
   expect(outside).toMatch(/1 day missing\. Usable, but not among the years compared/);
   expect(bound).toMatch(
     /^2001\/02: at most 0\.500 m³\/s, .*60 days missing, 3 flagged\. Not used: 60 of 365 days are missing$/,
   );
   expect(none).toBe('2002/03: no minimum; 365 days missing. Not used: no 7 days in a row');
+});
+
+test('comparedPoints shows the figures of the years used, and the minima under Drying', () => {
+  const points = minimaPoints(MINIMA, 4, [1999]);
+  const row = { years: [1999], values: [12], drying: false };
+  expect(comparedPoints(points, row, 'zero-flow-days').map(({ value }) => value)).toEqual([12, null, null, null]);
+  expect(comparedPoints(points, row, 'minimum').map(({ value }) => value)).toEqual([0, 0.25, 0.5, null]);
+  expect(comparedPoints(points, { ...row, drying: true }, 'q95').map(({ value }) => value)).toEqual([
+    0,
+    0.25,
+    0.5,
+    null,
+  ]);
+});
+
+describe('indexScale', () => {
+  test('names the axis with its unit, in the units shown', () => {
+    expect(indexScale('minimum', 30, 'metric').axisName).toBe('Lowest 30-day mean of each year, m³/s');
+    expect(indexScale('q95', 7, 'us').axisName).toBe('Q95 of each year, ft³/s');
+    expect(indexScale('bfi', 7, 'us').axisName).toBe('Baseflow index of each year');
+    expect(indexScale('minimum-date', 7, 'us').axisName).toBe('Date of the lowest 7-day mean of each year');
+  });
+
+  test('tells volumes in millions: 2,500,000 m³ are 88.3 million ft³', () => {
+    expect(valueText(2.5e6, indexScale('deficit', 7, 'metric'))).toBe('2.50 million m³');
+    expect(valueText(2.5e6, indexScale('deficit', 7, 'us'))).toBe('88.3 million ft³');
+  });
+
+  test('tells dates as day and month, unrolled ones too, and their change in days', () => {
+    const dates = indexScale('minimum-date', 7, 'metric');
+    expect(valueText(248.4, dates)).toBe('5 September');
+    expect([1, 0, -5, 365, 366].map(dateText)).toEqual([
+      '1 January',
+      '31 December',
+      '26 December',
+      '31 December',
+      '1 January',
+    ]);
+    expect([changeText(-5.2, dates), changeUnit(dates)]).toEqual(['−5.20', 'days']);
+    expect(valueText(null, dates)).toBe('no figure used');
+  });
+
+  test('dateTicks are firsts of months, no more than seven', () => {
+    expect(dateTicks(-20, 40)).toEqual([
+      { value: 1, text: '1 Jan' },
+      { value: 32, text: '1 Feb' },
+    ]);
+    expect(dateTicks(1, 365).length).toBeLessThanOrEqual(7);
+  });
 });
 
 test('coverageText counts days by kind', () => {

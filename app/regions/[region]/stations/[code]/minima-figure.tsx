@@ -8,11 +8,11 @@ import {
   tabsHeight,
   yearPosition,
 } from '@/app/components/change-marks/marked-changes';
-import { tickText } from '@/app/components/duration-figure/figure-text';
 import { LevelLines } from '@/app/components/level-lines/level-lines';
 import { useWidth } from '@/app/components/use-width';
 import { yearTicks } from '@/app/components/year-ticks';
 import type { SlopeLine } from '@/lib/jobs/types';
+import { axisTicks, type IndexScale } from './index-scale.ts';
 import styles from './minima-figure.module.css';
 import type { MinimaPoint } from './minima-points';
 import type { NamedLevel } from './named-levels';
@@ -25,9 +25,7 @@ interface Props {
   points: MinimaPoint[];
   slope: SlopeLine | null;
   trend: 'falling' | 'rising' | 'none' | null;
-  /** from m³/s to the unit shown */
-  factor: number;
-  unit: string;
+  scale: IndexScale;
   days: number;
   /** dated changes at the station, and the flows that mean something there */
   changes: readonly MarkedChange[];
@@ -41,41 +39,29 @@ interface Props {
 
 const HEIGHT = 340;
 
-/** Annual minima on a real time axis: filled marks for the years used, hollow ones that hang from a bar for years
+/** Annual minima, or another figure a year, on a real time axis: filled marks for the years used, hollow ones that hang from a bar for years
  *  whose minimum is only an upper bound, with the slope.fitted and its interval. Arrow keys move through the years. */
-export function MinimaFigure({
-  points,
-  slope,
-  trend,
-  factor,
-  unit,
-  days,
-  changes,
-  levels,
-  yearStart,
-  span,
-  summary,
-}: Props) {
+export function MinimaFigure({ points, slope, trend, scale, days, changes, levels, yearStart, span, summary }: Props) {
   const [frame, width] = useWidth<HTMLDivElement>(960);
   const { x, y, marks, top } = useMemo(
-    () => layOut({ points, slope, factor, changes, yearStart, span, width }),
-    [points, slope, factor, changes, yearStart, span, width],
+    () => layOut({ points, slope, scale, changes, yearStart, span, width }),
+    [points, slope, scale, changes, yearStart, span, width],
   );
+  const { factor } = scale;
   const shown = levels.map(({ label, flow }) => ({ label, y: y(flow * factor) })).filter((level) => level.y >= top);
   const reader = useYearReader(points.map((point) => point.year));
   const current = points.find((point) => point.year === reader.picked) ?? null;
 
   const bottom = HEIGHT - PLOT.bottom;
+  const zeroBased = scale.index !== 'minimum-date';
   return (
     <div ref={frame} className={styles.frame} data-trend={trend ?? 'unranked'}>
-      <p className={styles.axisName}>
-        Lowest {days}-day mean of each year, {unit}
-      </p>
+      <p className={styles.axisName}>{scale.axisName}</p>
       <YearSlider
         label={summary}
         span={span}
         year={current?.year ?? null}
-        text={current && readingText(current, factor, unit, days)}
+        text={current && readingText(current, scale, days)}
         className={styles.figure}
         yearAt={x.invert}
         onYear={reader.pickNearest}
@@ -83,11 +69,11 @@ export function MinimaFigure({
         onLeave={reader.clear}
       >
         <svg width={width} height={HEIGHT} aria-hidden="true">
-          {y.ticks(5).map((value) => (
-            <g key={value} className={value === 0 ? styles.zero : styles.grid}>
+          {axisTicks(y, scale).map(({ value, text }) => (
+            <g key={value} className={value === 0 && zeroBased ? styles.zero : styles.grid}>
               <line x1={PLOT.left} x2={width - PLOT.right} y1={y(value)} y2={y(value)} />
               <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {tickText(value)}
+                {text}
               </text>
             </g>
           ))}
@@ -105,54 +91,59 @@ export function MinimaFigure({
             right={Math.max(PLOT.left, width - PLOT.right)}
             top={top + 6}
             bottom={bottom - 6}
-            points={points.map(({ year, minimum }) => ({ x: x(year), y: y((minimum ?? 0) * factor) }))}
+            points={points.map(({ year, value }) => ({ x: x(year), y: y((value ?? 0) * factor) }))}
           />
           <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
-          {slope && <Slope slope={slope} x={x} y={(flow) => y(flow * factor)} />}
+          {slope && <Slope slope={slope} x={x} y={(value) => y(value * factor)} floor={zeroBased ? y(0) : bottom} />}
           {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
           {points.map((point) => (
-            <Mark
-              key={point.year}
-              point={point}
-              x={x(point.year)}
-              y={y((point.minimum ?? 0) * factor)}
-              floor={bottom}
-            />
+            <Mark key={point.year} point={point} x={x(point.year)} y={y((point.value ?? 0) * factor)} floor={bottom} />
           ))}
         </svg>
       </YearSlider>
       <div className={styles.readout}>
-        {current ? readingText(current, factor, unit, days) : <Key points={points} slope={slope} />}
+        {current ? readingText(current, scale, days) : <Key points={points} slope={slope} none={scale.none} />}
       </div>
     </div>
   );
 }
 
-interface Contents extends Pick<Props, 'points' | 'slope' | 'factor' | 'changes' | 'yearStart' | 'span'> {
+interface Contents extends Pick<Props, 'points' | 'slope' | 'scale' | 'changes' | 'yearStart' | 'span'> {
   width: number;
 }
 
 /** Scales, and the marks of the changes with the room that their letters take above the plot. */
-function layOut({ points, slope, factor, changes, yearStart, span, width }: Contents) {
+function layOut({ points, slope, scale, changes, yearStart, span, width }: Contents) {
   const right = Math.max(PLOT.left + 1, width - PLOT.right);
   const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
   const marks = placeChanges(changes, (day) => x(yearPosition(day, yearStart)), [PLOT.left, right]);
   const top = PLOT.top + tabsHeight(marks);
-  const flows = points.flatMap((point) => (point.minimum === null ? [] : [point.minimum * factor]));
-  const highest = Math.max(0, ...flows, ...(slope?.fitted.map((flow) => flow * factor) ?? []));
-  const y = scaleLinear([0, highest || 1], [HEIGHT - PLOT.bottom, top]).nice(5);
+  const values = [...points.flatMap(({ value }) => value ?? []), ...(slope?.fitted ?? [])].map(
+    (value) => value * scale.factor,
+  );
+  const highest = Math.max(0, ...values);
+  // dates have no zero to start from
+  const domain = scale.index === 'minimum-date' ? aroundDates(values) : [0, highest || 1];
+  const y = scaleLinear(domain, [HEIGHT - PLOT.bottom, top]);
+  if (scale.index !== 'minimum-date') y.nice(5);
   return { x, y, marks, top };
+}
+
+/** Days of the year from well before the earliest to well after the latest date. */
+function aroundDates(values: readonly number[]): [number, number] {
+  if (values.length === 0) return [1, 365];
+  return [Math.min(...values) - 20, Math.max(...values) + 20];
 }
 
 type Position = (value: number) => number;
 
-/** The slope.fitted over its interval. What lies below zero is cut off: there are no such flows. */
-function Slope({ slope, x, y }: { slope: SlopeLine; x: Position; y: Position }) {
+/** The slope.fitted over its interval. What lies below the floor is cut off: there are no flows or days below zero. */
+function Slope({ slope, x, y, floor }: { slope: SlopeLine; x: Position; y: Position; floor: number }) {
   const [left, right] = [x(slope.firstYear), x(slope.lastYear)];
   return (
     <g className={styles.slope} clipPath="url(#minima-plot)">
       <clipPath id="minima-plot">
-        <rect x={left} y={0} width={Math.max(0, right - left)} height={y(0)} />
+        <rect x={left} y={0} width={Math.max(0, right - left)} height={floor} />
       </clipPath>
       {slope.low && slope.high && (
         <path
@@ -166,7 +157,7 @@ function Slope({ slope, x, y }: { slope: SlopeLine; x: Position; y: Position }) 
 }
 
 function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number; floor: number }) {
-  if (point.minimum === null) {
+  if (point.value === null) {
     return <path className={styles.absent} d={`M${x - 3},${floor - 3}l6,-6m0,6l-6,-6`} />;
   }
   if (!point.usable) {
@@ -181,7 +172,7 @@ function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number
   return <circle className={point.used ? styles.used : styles.outside} cx={x} cy={y} r={4} />;
 }
 
-function Key({ points, slope }: { points: readonly MinimaPoint[]; slope: SlopeLine | null }) {
+function Key({ points, slope, none }: { points: readonly MinimaPoint[]; slope: SlopeLine | null; none: string }) {
   return (
     <span className={styles.key}>
       {points.some((point) => point.used) && (
@@ -190,7 +181,7 @@ function Key({ points, slope }: { points: readonly MinimaPoint[]; slope: SlopeLi
       {points.some((point) => point.usable && !point.used) && (
         <KeyItem shape={<circle className={styles.outside} cx="7" cy="7" r="4" />} text="usable, not used" />
       )}
-      {points.some((point) => !point.usable && point.minimum !== null) && (
+      {points.some((point) => !point.usable && point.value !== null) && (
         <KeyItem
           shape={
             <g className={styles.atMost}>
@@ -200,8 +191,8 @@ function Key({ points, slope }: { points: readonly MinimaPoint[]; slope: SlopeLi
           text="at most: too much missing"
         />
       )}
-      {points.some((point) => point.minimum === null) && (
-        <KeyItem shape={<path className={styles.absent} d="M4,4l6,6m0,-6l-6,6" />} text="no minimum" />
+      {points.some((point) => point.value === null) && (
+        <KeyItem shape={<path className={styles.absent} d="M4,4l6,6m0,-6l-6,6" />} text={none} />
       )}
       {slope && (
         <KeyItem

@@ -1,6 +1,8 @@
+import type { AnnualIndexName } from '@/lib/basis';
 import { isoDate } from '@/lib/calendar/day';
 import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import type { AnnualMinima } from '@/lib/lowflow/annual-minima-types';
+import type { RankingRow } from '@/lib/region/ranking-types';
 
 /** One low-flow year as the figure and the table show it. */
 export interface MinimaPoint {
@@ -9,6 +11,8 @@ export interface MinimaPoint {
   label: string;
   /** m³/s; null when the year has no complete window */
   minimum: number | null;
+  /** what is compared, in its own unit: the minimum unless the basis says otherwise; null where there is none */
+  value: number | null;
   /** ISO date of the minimum; null when there is none */
   date: string | null;
   usable: boolean;
@@ -26,10 +30,12 @@ export function minimaPoints(minima: AnnualMinima, yearStart: number, usedYears:
   return Array.from(minima.years, (year, index) => {
     const minimum = minima.minimum[index];
     const usable = minima.usable[index] === 1;
+    const known = Number.isNaN(minimum) ? null : minimum;
     return {
       year,
       label: lowFlowYearLabel(year, yearStart),
-      minimum: Number.isNaN(minimum) ? null : minimum,
+      minimum: known,
+      value: known,
       date: minima.day[index] === -1 ? null : isoDate(minima.day[index]),
       usable,
       used: usable && used.has(year),
@@ -38,4 +44,16 @@ export function minimaPoints(minima: AnnualMinima, yearStart: number, usedYears:
       reason: minima.reason[index],
     };
   });
+}
+
+/** The same years with the figures that are compared, where those are not the minima: of the years used, no others. */
+export function comparedPoints(
+  points: readonly MinimaPoint[],
+  { years, values, drying }: Pick<RankingRow, 'years' | 'values' | 'drying'>,
+  index: AnnualIndexName,
+): MinimaPoint[] {
+  // under Drying the minima are shown whatever is compared: they are what keeps the station from its place
+  if (index === 'minimum' || drying) return [...points];
+  const figureOf = new Map(years.map((year, i) => [year, values[i]]));
+  return points.map((point) => ({ ...point, value: figureOf.get(point.year) ?? null }));
 }

@@ -3,7 +3,9 @@ import { fixed, signed } from '@/app/components/format';
 import { stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
+import type { AnnualIndexName } from '@/lib/basis';
 import type { Neighbour } from '@/lib/jobs/types';
+import { INDEX_FACTS } from '@/lib/region/index-facts';
 import type { RankingRow, StationFacts } from '@/lib/region/ranking-types';
 import styles from './station-screen.module.css';
 
@@ -12,6 +14,8 @@ interface Props {
   station: StationFacts;
   near: readonly Neighbour[];
   rows: readonly RankingRow[];
+  /** what is compared */
+  index: AnnualIndexName;
   query: URLSearchParams;
 }
 
@@ -19,7 +23,7 @@ interface Props {
 const MOST_ON_RIVER = 6;
 
 /** Nearest stations, then the others on the same river, each with its mark. */
-export function Neighbours({ slug, station, near, rows, query }: Props) {
+export function Neighbours({ slug, station, near, rows, index, query }: Props) {
   const rowOf = new Map(rows.map((row) => [row.code, row]));
   const nearCodes = new Set(near.map((neighbour) => neighbour.station.code));
   const onRiver = rows
@@ -35,8 +39,7 @@ export function Neighbours({ slug, station, near, rows, query }: Props) {
           <span className={styles.neighbourName}>{row.name}</span>
         </Link>
         <span className={styles.neighbourFacts}>
-          {where} ·{' '}
-          {row.percentPerDecade === null ? needleWords(needle) : `${signed(row.percentPerDecade)} % per decade`}
+          {where} · {changeWords(row, index) ?? needleWords(needle, index)}
           {row.rank !== null && ` · no. ${row.rank}`}
         </span>
       </li>
@@ -56,4 +59,11 @@ export function Neighbours({ slug, station, near, rows, query }: Props) {
       </ul>
     </section>
   );
+}
+
+/** Its change per decade, in percent of the mean or in days; null where there is none. */
+function changeWords({ rank, percentPerDecade, valueSlope }: RankingRow, index: AnnualIndexName): string | null {
+  if (percentPerDecade !== null) return `${signed(percentPerDecade)} % per decade`;
+  if (rank === null || valueSlope === null || INDEX_FACTS[index].hasPercent) return null;
+  return `${signed(valueSlope)} days per decade`;
 }

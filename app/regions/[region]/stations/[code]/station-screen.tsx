@@ -2,13 +2,15 @@ import Link from 'next/link';
 import { Cautions } from '@/app/components/cautions';
 import { ChangeLegend } from '@/app/components/change-marks/change-marks';
 import { markedChanges } from '@/app/components/change-marks/marked-changes';
-import { count, flowIn, percent, UNIT_WORDS } from '@/app/components/format';
+import { count, percent } from '@/app/components/format';
 import { apiHref, deriveHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
 import ui from '@/app/components/ui.module.css';
 import { lowFlowYearLabel } from '@/lib/calendar/low-flow-year';
 import type { StationDetail } from '@/lib/jobs/types';
+import { INDEX_FACTS } from '@/lib/region/index-facts';
+import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { RankingRow } from '@/lib/region/ranking-types';
 import type { RegionRow } from '@/lib/store/regions';
 import { CertaintyProvider } from '../../_certainty/certainty-context';
@@ -22,8 +24,9 @@ import { AlongRiver } from './along-river';
 import { BesideFigures } from './beside-figures';
 import { CoverageStrip } from './coverage-strip';
 import { DerivedNote } from './derived-note';
+import { indexScale } from './index-scale';
 import { MinimaFigure } from './minima-figure';
-import { minimaPoints } from './minima-points';
+import { comparedPoints, minimaPoints } from './minima-points';
 import { MinimaTable } from './minima-table';
 import { namedLevels } from './named-levels';
 import { Neighbours } from './neighbours';
@@ -47,13 +50,14 @@ interface Props {
 export function StationScreen({ region, detail, background, rows, query }: Props) {
   const { station, row, basis, coverage } = detail;
   const needle = needleOf(row);
-  const points = minimaPoints(detail.minima, basis.yearStart, row.years);
+  const points = comparedPoints(minimaPoints(detail.minima, basis.yearStart, row.years), row, basis.index);
+  // under Drying the figure shows the minima, whatever is compared
+  const scale = indexScale(row.drying ? 'minimum' : basis.index, basis.days, basis.units);
   const span = yearSpan(coverage.map((year) => year.year).concat(points.map((point) => point.year)));
   const place = placeOf(rows, station.code);
   const labelOf = (year: number) => lowFlowYearLabel(year, basis.yearStart);
   const changes = markedChanges(background.station.changes);
-  const levels = namedLevels(background.station.namedFlows, station.areaKm2);
-  const unit = UNIT_WORDS[basis.units].flow;
+  const levels = INDEX_FACTS[scale.index].isFlow ? namedLevels(background.station.namedFlows, station.areaKm2) : [];
   const mapQuery = new URLSearchParams(query);
   mapQuery.set('station', station.code);
   const table = (name: string) =>
@@ -91,9 +95,9 @@ export function StationScreen({ region, detail, background, rows, query }: Props
             <div>
               <h1>{station.name}</h1>
               <p className={styles.place}>
-                {row.rank === null ? needleWords(needle) : `ranked ${row.rank} of ${detail.ranked}`}
+                {row.rank === null ? needleWords(needle, basis.index) : `ranked ${row.rank} of ${detail.ranked}`}
                 <PlaceNote code={station.code} />
-                {row.rank !== null && ` · ${needleWords(needle)}`}
+                {row.rank !== null && ` · ${needleWords(needle, basis.index)}`}
               </p>
             </div>
           </div>
@@ -116,7 +120,7 @@ export function StationScreen({ region, detail, background, rows, query }: Props
 
         <section className={styles.figures} aria-labelledby="minima-title">
           <div className={styles.sectionHead}>
-            <h2 id="minima-title">Annual minima</h2>
+            <h2 id="minima-title">{INDEX_WORDS[scale.index].heading}</h2>
             <a className={ui.button} href={table('minima')} download>
               Minima CSV
             </a>
@@ -127,16 +131,15 @@ export function StationScreen({ region, detail, background, rows, query }: Props
             <>
               <MinimaFigure
                 points={points}
-                slope={row.trendOf === 'zero-days' ? null : detail.line}
+                slope={detail.line}
                 trend={row.trend}
-                factor={flowIn(1, basis.units) ?? 1}
-                unit={unit}
+                scale={scale}
                 days={basis.days}
                 changes={changes}
                 levels={levels}
                 yearStart={basis.yearStart}
                 span={span}
-                summary={`Annual ${basis.days}-day minima of ${station.name}, ${count(points.length, 'year')}.`}
+                summary={`${scale.axisName}, at ${station.name}: ${count(points.length, 'year')}.`}
               />
               <h3 className={styles.coverageTitle}>Days with a value</h3>
               <CoverageStrip
@@ -155,18 +158,25 @@ export function StationScreen({ region, detail, background, rows, query }: Props
                   codes come first.
                 </p>
               )}
-              <MinimaTable points={points} units={basis.units} days={basis.days} />
+              <MinimaTable points={points} units={basis.units} days={basis.days} scale={scale} />
             </>
           )}
         </section>
 
         <aside className={styles.side}>
-          <TrendFigures row={row} units={basis.units} labelOf={labelOf} />
+          <TrendFigures row={row} units={basis.units} scale={scale} labelOf={labelOf} />
           {row.trend !== null && (
             <SurenessFigures code={station.code} rank={row.rank} steadiness={percent(row.steadiness)} terms={terms} />
           )}
           <AlongRiver slug={region.slug} background={background} query={query} />
-          <Neighbours slug={region.slug} station={station} near={detail.neighbours} rows={rows} query={query} />
+          <Neighbours
+            slug={region.slug}
+            station={station}
+            near={detail.neighbours}
+            rows={rows}
+            index={basis.index}
+            query={query}
+          />
         </aside>
 
         <section className={styles.curve} aria-labelledby="curve-title">
