@@ -15,7 +15,7 @@ import type { Ranking } from '@/lib/region/ranking-types';
 import type { RegionalAnswers } from '@/lib/region/regional-types';
 import type { Alternative } from '@/lib/region/window-types';
 import type { GroundSource } from '../_map/use-ground.ts';
-import { figureWords } from '../_ranking/figure-words.ts';
+import { figureKind, figureWords } from '../_ranking/figure-words.ts';
 import { breaksFromText, breaksToText } from './_breaks/break-list.ts';
 import { breaksSentence } from './_breaks/break-words.ts';
 import { BreaksSection } from './_breaks/breaks-section.tsx';
@@ -32,6 +32,8 @@ import { evidenceAddresses } from './evidence-addresses.ts';
 import { evidenceState, type SectionId } from './evidence-state.ts';
 import { FallingNote } from './falling-note.tsx';
 import { type Answered, TheAnswer } from './the-answer.tsx';
+import { useAfter } from './use-after.ts';
+import { useOpenInPrint } from './use-open-in-print.ts';
 
 export interface EvidenceStation {
   code: string;
@@ -62,46 +64,56 @@ export function EvidenceScreen({ region, basis, own, usable, layers, counts, sta
   const [wanted, setWanted] = useState(false);
   const terms = useBasisKeys<Readonly<Record<string, string>>>(own);
   const askTerms = wanted || counts.ranked <= MOST_UNASKED;
+  useOpenInPrint();
   const to = evidenceAddresses(region.slug, usable ? query : '', state);
 
   // One after another, so that the first answer has the workers to itself.
   const regional = useLongResult<RegionalAnswers>(to.regional());
-  const windows = useLongResult<WindowCounts>(regional.pending ? null : to.windows());
-  const breaks = useLongResult<RegionBreaks>(regional.pending || windows.pending ? null : to.breaks());
-  const others = useLongResult<{ alternatives: Alternative[] }>(
-    askTerms && !regional.pending && !windows.pending && !breaks.pending ? to.alternatives() : null,
-  );
+  const windows = useLongResult<WindowCounts>(useAfter(regional) ? to.windows() : null);
+  const breaks = useLongResult<RegionBreaks>(useAfter(windows) ? to.breaks() : null);
+  const asksTerms = useAfter(breaks) && askTerms;
+  const others = useLongResult<{ alternatives: Alternative[] }>(asksTerms ? to.alternatives() : null);
   const alternatives = { ...others, value: others.value?.alternatives ?? null };
 
   const alpha = percent(basis.alpha, basis.alpha < 0.01 ? 1 : 0);
   const names = new Map(stations.map(({ code, name }) => [code, name]));
   const nameOf = (code: string) => names.get(code) ?? code;
-  const all = regional.value?.groups.find(({ id, set }) => id === 'all' && set === 'all');
+  const told = toldGroups(regional.value?.groups ?? []);
   const years = breaksFromText(state.breaks);
   const span = spanOf(windows.value, basis);
 
   const answers: Record<SectionId, Answered> = {
-    chance: said(regional, all?.sentences.chance, 'Playing the years again', 'Chance could not be told'),
-    common: said(regional, all?.sentences.kendall, 'Taking the stations together', 'It could not be tested'),
+    chance: said(
+      regional,
+      told.map(({ sentences }) => sentences.chance),
+      'Playing the years again',
+      'Chance could not be told',
+    ),
+    common: said(
+      regional,
+      told.map(({ sentences }) => sentences.kendall),
+      'Taking the stations together',
+      'The common trend could not be tested',
+    ),
     years: said(
       windows,
-      windows.value && windowsSentence(windows.value, alpha),
+      [windows.value && windowsSentence(windows.value, alpha)],
       'Testing every window of years',
       'The windows could not be tested',
     ),
     terms: askTerms
       ? said(
           alternatives,
-          alternatives.value && termsSentence(alternatives.value),
+          [alternatives.value && termsSentence(alternatives.value)],
           'Ranking on other terms',
           'The other terms could not be tried',
         )
-      : { sentence: null, instead: 'Not tried yet: with this many stations it takes a while.' },
+      : { sentences: [], instead: 'Not tried yet: with this many stations it takes a while.' },
     breaks: said(
       breaks,
-      breaks.value && breaksSentence(breaks.value),
+      [breaks.value && breaksSentence(breaks.value)],
       'Comparing before and after',
-      'They could not be compared',
+      'Before and after could not be compared',
     ),
   };
 
@@ -126,7 +138,7 @@ export function EvidenceScreen({ region, basis, own, usable, layers, counts, sta
           />
         }
       />
-      <CommonSection answer={regional} figure={figureWords(basis.rankBy, basis.units)} csv={to.regional('csv')} />
+      <CommonSection answer={regional} figure={figureWords(figureKind(basis), basis.units)} csv={to.regional('csv')} />
       <YearsSection
         answer={windows}
         figure={state.years}
@@ -151,9 +163,8 @@ export function EvidenceScreen({ region, basis, own, usable, layers, counts, sta
         labelOf={(year) => lowFlowYearLabel(year, basis.yearStart)}
         onYears={(chosen) => void set({ breaks: breaksToText(chosen) })}
         alpha={basis.alpha}
-        unit="m³/s"
+        units={basis.units}
         csv={to.breaks('csv')}
-        nameOf={nameOf}
         hrefOf={(code) => stationHref(region.slug, code, query)}
       />
       <Cautions />
@@ -161,23 +172,35 @@ export function EvidenceScreen({ region, basis, own, usable, layers, counts, sta
   );
 }
 
-/** The sentence where it is there; else how far it has come. */
+/** The sentences where they are there; else how far they have come. */
 function said(
   answer: Omit<LongResult<unknown>, 'valueOf'>,
-  sentence: string | null | undefined,
+  sentences: readonly (string | null | undefined)[],
   title: string,
   failed: string,
 ): Answered {
-  if (sentence && !answer.pending) return { sentence, instead: null };
-  const nothing = answer.value !== null && !answer.pending;
+  const known = [...new Set(sentences)].filter(
+    (sentence) => typeof sentence === 'string' && sentence !== '',
+  ) as string[];
+  if (known.length > 0 && !answer.pending) return { sentences: known, instead: null };
+  const silent = answer.value !== null && !answer.pending;
   return {
-    sentence: null,
-    instead: nothing ? (
+    sentences: [],
+    instead: silent ? (
       'Nothing can be said on these terms.'
     ) : (
       <LongWait answer={answer} title={title} failed={failed} brief />
     ),
   };
+}
+
+/** Which groups speak at the top: the one that was drawn, all stations, and the natural ones, in which climate shows
+ *  without management. */
+function toldGroups(groups: RegionalAnswers['groups']): RegionalAnswers['groups'] {
+  const whole = (id: string) => groups.filter((group) => group.id === id && group.set === 'all');
+  const all = whole('all');
+  const natural = whole('influence:natural').filter(({ ranked }) => ranked > 0 && ranked < (all[0]?.ranked ?? 0));
+  return [...whole('drawn'), ...all, ...natural];
 }
 
 /** Years that a break may lie between. */

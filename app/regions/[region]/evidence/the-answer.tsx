@@ -4,8 +4,8 @@ import styles from './evidence.module.css';
 import { SECTIONS, type SectionId } from './evidence-state.ts';
 
 export interface Answered {
-  /** the plain sentence; null while it is not there */
-  sentence: string | null;
+  /** the plain sentences, the most telling first; none while they are not there */
+  sentences: readonly string[];
   /** what stands in its place: that it is under way, was cancelled, or cannot be told */
   instead: ReactNode;
 }
@@ -24,10 +24,10 @@ export function TheAnswer({ of, answers }: { of: string; answers: Record<Section
               <a href={`#${id}`}>{label}</a>
             </dt>
             <dd aria-live="polite">
-              {answers[id].sentence === null ? (
+              {answers[id].sentences.length === 0 ? (
                 <div className={styles.instead}>{answers[id].instead}</div>
               ) : (
-                answers[id].sentence
+                answers[id].sentences.map((sentence) => <p key={sentence}>{sentence}</p>)
               )}
             </dd>
           </div>

@@ -1,9 +1,10 @@
 'use client';
-import { count } from '@/app/components/format';
+import { count, type Units } from '@/app/components/format';
 import { LongWait } from '@/app/components/long-wait';
 import type { LongResult } from '@/app/components/use-long-result';
 import type { RegionBreaks } from '@/lib/region/break-types';
 import styles from '../evidence.module.css';
+import table from '../evidence-table.module.css';
 import { Section } from '../section.tsx';
 import { BreakChooser } from './break-chooser.tsx';
 import { BreakTable } from './break-table.tsx';
@@ -17,16 +18,15 @@ interface Props {
   labelOf(year: number): string;
   onYears(years: number[]): void;
   alpha: number;
-  unit: string;
+  units: Units;
   csv: string | null;
-  nameOf(code: string): string;
   hrefOf(code: string): string;
 }
 
 /** Levels before and after breaks that were known beforehand. */
-export function BreaksSection({ answer, years, span, labelOf, onYears, alpha, unit, csv, nameOf, hrefOf }: Props) {
+export function BreaksSection({ answer, years, span, labelOf, onYears, alpha, units, csv, hrefOf }: Props) {
   const { value } = answer;
-  const problems = value?.stations.filter(({ problem }) => problem !== null).length ?? 0;
+  const leftOut = value?.stations.flatMap(({ name, leftOut }) => leftOut.map((one) => ({ name, ...one }))) ?? [];
   return (
     <Section
       id="breaks"
@@ -52,8 +52,19 @@ export function BreaksSection({ answer, years, span, labelOf, onYears, alpha, un
               ))}
             </ul>
           )}
-          <BreakTable stations={value.stations} alpha={alpha} nameOf={nameOf} hrefOf={hrefOf} unit={unit} />
-          {problems > 0 && <p className={styles.note}>{count(problems, 'station')} could not be compared.</p>}
+          <BreakTable stations={value.stations} alpha={alpha} units={units} hrefOf={hrefOf} />
+          {leftOut.length > 0 && (
+            <details className={table.details}>
+              <summary>{count(leftOut.length, 'break has', 'breaks have')} too few usable years on a side</summary>
+              <ul className={own.summary}>
+                {leftOut.map(({ name, break: known, reason }) => (
+                  <li key={`${name} ${known.year}`}>
+                    {name}, {known.words}: {reason}
+                  </li>
+                ))}
+              </ul>
+            </details>
+          )}
         </div>
       )}
     </Section>

@@ -8,6 +8,7 @@ import type { LongResult } from '@/app/components/use-long-result';
 import type { ChanceMethod, RegionalAnswers } from '@/lib/region/regional-types';
 import styles from '../evidence.module.css';
 import { Section } from '../section.tsx';
+import { shownGroups } from '../shown-groups.ts';
 import { ChanceTable } from './chance-table.tsx';
 import { DependentPairs } from './dependent-pairs.tsx';
 import { GroupSentences } from './group-sentences.tsx';
@@ -53,7 +54,7 @@ export function ChanceSection({ answer, method, onMethod, alpha, csv, nameOf, dr
       {value && (
         <div className={styles.body} aria-busy={answer.pending}>
           {value.refused !== null && <WarningNote>{value.refused}</WarningNote>}
-          <ChanceTable groups={value.groups} alpha={alpha} />
+          <ChanceTable groups={shownGroups(value.groups)} alpha={alpha} />
           {value.trueLevel && (
             <p className={styles.note}>
               Where no station has a trend this finds one all the same in{' '}
@@ -62,8 +63,8 @@ export function ChanceSection({ answer, method, onMethod, alpha, csv, nameOf, dr
               another question, answered in the second sentence of each group.
             </p>
           )}
+          {value.drying && <p className={styles.note}>{value.drying.sentence}</p>}
           {drawing}
-          <h3>In words</h3>
           <GroupSentences groups={value.groups} />
           <DependentPairs pairs={value.pairs} nameOf={nameOf} />
         </div>

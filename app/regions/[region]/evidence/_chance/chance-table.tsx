@@ -13,8 +13,10 @@ export function ChanceTable({ groups, alpha }: { groups: readonly GroupAnswer[];
     <ScrollFrame className={table.scroll} label="Stations falling and rising beside chance, by group">
       <table className={table.table}>
         <caption>
-          Stations whose own p is under {alpha}, counted by group, beside the most that chance brings in 95 of 100
-          regions without any trend
+          <span>
+            Stations whose own p is under {alpha}, counted by group, beside the most that chance brings in 95 of 100
+            regions without any trend
+          </span>
         </caption>
         <thead>
           <tr>

@@ -16,7 +16,8 @@ export function DependentPairs({ pairs, nameOf }: Props) {
       <summary>The independent set leaves out {count(pairs.length, 'station')} that share water with another</summary>
       <p className={table.note}>
         Of two stations on one river whose areas are more than half alike, or whose flows go together (correlation above
-        0.95 once the season is taken out), the longer record is kept.
+        0.95 once the season is taken out), the longer record is kept. A group without a row of its own for the
+        independent set loses nobody by it, or everybody.
       </p>
       <ScrollFrame className={table.scroll} label="Stations that share water">
         <table className={table.table}>

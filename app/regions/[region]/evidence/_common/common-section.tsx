@@ -9,6 +9,7 @@ import styles from '../evidence.module.css';
 import table from '../evidence-table.module.css';
 import { Section } from '../section.tsx';
 import { SetWords } from '../set-words.tsx';
+import { shownGroups } from '../shown-groups.ts';
 import { SignBar } from './sign-bar.tsx';
 
 interface Props {
@@ -34,7 +35,9 @@ export function CommonSection({ answer, figure, csv }: Props) {
         <div className={styles.body} aria-busy={answer.pending}>
           <ScrollFrame className={table.scroll} label="Regional Kendall test by group">
             <table className={table.table}>
-              <caption>Regional Kendall test of every group, with the signs of its stations’ slopes</caption>
+              <caption>
+                <span>Regional Kendall test of every group, with the signs of its stations’ slopes</span>
+              </caption>
               <thead>
                 <tr>
                   <th scope="col">Stations</th>
@@ -60,7 +63,7 @@ export function CommonSection({ answer, figure, csv }: Props) {
                 </tr>
               </thead>
               <tbody>
-                {value.groups.map((group) => (
+                {shownGroups(value.groups).map((group) => (
                   <CommonRow key={`${group.id} ${group.set}`} group={group} figure={figure} />
                 ))}
               </tbody>

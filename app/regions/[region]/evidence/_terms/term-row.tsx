@@ -1,6 +1,6 @@
 'use client';
 import { useId, useState } from 'react';
-import { fixed } from '@/app/components/format';
+import { fixed, MISSING } from '@/app/components/format';
 import ui from '@/app/components/ui.module.css';
 import type { Alternative } from '@/lib/region/window-types';
 import table from '../evidence-table.module.css';
@@ -44,7 +44,7 @@ export function TermRow({ alternative, onUse, movementOf }: Props) {
           <>
             <td className={table.number}>{fixed(tau, 2)}</td>
             <td className={table.number}>{fixed(movedFar)}</td>
-            <td className={table.words}>{furthest === null ? 'nobody' : movementWords(furthest)}</td>
+            <td className={table.words}>{furthest ? movementWords(furthest) : tau === null ? MISSING : 'nobody'}</td>
             <td>
               <span className={styles.ways}>
                 <button

@@ -50,7 +50,9 @@ export function TermsSection({ answer, asked, stations, onAsk, onUse, movementOf
           <ScrollFrame className={table.scroll} label="The ranking under other terms">
             <table className={table.table}>
               <caption>
-                Stations falling and rising by adjusted p, and how the places differ from those on the terms at hand
+                <span>
+                  Stations falling and rising by adjusted p, and how the places differ from those on the terms at hand
+                </span>
               </caption>
               <thead>
                 <tr>

@@ -17,8 +17,10 @@ export function WindowTable({ counts, alpha }: { counts: WindowCounts; alpha: st
         <ScrollFrame className={styles.tall} label="Stations with a falling slope by start and end year">
           <table className={table.table}>
             <caption>
-              Stations with a falling slope in percent, and how many fall and rise at the {alpha} level of how many:
-              start year at the side, end year above
+              <span>
+                Stations with a falling slope in percent, and how many fall and rise at the {alpha} level of how many:
+                start year at the side, end year above
+              </span>
             </caption>
             <thead>
               <tr>
