@@ -1,7 +1,7 @@
 /** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
  *  worker starts quickly. */
 export { annualIndex } from './tasks/annual-index.ts';
-export { permuteYears, seriesForChance } from './tasks/chance.ts';
+export { permuteYears, seriesForChance, sieveYears } from './tasks/chance.ts';
 export { checkRecords } from './tasks/check-records.ts';
 export { commonPeriods } from './tasks/common-periods.ts';
 export { correlatedFlows } from './tasks/correlated-flows.ts';

@@ -19,16 +19,20 @@ export interface ChanceSeries {
   lag1: Float64Array;
   /** smallest S that each station's test rejects where nothing carries over from year to year (factor 1) */
   critical: Float64Array;
+  /** the same with the serial factor that the ranking used, and without ties: for replicates that carry over */
+  corrected: Float64Array;
 }
 
 /** What chance reads of a row of the ranking. */
-export type TestedRow = Pick<RankingRow, 'code' | 'rank' | 'years' | 'values' | 'trendOf'>;
+export type TestedRow = Pick<RankingRow, 'code' | 'rank' | 'years' | 'values' | 'trendOf' | 'serialFactor'>;
 
 /** Takes the ranked stations of a ranking, in its order. */
 export function chanceSeries(
   rows: readonly TestedRow[],
   basis: Pick<Basis, 'alpha' | 'serialCorrection'>,
 ): ChanceSeries {
+  const { alpha } = basis;
+  const exact = basis.serialCorrection === 'none';
   const ranked = rows.filter(({ rank }) => rank !== null);
   const tested = ranked.map(testedSeries);
   const years = Int32Array.from(new Set(tested.flatMap((each) => each.years))).sort();
@@ -48,8 +52,11 @@ export function chanceSeries(
     lag1: Float64Array.from(tested, (each, i) => lag1OfRanks({ ...each, slope: slopes[i] })),
     critical: Float64Array.from(tested, ({ values }) => {
       const { variance, tiedPairs } = varianceOfS(Float64Array.from(values));
-      const exact = basis.serialCorrection === 'none';
-      return criticalS({ n: values.length, variance, alpha: basis.alpha, exact, tied: tiedPairs > 0 });
+      return criticalS({ n: values.length, variance, alpha, exact, tied: tiedPairs > 0 });
+    }),
+    corrected: Float64Array.from(tested, ({ values: { length: n } }, i) => {
+      const variance = (n * (n - 1) * (2 * n + 5)) / 18;
+      return criticalS({ n, variance, alpha, varianceFactor: ranked[i].serialFactor ?? 1, exact });
     }),
   };
 }

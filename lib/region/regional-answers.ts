@@ -14,15 +14,19 @@ import {
   chanceSentence,
   discoveriesSentence,
   dryingSentence,
+  emptySentence,
   kendallSentence,
-  noneRankedSentence,
   refusalSentence,
+  singleSentence,
 } from './regional-sentences.ts';
 import type { ChanceMethod, GroupAnswer, RegionalAnswers, RegionalKendall } from './regional-types.ts';
 import { trueLevelOf } from './true-level.ts';
 
 /** Without a serial correction, chance is told only up to this median lag-1 correlation. */
 const MOST_CARRY_OVER = 0.1;
+
+/** A single station is no group: its own test says what there is to say. */
+const FEWEST_OF_A_GROUP = 2;
 
 /** What chance does to the ranked stations of a region. */
 export interface Chance {
@@ -55,7 +59,7 @@ export function regionalAnswers(
   const lasting = ranked.map((row): LastingStation => ({ ...row, valuedDays: valuedDays.get(row.code) ?? 0 }));
   const { kept, pairs } = independentSet(lasting, correlated);
   const medianR1 = medianLag1(chance.lag1);
-  const refused = refusalOf(basis, medianR1);
+  const refused = refusalOf(basis, chance.method, medianR1);
   const places = new Map(ranked.map(({ code }, i) => [code, i]));
   const answer = (group: Group, set: GroupAnswer['set']) =>
     answerOf({ ...group, set, refused, ranked: group.rows.length }, chance, places, basis, counts.ranked);
@@ -75,8 +79,10 @@ export function regionalAnswers(
   };
 }
 
-function refusalOf({ serialCorrection }: ResolvedBasis, medianR1: number | null): string | null {
-  if (serialCorrection !== 'none' || medianR1 === null || !(medianR1 > MOST_CARRY_OVER)) return null;
+/** The sieve keeps the carry-over that a test without correction is misled by, and needs no refusal. */
+function refusalOf({ serialCorrection }: ResolvedBasis, method: ChanceMethod, medianR1: number | null): string | null {
+  if (method === 'sieve' || serialCorrection !== 'none' || medianR1 === null || !(medianR1 > MOST_CARRY_OVER))
+    return null;
   return refusalSentence(medianR1, MOST_CARRY_OVER);
 }
 
@@ -91,7 +97,7 @@ function answerOf(
   const members = rows.map(({ code }) => places.get(code)!);
   const significant = (sign: number) =>
     rows.filter(({ z, p }) => p !== null && p < basis.alpha && Math.sign(z ?? 0) === sign).length;
-  const byChance = ranked > 0 && refused === null ? countsByReplicate(bits, members) : null;
+  const byChance = ranked >= FEWEST_OF_A_GROUP && refused === null ? countsByReplicate(bits, members) : null;
   const falling = byChance && beyondChance(byChance.falling, significant(-1));
   const rising = byChance && beyondChance(byChance.rising, significant(1));
   const discoveries = {
@@ -104,7 +110,8 @@ function answerOf(
     basis,
   );
   const signs = signsOf(rows);
-  const none = noneRankedSentence(group);
+  const unsaid = ranked === 0 ? emptySentence(group) : singleSentence(group);
+  const chance = falling && rising ? chanceSentence(group, falling, rising, basis) : null;
   return {
     id: group.id,
     label: group.label,
@@ -118,16 +125,17 @@ function answerOf(
     signs,
     kendall,
     sentences: {
-      chance: falling && rising ? chanceSentence(group, falling, rising, basis) : (refused ?? none),
-      kendall: kendall ? kendallSentence(group, kendall, signs, basis) : none,
-      discoveries: ranked > 0 ? discoveriesSentence(group, discoveries, rankedInAll, basis) : none,
+      chance: chance ?? (ranked < FEWEST_OF_A_GROUP || refused === null ? unsaid : refused),
+      kendall: kendall ? kendallSentence(group, kendall, signs, basis) : unsaid,
+      discoveries: ranked > 0 ? discoveriesSentence(group, discoveries, rankedInAll, basis) : unsaid,
     },
   };
 }
 
-/** Regional Kendall test of a group with the covariance of its stations and the carry-over of their mean; null for none. */
+/** Regional Kendall test of a group with the covariance of its stations and the carry-over of their mean; null for none
+ *  and for one. */
 function kendallOf(rows: readonly RankingRow[], lag1: readonly number[], basis: ResolvedBasis): RegionalKendall | null {
-  if (rows.length === 0) return null;
+  if (rows.length < FEWEST_OF_A_GROUP) return null;
   const sites = rows.map(testedSeries);
   const told = lag1.filter((r) => !Number.isNaN(r));
   const r1 = told.length === 0 ? 0 : cutLag1(told.reduce((sum, r) => sum + r, 0) / told.length);

@@ -56,10 +56,9 @@ export function chanceSentence(
 ): string {
   const verbs = VERBS[index];
   const [fall, ...falls] = numberOf(falling.count, verbs.falls).split(' ');
-  const weather = group.ranked === 1 ? 'in 95 of 100 cases' : 'in 95 of 100 regions that share weather as these do';
   return (
     `${capital(fall)} of ${stations(group.ranked, group)} ${falls.join(' ')} at the ${percent(alpha)} level; ` +
-    `with no trend anywhere ${upTo(falling.bound)} would, ${weather}. ` +
+    `with no trend anywhere ${upTo(falling.bound)} would, in 95 of 100 regions that share weather as these do. ` +
     `${capital(numberOf(rising.count, verbs.rises))}; ${upTo(rising.bound)} would.`
   );
 }
@@ -77,7 +76,7 @@ export function kendallSentence(
   const level = signs.zero > 0 ? `, ${signs.zero} neither way` : '';
   const median = medianFigure === null ? '' : `; median ${signed(medianFigure)} ${figureWords(basis)}`;
   return (
-    `Taken together, ${stations(group.ranked, group)} ${group.ranked === 1 ? 'has' : 'have'} ` +
+    `Taken together, ${stations(group.ranked, group)} have ` +
     `${found ? `one common trend ${way}` : 'no common trend'} at the ${percent(basis.alpha)} level ` +
     `(regional Kendall z ${signed(z)}, p ${probability(p)}${median}): ` +
     `${signs.negative} slope down, ${signs.positive} up${level}.${found ? '' : ' This does not show that nothing changed.'}`
@@ -109,9 +108,16 @@ export function discoveriesSentence(
   );
 }
 
-/** Why nothing is said of a group. */
-export function noneRankedSentence({ label, set }: Named): string {
-  return `None of the ${set === 'independent' ? 'independent ' : ''}${label} is ranked, so nothing can be said of them together.`;
+/** Why nothing is said of a group without a station. */
+export function emptySentence({ label, set }: Named): string {
+  if (set === 'all') return `None of the ${label} is ranked, so nothing can be said of them together.`;
+  return `The independent set holds none of the ${label}: nothing can be said of them together.`;
+}
+
+/** Why nothing is said of a group of one. Example: "Only 1 natural station is ranked, and a single station is no group: its
+ *  own p says what there is to say." */
+export function singleSentence(group: Named): string {
+  return `Only ${stations(1, group)} is ranked, and a single station is no group: its own p says what there is to say.`;
 }
 
 /** Why the count is refused. */
@@ -119,7 +125,7 @@ export function refusalSentence(medianR1: number, limit: number): string {
   return (
     `Chance is not told: the basis corrects for no serial correlation, yet low flows carry over from year to year here ` +
     `(median lag-1 correlation ${plain(medianR1)}, above ${limit}), so that more stations would be counted than have a trend: ` +
-    'in 13 to 23 of 100 regions without any trend the count would pass for more than chance. Choose another serial correction.'
+    'in 13 to 23 of 100 regions without any trend the count would pass for more than chance. Choose another serial correction, or imitate chance with carry-over (the sieve).'
   );
 }
 

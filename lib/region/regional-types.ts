@@ -37,13 +37,14 @@ export interface GroupAnswer {
   set: 'all' | 'independent';
   codes: string[];
   ranked: number;
-  /** null where there is no ranked station, or chance cannot be told (see `refused`) */
+  /** null where fewer than two stations are ranked, or chance cannot be told (see `refused`) */
   falling: BeyondChance | null;
   rising: BeyondChance | null;
   /** stations falling and rising by adjusted p (over the whole region), a sentence of its own */
   discoveries: { falling: number; rising: number };
   /** stations whose slope is negative, zero, positive */
   signs: { negative: number; zero: number; positive: number };
+  /** null where fewer than two stations are ranked */
   kendall: RegionalKendall | null;
   /** in plain words with figures, one sentence each: beyond chance, one common trend, discoveries */
   sentences: { chance: string; kendall: string; discoveries: string };

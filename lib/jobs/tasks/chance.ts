@@ -1,5 +1,6 @@
 import type { Basis } from '../../basis.ts';
 import { type ChanceSeries, chanceSeries, type TestedRow } from '../../region/chance-series.ts';
+import { type SievedChanceTask, sievedChance } from '../../region/sieved-chance.ts';
 import { type PermutedKendallTask, permutedKendall } from '../../statistics/permuted-kendall.ts';
 import type { TrendBits } from '../../statistics/trend-bits.ts';
 
@@ -14,4 +15,9 @@ export function seriesForChance(task: {
 /** Tries some stations' series under random orders of the years. */
 export function permuteYears(task: PermutedKendallTask): TrendBits {
   return permutedKendall(task);
+}
+
+/** Tries some stations' series on years drawn anew, with their carry-over. */
+export function sieveYears(task: SievedChanceTask): TrendBits {
+  return sievedChance(task);
 }
