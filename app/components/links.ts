@@ -94,6 +94,21 @@ export function deriveHref(slug: string, from: string | null, query: URLSearchPa
   return withQuery(`/regions/${encodeURIComponent(slug)}/derive`, out);
 }
 
+/** The page on which a station is compared with reference stations.
+ *  @param references  their codes; none: those that the page begins with */
+export function pairHref(
+  slug: string,
+  station: string | null,
+  query: URLSearchParams | string = '',
+  references: readonly string[] = [],
+): string {
+  const out = carried(query);
+  out.delete('station');
+  if (station !== null) out.set('station', station);
+  if (references.length > 0) out.set('with', references.map(encodeURIComponent).join(','));
+  return withQuery(`/regions/${encodeURIComponent(slug)}/pair`, out);
+}
+
 /** The address of an API table with only the basis along. */
 export function apiHref(slug: string, table: string, query: URLSearchParams | string, format?: string): string {
   const from = new URLSearchParams(query);

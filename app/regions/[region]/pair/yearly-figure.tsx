@@ -1,0 +1,159 @@
+'use client';
+import { scaleLinear } from 'd3-scale';
+import { useMemo } from 'react';
+import { ChangeMarks } from '@/app/components/change-marks/change-marks';
+import {
+  type MarkedChange,
+  placeChanges,
+  tabsHeight,
+  yearPosition,
+} from '@/app/components/change-marks/marked-changes';
+import { tickText } from '@/app/components/duration-figure/figure-text';
+import { useWidth } from '@/app/components/use-width';
+import { yearTicks } from '@/app/components/year-ticks';
+import type { SlopeLine } from '@/lib/jobs/types';
+import { PLOT } from '../stations/[code]/plot-box';
+import { useYearReader } from '../stations/[code]/year-reader';
+import { YearSlider } from '../stations/[code]/year-slider';
+import styles from './pair-figures.module.css';
+
+export interface YearlyPoint {
+  year: number;
+  value: number;
+  /** what is read out of it */
+  text: string;
+}
+
+interface Props {
+  points: readonly YearlyPoint[];
+  slope: SlopeLine | null;
+  tone: 'dry' | 'wet' | 'none';
+  /** the level at which nothing differs, and what it is called */
+  level: { value: number; text: string };
+  axisName: string;
+  changes: readonly MarkedChange[];
+  yearStart: number;
+  summary: string;
+}
+
+const HEIGHT = 280;
+
+/** One figure a year on a real time axis, joined where years follow one another, with its slope line and interval. */
+export function YearlyFigure({ points, slope, tone, level, axisName, changes, yearStart, summary }: Props) {
+  const [frame, width] = useWidth<HTMLDivElement>(760);
+  const right = Math.max(PLOT.left + 1, width - PLOT.right);
+  const bottom = HEIGHT - PLOT.bottom;
+  const span: [number, number] = [points[0].year, points[points.length - 1].year];
+  const { x, y, marks, top } = useMemo(() => {
+    const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
+    const marks = placeChanges(changes, (day) => x(yearPosition(day, yearStart)), [PLOT.left, right]);
+    const top = PLOT.top + tabsHeight(marks);
+    const values = [0, level.value, ...points.map(({ value }) => value), ...(slope?.fitted ?? [])];
+    const y = scaleLinear([Math.min(...values), Math.max(...values)], [bottom, top]).nice(5);
+    return { x, y, marks, top };
+  }, [points, slope, level.value, changes, yearStart, right, bottom, span[0], span[1]]);
+  const reader = useYearReader(points.map(({ year }) => year));
+  const current = points.find(({ year }) => year === reader.picked) ?? null;
+
+  return (
+    <div ref={frame} className={styles.frame} data-tone={tone}>
+      <p className={styles.axisName} aria-hidden="true">
+        {axisName}
+      </p>
+      <YearSlider
+        label={summary}
+        span={span}
+        year={reader.picked}
+        text={current?.text ?? null}
+        yearAt={(pixels) => x.invert(pixels)}
+        onYear={reader.pickNearest}
+        onKeyDown={reader.onKeyDown}
+        onLeave={reader.clear}
+      >
+        <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
+          {y.ticks(5).map((value) => (
+            <g key={value} className={styles.grid}>
+              <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
+              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
+                {tickText(value).replace('-', '−')}
+              </text>
+            </g>
+          ))}
+          {yearTicks(span[0], span[1], right - PLOT.left).map((year) => (
+            <g key={year} className={styles.ticks}>
+              <line x1={x(year)} x2={x(year)} y1={bottom} y2={bottom + 5} />
+              <text x={x(year)} y={bottom + 19} textAnchor="middle">
+                {year}
+              </text>
+            </g>
+          ))}
+          <line className={styles.level} x1={PLOT.left} x2={right} y1={y(level.value)} y2={y(level.value)} />
+          <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
+          {slope && <Slope slope={slope} x={x} y={y} top={top} bottom={bottom} />}
+          {runsOf(points).map((run) => (
+            <path
+              key={run[0].year}
+              className={styles.joined}
+              d={`M${run.map(({ year, value }) => `${x(year).toFixed(1)},${y(value).toFixed(1)}`).join('L')}`}
+            />
+          ))}
+          {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
+          {points.map(({ year, value }) => (
+            <circle
+              key={year}
+              className={styles.point}
+              cx={x(year)}
+              cy={y(value)}
+              r={year === current?.year ? 5 : 3.25}
+            />
+          ))}
+        </svg>
+      </YearSlider>
+      <p className={styles.readout}>
+        {current ? (
+          current.text
+        ) : (
+          <span className={styles.key}>
+            Thick line: slope with its 95 % interval. Dashed: {level.text}. The arrow keys read single years.
+          </span>
+        )}
+      </p>
+    </div>
+  );
+}
+
+type Position = (value: number) => number;
+
+interface SlopeProps {
+  slope: SlopeLine;
+  x: Position;
+  y: Position;
+  top: number;
+  bottom: number;
+}
+
+function Slope({ slope, x, y, top, bottom }: SlopeProps) {
+  const [left, right] = [x(slope.firstYear), x(slope.lastYear)];
+  const inside = (value: number) => Math.min(bottom, Math.max(top, y(value)));
+  return (
+    <g className={styles.slope}>
+      {slope.low && slope.high && (
+        <path
+          className={styles.interval}
+          d={`M${left},${inside(slope.low[0])}L${right},${inside(slope.low[1])}V${inside(slope.high[1])}L${left},${inside(slope.high[0])}Z`}
+        />
+      )}
+      <line x1={left} x2={right} y1={y(slope.fitted[0])} y2={y(slope.fitted[1])} />
+    </g>
+  );
+}
+
+/** Years that follow one another, as runs. */
+function runsOf(points: readonly YearlyPoint[]): YearlyPoint[][] {
+  const runs: YearlyPoint[][] = [];
+  points.forEach((point, i) => {
+    if (i === 0 || point.year !== points[i - 1].year + 1) runs.push([]);
+    runs[runs.length - 1].push(point);
+  });
+  return runs;
+}
