@@ -53,8 +53,8 @@ export function BreaksSection({ slug, code, data, yearStart, alpha }: Props) {
           span={data.span}
           labelOf={labelOf}
           onChange={(years) => void setText(breaksToText(years), { history: 'push' })}
-          none="No break is chosen: the years are parted at the station’s own dated changes."
-          back="Only the station’s own changes"
+          none="No break is chosen: the years are parted at the station’s own dated changes (a dam, an abstraction, a new weir)."
+          back="Back to the station’s own changes"
         />
         {problem !== null && <ErrorNote title="Before and after could not be compared">{problem}</ErrorNote>}
         {!value && problem === null && <Loading>Comparing before and after…</Loading>}
@@ -73,9 +73,7 @@ export function BreaksSection({ slug, code, data, yearStart, alpha }: Props) {
               </p>
             )}
             <p className={styles.suggested}>
-              {value.suggested
-                ? `${value.suggested.words} It is shown, and never tested: a test at a break that the same figures suggested finds one too often.`
-                : 'These figures suggest no break.'}
+              {value.suggested ? value.suggested.words : 'These figures suggest no break.'}
             </p>
           </div>
         )}
