@@ -5,9 +5,6 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import * as z from 'zod';
-import { MONTHS } from './calendar/months.ts';
-
-export { MONTHS };
 
 /** Else zod tries to make code at run time, which the pages' Content-Security-Policy forbids and reports. */
 z.config({ jitless: true });
@@ -222,6 +219,21 @@ export function basisText(basis: Basis | ResolvedBasis, keys: readonly BasisKey[
 export function basisHash(basis: Basis): string {
   return bytesToHex(sha256(utf8ToBytes(basisText(basis))));
 }
+
+export const MONTHS = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const;
 
 /** A run of the basis sentence; `term` names the keys that this run speaks of and that a person may edit there. */
 export interface SentencePart {

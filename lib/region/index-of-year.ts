@@ -1,5 +1,4 @@
-import type { Basis } from '../basis.ts';
-import { MONTHS } from '../calendar/months.ts';
+import { type Basis, MONTHS } from '../basis.ts';
 
 /** One year's figure, by name, with the months that it is of. Example: "May–October 7-day minimum" */
 export function indexOfYear({

@@ -1,8 +1,7 @@
 import { tickText } from '@/app/components/duration-figure/figure-text';
 import { flowIn, MISSING, significant, UNIT_WORDS, type Units } from '@/app/components/format';
 import type { AnnualIndexName } from '@/lib/basis';
-import { dateOfDay, dayNumber } from '@/lib/calendar/day';
-import { MONTHS } from '@/lib/calendar/months';
+import { DAY_SECONDS, dateOfDay, dayNumber } from '@/lib/calendar/day';
 import { INDEX_FACTS } from '@/lib/region/index-facts';
 
 /** How the annual figures of an index are shown. */
@@ -64,19 +63,22 @@ export function changeText(value: number | null, scale: IndexScale): string {
 /** Unit of a change, before "per decade"; empty for a number without unit. */
 export const changeUnit = ({ index, unit }: IndexScale): string => (index === 'minimum-date' ? 'days' : unit);
 
+// by a formatter, for the names of months stand beside the whole schema, which no figure should load
+const DAY_AND_MONTH = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', timeZone: 'UTC' });
+const SHORTLY = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', timeZone: 'UTC' });
+
 /** A day on the line of unrolled dates as day and month; below 1 is the year before, above 365 the year after.
  *  Example: −5 → "26 December" */
 export function dateText(value: number): string {
-  const { day, month } = dateOfDay(ordinaryDay(value));
-  return `${day} ${MONTHS[month - 1]}`;
+  return DAY_AND_MONTH.format(ordinaryDay(value) * DAY_SECONDS * 1000);
 }
 
 /** Marks of an axis of dates: firsts of months, at most seven. */
 export function dateTicks(low: number, high: number): { value: number; text: string }[] {
   const firsts: { value: number; text: string }[] = [];
   for (let value = Math.ceil(low); value <= high; value++) {
-    const { day, month } = dateOfDay(ordinaryDay(value));
-    if (day === 1) firsts.push({ value, text: `1 ${MONTHS[month - 1].slice(0, 3)}` });
+    const day = ordinaryDay(value);
+    if (dateOfDay(day).day === 1) firsts.push({ value, text: SHORTLY.format(day * DAY_SECONDS * 1000) });
   }
   const step = Math.ceil(firsts.length / 7);
   return firsts.filter((_, i) => i % step === 0);
