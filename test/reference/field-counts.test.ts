@@ -1,0 +1,41 @@
+import { describe, expect, test } from 'vitest';
+import { beyondChance } from '../../lib/region/beyond-chance.ts';
+import { criticalS } from '../../lib/statistics/critical-s.ts';
+import { permutedKendall } from '../../lib/statistics/permuted-kendall.ts';
+import { randomStream } from '../../lib/statistics/random.ts';
+import { countsByReplicate } from '../../lib/statistics/trend-bits.ts';
+import fieldCounts from './field-counts.json' with { type: 'json' };
+
+const YEARS = 60;
+const SERIES = 80;
+const REPLICATES = 4000;
+
+/** Falling by a two-sided test at 10 % is a local test at 5 %. */
+const [{ input, expected }] = fieldCounts.cases as [
+  {
+    input: { independent_tests: number[] };
+    expected: { least_count: number[]; probability_of_that_count_or_more: number[] };
+  },
+];
+
+/** Counts of series that share no weather: binomial, but for the chance correlation of random series. */
+const random = randomStream('independent series');
+const series = Array.from({ length: SERIES }, () => Float64Array.from({ length: YEARS }, () => random.uniform()));
+const variance = (YEARS * (YEARS - 1) * (2 * YEARS + 5)) / 18;
+const critical = series.map(() => criticalS({ n: YEARS, variance, alpha: 0.1 }));
+const bits = permutedKendall({ series, critical, replicates: REPLICATES, seed: 'independent series' });
+
+describe('counts of independent series under random orders are those of Livezey & Chen 1983', () => {
+  // numbers of tests whose count needed does not hang on the last percent of the probability
+  test.each([5, 10, 15, 20, 25, 80])('with %i tests', (tests) => {
+    const place = input.independent_tests.indexOf(tests);
+    const counts = countsByReplicate(
+      bits,
+      Array.from({ length: tests }, (_, i) => i),
+    ).falling;
+    const { bound, expected: mean } = beyondChance(counts, 0);
+    // one more than the bound is the least count that is too many
+    expect(bound + 1).toBe(expected.least_count[place]);
+    expect(mean).toBeCloseTo(0.05 * tests, tests < 20 ? 1 : 0);
+  });
+});
