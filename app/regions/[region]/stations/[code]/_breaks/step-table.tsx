@@ -49,7 +49,8 @@ export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: P
               </td>
               <td>
                 {pValue(step.p)}
-                <Quiet>{verdict(step.p, step.difference, alpha)}</Quiet>
+                {steps.length > 1 && <Quiet>adjusted {pValue(step.pAdjusted)}</Quiet>}
+                <Quiet>{verdict(step.pAdjusted, step.difference, alpha)}</Quiet>
               </td>
               <td className={styles.words}>{step.warning || MISSING}</td>
             </tr>
@@ -58,7 +59,7 @@ export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: P
       </table>
       <p className={styles.caption}>
         Difference: Hodges–Lehmann, after less before, with its 95 % interval. p: rank-sum test, its variance widened
-        for carry-over from year to year.
+        for carry-over from year to year, adjusted for as many breaks as are tested here.
       </p>
     </ScrollFrame>
   );
