@@ -1,5 +1,6 @@
 import type { RankingRow } from '../region/ranking-types.ts';
 import { type Column, csvTable } from './csv.ts';
+import { INDEX_COLUMNS } from './ranking-index-columns.ts';
 import { STATION_CODE } from './shared-columns.ts';
 
 const M3S = 'm³/s';
@@ -70,7 +71,8 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
     name: 'slope_m3s_per_decade',
     datatype: 'number',
     unit: `${M3S} per decade`,
-    description: 'slope of the annual minima, median of all pairs of years',
+    description:
+      'slope of the annual minima, Q95 or mean flows, median of all pairs of years; empty where no flow is compared',
     value: (row) => row.slopePerDecade,
   },
   {
@@ -91,7 +93,7 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
     name: 'slope_percent_per_decade',
     datatype: 'number',
     unit: '% per decade',
-    description: 'slope in percent of the mean minimum',
+    description: 'slope in percent of the mean of what is compared; empty for zero-flow days and for dates',
     value: (row) => row.percentPerDecade,
   },
   { name: 'kendall_tau', datatype: 'number', description: 'Kendall’s tau-b with the years', value: (row) => row.tau },
@@ -112,13 +114,14 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
   {
     name: 'trend',
     datatype: 'string',
-    description: 'falling, rising or none: by p_adjusted against alpha',
+    description: 'falling, rising or none: by p_adjusted against alpha; falling is drier, and earlier for dates',
     value: (row) => row.trend,
   },
   {
     name: 'trend_of',
     datatype: 'string',
-    description: 'what z, p, tau and trend speak of: minima, or zero-days where zero flow is too frequent for a slope',
+    description:
+      'what z, p, tau and trend speak of: minima, or the index compared (of minus the index for zero-flow-days and deficit, for more of them is drier); zero-days where zero flow is too frequent for a slope, of minus the days',
     value: (row) => row.trendOf,
   },
   {
@@ -134,6 +137,7 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
     value: (row) => row.unrankedReason,
   },
   { name: 'note', datatype: 'string', description: 'what a reader of this row must know', value: (row) => row.note },
+  ...INDEX_COLUMNS,
 ];
 
 /** The ranking as CSV, ranked rows first, in the order given; every row given is written. */

@@ -27,5 +27,6 @@ function stationOf(row: RankingRow): Record<string, unknown> {
     variance_factor: row.serialFactor,
     years: row.years,
     minima_m3s: row.minima,
+    index_values: row.values,
   });
 }

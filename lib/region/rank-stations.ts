@@ -111,6 +111,7 @@ function entryOf({ station, minima, figures }: StationMinima, basis: ResolvedBas
     intercept: null,
     years: used.years,
     minima: used.minima,
+    index: basis.index,
     values: used.values,
     meanValue: meanOf(used.values),
     valueSlope: null,
@@ -149,6 +150,7 @@ function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
 
 function orderDrying(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {
   for (const { row, used } of entries) {
+    row.index = 'zero-flow-days';
     row.values = used.zeroDays;
     row.meanValue = meanOf(row.values);
   }

@@ -82,6 +82,8 @@ export interface RankingRow extends StationFacts {
   /** the usable years and their minima in m³/s: what the trend rests on */
   years: number[];
   minima: number[];
+  /** what `values` are: the basis's index, or zero-flow days under Drying */
+  index: AnnualIndexName;
   /** the annual figures that were tested and ranked: the minima, or those of the basis's other index, or under Drying
    *  the zero-flow days; one a year of `years`, with mean and slope per decade (95 % interval) in their own unit and
    *  sign */

@@ -68,7 +68,11 @@ export const PATHS = {
     },
     post: { ...STATION_CHANGES.add, parameters: [REGION] },
   },
-  '/api/regions/{region}/ranking': table('Stations in order of trend in annual minima', [REGION], tableParameters),
+  '/api/regions/{region}/ranking': table(
+    'Stations in order of trend in annual minima, or in the basis’s other index',
+    [REGION],
+    tableParameters,
+  ),
   '/api/regions/{region}/minima': table('Annual minima', [REGION], tableParameters),
   '/api/regions/{region}/curves': table('Flow-duration curves', [REGION], curveParameters),
   '/api/regions/{region}/stations/{code}': {

@@ -31,6 +31,11 @@ export const RANKED: RankingRow = rankedRow({
   intercept: 5,
   years: [1990, 2019],
   minima: [0.4, 0.3],
+  values: [0.4, 0.3],
+  meanValue: 1 / 3,
+  valueSlope: -0.0123456789123,
+  valueSlopeLow: -0.02,
+  valueSlopeHigh: 0.1 + 0.2,
 });
 
 /** A station without a place on the map or in the ranking. */
@@ -56,6 +61,9 @@ export const UNRANKED: RankingRow = {
   pAdjusted: null,
   trend: null,
   trendOf: null,
+  valueSlope: null,
+  valueSlopeLow: null,
+  valueSlopeHigh: null,
   unrankedReason: '3 usable years, 20 needed',
   note: 'short',
 };

@@ -101,6 +101,7 @@ export function rankedRow(keys: Partial<RankingRow> = {}): RankingRow {
     intercept: 30,
     years: [1985, 2024],
     minima: [2.1, 1.9],
+    index: 'minimum',
     values: [2.1, 1.9],
     meanValue: 2,
     valueSlope: -0.124,
