@@ -3,13 +3,10 @@ import type { Basis, ResolvedBasis } from '../basis.ts';
 import type { PairSite, PairTerms } from '../region/pair.ts';
 import type { PairComparison, ReferenceCandidate } from '../region/pair-types.ts';
 import type { RankingRow } from '../region/ranking-types.ts';
-import { referenceCandidates } from '../region/reference-candidates.ts';
+import { referenceCandidates, referencesToBeginWith } from '../region/reference-candidates.ts';
 import type { RegionRow } from '../store/regions.ts';
 import { runTask } from './pool.ts';
 import { rankingOf } from './ranking.ts';
-
-/** So many natural stations stand for the weather where none are named. */
-const REFERENCES_TO_BEGIN_WITH = 3;
 
 /** Thrown for a comparison that cannot be meant: the message names the code and says what would do. */
 export class PairError extends Error {
@@ -37,7 +34,7 @@ export async function pairOf(
   const rowOf = new Map(ranking.rows.map((row) => [row.code, row]));
   const station = rowOf.get(code);
   if (!station) return null;
-  const codes = references ?? referencesToBeginWith(referenceCandidates(code, ranking.rows));
+  const codes = references ?? referencesToBeginWith(referenceCandidates(code, ranking.rows), station.years.length);
   if (codes.length === 0) {
     throw new PairError(
       `No natural station shares enough usable years with "${code}" to be taken by itself: name the references.`,
@@ -69,10 +66,6 @@ export async function candidatesOf(
   const { ranking, key } = await rankingOf(region, basis);
   return { candidates: referenceCandidates(code, ranking.rows), key };
 }
-
-/** What is compared with until a person chooses: the three natural stations whose figures go most with the station's. */
-export const referencesToBeginWith = (candidates: readonly ReferenceCandidate[]): string[] =>
-  candidates.slice(0, REFERENCES_TO_BEGIN_WITH).map(({ code }) => code);
 
 function siteOf({ code, name, river, influence, derivedFrom, years, values, drying }: RankingRow): PairSite {
   return { code, name, river, influence, derivedFrom, years, values, drying };

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { referenceCandidates } from '../../../lib/region/reference-candidates.ts';
+import { referenceCandidates, referencesToBeginWith } from '../../../lib/region/reference-candidates.ts';
 
 type Row = Parameters<typeof referenceCandidates>[1][number];
 
@@ -75,4 +75,20 @@ test('referenceCandidates has no correlation where one does not vary, and puts i
 
 test('referenceCandidates of an unknown code are none', () => {
   expect(referenceCandidates('Z', [row('A', 50, LEVELS)])).toEqual([]);
+});
+
+test('referenceCandidates asks for half of the years that the station has', () => {
+  const long = Array.from({ length: 30 }, (_, i) => LEVELS[i % 12] + i);
+  const here = row('A', 50, long);
+  expect(codes([here, row('B', 50, long.slice(0, 14))])).toEqual([]);
+  expect(codes([here, row('B', 50, long.slice(0, 15))])).toEqual(['B']);
+});
+
+test('referencesToBeginWith takes the best three that share four fifths of the years, else the one that shares most', () => {
+  const candidate = (code: string, commonYears: number) => ({ code, name: code, km: 1, commonYears, correlation: 0.9 });
+  const found = [candidate('A', 12), candidate('B', 39), candidate('C', 32), candidate('D', 31), candidate('E', 40)];
+  expect(referencesToBeginWith(found, 40)).toEqual(['B', 'C', 'E']);
+  expect(referencesToBeginWith([...found, candidate('F', 40)], 40)).toEqual(['B', 'C', 'E']);
+  expect(referencesToBeginWith([candidate('A', 12), candidate('B', 20)], 40)).toEqual(['B']);
+  expect(referencesToBeginWith([], 40)).toEqual([]);
 });

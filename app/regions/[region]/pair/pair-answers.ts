@@ -1,9 +1,9 @@
 import type { Basis } from '@/lib/basis';
-import { pairOf, referencesToBeginWith } from '@/lib/jobs/pair';
+import { pairOf } from '@/lib/jobs/pair';
 import { type WeatherAnswer, WeatherError, weatherOf } from '@/lib/jobs/weather';
 import type { PairComparison, ReferenceCandidate } from '@/lib/region/pair-types';
 import type { RankingRow } from '@/lib/region/ranking-types';
-import { referenceCandidates } from '@/lib/region/reference-candidates';
+import { referenceCandidates, referencesToBeginWith } from '@/lib/region/reference-candidates';
 import type { StationChange } from '@/lib/series/station-history';
 import type { RegionRow } from '@/lib/store/regions';
 import { getStation } from '@/lib/store/stations';
@@ -45,7 +45,12 @@ export async function pairAnswers(
   const problems: string[] = [];
   const candidates = referenceCandidates(station.code, rows);
   const ownChoice = view.references === null;
-  const references = usable(view.references ?? referencesToBeginWith(candidates), station, rows, problems);
+  const references = usable(
+    view.references ?? referencesToBeginWith(candidates, station.years.length),
+    station,
+    rows,
+    problems,
+  );
   const [pair, weather, stored] = await Promise.all([
     references.length > 0 ? pairOf(region, basis, station.code, references) : null,
     weatherOf(region, basis, station.code, view.weather).catch((error: unknown) => {
