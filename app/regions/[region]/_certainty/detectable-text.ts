@@ -1,4 +1,4 @@
-import { flowIn, MISSING, significant, UNIT_WORDS, type Units } from '@/app/components/format';
+import { fixed, flowIn, MISSING, significant, UNIT_WORDS, type Units } from '@/app/components/format';
 import type { AnnualIndexName } from '@/lib/basis';
 import type { DetectableTrend } from '@/lib/region/certainty-types';
 import { INDEX_FACTS } from '@/lib/region/index-facts';

@@ -32,3 +32,7 @@ test('carried leaves its input as it was', () => {
   carried(query);
   expect(query.toString()).toBe('days=30&axis=log');
 });
+
+test('how many of the steepest and what fills the discs go along from page to page', () => {
+  expect(carried('k=3&fill=span&breaks=1990').toString()).toBe('k=3&fill=span');
+});

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { type NeedleFacts, needleOf, needleWords } from '@/app/components/needle';
+import { type NeedleFacts, needleOf, needleWords, sectorPath, sharedNeedle } from '@/app/components/needle';
 
 const ranked: NeedleFacts = {
   rank: 1,
@@ -60,4 +60,25 @@ test('needleOf of deficits tilts growing ones as a fall', () => {
   const facts = { percentPerDecade: 10, trendOf: 'deficit' } as const;
   expect(degrees(facts)).toBeCloseTo(45, 10);
   expect(needleWords(needleOf({ ...ranked, ...facts }), 'deficit')).toBe('larger deficits, may be chance');
+});
+
+test('sharedNeedle fills a ranked disc as far as its share goes, and leaves the others open', () => {
+  expect(sharedNeedle(needleOf({ ...ranked, trend: 'falling', percentPerDecade: -5 }), 0.4).share).toBe(0.4);
+  expect(sharedNeedle(needleOf(ranked), null).share).toBe(0);
+  const drying = needleOf({ ...ranked, rank: null, drying: true, trend: 'falling', zeroDaysPerDecade: 5 });
+  expect(sharedNeedle(drying, 0.4)).toEqual({ ...drying, significant: false });
+});
+
+test('sectorPath goes from the top clockwise, to the nearest eighth', () => {
+  // a quarter ends at three o'clock, a half at six, three quarters at nine
+  expect(sectorPath(0.25, 8)).toBe('M0 0V-8A8 8 0 0 1 8.000 -0.000Z');
+  expect(sectorPath(0.5, 8)).toBe('M0 0V-8A8 8 0 0 1 0.000 8.000Z');
+  expect(sectorPath(0.75, 8)).toBe('M0 0V-8A8 8 0 1 1 -8.000 0.000Z');
+  expect(sectorPath(0.27, 8)).toBe(sectorPath(0.25, 8));
+});
+
+test('sectorPath is empty below half an eighth and a whole disc from fifteen sixteenths on, beyond its ends too', () => {
+  expect([sectorPath(0, 8), sectorPath(0.06, 8), sectorPath(-1, 8)]).toEqual(['', '', '']);
+  expect(sectorPath(0.94, 8)).toBe(sectorPath(1, 8));
+  expect(sectorPath(2, 8)).toBe(sectorPath(1, 8));
 });
