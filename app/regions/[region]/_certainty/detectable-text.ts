@@ -25,5 +25,4 @@ export function detectableText(trend: DetectableTrend | undefined, terms: Detect
 }
 
 /** Two figures, or all before the point: 0.62, 6.2, 62, 128. */
-const twoFigures = (value: number): string =>
-  value >= 100 ? significant(Math.round(value), 9) : significant(value, 2);
+const twoFigures = (value: number): string => (value >= 100 ? fixed(value) : significant(value, 2));
