@@ -4,19 +4,16 @@ import { criticalS } from '../../lib/statistics/critical-s.ts';
 import { permutedKendall } from '../../lib/statistics/permuted-kendall.ts';
 import { randomStream } from '../../lib/statistics/random.ts';
 import { countsByReplicate } from '../../lib/statistics/trend-bits.ts';
-import fieldCounts from './field-counts.json' with { type: 'json' };
+import { referenceCases } from './reference.ts';
 
 const YEARS = 60;
 const SERIES = 80;
 const REPLICATES = 4000;
 
-/** Falling by a two-sided test at 10 % is a local test at 5 %. */
-const [{ input, expected }] = fieldCounts.cases as [
-  {
-    input: { independent_tests: number[] };
-    expected: { least_count: number[]; probability_of_that_count_or_more: number[] };
-  },
-];
+/** Falling by a two-sided test at 10 % is a local test at 5 %: the first case. */
+const [{ input, expected }] = referenceCases<{ independent_tests: number[] }, { least_count: number[] }>(
+  'field-counts',
+);
 
 /** Counts of series that share no weather: binomial, but for the chance correlation of random series. */
 const random = randomStream('independent series');
