@@ -58,10 +58,9 @@ export function serialTerms(
         return { r1, serialFactor: 1, tested: Number.isNaN(r1) ? series.values : preWhitened(series, r1).values };
       });
     case 'block-bootstrap':
-      return family.map((series) => {
-        const { years, values, label = '' } = series;
-        const random = randomStream(seed, 'block-bootstrap', label, ...Array.from(years), ...Array.from(values));
-        return { r1: Number.NaN, serialFactor: blockBootstrapFactor(series, random), tested: values };
+      return family.map(({ values, label = '' }) => {
+        const random = randomStream(seed, 'block-bootstrap', label, ...Array.from(values));
+        return { r1: Number.NaN, serialFactor: blockBootstrapFactor(values, random), tested: values };
       });
   }
 }

@@ -1,5 +1,5 @@
-import { type DatedValues, detrended } from './detrend.ts';
 import { varianceOfS } from './mann-kendall.ts';
+import { presentValues } from './present-values.ts';
 import type { RandomStream } from './random.ts';
 
 /** Fewer values make no blocks to draw from. */
@@ -7,37 +7,39 @@ const FEWEST_VALUES = 5;
 
 export const BLOCK_REPLICATES = 2000;
 
-/** Factor by which serial correlation changes Var S, by resampling the detrended series in moving blocks.
+/** Factor by which serial correlation changes Var S, by resampling the series in moving blocks.
  *
  *  A replicate strings together blocks of ⌈n^{1/3}⌉ successive values, each start as likely, to the length of the series;
- *  the factor is the variance of S over the replicates, over the variance of S without serial correlation (with the ties
- *  of the detrended series). Gaps are closed: a block runs from usable year to usable year.
+ *  the factor is the variance of S over the replicates, over the variance of S without serial correlation. The trend
+ *  stays in the series: what a trend leaves carries over too little, and tests by it find too much. Blocks run from value
+ *  to value, over gaps.
  *  S of a replicate is a sum over its blocks and pairs of blocks, and these sums are made once and looked up.
+ *  @param x           values in time order, NaN where missing (left out); left unchanged
  *  @param random      a stream of this series' own
  *  @param replicates  at least 2
- *  @returns           1 for fewer than 5 values, or none that differ about the trend
- *  @throws RangeError when lengths differ, years do not rise, a number is not finite, or `replicates` is too small
+ *  @returns           1 for fewer than 5 values, or when all are equal
+ *  @throws RangeError when a value is infinite, or `replicates` is too small
  *  Source: Künsch 1989, Ann. Stat. 17:1217–1241 (moving blocks, length of order n^{1/3}); for this test Önöz & Bayazit
  *  2012, Hydrol. Process. 26:3552–3560. */
 export function blockBootstrapFactor(
-  series: DatedValues,
+  x: ArrayLike<number>,
   random: RandomStream,
   replicates: number = BLOCK_REPLICATES,
 ): number {
   if (!(Number.isInteger(replicates) && replicates >= 2)) {
     throw new RangeError(`blockBootstrapFactor: replicates must be a whole number from 2, got ${replicates}`);
   }
-  const rest = detrended(series, 'blockBootstrapFactor');
-  const n = rest.length;
-  const { variance } = varianceOfS(rest);
+  const values = presentValues(x, 'blockBootstrapFactor');
+  const n = values.length;
+  const { variance } = varianceOfS(values);
   if (n < FEWEST_VALUES || variance === 0) return 1;
 
   const length = blockLength(n);
   const starts = n - length + 1;
   const blocks = Math.ceil(n / length);
   const lastLength = n - (blocks - 1) * length;
-  const whole = signSums(rest, length, length);
-  const cut = signSums(rest, length, lastLength);
+  const whole = signSums(values, length, length);
+  const cut = signSums(values, length, lastLength);
   const drawn = new Int32Array(blocks);
   let sum = 0;
   let squares = 0;
