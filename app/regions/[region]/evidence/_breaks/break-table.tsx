@@ -89,7 +89,9 @@ export function BreakTable({ stations, alpha, units, hrefOf }: Props) {
                   <span className={styles.figure}>
                     <span>
                       <strong>{signed(step.percent, 0)}</strong>{' '}
-                      <span className={table.quiet}>{interval(step.percentLow, step.percentHigh, 0)}</span>
+                      <span className={table.quiet}>
+                        {step.percent !== null && interval(step.percentLow, step.percentHigh, 0)}
+                      </span>
                     </span>
                     <IntervalFigure
                       scale={scale}

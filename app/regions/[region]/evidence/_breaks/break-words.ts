@@ -20,8 +20,19 @@ export function summaryWords({ label, tested, lower, higher, medianPercent }: Su
   return `${name}: of ${fixed(tested)} comparisons ${lowerWords} and ${higherWords}, allowing for false discoveries${median && `; ${median}`}.`;
 }
 
-/** All breaks in a sentence each; null where there is nothing to part the years. */
+/** More kinds of break than this are counted together. */
+const MOST_TOLD_SINGLY = 2;
+
+/** What the breaks say in few words; null where there is nothing to part the years. Example for many kinds: "Across 12 dated
+ *  changes with usable years on both sides (3 abstraction, 1 dam) 2 are lower after and 1 higher, allowing for false
+ *  discoveries." */
 export function breaksSentence({ summary }: Pick<RegionBreaks, 'summary'>): string | null {
   const tested = summary.filter(({ tested }) => tested > 0);
-  return tested.length === 0 ? null : tested.map(summaryWords).join(' ');
+  if (tested.length === 0) return null;
+  if (tested.length <= MOST_TOLD_SINGLY) return tested.map(summaryWords).join(' ');
+  const sum = (of: 'tested' | 'lower' | 'higher') => tested.reduce((total, one) => total + one[of], 0);
+  const [lower, higher] = [sum('lower'), sum('higher')];
+  const kinds = tested.map(({ label, tested }) => `${fixed(tested)} ${label}`).join(', ');
+  const be = lower === 0 || lower === 1 ? 'is' : 'are';
+  return `Across ${fixed(sum('tested'))} comparisons with usable years on both sides (${kinds}) ${lower === 0 ? 'none' : fixed(lower)} ${be} lower after and ${higher === 0 ? 'none' : fixed(higher)} higher, allowing for false discoveries.`;
 }

@@ -34,7 +34,7 @@ export function termsSentence(alternatives: readonly Alternative[]): string | nu
   const sorted = [...others].sort((a, b) => a.falling / a.ranked - b.falling / b.ranked);
   const [fewest, most] = [sorted[0], sorted[sorted.length - 1]];
   const left = tried.length - others.length;
-  const opening = `On ${count(others.length, 'other choice')} of one term${left > 0 ? ' that keep at least half of the stations' : ''}`;
+  const opening = `On ${count(others.length, 'other choice')} of one term${left > 0 ? ` that ${others.length === 1 ? 'keeps' : 'keep'} at least half of the stations` : ''}`;
   const counts =
     others.length === 1
       ? `${fallingOf(fewest)} fall (${fewest.label})`
