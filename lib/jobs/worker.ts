@@ -1,6 +1,7 @@
 /** What the workers can do, one named task each. Bundled to .build/worker.mjs; no Prisma comes in here, so that a
  *  worker starts quickly. */
 export { annualIndex } from './tasks/annual-index.ts';
+export { certainty, certaintyTerms, simulate } from './tasks/certainty.ts';
 export { permuteYears, seriesForChance, sieveYears } from './tasks/chance.ts';
 export { checkRecords } from './tasks/check-records.ts';
 export { commonPeriods } from './tasks/common-periods.ts';
@@ -14,6 +15,7 @@ export { rank } from './tasks/rank.ts';
 export { regimes } from './tasks/regimes.ts';
 export { regionBreaks } from './tasks/region-breaks.ts';
 export { regional } from './tasks/regional.ts';
+export { startEndCounts } from './tasks/start-end-counts.ts';
 export { suggestLinks } from './tasks/suggest-links.ts';
 export { takeFiles } from './tasks/take-files.ts';
 export { weather } from './tasks/weather.ts';

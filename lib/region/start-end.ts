@@ -35,7 +35,7 @@ export function startEnd(row: StartEndRow, { period, serialCorrection, index }: 
   const { windows, share } = steadinessOf(series, period);
   for (let i = 0; i < starts.length; i++) {
     for (let j = 0; j < ends.length; j++) {
-      const window = firstAt[i] * n + lastAt[j];
+      const window = lastAt[j] * n + firstAt[i];
       if (Number.isNaN(slopes[window])) continue;
       const cell = i * ends.length + j;
       chart.z[cell] = z[window];

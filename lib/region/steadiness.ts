@@ -26,8 +26,8 @@ export function steadinessOf(
   }
   if (n < FEWEST_WINDOW_YEARS) return { windows: 0, share: null };
   const { s } = windowScores(values);
-  const sign = Math.sign(s[n - 1]);
-  const [first, last] = period ?? [years[0], years[n - 1]];
+  const sign = Math.sign(s[(n - 1) * n]);
+  const [first, last] = period ?? [years[0], years[(n - 1) * n]];
   let windows = 0;
   let agreeing = 0;
   for (let i = 0; i + FEWEST_WINDOW_YEARS <= n; i++) {
@@ -35,7 +35,7 @@ export function steadinessOf(
     for (let j = i + FEWEST_WINDOW_YEARS - 1; j < n; j++) {
       const count = starts * ((j === n - 1 ? last + 1 : years[j + 1]) - years[j]);
       windows += count;
-      if (Math.sign(s[i * n + j]) === sign) agreeing += count;
+      if (Math.sign(s[j * n + i]) === sign) agreeing += count;
     }
   }
   return { windows, share: sign === 0 ? null : agreeing / windows };

@@ -1,11 +1,9 @@
-import { mannKendall } from '../statistics/mann-kendall.ts';
-import { preWhitened } from '../statistics/pre-whitening.ts';
+import { whitenedWindowZ } from '../statistics/whitened-windows.ts';
 import { windowScores, windowVariance } from '../statistics/window-scores.ts';
-import { windowSlopes } from '../statistics/window-slopes.ts';
 import { factorOfPart, type RowSerialTerms } from './row-serial-terms.ts';
 import type { YearlySeries } from './trend-family.ts';
 
-/** Z and S of every window of a series, from usable year i to usable year j, at i·n + j. */
+/** Z and S of every window of a series, from usable year i to usable year j, at j·n + i. */
 export interface WindowTests {
   n: number;
   /** NaN where the window has too few years */
@@ -22,30 +20,18 @@ export interface WindowTests {
  *  Sources: at the functions of `lib/statistics`. */
 export function windowTests(series: YearlySeries, terms: RowSerialTerms, fewest: number): WindowTests {
   const { s, ties, n } = windowScores(series.values);
-  const z = new Float64Array(n * n).fill(Number.NaN);
   if (terms.correction === 'pre-whitened' && !Number.isNaN(terms.r1)) {
-    return { n, s, z: whitenedZ(series, terms.r1, fewest, z) };
+    return { n, s, z: whitenedWindowZ(series.years, series.values, { r1: terms.r1, fewest }) };
   }
+  const z = new Float64Array(n * n).fill(Number.NaN);
   const byLength = Float64Array.from({ length: n + 1 }, (_, length) => factorOfPart(length, terms));
   for (let i = 0; i + fewest <= n; i++) {
     for (let j = i + fewest - 1; j < n; j++) {
-      const cell = i * n + j;
+      const cell = j * n + i;
       const length = j - i + 1;
       const variance = byLength[length] * windowVariance(length, ties[cell]);
       z[cell] = s[cell] === 0 || variance === 0 ? 0 : (s[cell] - Math.sign(s[cell])) / Math.sqrt(variance);
     }
   }
   return { n, s, z };
-}
-
-function whitenedZ({ years, values }: YearlySeries, r1: number, fewest: number, z: Float64Array): Float64Array {
-  const n = years.length;
-  const slopes = windowSlopes(years, values, fewest);
-  for (let i = 0; i + fewest <= n; i++) {
-    for (let j = i + fewest - 1; j < n; j++) {
-      const part = { years: years.slice(i, j + 1), values: values.slice(i, j + 1), slope: slopes[i * n + j] };
-      z[i * n + j] = mannKendall(preWhitened(part, r1).values).z;
-    }
-  }
-  return z;
 }

@@ -1,4 +1,5 @@
-/** Mann–Kendall's S of every window of one series: of the values i to j, both included, at i·n + j for i ≤ j. */
+/** Mann–Kendall's S of every window of one series: of the values i to j, both included, at j·n + i for i ≤ j: windows
+ *  that end alike lie side by side. */
 export interface WindowScores {
   n: number;
   /** pairs that rise minus pairs that fall */
@@ -12,7 +13,7 @@ export interface WindowScores {
  *  @param x  values in time order, none missing; left unchanged
  *  @throws RangeError when a value is not a finite number
  *  Source: as at `mannKendall`, with which every cell agrees.
- *  Example: [1, 3, 2] → S 1 at (0, 1), −1 at (1, 2), 1 at (0, 2) */
+ *  Example: [1, 3, 2] → S 1 of values 0 to 1, −1 of 1 to 2, 1 of 0 to 2 */
 export function windowScores(x: ArrayLike<number>): WindowScores {
   const n = x.length;
   const s = new Int32Array(n * n);
@@ -23,13 +24,15 @@ export function windowScores(x: ArrayLike<number>): WindowScores {
     let signs = 0;
     let equal = 0;
     for (let i = j - 1; i >= 0; i--) {
-      if (last > x[i]) signs++;
-      else if (last < x[i]) signs--;
-      else equal++;
-      const cell = i * n + j;
-      s[cell] = s[cell - 1] + signs;
+      // without branches, for which way noise goes nobody can foretell
+      const rises = Number(last > x[i]);
+      const falls = Number(last < x[i]);
+      signs += rises - falls;
+      equal += 1 - rises - falls;
+      const cell = j * n + i;
+      s[cell] = s[cell - n] + signs;
       // one more in a group of `equal`: (t + 1)t(2t + 7) − t(t − 1)(2t + 5) = 6t² + 12t
-      ties[cell] = ties[cell - 1] + 6 * equal * (equal + 2);
+      ties[cell] = ties[cell - n] + 6 * equal * (equal + 2);
     }
   }
   return { n, s, ties };

@@ -2,7 +2,7 @@
 const WORD = 32;
 
 /** Theil–Sen slope of every window of one series: median of (x_b − x_a)/(t_b − t_a) over the pairs of values i to j, both
- *  included, at i·n + j; NaN where a window is too short.
+ *  included, at j·n + i; NaN where a window is too short.
  *
  *  The slopes of all pairs are put in order once. For each first value the windows grow by one value at a time; a bit a
  *  slope says which of them the window has, and the middle one is found by counting bits. So all windows together cost
@@ -12,7 +12,7 @@ const WORD = 32;
  *  @param fewest  windows of fewer values are left out; at least 2
  *  @throws RangeError when lengths differ, times do not rise, a value is not finite, or fewest is below 2
  *  Source: as at `senSlope`, with which every cell agrees.
- *  Example: t = [1, 2, 4], x = [1, 2, 6], fewest 2 → 1 at (0, 1), 2 at (1, 2), 5/3 at (0, 2) */
+ *  Example: t = [1, 2, 4], x = [1, 2, 6], fewest 2 → 1 of values 0 to 1, 2 of 1 to 2, 5/3 of 0 to 2 */
 export function windowSlopes(t: ArrayLike<number>, x: ArrayLike<number>, fewest: number): Float64Array {
   const n = x.length;
   if (t.length !== n) {
@@ -36,7 +36,7 @@ export function windowSlopes(t: ArrayLike<number>, x: ArrayLike<number>, fewest:
       const pairs = (values * (values - 1)) / 2;
       const middle = (pairs - 1) >> 1;
       const first = nthPresent(present, middle);
-      medians[i * n + j] = pairs % 2 ? sorted[first] : (sorted[first] + sorted[nextPresent(present, first)]) / 2;
+      medians[j * n + i] = pairs % 2 ? sorted[first] : (sorted[first] + sorted[nextPresent(present, first)]) / 2;
     }
   }
   return medians;

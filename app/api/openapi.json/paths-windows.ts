@@ -3,6 +3,7 @@ import { plainFormatParameter } from '../_http/plain-table';
 import { alternativesParameters } from '../regions/[region]/alternatives/parameters';
 import { breaksParameters } from '../regions/[region]/breaks/parameters';
 import { movementParameters } from '../regions/[region]/movement/parameters';
+import { startEndParameters } from '../regions/[region]/start-end/parameters';
 import { BASIS_PARAMETERS, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, text } from './parts';
 
@@ -37,6 +38,11 @@ export const WINDOW_PATHS = {
     'Trend of a station for every start year and end year',
     [REGION, STATION],
     plainFormatParameter,
+  ),
+  '/api/regions/{region}/start-end': longTable(
+    'How many stations fall, for every start year and end year',
+    [REGION],
+    startEndParameters,
   ),
   '/api/regions/{region}/movement': plainTable(
     'Who moved in the ranking, and how far, against other terms',

@@ -1,10 +1,15 @@
 import { parse } from 'csv-parse/sync';
 import { expect, test } from 'vitest';
 import { GET as alternatives } from '../../../app/api/regions/[region]/alternatives/route.ts';
+import { GET as breaks } from '../../../app/api/regions/[region]/breaks/route.ts';
 import { GET as movement } from '../../../app/api/regions/[region]/movement/route.ts';
+import { GET as startEnd } from '../../../app/api/regions/[region]/start-end/route.ts';
+import { GET as stationBreaks } from '../../../app/api/regions/[region]/stations/[code]/breaks/route.ts';
 import { GET as stationStartEnd } from '../../../app/api/regions/[region]/stations/[code]/start-end/route.ts';
 import { rankingOf } from '../../../lib/jobs/ranking.ts';
+import type { StepTest } from '../../../lib/region/break-types.ts';
 import type { OnTheWire, StartEnd } from '../../../lib/region/window-types.ts';
+import { editStation } from '../../../lib/store/station-edit.ts';
 import { call, problemOf } from './call.ts';
 import { importedRegion } from './imported-region.ts';
 
@@ -103,3 +108,69 @@ test('GET alternatives?format=csv holds the same list', async () => {
   const rows = await rowsOf(await call(alternatives, `${url}/alternatives?format=csv`, params));
   expect(rows.find(({ choice }) => choice === '30-day minima')).toMatchObject({ change: 'days=30', current: 'false' });
 }, 60_000);
+
+test('GET start-end: counts of the region, the whole period as the ranking’s rows say', async () => {
+  const chart = await (await call(startEnd, `${url}/start-end`, params)).json();
+  const rows = (await ranking()).rows.filter(({ rank }) => rank !== null);
+  const { alpha } = place.region.basis;
+  const whole = chart.ends.length - 1;
+  expect(rows.length).toBeGreaterThan(0);
+  expect(chart.stations[whole]).toBe(rows.length);
+  expect(chart.negative[whole]).toBe(rows.filter(({ tau }) => tau! < 0).length);
+  expect(chart.falling[whole]).toBe(rows.filter(({ p, z }) => p! < alpha && z! < 0).length);
+  const csv = await rowsOf(await call(startEnd, `${url}/start-end?format=csv`, params));
+  const last = csv.find((row) => row.last_year === String(chart.ends[whole]))!;
+  expect([last.first_year, last.stations]).toEqual([String(chart.starts[0]), String(rows.length)]);
+});
+
+test('GET stations/{code}/breaks: a chosen break with both sides, and what the figures suggest', async () => {
+  const { rows, basis } = await ranking();
+  const row = rows.find(({ rank }) => rank !== null)!;
+  const middle = row.years[row.years.length >> 1];
+  const at = `${url}/stations/${row.code}/breaks?breaks=${middle}`;
+  const answer = await (await call(stationBreaks, at, { ...params, code: row.code })).json();
+  const [step] = answer.steps;
+  expect(answer).toMatchObject({ code: row.code, tested: '7-day minima', unit: 'm³/s', problem: null });
+  expect([step.break.year, step.before.years + step.after.years]).toEqual([middle, row.yearsUsed]);
+  expect(step.before.first).toBe(basis.period![0]);
+  expect(answer.suggested.words).toContain('Not tested');
+});
+
+test('GET stations/{code}/breaks takes the station’s own dated changes unless said, and so does the region', async () => {
+  const { rows, basis } = await ranking();
+  const row = rows.find(({ rank }) => rank !== null)!;
+  const year = row.years[10];
+  const date = `${year}-${String(basis.yearStart).padStart(2, '0')}-15`;
+  const changes = [{ date, kind: 'dam' as const, note: 'an invented dam' }];
+  await editStation(place.region.id, row.code, { changes });
+  const own = await (
+    await call(stationBreaks, `${url}/stations/${row.code}/breaks`, { ...params, code: row.code })
+  ).json();
+  expect(own.steps.map((step: StepTest) => [step.break.year, step.break.words])).toEqual([
+    [year + 1, `dam, ${date}: an invented dam`],
+  ]);
+  const all = await (await call(breaks, `${url}/breaks`, params)).json();
+  expect(all.stations.map(({ code }: { code: string }) => code)).toEqual([row.code]);
+  expect(all.summary).toMatchObject([{ label: 'dam', tested: 1 }]);
+  const csv = await rowsOf(await call(breaks, `${url}/breaks?format=csv`, params));
+  expect(csv).toMatchObject([{ station_code: row.code, break_year: String(year + 1), break_from: 'change' }]);
+});
+
+test('GET breaks: a chosen break at every ranked station, with p adjusted over the table', async () => {
+  const { rows } = await ranking();
+  const ranked = rows.filter(({ rank }) => rank !== null);
+  const year = ranked[0].years[15];
+  const all = await (await call(breaks, `${url}/breaks?breaks=${year}`, params)).json();
+  expect(all.stations.length).toBe(ranked.length);
+  for (const { steps } of all.stations) expect(steps[0].pAdjusted).toBeGreaterThanOrEqual(steps[0].p);
+  expect(all.summary[0].tested).toBe(ranked.length);
+  const metadata = await (await call(breaks, `${url}/breaks?breaks=${year}&format=metadata`, params)).json();
+  expect(metadata.url).toBe('upper-wethe-breaks.csv');
+});
+
+test('GET breaks refuses what is no list of breaks, with what would do', async () => {
+  for (const text of ['seventy', '1975-1990', '']) {
+    const problem = await problemOf(await call(breaks, `${url}/breaks?breaks=${text}`, params), 400);
+    expect(JSON.stringify(problem)).toContain('first low-flow years after a break');
+  }
+});
