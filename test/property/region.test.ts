@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { parseBasis } from '../../lib/basis.ts';
+import { INDICES, parseBasis } from '../../lib/basis.ts';
 import { commonPeriod } from '../../lib/region/common-period.ts';
 import { standingOf } from '../../lib/region/eligibility.ts';
 import { rankRegion } from '../../lib/region/rank-stations.ts';
@@ -24,7 +24,13 @@ const spec = fc
   );
 const region = fc
   .array(fc.record({ spec, areaKm2: fc.option(fc.integer({ min: 1, max: 500 })) }), { maxLength: 14 })
-  .map((stations) => stations.map((each, i) => station(`s${String(i).padStart(2, '0')}`, each.spec, each)));
+  .map((stations) =>
+    stations.map(({ spec, areaKm2 }, i) => ({
+      ...station(`s${String(i).padStart(2, '0')}`, spec, { areaKm2 }),
+      // for the indices that come from the record: any figures will do, some of them missing
+      figures: Float64Array.from(spec.values, (value, year) => (year % 7 === 3 ? Number.NaN : 10 * value)),
+    })),
+  );
 const basis = fc
   .record({
     period: fc.constantFrom<'common' | null | [number, number]>('common', null, [1992, 2005]),
@@ -32,6 +38,7 @@ const basis = fc
     minCoverage: fc.constantFrom(0, 0.5, 0.8, 1),
     rankBy: fc.constantFrom('percent-per-decade', 'specific-change', 'kendall-tau'),
     serialCorrection: fc.constantFrom('ar1-regional', 'ar1', 'none'),
+    index: fc.constantFrom('minimum', 'minimum', ...INDICES),
   })
   .map((keys) => parseBasis(keys));
 const rank = (stations: StationMinima[], keys: ReturnType<typeof parseBasis>) => rankRegion(stations, keys, YEAR_START);
@@ -94,13 +101,18 @@ test('rankRegion adjusts p over all ranked stations, and over all drying ones, w
   );
 });
 
-test('rankRegion: units of the minima change no percentage, test or place', () => {
+test('rankRegion: units of the flows change no percentage, test or place', () => {
   fc.assert(
     fc.property(region, basis, (stations, keys) => {
       // by a power of two, so that no rounding comes in
-      const doubled = stations.map(({ station: facts, minima }) => ({
-        station: facts,
-        minima: { ...minima, minimum: minima.minimum.map((value) => value * 2) },
+      const doubled = stations.map(({ minima, figures, ...rest }) => ({
+        ...rest,
+        minima: {
+          ...minima,
+          minimum: minima.minimum.map((value) => value * 2),
+          meanFlow: minima.meanFlow.map((value) => value * 2),
+        },
+        figures: figures.map((value) => value * 2),
       }));
       const pick = ({ rows }: ReturnType<typeof rank>) =>
         rows.map(({ code, rank, tau, percentPerDecade }) => [code, rank, tau, percentPerDecade]);
