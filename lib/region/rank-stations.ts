@@ -33,7 +33,7 @@ interface Entry {
  *                    index that the minima do not bring along; in any order
  *  @param yearStart  start month of those low-flow years, resolved, 1–12
  *  @returns          a row for every station: ranked, then drying, then the others by code
- *  @throws RangeError when `yearStart` is no month, or such figures are missing
+ *  @throws RangeError when `yearStart` is no month, such figures are missing, or one of a usable year is infinite
  *  Sources: Mann–Kendall, Theil–Sen, serial correction and false discovery rate at the functions of `lib/statistics`. */
 export function rankRegion(stations: readonly StationMinima[], basis: Basis, yearStart: number): Ranking {
   checkStartMonth('rankRegion', yearStart);
@@ -75,6 +75,7 @@ function resolveBasis(stations: readonly StationMinima[], basis: Basis, yearStar
 /** A row with all that needs no test. */
 function entryOf({ station, minima, figures }: StationMinima, basis: ResolvedBasis): Entry {
   const used = usedYears(minima, basis.period, basis.index, figures);
+  checkFinite(station.code, used, basis);
   const standing = standingOf(used, basis.period, basis);
   const n = used.years.length;
   const meanMinimum = meanOf(used.minima);
@@ -120,6 +121,14 @@ function entryOf({ station, minima, figures }: StationMinima, basis: ResolvedBas
     steadiness: null,
   };
   return { row, used, standing };
+}
+
+function checkFinite(code: string, { years, minima, values }: UsedYears, { index }: ResolvedBasis): void {
+  years.forEach((year, i) => {
+    if (Number.isFinite(minima[i]) && Number.isFinite(values[i])) return;
+    const [name, value] = Number.isFinite(minima[i]) ? [index, values[i]] : ['minimum', minima[i]];
+    throw new RangeError(`rankRegion: ${name} of ${code} in ${year} must be a finite number, got ${value}`);
+  });
 }
 
 function rank(entries: readonly Entry[], basis: ResolvedBasis): Entry[] {

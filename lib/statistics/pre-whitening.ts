@@ -18,7 +18,8 @@ export function significantLag1(series: DatedValues): number {
   const { years } = series;
   const rest = detrended(series, 'significantLag1');
   const n = rest.length;
-  const mean = rest.reduce((sum, each) => sum + each, 0) / n;
+  // about the first value, or the mean of equal ones would differ from them in the last bit
+  const mean = n === 0 ? 0 : rest[0] + rest.reduce((sum, each) => sum + (each - rest[0]), 0) / n;
   let products = 0;
   let squares = 0;
   let pairs = 0;

@@ -1,7 +1,10 @@
 import { expect, test } from 'vitest';
+import { SERIAL_CORRECTIONS } from '../../../lib/basis.ts';
 import { FEWEST_FOR_REGIONAL } from '../../../lib/region/serial-terms.ts';
 import { trendFamily } from '../../../lib/region/trend-family.ts';
+import { allLagsVarianceFactor } from '../../../lib/statistics/all-lags.ts';
 import { mannKendall } from '../../../lib/statistics/mann-kendall.ts';
+import { preWhitened, significantLag1 } from '../../../lib/statistics/pre-whitening.ts';
 import { senSlope } from '../../../lib/statistics/sen-slope.ts';
 import { ar1VarianceFactor, cutLag1, lag1OfRanks, shrinkLag1 } from '../../../lib/statistics/serial-correlation.ts';
 
@@ -75,5 +78,73 @@ test('trendFamily adjusts p over the family', () => {
 });
 
 test('trendFamily of no series is empty', () => {
-  for (const correction of ['none', 'ar1', 'ar1-regional'] as const) expect(trendFamily([], correction)).toEqual([]);
+  for (const correction of SERIAL_CORRECTIONS) expect(trendFamily([], correction)).toEqual([]);
+});
+
+test('trendFamily all-lags, pre-whitened and block-bootstrap: factor and r1 as they are said to be', () => {
+  const each = series(16);
+  const { slope } = senSlope(years, each.values);
+  const lags = trendFamily([each], 'all-lags')[0];
+  expect(lags).toMatchObject({ r1: Number.NaN, serialFactor: allLagsVarianceFactor({ ...each, slope }).factor });
+  expect(lags.z).toBe(mannKendall(each.values, { varianceFactor: lags.serialFactor }).z);
+
+  const whitened = trendFamily([each], 'pre-whitened')[0];
+  const r1 = significantLag1({ ...each, slope });
+  expect(r1).toBeGreaterThan(0);
+  expect(whitened).toMatchObject({ r1, serialFactor: 1, tau: mannKendall(each.values).tauB });
+  expect(whitened.z).toBe(mannKendall(preWhitened({ ...each, slope }, r1).values).z);
+
+  const blocks = trendFamily([each], 'block-bootstrap', 'seed')[0];
+  expect(blocks.r1).toBeNaN();
+  expect(blocks.serialFactor).toBeGreaterThan(1);
+  const widened = senSlope(years, each.values, { varianceFactor: blocks.serialFactor });
+  expect(blocks).toMatchObject({ slope: widened.slope, low: widened.low, high: widened.high });
+});
+
+test('trendFamily block-bootstrap draws by seed, label and values, whoever else is in the family', () => {
+  const factor = (label: string, seed: string, others = 0) =>
+    trendFamily([...family(others), { ...series(4), label }], 'block-bootstrap', seed)[others].serialFactor;
+  expect(factor('A', 'seed')).toBe(factor('A', 'seed', 3));
+  expect(factor('A', 'seed')).not.toBe(factor('B', 'seed'));
+  expect(factor('A', 'seed')).not.toBe(factor('A', 'other'));
+});
+
+/** What every correction makes of it: p 1, slope 0 and no correction where nothing differs. */
+const LEVEL = { slope: 0, low: 0, high: 0, z: 0, p: 1, tau: Number.NaN, pAdjusted: 1, r1: Number.NaN, serialFactor: 1 };
+
+test.each(SERIAL_CORRECTIONS)(
+  'trendFamily %s of equal values and of zeros: no trend, and an interval of nothing',
+  (how) => {
+    const equal = { years, values: years.map(() => 3.2) };
+    const zero = { years, values: years.map(() => 0) };
+    expect(trendFamily([equal, zero], how)).toEqual([
+      { ...LEVEL, intercept: 3.2 },
+      { ...LEVEL, intercept: 0 },
+    ]);
+  },
+);
+
+test.each(SERIAL_CORRECTIONS)('trendFamily %s of no value, one and two: NaN where there is no answer', (how) => {
+  const [nothing, one, two] = trendFamily(
+    [
+      { years: [], values: [] },
+      { years: [2001], values: [4] },
+      { years: [2001, 2004], values: [4, 1] },
+    ],
+    how,
+  );
+  for (const each of [nothing, one]) {
+    expect(each).toMatchObject({ slope: NaN, low: NaN, high: NaN, z: NaN, p: NaN, tau: NaN, pAdjusted: NaN });
+    expect(each.serialFactor).toBe(1);
+  }
+  // S = −1, Var S = 1, and the continuity correction leaves nothing of it
+  expect(two).toMatchObject({ slope: -1, low: NaN, high: NaN, p: 1, pAdjusted: 1, tau: -1, serialFactor: 1 });
+  expect(Math.abs(two.z)).toBe(0);
+});
+
+test.each(SERIAL_CORRECTIONS)('trendFamily %s refuses an infinite value', (how) => {
+  const values = years.map((year) => (year === 1999 ? Number.POSITIVE_INFINITY : 1));
+  expect(() => trendFamily([{ years, values }], how)).toThrow(
+    new RangeError('senSlope: x[9] must be a finite number or NaN, got Infinity'),
+  );
 });

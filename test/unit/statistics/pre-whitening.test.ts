@@ -34,7 +34,9 @@ describe('significantLag1', () => {
     expect(significantLag1({ years: from(1, 4), values: [1, 1, 9, 9], slope: 0 })).toBeNaN();
     expect(significantLag1({ years: from(1, 12).map((i) => 2 * i), values: levels, slope: 0 })).toBeNaN();
     expect(significantLag1({ years: from(1, 12), values: from(1, 12), slope: 1 })).toBeNaN();
-    expect(significantLag1({ years: from(1, 12), values: new Float64Array(12), slope: 0 })).toBeNaN();
+    for (const equal of [0, 3.2, 0.1]) {
+      expect(significantLag1({ years: from(1, 12), values: new Float64Array(12).fill(equal), slope: 0 })).toBeNaN();
+    }
   });
 
   test('an infinite value is refused', () => {
