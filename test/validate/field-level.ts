@@ -25,7 +25,14 @@ function falls(serialCorrection: Correction, lag1: number, size: number): number
     const family = rows.map((values, station) => ({ years, values: [...values], label: `S${station}` }));
     const found = trendFamily(family, serialCorrection, `field ${i}`).filter(({ p, z }) => p < ALPHA && z < 0).length;
     const stations = chanceSeries(
-      family.map(({ values, label }) => ({ code: label, rank: 1, years, values, trendOf: 'minima', serialFactor: null })),
+      family.map(({ values, label }) => ({
+        code: label,
+        rank: 1,
+        years,
+        values,
+        trendOf: 'minima',
+        serialFactor: null,
+      })),
       { alpha: ALPHA, serialCorrection },
     );
     const bits = permutedKendall({ ...stations, replicates: REPLICATES, seed: `field ${i}` });

@@ -1,16 +1,30 @@
 import { aimWords, CLAIM_WORDS, type SimulatedFigure, sharePercent } from '../../lib/region/simulated-figures.ts';
 import { isAsMeant } from './figure.ts';
 
-/** The figures as a Markdown table. */
+const distinct = (words: readonly string[]): string[] => [...new Set(words)];
+
+function cell(figure: SimulatedFigure | undefined): string {
+  if (!figure) return '';
+  const text = `${sharePercent(figure.value)} ± ${(figure.error * 100).toFixed(1)}`;
+  return figure.aim === null ? text : `${text} (${aimWords(figure)} ${isAsMeant(figure) ? '✓' : '✗'})`;
+}
+
+/** The figures in Markdown, a table for each claim: methods down, settings across. */
 export function figuresTable(figures: readonly SimulatedFigure[]): string {
-  const rows = figures.map((figure) => {
-    const { claim, of, setting, value, error, cases } = figure;
-    const mark = figure.aim === null ? '' : isAsMeant(figure) ? ' ✓' : ' ✗';
-    return `| ${CLAIM_WORDS[claim] ?? claim} | ${of} | ${setting} | ${sharePercent(value)} ± ${sharePercent(error)} | ${cases} | ${aimWords(figure)}${mark} |`;
+  const tables = distinct(figures.map(({ claim }) => claim)).map((claim) => {
+    const own = figures.filter((figure) => figure.claim === claim);
+    const settings = distinct(own.map(({ setting }) => setting));
+    const rows = distinct(own.map(({ of }) => of)).map((of) => {
+      const cells = settings.map((setting) => cell(own.find((one) => one.of === of && one.setting === setting)));
+      return `| ${of} | ${cells.join(' | ')} |`;
+    });
+    const head = [
+      `| ${CLAIM_WORDS[claim] ?? claim} | ${settings.join(' | ')} |`,
+      `|---|${'---|'.repeat(settings.length)}`,
+    ];
+    return [...head, ...rows].join('\n');
   });
-  return ['| what | method | setting | simulated | cases | meant to be |', '|---|---|---|---|---|---|', ...rows].join(
-    '\n',
-  );
+  return tables.join('\n\n');
 }
 
 const BEGIN = '<!-- simulated figures: written by npm run validate -- --write -->';
