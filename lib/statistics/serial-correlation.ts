@@ -39,7 +39,7 @@ export function lag1OfRanks(series: DatedValues): number {
  *  @param r  as from `lag1OfRanks`, not yet cut; a NaN brings nothing in and comes out as the mean
  *  @param n  length of each series; same length as `r`
  *  @returns  same length; NaN throughout when every `r` is NaN
- *  @throws RangeError when lengths differ or a length is not positive
+ *  @throws RangeError when lengths differ, a length is not positive or a correlation is infinite
  *  Source: the shrinkage estimator of Efron & Morris 1975, J. Am. Stat. Assoc. 70:311–319, with 1/n as the sampling
  *  variance of a lag-1 correlation (Bartlett 1946). */
 export function shrinkLag1(r: Float64Array, n: ArrayLike<number>): Float64Array {
@@ -52,6 +52,7 @@ export function shrinkLag1(r: Float64Array, n: ArrayLike<number>): Float64Array 
   for (let i = 0; i < r.length; i++) {
     if (!(n[i] > 0)) throw new RangeError(`shrinkLag1: n[${i}] must be positive, got ${n[i]}`);
     if (Number.isNaN(r[i])) continue;
+    if (!Number.isFinite(r[i])) throw new RangeError(`shrinkLag1: r[${i}] must be a finite number or NaN, got ${r[i]}`);
     count++;
     sum += r[i];
     sumLengths += n[i];
