@@ -72,6 +72,7 @@ function pairSummary(comparison: PairComparison): Record<string, unknown> {
     sentence,
     problem,
     rank_correlation: correlation,
+    detectable_percent_per_decade: comparison.detectable,
     trends: {
       station: trendCells(stationTrend),
       reference: trendCells(referenceTrend),
@@ -90,6 +91,7 @@ function weatherSummary(trend: WeatherTrend): Record<string, unknown> {
     sentence,
     problem,
     rank_correlation: correlation,
+    detectable_percent_per_decade: trend.detectable,
     trends: { minima: trendCells(plain), given_weather: trendCells(adjusted), weather: trendCells(weather) },
   };
 }

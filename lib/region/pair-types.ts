@@ -48,6 +48,9 @@ export interface PairComparison {
   stationTrend: PairTrend | null;
   referenceTrend: PairTrend | null;
   ratioTrend: PairTrend | null;
+  /** the trend of the ratio that these years would have shown in four cases of five, % per decade either way; given where
+   *  none was found */
+  detectable: number | null;
   /** Spearman's, of station and reference over the common years */
   correlation: number | null;
   /** in plain words with figures; the problem where there is one */
@@ -83,6 +86,8 @@ export interface WeatherTrend {
   plain: PairTrend | null;
   adjusted: PairTrend | null;
   weather: PairTrend | null;
+  /** the trend given the weather that these years would have shown in four cases of five; as in PairComparison */
+  detectable: number | null;
   /** Spearman's, of minima and weather */
   correlation: number | null;
   /** the same for other numbers of days, over the years that have each: a choice by it knows nothing of any trend */

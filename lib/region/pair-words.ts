@@ -2,7 +2,7 @@ import { INDEX_FACTS } from './index-facts.ts';
 import { indexOfYear } from './index-of-year.ts';
 import type { PairSite, PairTerms } from './pair.ts';
 import type { PairComparison, PairTrend } from './pair-types.ts';
-import { intervalWords, plain, probability, signed } from './sentence-figures.ts';
+import { detectableWords, intervalWords, plain, probability, signed } from './sentence-figures.ts';
 import { called, counted, listed } from './site-words.ts';
 
 /** Fewer common years than this are shown with a warning. */
@@ -24,7 +24,7 @@ export function pairSentence(comparison: PairComparison, terms: PairTerms): stri
   const figures = `(${intervalWords(ratioTrend.percentLow, ratioTrend.percentHigh)}; p ${probability(ratioTrend.p)}), ${where}`;
   const alone = aloneWords(comparison);
   if (!((ratioTrend.p ?? 1) < terms.alpha)) {
-    return `No significant change against ${referenceWords(comparison)}: the ratio of the ${what} to it changed by ${signed(amount)} % of its mean per decade ${figures}. ${alone} This does not show that nothing changed.`;
+    return `No significant change against ${referenceWords(comparison)}: the ratio of the ${what} to it changed by ${signed(amount)} % of its mean per decade ${figures}. ${alone}${detectableWords(comparison.detectable)} This does not show that nothing changed.`;
   }
   const drier = INDEX_FACTS[terms.index].moreIsDrier ? amount > 0 : amount < 0;
   return `Against ${referenceWords(comparison)}, the ${what} ${amount < 0 ? 'lost' : 'gained'} ${plain(Math.abs(amount))} % of the mean ratio per decade ${figures}: ${

@@ -4,7 +4,9 @@ import { problemBeforehand, problemOfCommonYears, problemOfRatios } from './pair
 import type { PairComparison, PairYear } from './pair-types.ts';
 import { pairSentence, pairWarnings } from './pair-words.ts';
 import type { RankingRow } from './ranking-types.ts';
+import { detectablePercent } from './single-detectable.ts';
 import { FEWEST_FOR_TREND, meanOf, orNull, singleTrend } from './single-trend.ts';
+import type { YearlySeries } from './trend-family.ts';
 
 /** What a comparison reads of a station's row in the ranking. */
 export type PairSite = Pick<
@@ -49,19 +51,10 @@ export function comparePair(
     };
   }
 
-  const trendOf = (rows: readonly PairYear[], figure: (row: PairYear) => number, label: string) => {
-    const series = rows.map(figure);
-    return singleTrend(
-      { years: rows.map(({ year }) => year), values: series, label },
-      { serialCorrection: terms.serialCorrection, mean: meanOf(series), seed },
-    );
-  };
   const comparison: PairComparison = {
     ...withoutFigures(station, references, ''),
     years: table,
-    stationTrend: trendOf(table, (row) => row.station, station.code),
-    referenceTrend: trendOf(table, ({ reference }) => reference, 'reference'),
-    ratioTrend: trendOf(compared, ({ ratio }) => ratio, 'ratio'),
+    ...trendsOf(table, compared, station.code, terms, seed),
     correlation: orNull(
       rankCorrelation(
         values[0],
@@ -74,6 +67,34 @@ export function comparePair(
     ...comparison,
     sentence: pairSentence(comparison, terms),
     warnings: pairWarnings(comparison, station, references),
+  };
+}
+
+/** Each series by itself, and where the ratio's trend is not found, the one that would have been. */
+function trendsOf(
+  table: readonly PairYear[],
+  compared: readonly PairYear[],
+  code: string,
+  { serialCorrection, alpha }: PairTerms,
+  seed: string,
+): Pick<PairComparison, 'stationTrend' | 'referenceTrend' | 'ratioTrend' | 'detectable'> {
+  const seriesOf = (rows: readonly PairYear[], label: string, figure: (row: PairYear) => number) => ({
+    years: rows.map(({ year }) => year),
+    values: rows.map(figure),
+    label,
+  });
+  const trendOf = (series: YearlySeries) =>
+    singleTrend(series, { serialCorrection, mean: meanOf(series.values), seed });
+  const ratios = seriesOf(compared, 'ratio', ({ ratio }) => ratio);
+  const ratioTrend = trendOf(ratios);
+  const isFound = (ratioTrend?.p ?? 1) < alpha;
+  return {
+    stationTrend: trendOf(seriesOf(table, code, (row) => row.station)),
+    referenceTrend: trendOf(seriesOf(table, 'reference', ({ reference }) => reference)),
+    ratioTrend,
+    detectable: isFound
+      ? null
+      : detectablePercent(ratios, ratioTrend, { mean: meanOf(ratios.values), serialCorrection, alpha, seed }),
   };
 }
 
@@ -116,6 +137,7 @@ function withoutFigures(station: PairSite, references: readonly PairSite[], prob
     stationTrend: null,
     referenceTrend: null,
     ratioTrend: null,
+    detectable: null,
     correlation: null,
     sentence: problem,
     warnings: [],

@@ -24,3 +24,9 @@ export function probability(p: number | null): string {
   if (p === null) return 'none';
   return p < 0.001 ? 'below 0.001' : plain(p);
 }
+
+/** Beside what was not found: what would have been. Empty where that is not known. */
+export const detectableWords = (percent: number | null): string =>
+  percent === null
+    ? ''
+    : ` These years would have shown ${plain(percent)} % per decade or more, either way, in four cases of five.`;

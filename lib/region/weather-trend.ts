@@ -4,6 +4,7 @@ import { quantityWords } from '../series/quantities.ts';
 import { lowess } from '../statistics/lowess.ts';
 import { rankCorrelation } from '../statistics/rank-correlation.ts';
 import type { NamedSite, PairTrend, WeatherQuantity, WeatherTrend, WeatherYear } from './pair-types.ts';
+import { detectablePercent } from './single-detectable.ts';
 import { meanOf, orNull, singleTrend } from './single-trend.ts';
 import { weatherSentence, weatherWarnings } from './weather-words.ts';
 
@@ -46,6 +47,7 @@ export function weatherTrend(input: WeatherInput, terms: WeatherTerms, seed: str
     plain: null,
     adjusted: null,
     weather: null,
+    detectable: null,
     correlation: null,
     choices: OFFERED_DAYS.map((days) => ({ antecedentDays: days, correlation: correlationOver(input, days) })),
     sentence: '',
@@ -63,21 +65,23 @@ export function weatherTrend(input: WeatherInput, terms: WeatherTerms, seed: str
     fitted: curve[i],
     residual: row.minimum - curve[i],
   }));
+  const { serialCorrection, alpha } = terms;
   const trendOf = (values: number[], mean: number, label: string): PairTrend | null =>
-    singleTrend(
-      { years: rows.map(({ year }) => year), values, label },
-      { serialCorrection: terms.serialCorrection, mean, seed },
-    );
+    singleTrend({ years: rows.map(({ year }) => year), values, label }, { serialCorrection, mean, seed });
   const mean = meanOf(minima);
+  const left = {
+    years: rows.map(({ year }) => year),
+    values: years.map(({ residual }) => residual),
+    label: 'given the weather',
+  };
+  const adjusted = trendOf(left.values, mean, left.label);
   const trend: WeatherTrend = {
     ...empty,
     years,
     plain: trendOf(minima, mean, station.code),
-    adjusted: trendOf(
-      years.map(({ residual }) => residual),
-      mean,
-      'given the weather',
-    ),
+    adjusted,
+    detectable:
+      (adjusted?.p ?? 1) < alpha ? null : detectablePercent(left, adjusted, { mean, serialCorrection, alpha, seed }),
     weather: trendOf(sums, meanOf(sums), quantity),
     correlation: orNull(rankCorrelation(sums, minima)),
   };

@@ -1,6 +1,6 @@
 import { quantityWords } from '../series/quantities.ts';
 import type { PairTrend, WeatherTrend } from './pair-types.ts';
-import { intervalWords, plain, probability, signed } from './sentence-figures.ts';
+import { detectableWords, intervalWords, plain, probability, signed } from './sentence-figures.ts';
 import { called, counted } from './site-words.ts';
 import type { WeatherTerms } from './weather-trend.ts';
 
@@ -24,7 +24,7 @@ export function weatherSentence(trend: WeatherTrend, terms: WeatherTerms): strin
   }, ${counted(years.length, 'year')}`;
   const alone = `As it is, it changed by ${signed(asItIs ? amountOf(asItIs).value : Number.NaN)} ${amount.unit} per decade (p ${probability(asItIs?.p ?? null)}).`;
   if (!((adjusted.p ?? 1) < terms.alpha)) {
-    return `${given}, no significant trend is left in ${what}: it changed by ${signed(amount.value)} ${amount.unit} per decade ${figures}. ${alone} This does not show that nothing changed.`;
+    return `${given}, no significant trend is left in ${what}: it changed by ${signed(amount.value)} ${amount.unit} per decade ${figures}. ${alone}${detectableWords(trend.detectable)} This does not show that nothing changed.`;
   }
   return `${given}, ${what} ${amount.value < 0 ? 'lost' : 'gained'} ${plain(Math.abs(amount.value))} ${amount.unit} per decade ${figures}. ${alone}`;
 }

@@ -144,7 +144,7 @@ function Figures({ trend, basis }: { trend: WeatherTrend; basis: ResolvedBasis }
         rows={[
           { name: 'Minima as they are', trend: trend.plain },
           { name: 'Minima given the weather', trend: adjusted },
-          { name: `${quantityWords(quantity)} before them`, trend: trend.weather },
+          { name: `The ${quantityWords(quantity)} before them`, trend: trend.weather },
         ]}
       />
       <p className={styles.caption}>
