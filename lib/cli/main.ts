@@ -2,14 +2,17 @@
 import { migrate } from '../store/migrate.ts';
 import type { Command, Host } from './command.ts';
 import * as backup from './commands/backup.ts';
+import * as breaks from './commands/breaks.ts';
 import * as curves from './commands/curves.ts';
 import * as exportCommand from './commands/export.ts';
 import * as importCommand from './commands/import.ts';
 import * as minima from './commands/minima.ts';
 import * as pair from './commands/pair.ts';
 import * as rank from './commands/rank.ts';
+import * as regional from './commands/regional.ts';
 import * as restore from './commands/restore.ts';
 import * as serve from './commands/serve.ts';
+import * as windows from './commands/windows.ts';
 import { isUsageError } from './usage-error.ts';
 
 const COMMANDS: Record<string, Command> = {
@@ -17,7 +20,10 @@ const COMMANDS: Record<string, Command> = {
   rank,
   minima,
   curves,
+  windows,
+  breaks,
   pair,
+  regional,
   export: exportCommand,
   backup,
   restore,

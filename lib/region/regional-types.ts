@@ -60,7 +60,9 @@ export interface DependentPair {
   figure: number;
 }
 
-export type ChanceMethod = 'permutation' | 'sieve';
+/** How chance is imitated: years in random order, or drawn anew with their carry-over. */
+export const CHANCE_METHODS = ['permutation', 'sieve'] as const;
+export type ChanceMethod = (typeof CHANCE_METHODS)[number];
 
 export interface RegionalAnswers {
   method: ChanceMethod;

@@ -26,7 +26,7 @@ function plainTable(summary: string, path: Parameter[], shape: z.ZodRawShape, co
 }
 
 /** Such a table that may take long. */
-function longTable(summary: string, path: Parameter[], shape: z.ZodRawShape) {
+export function longTable(summary: string, path: Parameter[], shape: z.ZodRawShape) {
   const { get } = plainTable(summary, path, shape);
   const running = { description: 'the job that works on it: ask again when it is done', content: json(anything) };
   return { get: { ...get, responses: { ...get.responses, '202': running } } };

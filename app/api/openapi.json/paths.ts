@@ -12,6 +12,7 @@ import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
 import { PAIR_PATHS } from './paths-pair';
 import { RECORD_PATHS } from './paths-records';
+import { REGIONAL_PATHS } from './paths-regional';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
 import { WINDOW_PATHS } from './paths-windows';
@@ -100,6 +101,7 @@ export const PATHS = {
   ...DAY_PATHS,
   ...PAIR_PATHS,
   ...RECORD_PATHS,
+  ...REGIONAL_PATHS,
   ...STATION_PATHS,
   ...WINDOW_PATHS,
   '/api/regions/{region}/layers': {

@@ -2,12 +2,13 @@ import * as z from 'zod';
 import { waitParameter } from '@/app/api/_http/long-answer';
 import { plainFormatParameter } from '@/app/api/_http/plain-table';
 import { areaFromText } from '@/lib/region/in-polygon';
+import { CHANCE_METHODS } from '@/lib/region/regional-types';
 
 export const regionalParameters = {
   ...plainFormatParameter,
   ...waitParameter,
   method: z
-    .enum(['permutation', 'sieve'])
+    .enum(CHANCE_METHODS)
     .default('permutation')
     .describe('how chance is imitated: years in random order, or drawn anew with their carry-over'),
   area: z
