@@ -43,3 +43,10 @@ export function wholeNumber(option: string, text: string, min: number, max: numb
   }
   return value;
 }
+
+/** The format of a table whose rows are no places.
+ *  @throws UsageError for another one */
+export function plainFormat(format: string): 'csv' | 'json' {
+  if (format === 'csv' || format === 'json') return format;
+  throw new UsageError(`--format takes csv or json here, not "${format}".`);
+}

@@ -1,4 +1,5 @@
 import type { Basis, ResolvedBasis } from '../basis.ts';
+import { INDEX_FACTS } from '../region/index-facts.ts';
 import type { RankingRow } from '../region/ranking-types.ts';
 import { startEnd } from '../region/start-end.ts';
 import type { StartEnd } from '../region/window-types.ts';
@@ -9,6 +10,8 @@ import { rankingOf } from './ranking.ts';
 export interface StationStartEnd {
   row: RankingRow;
   basis: ResolvedBasis;
+  /** of the slopes, before "per decade"; empty for a number without unit */
+  slopeUnit: string;
   chart: StartEnd;
   key: string;
 }
@@ -18,5 +21,6 @@ export interface StationStartEnd {
 export async function startEndOf(region: Pick<RegionRow, 'id'>, basis: Basis, code: string): Promise<StationStartEnd> {
   const { ranking, key } = await rankingOf(region, basis);
   const row = ranking.rows.find((candidate) => candidate.code === code)!;
-  return { row, basis: ranking.basis, chart: startEnd(row, ranking.basis), key };
+  const slopeUnit = row.trendOf === 'zero-days' ? 'days' : INDEX_FACTS[ranking.basis.index].slopeUnit;
+  return { row, basis: ranking.basis, slopeUnit, chart: startEnd(row, ranking.basis), key };
 }

@@ -3,7 +3,9 @@ import { plainFormatParameter, plainTableAnswer } from '@/app/api/_http/plain-ta
 import { provenanceOf, regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { type StationParams, stationOf } from '@/app/api/_http/station';
-import { startEndMetadata, startEndProduct } from '@/lib/export/start-end-product';
+import { START_END_COLUMNS } from '@/lib/export/start-end-csv';
+import { stationStartEndProduct } from '@/lib/export/start-end-product';
+import { tableMetadata } from '@/lib/export/table-metadata';
 import { startEndOf } from '@/lib/jobs/start-end';
 
 /** The trend of one station for every start year and end year. */
@@ -18,7 +20,8 @@ export const GET = route<StationParams>(async (request, params) => {
     key: `${station.key} start-end`,
     format,
     file,
-    product: (as) => startEndProduct(as, station, from),
-    metadata: () => startEndMetadata(station, from, file),
+    product: (as) => stationStartEndProduct(as, station, from),
+    metadata: () =>
+      tableMetadata(file, `${region.name}, ${code}: trend for every start year and end year`, START_END_COLUMNS, from),
   });
 });
