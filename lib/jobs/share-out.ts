@@ -1,6 +1,6 @@
 /** Stations per task: small enough that no thread waits long for another's last task, large enough that sending one
  *  costs nothing beside computing it. */
-const STATIONS_PER_TASK = 50;
+export const STATIONS_PER_TASK = 50;
 
 /** Splits a list into consecutive chunks of at most `size`. Example: [1, 2, 3], 2 → [[1, 2], [3]] */
 export function chunksOf<Item>(items: readonly Item[], size: number = STATIONS_PER_TASK): Item[][] {

@@ -84,7 +84,7 @@ test('cancelled work ends for all who joined, and the next to ask starts it anew
 
 test('a job that waits its turn can be cancelled before the one it waits for ends, and the third still waits', async () => {
   const [first, second, third] = ['d', 'e', 'f'].map(heldWork);
-  const jobs = [];
+  const jobs: string[] = [];
   for (const { order } of [first, second, third])
     jobs.push(await jobIn(await longAnswer({ ...order, ...many }, asText)));
   await cancelJob(jobs[1]);
