@@ -1,10 +1,13 @@
 /** How often more stations of a region fall than chance allows, where none has a trend. */
 import { type Basis, SERIAL_CORRECTIONS } from '../../lib/basis.ts';
 import { beyondChance } from '../../lib/region/beyond-chance.ts';
-import { chanceSeries } from '../../lib/region/chance-series.ts';
+import { chanceSeries, medianLag1 } from '../../lib/region/chance-series.ts';
+import { CHANCE_METHODS, type ChanceMethod } from '../../lib/region/regional-types.ts';
+import { sievedChance } from '../../lib/region/sieved-chance.ts';
 import { trendFamily } from '../../lib/region/trend-family.ts';
 import { fieldLevelName } from '../../lib/region/true-level.ts';
 import { permutedKendall } from '../../lib/statistics/permuted-kendall.ts';
+import { sieveTerms } from '../../lib/statistics/sieve.ts';
 import { countsByReplicate } from '../../lib/statistics/trend-bits.ts';
 import type { Scenario } from './figure.ts';
 import { noise, yearsFrom } from './noise.ts';
@@ -13,42 +16,59 @@ const YEARS = 40;
 const STATIONS = 40;
 const ALPHA = 0.1;
 const NOMINAL = 0.05;
-const REPLICATES = 1000;
+const PERMUTATIONS = 1000;
+const SIEVED = 400;
 const years = yearsFrom(1980, YEARS);
 
 type Correction = Basis['serialCorrection'];
 
 /** 1 when the count of falling stations is beyond chance. */
-function falls(serialCorrection: Correction, lag1: number, size: number): number[] {
+function falls(method: ChanceMethod, serialCorrection: Correction, lag1: number, size: number): number[] {
+  const basis = { alpha: ALPHA, serialCorrection };
   return Array.from({ length: size }, (_, i) => {
     const rows = noise({ stations: STATIONS, years: YEARS, lag1, shared: 0.5 }, 'field', lag1, i);
     const family = rows.map((values, station) => ({ years, values: [...values], label: `S${station}` }));
-    const found = trendFamily(family, serialCorrection, `field ${i}`).filter(({ p, z }) => p < ALPHA && z < 0).length;
+    const figures = trendFamily(family, serialCorrection, `field ${i}`);
+    const found = figures.filter(({ p, z }) => p < ALPHA && z < 0).length;
     const stations = chanceSeries(
-      family.map(({ values, label }) => ({
-        code: label,
-        rank: 1,
-        years,
-        values,
-        trendOf: 'minima',
-        serialFactor: null,
-      })),
-      { alpha: ALPHA, serialCorrection },
+      family.map(({ values, label }, station) => {
+        const { serialFactor } = figures[station];
+        return { code: label, rank: 1, years, values, trendOf: 'minima', serialFactor };
+      }),
+      basis,
     );
-    const bits = permutedKendall({ ...stations, replicates: REPLICATES, seed: `field ${i}` });
+    const bits =
+      method === 'permutation'
+        ? permutedKendall({ ...stations, replicates: PERMUTATIONS, seed: `field ${i}` })
+        : sievedChance({
+            stations: family.map(({ values, label }, station) => {
+              const [slope, critical] = [stations.slopes[station], stations.corrected[station]];
+              return { code: label, years, values, slope, critical };
+            }),
+            terms: sieveTerms([years], medianLag1(stations.lag1) ?? 0),
+            basis,
+            replicates: SIEVED,
+            seed: `field ${i}`,
+          });
     const byChance = countsByReplicate(bits, [...family.keys()]);
     return beyondChance(byChance.falling, found).p <= NOMINAL ? 1 : 0;
   });
 }
 
-export const fieldLevel: Scenario[] = SERIAL_CORRECTIONS.flatMap((correction) =>
-  [0, 0.3, 0.5].map(
-    (lag1): Scenario => ({
-      claim: 'field-level',
-      of: fieldLevelName('permutation', correction),
-      setting: `lag-1 ${lag1}`,
-      cases: correction === 'block-bootstrap' ? 200 : 1000,
-      run: (size) => falls(correction, lag1, size),
-    }),
+/** A case takes long where series are resampled to be tested, or every replicate needs a slope. */
+const casesOf = (method: ChanceMethod, correction: Correction): number =>
+  correction === 'block-bootstrap' || (method === 'sieve' && correction === 'pre-whitened') ? 200 : 1000;
+
+export const fieldLevel: Scenario[] = CHANCE_METHODS.flatMap((method) =>
+  SERIAL_CORRECTIONS.flatMap((correction) =>
+    [0, 0.3, 0.5].map(
+      (lag1): Scenario => ({
+        claim: 'field-level',
+        of: fieldLevelName(method, correction),
+        setting: `lag-1 ${lag1}`,
+        cases: casesOf(method, correction),
+        run: (size) => falls(method, correction, lag1, size),
+      }),
+    ),
   ),
 );
