@@ -1,4 +1,5 @@
 'use client';
+import Link from 'next/link';
 import { type ReactNode, useEffect, useState } from 'react';
 import ui from '@/app/components/ui.module.css';
 import styles from './evidence.module.css';
@@ -12,11 +13,13 @@ interface Props {
   /** address of the section's table as CSV; null while there is none */
   csv: string | null;
   csvName: string;
+  /** where the methods page tells how the figures come about */
+  method?: string;
   children: ReactNode;
 }
 
 /** One question with its figures: an anchor of its own, a file of its own, and a way to print it alone. */
-export function Section({ id, title, lead, csv, csvName, children }: Props) {
+export function Section({ id, title, lead, csv, csvName, method, children }: Props) {
   const printAlone = usePrintAlone(id);
   return (
     <section id={id} className={styles.section} aria-labelledby={`${id}-title`} data-section={id}>
@@ -25,6 +28,11 @@ export function Section({ id, title, lead, csv, csvName, children }: Props) {
           <a href={`#${id}`}>{title}</a>
         </h2>
         <div className={styles.sectionTools}>
+          {method && (
+            <Link href={`/methods#${method}`} prefetch={false} aria-label={`Method of “${title}”`}>
+              Method
+            </Link>
+          )}
           <button type="button" className={ui.plain} onClick={printAlone} aria-label={`Print “${title}” alone`}>
             Print
           </button>

@@ -33,7 +33,7 @@ test('breaksSentence: two kinds are told singly, more are counted together, none
   const one = { ...DAM, label: 'weir changed', tested: 1, lower: 0, higher: 0 };
   expect(breaksSentence({ summary: [DAM, one] })).toBe(`${summaryWords(DAM)} ${summaryWords(one)}`);
   expect(breaksSentence({ summary: [DAM, one, { ...one, label: 'abstraction', tested: 2, lower: 1 }] })).toBe(
-    'Across 36 comparisons with usable years on both sides (33 dam, 1 weir changed, 2 abstraction) 13 are lower after and 2 higher, allowing for false discoveries.',
+    'Across 36 comparisons with usable years on both sides (dam 33, weir changed 1, abstraction 2) 13 are lower after and 2 higher, allowing for false discoveries.',
   );
   expect(breaksSentence({ summary: [{ ...DAM, tested: 0 }] })).toBeNull();
   expect(breaksSentence({ summary: [] })).toBeNull();

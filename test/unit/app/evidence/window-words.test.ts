@@ -37,14 +37,14 @@ test('windowShares: lists the windows that some station has', () => {
 
 test('windowsSentence: the windows in which most stations fall, and the shares that fall beyond chance with their years', () => {
   expect(windowsSentence(COUNTS, '10 %')).toBe(
-    'In 2 of 3 windows of years most stations have a falling slope; the share that falls at the 10 % level, each station by itself, runs from 0\u00a0% (1981–2000) to 50\u00a0% (1980–2000).',
+    'In 2 of 3 windows of at least 15 years most stations have a falling slope; the share that falls at the 10 % level, each station by itself, runs from 0\u00a0% (1981–2000) to 50\u00a0% (1980–2000).',
   );
 });
 
 test('windowsSentence: speaks of rising where more windows rise', () => {
   const rising = { ...COUNTS, negative: [1, 2, 0, 3] };
   expect(windowsSentence(rising, '5 %')).toMatch(
-    /^In all 3 windows of years most stations have a level or rising slope; the share that rises at the 5 % level/,
+    /^In all 3 windows of at least 15 years most stations have a level or rising slope; the share that rises at the 5 % level/,
   );
 });
 

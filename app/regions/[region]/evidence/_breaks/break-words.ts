@@ -24,7 +24,7 @@ export function summaryWords({ label, tested, lower, higher, medianPercent }: Su
 const MOST_TOLD_SINGLY = 2;
 
 /** What the breaks say in few words; null where there is nothing to part the years. Example for many kinds: "Across 12 dated
- *  changes with usable years on both sides (3 abstraction, 1 dam) 2 are lower after and 1 higher, allowing for false
+ *  changes with usable years on both sides (abstraction 3, dam 1, weir changed 8) 2 are lower after and 1 higher, allowing for false
  *  discoveries." */
 export function breaksSentence({ summary }: Pick<RegionBreaks, 'summary'>): string | null {
   const tested = summary.filter(({ tested }) => tested > 0);
@@ -32,7 +32,7 @@ export function breaksSentence({ summary }: Pick<RegionBreaks, 'summary'>): stri
   if (tested.length <= MOST_TOLD_SINGLY) return tested.map(summaryWords).join(' ');
   const sum = (of: 'tested' | 'lower' | 'higher') => tested.reduce((total, one) => total + one[of], 0);
   const [lower, higher] = [sum('lower'), sum('higher')];
-  const kinds = tested.map(({ label, tested }) => `${fixed(tested)} ${label}`).join(', ');
+  const kinds = tested.map(({ label, tested }) => `${label} ${fixed(tested)}`).join(', ');
   const be = lower === 0 || lower === 1 ? 'is' : 'are';
   return `Across ${fixed(sum('tested'))} comparisons with usable years on both sides (${kinds}) ${lower === 0 ? 'none' : fixed(lower)} ${be} lower after and ${higher === 0 ? 'none' : fixed(higher)} higher, allowing for false discoveries.`;
 }

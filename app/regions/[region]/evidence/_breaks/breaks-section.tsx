@@ -34,6 +34,7 @@ export function BreaksSection({ answer, years, span, labelOf, onYears, alpha, un
       lead="A dam, a new abstraction or a new rule parts the years at a date that is known without the flows. Choose such a break, or take each station’s own dated changes. A break chosen because the flows show one there is bound to test well; and a break is not a cause."
       csv={csv}
       csvName="Breaks CSV"
+      method="before-after"
     >
       <BreakChooser years={years} span={span} labelOf={labelOf} onChange={onYears} />
       <LongWait answer={answer} title="Comparing before and after" failed="Before and after could not be compared" />

@@ -48,6 +48,7 @@ export function ChanceSection({ answer, method, onMethod, alpha, csv, nameOf, dr
       lead={`Some stations fall at the ${alpha} level though nothing has changed, and neighbours that share weather do so together. So the years are played again without any trend, the same years for all stations, and the stations that fall are counted each time.`}
       csv={csv}
       csvName="Groups CSV"
+      method="beyond-chance"
     >
       <Segmented label="Chance is imitated by" value={method} options={METHODS} onChange={onMethod} />
       <LongWait answer={answer} title="Playing the years again" failed="Chance could not be told" />

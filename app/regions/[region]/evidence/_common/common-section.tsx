@@ -29,6 +29,7 @@ export function CommonSection({ answer, figure, csv }: Props) {
       lead="The regional Kendall test asks whether all stations of a group move one way. It respects that neighbours share weather and that low flows carry over from year to year. It assumes one trend common to all: where as many stations rise as fall, its answer means little, so the signs stand beside it."
       csv={csv}
       csvName="Groups CSV"
+      method="regional-kendall"
     >
       <LongWait answer={answer} title="Taking the stations together" failed="The common trend could not be tested" />
       {value && (

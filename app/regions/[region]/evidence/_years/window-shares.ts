@@ -1,15 +1,8 @@
 import type { YearWindow } from '@/app/components/start-end/window-grid';
+import type { RegionStartEnd } from '@/lib/region/window-types';
 
-/** RegionStartEnd as JSON carries it. */
-export interface WindowCounts {
-  starts: number[];
-  ends: number[];
-  /** by start × number of ends + end */
-  stations: ArrayLike<number>;
-  negative: ArrayLike<number>;
-  falling: ArrayLike<number>;
-  rising: ArrayLike<number>;
-}
+/** The chart of the region as JSON carries it. */
+export type WindowCounts = { [Part in keyof RegionStartEnd]: number[] };
 
 /** What one window of years says of the region. */
 export interface WindowShare {

@@ -12,7 +12,7 @@ export function windowsSentence(counts: WindowCounts, alpha: string): string | n
   const fallMost = windows.filter(({ negative, stations }) => 2 * negative > stations).length;
   const riseMost = windows.filter(({ negative, stations }) => 2 * negative < stations).length;
   const [most, word] = fallMost >= riseMost ? [fallMost, 'falling'] : [riseMost, 'level or rising'];
-  const of = `${fixed(windows.length)} ${windows.length === 1 ? 'window' : 'windows'} of years`;
+  const of = `${fixed(windows.length)} windows of at least 15 years`;
   const opening =
     windows.length === 1
       ? `In the one window of at least 15 usable years, ${yearsOf(windows[0].window)}, ${most === 1 ? `most stations have a ${word} slope` : 'as many stations have a falling slope as not'}`

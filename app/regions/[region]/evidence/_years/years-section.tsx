@@ -51,6 +51,7 @@ export function YearsSection({ answer, figure, onFigure, period, alpha, csv }: P
       lead="A trend of the last forty years need not be one of the last sixty. Each cell is a window of years: its start year at the side, its end year above, at least 15 usable years between. Windows overlap, so their agreement is not independent evidence."
       csv={csv}
       csvName="Windows CSV"
+      method="start-end-chart"
     >
       <LongWait answer={answer} title="Testing every window of years" failed="The windows could not be tested" />
       {value &&
