@@ -5,6 +5,7 @@ import { useWidth } from '@/app/components/use-width';
 import { yearTicks } from '@/app/components/year-ticks';
 import type { StationBreaks } from '@/lib/region/break-types';
 import { PLOT } from '../plot-box';
+import { placeLabels } from './break-labels.ts';
 import styles from './breaks-figure.module.css';
 
 export interface BreaksData {
@@ -24,7 +25,11 @@ interface Props {
   labelOf(year: number): string;
 }
 
-const HEIGHT = 220;
+const HEIGHT = 240;
+const SUGGESTED = 'suggested, not tested';
+/** Room for the words of a break and of the suggested one, pixels. */
+const LABEL = 82;
+const HINT = 128;
 
 /** Annual figures with the median of each part as a level, the breaks between them, and the one that the data suggest.
  *  Decoration beside the table, which says the same. */
@@ -36,8 +41,15 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
   const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
   const shown = values.map((value) => value * factor);
   const low = Math.min(0, ...shown);
-  const y = scaleLinear([low, Math.max(low + 1e-9, ...shown)], [HEIGHT - PLOT.bottom, PLOT.top]).nice(5);
   const { segments, steps, suggested } = breaks;
+  const labels = placeLabels(
+    steps.map(({ break: { year } }) => x(year - 0.5)),
+    LABEL,
+    right,
+  );
+  const top = PLOT.top + (labels.length === 0 ? 0 : 15 * (1 + Math.max(...labels.map(({ row }) => row))));
+  const [hint] = placeLabels(suggested ? [x(suggested.lastBefore + 0.5)] : [], HINT, right);
+  const y = scaleLinear([low, Math.max(low + 1e-9, ...shown)], [HEIGHT - PLOT.bottom, top]).nice(5);
   const bottom = HEIGHT - PLOT.bottom;
   return (
     <div ref={frame} className={styles.frame}>
@@ -65,16 +77,16 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
         ))}
         {suggested && (
           <g className={styles.suggested}>
-            <line x1={x(suggested.lastBefore + 0.5)} x2={x(suggested.lastBefore + 0.5)} y1={PLOT.top} y2={bottom} />
-            <text {...besideLine(x(suggested.lastBefore + 0.5), right)} y={bottom - 6}>
-              suggested, not tested
+            <line x1={x(suggested.lastBefore + 0.5)} x2={x(suggested.lastBefore + 0.5)} y1={top} y2={bottom} />
+            <text x={hint.x} textAnchor={hint.textAnchor} y={bottom - 6}>
+              {SUGGESTED}
             </text>
           </g>
         )}
-        {steps.map(({ break: { year } }) => (
+        {steps.map(({ break: { year } }, i) => (
           <g key={year} className={styles.break}>
-            <line x1={x(year - 0.5)} x2={x(year - 0.5)} y1={PLOT.top} y2={bottom} />
-            <text {...besideLine(x(year - 0.5), right)} y={PLOT.top + 9}>
+            <line x1={x(year - 0.5)} x2={x(year - 0.5)} y1={top - 15 * labels[i].row - 14} y2={bottom} />
+            <text x={labels[i].x} textAnchor={labels[i].textAnchor} y={top - 4 - 15 * labels[i].row}>
               from {labelOf(year)}
             </text>
           </g>
@@ -102,9 +114,4 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
       </p>
     </div>
   );
-}
-
-/** Words stand to the right of their line, or to its left where the figure ends. */
-function besideLine(x: number, right: number): { x: number; textAnchor: 'start' | 'end' } {
-  return x + 130 > right ? { x: x - 5, textAnchor: 'end' } : { x: x + 5, textAnchor: 'start' };
 }
