@@ -25,12 +25,15 @@ export function regionSpan(rows: readonly StartEndRow[], { period }: Pick<Resolv
  *  counts where it has years.
  *  @param rows  ranked stations, or some of them: charts of parts over one span add up (`addCharts`)
  *  @param span  [first, last] years of the axes, see `regionSpan`
- *  @throws RangeError when a value is not a finite number */
+ *  @throws RangeError when a value is not a finite number, or alpha does not lie between 0 and 1 */
 export function regionStartEnd(
   rows: readonly StartEndRow[],
   { serialCorrection, alpha }: Pick<ResolvedBasis, 'serialCorrection' | 'alpha'>,
   span: readonly [number, number],
 ): RegionStartEnd {
+  if (!(alpha > 0 && alpha < 1)) {
+    throw new RangeError(`regionStartEnd: alpha must lie between 0 and 1, got ${alpha}`);
+  }
   const chart = emptyChart(span);
   const critical = normalQuantile(1 - alpha / 2);
   for (const row of rows) {

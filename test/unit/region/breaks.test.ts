@@ -216,3 +216,19 @@ test('suggestedBreak: nothing from 9 years, from equal values, or from none', ()
   const { rows, basis } = ranked({ A: stepped(0.5).slice(0, 9), B: constant(40), C: [] });
   for (const row of rows) expect(suggestedBreak(row, basis)).toBeNull();
 });
+
+test.each([
+  ['one year', [2]],
+  ['two years', [2, 3]],
+  ['all zeros', constant(40, 0)],
+])('stationBreaks: %s are answered without a figure, or by p 1', (_, values) => {
+  const { rows, basis } = ranked({ A: values });
+  const [step] = stationBreaks(rows[0], basis, chosen(1981)).steps;
+  expect(step?.p ?? null).toBeNull();
+});
+
+test('stationBreaks: an infinite value is refused', () => {
+  const { rows, basis } = ranked({ A: stepped(0.5) });
+  const infinite = { ...rows[0], values: rows[0].values.with(3, Number.POSITIVE_INFINITY) };
+  expect(() => stationBreaks(infinite, basis, chosen(2000))).toThrow(RangeError);
+});

@@ -101,3 +101,12 @@ test('regionStartEnd: all-equal values are neither negative nor falling nor risi
   const { stations, negative, falling, rising } = chart;
   expect([stations[whole], negative[whole], falling[whole], rising[whole]]).toEqual([1, 0, 0, 0]);
 });
+
+test('regionStartEnd: refuses alpha 0 and 1, and infinite values, by name', () => {
+  const { rows, basis } = region();
+  for (const alpha of [0, 1, Number.NaN]) {
+    expect(() => regionStartEnd(rows, { ...basis, alpha }, [1980, 2015])).toThrow('regionStartEnd: alpha must lie');
+  }
+  const infinite = { ...rows[0], values: rows[0].values.with(5, Number.POSITIVE_INFINITY) };
+  expect(() => regionStartEnd([infinite], basis, [1980, 2015])).toThrow('windowScores: x[5]');
+});

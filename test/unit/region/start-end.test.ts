@@ -130,3 +130,34 @@ test('startEnd: equal values have Z 0 and p 1, and their sign is no sign', () =>
   const { ends, z, p, steadiness } = startEnd(row, basis);
   expect([z[ends.length - 1], p[ends.length - 1], steadiness]).toEqual([0, 1, null]);
 });
+
+test.each([
+  ['only unusable years', constant(30, Number.NaN), {}],
+  ['a period outside the record', wandering(40), { period: [1900, 1940] as [number, number] }],
+  ['one year', [1], {}],
+  ['two years', [1, 2], {}],
+])('startEnd: %s have an empty chart', (_, values, keys) => {
+  const { row, basis } = rankedAlone(values, keys);
+  const { starts, ends, z, windows, steadiness } = startEnd(row, basis);
+  expect([starts, ends, z.length, windows, steadiness]).toEqual([[], [], 0, 0, null]);
+});
+
+test('startEnd: minYears over the period leaves the station unranked, and its chart as it is', () => {
+  const { row, basis } = rankedAlone(wandering(40), { minYears: 60 });
+  expect(row.rank).toBeNull();
+  const { ends, z } = startEnd(row, basis);
+  expect(z[ends.length - 1]).toBe(f32(rankedAlone(wandering(40)).row.z));
+});
+
+test('startEnd: all zeros have no slope, no percentage and p 1', () => {
+  const { row, basis } = rankedAlone(constant(30, 0));
+  const { ends, p, slopePerDecade, percentPerDecade } = startEnd(row, basis);
+  const whole = ends.length - 1;
+  expect([p[whole], slopePerDecade[whole] + 0, percentPerDecade[whole]]).toEqual([1, 0, Number.NaN]);
+});
+
+test('startEnd: an infinite value is refused by its place', () => {
+  const { row, basis } = rankedAlone(wandering(40));
+  const infinite = { ...row, values: row.values.with(7, Number.NEGATIVE_INFINITY) };
+  expect(() => startEnd(infinite, basis)).toThrow('windowScores: x[7]');
+});
