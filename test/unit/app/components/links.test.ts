@@ -1,5 +1,13 @@
 import { expect, test } from 'vitest';
-import { apiHref, BASIS_PARAMETERS, carried, regionHref, stationHref, yearHref } from '@/app/components/links';
+import {
+  apiHref,
+  BASIS_PARAMETERS,
+  carried,
+  pairHref,
+  regionHref,
+  stationHref,
+  yearHref,
+} from '@/app/components/links';
 import { BASIS_KEYS } from '@/lib/basis';
 
 test('links carry every key of the basis', () => {
@@ -35,4 +43,10 @@ test('carried leaves its input as it was', () => {
 
 test('how many of the steepest and what fills the discs go along from page to page', () => {
   expect(carried('k=3&fill=span&breaks=1990').toString()).toBe('k=3&fill=span');
+});
+
+test('pairHref names station and references, a comma inside a code by its number', () => {
+  expect(pairHref('r', 'A1', 'days=30&station=Z9&with=Q')).toBe('/regions/r/pair?days=30&station=A1');
+  expect(pairHref('r', 'A1', '', ['B2', 'C,3'])).toBe('/regions/r/pair?station=A1&with=B2,C%252C3');
+  expect(pairHref('r', null, 'station=Z9')).toBe('/regions/r/pair');
 });

@@ -3,7 +3,7 @@ import { Cautions } from '@/app/components/cautions';
 import { ChangeLegend } from '@/app/components/change-marks/change-marks';
 import { markedChanges } from '@/app/components/change-marks/marked-changes';
 import { count, percent } from '@/app/components/format';
-import { apiHref, deriveHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
+import { apiHref, deriveHref, pairHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
 import ui from '@/app/components/ui.module.css';
@@ -83,6 +83,9 @@ export function StationScreen({ region, detail, background, rows, query }: Props
               />
               <Link href={stationEditHref(region.slug, station.code, query)} prefetch={false}>
                 Edit
+              </Link>
+              <Link href={pairHref(region.slug, station.code, query)} prefetch={false}>
+                Against a reference
               </Link>
               <Link href={deriveHref(region.slug, station.code, query)} prefetch={false}>
                 Derive from it
