@@ -67,8 +67,10 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
   const rankedInView = inView === null ? null : lists.ranked.filter((row) => inView.has(row.code)).length;
   const { view, pending } = certainty;
   const sureness = useMemo(() => ({ view, waiting: pending, k }), [view, pending, k]);
-  const moved = useMemo(() => placesMoved(movement), [movement]);
-  const movedOf = useCallback((code: string) => moved.get(code) ?? null, [moved]);
+  const movedOf = useMemo(() => {
+    const moved = movement && placesMoved(movement);
+    return moved && ((code: string) => moved.get(code) ?? null);
+  }, [movement]);
   const detectableOf = useCallback(
     (row: MapRow) => {
       const trend = view?.detectable.get(row.code);
@@ -173,8 +175,8 @@ export const RankingPanel = memo(function RankingPanel(props: RankingPanelProps)
   );
 });
 
-function placesMoved(movement: RankingMovement | null): Map<string, Moved> {
-  const compared = movement?.movements.filter(({ after }) => after !== null) ?? [];
+function placesMoved({ movements }: RankingMovement): Map<string, Moved> {
+  const compared = movements.filter(({ after }) => after !== null);
   return new Map(compared.map(({ code, moved, before }) => [code, { places: moved, before }]));
 }
 

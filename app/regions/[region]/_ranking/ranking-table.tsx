@@ -33,7 +33,8 @@ interface RankingTableProps {
   onSelect: (code: string | null) => void;
   /** null for a list without places */
   sureness: Sureness | null;
-  movedOf: (code: string) => Moved | null;
+  /** against the region's own terms; null while there is nothing to compare */
+  movedOf: ((code: string) => Moved | null) | null;
   /** the trend that a record would have shown, for stations without a significant one */
   detectableOf: (row: MapRow) => string | null;
 }
@@ -136,6 +137,7 @@ export function RankingTable(props: RankingTableProps) {
           <tr aria-rowindex={1}>
             <th scope="col" className={styles.rank}>
               {figure === 'zero-days' ? <span className="visually-hidden">No rank</span> : 'Rank'}
+              {movedOf && sureness && <span className={styles.under}>moved</span>}
             </th>
             <th scope="col" className={styles.station}>
               Station
@@ -199,7 +201,7 @@ export function RankingTable(props: RankingTableProps) {
               span={span}
               units={units}
               sureness={sureness}
-              moved={movedOf(rows[at].code)}
+              moved={movedOf && movedOf(rows[at].code)}
               detectable={detectableOf(rows[at])}
             />
           ))}
