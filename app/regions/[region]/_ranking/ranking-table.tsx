@@ -201,7 +201,7 @@ export function RankingTable(props: RankingTableProps) {
               span={span}
               units={units}
               sureness={sureness}
-              moved={movedOf && movedOf(rows[at].code)}
+              moved={movedOf?.(rows[at].code) ?? null}
               detectable={detectableOf(rows[at])}
             />
           ))}
