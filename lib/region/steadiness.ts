@@ -27,7 +27,7 @@ export function steadinessOf(
   if (n < FEWEST_WINDOW_YEARS) return { windows: 0, share: null };
   const { s } = windowScores(values);
   const sign = Math.sign(s[(n - 1) * n]);
-  const [first, last] = period ?? [years[0], years[(n - 1) * n]];
+  const [first, last] = period ?? [years[0], years[n - 1]];
   let windows = 0;
   let agreeing = 0;
   for (let i = 0; i + FEWEST_WINDOW_YEARS <= n; i++) {
