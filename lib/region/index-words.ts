@@ -22,7 +22,7 @@ const FALLS = { falling: 'falling', rising: 'rising', shortly: { falling: 'falli
 export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
   minimum: { ...FALLS, many: 'minima', mean: 'mean minimum', heading: 'Annual minima' },
   q95: { ...FALLS, many: 'annual Q95', mean: 'mean annual Q95', heading: 'Annual Q95' },
-  'mean-flow': { ...FALLS, many: 'annual mean flows', mean: 'mean flow', heading: 'Annual mean flows' },
+  'mean-flow': { ...FALLS, many: 'annual mean flows', mean: 'mean flow', heading: 'Mean flows' },
   'zero-flow-days': {
     many: 'counts of zero-flow days',
     mean: 'mean number of zero-flow days',
@@ -32,14 +32,14 @@ export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
     heading: 'Zero-flow days',
     none: 'no zero-flow day',
   },
-  bfi: { ...FALLS, many: 'baseflow indices', mean: 'mean baseflow index', heading: 'Baseflow indices' },
+  bfi: { ...FALLS, many: 'baseflow indices', mean: 'mean baseflow index', heading: 'Baseflow index' },
   'minimum-date': {
     many: 'dates',
     mean: 'mean date',
     falling: 'earlier',
     rising: 'later',
     shortly: { falling: 'earlier', rising: 'later' },
-    heading: 'Dates of the minimum',
+    heading: 'Dates of lows',
     none: '',
   },
   deficit: {

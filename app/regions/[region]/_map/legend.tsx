@@ -19,6 +19,7 @@ interface Entry {
 const RANKED: Needle[] = [
   { kind: 'ranked', side: 'falling', significant: true, angle: TILT },
   { kind: 'ranked', side: 'falling', significant: false, angle: TILT },
+  { kind: 'ranked', side: 'level', significant: true, angle: 0 },
   { kind: 'ranked', side: 'level', significant: false, angle: 0 },
   { kind: 'ranked', side: 'rising', significant: false, angle: -TILT },
   { kind: 'ranked', side: 'rising', significant: true, angle: -TILT },
@@ -40,8 +41,9 @@ const SHARES = [0, 0.25, 0.5, 0.75, 1];
 function entry(needle: Needle, index: AnnualIndexName): Entry {
   const holds = (other: Needle) =>
     other.kind === needle.kind && other.side === needle.side && other.significant === needle.significant;
-  // a level mark is no trend, significant or not
-  return { words: needle.side === 'level' ? 'level' : needleWords(needle, index), needle, holds };
+  // a slope of 0 is level; with many equal years its trend may be significant for all that
+  const words = needle.side === 'level' && !needle.significant ? 'level' : needleWords(needle, index);
+  return { words, needle, holds };
 }
 
 interface LegendProps {

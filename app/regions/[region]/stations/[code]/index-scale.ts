@@ -31,7 +31,8 @@ export function indexScale(index: AnnualIndexName, days: number, units: Units): 
   return {
     index,
     ...shown,
-    axisName: shown.unit ? `${name}, ${shown.unit}` : name,
+    // days of zero flow are named already
+    axisName: shown.unit && shown.unit !== 'days' ? `${name}, ${shown.unit}` : name,
     none: index === 'minimum' ? 'no minimum' : 'no figure used',
   };
 }

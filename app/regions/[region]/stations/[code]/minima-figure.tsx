@@ -178,7 +178,7 @@ function Key({ points, slope, none }: { points: readonly MinimaPoint[]; slope: S
       {points.some((point) => point.used) && (
         <KeyItem shape={<circle className={styles.used} cx="7" cy="7" r="4" />} text="year used" />
       )}
-      {points.some((point) => point.usable && !point.used) && (
+      {points.some((point) => point.usable && !point.used && point.value !== null) && (
         <KeyItem shape={<circle className={styles.outside} cx="7" cy="7" r="4" />} text="usable, not used" />
       )}
       {points.some((point) => !point.usable && point.value !== null) && (
