@@ -89,6 +89,7 @@ export interface Alternative {
   /** against the basis at hand */
   tau: number | null;
   movedFar: number;
+  /** `before` is its place under the basis at hand, `after` the one under this choice */
   furthest: Movement | null;
   /** why it cannot be computed; null when it can */
   problem: string | null;
