@@ -53,8 +53,8 @@ export function ChoosePair({ stations, station, candidates, references, ownChoic
   const nameOf = (code: string) => stations.find((each) => each.code === code)?.name || code;
   return (
     <div className={styles.choose} aria-busy={pending}>
-      <label className={ui.label} htmlFor={stationId}>
-        Station
+      <div className={ui.label}>
+        <label htmlFor={stationId}>Station</label>
         <select
           id={stationId}
           className={ui.select}
@@ -68,7 +68,7 @@ export function ChoosePair({ stations, station, candidates, references, ownChoic
             </option>
           ))}
         </select>
-      </label>
+      </div>
       {station !== null && (
         <fieldset className={styles.references}>
           <legend>References</legend>
@@ -120,8 +120,8 @@ export function ChoosePair({ stations, station, candidates, references, ownChoic
           {candidates.length > SHOWN && (
             <p className={ui.hint}>{count(candidates.length, 'station')}: the list scrolls.</p>
           )}
-          <label className={ui.label} htmlFor={otherId}>
-            Another station
+          <div className={ui.label}>
+            <label htmlFor={otherId}>Another station</label>
             <select id={otherId} className={ui.select} value="" onChange={(event) => tick(event.target.value, true)}>
               <option value="">Add by name…</option>
               {stations
@@ -132,7 +132,7 @@ export function ChoosePair({ stations, station, candidates, references, ownChoic
                   </option>
                 ))}
             </select>
-          </label>
+          </div>
         </fieldset>
       )}
     </div>
