@@ -63,7 +63,7 @@ export function ComparisonSection({ comparison, changes, basis, csv }: Props) {
             )}
             tone={toneOf(ratioTrend, basis.alpha, moreIsDrier)}
             level={{ value: 1, text: 'the ordinary ratio, 1' }}
-            axisName={`${indexOfYear(basis)} over that of ${referenceName}, each over its own mean`}
+            axisName={`${capital(indexOfYear(basis))} over that of ${referenceName}, each over its own mean`}
             changes={marked}
             yearStart={basis.yearStart}
             summary={`Ratio of ${station.name} to ${referenceName}, year by year, ${compared.length} years.`}
@@ -98,7 +98,7 @@ export function ComparisonSection({ comparison, changes, basis, csv }: Props) {
             label="Station and reference, year by year"
             heads={[
               'Year',
-              `${indexOfYear(basis)}${shownUnit ? `, ${shownUnit}` : ''}`,
+              `${capital(indexOfYear(basis))}${shownUnit ? `, ${shownUnit}` : ''}`,
               'Reference',
               'Ratio',
               'Sum of station',
@@ -118,3 +118,5 @@ export function ComparisonSection({ comparison, changes, basis, csv }: Props) {
     </section>
   );
 }
+
+const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);

@@ -91,8 +91,8 @@ export function DoubleMassFigure({ years, summary }: Props) {
       <p className={styles.readout}>
         {text ?? (
           <span className={styles.key}>
-            Dashed: as it would be had the ratio never changed. A bend is where it did. The arrow keys read single
-            years.
+            Dashed: as it would be had the ratio never changed. A bend is where it did.{' '}
+            <span className={styles.onScreen}>The arrow keys read single years.</span>
           </span>
         )}
       </p>

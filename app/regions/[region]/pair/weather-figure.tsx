@@ -97,8 +97,8 @@ export function WeatherFigure({ years, factor, unit, weatherName, minimumName, s
       <p className={styles.readout}>
         {text ?? (
           <span className={styles.key}>
-            Hollow: years before {middle}. Full: {middle} and later. Line: what such weather usually leaves. The arrow
-            keys read single years.
+            Hollow: years before {middle}. Full: {middle} and later. Line: what such weather usually leaves.{' '}
+            <span className={styles.onScreen}>The arrow keys read single years.</span>
           </span>
         )}
       </p>

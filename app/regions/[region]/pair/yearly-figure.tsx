@@ -114,7 +114,8 @@ export function YearlyFigure({ points, slope, tone, level, axisName, changes, ye
           current.text
         ) : (
           <span className={styles.key}>
-            Thick line: slope with its 95 % interval. Dashed: {level.text}. The arrow keys read single years.
+            Thick line: slope with its 95 % interval. Dashed: {level.text}.{' '}
+            <span className={styles.onScreen}>The arrow keys read single years.</span>
           </span>
         )}
       </p>
