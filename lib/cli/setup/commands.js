@@ -1,5 +1,5 @@
 /** The batch commands, in the order of the help. Their bodies are bundled TypeScript. */
-export const BATCH_COMMANDS = ['import', 'rank', 'minima', 'curves', 'export', 'backup', 'restore', 'serve'];
+export const BATCH_COMMANDS = ['import', 'rank', 'minima', 'curves', 'pair', 'export', 'backup', 'restore', 'serve'];
 
 export const HELP = `Hungerstone tells which rivers of a region are losing their low flows, how fast and how surely.
 
@@ -9,6 +9,7 @@ Usage: npx hungerstone COMMAND [options]
   rank      the stations in order of trend in their annual minima
   minima    the annual minima of every station
   curves    normalised duration curves
+  pair      one station against reference stations
   export    a region as one archive of open formats
   backup    write the whole database to one file
   restore   put a backup back
