@@ -2,9 +2,8 @@ import { DAY_SECONDS } from '../calendar/day.ts';
 import { type Season, seasonSpan } from '../calendar/season.ts';
 import type { DailySeries } from '../series/daily-series.ts';
 import { MEAN_DIGITS, roundSignificant } from '../series/round-significant.ts';
-import { sortAscending } from '../series/sort-ascending.ts';
 import { usableFlow } from '../series/usable-flow.ts';
-import { quantileType6 } from '../statistics/quantile.ts';
+import { quantileOfUnsorted } from '../statistics/quantile.ts';
 import type { MinimaOptions } from './annual-minima.ts';
 import type { AnnualMinima } from './annual-minima-types.ts';
 import { smoothedMinimaBaseflow } from './baseflow.ts';
@@ -67,13 +66,13 @@ function usableSpans(
 function yearFigure(index: RecordIndex, flow: Float64Array, spans: readonly (Span | null)[]): (span: Span) => number {
   switch (index) {
     case 'q95':
-      return ({ from, to }) => quantileType6(sortAscending(flow.subarray(from, to)), BELOW_Q95);
+      return ({ from, to }) => quantileOfUnsorted(flow.subarray(from, to), BELOW_Q95);
     case 'bfi': {
       const base = smoothedMinimaBaseflow(flow);
       return (span) => baseflowIndex(flow, base, span);
     }
     case 'deficit': {
-      const threshold = quantileType6(sortAscending(flowsIn(flow, spans)), BELOW_Q90);
+      const threshold = quantileOfUnsorted(flowsIn(flow, spans), BELOW_Q90);
       return ({ from, to }) => deficitVolume(flow.subarray(from, to), threshold);
     }
   }

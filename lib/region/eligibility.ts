@@ -26,7 +26,9 @@ export function standingOf(
   const { years, zeroValues } = used;
   const n = years.length;
   if (n === 0) {
-    return { kind: 'unranked', reason: period === null ? 'no usable year' : `no usable year in ${spanWords(period)}` };
+    const withFigure = index === 'minimum' ? '' : ` with ${INDEX_WORDS[index].one}`;
+    const inPeriod = period === null ? '' : ` in ${spanWords(period)}`;
+    return { kind: 'unranked', reason: `no usable year${withFigure}${inPeriod}` };
   }
   const [first, last] = period ?? [years[0], years[n - 1]];
   const failed: string[] = [];

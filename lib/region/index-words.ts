@@ -2,6 +2,8 @@ import type { AnnualIndexName } from '../basis.ts';
 
 /** An annual index in words, for sentences, headings and files. */
 export interface IndexWords {
+  /** the figure of a year. Example: "a minimum" */
+  one: string;
   /** the figures of several years. Example: "minima" */
   many: string;
   /** the mean of them. Example: "mean minimum" */
@@ -20,10 +22,11 @@ export interface IndexWords {
 const FALLS = { falling: 'falling', rising: 'rising', shortly: { falling: 'falling', rising: 'rising' }, none: '' };
 
 export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
-  minimum: { ...FALLS, many: 'minima', mean: 'mean minimum', heading: 'Annual minima' },
-  q95: { ...FALLS, many: 'annual Q95', mean: 'mean annual Q95', heading: 'Annual Q95' },
-  'mean-flow': { ...FALLS, many: 'annual mean flows', mean: 'mean flow', heading: 'Mean flows' },
+  minimum: { ...FALLS, one: 'a minimum', many: 'minima', mean: 'mean minimum', heading: 'Annual minima' },
+  q95: { ...FALLS, one: 'an annual Q95', many: 'annual Q95', mean: 'mean annual Q95', heading: 'Annual Q95' },
+  'mean-flow': { ...FALLS, one: 'a mean flow', many: 'annual mean flows', mean: 'mean flow', heading: 'Mean flows' },
   'zero-flow-days': {
+    one: 'a count of zero-flow days',
     many: 'counts of zero-flow days',
     mean: 'mean number of zero-flow days',
     falling: 'drying for longer',
@@ -32,8 +35,15 @@ export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
     heading: 'Zero-flow days',
     none: 'no zero-flow day',
   },
-  bfi: { ...FALLS, many: 'baseflow indices', mean: 'mean baseflow index', heading: 'Baseflow index' },
+  bfi: {
+    ...FALLS,
+    one: 'a baseflow index',
+    many: 'baseflow indices',
+    mean: 'mean baseflow index',
+    heading: 'Baseflow index',
+  },
   'minimum-date': {
+    one: 'a date',
     many: 'dates',
     mean: 'mean date',
     falling: 'earlier',
@@ -43,6 +53,7 @@ export const INDEX_WORDS: Readonly<Record<AnnualIndexName, IndexWords>> = {
     none: '',
   },
   deficit: {
+    one: 'a deficit volume',
     many: 'deficit volumes',
     mean: 'mean deficit volume',
     falling: 'larger deficits',

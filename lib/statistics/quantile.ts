@@ -1,4 +1,5 @@
 import { presentValues } from './present-values.ts';
+import { selectInPlace } from './select.ts';
 
 /** Ranks this near to a whole number are that number: (n + 1)·p carries a rounding error. */
 export const RANK_TOLERANCE = 1e-9;
@@ -15,6 +16,19 @@ export function quantileType6(sorted: ArrayLike<number>, probability: number): n
     throw new RangeError(`quantileType6: probability must lie in 0..1, got ${probability}`);
   }
   return valueAtRank(sorted, (sorted.length + 1) * probability);
+}
+
+/** `quantileType6` of values in any order, without putting all of them in order: for one quantile of many values.
+ *  @param x  NaN where missing; left unchanged
+ *  @throws RangeError as `quantileType6`, and for an infinite value */
+export function quantileOfUnsorted(x: ArrayLike<number>, probability: number): number {
+  const values = presentValues(x, 'quantileOfUnsorted');
+  const last = values.length - 1;
+  // the two order statistics on either side of the rank are all that is read
+  const below = Math.floor((values.length + 1) * probability) - 1;
+  if (below >= 0 && below <= last) selectInPlace(values, below);
+  if (below + 1 >= 0 && below + 1 <= last) selectInPlace(values, below + 1, Math.max(0, below + 1), last);
+  return quantileType6(values, probability);
 }
 
 /** Value at a rank that need not be whole, linear between order statistics.

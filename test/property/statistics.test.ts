@@ -3,7 +3,7 @@ import { expect, test } from 'vitest';
 import { benjaminiHochberg } from '../../lib/statistics/false-discovery.ts';
 import { mannKendall } from '../../lib/statistics/mann-kendall.ts';
 import { normalQuantile } from '../../lib/statistics/normal.ts';
-import { median, quantileType6, valueAtRank } from '../../lib/statistics/quantile.ts';
+import { median, quantileOfUnsorted, quantileType6, valueAtRank } from '../../lib/statistics/quantile.ts';
 import { averageRanks } from '../../lib/statistics/ranks.ts';
 import { senSlope } from '../../lib/statistics/sen-slope.ts';
 import { ar1VarianceFactor, cutLag1, lag1OfRanks, shrinkLag1 } from '../../lib/statistics/serial-correlation.ts';
@@ -202,6 +202,21 @@ test('ar1VarianceFactor is at least 1 for any cut correlation and grows with it'
       const [low, high] = [cutLag1(Math.min(a, b)), cutLag1(Math.max(a, b))];
       expect(ar1VarianceFactor(n, low)).toBeGreaterThanOrEqual(1);
       expect(ar1VarianceFactor(n, high)).toBeGreaterThanOrEqual(ar1VarianceFactor(n, low));
+    }),
+  );
+});
+
+test('quantileOfUnsorted is quantileType6 of the sorted values, whatever the order and the gaps', () => {
+  const value = fc.oneof(
+    { weight: 8, arbitrary: fc.integer({ min: -9, max: 9 }) },
+    { weight: 1, arbitrary: fc.constant(Number.NaN) },
+  );
+  fc.assert(
+    fc.property(fc.array(value, { maxLength: 60 }), fc.integer({ min: 0, max: 40 }), (values, fortieths) => {
+      const sorted = values.filter((each) => !Number.isNaN(each)).sort((a, b) => a - b);
+      const given = Float64Array.from(values);
+      expect(quantileOfUnsorted(given, fortieths / 40)).toBe(quantileType6(sorted, fortieths / 40));
+      expect(given).toEqual(Float64Array.from(values));
     }),
   );
 });

@@ -142,3 +142,21 @@ test('rankRegion refuses figures that do not run along the years, and an index w
   );
   expect(() => ranking([station('a', { first: 2001, values: constant(5) })], 'bfi')).toThrow(RangeError);
 });
+
+test('rankRegion says when a station has usable years, but none with a figure', () => {
+  const { rows, counts } = ranking([withFigures('a', constant(5, none))], 'bfi');
+  expect(rows[0].unrankedReason).toBe('no usable year with a baseflow index in 2001–2005');
+  expect(counts).toMatchObject({ stations: 1, ranked: 0, unranked: 1 });
+});
+
+test('rankRegion of one station with equal figures has no trend under any index that may be constant', () => {
+  for (const index of ['q95', 'bfi', 'deficit', 'mean-flow'] as const) {
+    const [row] = ranking([withFigures('a', constant(5, 2))], index).rows;
+    expect(row, index).toMatchObject({ rank: 1, trend: 'none', valueSlope: 0, z: 0, p: 1, tau: null });
+    expect(Object.is(row.valueSlope, 0), index).toBe(true);
+  }
+});
+
+test('rankRegion refuses an infinite figure by name', () => {
+  expect(() => ranking([withFigures('a', [1, 2, Number.POSITIVE_INFINITY, 4, 5])], 'q95')).toThrow(/Infinity/);
+});
