@@ -60,7 +60,7 @@ export function BreakChooser({ years, span, labelOf, onChange, none = NONE, back
               <button
                 type="button"
                 className={ui.plain}
-                aria-label={`Take away the break before ${labelOf(year)}`}
+                aria-label={`Remove the break before ${labelOf(year)}`}
                 onClick={() => onChange(years.filter((other) => other !== year))}
               >
                 Remove
