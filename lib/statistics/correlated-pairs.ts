@@ -23,9 +23,9 @@ export interface CorrelatedPair {
 const STRIDE = 8;
 /** It settles nothing over fewer times than this. */
 const FEWEST_LOOKED_AT = 30;
-/** A pair above the limit is this far below it in a first look less often than once in a million: with r = 0.95 over 30
- *  values the look has a standard error of 0.19 on Fisher's scale, where 0.95 lies 1.8 and 0.95 − 0.3 lies 0.8 from 0. */
-const SLACK = 0.3;
+/** A first look says no when it lies this many standard errors below the limit on Fisher's scale, with every second of the
+ *  times it looked at taken for independent: a pair above the limit is missed less often than once in a hundred million. */
+const STANDARD_ERRORS = 6;
 
 /** The pairs of many series whose correlation over their common times is above a limit. Most pairs are far from it, which a
  *  look at every eighth time tells; the others are computed from all.
@@ -42,10 +42,10 @@ export function correlatedPairs(task: CorrelatedPairsTask): CorrelatedPair[] {
   const pairs: CorrelatedPair[] = [];
   for (let a = task.from ?? 0; a < (task.to ?? series); a++) {
     for (let b = a + 1; b < series; b++) {
-      const look = correlationOver(looked, a * lookedTimes, b * lookedTimes, lookedTimes, FEWEST_LOOKED_AT);
-      if (look < above - SLACK) continue;
-      const correlation = correlationOver(values, a * times, b * times, times, fewest);
-      if (correlation > above) pairs.push({ a, b, correlation });
+      const look = correlationOver(looked, a * lookedTimes, b * lookedTimes, lookedTimes);
+      if (isFarBelow(look, above)) continue;
+      const { correlation, n } = correlationOver(values, a * times, b * times, times);
+      if (n >= fewest && correlation > above) pairs.push({ a, b, correlation });
     }
   }
   return pairs;
@@ -58,8 +58,21 @@ function everyEighth(values: Float32Array, times: number): Float32Array {
   return looked;
 }
 
-/** NaN when fewer than `fewest` times are common, or either series is constant over them. */
-function correlationOver(values: Float32Array, a: number, b: number, times: number, fewest: number): number {
+/** Whether a look at some of the times tells that the correlation over all of them is not above a limit. */
+function isFarBelow({ correlation, n }: Correlation, limit: number): boolean {
+  if (n < FEWEST_LOOKED_AT) return false;
+  const standardError = 1 / Math.sqrt(n / 2 - 3);
+  return correlation < Math.tanh(Math.atanh(limit) - STANDARD_ERRORS * standardError);
+}
+
+interface Correlation {
+  /** NaN where either series is constant over the common times */
+  correlation: number;
+  /** times that both have */
+  n: number;
+}
+
+function correlationOver(values: Float32Array, a: number, b: number, times: number): Correlation {
   let n = 0;
   let sumX = 0;
   let sumY = 0;
@@ -78,8 +91,8 @@ function correlationOver(values: Float32Array, a: number, b: number, times: numb
     sumYY += y * y;
     sumXY += product;
   }
-  if (n < fewest) return Number.NaN;
-  const [varianceX, varianceY] = [n * sumXX - sumX * sumX, n * sumYY - sumY * sumY];
-  if (!(varianceX > 0 && varianceY > 0)) return Number.NaN;
-  return (n * sumXY - sumX * sumY) / Math.sqrt(varianceX * varianceY);
+  const varianceX = n * sumXX - sumX * sumX;
+  const varianceY = n * sumYY - sumY * sumY;
+  const told = varianceX > 0 && varianceY > 0;
+  return { correlation: told ? (n * sumXY - sumX * sumY) / Math.sqrt(varianceX * varianceY) : Number.NaN, n };
 }
