@@ -12,6 +12,9 @@ const OUTLYING = 6;
 /** Below this share of the mean residual, the median residual counts as nothing: most points lie on the curve already. */
 const NEGLIGIBLE = 1e-7;
 
+/** Nor does one below this share of the largest y: what is off the curve is then rounding, and weighs nothing up. */
+const ROUNDING = 1e-12;
+
 /** x spread less than this share of its range carries no slope: the local mean stands alone. */
 const LEAST_SPREAD = 0.001;
 
@@ -44,11 +47,12 @@ export function lowess(
   const reach = reachOfNearest(x, Math.min(n, Math.max(2, Math.floor(span * n + 1e-10))));
   const trust = new Float64Array(n).fill(1);
   let curve = localLines(x, y, reach, trust);
+  const rounding = ROUNDING * Array.from(y).reduce((most, each) => Math.max(most, Math.abs(each)), 0);
   for (let round = 0; round < rounds; round++) {
     const off = curve.map((fitted, i) => Math.abs(y[i] - fitted));
     const middle = median(off);
     const mean = off.reduce((sum, each) => sum + each, 0) / n;
-    if (middle <= NEGLIGIBLE * mean) break;
+    if (middle <= Math.max(rounding, NEGLIGIBLE * mean)) break;
     for (let i = 0; i < n; i++) trust[i] = bisquare(off[i] / (OUTLYING * middle));
     curve = localLines(x, y, reach, trust);
   }
