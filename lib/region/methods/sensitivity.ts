@@ -74,8 +74,8 @@ export const sensitivityChapter: MethodChapter = {
       ],
       formulas: [
         {
-          tex: String.raw`e_y = m_y - \operatorname{lowess}(P_y), \qquad P_y = \sum_{i=1}^{D} p_{t_y - i}`,
-          where: 'm the minimum on day t, p the daily rainfall or evaporation, D the days before',
+          tex: String.raw`e_y = m_y - \operatorname{lowess}(P_y), \qquad P_y = \sum_{i=0}^{D-1} p_{t_y - i}`,
+          where: 'm the minimum on day t, p the daily rainfall or evaporation, D the number of days that end with it',
         },
       ],
       assumes: ['The same weather gives the same minimum in every year but for the trend.'],
