@@ -7,7 +7,7 @@ import { medianLag1 } from './chance-series.ts';
 import { type Group, groupsOf } from './groups.ts';
 import type { Corner } from './in-polygon.ts';
 import { type FlowCorrelation, independentSet, type LastingStation } from './independent-set.ts';
-import { testedSeries } from './index-facts.ts';
+import { INDEX_FACTS, testedSeries } from './index-facts.ts';
 import { rankingFigure } from './ranking-figure.ts';
 import type { Ranking, RankingRow } from './ranking-types.ts';
 import {
@@ -142,8 +142,11 @@ function kendallOf(rows: readonly RankingRow[], lag1: readonly number[], basis: 
   const meanYears = Math.round(sites.reduce((sum, { years }) => sum + years.length, 0) / sites.length);
   const serialFactor = ar1VarianceFactor(meanYears, r1);
   const { s, z, p } = regionalKendall(sites, serialFactor);
+  // ranking figures are turned so that drier is below 0; what is read is the figure's own sign
+  const turned = basis.rankBy !== 'kendall-tau' && INDEX_FACTS[basis.index].moreIsDrier;
   const figures = rows.flatMap((row) => rankingFigure(row, basis.rankBy) ?? []);
-  return { s, z, p, medianFigure: median(figures), r1, serialFactor };
+  const middle = median(turned ? figures.map((figure) => 0 - figure) : figures);
+  return { s, z, p, medianFigure: middle, r1, serialFactor };
 }
 
 function median(values: readonly number[]): number | null {

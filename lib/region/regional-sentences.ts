@@ -28,6 +28,20 @@ const VERBS: Readonly<Record<AnnualIndexName, Verbs>> = {
   },
 };
 
+/** Which way a common trend goes, and single slopes do: drier or earlier first. */
+interface Sides {
+  towards: [string, string];
+  go: [string, string];
+}
+
+const DOWN_AND_UP: Sides = { towards: ['downward', 'upward'], go: ['slope down', 'up'] };
+const DRIER: Sides = { towards: ['towards drier', 'towards wetter'], go: ['grow drier', 'wetter'] };
+const SIDES: Partial<Record<AnnualIndexName, Sides>> = {
+  'zero-flow-days': DRIER,
+  deficit: DRIER,
+  'minimum-date': { towards: ['towards earlier', 'towards later'], go: ['come earlier', 'later'] },
+};
+
 type Terms = Pick<ResolvedBasis, 'index' | 'alpha' | 'rankBy'>;
 type Named = Pick<Group, 'label' | 'single'> & { set: GroupAnswer['set'] };
 
@@ -72,14 +86,15 @@ export function kendallSentence(
   basis: Terms,
 ): string {
   const found = p < basis.alpha;
-  const way = z < 0 ? 'downward' : 'upward';
+  const sides = SIDES[basis.index] ?? DOWN_AND_UP;
+  const way = z < 0 ? sides.towards[0] : sides.towards[1];
   const level = signs.zero > 0 ? `, ${signs.zero} neither way` : '';
   const median = medianFigure === null ? '' : `; median ${signed(medianFigure)} ${figureWords(basis)}`;
   return (
     `Taken together, ${stations(group.ranked, group)} have ` +
     `${found ? `one common trend ${way}` : 'no common trend'} at the ${percent(basis.alpha)} level ` +
     `(regional Kendall z ${signed(z)}, p ${probability(p)}${median}): ` +
-    `${signs.negative} slope down, ${signs.positive} up${level}.${found ? '' : ' This does not show that nothing changed.'}`
+    `${signs.negative} ${sides.go[0]}, ${signs.positive} ${sides.go[1]}${level}.${found ? '' : ' This does not show that nothing changed.'}`
   );
 }
 

@@ -18,7 +18,8 @@ export interface RegionalKendall {
   s: number;
   z: number;
   p: number;
-  /** median of the stations' ranking figures, unit of the basis's rankBy */
+  /** median of the stations' changes in the unit of the basis's rankBy, with their own sign: more zero-flow days are
+   *  above 0 */
   medianFigure: number | null;
   /** mean of the stations' lag-1 correlations, 0 to 0.95, and the factor for it, which the test uses under every serial
    *  correction of the basis */

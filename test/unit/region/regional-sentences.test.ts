@@ -53,6 +53,17 @@ describe('kendallSentence', () => {
     );
   });
 
+  test('says drier and earlier where up and down would mislead', () => {
+    const days = { ...basis, index: 'zero-flow-days' } as const;
+    expect(kendallSentence(natural, { ...kendall, medianFigure: 3.2 }, signs, days)).toBe(
+      'Taken together, 33 natural stations have one common trend towards drier at the 10 % level (regional Kendall z ' +
+        '−3.2, p 0.0014; median +3.2 days per decade): 30 grow drier, 3 wetter.',
+    );
+    expect(kendallSentence(natural, { ...kendall, z: 2 }, signs, { ...basis, index: 'minimum-date' })).toMatch(
+      /one common trend towards later at .*: 30 come earlier, 3 later\.$/,
+    );
+  });
+
   test.each([
     [{ rankBy: 'kendall-tau' }, 'median −4.1 Kendall’s tau'],
     [{ rankBy: 'specific-change' }, 'median −4.1 L/s/km² per decade'],
