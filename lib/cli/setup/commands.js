@@ -1,5 +1,16 @@
 /** The batch commands, in the order of the help. Their bodies are bundled TypeScript. */
-export const BATCH_COMMANDS = ['import', 'rank', 'minima', 'curves', 'pair', 'export', 'backup', 'restore', 'serve'];
+export const BATCH_COMMANDS = [
+  'import',
+  'rank',
+  'minima',
+  'curves',
+  'pair',
+  'regional',
+  'export',
+  'backup',
+  'restore',
+  'serve',
+];
 
 export const HELP = `Hungerstone tells which rivers of a region are losing their low flows, how fast and how surely.
 
@@ -10,6 +21,7 @@ Usage: npx hungerstone COMMAND [options]
   minima    the annual minima of every station
   curves    normalised duration curves
   pair      one station against reference stations
+  regional  what the stations say together, beyond chance
   export    a region as one archive of open formats
   backup    write the whole database to one file
   restore   put a backup back
