@@ -9,6 +9,7 @@ const HEADER =
   'rank,rank_low,rank_high,station_code,station_name,river,latitude,longitude,drainage_area_km2,influence,years_used,' +
   'first_year,last_year,mean_minimum_m3s,mean_minimum_l_s_km2,slope_m3s_per_decade,slope_ci_low,slope_ci_high,' +
   'slope_percent_per_decade,kendall_tau,z,p_value,p_adjusted,trend,trend_of,zero_flow_years,unranked_reason,note,' +
+  'steadiness,detectable_percent_per_decade,steepest_k,probability_among_steepest,' +
   'index,index_unit,mean_index,index_slope_per_decade,index_slope_ci_low,index_slope_ci_high';
 
 interface StationAnswer extends Omit<Row, 'code' | 'name'> {
