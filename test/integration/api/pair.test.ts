@@ -4,6 +4,7 @@ import { beforeAll, expect, test } from 'vitest';
 import { GET as pair } from '../../../app/api/regions/[region]/stations/[code]/pair/route.ts';
 import { GET as references } from '../../../app/api/regions/[region]/stations/[code]/references/route.ts';
 import { GET as weather } from '../../../app/api/regions/[region]/stations/[code]/weather/route.ts';
+import { INDICES } from '../../../lib/basis.ts';
 import { dayNumber, isoDate } from '../../../lib/calendar/day.ts';
 import { PAIR_COLUMNS } from '../../../lib/export/pair-csv.ts';
 import { WEATHER_COLUMNS } from '../../../lib/export/weather-csv.ts';
@@ -103,6 +104,18 @@ test('GET pair says in words that a reference has no flow, and that too few year
   expect(empty.problem).toMatch(/^Elm Bridge has no usable year in /);
   const few = await (await call(pair, url('A1', 'pair?with=C3&period=1981-1982'), of('A1'))).json();
   expect(few.problem).toMatch(/have only 2 usable years .* in common in 1981–1982; 3 are needed/);
+});
+
+test.each(INDICES)('GET pair compares by %s, or says why not', async (index) => {
+  const response = await call(pair, url('A1', `pair?with=C3&index=${index}`), of('A1'));
+  expect(response.status).toBe(200);
+  const text = await response.text();
+  const answer = JSON.parse(text);
+  expect(answer.basis.index).toBe(index);
+  expect(answer.sentence).not.toMatch(/NaN|undefined|null|unknown amount/);
+  // flows that never stop have no zero-flow days, and dates have no ratio
+  if (index === 'minimum-date' || index === 'zero-flow-days') expect(answer.problem).toMatch(/\. Choose another /);
+  else expect(answer.trends.ratio.p_value).toBeLessThan(1);
 });
 
 test('GET references lists natural stations with correlation, common years and distance', async () => {
