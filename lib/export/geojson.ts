@@ -1,4 +1,5 @@
-import type { RankingRow, StationFacts } from '../region/ranking-types.ts';
+import type { StationFacts } from '../region/ranking-types.ts';
+import type { SureRow } from '../region/sure-rows.ts';
 import type { Cell } from './csv.ts';
 import { RANKING_COLUMNS } from './ranking-csv.ts';
 
@@ -47,7 +48,7 @@ export function stationsGeojson(stations: readonly StationFacts[]): FeatureColle
 }
 
 /** The ranking with the same property names as the CSV has columns; the coordinates stand in the geometry. */
-export function rankingGeojson(rows: readonly RankingRow[]): FeatureCollection {
+export function rankingGeojson(rows: readonly SureRow[]): FeatureCollection {
   const columns = RANKING_COLUMNS.filter(({ name }) => name !== 'latitude' && name !== 'longitude');
   return {
     type: 'FeatureCollection',

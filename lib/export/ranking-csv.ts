@@ -1,13 +1,14 @@
-import type { RankingRow } from '../region/ranking-types.ts';
+import type { SureRow } from '../region/sure-rows.ts';
 import { type Column, csvTable } from './csv.ts';
 import { INDEX_COLUMNS } from './ranking-index-columns.ts';
+import { SURENESS_COLUMNS } from './ranking-sureness-columns.ts';
 import { STATION_CODE } from './shared-columns.ts';
 
 const M3S = 'm³/s';
 const SPECIFIC = 'L/s/km²';
 
 /** The columns of the ranking file, in the order that other programs rely on: change them only by adding at the end. */
-export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
+export const RANKING_COLUMNS: readonly Column<SureRow>[] = [
   {
     name: 'rank',
     datatype: 'integer',
@@ -137,10 +138,11 @@ export const RANKING_COLUMNS: readonly Column<RankingRow>[] = [
     value: (row) => row.unrankedReason,
   },
   { name: 'note', datatype: 'string', description: 'what a reader of this row must know', value: (row) => row.note },
+  ...SURENESS_COLUMNS,
   ...INDEX_COLUMNS,
 ];
 
 /** The ranking as CSV, ranked rows first, in the order given; every row given is written. */
-export function rankingCsv(rows: readonly RankingRow[]): string {
+export function rankingCsv(rows: readonly SureRow[]): string {
   return csvTable(RANKING_COLUMNS, rows);
 }

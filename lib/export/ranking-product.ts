@@ -1,12 +1,18 @@
-import type { Ranking, RankingRow } from '../region/ranking-types.ts';
+import type { SureRanking, SureRow } from '../region/sure-rows.ts';
 import type { Format } from './format.ts';
 import { jsonCell, rankingGeojson } from './geojson.ts';
 import { type Narrowing, narrowTo } from './narrow.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
 import { RANKING_COLUMNS, rankingCsv } from './ranking-csv.ts';
 
-/** The ranking as a file, narrowed to some stations or whole; ranks are always those of the whole region. */
-export function rankingProduct(format: Format, ranking: Ranking, from: Provenance, narrowing: Narrowing = {}): string {
+/** The ranking as a file, narrowed to some stations or whole; ranks are always those of the whole region.
+ *  @param ranking  with how sure it is laid over it (withCertainty), or without */
+export function rankingProduct(
+  format: Format,
+  ranking: SureRanking,
+  from: Provenance,
+  narrowing: Narrowing = {},
+): string {
   const rows = narrowTo(ranking.rows, narrowing, (row) => row);
   if (format === 'csv') return rankingCsv(rows);
   if (format === 'geojson') return JSON.stringify({ ...rankingGeojson(rows), ...provenanceNotes(from) });
@@ -14,7 +20,7 @@ export function rankingProduct(format: Format, ranking: Ranking, from: Provenanc
 }
 
 /** A row under the names that the CSV columns have, with what a table has no room for. */
-function stationOf(row: RankingRow): Record<string, unknown> {
+function stationOf(row: SureRow): Record<string, unknown> {
   const station: Record<string, unknown> = {};
   for (const { name, value } of RANKING_COLUMNS) station[name] = jsonCell(value(row));
   return Object.assign(station, {

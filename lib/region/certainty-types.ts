@@ -4,6 +4,9 @@
 /** The `amongSteepest` of a station reaches this far. */
 export const MOST_STEEPEST = 50;
 
+/** "Among the k steepest", when nobody names k. */
+export const USUAL_STEEPEST = 5;
+
 /** How sure one ranked station's place is. */
 export interface RankSpan {
   code: string;
@@ -34,4 +37,13 @@ export interface Certainty {
   spans: RankSpan[];
   /** of ranked and drying stations, at the basis's alpha for the one station by itself */
   detectable: DetectableTrend[];
+}
+
+/** Probability of a station to be among the k steepest declines; with k at or past the last place every station is. */
+export function chanceAmong(
+  { spans }: Pick<Certainty, 'spans'>,
+  { amongSteepest }: RankSpan,
+  k: number,
+): number | null {
+  return k >= spans.length ? 1 : (amongSteepest[k - 1] ?? null);
 }

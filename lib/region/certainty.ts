@@ -3,7 +3,6 @@ import { type SieveTerms, sieve } from '../statistics/sieve.ts';
 import { type Certainty, type DetectableTrend, MOST_STEEPEST, type RankSpan } from './certainty-types.ts';
 import { INDEX_FACTS, percentOfMean } from './index-facts.ts';
 import { rankingFigure } from './ranking-figure.ts';
-import type { Ranking } from './ranking-types.ts';
 import { type SimulationBasis, simulateStation } from './simulate-station.ts';
 import { familyTerms, type SimulatedRow } from './simulated-family.ts';
 
@@ -104,14 +103,4 @@ function detectableTrend(row: SimulatedRow, perYear: number, { index }: Simulati
     perDecade,
     percentPerDecade: hasPercent ? percentOfMean(perDecade, index, row.meanValue) : null,
   };
-}
-
-/** The ranking with the spans of its places. */
-export function withSpans(ranking: Ranking, { spans }: Certainty): Ranking {
-  const spanOf = new Map(spans.map((span) => [span.code, span]));
-  const rows = ranking.rows.map((row) => {
-    const span = row.rank === null ? undefined : spanOf.get(row.code);
-    return span ? { ...row, rankLow: span.rankLow, rankHigh: span.rankHigh } : row;
-  });
-  return { ...ranking, rows };
 }

@@ -1,12 +1,14 @@
 import type * as z from 'zod';
 import { formatParameter, tableParameters } from '../_http/table';
 import { curveParameters } from '../regions/[region]/curves/parameters';
+import { rankingParameters } from '../regions/[region]/ranking/parameters';
 import { coverageParameters } from '../regions/[region]/stations/[code]/coverage/parameters';
 import { stationCurveParameters } from '../regions/[region]/stations/[code]/curve/parameters';
 import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
 import { ARCHIVE_PATHS } from './paths-archive';
+import { CERTAINTY_PATHS } from './paths-certainty';
 import { CHECK_PATHS } from './paths-checks';
 import { DAY_PATHS } from './paths-days';
 import { KEPT_PATHS } from './paths-mappings';
@@ -72,7 +74,7 @@ export const PATHS = {
   '/api/regions/{region}/ranking': table(
     'Stations in order of trend in annual minima, or in the basis’s other index',
     [REGION],
-    tableParameters,
+    rankingParameters,
   ),
   '/api/regions/{region}/minima': table('Annual minima', [REGION], tableParameters),
   '/api/regions/{region}/curves': table('Flow-duration curves', [REGION], curveParameters),
@@ -97,6 +99,7 @@ export const PATHS = {
     coverageParameters,
     { ...json(anything), 'text/csv': { schema: text } },
   ),
+  ...CERTAINTY_PATHS,
   ...CHECK_PATHS,
   ...DAY_PATHS,
   ...PAIR_PATHS,

@@ -1,5 +1,5 @@
 import { createParser, parseAsBoolean, parseAsInteger, parseAsString, parseAsStringLiteral } from 'nuqs';
-import { MOST_STEEPEST } from '@/lib/region/certainty-types';
+import { MOST_STEEPEST, USUAL_STEEPEST } from '@/lib/region/certainty-types';
 
 export interface MapView {
   latitude: number;
@@ -29,9 +29,6 @@ const FILLS = ['significance', 'steepest', 'span'] as const;
 /** What the discs' filling says: whether a trend is significant, how likely the station is among the k steepest declines,
  *  or how narrow its rank span is. */
 export type Fill = (typeof FILLS)[number];
-
-/** Of the steepest declines that a station may be among. */
-export const USUAL_STEEPEST = 5;
 
 /** "among the k steepest": a whole number from 1 to as many as are simulated; anything else is no number. */
 export const parseSteepest = (text: string): number | null =>

@@ -8,6 +8,7 @@ const HEADER =
   'rank,rank_low,rank_high,station_code,station_name,river,latitude,longitude,drainage_area_km2,influence,years_used,' +
   'first_year,last_year,mean_minimum_m3s,mean_minimum_l_s_km2,slope_m3s_per_decade,slope_ci_low,slope_ci_high,' +
   'slope_percent_per_decade,kendall_tau,z,p_value,p_adjusted,trend,trend_of,zero_flow_years,unranked_reason,note,' +
+  'steadiness,detectable_percent_per_decade,steepest_k,probability_among_steepest,' +
   'index,index_unit,mean_index,index_slope_per_decade,index_slope_ci_low,index_slope_ci_high';
 
 test('rankingCsv has the columns that other programs rely on, in their order', () => {
@@ -18,7 +19,7 @@ test('rankingCsv writes a ranked station in full, with quotes doubled and ten si
   expect(rankingCsv([RANKED]).split('\r\n')[1]).toBe(
     '1,,,007,"Alder, at the ""mill""",Wethe,50.25,-7.5,120,natural,30,1990,2019,0.3333333333,2.777777778,' +
       '-0.01234567891,-0.02,0.3,-3.703703674,-0.25,-1.96,0.05,0.09,falling,minima,0,,,' +
-      'minimum,m3/s,0.3333333333,-0.01234567891,-0.02,0.3',
+      ',,,,minimum,m3/s,0.3333333333,-0.01234567891,-0.02,0.3',
   );
 });
 
@@ -35,6 +36,20 @@ test('rankingCsv leaves the rank and the figures of an unranked station empty an
     trend: '',
     unranked_reason: '3 usable years, 20 needed',
     note: 'short',
+  });
+});
+
+test('rankingCsv says how sure a place is where that was computed', () => {
+  const sure = { ...RANKED, rankLow: 1, rankHigh: 7, steadiness: 0.75 };
+  const row = { ...sure, detectablePercent: 6.25, steepestK: 3, amongSteepest: 0.482 };
+  const [cells] = parse(rankingCsv([row]), { columns: true }) as Record<string, string>[];
+  expect(cells).toMatchObject({
+    rank_low: '1',
+    rank_high: '7',
+    steadiness: '0.75',
+    detectable_percent_per_decade: '6.25',
+    steepest_k: '3',
+    probability_among_steepest: '0.482',
   });
 });
 

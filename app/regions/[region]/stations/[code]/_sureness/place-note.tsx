@@ -1,11 +1,12 @@
 'use client';
 import { useSearchParams } from 'next/navigation';
 import { percent } from '@/app/components/format';
+import { USUAL_STEEPEST } from '@/lib/region/certainty-types';
 import { useCertaintyOfPage } from '../../../_certainty/certainty-context.tsx';
 import { amongSteepest } from '../../../_certainty/certainty-view.ts';
 import { steepestWords } from '../../../_certainty/place-words.ts';
 import { spanText } from '../../../_ranking/sureness-cells.tsx';
-import { parseSteepest, USUAL_STEEPEST } from '../../../map-state.ts';
+import { parseSteepest } from '../../../map-state.ts';
 
 /** "of the steepest declines", as the address says it. */
 export function useSteepest(): number {
