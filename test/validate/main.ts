@@ -1,5 +1,6 @@
 /** `npm run validate`: simulates, prints each figure beside what it is meant to be, and with --write keeps the figures
- *  where the program, its methods page and the README take them from. Words given to it choose claims. */
+ *  where the program, its methods page and the README take them from. Words given to it choose claims; --cases=40 tries
+ *  fewer cases. */
 import { readFileSync, writeFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { isMainThread, parentPort, Worker, workerData } from 'node:worker_threads';
@@ -14,15 +15,20 @@ const FIGURES_FILE = 'lib/region/simulated-figures.json';
 const README = 'README.md';
 
 /** Runs one scenario in a thread of its own. */
-const inThread = (place: number): Promise<SimulatedFigure> =>
+const inThread = (place: number, cases: number | undefined): Promise<SimulatedFigure> =>
   new Promise((resolve, reject) => {
-    const worker = new Worker(fileURLToPath(import.meta.url), { workerData: { place } });
+    const worker = new Worker(fileURLToPath(import.meta.url), { workerData: { place, cases } });
     worker.once('message', resolve);
     worker.once('error', reject);
   });
 
 async function main(argv: string[]): Promise<number> {
   const write = argv.includes('--write');
+  const cases = casesIn(argv);
+  if (write && cases !== undefined) {
+    process.stderr.write('Figures that are kept are those of all cases: --write and --cases do not go together.\n');
+    return 2;
+  }
   const chosen = argv.filter((word) => !word.startsWith('--'));
   const places = SCENARIOS.map((_, place) => place).filter(
     (place) => chosen.length === 0 || chosen.includes(SCENARIOS[place].claim),
@@ -36,7 +42,7 @@ async function main(argv: string[]): Promise<number> {
   const queue = places.values();
   const lane = async () => {
     for (const place of queue) {
-      figures.set(place, await inThread(place));
+      figures.set(place, await inThread(place, cases));
       process.stderr.write(`${figures.size} of ${places.length} simulated\n`);
     }
   };
@@ -62,5 +68,14 @@ function keep(got: readonly SimulatedFigure[]): void {
   writeFileSync(README, withTable(readFileSync(README, 'utf8'), figuresTable(figures)));
 }
 
+/** Example: ["--cases=40"] → 40 */
+function casesIn(argv: readonly string[]): number | undefined {
+  const word = argv.find((each) => each.startsWith('--cases='));
+  return word === undefined ? undefined : Number(word.slice('--cases='.length));
+}
+
 if (isMainThread) process.exitCode = await main(process.argv.slice(2));
-else parentPort?.postMessage(figureOf(SCENARIOS[(workerData as { place: number }).place]));
+else {
+  const { place, cases } = workerData as { place: number; cases?: number };
+  parentPort?.postMessage(figureOf(SCENARIOS[place], cases));
+}

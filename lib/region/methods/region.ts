@@ -46,7 +46,7 @@ export const regionChapter: MethodChapter = {
       ],
       assumes: [
         'True figures spread about one regional mean in no special way.',
-        'Carry-over that fades as in a first-order process, alike over the region.',
+        'Carry-over that fades as a first-order autoregression does, alike over the region.',
       ],
       distrust: [
         'A few steep stations among many level ones are drawn towards the mean: their spans then hold the true place somewhat less often.',

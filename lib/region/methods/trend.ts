@@ -78,10 +78,11 @@ export const trendChapter: MethodChapter = {
           where: 'for each station i of the region, n̄ the mean number of years',
         },
       ],
-      assumes: ['Carry-over that fades from year to year as in a first-order process.'],
+      assumes: ['Carry-over that fades from year to year as a first-order autoregression does.'],
       distrust: [
         'Long memory: false alarms rise beyond what is asked for.',
         'Pre-whitening leaves most false alarms standing, and all significant lags can even shrink the variance.',
+        'Under pre-whitening only z and p come from the whitened values: slope and interval stay those of the record, and the interval is then too narrow where low flows carry over.',
       ],
       sources: [
         'Hamed, K. H., Rao, A. R. (1998): A modified Mann–Kendall trend test for autocorrelated data. J. Hydrol. 204, 182–196.',
