@@ -1,8 +1,9 @@
-import type { Certainty, DetectableTrend, RankSpan } from '@/lib/region/certainty-types';
+import { type Certainty, chanceAmong, type DetectableTrend, type RankSpan } from '@/lib/region/certainty-types';
 import type { Fill } from '../map-state.ts';
 
 /** How sure the places of a ranking are, ready to be looked up by station. */
 export interface CertaintyView {
+  certainty: Certainty;
   /** ranked stations: the last place there is */
   places: number;
   replicates: number;
@@ -11,8 +12,10 @@ export interface CertaintyView {
   detectable: ReadonlyMap<string, DetectableTrend>;
 }
 
-export function certaintyView({ replicates, toldApart, spans, detectable }: Certainty): CertaintyView {
+export function certaintyView(certainty: Certainty): CertaintyView {
+  const { replicates, toldApart, spans, detectable } = certainty;
   return {
+    certainty,
     places: spans.length,
     replicates,
     toldApart,
@@ -25,8 +28,7 @@ export function certaintyView({ replicates, toldApart, spans, detectable }: Cert
  *  @returns null for a station that is not ranked, or where it was not computed that far */
 export function amongSteepest(view: CertaintyView, code: string, k: number): number | null {
   const span = view.spans.get(code);
-  if (!span) return null;
-  return k >= view.places ? 1 : (span.amongSteepest[k - 1] ?? null);
+  return span ? chanceAmong(view.certainty, span, k) : null;
 }
 
 /** How narrow a station's span is: 1 where its place is certain, 0 where it may have any; null for one without a span. */

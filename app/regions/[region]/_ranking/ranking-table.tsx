@@ -137,7 +137,8 @@ export function RankingTable(props: RankingTableProps) {
           <tr aria-rowindex={1}>
             <th scope="col" className={styles.rank}>
               {figure === 'zero-days' ? <span className="visually-hidden">No rank</span> : 'Rank'}
-              {movedOf && sureness && <span className={styles.under}>moved</span>}
+              {movedOf && sureness && <span className={`${styles.under} ${styles.moved}`}>moved</span>}
+              {sureness && <span className={styles.spanText}>span</span>}
             </th>
             <th scope="col" className={styles.station}>
               Station
