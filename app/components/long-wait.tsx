@@ -16,7 +16,7 @@ interface Props {
 /** What stands in place of a long answer, or above an older one, until it is there: progress that can be cancelled, that it
  *  was cancelled, or why it failed. Nothing once it is there. */
 export function LongWait({ answer, title, failed, brief = false }: Props) {
-  const { pending, progress, problem, cancelled, cancel, retry } = answer;
+  const { pending, progress, problem, cancelling, cancelled, cancel, retry } = answer;
   if (brief) return problem !== null ? `${failed}.` : cancelled ? `${title}: cancelled.` : pending ? `${title}…` : null;
   if (problem !== null) {
     return (
@@ -39,8 +39,12 @@ export function LongWait({ answer, title, failed, brief = false }: Props) {
       <ProgressBar
         title={progress.share === null ? `${title}: waiting for its turn` : title}
         share={progress.share ?? 0}
-        detail={[left, 'the page may be used meanwhile'].filter(Boolean).join(' · ')}
-        onCancel={cancel}
+        detail={
+          cancelling
+            ? 'stopping, once the part in hand is done'
+            : [left, 'the page may be used meanwhile'].filter(Boolean).join(' · ')
+        }
+        onCancel={cancelling ? undefined : cancel}
       />
     );
   }

@@ -14,6 +14,8 @@ export interface LongResult<Value> {
   pending: boolean;
   /** set while the server works on it as a job */
   progress: LongProgress | null;
+  /** it has been asked to stop, and finishes what it has in hand */
+  cancelling: boolean;
   /** the work was stopped, here or elsewhere, before it was done */
   cancelled: boolean;
   /** stops the server's work, where `progress` says that there is some */
@@ -26,11 +28,14 @@ interface LongJob extends FollowedJob {
   progress: { share?: number } | null;
 }
 
-interface State<Value> extends Pick<LongResult<Value>, 'value' | 'valueOf' | 'problem' | 'pending' | 'cancelled'> {
+interface State<Value> extends Omit<LongResult<Value>, 'progress' | 'cancel' | 'retry'> {
   job: string | null;
 }
 
-const NOTHING = { value: null, valueOf: null, problem: null, pending: false, cancelled: false, job: null };
+const NOTHING = {
+  ...{ value: null, valueOf: null, problem: null, pending: false, cancelling: false, cancelled: false },
+  job: null,
+};
 
 /** An answer that may take the server a while: where it answers 202 with a job, the job is followed and the address asked
  *  again when it is done. The work goes on when the page is left; it is stopped when the same place asks for something
@@ -55,7 +60,7 @@ export function useLongResult<Value>(address: string | null, version = 0): LongR
       return;
     }
     const gone = new AbortController();
-    setState((now) => ({ ...now, problem: null, cancelled: false, pending: true, job: null }));
+    setState((now) => ({ ...now, problem: null, cancelling: false, cancelled: false, pending: true, job: null }));
     ask<Value>(address, gone.signal).then(
       (answer) => {
         if (gone.signal.aborted) return;
@@ -75,17 +80,23 @@ export function useLongResult<Value>(address: string | null, version = 0): LongR
   const job = useJob<LongJob>(state.job, (over) => {
     working.current = null;
     if (over.state === 'done') retry();
-    else if (over.state === 'cancelled') setState((now) => ({ ...now, pending: false, cancelled: true, job: null }));
+    else if (over.state === 'cancelled') setState((now) => ({ ...kept(now, request.address), cancelled: true }));
     else setState({ ...NOTHING, problem: over.error ?? 'The work ended without an answer.' });
   });
   const cancel = useCallback(() => {
-    if (state.job !== null) stop(state.job);
+    if (state.job === null) return;
+    setState((now) => ({ ...now, cancelling: true }));
+    stop(state.job);
   }, [state.job]);
   const progress = useProgress(state.job, job);
 
   const { job: _job, ...shown } = state;
   return { ...shown, progress, cancel, retry };
 }
+
+/** What may still be shown when no new answer comes: one to the same question, never one to another. */
+const kept = <Value>(now: State<Value>, address: string | null): State<Value> =>
+  now.valueOf === address ? { ...NOTHING, value: now.value, valueOf: now.valueOf } : NOTHING;
 
 /** Where the followed job stands, with the time that is left at the pace seen so far. */
 function useProgress(id: string | null, job: LongJob | null): LongProgress | null {

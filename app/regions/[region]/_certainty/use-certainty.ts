@@ -22,6 +22,7 @@ export function useCertainty(slug: string, tested: number): CertaintyAnswer {
     problem,
     pending,
     progress,
+    cancelling,
     cancelled,
     cancel,
     retry,
@@ -33,7 +34,7 @@ export function useCertainty(slug: string, tested: number): CertaintyAnswer {
   );
   // the same as long as nothing changed: lists of thousands hang on it
   return useMemo(
-    () => ({ view, problem, pending, progress, cancelled, cancel, retry }),
-    [view, problem, pending, progress, cancelled, cancel, retry],
+    () => ({ view, problem, pending, progress, cancelling, cancelled, cancel, retry }),
+    [view, problem, pending, progress, cancelling, cancelled, cancel, retry],
   );
 }

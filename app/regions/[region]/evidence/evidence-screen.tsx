@@ -32,6 +32,7 @@ import { evidenceAddresses } from './evidence-addresses.ts';
 import { evidenceState, type SectionId } from './evidence-state.ts';
 import { FallingNote } from './falling-note.tsx';
 import { type Answered, TheAnswer } from './the-answer.tsx';
+import { toldGroups } from './told-groups.ts';
 import { useAfter } from './use-after.ts';
 import { useOpenInPrint } from './use-open-in-print.ts';
 
@@ -114,6 +115,7 @@ export function EvidenceScreen({ region, basis, own, usable, layers, counts, sta
       [breaks.value && breaksSentence(breaks.value)],
       'Comparing before and after',
       'Before and after could not be compared',
+      'No ranked station has a break with enough years on both sides. One can be chosen below.',
     ),
   };
 
@@ -178,29 +180,18 @@ function said(
   sentences: readonly (string | null | undefined)[],
   title: string,
   failed: string,
+  silent = 'Nothing can be said on these terms.',
 ): Answered {
   const known = [...new Set(sentences)].filter(
     (sentence) => typeof sentence === 'string' && sentence !== '',
   ) as string[];
   if (known.length > 0 && !answer.pending) return { sentences: known, instead: null };
-  const silent = answer.value !== null && !answer.pending;
+  if (answer.value !== null && !answer.pending) return { sentences: [], instead: silent };
+  const waits = !answer.pending && answer.problem === null && !answer.cancelled;
   return {
     sentences: [],
-    instead: silent ? (
-      'Nothing can be said on these terms.'
-    ) : (
-      <LongWait answer={answer} title={title} failed={failed} brief />
-    ),
+    instead: waits ? 'Waits for the answers above…' : <LongWait answer={answer} title={title} failed={failed} brief />,
   };
-}
-
-/** Which groups speak at the top: the one that was drawn, all stations, and the natural ones, in which climate shows
- *  without management. */
-function toldGroups(groups: RegionalAnswers['groups']): RegionalAnswers['groups'] {
-  const whole = (id: string) => groups.filter((group) => group.id === id && group.set === 'all');
-  const all = whole('all');
-  const natural = whole('influence:natural').filter(({ ranked }) => ranked > 0 && ranked < (all[0]?.ranked ?? 0));
-  return [...whole('drawn'), ...all, ...natural];
 }
 
 /** Years that a break may lie between. */

@@ -1,7 +1,5 @@
 import { expect, test } from 'vitest';
 import { evidenceAddresses } from '@/app/regions/[region]/evidence/evidence-addresses';
-import { shownGroups } from '@/app/regions/[region]/evidence/shown-groups';
-import type { GroupAnswer } from '@/lib/region/regional-types';
 
 const ASKED = { chance: 'permutation', area: null, breaks: null } as const;
 
@@ -22,22 +20,4 @@ test('evidenceAddresses: movement is asked against the terms at hand with some c
   const query = new URL(address, 'http://x').searchParams;
   expect(query.get('days')).toBe('30');
   expect(query.get('against')).toBe('season=5-10&days=7&alpha=0.05');
-});
-
-test('shownGroups: an independent set stands by itself only where it leaves somebody out and keeps somebody', () => {
-  const group = (id: string, set: GroupAnswer['set'], ranked: number) => ({ id, set, ranked }) as GroupAnswer;
-  const groups = [
-    group('all', 'all', 30),
-    group('all', 'independent', 20),
-    group('influence:urban', 'all', 2),
-    group('influence:urban', 'independent', 2),
-    group('influence:unknown', 'all', 1),
-    group('influence:unknown', 'independent', 0),
-  ];
-  expect(shownGroups(groups).map(({ id, set }) => `${id} ${set}`)).toEqual([
-    'all all',
-    'all independent',
-    'influence:urban all',
-    'influence:unknown all',
-  ]);
 });

@@ -7,21 +7,21 @@ export const isBeyond = ({ count, bound }: BeyondChance): boolean => count > bou
 interface Props {
   found: BeyondChance;
   side: 'falling' | 'rising';
-  /** the right end of every strip: stations of the largest group */
-  most: number;
+  /** stations of the group: the right end of its strip */
+  ranked: number;
 }
 
 const WIDTH = 132;
 const HEIGHT = 22;
 
-/** The count on a line from none to all stations; grey as far as chance goes, the mark filled when it lies beyond.
+/** The count on a line from none to all stations of the group; grey as far as chance goes, the mark filled when it lies beyond.
  *  Decoration: the figures stand beside it. */
-export function ChanceStrip({ found, side, most }: Props) {
-  const x = (stations: number) => 6 + ((WIDTH - 12) * stations) / Math.max(1, most);
+export function ChanceStrip({ found, side, ranked }: Props) {
+  const x = (stations: number) => 6 + ((WIDTH - 12) * stations) / Math.max(1, ranked);
   const middle = HEIGHT / 2;
   return (
     <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} width={WIDTH} height={HEIGHT} aria-hidden="true" className={styles.strip}>
-      <path d={`M${x(0)} ${middle}H${x(most)}`} className={styles.axis} />
+      <path d={`M${x(0)} ${middle}H${x(ranked)}`} className={styles.axis} />
       <path d={`M${x(0)} ${middle - 5}H${x(found.bound)}V${middle + 5}H${x(0)}Z`} className={styles.chance} />
       <path d={`M${x(found.expected)} ${middle - 5}V${middle + 5}`} className={styles.expected} />
       <circle

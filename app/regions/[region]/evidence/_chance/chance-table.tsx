@@ -8,7 +8,6 @@ import { ChanceStrip, isBeyond } from './chance-strip.tsx';
 
 /** How many stations of every group fall and rise, beside what chance brings. */
 export function ChanceTable({ groups, alpha }: { groups: readonly GroupAnswer[]; alpha: string }) {
-  const most = groups.reduce((most, { ranked }) => Math.max(most, ranked), 1);
   return (
     <ScrollFrame className={table.scroll} label="Stations falling and rising beside chance, by group">
       <table className={table.table}>
@@ -41,8 +40,8 @@ export function ChanceTable({ groups, alpha }: { groups: readonly GroupAnswer[];
                 <SetWords group={group} />
               </th>
               <td className={table.number}>{fixed(group.ranked)}</td>
-              <Counted found={group.falling} side="falling" most={most} />
-              <Counted found={group.rising} side="rising" most={most} />
+              <Counted found={group.falling} side="falling" ranked={group.ranked} />
+              <Counted found={group.rising} side="rising" ranked={group.ranked} />
             </tr>
           ))}
         </tbody>
@@ -51,7 +50,7 @@ export function ChanceTable({ groups, alpha }: { groups: readonly GroupAnswer[];
   );
 }
 
-function Counted({ found, side, most }: { found: BeyondChance | null; side: 'falling' | 'rising'; most: number }) {
+function Counted({ found, side, ranked }: { found: BeyondChance | null; side: 'falling' | 'rising'; ranked: number }) {
   if (found === null) {
     return (
       <>
@@ -68,7 +67,7 @@ function Counted({ found, side, most }: { found: BeyondChance | null; side: 'fal
           <span className={styles.figures}>
             <strong>{fixed(found.count)}</strong> <span className={table.quiet}>up to {fixed(found.bound)}</span>
           </span>
-          <ChanceStrip found={found} side={side} most={most} />
+          <ChanceStrip found={found} side={side} ranked={ranked} />
           <span className={beyond ? styles.verdict : table.quiet}>{beyond ? 'beyond chance' : 'may be chance'}</span>
         </span>
       </td>

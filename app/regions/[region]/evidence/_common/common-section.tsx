@@ -31,7 +31,14 @@ export function CommonSection({ answer, figure, csv }: Props) {
       csvName="Groups CSV"
       method="regional-kendall"
     >
-      <LongWait answer={answer} title="Taking the stations together" failed="The common trend could not be tested" />
+      <p className={styles.note}>
+        <LongWait
+          answer={answer}
+          title="Taking the stations together"
+          failed="The common trend could not be tested"
+          brief
+        />
+      </p>
       {value && (
         <div className={styles.body} aria-busy={answer.pending}>
           <ScrollFrame className={table.scroll} label="Regional Kendall test by group">
