@@ -23,12 +23,12 @@ const rowsOf = async (response: Response) =>
   parse(await response.text(), { columns: true }) as Record<string, string>[];
 
 test('GET ranking?format=csv is the ranking file, to be saved, with its metadata named beside it', async () => {
-  const response = await call(ranking, `${url}/ranking?format=csv`, params);
+  const response = await call(ranking, `${url}/ranking?format=csv&spans=none`, params);
   expect(response.status).toBe(200);
   expect(response.headers.get('content-type')).toMatch(/^text\/csv/);
   expect(response.headers.get('content-disposition')).toContain('upper-wethe-ranking.csv');
   expect(response.headers.get('link')).toBe(
-    '</api/regions/upper-wethe/ranking?format=metadata>; rel="describedby"; type="application/csvm+json"',
+    '</api/regions/upper-wethe/ranking?format=metadata&spans=none>; rel="describedby"; type="application/csvm+json"',
   );
   expect(await response.text()).toBe(rankingCsv((await rankingOf(place.region, place.region.basis)).ranking.rows));
 });

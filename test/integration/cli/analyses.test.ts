@@ -27,6 +27,18 @@ test('rank writes the ranking as CSV to stdout and nothing else', async () => {
   expect(stderr).not.toContain('Not ranked');
 });
 
+test('rank says how sure each place is, and --no-spans leaves that out', async () => {
+  const sure = await runCommand('rank', ...REGION, '--steepest', '1');
+  const [first] = rowsOf(sure.stdout);
+  expect(first).toMatchObject({ rank: '1', rank_low: '1', steepest_k: '1' });
+  expect(Number(first.probability_among_steepest)).toBeGreaterThan(0);
+  const plain = await runCommand('rank', ...REGION, '--no-spans');
+  expect(rowsOf(plain.stdout)[0]).toMatchObject({ rank: '1', rank_low: '', probability_among_steepest: '' });
+  expect(plain.stderr).not.toContain('Simulating');
+  const wrong = await runCommand('rank', ...REGION, '--steepest', '51');
+  expect([wrong.code, wrong.stderr]).toEqual([2, expect.stringContaining('--steepest takes a whole number 1–50')]);
+});
+
 test('rank names on stderr who has no place, with the reason', async () => {
   const { code, stdout, stderr } = await runCommand('rank', ...REGION, '--basis', basisFile({ minYears: 40 }));
   expect(code).toBe(0);
