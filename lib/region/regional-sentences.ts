@@ -158,6 +158,6 @@ export function dryingSentence({
   const verbs = VERBS['zero-flow-days'];
   return (
     `${count} ${count === 1 ? 'station' : 'stations'} under Drying ${count === 1 ? 'is' : 'are'} not counted here: ` +
-    `by their zero-flow days ${numberOf(falling, verbs.falls)} and ${numberOf(rising, verbs.rises)} (adjusted p among themselves).`
+    `by ${count === 1 ? 'its' : 'their'} zero-flow days ${numberOf(falling, verbs.falls)} and ${numberOf(rising, verbs.rises)} (adjusted p among themselves).`
   );
 }

@@ -87,7 +87,7 @@ test('emptySentence and dryingSentence say what is left out', () => {
     'The independent set holds none of the natural stations: nothing can be said of them together.',
   );
   expect(dryingSentence({ stations: 1, falling: 0, rising: 1 })).toBe(
-    '1 station under Drying is not counted here: by their zero-flow days none dries for longer and 1 dries for shorter ' +
+    '1 station under Drying is not counted here: by its zero-flow days none dries for longer and 1 dries for shorter ' +
       '(adjusted p among themselves).',
   );
 });
