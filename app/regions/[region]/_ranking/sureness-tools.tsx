@@ -30,7 +30,7 @@ function Steepest({ places, k, onK }: Omit<SurenessToolsProps, 'answer'>) {
   const most = Math.min(MOST_STEEPEST, places);
   return (
     <label className={styles.steepest}>
-      Among the
+      Among the{' '}
       <input
         type="number"
         className={ui.input}
@@ -41,7 +41,7 @@ function Steepest({ places, k, onK }: Omit<SurenessToolsProps, 'answer'>) {
           const next = event.currentTarget.valueAsNumber;
           if (Number.isInteger(next) && next >= 1 && next <= most) onK(next);
         }}
-      />
+      />{' '}
       steepest<span className="visually-hidden"> declines</span>
     </label>
   );
