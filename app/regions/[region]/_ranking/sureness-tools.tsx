@@ -1,6 +1,6 @@
 'use client';
 import { Popover } from '@base-ui/react/popover';
-import type { ReactNode } from 'react';
+import { type ReactNode, useState } from 'react';
 import { fixed, percent } from '@/app/components/format';
 import ui from '@/app/components/ui.module.css';
 import { MOST_STEEPEST } from '@/lib/region/certainty-types';
@@ -28,6 +28,8 @@ export function SurenessTools({ answer, places, k, onK }: SurenessToolsProps) {
 
 function Steepest({ places, k, onK }: Omit<SurenessToolsProps, 'answer'>) {
   const most = Math.min(MOST_STEEPEST, places);
+  // what is being typed may be no number yet
+  const [typed, setTyped] = useState<string | null>(null);
   return (
     <label className={styles.steepest}>
       Among the{' '}
@@ -36,11 +38,12 @@ function Steepest({ places, k, onK }: Omit<SurenessToolsProps, 'answer'>) {
         className={ui.input}
         min={1}
         max={most}
-        value={k}
-        onChange={(event) => {
-          const next = event.currentTarget.valueAsNumber;
+        value={typed ?? k}
+        onChange={({ currentTarget: { value, valueAsNumber: next } }) => {
+          setTyped(value);
           if (Number.isInteger(next) && next >= 1 && next <= most) onK(next);
         }}
+        onBlur={() => setTyped(null)}
       />{' '}
       steepest<span className="visually-hidden"> declines</span>
     </label>
