@@ -1,9 +1,9 @@
 'use client';
 import { scaleLinear } from 'd3-scale';
-import { tickText } from '@/app/components/duration-figure/figure-text';
 import { useWidth } from '@/app/components/use-width';
 import { yearTicks } from '@/app/components/year-ticks';
 import type { StationBreaks } from '@/lib/region/break-types';
+import { axisTicks, type IndexScale } from '../index-scale';
 import { PLOT } from '../plot-box';
 import { placeLabels } from './break-labels.ts';
 import styles from './breaks-figure.module.css';
@@ -12,9 +12,7 @@ export interface BreaksData {
   years: readonly number[];
   /** what is compared, one a year, in its own unit */
   values: readonly number[];
-  /** from that unit to the one shown */
-  factor: number;
-  unit: string;
+  scale: IndexScale;
   /** first and last year of the page's time axis */
   span: [number, number];
 }
@@ -34,13 +32,16 @@ const HINT = 128;
 /** Annual figures with the median of each part as a level, the breaks between them, and the one that the data suggest.
  *  Decoration beside the table, which says the same. */
 export function BreaksFigure({ data, breaks, labelOf }: Props) {
-  const { years, values, factor, unit, span } = data;
+  const { years, values, scale, span } = data;
+  const { factor, unit } = scale;
   const [frame, width] = useWidth<HTMLDivElement>(960);
   if (years.length === 0) return null;
   const right = Math.max(PLOT.left + 1, width - PLOT.right);
   const x = scaleLinear([span[0] - 0.7, span[1] + 0.7], [PLOT.left, right]);
   const shown = values.map((value) => value * factor);
-  const low = Math.min(0, ...shown);
+  // dates have no zero to start from
+  const zeroBased = scale.index !== 'minimum-date';
+  const low = zeroBased ? Math.min(0, ...shown) : Math.min(...shown) - 20;
   const { segments, steps, suggested } = breaks;
   const labels = placeLabels(
     steps.map(({ break: { year } }) => x(year - 0.5)),
@@ -49,7 +50,8 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
   );
   const top = PLOT.top + (labels.length === 0 ? 0 : 15 * (1 + Math.max(...labels.map(({ row }) => row))));
   const [hint] = placeLabels(suggested ? [x(suggested.lastBefore + 0.5)] : [], HINT, right);
-  const y = scaleLinear([low, Math.max(low + 1e-9, ...shown)], [HEIGHT - PLOT.bottom, top]).nice(5);
+  const y = scaleLinear([low, Math.max(low + 1e-9, ...shown)], [HEIGHT - PLOT.bottom, top]);
+  if (zeroBased) y.nice(5);
   const bottom = HEIGHT - PLOT.bottom;
   return (
     <div ref={frame} className={styles.frame}>
@@ -59,11 +61,11 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
         role="img"
         aria-label={`Levels of ${segments.length || 1} part${segments.length > 1 ? 's' : ''} of the years${unit && `, ${unit}`}. The table below says the same.`}
       >
-        {y.ticks(4).map((value) => (
-          <g key={value} className={value === 0 ? styles.zero : styles.grid}>
+        {axisTicks(y, scale).map(({ value, text }) => (
+          <g key={value} className={value === 0 && zeroBased ? styles.zero : styles.grid}>
             <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
             <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-              {tickText(value)}
+              {text}
             </text>
           </g>
         ))}

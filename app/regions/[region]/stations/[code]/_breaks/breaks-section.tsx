@@ -65,7 +65,7 @@ export function BreaksSection({ slug, code, data, yearStart, alpha }: Props) {
               <p>The station has no dated change with usable years on both sides, and none is chosen.</p>
             )}
             <BreaksFigure data={data} breaks={value} labelOf={labelOf} />
-            <StepTable breaks={value} factor={data.factor} unit={data.unit} labelOf={labelOf} alpha={alpha} />
+            <StepTable breaks={value} scale={data.scale} labelOf={labelOf} alpha={alpha} />
             {value.leftOut.length > 0 && (
               <p className={styles.caption}>
                 {count(value.leftOut.length, 'break')} left out:{' '}

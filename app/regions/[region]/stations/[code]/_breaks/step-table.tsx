@@ -1,22 +1,21 @@
 import { fixed, interval, MISSING, pValue, range, significant } from '@/app/components/format';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import type { Segment, StationBreaks } from '@/lib/region/break-types';
+import { changeText, changeUnit, dateText, type IndexScale } from '../index-scale';
 import styles from '../station-screen.module.css';
 
 interface Props {
   breaks: Pick<StationBreaks, 'steps'>;
-  /** from the unit of what is compared to the one shown */
-  factor: number;
-  unit: string;
+  scale: IndexScale;
   labelOf(year: number): string;
   alpha: number;
 }
 
 /** Every break with the levels on its two sides, their difference with its interval, and the test. */
-export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: Props) {
+export function StepTable({ breaks: { steps }, scale, labelOf, alpha }: Props) {
   if (steps.length === 0) return null;
-  const scaled = (value: number | null) => (value === null ? null : value * factor);
-  const withUnit = unit && `, ${unit}`;
+  const withUnit = scale.unit && `, ${scale.unit}`;
+  const changeIn = changeUnit(scale) && `, ${changeUnit(scale)}`;
   return (
     <ScrollFrame className={styles.scroll} label="Before and after as a table">
       <table>
@@ -25,7 +24,7 @@ export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: P
             <th scope="col">Break</th>
             <th scope="col">Median before{withUnit}</th>
             <th scope="col">Median after{withUnit}</th>
-            <th scope="col">Difference{withUnit}</th>
+            <th scope="col">Difference{changeIn}</th>
             <th scope="col">Difference, %</th>
             <th scope="col">p</th>
             <th scope="col">To know</th>
@@ -37,11 +36,11 @@ export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: P
               <th scope="row" className={styles.breakWords}>
                 {step.break.words}
               </th>
-              <Level segment={step.before} factor={factor} labelOf={labelOf} />
-              <Level segment={step.after} factor={factor} labelOf={labelOf} />
+              <Level segment={step.before} scale={scale} labelOf={labelOf} />
+              <Level segment={step.after} scale={scale} labelOf={labelOf} />
               <td>
-                <strong>{plus(scaled(step.difference))}</strong>
-                <Quiet>{ends(scaled(step.low), scaled(step.high))}</Quiet>
+                <strong>{changeText(step.difference, scale)}</strong>
+                <Quiet>{ends(step.low, step.high, scale)}</Quiet>
               </td>
               <td>
                 {step.percent === null ? MISSING : plus(step.percent, 2)}
@@ -67,14 +66,16 @@ export function StepTable({ breaks: { steps }, factor, unit, labelOf, alpha }: P
 
 interface LevelProps {
   segment: Segment;
-  factor: number;
+  scale: IndexScale;
   labelOf(year: number): string;
 }
 
-function Level({ segment: { median, first, last, years }, factor, labelOf }: LevelProps) {
+function Level({ segment: { median, first, last, years }, scale, labelOf }: LevelProps) {
   return (
     <td>
-      {significant(median === null ? null : median * factor)}
+      {scale.index === 'minimum-date' && median !== null
+        ? dateText(median)
+        : significant(median === null ? null : median * scale.factor)}
       <Quiet>
         {range(labelOf(first), labelOf(last))}, {fixed(years)} years
       </Quiet>
@@ -90,8 +91,8 @@ function plus(value: number | null, figures = 3): string {
   return value !== null && value > 0 ? `+${significant(value, figures)}` : significant(value, figures);
 }
 
-function ends(low: number | null, high: number | null): string {
-  return low === null || high === null ? MISSING : range(plus(low), plus(high));
+function ends(low: number | null, high: number | null, scale: IndexScale): string {
+  return low === null || high === null ? MISSING : range(changeText(low, scale), changeText(high, scale));
 }
 
 function verdict(p: number | null, difference: number | null, alpha: number): string {
