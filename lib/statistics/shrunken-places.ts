@@ -1,4 +1,5 @@
 import { pauleMandel } from './paule-mandel.ts';
+import { type Posteriors, roughenedPosteriors } from './roughened-prior.ts';
 import { selectInPlace } from './select.ts';
 
 /** The span leaves out a twentieth of the replicates at either end. */
@@ -46,14 +47,10 @@ export function shrunkenPlaces(input: ReplicatedEstimates, most: number): Shrunk
   const groups = estimates.length;
   const reach = Math.min(most, groups);
   const deviations = commonRemoved(input);
-  const { variance, mean, weights } = pauleMandel(estimates, variancesOf(deviations, groups, replicates));
-  if (groups > 1 && variance === 0) return nothingTold(groups, reach);
-  // what is drawn: √w_i·d_i about the shrunken estimate
-  for (let i = 0; i < groups; i++) {
-    const centre = mean + weights[i] * (estimates[i] - mean);
-    const scale = Math.sqrt(weights[i]);
-    for (let b = i * replicates; b < (i + 1) * replicates; b++) deviations[b] = centre + scale * deviations[b];
-  }
+  const variances = variancesOf(deviations, groups, replicates);
+  const { variance, mean } = pauleMandel(estimates, variances);
+  if (variance === 0) return nothingTold(groups, reach);
+  drawTrueValues(deviations, replicates, roughenedPosteriors({ estimates, variances, mean, variance }));
   const places = placesByReplicate(deviations, groups, replicates);
   return { spread: Math.sqrt(variance), ...spansOf(places, groups, replicates, reach), most: reach };
 }
@@ -74,6 +71,21 @@ function commonRemoved({ estimates, replicated, replicates }: ReplicatedEstimate
   }
   for (let at = 0; at < deviations.length; at++) deviations[at] -= common[at % replicates];
   return deviations;
+}
+
+/** Puts in place of each deviation the quantile of the group's true value at its share: where the deviation stands among
+ *  the group's own. What groups share in a replicate they share in their true values. */
+function drawTrueValues(deviations: Float64Array, replicates: number, posteriors: Posteriors): void {
+  const shares = Float64Array.from({ length: replicates }, (_, k) => (k + 0.5) / replicates);
+  const values = new Float64Array(replicates);
+  const order = new Uint32Array(replicates);
+  for (let i = 0; i * replicates < deviations.length; i++) {
+    const own = deviations.subarray(i * replicates, (i + 1) * replicates);
+    for (let b = 0; b < replicates; b++) order[b] = b;
+    order.sort((a, b) => own[a] - own[b] || a - b);
+    posteriors.quantiles(i, shares, values);
+    for (let k = 0; k < replicates; k++) own[order[k]] = values[k];
+  }
 }
 
 function variancesOf(deviations: Float64Array, groups: number, replicates: number): Float64Array {

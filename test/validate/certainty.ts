@@ -56,11 +56,13 @@ const spreadTrends =
     return Array.from({ length: STATIONS }, () => -3 + spread * normal());
   };
 
-/** Five that fall by 12 % per decade; the others level but for a hair, so that each has a true place. */
-const fiveSteep: Trends = (i) => {
-  const normal = normalRow(randomStream('validate', 'five steep', i));
-  return Array.from({ length: STATIONS }, (_, station) => (station < 5 ? -12 : 0) + 0.001 * normal());
-};
+/** Five that fall by so many percent per decade; the others level but for a hair, so that each has a true place. */
+const fiveSteep =
+  (percent: number): Trends =>
+  (i) => {
+    const normal = normalRow(randomStream('validate', 'five steep', i));
+    return Array.from({ length: STATIONS }, (_, station) => (station < 5 ? -percent : 0) + 0.001 * normal());
+  };
 
 function region(trends: Trends, i: number) {
   const percents = trends(i);
@@ -111,14 +113,16 @@ export const certainty: Scenario[] = [
       run: (size) => holding(spreadTrends(spread), size),
     }),
   ),
-  {
-    claim: 'span-cover',
-    of: 'sieve with shrinkage',
-    setting: 'five steep among 35 level',
-    aim: [0.82, null],
-    cases: 200,
-    run: (size) => holding(fiveSteep, size),
-  },
+  ...[6, 12, 20].map(
+    (percent): Scenario => ({
+      claim: 'span-cover',
+      of: 'sieve with shrinkage',
+      setting: `five at −${percent} % among 35 level`,
+      aim: [0.82, null],
+      cases: 200,
+      run: (size) => holding(fiveSteep(percent), size),
+    }),
+  ),
   {
     claim: 'span-width',
     of: 'sieve with shrinkage',

@@ -63,8 +63,9 @@ function keep(got: readonly SimulatedFigure[]): void {
   const before = JSON.parse(readFileSync(FIGURES_FILE, 'utf8')) as { figures: SimulatedFigure[] };
   const all = new Map([...before.figures, ...got].map((figure) => [nameOf(figure), figure]));
   const figures = SCENARIOS.flatMap((scenario) => all.get(nameOf(scenario)) ?? []);
-  const lines = figures.map((figure) => `    ${JSON.stringify(figure)}`).join(',\n');
-  writeFileSync(FIGURES_FILE, `{\n  "methodsVersion": ${METHODS_VERSION},\n  "figures": [\n${lines}\n  ]\n}\n`);
+  const text = JSON.stringify({ methodsVersion: METHODS_VERSION, figures }, null, 2);
+  // as the formatter has it: pairs on one line
+  writeFileSync(FIGURES_FILE, `${text.replace(/\[\s+([^\s,[\]]+),\s+([^\s,[\]]+)\s+\]/g, '[$1, $2]')}\n`);
   writeFileSync(README, withTable(readFileSync(README, 'utf8'), figuresTable(figures)));
 }
 

@@ -39,13 +39,13 @@ export const regionChapter: MethodChapter = {
             'e the residuals about the slope line, r the median of the stations’ lag-1 correlations, Y(t) years drawn with replacement, the same for all stations',
         },
         {
-          tex: String.raw`\mu + w_i\,(b_i - \mu) + \sqrt{w_i}\;d_i, \qquad w_i = \frac{\tau^2}{\tau^2 + s_i^2}`,
+          tex: String.raw`\theta^{*}_i = F_i^{-1}\bigl(\operatorname{share}(d_i)\bigr), \qquad F_i(\theta) \propto \int^{\theta} g(x)\,e^{-(b_i - x)^2 / 2 s_i^2}\,dx`,
           where:
-            'b the ranking figures, d their deviations in a replicate less the regional ones, s² the variance of d, τ² the variance of the true figures (Paule and Mandel), μ the weighted mean; places are those of these numbers',
+            'b the ranking figures, d their deviations in a replicate less the regional ones, share(d) where d stands among the station’s own, s² the variance of d; g the distribution of true figures, normal to begin with (its spread by Paule and Mandel) and roughened towards what the stations say; places are those of θ*',
         },
       ],
       assumes: [
-        'True figures spread about one regional mean in no special way.',
+        'Errors of like kind at all stations. Of how the true figures spread nothing is assumed but what the stations show.',
         'Carry-over that fades as a first-order autoregression does, alike over the region.',
       ],
       distrust: [
@@ -55,6 +55,8 @@ export const regionChapter: MethodChapter = {
         'Bühlmann, P. (1997): Sieve bootstrap for time series. Bernoulli 3, 123–148.',
         'Paule, R. C., Mandel, J. (1982): Consensus values and weighting factors. J. Res. Natl. Bur. Stand. 87, 377–385.',
         'Efron, B., Morris, C. (1975): Data analysis using Stein’s estimator. J. Am. Stat. Assoc. 70, 311–319.',
+        'Laird, N. M., Louis, T. A. (1991): Smoothing the non-parametric estimate of a prior distribution by roughening. Comput. Stat. Data Anal. 12, 27–37.',
+        'Shen, W., Louis, T. A. (1999): Empirical Bayes estimation via the smoothing by roughening approach. J. Comput. Graph. Stat. 8, 800–823.',
         'Laird, N. M., Louis, T. A. (1989): Empirical Bayes ranking methods. J. Educ. Stat. 14, 29–46.',
         'Goldstein, H., Spiegelhalter, D. J. (1996): League tables and their limitations. J. R. Stat. Soc. A 159, 385–443.',
       ],
