@@ -4,8 +4,10 @@ export const BATCH_COMMANDS = [
   'rank',
   'minima',
   'curves',
-  'pair',
   'regional',
+  'windows',
+  'breaks',
+  'pair',
   'export',
   'backup',
   'restore',
@@ -20,8 +22,10 @@ Usage: npx hungerstone COMMAND [options]
   rank      the stations in order of trend in their annual minima
   minima    the annual minima of every station
   curves    normalised duration curves
-  pair      one station against reference stations
   regional  what the stations say together, beyond chance
+  windows   the trend for every start and end year
+  breaks    levels before and after breaks that were known or chosen
+  pair      one station against reference stations
   export    a region as one archive of open formats
   backup    write the whole database to one file
   restore   put a backup back
