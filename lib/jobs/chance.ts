@@ -4,19 +4,19 @@ import { type ChanceSeries, medianLag1, type TestedRow } from '../region/chance-
 import type { Ranking, RankingRow } from '../region/ranking-types.ts';
 import type { Chance } from '../region/regional-answers.ts';
 import type { ChanceMethod } from '../region/regional-types.ts';
+import { joinSums } from '../region/sieved-chance.ts';
 import { sieveTerms } from '../statistics/sieve.ts';
-import { joinTrendBits, type TrendBits } from '../statistics/trend-bits.ts';
+import { joinTrendBits, noTrendBits, type TrendBits } from '../statistics/trend-bits.ts';
 import { cached } from './cached.ts';
 import { inLanes, type WorkContext } from './lanes.ts';
 import { runTask } from './pool.ts';
 import { derivedKey } from './result-key.ts';
 import { chunksOf } from './share-out.ts';
 
-/** How often chance is tried: an order of the years costs little, a replicate of the sieve five times as much, and one that
- *  needs a slope of its own to be whitened ten times as much again. */
+/** How often chance is tried: an order of the years costs little, a replicate of the sieve, with its slope and its lag-1
+ *  correlation, some thirty times as much. */
 const PERMUTATIONS = 10_000;
-const SIEVED = 2_000;
-const SIEVED_AND_WHITENED = 500;
+const SIEVED = 1_000;
 
 /** Every piece draws all replicates' years again: so few pieces, yet enough for a progress that moves and for a cancel that is
  *  heard within a second or two. */
@@ -38,15 +38,9 @@ export function chanceOf(
   return cached('chance', chanceKey(key, method), async () => {
     const { alpha, serialCorrection } = basis;
     const terms = { alpha, serialCorrection };
-    const tested = rows.map(testedRow);
-    const stations = await runTask('seriesForChance', { rows: tested, basis: terms });
-    const ask = method === 'sieve' ? sieving(stations, terms) : permuting(stations);
-    const places = chunksOf(
-      stations.codes.map((_, i) => i),
-      Math.max(FEWEST_A_PIECE, Math.ceil(stations.codes.length / PIECES)),
-    );
-    const parts = await inLanes('chance', places, (some) => ask(some, context), context);
-    return { method, bits: joinTrendBits(parts), lag1: stations.lag1 };
+    const stations = await runTask('seriesForChance', { rows: rows.map(testedRow), basis: terms });
+    const bits = method === 'sieve' ? await sieveAll(stations, terms, context) : await permuteAll(stations, context);
+    return { method, bits, lag1: stations.lag1 };
   });
 }
 
@@ -55,33 +49,47 @@ function testedRow({ code, rank, years, values, trendOf, serialFactor }: Ranking
   return { code, rank, years, values, trendOf, serialFactor };
 }
 
-/** Asks a worker for some stations, by place. */
-type Asking = (places: number[], context: WorkContext) => Promise<TrendBits>;
+/** Has the workers do every piece of the stations, by place. */
+function inPieces<Answer>(
+  { codes }: ChanceSeries,
+  context: WorkContext,
+  work: (places: number[]) => Promise<Answer>,
+): Promise<Answer[]> {
+  const places = chunksOf(
+    codes.map((_, i) => i),
+    Math.max(FEWEST_A_PIECE, Math.ceil(codes.length / PIECES)),
+  );
+  return inLanes('chance', places, work, context);
+}
 
-function permuting(stations: ChanceSeries): Asking {
+async function permuteAll(stations: ChanceSeries, context: WorkContext): Promise<TrendBits> {
   const seed = seedOf(stations);
-  return (places, context) => {
+  const parts = await inPieces(stations, context, (places) => {
     const series = places.map((i) => stations.series[i]);
     const critical = places.map((i) => stations.critical[i]);
     return runTask('permuteYears', { series, critical, replicates: PERMUTATIONS, seed }, context);
-  };
+  });
+  return parts.length === 0 ? noTrendBits(0, PERMUTATIONS) : joinTrendBits(parts);
 }
 
-function sieving(stations: ChanceSeries, basis: Pick<Basis, 'alpha' | 'serialCorrection'>): Asking {
+async function sieveAll(
+  stations: ChanceSeries,
+  basis: Pick<Basis, 'alpha' | 'serialCorrection'>,
+  context: WorkContext,
+): Promise<TrendBits> {
+  if (stations.codes.length === 0) return noTrendBits(0, SIEVED);
   const seed = seedOf(stations);
   const present = stations.series.map((series) => withoutGaps(stations.years, series));
   const terms = sieveTerms(
     present.map(({ years }) => years),
     medianLag1(stations.lag1) ?? 0,
   );
-  const replicates = basis.serialCorrection === 'pre-whitened' ? SIEVED_AND_WHITENED : SIEVED;
-  return (places, context) => {
-    const some = places.map((i) => {
-      const [code, slope, critical] = [stations.codes[i], stations.slopes[i], stations.corrected[i]];
-      return { code, ...present[i], slope, critical };
-    });
-    return runTask('sieveYears', { stations: some, terms, basis, replicates, seed }, context);
-  };
+  const parts = await inPieces(stations, context, (places) => {
+    const some = places.map((i) => ({ code: stations.codes[i], ...present[i], slope: stations.slopes[i] }));
+    return runTask('sieveYears', { stations: some, terms, basis, replicates: SIEVED, seed }, context);
+  });
+  const lengths = present.map(({ years }) => years.length);
+  return runTask('settleYears', { sums: joinSums(parts), lengths, critical: stations.corrected, basis }, context);
 }
 
 /** Only the years that have a value. */

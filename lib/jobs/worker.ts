@@ -2,7 +2,7 @@
  *  worker starts quickly. */
 export { annualIndex } from './tasks/annual-index.ts';
 export { certainty, certaintyTerms, simulate } from './tasks/certainty.ts';
-export { permuteYears, seriesForChance, sieveYears } from './tasks/chance.ts';
+export { permuteYears, seriesForChance, settleYears, sieveYears } from './tasks/chance.ts';
 export { checkRecords } from './tasks/check-records.ts';
 export { commonPeriods } from './tasks/common-periods.ts';
 export { correlatedFlows } from './tasks/correlated-flows.ts';

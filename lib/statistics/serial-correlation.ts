@@ -5,7 +5,7 @@ import { averageRanks } from './ranks.ts';
 const FEWEST_VALUES = 5;
 
 /** Upper cut of a lag-1 correlation, so that the variance factor stays finite in effect. */
-const LARGEST_LAG1 = 0.95;
+export const LARGEST_LAG1 = 0.95;
 
 /** Lag-1 autocorrelation of the average ranks R of the detrended series, freed of its bias, not yet cut.
  *  r = Σ over pairs of consecutive years (R_t − R̄)(R_{t+1} − R̄) × n/(pairs + 1), over Σ (R − R̄)²; then

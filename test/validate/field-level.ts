@@ -1,14 +1,15 @@
 /** How often more stations of a region fall than chance allows, where none has a trend. */
 import { type Basis, SERIAL_CORRECTIONS } from '../../lib/basis.ts';
 import { beyondChance } from '../../lib/region/beyond-chance.ts';
-import { chanceSeries, medianLag1 } from '../../lib/region/chance-series.ts';
+import { type ChanceSeries, chanceSeries, medianLag1 } from '../../lib/region/chance-series.ts';
 import { CHANCE_METHODS, type ChanceMethod } from '../../lib/region/regional-types.ts';
-import { sievedChance } from '../../lib/region/sieved-chance.ts';
+import { settledTrends } from '../../lib/region/settled-trends.ts';
+import { type SievedTask, sievedSums } from '../../lib/region/sieved-chance.ts';
 import { trendFamily } from '../../lib/region/trend-family.ts';
 import { fieldLevelName } from '../../lib/region/true-level.ts';
 import { permutedKendall } from '../../lib/statistics/permuted-kendall.ts';
 import { sieveTerms } from '../../lib/statistics/sieve.ts';
-import { countsByReplicate } from '../../lib/statistics/trend-bits.ts';
+import { countsByReplicate, type TrendBits } from '../../lib/statistics/trend-bits.ts';
 import type { Scenario } from './figure.ts';
 import { noise, yearsFrom } from './noise.ts';
 
@@ -40,24 +41,27 @@ function falls(method: ChanceMethod, serialCorrection: Correction, lag1: number,
     const bits =
       method === 'permutation'
         ? permutedKendall({ ...stations, replicates: PERMUTATIONS, seed: `field ${i}` })
-        : sievedChance({
-            stations: family.map(({ values, label }, station) => {
-              const [slope, critical] = [stations.slopes[station], stations.corrected[station]];
-              return { code: label, years, values, slope, critical };
-            }),
-            terms: sieveTerms([years], medianLag1(stations.lag1) ?? 0),
-            basis,
-            replicates: SIEVED,
-            seed: `field ${i}`,
-          });
+        : sieved(stations, basis, `field ${i}`);
     const byChance = countsByReplicate(bits, [...family.keys()]);
     return beyondChance(byChance.falling, found).p <= NOMINAL ? 1 : 0;
   });
 }
 
+/** The stations of a region on years drawn anew. */
+function sieved(series: ChanceSeries, basis: SievedTask['basis'], seed: string): TrendBits {
+  const stations = series.codes.map((code, i) => {
+    return { code, years, values: Array.from(series.series[i]), slope: series.slopes[i] };
+  });
+  const terms = sieveTerms([years], medianLag1(series.lag1) ?? 0);
+  const sums = sievedSums({ stations, terms, basis, replicates: SIEVED, seed });
+  return settledTrends({ sums, lengths: stations.map(() => YEARS), critical: series.corrected, basis });
+}
+
 /** A case takes long where series are resampled to be tested, or every replicate needs a slope. */
-const casesOf = (method: ChanceMethod, correction: Correction): number =>
-  correction === 'block-bootstrap' || (method === 'sieve' && correction === 'pre-whitened') ? 200 : 1000;
+const casesOf = (method: ChanceMethod, correction: Correction): number => {
+  if (correction === 'block-bootstrap') return 200;
+  return method === 'sieve' ? 400 : 1000;
+};
 
 export const fieldLevel: Scenario[] = CHANCE_METHODS.flatMap((method) =>
   SERIAL_CORRECTIONS.flatMap((correction) =>

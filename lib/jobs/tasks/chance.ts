@@ -1,6 +1,7 @@
 import type { Basis } from '../../basis.ts';
 import { type ChanceSeries, chanceSeries, type TestedRow } from '../../region/chance-series.ts';
-import { type SievedChanceTask, sievedChance } from '../../region/sieved-chance.ts';
+import { type SettledTask, settledTrends } from '../../region/settled-trends.ts';
+import { type SievedSums, type SievedTask, sievedSums } from '../../region/sieved-chance.ts';
 import { type PermutedKendallTask, permutedKendall } from '../../statistics/permuted-kendall.ts';
 import type { TrendBits } from '../../statistics/trend-bits.ts';
 
@@ -17,7 +18,12 @@ export function permuteYears(task: PermutedKendallTask): TrendBits {
   return permutedKendall(task);
 }
 
-/** Tries some stations' series on years drawn anew, with their carry-over. */
-export function sieveYears(task: SievedChanceTask): TrendBits {
-  return sievedChance(task);
+/** Draws some stations' years anew, with their carry-over. */
+export function sieveYears(task: SievedTask): SievedSums {
+  return sievedSums(task);
+}
+
+/** Tests what was drawn of all stations. */
+export function settleYears(task: SettledTask): TrendBits {
+  return settledTrends(task);
 }
