@@ -36,7 +36,7 @@ export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: Simulati
   const present = line.years.map((year) => year - line.years[0]);
   const white = basis.serialCorrection === 'pre-whitened' && row.r1 !== null ? whitening(present, row.r1, basis) : null;
   const slopes = replicateSlopes(length, present, white ? Number.POSITIVE_INFINITY : critical(present, row, basis));
-  const figureOf = figureInReplicate(row, line, present, basis);
+  const figureOf = figureInReplicate(row, line, basis);
 
   const x = new Float64Array(length);
   const figures = figureOf && new Float64Array(sieve.replicates);
@@ -45,7 +45,7 @@ export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: Simulati
     replicates.next(x);
     const slope = slopes.read(x);
     rejected[b] = white ? white(x, slope) : slopes.rejected();
-    if (figures && figureOf) figures[b] = figureOf(x, slope);
+    if (figures && figureOf) figures[b] = figureOf(x, slope, slopes.mean());
   }
   return { figures, detectable: detectableSlope(rejected) };
 }
@@ -76,16 +76,11 @@ function whitening(present: readonly number[], r1: number, basis: SimulationBasi
   };
 }
 
-type FigureOf = (x: Float64Array, slope: number) => number;
+type FigureOf = (x: Float64Array, slope: number, mean: number) => number;
 
-/** The ranking figure of a replicate, from its residuals and their slope; null for a station that has none.
+/** The ranking figure of a replicate, from its residuals, their slope and their mean; null for a station that has none.
  *  Percentages are of the replicate's own mean; of the record's where that is not above 0, which would turn the sign. */
-function figureInReplicate(
-  row: SimulatedRow,
-  line: TestedLine,
-  present: readonly number[],
-  { rankBy, index }: SimulationBasis,
-): FigureOf | null {
+function figureInReplicate(row: SimulatedRow, line: TestedLine, { rankBy, index }: SimulationBasis): FigureOf | null {
   if (rankingFigure(row, rankBy) === null) return null;
   if (rankBy === 'kendall-tau') return (x, _slope) => tauOnSlope(x, line.slope);
   const perDecade = isOfMinus(row.trendOf) ? -YEARS_PER_DECADE : YEARS_PER_DECADE;
@@ -97,11 +92,9 @@ function figureInReplicate(
   const meanYear = line.years.reduce((sum, year) => sum + year, 0) / line.years.length;
   const level = line.intercept + line.slope * meanYear;
   const sign = isOfMinus(row.trendOf) ? -1 : 1;
-  const mean = row.meanValue ?? Number.NaN;
-  return (x, slope) => {
-    let sum = 0;
-    for (const place of present) sum += x[place];
-    const own = sign * (level + sum / present.length);
-    return (unit * (line.slope + slope) * mean) / (own > 0 ? own : mean);
+  const ofRecord = row.meanValue ?? Number.NaN;
+  return (_x, slope, mean) => {
+    const own = sign * (level + mean);
+    return (unit * (line.slope + slope) * ofRecord) / (own > 0 ? own : ofRecord);
   };
 }

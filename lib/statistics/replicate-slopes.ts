@@ -12,6 +12,8 @@ export interface ReplicateSlopes {
   /** Of the replicate read last: the smallest slope that, laid on it, makes the test reject; every other replicate is
    *  asked after a rise and the others after a fall. NaN when no slope does. */
   rejected(): number;
+  /** mean of the values of the replicate read last */
+  mean(): number;
 }
 
 /** Theil–Sen slope of replicates of a series, and the slope that a Mann–Kendall test would find in each.
@@ -45,6 +47,7 @@ export function replicateSlopes(length: number, present: ArrayLike<number>, crit
       const slope = current.found[current.side];
       return current === rise ? -slope : slope;
     },
+    mean: () => current.ranks.mean(),
   };
 }
 

@@ -9,6 +9,9 @@ const REACH = 4.5;
 /** A stretch that had to be widened so often holds everything the next time. */
 const MOST_WIDENINGS = 3;
 
+/** Slopes are parted about an expected one before it is selected, where that leaves out so large a share of them. */
+const WORTH_PARTING = 0.25;
+
 /** Finds slopes of given ranks in replicate after replicate of one series. */
 export interface SlopeRanks {
   /** number of pairs, and so of slopes */
@@ -17,6 +20,8 @@ export interface SlopeRanks {
    *  @param x    one entry a year, `length` long; NaN in the years that the series lacks, and only there
    *  @param out  as long as `ranks` */
   find(x: Float64Array, out: Float64Array): void;
+  /** mean of the values that were looked at last */
+  mean(): number;
 }
 
 /** Order statistics of the slopes (x_j − x_i)/(j − i) of all pairs, for many series over the same years: what senSlope
@@ -45,9 +50,13 @@ export function slopeRanks(length: number, present: ArrayLike<number>, ranks: re
   const expected = Float64Array.from(ranks, (rank) => (rank - (pairs - 1) / 2) * perRank);
   const miss = new Float64Array(ranks.length).fill((Math.sqrt((n * (n - 1) * (2 * n + 5)) / 18) * perRank) / 8);
 
-  function takeStretch(x: Float64Array, slope: number, scatter: number): void {
-    let low = slope + scatter * (expected[0] - REACH * miss[0]);
-    let high = slope + scatter * (expected[ranks.length - 1] + REACH * miss[ranks.length - 1]);
+  // ends of the stretch in which the slope of rank i should lie
+  const lowEnd = (i: number): number => line.slope + line.scatter * (expected[i] - REACH * miss[i]);
+  const highEnd = (i: number): number => line.slope + line.scatter * (expected[i] + REACH * miss[i]);
+
+  function takeStretch(x: Float64Array): void {
+    let low = lowEnd(0);
+    let high = highEnd(ranks.length - 1);
     for (let widenings = 0; ; widenings++) {
       if (widenings > MOST_WIDENINGS || !(low <= high)) {
         low = Number.NEGATIVE_INFINITY;
@@ -57,13 +66,32 @@ export function slopeRanks(length: number, present: ArrayLike<number>, ranks: re
       const tooHigh = walk.below > lowest;
       const tooLow = walk.below + walk.taken <= highest;
       if (!tooHigh && !tooLow) return;
-      const wider = scatter * REACH * (miss[0] + miss[ranks.length - 1]) * 3 ** widenings;
+      const wider = line.scatter * REACH * (miss[0] + miss[ranks.length - 1]) * 3 ** widenings;
       if (tooHigh) low -= wider;
       if (tooLow) high += wider;
     }
   }
 
-  function learn(out: Float64Array, slope: number, scatter: number): void {
+  /** Brings the slope of rank i to its place among those taken, when all before `from` are where they belong. */
+  function place(i: number, from: number): void {
+    const { within, taken } = walk;
+    const at = ranks[i] - walk.below;
+    let first = from;
+    let end = taken;
+    const whole = highEnd(ranks.length - 1) - lowEnd(0);
+    if (highEnd(ranks.length - 1) - highEnd(i) > WORTH_PARTING * whole) {
+      const above = part(within, first, end, highEnd(i));
+      if (at < above) end = above;
+    }
+    if (lowEnd(i) - lowEnd(0) > WORTH_PARTING * whole) {
+      const above = part(within, first, end, lowEnd(i));
+      if (at >= above) first = above;
+    }
+    selectInPlace(within, at, first, end - 1);
+  }
+
+  function learn(out: Float64Array): void {
+    const { slope, scatter } = line;
     if (!(scatter > 0)) return;
     for (let i = 0; i < ranks.length; i++) {
       const off = (out[i] - slope) / scatter - expected[i];
@@ -76,17 +104,18 @@ export function slopeRanks(length: number, present: ArrayLike<number>, ranks: re
     pairs,
     find(x, out) {
       line.fit(x);
-      takeStretch(x, line.slope, line.scatter);
+      takeStretch(x);
       let from = 0;
       for (let i = 0; i < ranks.length; i++) {
-        const place = ranks[i] - walk.below;
-        if (i > 0 && place === from) smallestFirst(walk.within, from, walk.taken);
-        else selectInPlace(walk.within, place, from, walk.taken - 1);
-        out[i] = walk.within[place];
-        from = place + 1;
+        const at = ranks[i] - walk.below;
+        if (i > 0 && at === from) smallestFirst(walk.within, from, walk.taken);
+        else place(i, from);
+        out[i] = walk.within[at];
+        from = at + 1;
       }
-      learn(out, line.slope, line.scatter);
+      learn(out);
     },
+    mean: () => line.mean,
   };
 }
 
@@ -102,15 +131,26 @@ function pairWalk(length: number, pairs: number) {
     take(x: Float64Array, low: number, high: number): void {
       let below = 0;
       let taken = 0;
-      for (let i = 0; i < length - 1; i++) {
-        const earlier = x[i];
-        for (let j = i + 1, lag = 1; j < length; j++, lag++) {
-          const slope = (x[j] - earlier) * reciprocal[lag];
-          within[taken] = slope;
-          // NaN is neither below nor within; numbers in place of branches, which would be guessed wrongly
-          const isBelow = Number(slope < low);
-          below = (below + isBelow) | 0;
-          taken = (taken + Number(slope <= high) - isBelow) | 0;
+      // Two earlier values at a time, which share each later one. NaN is neither below nor within; numbers stand in place of
+      // branches, which would be guessed wrongly.
+      for (let i = 0; i < length - 1; i += 2) {
+        const [a, b] = [x[i], x[i + 1]];
+        const step = b - a;
+        within[taken] = step;
+        const stepBelow = Number(step < low);
+        below = (below + stepBelow) | 0;
+        taken = (taken + Number(step <= high) - stepBelow) | 0;
+        for (let j = i + 2, lag = 2; j < length; j++, lag++) {
+          const later = x[j];
+          const ofA = (later - a) * reciprocal[lag];
+          within[taken] = ofA;
+          const belowA = Number(ofA < low);
+          taken = (taken + Number(ofA <= high) - belowA) | 0;
+          const ofB = (later - b) * reciprocal[lag - 1];
+          within[taken] = ofB;
+          const belowB = Number(ofB < low);
+          taken = (taken + Number(ofB <= high) - belowB) | 0;
+          below = (below + belowA + belowB) | 0;
         }
       }
       this.below = below;
@@ -129,6 +169,7 @@ function leastSquares(present: ArrayLike<number>) {
   return {
     slope: 0,
     scatter: 0,
+    mean: 0,
     fit(x: Float64Array): void {
       let sum = 0;
       let sumSquares = 0;
@@ -141,6 +182,7 @@ function leastSquares(present: ArrayLike<number>) {
         sumSquares += value * value;
         products += value * times[i];
       }
+      this.mean = level + sum / n;
       this.slope = products / squares;
       this.scatter = Math.sqrt(Math.max(0, (sumSquares - (sum * sum) / n - this.slope * products) / n));
     },
@@ -155,6 +197,18 @@ function scattersPerRank(present: ArrayLike<number>): number {
     for (let j = i + 1; j < present.length; j++) lags += present[j] - present[i];
   }
   return (2 * Math.sqrt(Math.PI)) / lags;
+}
+
+/** Moves the values below `pivot` to the front of x[from] to x[to − 1]. @returns where the others begin */
+function part(x: Float64Array, from: number, to: number, pivot: number): number {
+  let rest = from;
+  for (let i = from; i < to; i++) {
+    const value = x[i];
+    x[i] = x[rest];
+    x[rest] = value;
+    rest += Number(value < pivot);
+  }
+  return rest;
 }
 
 /** Puts the smallest of x[from] to x[to − 1] at `from`. */
