@@ -111,3 +111,12 @@ test('one section is printed alone, unfolded, and the page is whole again after'
   expect(await page.locator('#breaks').getByRole('button', { name: 'Add the break' }).isVisible()).toBe(false);
   expect(await page.locator('[data-answer="chance"] dd').isVisible()).toBe(true);
 });
+
+test('on a sheet of A4 no table is cut off', async () => {
+  // 210 mm less margins of 10 mm, at 96 to the inch
+  const page = await newPage(`/regions/${slug}/evidence?breaks=2000`, { width: 718, height: 1000 });
+  await hydrated(page);
+  await page.locator('#terms').getByRole('table').waitFor();
+  await page.emulateMedia({ media: 'print' });
+  expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(718);
+});
