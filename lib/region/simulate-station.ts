@@ -27,7 +27,8 @@ const NOT_SIMULATED: SimulatedStation = { figures: null, detectable: Number.NaN 
  *
  *  The detectable trend is that of the test as the ranking ran it, at the basis's alpha for the one station by itself: the
  *  factor for serial correlation stays that of the record. Pre-whitened stations are whitened by the record's r1.
- *  @returns no figures and NaN for a station with fewer than three pairs of consecutive years */
+ *  @returns no figures and NaN for a station with fewer than three pairs of consecutive years; NaN for one whose values are
+ *           all equal */
 export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: SimulationBasis): SimulatedStation {
   const line = testedLine(row);
   const replicates = line && sieve.of({ years: line.years, residuals: sieveResiduals(line) }, row.code);
@@ -47,7 +48,9 @@ export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: Simulati
     rejected[b] = white ? white(x, slope) : slopes.rejected();
     if (figures && figureOf) figures[b] = figureOf(x, slope, slopes.mean());
   }
-  return { figures, detectable: detectableSlope(rejected) };
+  // values that are all equal have no scatter to tell a trend from
+  const level = line.values.every((value) => value === line.values[0]);
+  return { figures, detectable: level ? Number.NaN : detectableSlope(rejected) };
 }
 
 /** The smallest S that a station's test rejects; the values of a replicate are never tied. */

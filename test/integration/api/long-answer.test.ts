@@ -99,14 +99,15 @@ test('a job that waits its turn can be cancelled before the one it waits for end
 test('work that fails fails its job in words that hold nothing of the machine, and is started anew', async () => {
   const order = { ...heldWork('g').order, compute: () => Promise.reject(new RangeError('/secret')) };
   const warned: unknown[] = [];
-  const listen = (warning: unknown) => warned.push(warning);
-  process.on('warning', listen);
+  const printing = process.listeners('warning');
+  process.removeAllListeners('warning').on('warning', (warning) => warned.push(warning));
   const job = await jobIn(await longAnswer({ ...order, ...many }, asText));
   await expect.poll(async () => (await viewJob(job))?.state).toBe('failed');
   expect((await viewJob(job))?.error).not.toContain('secret');
   expect(await jobIn(await longAnswer({ ...order, ...many }, asText))).not.toBe(job);
   await expect.poll(() => warned.length).toBe(2);
-  process.off('warning', listen);
+  process.removeAllListeners('warning');
+  for (const print of printing) process.on('warning', print);
 });
 
 test('a job whose process ended fails when its heartbeat has stopped, and nothing joins it', async () => {

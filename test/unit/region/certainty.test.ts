@@ -172,6 +172,7 @@ describe('certainty', () => {
   test('answers for stations that are all alike, for two, for one and for none', () => {
     const level = [1, 2, 3].map((i) => station(`L${i}`, { first: 1980, values: constant(30, i) }));
     expect(certaintyOf(rank(level))).toMatchObject({ toldApart: false, trueSpread: 0 });
+    expect(certaintyOf(rank(level)).detectable.map(({ perDecade }) => perDecade)).toEqual([null, null, null]);
     expect(certaintyOf(rank(level)).spans.map(({ rankLow, rankHigh }) => [rankLow, rankHigh])).toEqual(
       constant(3).map(() => [1, 3]),
     );
