@@ -85,7 +85,13 @@ type FigureOf = (x: Float64Array, slope: number, mean: number) => number;
  *  Percentages are of the replicate's own mean; of the record's where that is not above 0, which would turn the sign. */
 function figureInReplicate(row: SimulatedRow, line: TestedLine, { rankBy, index }: SimulationBasis): FigureOf | null {
   if (rankingFigure(row, rankBy) === null) return null;
-  if (rankBy === 'kendall-tau') return (x, _slope) => tauOnSlope(x, line.slope);
+  if (rankBy === 'kendall-tau') {
+    return (x, _slope) => {
+      const tau = tauOnSlope(x, line.slope);
+      // all values of the replicate are equal: it goes neither way
+      return Number.isNaN(tau) ? 0 : tau;
+    };
+  }
   const perDecade = isOfMinus(row.trendOf) ? -YEARS_PER_DECADE : YEARS_PER_DECADE;
   // what a slope of 1 a year comes to
   const percentPerDecade = percentOfMean(perDecade, index, row.meanValue);

@@ -232,3 +232,15 @@ describe('the detectable trend', () => {
     expect(detectable.map(({ perDecade }) => perDecade)).toEqual([null, null, null]);
   });
 });
+
+test('stations ranked by tau have spans also where a replicate holds no year that differs', () => {
+  // regulated flows that were undercut in two years of thirty: many draws of thirty years hold neither
+  const stations = [4, 9, 14].map((year, i) => {
+    const values = constant(30);
+    values[year] = 0.8;
+    values[29 - i] = 0.7;
+    return station(`HELD${i}`, { first: 1980, values });
+  });
+  const { spans } = certaintyOf(rank(stations, { rankBy: 'kendall-tau', serialCorrection: 'ar1' }));
+  expect(spans.map(({ code }) => code).sort()).toEqual(['HELD0', 'HELD1', 'HELD2']);
+});
