@@ -16,15 +16,18 @@ export type StartEndRow = Pick<RankingRow, 'code' | 'years' | 'values' | 'trendO
 
 /** Start–end chart of one station: the trend of what the ranking tested, for every start year and end year of the period
  *  with at least 15 usable years between. Serial correction as at `windowTests`. The cell of the whole period has the
- *  ranking's own figures. No years where the station has fewer than 15.
+ *  ranking's own figures. Z is below 0 where it gets drier, also at a station that is not ranked. No years where the station
+ *  has fewer than 15.
  *  @throws RangeError when a value is not a finite number */
 export function startEnd(row: StartEndRow, { period, serialCorrection, index }: ResolvedBasis): StartEnd {
-  const series = testedSeries(row);
+  // what the ranking would have tested, had it ranked the station
+  const trendOf = row.trendOf ?? (index === 'minimum' ? 'minima' : index);
+  const series = testedSeries({ ...row, trendOf });
   const { starts, ends, firstAt, lastAt } = windowGrid(series.years, period);
   const { n, z } = windowTests(series, rowSerialTerms(row, serialCorrection), FEWEST_WINDOW_YEARS);
   const slopes = windowSlopes(series.years, series.values, FEWEST_WINDOW_YEARS);
   const means = windowMeans(row.values);
-  const ownSign = isOfMinus(row.trendOf) ? -1 : 1;
+  const ownSign = isOfMinus(trendOf) ? -1 : 1;
   const cells = starts.length * ends.length;
   const chart = {
     z: new Float32Array(cells).fill(Number.NaN),
@@ -42,7 +45,7 @@ export function startEnd(row: StartEndRow, { period, serialCorrection, index }: 
       chart.p[cell] = Math.min(1, twoSidedP(z[window]));
       const perDecade = ownSign * YEARS_PER_DECADE * slopes[window];
       chart.slopePerDecade[cell] = perDecade;
-      if (row.trendOf === 'zero-days') continue;
+      if (trendOf === 'zero-days') continue;
       chart.percentPerDecade[cell] = percentOfMean(perDecade, index, means(firstAt[i], lastAt[j])) ?? Number.NaN;
     }
   }

@@ -161,3 +161,16 @@ test('startEnd: an infinite value is refused by its place', () => {
   const infinite = { ...row, values: row.values.with(7, Number.NEGATIVE_INFINITY) };
   expect(() => startEnd(infinite, basis)).toThrow('windowScores: x[7]');
 });
+
+test('startEnd: Z is below 0 where it gets drier also at a station that is not ranked', () => {
+  const days = Array.from({ length: 30 }, (_, i) => 2 * i);
+  const made = station('A', { first: 1980, values: constant(30), zeroDays: days });
+  for (const minYears of [20, 31]) {
+    const basis = basisOf({ index: 'zero-flow-days', period: null, minYears, serialCorrection: 'ar1' });
+    const ranking = rankRegion([made], basis, YEAR_START);
+    expect(ranking.counts.ranked).toBe(minYears === 20 ? 1 : 0);
+    const { z, slopePerDecade } = startEnd(ranking.rows[0], ranking.basis);
+    expect(Math.max(...z.filter((each) => !Number.isNaN(each)))).toBeLessThan(0);
+    expect(slopePerDecade[z.length - 1]).not.toBeLessThan(0);
+  }
+});
