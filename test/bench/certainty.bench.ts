@@ -92,10 +92,24 @@ function comparePython(folder: string, { rows }: Ranking, ours: { clock: number;
     say(`numpy: not at ${PYTHON} here, so nothing to compare with`);
     return;
   }
-  const { seconds, numpy } = JSON.parse(stdout) as { seconds: number; numpy: string };
-  const all = (seconds * ranked.length) / given.length;
-  say(
-    `numpy ${numpy} on one thread, scaled up from ${given.length} stations: ${all.toFixed(1)} s of processor time: ` +
-      `${(all / ours.clock).toFixed(1)} times as long by the clock, ${(all / ours.processors).toFixed(1)} times the processor time`,
-  );
+  const { arrays, loop, versions } = JSON.parse(stdout) as Peer;
+  const ways: [string, number | null][] = [
+    [`numpy ${versions.numpy}, 500 replicates at a time`, arrays],
+    [`scipy ${versions.scipy}, theilslopes replicate by replicate`, loop],
+  ];
+  for (const [way, ofStation] of ways) {
+    if (ofStation === null) continue;
+    const all = ofStation * ranked.length;
+    say(
+      `${way}, on one thread, scaled up: ${all.toFixed(1)} s of processor time: ${(all / ours.clock).toFixed(1)} times as ` +
+        `long by the clock, ${(all / ours.processors).toFixed(1)} times the processor time`,
+    );
+  }
+}
+
+/** Seconds of a station by either way. */
+interface Peer {
+  arrays: number;
+  loop: number | null;
+  versions: { numpy: string; scipy: string | null };
 }
