@@ -1,3 +1,5 @@
+import { normalQuantile } from './normal.ts';
+
 /** Points of the grid on which the distribution of the true values is kept. */
 const POINTS = 800;
 
@@ -6,6 +8,10 @@ const REACH = 4;
 
 /** Steps of roughening. With more of them the distribution falls apart into spikes; with none it is normal. */
 const STEPS = 100;
+
+/** Least height of the starting prior against its highest: further out than thirty standard deviations its own heights
+ *  become 0, and an estimate there could never be believed. */
+const LEAST_HEIGHT = 1e-200;
 
 /** Estimates with their errors, and the normal distribution of true values to begin with. */
 export interface RoughenedInput {
@@ -21,7 +27,8 @@ export interface RoughenedInput {
 /** Where each true value may lie, given its estimate and what the others tell of the distribution of true values. */
 export interface Posteriors {
   /** Quantiles of the true value of group i at rising shares, written into `out`; a share lies between 0 and 1.
-   *  The value of a group without error is its estimate. */
+   *  A group whose error is narrower than a step of the grid is known better than the grid can tell: its value varies
+   *  about its estimate by its error, and is the estimate where there is none. */
   quantiles(i: number, shares: ArrayLike<number>, out: Float64Array): void;
 }
 
@@ -54,14 +61,17 @@ export function roughenedPosteriors({ estimates, variances, mean, variance }: Ro
   const likelihoods = Array.from({ length: groups }, (_, i) =>
     bell(grid, estimates[i], Math.max(Math.sqrt(variances[i]), step)),
   );
-  let prior = bell(grid, mean, spread);
+  let prior: Float64Array = bell(grid, mean, spread).map((height) => Math.max(LEAST_HEIGHT, height));
   for (let k = 0; k < STEPS; k++) prior = roughened(prior, likelihoods);
 
   const below = new Float64Array(POINTS);
   return {
     quantiles(i, shares, out) {
-      if (variances[i] === 0) {
-        out.fill(estimates[i]);
+      const error = Math.sqrt(variances[i]);
+      if (error < step) {
+        for (let k = 0; k < shares.length; k++) {
+          out[k] = error === 0 ? estimates[i] : estimates[i] + error * normalQuantile(shares[k]);
+        }
         return;
       }
       let sum = 0;

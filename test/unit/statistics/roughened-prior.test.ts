@@ -34,6 +34,24 @@ describe('roughenedPosteriors', () => {
     expect(Math.abs(steep + 20)).toBeLessThan(Math.abs(normal(-21) + 20));
   });
 
+  test('an estimate further out than the normal prior reaches is believed, and leaves the others where they are', () => {
+    // 100 standard deviations out the prior is exp(−5000): no number
+    const input = { estimates: [0, 1, 0.5, 100], variances: [0.04, 0.04, 0.04, 0.04], mean: 0.5, variance: 1 };
+    expect(quantilesOf(input, 3)[2]).toBeCloseTo(100, 0);
+    const [low, , middle, , high] = quantilesOf(input, 0);
+    expect(middle).toBeGreaterThan(-0.5);
+    expect(middle).toBeLessThan(1);
+    expect(high - low).toBeGreaterThan(0.05);
+    expect(high - low).toBeLessThan(1.2);
+  });
+
+  test('an error narrower than a step of the grid is kept as it is', () => {
+    // from 0 − 4·30 to 100 a step is 0.3
+    const input = { estimates: [0, 0.1, 100], variances: [1e-4, 1e-4, 1e-4], mean: 30, variance: 900 };
+    const got = quantilesOf(input, 1);
+    for (const [k, share] of SHARES.entries()) expect(got[k]).toBeCloseTo(normalQuantile(share, 0.1, 0.01), 9);
+  });
+
   test('quantiles rise with their shares and stay within the grid', () => {
     const input = { estimates: [0, 1, 2, 50], variances: [1, 2, 3, 0.0001], mean: 5, variance: 100 };
     for (let i = 0; i < 4; i++) {

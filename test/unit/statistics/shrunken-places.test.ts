@@ -69,6 +69,19 @@ test('shrunkenPlaces keeps groups apart that do not vary at all', () => {
   expect(placesOf([1, 1, 1], 0)).toMatchObject({ low: Int32Array.of(1, 1, 1), high: Int32Array.of(3, 3, 3) });
 });
 
+test('shrunkenPlaces keeps the others apart beside one that lies thousands of times as far out', () => {
+  const near = Array.from({ length: 20 }, (_, i) => 4 * i);
+  for (const [far, reach] of [
+    [1e5, 1],
+    [-1e7, 1],
+  ]) {
+    const { low, high } = placesOf([...near, far], reach);
+    const others = near.map((_, i) => (far < 0 ? i + 2 : i + 1));
+    expect(Array.from(low.subarray(0, 20))).toEqual(others);
+    expect(Array.from(high.subarray(0, 20))).toEqual(others);
+  }
+});
+
 test('shrunkenPlaces refuses replicates that do not fit', () => {
   const replicated = new Float64Array(4);
   expect(() => shrunkenPlaces({ estimates: [1, 2], replicated, replicates: 1 }, 1)).toThrow('at least 2, got 1');
