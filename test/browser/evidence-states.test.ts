@@ -120,3 +120,29 @@ test('on a sheet of A4 no table is cut off', async () => {
   await page.emulateMedia({ media: 'print' });
   expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(718);
 });
+
+test('a chart that is dark on the screen is drawn for paper when the page is printed', async () => {
+  const chart = async (colorScheme: 'light' | 'dark') => {
+    const page = await newPage(`/regions/${slug}/evidence`, { colorScheme });
+    await hydrated(page);
+    const canvas = page.locator('#years canvas');
+    await canvas.waitFor();
+    await page.locator('#breaks').getByRole('table').waitFor();
+    const picture = () => canvas.evaluate((element) => (element as HTMLCanvasElement).toDataURL());
+    return { page, picture };
+  };
+  const light = await (await chart('light')).picture();
+  const { page, picture } = await chart('dark');
+  const dark = await picture();
+  expect(dark).not.toBe(light);
+  // both in one task, as a browser does it: no frame is drawn between
+  const printed = await page.evaluate(() => {
+    window.dispatchEvent(new Event('beforeprint'));
+    const canvas = document.querySelector<HTMLCanvasElement>('#years canvas');
+    const url = canvas?.toDataURL();
+    window.dispatchEvent(new Event('afterprint'));
+    return url;
+  });
+  expect(printed).toBe(light);
+  await expect.poll(picture).toBe(dark);
+});

@@ -26,3 +26,15 @@ export function onThemeChange(listener: () => void): () => void {
     window.removeEventListener(THEME_EVENT, listener);
   };
 }
+
+/** As `readTokens`, for paper, which is light whatever theme is shown. The root wears the light theme meanwhile: tokens are
+ *  resolved there. */
+export function readPaperTokens<Name extends string>(tokens: Record<Name, string>): Record<Name, string> {
+  const root = document.documentElement;
+  const chosen = root.getAttribute('data-theme');
+  root.setAttribute('data-theme', 'light');
+  const read = readTokens(tokens);
+  if (chosen === null) root.removeAttribute('data-theme');
+  else root.setAttribute('data-theme', chosen);
+  return read;
+}

@@ -27,9 +27,13 @@ export function useCanvas(
   }, [width, height, draw, redraw]);
   useEffect(() => {
     const stopDensity = onDensityChange(redraw);
+    // no frame comes before the page is printed
+    const drawNow = () => latest.current();
+    window.addEventListener('beforeprint', drawNow);
     void document.fonts.ready.then(redraw);
     return () => {
       stopDensity();
+      window.removeEventListener('beforeprint', drawNow);
       cancelAnimationFrame(frame.current);
       frame.current = 0;
     };

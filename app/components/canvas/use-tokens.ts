@@ -1,6 +1,7 @@
 'use client';
 import { useEffect, useState } from 'react';
-import { onThemeChange, readTokens } from './tokens.ts';
+import { flushSync } from 'react-dom';
+import { onThemeChange, readPaperTokens, readTokens } from './tokens.ts';
 
 /** Design tokens resolved for the theme that is shown (see readTokens), read anew when it changes; null before the page is
  *  there.
@@ -9,8 +10,17 @@ export function useTokens<Name extends string>(tokens: Record<Name, string>): Re
   const [palette, setPalette] = useState<Record<Name, string> | null>(null);
   useEffect(() => {
     const read = () => setPalette(readTokens(tokens));
+    // ink on paper: drawn before the printer looks, so at once and not at the next frame
+    const print = () => flushSync(() => setPalette(readPaperTokens(tokens)));
     read();
-    return onThemeChange(read);
+    const stop = onThemeChange(read);
+    window.addEventListener('beforeprint', print);
+    window.addEventListener('afterprint', read);
+    return () => {
+      stop();
+      window.removeEventListener('beforeprint', print);
+      window.removeEventListener('afterprint', read);
+    };
   }, [tokens]);
   return palette;
 }
