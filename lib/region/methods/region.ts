@@ -66,7 +66,7 @@ export const regionChapter: MethodChapter = {
       id: 'beyond-chance',
       title: 'More than chance',
       says: [
-        'How many ranked stations fall by their own p-value, and how many would where no station has a trend. Years are put in random order, the same for all stations, ten thousand times: neighbours keep sharing their weather, and any trend is gone.',
+        'How many ranked stations fall by their own p-value, and how many would where no station has a trend. Years are put in random order, the same for all stations, ten thousand times: neighbours keep sharing their weather, and any trend is gone. Carry-over is gone with it, so a reordered series is tested without a factor for it. The sieve keeps carry-over, and tests each replicate with correlations of its own.',
         'This count and that of false discoveries answer two questions and are never mixed. Falling and rising are counted apart, for all stations, by influence, for the independent set, and for any group that is drawn on the map.',
       ],
       formulas: [
@@ -92,7 +92,7 @@ export const regionChapter: MethodChapter = {
       id: 'regional-kendall',
       title: 'One common trend',
       says: [
-        'Adds the stations’ Mann–Kendall sums and asks whether together they fall or rise. Stations that share weather are not independent witnesses, and years carry over: both widen the variance. The share of stations of each sign stands beside it, for a trend that is up in one half and down in the other cancels.',
+        'Adds the stations’ Mann–Kendall sums and asks whether together they fall or rise. Stations that share weather are not independent witnesses, and years carry over: both widen the variance, the carry-over by the mean of the stations’ correlations whichever serial correction the basis names. The share of stations of each sign stands beside it, for a trend that is up in one half and down in the other cancels.',
       ],
       formulas: [
         {
