@@ -189,7 +189,7 @@ test('suggestedBreak: names the last year before the step, and says that it is n
   const { rows, basis } = ranked({ A: stepped(0.5) });
   const found = suggestedBreak(rows[0], basis)!;
   // all 20 values before are above all after: K = 20·20
-  expect(found).toMatchObject({ lastBefore: 1999, k: 400, pBySieve: false, besideTrend: true });
+  expect(found).toMatchObject({ lastBefore: 1999, k: 400, besideTrend: true });
   expect(found.words).toContain('would part after 1999/00');
   expect(found.words).toContain('step or trend, not told apart');
   expect(found.words).toContain('Not tested');
@@ -211,6 +211,25 @@ test('suggestedBreak: with carry-over p comes from resampling, and is the same e
   const approximate = Math.min(1, 2 * Math.exp((-6 * found.k ** 2) / (60 ** 3 + 60 ** 2)));
   expect(found.p).toBeGreaterThan(approximate);
 });
+
+test.each(['none', 'all-lags', 'pre-whitened', 'block-bootstrap'] as const)(
+  'suggestedBreak: p comes from resampling with carry-over under %s as under ar1',
+  (serialCorrection) => {
+    let level = 0;
+    const values = noise(60, 11).map((value) => {
+      level = 0.6 * level + value;
+      return 2 + level;
+    });
+    const period: [number, number] = [1980, 2039];
+    const of = (correction: typeof serialCorrection | 'ar1') => {
+      const { rows, basis } = ranked({ A: values }, { serialCorrection: correction, period });
+      return suggestedBreak(rows[0], basis)!;
+    };
+    const [found, byAr1] = [of(serialCorrection), of('ar1')];
+    expect([found.pBySieve, found.k]).toEqual([true, byAr1.k]);
+    expect(Math.abs(found.p - byAr1.p)).toBeLessThan(0.05);
+  },
+);
 
 test('suggestedBreak: nothing from 9 years, from equal values, or from none', () => {
   const { rows, basis } = ranked({ A: stepped(0.5).slice(0, 9), B: constant(40), C: [] });
