@@ -13,11 +13,13 @@ const TURNS = [0, 360, -360] as const;
 
 /** An area as text for an address. Example: [[7.5, 47], [8, 47], [8, 47.25]] → "7.5,47;8,47;8,47.25" */
 export function areaToText(area: readonly Corner[]): string {
-  const degrees = (value: number) => String(Number(value.toFixed(DECIMALS)) + 0);
-  return area.map(([longitude, latitude]) => `${degrees(longitude)},${degrees(latitude)}`).join(';');
+  return area.map((corner) => corner.map(rounded).join(',')).join(';');
 }
 
-/** Reads an area of an address; the inverse of `areaToText`.
+/** As an address has it; never −0. */
+const rounded = (degrees: number): number => Number(degrees.toFixed(DECIMALS)) + 0;
+
+/** Reads an area of an address, to the five decimals of `areaToText`, by whose text an answer is kept.
  *  @returns the corners; else in words what is wrong and what would do */
 export function areaFromText(text: string): { area: Corner[] } | { problem: string } {
   const pieces = text.split(';');
@@ -31,7 +33,7 @@ export function areaFromText(text: string): { area: Corner[] } | { problem: stri
     if (!(Math.abs(longitude) <= 360 && Math.abs(latitude) <= 90)) {
       return { problem: `corner ${i + 1} of the area must be longitude,latitude in degrees, not "${piece}"` };
     }
-    area.push([longitude, latitude]);
+    area.push([rounded(longitude), rounded(latitude)]);
   }
   return { area };
 }

@@ -114,6 +114,17 @@ describe('areaFromText', () => {
     );
   });
 
+  test('reads no more decimals than areaToText writes: areas of one text are one area', () => {
+    const read = areaFromText('7.123456,50;8,50.0000049;8,51');
+    expect(read).toEqual({
+      area: [
+        [7.12346, 50],
+        [8, 50],
+        [8, 51],
+      ],
+    });
+  });
+
   test('says which corner cannot be read, and how many there may be', () => {
     expect(areaFromText('1,2;3,4')).toEqual({ problem: 'an area has 3 to 60 corners, this one has 2' });
     expect(areaFromText(new Array(61).fill('1,2').join(';'))).toEqual({
