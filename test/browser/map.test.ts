@@ -78,7 +78,7 @@ test('pointing at a mark points at its row; a click selects it in table and addr
   await page.mouse.click(x, y);
   await page.locator(`tr[data-code="${station.code}"][data-selected]`).waitFor();
   await eventually(() => parameter(page, 'station')).toBe(station.code);
-  await page.mouse.click(x + 120, y + 120);
+  await page.mouse.click(x - 120, y + 120);
   await eventually(() => parameter(page, 'station')).toBeNull();
 });
 

@@ -84,8 +84,8 @@ test('what the colours say is chosen and kept in the address; the table and the 
   await eventually(picture).not.toBe(byZ);
   await years.getByText('The chart as a table').click();
   const cells = years.getByRole('region', { name: 'Start–end chart as a table' }).locator('td');
-  const filled = (await cells.allTextContents()).filter(Boolean).length;
-  expect(filled).toBe(z.filter((value) => value !== null).length);
+  const filled = async () => (await cells.allTextContents()).filter(Boolean).length;
+  await eventually(filled).toBe(z.filter((value) => value !== null).length);
   const lines = await csvOf(page, 'Start–end CSV');
   expect(lines[0]).toMatch(/^station_code,/);
   expect(lines.length - 1).toBe(windows);
@@ -137,6 +137,13 @@ test('the break that the figures suggest is shown without a test at it', async (
   await breaks
     .getByText(/^The figures themselves would part after .* Not tested: these figures chose the year\.$/)
     .waitFor();
+});
+
+test('an address with terms that cannot be used shows all sections on the region’s own', async () => {
+  const page = await stationPage(unsure, '?days=0');
+  await page.getByText('Basis key "days" cannot be 0').waitFor();
+  await section(page, 'By the years chosen').locator('canvas').waitFor();
+  await page.getByText(/^Detectable trend: this record/).waitFor();
 });
 
 test('a station that is not ranked has neither a place nor a comparison, and its page says why', async () => {

@@ -26,7 +26,7 @@ test('tells the station’s place, its facts and a verdict with figures', async 
 
 test('the arrow keys read single years of the minima and of the record', async () => {
   const page = await stationPage(stations[0]);
-  const minima = page.getByRole('slider', { name: /^Annual .* minima/ });
+  const minima = page.getByRole('slider', { name: /^Lowest 7-day mean of each year/ });
   await minima.focus();
   await page.keyboard.press('End');
   const last = await minima.getAttribute('aria-valuetext');

@@ -38,6 +38,8 @@ interface MapScreenProps {
   };
   rows: MapRow[];
   layers: { id: number; name: string; kind: string }[];
+  /** the basis in force, as URL text: what differs from the region's own */
+  terms: string;
   rankBy: Basis['rankBy'];
   index: Basis['index'];
   units: Units;
@@ -45,7 +47,7 @@ interface MapScreenProps {
 }
 
 /** Map and ranking, linked both ways. What is shown stands in the address: view, selection, following, list, search. */
-export function MapScreen({ region, rows, layers, rankBy, index, units, span }: MapScreenProps) {
+export function MapScreen({ region, rows, layers, terms, rankBy, index, units, span }: MapScreenProps) {
   const [state, setState] = useQueryStates(mapState, { history: 'replace', throttleMs: 150 });
   const [inView, setInView] = useState<Set<string> | null>(null);
   const [hover] = useState(createHoverStore);
@@ -71,8 +73,8 @@ export function MapScreen({ region, rows, layers, rankBy, index, units, span }: 
   const showInView = useCallback((codes: Set<string>) => startTransition(() => setInView(codes)), []);
 
   const tested = useMemo(() => rows.filter(({ rank, drying }) => rank !== null || drying).length, [rows]);
-  const certainty = useCertainty(region.slug, tested);
-  const movement = useMovement(region.slug).value;
+  const certainty = useCertainty(region.slug, terms, tested);
+  const movement = useMovement(region.slug, terms).value;
   const { k, fill } = state;
   const { view } = certainty;
   const markOf = useCallback(

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { BasisSentence } from '@/app/components/basis-sentence';
 import { Header } from '@/app/components/header';
 import { ErrorNote, WarningNote } from '@/app/components/notes';
+import { basisToQuery } from '@/lib/basis';
 import { listLayers } from '@/lib/store/layers';
 import { besideRanking, headline } from './headline.ts';
 import { mapRows } from './map-row.ts';
@@ -58,6 +59,7 @@ export default async function MapPage({ params, searchParams }: PageProps) {
               }}
               rows={rows}
               layers={layers}
+              terms={problem ? '' : basisToQuery(basis, region.basis).toString()}
               rankBy={ranking.basis.rankBy}
               index={ranking.basis.index}
               units={ranking.basis.units}

@@ -6,14 +6,16 @@ const Certain = createContext<CertaintyAnswer | null>(null);
 
 interface Props {
   slug: string;
+  /** the basis in force, as URL text */
+  terms: string;
   /** stations that are ranked or drying */
   tested: number;
   children: ReactNode;
 }
 
 /** Asks once how sure the places of a region are, for all parts of a page that speak of it. */
-export function CertaintyProvider({ slug, tested, children }: Props) {
-  return <Certain value={useCertainty(slug, tested)}>{children}</Certain>;
+export function CertaintyProvider({ slug, terms, tested, children }: Props) {
+  return <Certain value={useCertainty(slug, terms, tested)}>{children}</Certain>;
 }
 
 /** @throws RangeError outside a CertaintyProvider */

@@ -1,5 +1,4 @@
 'use client';
-import { useSearchParams } from 'next/navigation';
 import { useMemo } from 'react';
 import { apiHref } from '@/app/components/links';
 import { type LongResult, useLongResult } from '@/app/components/use-long-result';
@@ -11,11 +10,11 @@ export interface CertaintyAnswer extends Omit<LongResult<Certainty>, 'value' | '
   view: CertaintyView | null;
 }
 
-/** How sure the places of a region's ranking are, on the terms in the address. Asked for when the page is alive.
+/** How sure the places of a region's ranking are. Asked for when the page is alive.
+ *  @param terms   the basis in force, as URL text
  *  @param tested  stations that are ranked or drying; with none there is nothing to ask */
-export function useCertainty(slug: string, tested: number): CertaintyAnswer {
-  const query = useSearchParams().toString();
-  const address = tested === 0 ? null : apiHref(slug, 'certainty', query);
+export function useCertainty(slug: string, terms: string, tested: number): CertaintyAnswer {
+  const address = tested === 0 ? null : apiHref(slug, 'certainty', terms);
   const {
     value,
     valueOf: answered,

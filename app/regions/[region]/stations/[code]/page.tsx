@@ -3,6 +3,7 @@ import { notFound } from 'next/navigation';
 import { BasisSentence } from '@/app/components/basis-sentence';
 import { Header } from '@/app/components/header';
 import { ErrorNote } from '@/app/components/notes';
+import { basisToQuery } from '@/lib/basis';
 import { rankingOf } from '@/lib/jobs/ranking';
 import { stationDetail } from '@/lib/jobs/station';
 import { getStation } from '@/lib/store/stations';
@@ -40,7 +41,14 @@ export default async function StationPage({ params, searchParams }: Props) {
         <BasisSentence resolved={detail.basis} base={region.basis}>
           {basisProblem && <ErrorNote title="The region’s own terms are shown">{basisProblem}</ErrorNote>}
         </BasisSentence>
-        <StationScreen region={region} detail={detail} background={background} rows={ranking.rows} query={query} />
+        <StationScreen
+          region={region}
+          detail={detail}
+          background={background}
+          rows={ranking.rows}
+          query={query}
+          basisQuery={basisToQuery(basis, region.basis).toString()}
+        />
       </main>
     </>
   );

@@ -45,9 +45,11 @@ interface Props {
   background: StationBackground;
   rows: readonly RankingRow[];
   query: URLSearchParams;
+  /** the basis in force, as URL text: what differs from the region's own */
+  basisQuery: string;
 }
 
-export function StationScreen({ region, detail, background, rows, query }: Props) {
+export function StationScreen({ region, detail, background, rows, query, basisQuery }: Props) {
   const { station, row, basis, coverage } = detail;
   const needle = needleOf(row);
   const points = comparedPoints(minimaPoints(detail.minima, basis.yearStart, row.years), row, basis.index);
@@ -67,7 +69,7 @@ export function StationScreen({ region, detail, background, rows, query }: Props
   const tested = rows.filter((other) => other.rank !== null || other.drying).length;
 
   return (
-    <CertaintyProvider slug={region.slug} tested={tested}>
+    <CertaintyProvider slug={region.slug} terms={basisQuery} tested={tested}>
       <article className={styles.page}>
         <header className={styles.head}>
           <nav className={styles.steps} aria-label="Ways from here">
@@ -194,11 +196,18 @@ export function StationScreen({ region, detail, background, rows, query }: Props
           <StationCurve slug={region.slug} detail={detail} levels={levels} query={query} />
         </section>
 
-        <StartEndSection slug={region.slug} code={station.code} name={station.name} alpha={basis.alpha} />
+        <StartEndSection
+          slug={region.slug}
+          terms={basisQuery}
+          code={station.code}
+          name={station.name}
+          alpha={basis.alpha}
+        />
 
         {row.trend !== null && (
           <BreaksSection
             slug={region.slug}
+            terms={basisQuery}
             code={station.code}
             data={breaksData(row, basis, span)}
             yearStart={basis.yearStart}

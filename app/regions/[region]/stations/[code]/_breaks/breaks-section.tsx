@@ -1,5 +1,4 @@
 'use client';
-import { useSearchParams } from 'next/navigation';
 import { parseAsString, useQueryState } from 'nuqs';
 import { count } from '@/app/components/format';
 import { apiHref } from '@/app/components/links';
@@ -16,6 +15,8 @@ import { StepTable } from './step-table.tsx';
 
 interface Props {
   slug: string;
+  /** the basis in force, as URL text */
+  terms: string;
   code: string;
   data: BreaksData;
   yearStart: number;
@@ -24,12 +25,11 @@ interface Props {
 }
 
 /** Levels before and after dated changes and chosen breaks; a break that the data suggest is shown and never tested. */
-export function BreaksSection({ slug, code, data, yearStart, alpha }: Props) {
-  const query = useSearchParams().toString();
+export function BreaksSection({ slug, terms, code, data, yearStart, alpha }: Props) {
   const [text, setText] = useQueryState('breaks', parseAsString);
   const chosen = breaksFromText(text);
   const address = (format?: string) => {
-    const href = apiHref(slug, `stations/${encodeURIComponent(code)}/breaks`, query, format);
+    const href = apiHref(slug, `stations/${encodeURIComponent(code)}/breaks`, terms, format);
     const breaks = breaksToText(chosen);
     return breaks === null ? href : `${href}${href.includes('?') ? '&' : '?'}breaks=${breaks}`;
   };

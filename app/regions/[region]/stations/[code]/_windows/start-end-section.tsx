@@ -1,5 +1,4 @@
 'use client';
-import { useSearchParams } from 'next/navigation';
 import { parseAsStringLiteral, useQueryState } from 'nuqs';
 import { useMemo } from 'react';
 import { apiHref } from '@/app/components/links';
@@ -15,6 +14,8 @@ import { steadinessWords } from './steadiness-words.ts';
 
 interface Props {
   slug: string;
+  /** the basis in force, as URL text */
+  terms: string;
   code: string;
   name: string;
   /** significance of the basis */
@@ -24,16 +25,15 @@ interface Props {
 const FIGURE = parseAsStringLiteral(CHART_FIGURES).withDefault('z');
 
 /** How the station's trend depends on the years chosen: every start year and end year, and how many agree. */
-export function StartEndSection({ slug, code, name, alpha }: Props) {
-  const query = useSearchParams().toString();
+export function StartEndSection({ slug, terms, code, name, alpha }: Props) {
   const table = `stations/${encodeURIComponent(code)}/start-end`;
-  const { value, problem } = useAnswer<StartEndAnswer>(apiHref(slug, table, query));
+  const { value, problem } = useAnswer<StartEndAnswer>(apiHref(slug, table, terms));
   const [figure, setFigure] = useQueryState('chart', FIGURE);
   return (
     <section id="start-end" className={styles.wide} aria-labelledby="start-end-title">
       <div className={styles.sectionHead}>
         <h2 id="start-end-title">By the years chosen</h2>
-        <a className={ui.button} href={apiHref(slug, table, query, 'csv')} download>
+        <a className={ui.button} href={apiHref(slug, table, terms, 'csv')} download>
           Start–end CSV
         </a>
       </div>
