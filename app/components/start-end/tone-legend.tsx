@@ -10,6 +10,9 @@ interface Props {
   marked: string | null;
   /** what the ringed cell is */
   whole: string | null;
+  /** what the two ways of the trend are called. Example: "earlier", "later" */
+  falling?: string;
+  rising?: string;
 }
 
 const SIDES = [
@@ -18,18 +21,18 @@ const SIDES = [
 ] as const;
 
 /** What the colours of a start–end chart mean, from falling to rising, with its marks. */
-export function ToneLegend({ steps, name, marked, whole }: Props) {
+export function ToneLegend({ steps, name, marked, whole, falling = 'falling', rising = 'rising' }: Props) {
   return (
     <ul className={styles.legend} aria-label="What the cells mean">
       {SIDES.map(({ side, order }) => (
         <li key={side}>
-          {side === 'falling' && <span>falling</span>}
+          {side === 'falling' && <span>{falling}</span>}
           <span className={styles.ramp} data-side={side} aria-hidden="true">
             {order.map((step) => (
               <span key={step} style={{ opacity: TONE_OPACITY[step] }} />
             ))}
           </span>
-          {side === 'rising' && <span>rising</span>}
+          {side === 'rising' && <span>{rising}</span>}
         </li>
       ))}
       <li>

@@ -66,6 +66,7 @@ export function StationScreen({ region, detail, background, rows, query, basisQu
     apiHref(region.slug, `stations/${encodeURIComponent(station.code)}/${name}`, query, 'csv');
 
   const terms = { index: basis.index, drying: row.drying, units: basis.units };
+  const { falling, rising } = INDEX_WORDS[scale.index];
   const tested = rows.filter((other) => other.rank !== null || other.drying).length;
 
   return (
@@ -202,6 +203,7 @@ export function StationScreen({ region, detail, background, rows, query, basisQu
           code={station.code}
           name={station.name}
           alpha={basis.alpha}
+          ways={{ falling, rising }}
         />
 
         {row.trend !== null && (

@@ -13,10 +13,17 @@ interface Props {
   name: string;
   alpha: number;
   figure: ChartFigure;
+  /** what the two ways of the trend are called */
+  ways: TrendWays;
+}
+
+export interface TrendWays {
+  falling: string;
+  rising: string;
 }
 
 /** The start–end chart of a station with what its colours mean. */
-export function StartEndChart({ answer, name, alpha, figure }: Props) {
+export function StartEndChart({ answer, name, alpha, figure, ways }: Props) {
   const { starts, ends, z, p } = answer;
   const changes = useMemo(() => changesOf(answer), [answer]);
   const steps = useMemo(() => stepsOf(figure, changes.values), [figure, changes]);
@@ -54,6 +61,8 @@ export function StartEndChart({ answer, name, alpha, figure }: Props) {
         name={figure === 'z' ? 'Z' : `${changes.unit || 'Change'} per decade`}
         marked={`p below ${percent(alpha, alpha < 0.01 ? 1 : 0)} by itself`}
         whole="the whole period"
+        falling={ways.falling}
+        rising={ways.rising}
       />
     </>
   );

@@ -8,7 +8,7 @@ import ui from '@/app/components/ui.module.css';
 import { useAnswer } from '@/app/components/use-answer';
 import styles from '../station-screen.module.css';
 import { CHART_FIGURES, type ChartFigure, changesOf, type StartEndAnswer } from './start-end-answer.ts';
-import { StartEndChart } from './start-end-chart.tsx';
+import { StartEndChart, type TrendWays } from './start-end-chart.tsx';
 import { StartEndTable } from './start-end-table.tsx';
 import { steadinessWords } from './steadiness-words.ts';
 
@@ -20,12 +20,13 @@ interface Props {
   name: string;
   /** significance of the basis */
   alpha: number;
+  ways: TrendWays;
 }
 
 const FIGURE = parseAsStringLiteral(CHART_FIGURES).withDefault('z');
 
 /** How the station's trend depends on the years chosen: every start year and end year, and how many agree. */
-export function StartEndSection({ slug, terms, code, name, alpha }: Props) {
+export function StartEndSection({ slug, terms, code, name, alpha, ways }: Props) {
   const table = `stations/${encodeURIComponent(code)}/start-end`;
   const { value, problem } = useAnswer<StartEndAnswer>(apiHref(slug, table, terms));
   const [figure, setFigure] = useQueryState('chart', FIGURE);
@@ -45,7 +46,14 @@ export function StartEndSection({ slug, terms, code, name, alpha }: Props) {
         </p>
       )}
       {value && value.starts.length > 0 && (
-        <Answer answer={value} name={name} alpha={alpha} figure={figure} onFigure={(next) => void setFigure(next)} />
+        <Answer
+          answer={value}
+          name={name}
+          alpha={alpha}
+          ways={ways}
+          figure={figure}
+          onFigure={(next) => void setFigure(next)}
+        />
       )}
     </section>
   );
@@ -55,11 +63,12 @@ interface AnswerProps {
   answer: StartEndAnswer;
   name: string;
   alpha: number;
+  ways: TrendWays;
   figure: ChartFigure;
   onFigure(figure: ChartFigure): void;
 }
 
-function Answer({ answer, name, alpha, figure, onFigure }: AnswerProps) {
+function Answer({ answer, name, alpha, ways, figure, onFigure }: AnswerProps) {
   const { unit } = useMemo(() => changesOf(answer), [answer]);
   return (
     <div className={styles.answer}>
@@ -73,7 +82,7 @@ function Answer({ answer, name, alpha, figure, onFigure }: AnswerProps) {
         ]}
         onChange={onFigure}
       />
-      <StartEndChart answer={answer} name={name} alpha={alpha} figure={figure} />
+      <StartEndChart answer={answer} name={name} alpha={alpha} figure={figure} ways={ways} />
       <StartEndTable answer={answer} figure={figure} />
     </div>
   );
