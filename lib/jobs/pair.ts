@@ -45,17 +45,19 @@ export async function pairOf(
     if (each === code) throw new PairError(`"${code}" cannot be its own reference: name other stations.`);
     if (codes.indexOf(each) !== i) throw new PairError(`"${each}" is named twice as reference: name it once.`);
   });
-  const seed = createHash('sha256')
-    .update(JSON.stringify(['pair', key, code, codes]))
-    .digest('hex');
-  const comparison = await runTask('pair', {
-    station: siteOf(station),
-    references: codes.map((each) => siteOf(rowOf.get(each)!)),
-    terms: termsOf(ranking.basis),
-    seed,
-  });
-  return { comparison, basis: ranking.basis, key: seed };
+  const compared = siteOf(station);
+  const others = codes.map((each) => siteOf(rowOf.get(each)!));
+  const terms = termsOf(ranking.basis);
+  // by what is compared and not by the key, which knows stations by the numbers that they have in this database
+  const seed = digest([terms, [compared, ...others].map(({ code, years, values }) => [code, years, values])]);
+  const comparison = await runTask('pair', { station: compared, references: others, terms, seed });
+  return { comparison, basis: ranking.basis, key: digest([key, code, codes]) };
 }
+
+const digest = (parts: unknown): string =>
+  createHash('sha256')
+    .update(JSON.stringify(['pair', parts]))
+    .digest('hex');
 
 /** The natural stations that may serve a station as references, best first. */
 export async function candidatesOf(

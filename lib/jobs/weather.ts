@@ -83,8 +83,10 @@ export async function weatherOf(
     );
   }
   const { years, minima, days } = usedYears(here.minima, ranking.basis.period);
-  const seed = digest([key, code, source.quantity, source.code, antecedentDays]);
   const { serialCorrection, alpha, period, days: length } = ranking.basis;
+  const terms = { days: length, period, serialCorrection, alpha };
+  // by what is looked at and not by the key, which knows stations by the numbers that they have in this database
+  const seed = digest([terms, code, years, minima, days, source.quantity, source.code, antecedentDays]);
   const { trend, hash } = await runTask('weather', {
     input: {
       station: { code, name: here.station.name },
@@ -94,10 +96,10 @@ export async function weatherOf(
       antecedentDays,
     },
     weatherOf: { id: source.stationId, unit: source.unit },
-    terms: { days: length, period, serialCorrection, alpha },
+    terms,
     seed,
   });
-  return { trend, sources: shown, basis: ranking.basis, key: digest([seed, hash, stored]) };
+  return { trend, sources: shown, basis: ranking.basis, key: digest([key, seed, hash, stored]) };
 }
 
 /** The station's own record is nearest of all; one without a place furthest. */
