@@ -98,12 +98,11 @@ function figureInReplicate(row: SimulatedRow, line: TestedLine, { rankBy, index 
   const unit = rankingFigure({ ...row, valueSlope: perDecade, percentPerDecade }, rankBy) ?? Number.NaN;
   if (rankBy !== 'percent-per-decade' || !INDEX_FACTS[index].hasPercent)
     return (_x, slope) => unit * (line.slope + slope);
-  const meanYear = line.years.reduce((sum, year) => sum + year, 0) / line.years.length;
-  const level = line.intercept + line.slope * meanYear;
+  // residuals are centred about their mean, which lies above their median where a few wet years stand out
   const sign = isOfMinus(row.trendOf) ? -1 : 1;
   const ofRecord = row.meanValue ?? Number.NaN;
   return (_x, slope, mean) => {
-    const own = sign * (level + mean);
+    const own = ofRecord + sign * mean;
     return (unit * (line.slope + slope) * ofRecord) / (own > 0 ? own : ofRecord);
   };
 }

@@ -17,7 +17,6 @@ export type SimulatedRow = Pick<
   | 'meanValue'
   | 'trendOf'
   | 'valueSlope'
-  | 'intercept'
   | 'percentPerDecade'
   | 'tau'
   | 'areaKm2'
@@ -31,24 +30,22 @@ export interface TestedLine {
   values: number[];
   /** per year */
   slope: number;
-  /** at calendar year 0: median of x − b·t */
-  intercept: number;
 }
 
 /** A row with nothing but what the simulation reads: it travels to the workers. */
 export function simulatedRow(row: SimulatedRow): SimulatedRow {
-  const { code, rank, drying, years, values, meanValue, trendOf, valueSlope, intercept } = row;
+  const { code, rank, drying, years, values, meanValue, trendOf, valueSlope } = row;
   const { percentPerDecade, tau, areaKm2, r1, serialFactor } = row;
-  const line = { code, rank, drying, years, values, meanValue, trendOf, valueSlope, intercept };
+  const line = { code, rank, drying, years, values, meanValue, trendOf, valueSlope };
   return { ...line, percentPerDecade, tau, areaKm2, r1, serialFactor };
 }
 
 /** The line of a ranked or drying station; null when it has no slope: fewer than two years. */
 export function testedLine(row: SimulatedRow): TestedLine | null {
-  const { trendOf, valueSlope, intercept } = row;
-  if (valueSlope === null || intercept === null) return null;
+  const { trendOf, valueSlope } = row;
+  if (valueSlope === null) return null;
   const sign = isOfMinus(trendOf) ? -1 : 1;
-  return { ...testedSeries(row), slope: (sign * valueSlope) / YEARS_PER_DECADE, intercept: sign * intercept };
+  return { ...testedSeries(row), slope: (sign * valueSlope) / YEARS_PER_DECADE };
 }
 
 /** How the stations of a family, ranked or drying, are resampled together: at the median of their lag-1 correlations, each

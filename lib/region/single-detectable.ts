@@ -23,7 +23,7 @@ export function detectablePercent(
   if (!trend || !(mean > 0)) return null;
   const row: SimulatedRow = {
     ...{ code: label, rank: null, drying: false, trendOf: 'minima', areaKm2: null, meanValue: mean },
-    ...{ years: [...years], values: [...values], intercept: trend.intercept, valueSlope: trend.slopePerDecade },
+    ...{ years: [...years], values: [...values], valueSlope: trend.slopePerDecade },
     ...{ percentPerDecade: null, tau: trend.tau, r1: trend.r1, serialFactor: trend.serialFactor },
   };
   const terms = familyTerms([row]);

@@ -1,4 +1,5 @@
 import { pauleMandel } from './paule-mandel.ts';
+import { medianOfSorted } from './quantile.ts';
 import { type Posteriors, roughenedPosteriors } from './roughened-prior.ts';
 import { selectInPlace } from './select.ts';
 
@@ -30,7 +31,8 @@ export interface ShrunkenPlaces {
 /** Places of many groups with what is not known of them, by shrinkage towards their common mean.
  *
  *  d_i is the deviation from the group's mean over replicates, less the mean of such deviations over groups in the same
- *  replicate: what all groups share moves no place. s_i² = var(d_i)·M/(M − 1); τ² and μ by Paule & Mandel from the
+ *  replicate: what all groups share moves no place. A group that varies more than the middle one counts in this mean by the
+ *  ratio of their variances, so that one wild group does not blur all others. s_i² = var(d_i)·M/(M − 1); τ² and μ by Paule & Mandel from the
  *  estimates and s_i²; w_i = τ²/(τ² + s_i²). In each replicate the groups are put in order of
  *  μ + w_i(b_i − μ) + √w_i·d_i, equal ones sharing the better place; the span is the order statistics ⌈0.05·B⌉ and
  *  ⌈0.95·B⌉ of a group's places. With τ² = 0 every span is 1 to M, and each group is among the k smallest with k/M. The
@@ -55,19 +57,27 @@ export function shrunkenPlaces(input: ReplicatedEstimates, most: number): Shrunk
   return { spread: Math.sqrt(variance), ...spansOf(places, groups, replicates, reach), most: reach };
 }
 
-/** d_i: deviations from each group's mean, less their mean over the groups of a replicate. */
+/** d_i: deviations from each group's mean, less their weighted mean over the groups of a replicate. */
 function commonRemoved({ estimates, replicated, replicates }: ReplicatedEstimates): Float64Array {
+  const groups = estimates.length;
   const deviations = replicated.slice();
-  const common = new Float64Array(replicates);
-  for (let i = 0; i < estimates.length; i++) {
+  const variances = new Float64Array(groups);
+  for (let i = 0; i < groups; i++) {
     const own = deviations.subarray(i * replicates, (i + 1) * replicates);
     let sum = 0;
     for (const value of own) sum += value;
     const mean = sum / replicates;
     for (let b = 0; b < replicates; b++) {
       own[b] -= mean;
-      common[b] += own[b] / estimates.length;
+      variances[i] += own[b] ** 2 / replicates;
     }
+  }
+  const middle = medianOfSorted(variances.slice().sort());
+  const weights = variances.map((variance) => (variance > middle ? middle / variance : 1));
+  const whole = weights.reduce((sum, weight) => sum + weight, 0);
+  const common = new Float64Array(replicates);
+  for (let i = 0; i < groups; i++) {
+    for (let b = 0; b < replicates; b++) common[b] += (weights[i] / whole) * deviations[i * replicates + b];
   }
   for (let at = 0; at < deviations.length; at++) deviations[at] -= common[at % replicates];
   return deviations;

@@ -86,6 +86,18 @@ describe('rank spans, by simulation', () => {
     const { width } = tried(12, () => constant(30, -3));
     expect(width).toBeGreaterThan(0.8);
   }, 30_000);
+
+  // the mean of such a river lies far above its median: replicates about the median would have means of nearly nothing
+  test('are not blurred by one river that is nearly dry in most years', () => {
+    const normal = normals(9);
+    const fitful = station('S12', { first: 1980, values: Array.from({ length: 40 }, () => Math.exp(2 * normal())) });
+    const [steep, ...level] = invented(7, [-20, ...constant(11, 0)]);
+    const { spans, toldApart } = certaintyOf(rank([steep, ...level, fitful]));
+    expect(toldApart).toBe(true);
+    const span = spans.find(({ code }) => code === 'S00');
+    expect(span?.rankLow).toBe(1);
+    expect(span?.rankHigh).toBeLessThanOrEqual(4);
+  });
 });
 
 describe('certainty', () => {
