@@ -2,9 +2,10 @@ import type { Break, RegionBreaks, Segment, StationBreaks, StepTest } from '../r
 import { type Column, csvTable } from './csv.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
 import { STATION_CODE } from './shared-columns.ts';
+import { tableMetadata } from './table-metadata.ts';
 
 /** One break of one station. */
-export interface BreakRow {
+interface BreakRow {
   code: string;
   name: string;
   tested: string;
@@ -62,7 +63,7 @@ function ofSide(side: 'before' | 'after'): Column<BreakRow>[] {
   ];
 }
 
-export const BREAK_COLUMNS: readonly Column<BreakRow>[] = [
+const COLUMNS: readonly Column<BreakRow>[] = [
   STATION_CODE,
   { name: 'station_name', datatype: 'string', description: 'name of the gauging station', value: (row) => row.name },
   {
@@ -101,7 +102,7 @@ export const BREAK_COLUMNS: readonly Column<BreakRow>[] = [
 ];
 
 /** Every break of every station, those without usable years on both sides with the reason, by year. */
-export function* breakRows(stations: readonly StationBreaks[]): Generator<BreakRow> {
+function* breakRows(stations: readonly StationBreaks[]): Generator<BreakRow> {
   for (const { code, name, tested, unit, steps, leftOut } of stations) {
     const head = { code, name, tested, unit };
     const rows: BreakRow[] = [
@@ -114,12 +115,19 @@ export function* breakRows(stations: readonly StationBreaks[]): Generator<BreakR
 
 /** Before and after at one station: in CSV a row a break; JSON also has the levels and what the figures suggest. */
 export function stationBreaksProduct(format: 'csv' | 'json', breaks: StationBreaks, from: Provenance): string {
-  if (format === 'csv') return csvTable(BREAK_COLUMNS, breakRows([breaks]));
+  if (format === 'csv') return csvTable(COLUMNS, breakRows([breaks]));
   return JSON.stringify({ ...provenanceNotes(from), ...breaks });
 }
 
 /** Before and after at the stations of a region. */
 export function regionBreaksProduct(format: 'csv' | 'json', breaks: RegionBreaks, from: Provenance): string {
-  if (format === 'csv') return csvTable(BREAK_COLUMNS, breakRows(breaks.stations));
+  if (format === 'csv') return csvTable(COLUMNS, breakRows(breaks.stations));
   return JSON.stringify({ ...provenanceNotes(from), ...breaks });
+}
+
+/** What lies beside the CSV file.
+ *  @param code  of the station, when the file is of one */
+export function breaksMetadata(from: Provenance, fileName: string, code?: string): Record<string, unknown> {
+  const whose = code === undefined ? from.region.name : `${from.region.name}, ${code}`;
+  return tableMetadata(fileName, `${whose}: before and after`, COLUMNS, from);
 }

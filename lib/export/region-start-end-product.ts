@@ -2,9 +2,10 @@ import type { OnTheWire, RegionStartEnd } from '../region/window-types.ts';
 import { type Column, csvTable } from './csv.ts';
 import { type Provenance, provenanceNotes } from './provenance.ts';
 import { WINDOW } from './start-end-csv.ts';
+import { tableMetadata } from './table-metadata.ts';
 
 /** One window over the stations of a region. */
-export interface RegionWindowRow {
+interface RegionWindowRow {
   start: number;
   end: number;
   stations: number;
@@ -13,7 +14,7 @@ export interface RegionWindowRow {
   rising: number;
 }
 
-export const REGION_WINDOW_COLUMNS: readonly Column<RegionWindowRow>[] = [
+const COLUMNS: readonly Column<RegionWindowRow>[] = [
   ...WINDOW,
   {
     name: 'stations',
@@ -48,7 +49,7 @@ export const REGION_WINDOW_COLUMNS: readonly Column<RegionWindowRow>[] = [
 ];
 
 /** Every window that some station has, by start and then by end. */
-export function* regionWindowRows(chart: RegionStartEnd): Generator<RegionWindowRow> {
+function* regionWindowRows(chart: RegionStartEnd): Generator<RegionWindowRow> {
   for (let i = 0; i < chart.starts.length; i++) {
     for (let j = 0; j < chart.ends.length; j++) {
       const cell = i * chart.ends.length + j;
@@ -67,7 +68,7 @@ export function* regionWindowRows(chart: RegionStartEnd): Generator<RegionWindow
 
 /** A region's start–end chart as a file: in CSV a row a window, in JSON the counts by start and end. */
 export function regionStartEndProduct(format: 'csv' | 'json', chart: RegionStartEnd, from: Provenance): string {
-  if (format === 'csv') return csvTable(REGION_WINDOW_COLUMNS, regionWindowRows(chart));
+  if (format === 'csv') return csvTable(COLUMNS, regionWindowRows(chart));
   const { starts, ends, stations, negative, falling, rising } = chart;
   const cells: OnTheWire<RegionStartEnd> = {
     starts,
@@ -78,4 +79,9 @@ export function regionStartEndProduct(format: 'csv' | 'json', chart: RegionStart
     rising: [...rising],
   };
   return JSON.stringify({ ...provenanceNotes(from), ...cells });
+}
+
+/** What lies beside the CSV file. */
+export function regionStartEndMetadata(from: Provenance, fileName: string): Record<string, unknown> {
+  return tableMetadata(fileName, `${from.region.name}: trends for every start year and end year`, COLUMNS, from);
 }

@@ -26,7 +26,7 @@ function beside(side: 'falling' | 'rising', verb: string): Column<GroupRow>[] {
   ];
 }
 
-export const REGIONAL_COLUMNS: readonly Column<GroupRow>[] = [
+const COLUMNS: readonly Column<GroupRow>[] = [
   {
     name: 'group',
     datatype: 'string',
@@ -155,11 +155,12 @@ export function regionalProduct(format: 'csv' | 'json', answers: RegionalAnswers
   if (format === 'json') return JSON.stringify({ ...provenanceNotes(from), ...answers });
   const { method, replicates, trueLevel } = answers;
   return csvTable(
-    REGIONAL_COLUMNS,
+    COLUMNS,
     answers.groups.map((group) => ({ ...group, method, replicates, trueLevel })),
   );
 }
 
+/** What lies beside the CSV file. */
 export function regionalMetadata(from: Provenance, fileName: string): Record<string, unknown> {
-  return tableMetadata(fileName, `${from.region.name}: what its stations say together`, REGIONAL_COLUMNS, from);
+  return tableMetadata(fileName, `${from.region.name}: what its stations say together`, COLUMNS, from);
 }

@@ -8,16 +8,14 @@ import { stationParameters } from '../regions/[region]/stations/parameters';
 import { BASIS_PARAMETERS, IMPORT, JOB, LAYER, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, listOf, MULTIPART, PROBLEM, reference, text } from './parts';
 import { ARCHIVE_PATHS } from './paths-archive';
-import { CERTAINTY_PATHS } from './paths-certainty';
 import { CHECK_PATHS } from './paths-checks';
 import { DAY_PATHS } from './paths-days';
+import { INFERENCE_PATHS } from './paths-inference';
 import { KEPT_PATHS } from './paths-mappings';
 import { PAIR_PATHS } from './paths-pair';
 import { RECORD_PATHS } from './paths-records';
-import { REGIONAL_PATHS } from './paths-regional';
 import { STATION_CHANGES, STATION_PATHS } from './paths-stations';
 import { UPLOAD_PATHS } from './paths-uploads';
-import { WINDOW_PATHS } from './paths-windows';
 
 const TABLE = {
   'application/json': { schema: anything },
@@ -99,14 +97,12 @@ export const PATHS = {
     coverageParameters,
     { ...json(anything), 'text/csv': { schema: text } },
   ),
-  ...CERTAINTY_PATHS,
   ...CHECK_PATHS,
   ...DAY_PATHS,
+  ...INFERENCE_PATHS,
   ...PAIR_PATHS,
   ...RECORD_PATHS,
-  ...REGIONAL_PATHS,
   ...STATION_PATHS,
-  ...WINDOW_PATHS,
   '/api/regions/{region}/layers': {
     get: { summary: 'Map layers', parameters: [REGION], responses: answers('the layers', json(listOf('Layer'))) },
   },

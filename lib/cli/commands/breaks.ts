@@ -1,5 +1,4 @@
-import { BREAK_COLUMNS, regionBreaksProduct } from '../../export/breaks-product.ts';
-import { tableMetadata } from '../../export/table-metadata.ts';
+import { breaksMetadata, regionBreaksProduct } from '../../export/breaks-product.ts';
 import { regionBreaksOf } from '../../jobs/breaks.ts';
 import { BREAK_CHOICE_HELP, parseBreakChoice } from '../../region/break-choice.ts';
 import { ANALYSIS_HELP, ANALYSIS_OPTIONS, analysisRequest, deliver, provenance, withWorkers } from '../analysis.ts';
@@ -30,7 +29,7 @@ export async function run(argv: string[]): Promise<number> {
     const named = narrowing.codes && new Set(narrowing.codes);
     const stations = breaks.stations.filter(({ code }) => !named || named.has(code));
     await deliver(request, regionBreaksProduct(format, { ...breaks, stations }, from), (file) =>
-      tableMetadata(file, `${region.name}: before and after`, BREAK_COLUMNS, from),
+      breaksMetadata(from, file),
     );
     if (breaks.stations.length === 0) process.stderr.write('No ranked station has such a break.\n');
     for (const { label, tested, lower, higher } of breaks.summary) {

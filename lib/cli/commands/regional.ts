@@ -4,7 +4,7 @@ import { regionalOf } from '../../jobs/regional.ts';
 import { areaFromText } from '../../region/in-polygon.ts';
 import { CHANCE_METHODS } from '../../region/regional-types.ts';
 import { ANALYSIS_HELP, ANALYSIS_OPTIONS, analysisRequest, deliver, provenance, withWorkers } from '../analysis.ts';
-import { readArguments } from '../arguments.ts';
+import { plainFormat, readArguments } from '../arguments.ts';
 import { UsageError } from '../usage-error.ts';
 import { workProgress } from '../work-progress.ts';
 
@@ -17,7 +17,8 @@ them, by influence and in an area, each with every station and with those that s
                    with their carry-over
   --area CORNERS   longitude,latitude in degrees with ; between: --area='7,50;8,50;8,51'. The stations inside are one
                    group more
-${ANALYSIS_HELP}`;
+${ANALYSIS_HELP}  --format geojson is refused: groups of stations are no places
+`;
 
 const OPTIONS = {
   ...ANALYSIS_OPTIONS,
@@ -27,6 +28,7 @@ const OPTIONS = {
 
 export async function run(argv: string[]): Promise<number> {
   const { values } = readArguments(argv, OPTIONS);
+  const format = plainFormat(values.format);
   const method = CHANCE_METHODS.find((known) => known === values.chance);
   if (!method) throw new UsageError(`--chance takes ${CHANCE_METHODS.join(' or ')}, not "${values.chance}".`);
   if (values.station) throw new UsageError('regional speaks of stations together: take --area in place of --station.');
@@ -34,9 +36,7 @@ export async function run(argv: string[]): Promise<number> {
   if ('problem' in read) throw new UsageError(`--area: ${read.problem}.`);
   return withWorkers(async () => {
     const request = await analysisRequest(values);
-    const { region, basis, format } = request;
-    if (format === 'geojson')
-      throw new UsageError('--format geojson: groups of stations are no places; take csv or json.');
+    const { region, basis } = request;
     const progress = workProgress({ flows: 'Comparing flows', chance: 'Trying chance' });
     const { ranking } = await rankingOf(region, basis);
     const answers = await regionalOf(region, basis, { method, area: read.area }, progress.context);

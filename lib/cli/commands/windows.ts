@@ -1,4 +1,4 @@
-import { REGION_WINDOW_COLUMNS, regionStartEndProduct } from '../../export/region-start-end-product.ts';
+import { regionStartEndMetadata, regionStartEndProduct } from '../../export/region-start-end-product.ts';
 import { START_END_COLUMNS } from '../../export/start-end-csv.ts';
 import { startEndsProduct } from '../../export/start-end-product.ts';
 import { tableMetadata } from '../../export/table-metadata.ts';
@@ -40,10 +40,7 @@ async function ofRegion(request: AnalysisRequest, format: 'csv' | 'json'): Promi
   const ranked = await rankingOf(region, basis);
   const chart = await regionStartEndOf(ranked);
   const from = await provenance(region, ranked.ranking.basis);
-  const title = `${region.name}: trends for every start year and end year`;
-  await deliver(request, regionStartEndProduct(format, chart, from), (file) =>
-    tableMetadata(file, title, REGION_WINDOW_COLUMNS, from),
-  );
+  await deliver(request, regionStartEndProduct(format, chart, from), (file) => regionStartEndMetadata(from, file));
 }
 
 async function ofStations(request: AnalysisRequest, format: 'csv' | 'json', codes: readonly string[]): Promise<void> {

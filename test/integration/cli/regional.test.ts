@@ -36,7 +36,7 @@ test.each([
   [['--area', '1,2;3,4'], '--area: an area has 3 to 60 corners, this one has 2.'],
   [['--chance', 'guess'], '--chance takes permutation or sieve, not "guess".'],
   [['--station', 'A1'], 'take --area in place of --station'],
-  [['--format', 'geojson'], 'groups of stations are no places'],
+  [['--format', 'geojson'], '--format takes csv or json here, not "geojson".'],
 ])('regional %j is wrong usage', async (given, message) => {
   const { code, stdout, stderr } = await runCommand('regional', ...REGION, ...given);
   expect([code, stdout]).toEqual([2, '']);

@@ -2,8 +2,7 @@ import { basisOf, readParameters } from '@/app/api/_http/parameters';
 import { plainTableAnswer } from '@/app/api/_http/plain-table';
 import { provenanceOf, regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
-import { BREAK_COLUMNS, regionBreaksProduct } from '@/lib/export/breaks-product';
-import { tableMetadata } from '@/lib/export/table-metadata';
+import { breaksMetadata, regionBreaksProduct } from '@/lib/export/breaks-product';
 import { regionBreaksOf } from '@/lib/jobs/breaks';
 import { breaksParameters } from './parameters';
 
@@ -19,6 +18,6 @@ export const GET = route<{ region: string }>(async (request, params) => {
     format,
     file,
     product: (as) => regionBreaksProduct(as, breaks, from),
-    metadata: () => tableMetadata(file, `${region.name}: before and after`, BREAK_COLUMNS, from),
+    metadata: () => breaksMetadata(from, file),
   });
 });

@@ -1,6 +1,5 @@
 import * as z from 'zod';
-import { waitParameter } from '@/app/api/_http/long-answer';
-import { plainFormatParameter } from '@/app/api/_http/plain-table';
+import { longTableParameters } from '@/app/api/_http/long-table';
 import { MOST_STEEPEST, USUAL_STEEPEST } from '@/lib/region/certainty-types';
 
 /** "Among the k steepest declines". */
@@ -14,4 +13,4 @@ export const steepestParameter = {
     .describe('of a table: the probability asked for is that of being among the k steepest declines'),
 };
 
-export const certaintyParameters = { ...plainFormatParameter, ...waitParameter, ...steepestParameter };
+export const certaintyParameters = { ...longTableParameters, ...steepestParameter };

@@ -1,6 +1,5 @@
-import { longAnswer } from '@/app/api/_http/long-answer';
+import { longTableAnswer } from '@/app/api/_http/long-table';
 import { basisOf, readParameters } from '@/app/api/_http/parameters';
-import { plainTableAnswer } from '@/app/api/_http/plain-table';
 import { provenanceOf, regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { certaintyMetadata, certaintyProduct } from '@/lib/export/certainty-product';
@@ -15,24 +14,15 @@ export const GET = route<{ region: string }>(async (request, params) => {
   const ranked = await rankingOf(region, basisOf(request, region));
   const { basis, warnings, counts } = ranked.ranking;
   const from = await provenanceOf(region, basis, warnings);
-  const key = certaintyKey(ranked.key);
   const file = `${region.slug}-certainty.csv`;
-  return longAnswer(
-    {
-      kind: 'certainty',
-      regionId: region.id,
-      key,
-      stations: counts.ranked + counts.drying,
-      wait: wait === 'true' || format !== 'json',
-      compute: (context) => certaintyOf(ranked, context),
-    },
-    (certainty) =>
-      plainTableAnswer(request, {
-        key,
-        format,
-        file,
-        product: (as) => certaintyProduct(as, certainty, k),
-        metadata: () => certaintyMetadata(from, file),
-      }),
-  );
+  return longTableAnswer(request, {
+    kind: 'certainty',
+    regionId: region.id,
+    key: certaintyKey(ranked.key),
+    stations: counts.ranked + counts.drying,
+    ...{ format, wait, file },
+    compute: (context) => certaintyOf(ranked, context),
+    product: (as, certainty) => certaintyProduct(as, certainty, k),
+    metadata: () => certaintyMetadata(from, file),
+  });
 });

@@ -1,12 +1,10 @@
 import * as z from 'zod';
-import { waitParameter } from '@/app/api/_http/long-answer';
-import { plainFormatParameter } from '@/app/api/_http/plain-table';
+import { longTableParameters } from '@/app/api/_http/long-table';
 import { areaFromText } from '@/lib/region/in-polygon';
 import { CHANCE_METHODS } from '@/lib/region/regional-types';
 
 export const regionalParameters = {
-  ...plainFormatParameter,
-  ...waitParameter,
+  ...longTableParameters,
   method: z
     .enum(CHANCE_METHODS)
     .default('permutation')

@@ -1,6 +1,5 @@
-import { longAnswer } from '@/app/api/_http/long-answer';
+import { longTableAnswer } from '@/app/api/_http/long-table';
 import { basisOf, readParameters } from '@/app/api/_http/parameters';
-import { plainTableAnswer } from '@/app/api/_http/plain-table';
 import { provenanceOf, regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { regionalMetadata, regionalProduct } from '@/lib/export/regional-product';
@@ -15,26 +14,17 @@ export const GET = route<{ region: string }>(async (request, params) => {
   const basis = basisOf(request, region);
   const { ranking, key: rankingKey } = await rankingOf(region, basis);
   const question = { method, area };
-  const key = regionalKey(rankingKey, question);
   const from = await provenanceOf(region, ranking.basis, ranking.warnings);
   const file = `${region.slug}-regional.csv`;
-  return longAnswer(
-    {
-      kind: 'regional',
-      regionId: region.id,
-      key,
-      // another area is only counted anew
-      stations: chanceIsKept(rankingKey, method) ? 0 : ranking.counts.ranked,
-      wait: wait === 'true' || format !== 'json',
-      compute: (context) => regionalOf(region, basis, question, context),
-    },
-    (answers) =>
-      plainTableAnswer(request, {
-        key,
-        format,
-        file,
-        product: (as) => regionalProduct(as, answers, from),
-        metadata: () => regionalMetadata(from, file),
-      }),
-  );
+  return longTableAnswer(request, {
+    kind: 'regional',
+    regionId: region.id,
+    key: regionalKey(rankingKey, question),
+    // another area is only counted anew
+    stations: chanceIsKept(rankingKey, method) ? 0 : ranking.counts.ranked,
+    ...{ format, wait, file },
+    compute: (context) => regionalOf(region, basis, question, context),
+    product: (as, answers) => regionalProduct(as, answers, from),
+    metadata: () => regionalMetadata(from, file),
+  });
 });

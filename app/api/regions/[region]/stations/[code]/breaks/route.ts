@@ -4,8 +4,7 @@ import { provenanceOf, regionOf } from '@/app/api/_http/region';
 import { route } from '@/app/api/_http/route';
 import { type StationParams, stationOf } from '@/app/api/_http/station';
 import { breaksParameters } from '@/app/api/regions/[region]/breaks/parameters';
-import { BREAK_COLUMNS, stationBreaksProduct } from '@/lib/export/breaks-product';
-import { tableMetadata } from '@/lib/export/table-metadata';
+import { breaksMetadata, stationBreaksProduct } from '@/lib/export/breaks-product';
 import { stationBreaksOf } from '@/lib/jobs/breaks';
 
 /** Levels before and after at one station, and the change that its figures suggest. */
@@ -21,6 +20,6 @@ export const GET = route<StationParams>(async (request, params) => {
     format,
     file,
     product: (as) => stationBreaksProduct(as, breaks, from),
-    metadata: () => tableMetadata(file, `${region.name}, ${station.code}: before and after`, BREAK_COLUMNS, from),
+    metadata: () => breaksMetadata(from, file, station.code),
   });
 });

@@ -12,7 +12,7 @@ export const weatherParameters = {
   from: z
     .string()
     .optional()
-    .describe('code of the station where it was measured; left out: the station itself, else the nearest that has any'),
+    .describe('code of the station where it was measured; left out: the station itself, else the nearest with weather'),
   antecedentDays: z.coerce
     .number()
     .int()

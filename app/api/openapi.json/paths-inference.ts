@@ -1,9 +1,10 @@
 import type * as z from 'zod';
+import { longTableParameters } from '../_http/long-table';
 import { plainFormatParameter } from '../_http/plain-table';
-import { alternativesParameters } from '../regions/[region]/alternatives/parameters';
 import { breaksParameters } from '../regions/[region]/breaks/parameters';
+import { certaintyParameters } from '../regions/[region]/certainty/parameters';
 import { movementParameters } from '../regions/[region]/movement/parameters';
-import { startEndParameters } from '../regions/[region]/start-end/parameters';
+import { regionalParameters } from '../regions/[region]/regional/parameters';
 import { BASIS_PARAMETERS, type Parameter, queryParameters, REGION, STATION } from './parameters';
 import { answers, anything, json, text } from './parts';
 
@@ -26,14 +27,25 @@ function plainTable(summary: string, path: Parameter[], shape: z.ZodRawShape, co
 }
 
 /** Such a table that may take long. */
-export function longTable(summary: string, path: Parameter[], shape: z.ZodRawShape) {
+function longTable(summary: string, path: Parameter[], shape: z.ZodRawShape) {
   const { get } = plainTable(summary, path, shape);
   const running = { description: 'the job that works on it: ask again when it is done', content: json(anything) };
   return { get: { ...get, responses: { ...get.responses, '202': running } } };
 }
 
-/** How answers depend on the years and the other terms, and levels before and after. */
-export const WINDOW_PATHS = {
+/** How sure the ranking is, what the stations say together, how answers depend on the years and the other terms, and levels
+ *  before and after. */
+export const INFERENCE_PATHS = {
+  '/api/regions/{region}/certainty': longTable(
+    'How sure each place in the ranking is, and which trend each record could have shown',
+    [REGION],
+    certaintyParameters,
+  ),
+  '/api/regions/{region}/regional': longTable(
+    'How many stations fall and rise beyond chance, and whether they share one trend: all, by influence, in an area, each with the independent set',
+    [REGION],
+    regionalParameters,
+  ),
   '/api/regions/{region}/stations/{code}/start-end': plainTable(
     'Trend of a station for every start year and end year',
     [REGION, STATION],
@@ -42,7 +54,7 @@ export const WINDOW_PATHS = {
   '/api/regions/{region}/start-end': longTable(
     'How many stations fall, for every start year and end year',
     [REGION],
-    startEndParameters,
+    longTableParameters,
   ),
   '/api/regions/{region}/movement': plainTable(
     'Who moved in the ranking, and how far, against other terms',
@@ -52,7 +64,7 @@ export const WINDOW_PATHS = {
   '/api/regions/{region}/alternatives': longTable(
     'The ranking under other choices of each term',
     [REGION],
-    alternativesParameters,
+    longTableParameters,
   ),
   '/api/regions/{region}/breaks': plainTable(
     'Levels before and after a break at the ranked stations',
