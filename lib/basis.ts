@@ -66,7 +66,6 @@ export const basisSchema = z
   });
 
 export type Basis = z.output<typeof basisSchema>;
-export type BasisInput = z.input<typeof basisSchema>;
 export type BasisKey = keyof Basis;
 
 export const DEFAULT_BASIS: Basis = Object.freeze(basisSchema.parse({})) as Basis;

@@ -5,7 +5,7 @@ import { type Provenance, provenanceNotes } from './provenance.ts';
 import { START_END_COLUMNS, type StartEndToWrite, startEndRows, type WindowRow } from './start-end-csv.ts';
 
 /** A chart for a screen: its numbers with 4 significant digits, null where there is none. */
-export function startEndOnTheWire({ starts, ends, steadiness, windows, ...cells }: StartEnd): OnTheWire<StartEnd> {
+function startEndOnTheWire({ starts, ends, steadiness, windows, ...cells }: StartEnd): OnTheWire<StartEnd> {
   const { z, p, slopePerDecade, percentPerDecade } = cells;
   return {
     starts,

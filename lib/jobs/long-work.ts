@@ -2,8 +2,7 @@ import type { LaneProgress, WorkContext } from './lanes.ts';
 import { launchJob } from './live-jobs.ts';
 
 /** Answers that take long enough for a job of their own. */
-export const LONG_KINDS = ['certainty', 'regional', 'windows', 'alternatives'] as const;
-export type LongKind = (typeof LONG_KINDS)[number];
+type LongKind = 'certainty' | 'regional' | 'windows' | 'alternatives';
 
 /** Long work whose answer is kept. */
 export interface LongWork<Value> {

@@ -2,7 +2,7 @@ import { dateOfDay, dayNumber, isLeapYear } from '../calendar/day.ts';
 import { circularMean, unrolled } from '../statistics/circular.ts';
 
 /** Days of the year that dates are told in: years of 366 days are drawn together to it. */
-export const DATE_YEAR_DAYS = 365;
+const DATE_YEAR_DAYS = 365;
 const TURN = 2 * Math.PI;
 
 /** Dates laid on one line. */

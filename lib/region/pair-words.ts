@@ -33,7 +33,7 @@ export function pairSentence(comparison: PairComparison, terms: PairTerms): stri
 }
 
 /** The reference, or the mean of several. */
-export function referenceWords({ references }: Pick<PairComparison, 'references'>): string {
+function referenceWords({ references }: Pick<PairComparison, 'references'>): string {
   return `${references.length > 1 ? 'the mean of ' : ''}${listed(references.map(called))}`;
 }
 

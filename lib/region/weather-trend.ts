@@ -9,7 +9,7 @@ import { meanOf, orNull, singleTrend } from './single-trend.ts';
 import { weatherSentence, weatherWarnings } from './weather-words.ts';
 
 /** A curve through fewer points follows each of them. */
-export const FEWEST_FOR_CURVE = 10;
+const FEWEST_FOR_CURVE = 10;
 
 /** Numbers of days that are offered. */
 const OFFERED_DAYS = [30, 90, 180, 270, 365];

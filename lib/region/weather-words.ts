@@ -30,7 +30,7 @@ export function weatherSentence(trend: WeatherTrend, terms: WeatherTerms): strin
 }
 
 /** Example: "rainfall of the 180 days before at Bruck at Ede" */
-export function weatherWords({ quantity, antecedentDays, from, station }: WeatherTrend): string {
+function weatherWords({ quantity, antecedentDays, from, station }: WeatherTrend): string {
   const where = from.code === station.code ? '' : ` at ${called(from)}`;
   return `${quantityWords(quantity)} of the ${counted(antecedentDays, 'day')} before${where}`;
 }

@@ -2,7 +2,7 @@ import type { DatedValues } from './detrend.ts';
 import { pettitt } from './pettitt.ts';
 import { sieve, sieveResiduals, sieveTerms } from './sieve.ts';
 
-export const PETTITT_REPLICATES = 2000;
+const PETTITT_REPLICATES = 2000;
 
 export interface PettittSieveOptions {
   /** lag-1 correlation, 0 or more and below 1 */

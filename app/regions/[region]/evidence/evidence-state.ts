@@ -4,7 +4,7 @@ import type { ChanceMethod } from '@/lib/region/regional-types';
 const CHANCE_METHODS = ['permutation', 'sieve'] as const satisfies readonly ChanceMethod[];
 
 /** What the cells of the chart by years show: the sign of the slope, or what is beyond chance station by station. */
-export const YEAR_FIGURES = ['sign', 'significant'] as const;
+const YEAR_FIGURES = ['sign', 'significant'] as const;
 export type YearFigure = (typeof YEAR_FIGURES)[number];
 
 /** The page's state in its address, beside the basis. */

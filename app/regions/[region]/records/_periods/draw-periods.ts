@@ -22,7 +22,7 @@ export interface PeriodPicture {
   common: readonly [number, number] | null;
 }
 
-export const stepOf = (steps: readonly number[], stations: number): number =>
+const stepOf = (steps: readonly number[], stations: number): number =>
   steps.findLastIndex((least) => stations >= least);
 
 export function drawPeriods(context: CanvasRenderingContext2D, picture: PeriodPicture, palette: ChartPalette): void {

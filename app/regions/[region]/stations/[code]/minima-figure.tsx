@@ -39,8 +39,9 @@ interface Props {
 
 const HEIGHT = 340;
 
-/** Annual minima, or another figure a year, on a real time axis: filled marks for the years used, hollow ones that hang from a bar for years
- *  whose minimum is only an upper bound, with the slope.fitted and its interval. Arrow keys move through the years. */
+/** Annual minima, or another figure a year, on a real time axis: filled marks for the years used, hollow ones that hang
+ *  from a bar for years whose minimum is only an upper bound, with the slope line and its interval. Arrow keys move
+ *  through the years. */
 export function MinimaFigure({ points, slope, trend, scale, days, changes, levels, yearStart, span, summary }: Props) {
   const [frame, width] = useWidth<HTMLDivElement>(960);
   const { x, y, marks, top } = useMemo(
