@@ -59,8 +59,8 @@ function sieved(series: ChanceSeries, basis: SievedTask['basis'], seed: string):
 
 /** A case takes long where series are resampled to be tested, or every replicate needs a slope. */
 const casesOf = (method: ChanceMethod, correction: Correction): number => {
-  if (correction === 'block-bootstrap') return 200;
-  return method === 'sieve' ? 400 : 1000;
+  if (method === 'permutation') return correction === 'block-bootstrap' ? 200 : 1000;
+  return correction === 'ar1-regional' ? 300 : 100;
 };
 
 export const fieldLevel: Scenario[] = CHANCE_METHODS.flatMap((method) =>
