@@ -14,7 +14,10 @@ beforeAll(async () => {
 
 const PAGES: [string, () => string][] = [
   ['regions', () => '/'],
+  ['methods', () => '/methods'],
   ['map and ranking', () => `/regions/${region}`],
+  ['evidence', () => `/regions/${region}/evidence`],
+  ['against a reference', () => `/regions/${region}/pair?station=${encodeURIComponent(station)}`],
   ['curves', () => `/regions/${region}/curves`],
   ['station', () => `/regions/${region}/stations/${encodeURIComponent(station)}`],
   ['records: years', () => `/regions/${region}/records`],
@@ -67,6 +70,17 @@ test('the map page loads at most 300 kB of compressed script before anyone touch
   const total = (await Promise.all(sizes.values())).reduce((sum, size) => sum + size, 0);
   expect(sizes.size).toBeGreaterThan(3);
   expect(total).toBeLessThanOrEqual(SCRIPT_LIMIT);
+});
+
+test('the methods page sets its formulas, and what was simulated stands beside them', async () => {
+  const page = await newPage('/methods#serial-correlation');
+  await hydrated(page);
+  const part = page.locator('#serial-correlation');
+  expect(await part.locator('math').count()).toBe(2);
+  expect(await part.locator('.katex-html').first().isVisible()).toBe(true);
+  const alarms = part.getByRole('table').first();
+  expect(await alarms.getByRole('row').count()).toBe(7);
+  expect(await alarms.getByRole('rowheader').allTextContents()).toContain('ar1-regional');
 });
 
 test('the harness sees trouble: a forbidden inline script, an error, and a request to another host', async () => {
