@@ -3,6 +3,7 @@ import { scaleLinear } from 'd3-scale';
 import { tickText } from '@/app/components/duration-figure/figure-text';
 import { useWidth } from '@/app/components/use-width';
 import type { PairYear } from '@/lib/region/pair-types';
+import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
 import { useYearReader } from '../stations/[code]/year-reader';
 import { YearSlider } from '../stations/[code]/year-slider';
@@ -51,22 +52,8 @@ export function DoubleMassFigure({ years, summary }: Props) {
         onLeave={reader.clear}
       >
         <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          {y.ticks(5).map((value) => (
-            <g key={value} className={styles.grid}>
-              <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
-              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {tickText(value)}
-              </text>
-            </g>
-          ))}
-          {x.ticks(5).map((value) => (
-            <g key={value} className={styles.ticks}>
-              <line x1={x(value)} x2={x(value)} y1={bottom} y2={bottom + 5} />
-              <text x={x(value)} y={bottom + 19} textAnchor="middle">
-                {tickText(value)}
-              </text>
-            </g>
-          ))}
+          <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
+          <FootAxis values={x.ticks(5)} x={x} bottom={bottom} textOf={tickText} />
           <line className={styles.level} x1={x(0)} y1={y(0)} x2={x(last.referenceSum)} y2={y(last.stationSum)} />
           <path
             className={styles.joined}

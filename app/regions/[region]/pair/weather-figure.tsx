@@ -4,6 +4,7 @@ import { tickText } from '@/app/components/duration-figure/figure-text';
 import { significant } from '@/app/components/format';
 import { useWidth } from '@/app/components/use-width';
 import type { WeatherYear } from '@/lib/region/pair-types';
+import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
 import { useYearReader } from '../stations/[code]/year-reader';
 import { YearSlider } from '../stations/[code]/year-slider';
@@ -60,22 +61,13 @@ export function WeatherFigure({ years, factor, unit, weatherName, minimumName, s
         onLeave={reader.clear}
       >
         <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          {y.ticks(5).map((value) => (
-            <g key={value} className={styles.grid}>
-              <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
-              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {tickText(value)}
-              </text>
-            </g>
-          ))}
-          {x.ticks(Math.max(2, Math.floor((right - PLOT.left) / 90))).map((value) => (
-            <g key={value} className={styles.ticks}>
-              <line x1={x(value)} x2={x(value)} y1={bottom} y2={bottom + 5} />
-              <text x={x(value)} y={bottom + 19} textAnchor="middle">
-                {tickText(value)}
-              </text>
-            </g>
-          ))}
+          <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
+          <FootAxis
+            values={x.ticks(Math.max(2, Math.floor((right - PLOT.left) / 90)))}
+            x={x}
+            bottom={bottom}
+            textOf={tickText}
+          />
           <path
             className={styles.curve}
             d={`M${curve.map(({ weather, fitted }) => `${x(weather).toFixed(1)},${y(fitted * factor).toFixed(1)}`).join('L')}`}

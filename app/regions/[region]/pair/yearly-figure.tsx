@@ -12,7 +12,9 @@ import { tickText } from '@/app/components/duration-figure/figure-text';
 import { useWidth } from '@/app/components/use-width';
 import { yearTicks } from '@/app/components/year-ticks';
 import type { SlopeLine } from '@/lib/jobs/types';
+import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
+import { SlopeBand } from '../stations/[code]/slope-band';
 import { useYearReader } from '../stations/[code]/year-reader';
 import { YearSlider } from '../stations/[code]/year-slider';
 import styles from './pair-figures.module.css';
@@ -71,25 +73,15 @@ export function YearlyFigure({ points, slope, tone, level, axisName, changes, ye
         onLeave={reader.clear}
       >
         <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          {y.ticks(5).map((value) => (
-            <g key={value} className={styles.grid}>
-              <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
-              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {tickText(value).replace('-', '−')}
-              </text>
-            </g>
-          ))}
-          {yearTicks(span[0], span[1], right - PLOT.left).map((year) => (
-            <g key={year} className={styles.ticks}>
-              <line x1={x(year)} x2={x(year)} y1={bottom} y2={bottom + 5} />
-              <text x={x(year)} y={bottom + 19} textAnchor="middle">
-                {year}
-              </text>
-            </g>
-          ))}
+          <ValueAxis
+            ticks={y.ticks(5).map((value) => ({ value, text: tickText(value).replace('-', '−') }))}
+            y={y}
+            right={right}
+          />
+          <FootAxis values={yearTicks(span[0], span[1], right - PLOT.left)} x={x} bottom={bottom} />
           <line className={styles.level} x1={PLOT.left} x2={right} y1={y(level.value)} y2={y(level.value)} />
           <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
-          {slope && <Slope slope={slope} x={x} y={y} top={top} bottom={bottom} />}
+          {slope && <SlopeBand slope={slope} x={x} y={y} top={top} bottom={bottom} />}
           {runsOf(points).map((run) => (
             <path
               key={run[0].year}
@@ -120,32 +112,6 @@ export function YearlyFigure({ points, slope, tone, level, axisName, changes, ye
         )}
       </p>
     </div>
-  );
-}
-
-type Position = (value: number) => number;
-
-interface SlopeProps {
-  slope: SlopeLine;
-  x: Position;
-  y: Position;
-  top: number;
-  bottom: number;
-}
-
-function Slope({ slope, x, y, top, bottom }: SlopeProps) {
-  const [left, right] = [x(slope.firstYear), x(slope.lastYear)];
-  const inside = (value: number) => Math.min(bottom, Math.max(top, y(value)));
-  return (
-    <g className={styles.slope}>
-      {slope.low && slope.high && (
-        <path
-          className={styles.interval}
-          d={`M${left},${inside(slope.low[0])}L${right},${inside(slope.low[1])}V${inside(slope.high[1])}L${left},${inside(slope.high[0])}Z`}
-        />
-      )}
-      <line x1={left} x2={right} y1={y(slope.fitted[0])} y2={y(slope.fitted[1])} />
-    </g>
   );
 }
 

@@ -16,8 +16,10 @@ import { axisTicks, type IndexScale } from './index-scale.ts';
 import styles from './minima-figure.module.css';
 import type { MinimaPoint } from './minima-points';
 import type { NamedLevel } from './named-levels';
+import { FootAxis, ValueAxis } from './plot-axes';
 import { PLOT } from './plot-box';
 import { readingText } from './reading-text';
+import { SlopeBand, SlopeSample } from './slope-band';
 import { useYearReader } from './year-reader';
 import { YearSlider } from './year-slider';
 
@@ -70,22 +72,8 @@ export function MinimaFigure({ points, slope, trend, scale, days, changes, level
         onLeave={reader.clear}
       >
         <svg width={width} height={HEIGHT} aria-hidden="true">
-          {axisTicks(y, scale).map(({ value, text }) => (
-            <g key={value} className={value === 0 && zeroBased ? styles.zero : styles.grid}>
-              <line x1={PLOT.left} x2={width - PLOT.right} y1={y(value)} y2={y(value)} />
-              <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-                {text}
-              </text>
-            </g>
-          ))}
-          {yearTicks(span[0], span[1], width - PLOT.left - PLOT.right).map((year) => (
-            <g key={year} className={styles.years}>
-              <line x1={x(year)} x2={x(year)} y1={bottom} y2={bottom + 5} />
-              <text x={x(year)} y={bottom + 19} textAnchor="middle">
-                {year}
-              </text>
-            </g>
-          ))}
+          <ValueAxis ticks={axisTicks(y, scale)} y={y} right={width - PLOT.right} zero={zeroBased ? 0 : undefined} />
+          <FootAxis values={yearTicks(span[0], span[1], width - PLOT.left - PLOT.right)} x={x} bottom={bottom} />
           <LevelLines
             levels={shown}
             left={PLOT.left}
@@ -95,7 +83,15 @@ export function MinimaFigure({ points, slope, trend, scale, days, changes, level
             points={points.map(({ year, value }) => ({ x: x(year), y: y((value ?? 0) * factor) }))}
           />
           <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
-          {slope && <Slope slope={slope} x={x} y={(value) => y(value * factor)} floor={zeroBased ? y(0) : bottom} />}
+          {slope && (
+            <SlopeBand
+              slope={slope}
+              x={x}
+              y={(value) => y(value * factor)}
+              top={0}
+              bottom={zeroBased ? y(0) : bottom}
+            />
+          )}
           {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
           {points.map((point) => (
             <Mark key={point.year} point={point} x={x(point.year)} y={y((point.value ?? 0) * factor)} floor={bottom} />
@@ -136,27 +132,6 @@ function aroundDates(values: readonly number[]): [number, number] {
   return [Math.min(...values) - 20, Math.max(...values) + 20];
 }
 
-type Position = (value: number) => number;
-
-/** The slope.fitted over its interval. What lies below the floor is cut off: there are no flows or days below zero. */
-function Slope({ slope, x, y, floor }: { slope: SlopeLine; x: Position; y: Position; floor: number }) {
-  const [left, right] = [x(slope.firstYear), x(slope.lastYear)];
-  return (
-    <g className={styles.slope} clipPath="url(#minima-plot)">
-      <clipPath id="minima-plot">
-        <rect x={left} y={0} width={Math.max(0, right - left)} height={floor} />
-      </clipPath>
-      {slope.low && slope.high && (
-        <path
-          className={styles.interval}
-          d={`M${left},${y(slope.low[0])}L${right},${y(slope.low[1])}V${y(slope.high[1])}L${left},${y(slope.high[0])}Z`}
-        />
-      )}
-      <line x1={left} x2={right} y1={y(slope.fitted[0])} y2={y(slope.fitted[1])} />
-    </g>
-  );
-}
-
 function Mark({ point, x, y, floor }: { point: MinimaPoint; x: number; y: number; floor: number }) {
   if (point.value === null) {
     return <path className={styles.absent} d={`M${x - 3},${floor - 3}l6,-6m0,6l-6,-6`} />;
@@ -195,17 +170,7 @@ function Key({ points, slope, none }: { points: readonly MinimaPoint[]; slope: S
       {points.some((point) => point.value === null) && (
         <KeyItem shape={<path className={styles.absent} d="M4,4l6,6m0,-6l-6,6" />} text={none} />
       )}
-      {slope && (
-        <KeyItem
-          shape={
-            <g className={styles.slope}>
-              <path className={styles.interval} d="M0,1L14,4V10L0,13Z" />
-              <line x1="0" x2="14" y1="7" y2="7" />
-            </g>
-          }
-          text="slope with its 95 % interval"
-        />
-      )}
+      {slope && <KeyItem shape={<SlopeSample />} text="slope with its 95 % interval" />}
     </span>
   );
 }

@@ -4,6 +4,7 @@ import { useWidth } from '@/app/components/use-width';
 import { yearTicks } from '@/app/components/year-ticks';
 import type { StationBreaks } from '@/lib/region/break-types';
 import { axisTicks, type IndexScale } from '../index-scale';
+import { FootAxis, ValueAxis } from '../plot-axes';
 import { PLOT } from '../plot-box';
 import { placeLabels } from './break-labels.ts';
 import styles from './breaks-figure.module.css';
@@ -61,19 +62,8 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
         role="img"
         aria-label={`Levels of ${segments.length || 1} part${segments.length > 1 ? 's' : ''} of the years${unit && `, ${unit}`}. The table below says the same.`}
       >
-        {axisTicks(y, scale).map(({ value, text }) => (
-          <g key={value} className={value === 0 && zeroBased ? styles.zero : styles.grid}>
-            <line x1={PLOT.left} x2={right} y1={y(value)} y2={y(value)} />
-            <text x={PLOT.left - 8} y={y(value)} dy="0.32em" textAnchor="end">
-              {text}
-            </text>
-          </g>
-        ))}
-        {yearTicks(span[0], span[1], right - PLOT.left).map((year) => (
-          <text key={year} className={styles.year} x={x(year)} y={bottom + 19} textAnchor="middle">
-            {year}
-          </text>
-        ))}
+        <ValueAxis ticks={axisTicks(y, scale)} y={y} right={right} zero={zeroBased ? 0 : undefined} />
+        <FootAxis values={yearTicks(span[0], span[1], right - PLOT.left)} x={x} bottom={bottom} />
         {shown.map((value, i) => (
           <circle key={years[i]} className={styles.value} cx={x(years[i])} cy={y(value)} r={2.6} />
         ))}
