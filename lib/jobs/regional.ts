@@ -6,8 +6,8 @@ import { cached, keptResult } from './cached.ts';
 import { chanceKey, chanceOf } from './chance.ts';
 import type { WorkContext } from './lanes.ts';
 import { runTask } from './pool.ts';
-import { rankingOf } from './ranking.ts';
-import { withInputs } from './region-inputs.ts';
+import { rankingKey, rankingOf } from './ranking.ts';
+import { RecordsChangedError, withInputs } from './region-inputs.ts';
 import { derivedKey } from './result-key.ts';
 import { sharedWaterOf } from './shared-water.ts';
 
@@ -26,19 +26,24 @@ export const regionalKey = (rankingKey: string, { method, area }: RegionalQuesti
 export const chanceIsKept = (rankingKey: string, method: ChanceMethod): boolean =>
   keptResult('chance', chanceKey(rankingKey, method)) !== null;
 
-/** What the ranked stations of a region say together.
+/** What the ranked stations of a region say together; again from the beginning when a record changed after the ranking was
+ *  read.
  *  @throws an AbortError when cancelled; what was done by then of either half is lost, a half that was done is kept */
-export async function regionalOf(
+export function regionalOf(
   region: Pick<RegionRow, 'id'>,
   basis: Basis,
   question: RegionalQuestion,
   context: WorkContext = {},
 ): Promise<RegionalAnswers> {
-  const { ranking, key } = await rankingOf(region, basis);
-  return cached('regional', regionalKey(key, question), async () => {
-    const water = await withInputs(region.id, (inputs) => sharedWaterOf(inputs, basis, part(context, 0)));
-    const chance = await chanceOf(ranking, key, question.method, part(context, 0.5));
-    return runTask('regional', { ranking, chance, water, area: question.area }, context);
+  return withInputs(region.id, async (inputs) => {
+    const { ranking, key } = await rankingOf(region, basis);
+    return cached('regional', regionalKey(key, question), async () => {
+      if (rankingKey(inputs, basis) !== key)
+        throw new RecordsChangedError('A record changed while the ranking was read.');
+      const water = await sharedWaterOf(inputs, basis, part(context, 0));
+      const chance = await chanceOf(ranking, key, question.method, part(context, 0.5));
+      return runTask('regional', { ranking, chance, water, area: question.area }, context);
+    });
   });
 }
 
