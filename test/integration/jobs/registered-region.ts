@@ -1,5 +1,4 @@
-import { mkdirSync, mkdtempSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { mkdirSync, readdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, expect } from 'vitest';
 import { isoDate } from '../../../lib/calendar/day.ts';
@@ -7,11 +6,10 @@ import { launchImport } from '../../../lib/jobs/import-job.ts';
 import type { FileChoices, ImportChoices, ImportOutcome, ImportProblem } from '../../../lib/jobs/import-types.ts';
 import { closePool } from '../../../lib/jobs/pool.ts';
 import { databasePath } from '../../../lib/store/database-url.ts';
-import { migrate } from '../../../lib/store/migrate.ts';
-import { closeStore } from '../../../lib/store/open.ts';
 import { readParts } from '../../../lib/store/parts.ts';
 import { createRegion, type RegionRow } from '../../../lib/store/regions.ts';
 import { getStation } from '../../../lib/store/stations.ts';
+import { type OwnDatabase, ownDatabase } from '../own-database.ts';
 import { databaseContent } from './database-content.ts';
 
 export type Content = string | Uint8Array;
@@ -26,21 +24,17 @@ AB7,Cedar Weir,50.3,-107.3,80
 /** Gives the tests of a file one database with a region "Upper Wethe" that has three stations and no flows yet. */
 export function registeredRegion(): { readonly region: RegionRow; readonly folder: string } {
   const place = {} as { region: RegionRow; folder: string };
-  const before = process.env.DATABASE_URL;
+  let database: OwnDatabase | undefined;
   beforeAll(async () => {
-    place.folder = mkdtempSync(join(tmpdir(), 'hungerstone-bad-'));
+    database = await ownDatabase('bad');
+    place.folder = database.folder;
     mkdirSync(join(place.folder, 'given'));
-    process.env.DATABASE_URL = `file:${place.folder}/hungerstone.db`;
-    await migrate();
     place.region = await createRegion({ name: 'Upper Wethe' });
     await importOne(place, 'stations.csv', REGISTRY);
   });
   afterAll(async () => {
     await closePool();
-    await closeStore();
-    rmSync(place.folder, { recursive: true, force: true });
-    if (before === undefined) delete process.env.DATABASE_URL;
-    else process.env.DATABASE_URL = before;
+    await database?.giveBack();
   });
   return place;
 }

@@ -1,14 +1,11 @@
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { dayNumber, isoDate } from '../../../lib/calendar/day.ts';
-import { forgetResults } from '../../../lib/jobs/cached.ts';
 import { launchImport } from '../../../lib/jobs/import-job.ts';
-import { migrate } from '../../../lib/store/migrate.ts';
-import { closeStore } from '../../../lib/store/open.ts';
 import { createRegion, type RegionRow } from '../../../lib/store/regions.ts';
 import { editStation } from '../../../lib/store/station-edit.ts';
 import { seeded } from '../../seeded.ts';
+import { ownDatabase } from '../own-database.ts';
 
 const FIRST_YEAR = 1990;
 const YEARS = 24;
@@ -67,11 +64,8 @@ export async function inShuffledRegion<Answer>(
   second: boolean,
   ask: (region: RegionRow) => Promise<Answer>,
 ): Promise<Answer> {
-  const folder = mkdtempSync(join(tmpdir(), 'hungerstone-shuffled-'));
-  const before = process.env.DATABASE_URL;
-  process.env.DATABASE_URL = `file:${folder}/hungerstone.db`;
+  const { folder, giveBack } = await ownDatabase('shuffled');
   try {
-    await migrate();
     if (second) await take(folder, await createRegion({ name: 'Another' }), order.slice(0, 3));
     const region = await createRegion({ name: 'Upper Wethe' });
     await take(folder, region, order.slice(0, 5));
@@ -81,11 +75,7 @@ export async function inShuffledRegion<Answer>(
     await editStation(region.id, 'P3', { changes: [{ date: '2001-07-01', kind: 'dam', note: '' }] });
     return await ask(region);
   } finally {
-    await forgetResults();
-    await closeStore();
-    rmSync(folder, { recursive: true, force: true });
-    if (before === undefined) delete process.env.DATABASE_URL;
-    else process.env.DATABASE_URL = before;
+    await giveBack();
   }
 }
 

@@ -1,25 +1,16 @@
-import { mkdtempSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach } from 'vitest';
-import { migrate } from '../../../lib/store/migrate.ts';
-import { closeStore } from '../../../lib/store/open.ts';
+import { type OwnDatabase, ownDatabase } from '../own-database.ts';
 
 /** Gives every test of a file a new database of its own in a folder of its own, and takes both away afterwards. */
 export function temporaryDatabase({ migrated = true } = {}): { readonly path: string; readonly folder: string } {
   const place = { path: '', folder: '' };
-  const before = process.env.DATABASE_URL;
+  let database: OwnDatabase | undefined;
   beforeEach(async () => {
-    place.folder = mkdtempSync(join(tmpdir(), 'hungerstone-store-'));
+    database = await ownDatabase('store', { migrated });
+    place.folder = database.folder;
     place.path = join(place.folder, 'hungerstone.db');
-    process.env.DATABASE_URL = `file:${place.path}`;
-    if (migrated) await migrate();
   });
-  afterEach(async () => {
-    await closeStore();
-    rmSync(place.folder, { recursive: true, force: true });
-    if (before === undefined) delete process.env.DATABASE_URL;
-    else process.env.DATABASE_URL = before;
-  });
+  afterEach(() => database?.giveBack());
   return place;
 }
