@@ -4,14 +4,14 @@ import type { StationChange } from '../series/station-history.ts';
 import type { Break } from './break-types.ts';
 
 /** Breaks of a station from its dated changes. A change falls into the low-flow year of its date, and the first year after
- *  it is the next one; changes of one low-flow year are one break.
+ *  it is the next one, or this one where the date is its first day; changes before one year are one break.
  *  @param yearStart  first month of the low-flow year, 1–12
  *  @returns          years rising
  *  Example: a dam of 1968-05-01, April years → the first year after is 1969/70 */
 export function breaksOfChanges(changes: readonly StationChange[], yearStart: number): Break[] {
   const byYear = new Map<number, StationChange[]>();
   for (const change of [...changes].sort((a, b) => (a.date < b.date ? -1 : 1))) {
-    const year = lowFlowYearOfDay(parseIsoDate(change.date), yearStart) + 1;
+    const year = lowFlowYearOfDay(parseIsoDate(change.date) - 1, yearStart) + 1;
     byYear.set(year, [...(byYear.get(year) ?? []), change]);
   }
   return [...byYear].map(([year, all]) => ({

@@ -33,10 +33,20 @@ function ranked(stations: Record<string, number[]>, keys: Parameters<typeof basi
   );
 }
 
-test('breaksOfChanges: the first year after is the next low-flow year that begins after the date', () => {
+test('breaksOfChanges: a change on the first day of a low-flow year parts that year from the one before', () => {
+  const yearOf = (date: string, yearStart: number) =>
+    breaksOfChanges([{ kind: 'dam', date, note: '' }], yearStart).map(({ year }) => year);
+  expect(yearOf('1975-01-01', 1)).toEqual([1975]);
+  expect(yearOf('1974-12-31', 1)).toEqual([1975]);
+  expect(yearOf('1975-01-02', 1)).toEqual([1976]);
+  expect(yearOf('1975-04-01', 4)).toEqual([1975]);
+  expect(yearOf('1975-03-31', 4)).toEqual([1975]);
+});
+
+test('breaksOfChanges: the first year after is the next low-flow year that begins on or after the date', () => {
   const dam = (date: string) => breaksOfChanges([{ date, kind: 'dam', note: '' }], 4)[0].year;
   expect(dam('1968-03-31')).toBe(1968);
-  expect(dam('1968-04-01')).toBe(1969);
+  expect(dam('1968-04-02')).toBe(1969);
   expect(dam('1968-05-01')).toBe(1969);
   expect(breaksOfChanges([{ date: '1968-12-31', kind: 'dam', note: '' }], 1)[0].year).toBe(1969);
 });
