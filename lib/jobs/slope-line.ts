@@ -1,7 +1,6 @@
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import type { RankingRow } from '../region/ranking-types.ts';
 import type { SlopeLine } from './types.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** What a slope line is drawn from; `years` those that it rests on. */
 export type Sloped = Pick<

@@ -1,3 +1,4 @@
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { shrunkenPlaces } from '../statistics/shrunken-places.ts';
 import { type SieveTerms, sieve } from '../statistics/sieve.ts';
 import { type Certainty, type DetectableTrend, MOST_STEEPEST, type RankSpan } from './certainty-types.ts';
@@ -5,8 +6,6 @@ import { INDEX_FACTS, percentOfMean } from './index-facts.ts';
 import { rankingFigure } from './ranking-figure.ts';
 import { type SimulationBasis, simulateStation } from './simulate-station.ts';
 import { familyTerms, type SimulatedRow } from './simulated-family.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** All that the simulation of a region's stations has in common. */
 export interface SimulationTerms {

@@ -1,4 +1,5 @@
 import { type Basis, basisText, type ResolvedBasis } from '../basis.ts';
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { checkStartMonth } from '../calendar/low-flow-year.ts';
 import { commonPeriod } from './common-period.ts';
 import { type Standing, standingOf } from './eligibility.ts';
@@ -11,8 +12,6 @@ import { noteOf } from './row-notes.ts';
 import { steadinessOf } from './steadiness.ts';
 import { type TrendFigures, trendFamily } from './trend-family.ts';
 import { judgedYears, type UsedYears, usedYears } from './used-years.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** A station on its way through the ranking. */
 interface Entry {

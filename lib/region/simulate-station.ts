@@ -1,4 +1,5 @@
 import type { Basis } from '../basis.ts';
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { criticalS } from '../statistics/critical-s.ts';
 import { detectableSlope, replicateSlopes } from '../statistics/replicate-slopes.ts';
 import { type Sieve, sieveResiduals } from '../statistics/sieve.ts';
@@ -6,8 +7,6 @@ import { tauOnSlope } from '../statistics/tau-on-slope.ts';
 import { INDEX_FACTS, isOfMinus, percentOfMean } from './index-facts.ts';
 import { rankingFigure } from './ranking-figure.ts';
 import { type SimulatedRow, type TestedLine, testedLine } from './simulated-family.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** The keys of the basis that the simulation reads. */
 export type SimulationBasis = Pick<Basis, 'rankBy' | 'serialCorrection' | 'alpha' | 'index'>;

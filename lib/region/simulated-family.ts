@@ -1,10 +1,9 @@
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { medianOfSorted } from '../statistics/quantile.ts';
 import { cutLag1, lag1OfRanks } from '../statistics/serial-correlation.ts';
 import { type SieveTerms, sieveTerms } from '../statistics/sieve.ts';
 import { isOfMinus, testedSeries } from './index-facts.ts';
 import type { RankingRow } from './ranking-types.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** What the simulation reads of a ranked or drying station. */
 export type SimulatedRow = Pick<

@@ -1,4 +1,5 @@
 import type { Basis } from '../basis.ts';
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { sieve } from '../statistics/sieve.ts';
 import type { PairTrend } from './pair-types.ts';
 import { simulateStation } from './simulate-station.ts';
@@ -7,8 +8,6 @@ import type { YearlySeries } from './trend-family.ts';
 
 /** As many as the certainty of a ranking takes at least: the 80th percentile of 500 is good to a few percent of itself. */
 const REPLICATES = 500;
-
-const YEARS_PER_DECADE = 10;
 
 /** The trend that a series by itself would have shown in four cases of five, in percent of `mean` per decade: by a sieve of
  *  its own, as for the stations of a ranking.

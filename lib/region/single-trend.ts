@@ -1,8 +1,7 @@
 import type { Basis } from '../basis.ts';
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import type { PairTrend } from './pair-types.ts';
 import { trendFamily, type YearlySeries } from './trend-family.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** The fewest values that a trend is taken of. */
 export const FEWEST_FOR_TREND = 3;

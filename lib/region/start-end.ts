@@ -1,4 +1,5 @@
 import type { ResolvedBasis } from '../basis.ts';
+import { YEARS_PER_DECADE } from '../calendar/decade.ts';
 import { twoSidedP } from '../statistics/normal.ts';
 import { windowSlopes } from '../statistics/window-slopes.ts';
 import { isOfMinus, percentOfMean, testedSeries } from './index-facts.ts';
@@ -8,8 +9,6 @@ import { steadinessOf } from './steadiness.ts';
 import { windowGrid } from './window-grid.ts';
 import { windowTests } from './window-tests.ts';
 import { FEWEST_WINDOW_YEARS, type StartEnd } from './window-types.ts';
-
-const YEARS_PER_DECADE = 10;
 
 /** What a station's start–end chart is made from. */
 export type StartEndRow = Pick<RankingRow, 'code' | 'years' | 'values' | 'trendOf' | 'r1' | 'serialFactor'>;
