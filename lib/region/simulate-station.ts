@@ -26,8 +26,8 @@ const NOT_SIMULATED: SimulatedStation = { figures: null, detectable: Number.NaN 
  *
  *  The detectable trend is that of the test as the ranking ran it, at the basis's alpha for the one station by itself: the
  *  factor for serial correlation stays that of the record. Pre-whitened stations are whitened by the record's r1.
- *  @returns no figures and NaN for a station with fewer than three pairs of consecutive years; NaN for one whose values are
- *           all equal */
+ *  @returns no figures and NaN for a station with fewer than three pairs of consecutive years; NaN for one with the same
+ *           value in more than half of its years */
 export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: SimulationBasis): SimulatedStation {
   const line = testedLine(row);
   const replicates = line && sieve.of({ years: line.years, residuals: sieveResiduals(line) }, row.code);
@@ -47,9 +47,16 @@ export function simulateStation(row: SimulatedRow, sieve: Sieve, basis: Simulati
     rejected[b] = white ? white(x, slope) : slopes.rejected();
     if (figures && figureOf) figures[b] = figureOf(x, slope, slopes.mean());
   }
-  // values that are all equal have no scatter to tell a trend from
-  const level = line.values.every((value) => value === line.values[0]);
-  return { figures, detectable: level ? Number.NaN : detectableSlope(rejected) };
+  return { figures, detectable: mostlyOneValue(line.values) ? Number.NaN : detectableSlope(rejected) };
+}
+
+/** Whether more than half of the values are one and the same, as the days without flow of a river that rarely runs dry. Such
+ *  years scatter by nothing about their median, and replicates that are never tied would find trends of next to nothing. */
+function mostlyOneValue(values: readonly number[]): boolean {
+  const sorted = Float64Array.from(values).sort();
+  // a value that fills more than half of the places stands in the middle one
+  const middle = sorted[sorted.length >> 1];
+  return 2 * sorted.filter((value) => value === middle).length > sorted.length;
 }
 
 /** The smallest S that a station's test rejects; the values of a replicate are never tied. */

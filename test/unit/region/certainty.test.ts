@@ -181,6 +181,16 @@ describe('certainty', () => {
     expect(days?.perDecade).toBeGreaterThan(1);
   });
 
+  test('gives no detectable trend to a river that is dry in a few years only', () => {
+    const days = constant(40, 0).map((zero, i) => (i % 9 === 4 ? 3 + (i % 5) : zero));
+    const often = days.map((value, i) => (i % 2 === 0 ? 10 + ((i * 7) % 23) : value));
+    const few = station('F1', { first: 1980, values: constant(40, 0.5), zeroDays: days });
+    const many = station('F2', { first: 1980, values: constant(40, 0.5), zeroDays: often });
+    const { detectable } = certaintyOf(rank([few, many], { index: 'zero-flow-days' }));
+    expect(detectable.find(({ code }) => code === 'F1')?.perDecade).toBeNull();
+    expect(detectable.find(({ code }) => code === 'F2')?.perDecade).toBeGreaterThan(1);
+  });
+
   test('answers for stations that are all alike, for two, for one and for none', () => {
     const level = [1, 2, 3].map((i) => station(`L${i}`, { first: 1980, values: constant(30, i) }));
     expect(certaintyOf(rank(level))).toMatchObject({ toldApart: false, trueSpread: 0 });
