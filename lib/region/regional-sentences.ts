@@ -93,7 +93,7 @@ export function kendallSentence(
   return (
     `Taken together, ${stations(group.ranked, group)} have ` +
     `${found ? `one common trend ${way}` : 'no common trend'} at the ${percent(basis.alpha)} level ` +
-    `(regional Kendall z ${signed(z)}, p ${probability(p)}${median}): ` +
+    `(regional Kendall z ${signed(z)}, p ${probability(p, basis.alpha)}${median}): ` +
     `${signs.negative} ${sides.go[0]}, ${signs.positive} ${sides.go[1]}${level}.${found ? '' : ' This does not show that nothing changed.'}`
   );
 }
@@ -145,7 +145,7 @@ export function refusalSentence(medianR1: number, limit: number): string {
 }
 
 /** Stations under Drying, which are tested by zero-flow days. Example: "3 stations under Drying are not counted here: by
- *  their zero-flow days 1 dries for longer and none dries for shorter (adjusted p among themselves)." */
+ *  days without flow, with p adjusted among themselves, 1 dries for longer and none dries for shorter." */
 export function dryingSentence({
   stations: count,
   falling,
@@ -158,6 +158,6 @@ export function dryingSentence({
   const verbs = VERBS['zero-flow-days'];
   return (
     `${count} ${count === 1 ? 'station' : 'stations'} under Drying ${count === 1 ? 'is' : 'are'} not counted here: ` +
-    `by ${count === 1 ? 'its' : 'their'} zero-flow days ${numberOf(falling, verbs.falls)} and ${numberOf(rising, verbs.rises)} (adjusted p among themselves).`
+    `by days without flow, with p adjusted among themselves, ${numberOf(falling, verbs.falls)} and ${numberOf(rising, verbs.rises)}.`
   );
 }

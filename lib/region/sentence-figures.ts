@@ -19,10 +19,12 @@ export function intervalWords(low: number | null, high: number | null): string {
   return `95 % interval ${signed(low)} to ${signed(high)}`;
 }
 
-/** A p-value: two significant digits, "below 0.001", or "none". */
-export function probability(p: number | null): string {
+/** A p-value: two significant digits, "below 0.001", or "none".
+ *  @param alpha  what p was held against: a p that only rounds up to it is "just below" it */
+export function probability(p: number | null, alpha = Number.NaN): string {
   if (p === null) return 'none';
-  return p < 0.001 ? 'below 0.001' : plain(p);
+  if (p < 0.001) return 'below 0.001';
+  return p < alpha && Number(plain(p)) >= alpha ? `just below ${alpha}` : plain(p);
 }
 
 /** Beside what was not found: what would have been. Empty where that is not known. */

@@ -36,7 +36,7 @@ export function ToneLegend({ steps, name, marked, whole, falling = 'falling', ri
         </li>
       ))}
       <li>
-        {name} from {steps.join(', ')} either way
+        {name}: steps at {steps.join(', ')} either way
       </li>
       <li>
         <svg viewBox="0 0 20 14" width="20" height="14" aria-hidden="true">

@@ -24,6 +24,12 @@ const VERBS: Partial<Record<AnnualIndexName, Verbs>> = {
   ],
 };
 
+/** Where both ways begin alike, what none of several does. */
+const NEITHER: Partial<Record<AnnualIndexName, string>> = {
+  'zero-flow-days': 'is dry for longer or for shorter',
+  deficit: 'has larger or smaller deficits',
+};
+
 /** The answer in one line: how many ranked stations fall and rise, and how many of those may be chance.
  *  @param index  what is compared: dates come earlier or later, deficits are larger or smaller
  *  Example: "10 of 33 ranked stations fall and 2 rise, with at most 10 % false discoveries expected." */
@@ -40,7 +46,7 @@ export function headline(rows: MapRow[], alpha: number, index: AnnualIndexName =
     return `The one ranked station ${does}, ${chance}.${still}`;
   }
   const of = `${fixed(ranked.length)} ranked stations`;
-  if (falling + rising === 0) return `None of ${of} ${down[0]} or ${up[0]}, ${chance}.${still}`;
+  if (falling + rising === 0) return `None of ${of} ${NEITHER[index] ?? `${down[0]} or ${up[0]}`}, ${chance}.${still}`;
   const fall = `${falling === 0 ? 'None' : fixed(falling)} of ${of} ${down[falling <= 1 ? 0 : 1]}`;
   const rise = rising === 0 ? `none ${up[0]}` : `${fixed(rising)} ${up[rising === 1 ? 0 : 1]}`;
   return `${fall} and ${rise}, ${chance}.`;

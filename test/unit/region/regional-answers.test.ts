@@ -154,7 +154,7 @@ describe('regionalAnswers', () => {
       falling: 1,
       rising: 0,
       sentence:
-        '2 stations under Drying are not counted here: by their zero-flow days 1 dries for longer and none dries for shorter (adjusted p among themselves).',
+        '2 stations under Drying are not counted here: by days without flow, with p adjusted among themselves, 1 dries for longer and none dries for shorter.',
     });
   });
 

@@ -45,6 +45,13 @@ describe('kendallSentence', () => {
     );
   });
 
+  test('does not round a p below the level up to it', () => {
+    const close = { ...kendall, p: 0.09996 };
+    expect(kendallSentence(natural, close, signs, basis)).toMatch(/one common trend downward .* p just below 0\.1;/);
+    expect(kendallSentence(natural, { ...kendall, p: 0.094 }, signs, basis)).toMatch(/p 0\.094;/);
+    expect(kendallSentence(natural, { ...kendall, p: 0.1 }, signs, basis)).toMatch(/no common trend .* p 0\.1;/);
+  });
+
   test('does not take no trend found for no change', () => {
     const weak = { ...kendall, z: 0.4, p: 0.69, medianFigure: null };
     expect(kendallSentence(natural, weak, { negative: 15, zero: 2, positive: 16 }, basis)).toBe(
@@ -87,7 +94,7 @@ test('emptySentence and dryingSentence say what is left out', () => {
     'The independent set holds none of the natural stations: nothing can be said of them together.',
   );
   expect(dryingSentence({ stations: 1, falling: 0, rising: 1 })).toBe(
-    '1 station under Drying is not counted here: by its zero-flow days none dries for longer and 1 dries for shorter ' +
-      '(adjusted p among themselves).',
+    '1 station under Drying is not counted here: by days without flow, with p adjusted among themselves, none dries for ' +
+      'longer and 1 dries for shorter.',
   );
 });

@@ -59,6 +59,15 @@ test('termsSentence: choices that leave fewer than half of the stations do not s
   );
 });
 
+test('termsSentence: choices that all say the same are told once', () => {
+  const alike = [
+    at({ current: true, ranked: 1, falling: 0 }),
+    at({ ranked: 1, falling: 0 }),
+    at({ ranked: 1, falling: 0 }),
+  ];
+  expect(termsSentence(alike)).toMatch(/^On 2 other choices of one term 0 of 1 fall on each, 0 of 1 on these, /);
+});
+
 test('termsSentence: nothing to say without another choice', () => {
   expect(termsSentence([at({ current: true })])).toBeNull();
   expect(termsSentence([at({ current: true, ranked: 0 }), at({ ranked: 0 })])).toBeNull();

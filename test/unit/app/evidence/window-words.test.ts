@@ -56,6 +56,19 @@ test('windowsSentence: one window is told by itself, and none is null', () => {
   expect(windowsSentence({ ...one, stations: [0] }, '10 %')).toBeNull();
 });
 
+test('windowsSentence: the windows of a single station are counted, not its shares', () => {
+  const one = {
+    ...COUNTS,
+    stations: [1, 1, 0, 1],
+    negative: [1, 0, 0, 0],
+    falling: [1, 0, 0, 0],
+    rising: [0, 1, 0, 0],
+  };
+  expect(windowsSentence(one, '10 %')).toBe(
+    'Of 3 windows of at least 15 usable years 1 slopes down, 1 of them at the 10 % level; 1 of the others rises at it.',
+  );
+});
+
 test('windowWords: reads a window out, one and several', () => {
   const [first, second] = windowShares(COUNTS);
   expect(windowWords(first, '10 %')).toBe(

@@ -48,6 +48,9 @@ test('headline says in the words of the index what falling and rising are', () =
   expect(headline([falling, falling, rising], 0.1, 'zero-flow-days')).toMatch(
     /^2 of 3 ranked stations are dry for longer and 1 is dry for shorter, with/,
   );
+  expect(headline([chance, chance], 0.1, 'zero-flow-days')).toMatch(
+    /^None of 2 ranked stations is dry for longer or for shorter, with/,
+  );
   expect(headline([falling, rising, rising], 0.1, 'minimum-date')).toMatch(
     /^1 of 3 ranked stations has its low earlier and 2 have them later, with/,
   );

@@ -51,7 +51,7 @@ export function BreakTable({ stations, alpha, units, hrefOf }: Props) {
             <span>
               Difference after less before (Hodges–Lehmann) in percent of the median before, with its 95 % interval; the
               largest fall first. p by the rank-sum test, corrected for carry-over; adjusted p over all rows of this
-              table
+              table.
             </span>
           </caption>
           <thead>

@@ -45,7 +45,7 @@ export function ChanceSection({ answer, method, onMethod, alpha, csv, nameOf, dr
     <Section
       id="chance"
       title="Beyond chance"
-      lead={`Some stations fall at the ${alpha} level though nothing has changed, and neighbours that share weather do so together. So the years are played again without any trend, the same years for all stations, and the stations that fall are counted each time.`}
+      lead={`Where nothing has changed some stations fall at the ${alpha} level all the same, and neighbours that share weather do so together. So the years are played again without any trend, the same years for all stations, and the stations that fall are counted each time.`}
       csv={csv}
       csvName="Groups CSV"
       method="beyond-chance"

@@ -13,7 +13,10 @@ export function DependentPairs({ pairs, nameOf }: Props) {
   if (pairs.length === 0) return <p>No two ranked stations share so much water that one of them must be left out.</p>;
   return (
     <details className={table.details}>
-      <summary>The independent set leaves out {count(pairs.length, 'station')} that share water with another</summary>
+      <summary>
+        The independent set leaves out {count(pairs.length, 'station')} that {pairs.length === 1 ? 'shares' : 'share'}{' '}
+        water with another
+      </summary>
       <p className={table.note}>
         Of two stations on one river whose areas are more than half alike, or whose flows go together (correlation above
         0.95 once the season is taken out), the longer record is kept. A group without a row of its own for the

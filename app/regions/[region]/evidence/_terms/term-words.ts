@@ -38,7 +38,9 @@ export function termsSentence(alternatives: readonly Alternative[]): string | nu
   const counts =
     others.length === 1
       ? `${fallingOf(fewest)} fall (${fewest.label})`
-      : `between ${fallingOf(fewest)} (${fewest.label}) and ${fallingOf(most)} (${most.label}) fall`;
+      : fallingOf(fewest) === fallingOf(most)
+        ? `${fallingOf(fewest)} fall on each`
+        : `between ${fallingOf(fewest)} (${fewest.label}) and ${fallingOf(most)} (${most.label}) fall`;
   const known = here ? `, ${fallingOf(here)} on these` : '';
   return `${opening} ${counts}${known}, after allowing for false discoveries${orderWords(others)}.`;
 }

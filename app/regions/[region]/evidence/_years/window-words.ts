@@ -9,6 +9,7 @@ export const yearsOf = ([start, end]: YearWindow): string => range(start, end);
 export function windowsSentence(counts: WindowCounts, alpha: string): string | null {
   const windows = windowShares(counts);
   if (windows.length === 0) return null;
+  if (windows.every(({ stations }) => stations === 1)) return oneStation(windows, alpha);
   const fallMost = windows.filter(({ negative, stations }) => 2 * negative > stations).length;
   const riseMost = windows.filter(({ negative, stations }) => 2 * negative < stations).length;
   const [most, word] = fallMost >= riseMost ? [fallMost, 'falling'] : [riseMost, 'level or rising'];
@@ -23,6 +24,14 @@ export function windowsSentence(counts: WindowCounts, alpha: string): string | n
     return `${opening}; ${percent(shareOf(least, side))} of them ${side === 'falling' ? 'fall' : 'rise'} at the ${alpha} level, each by itself.`;
   }
   return `${opening}; the share that ${side === 'falling' ? 'falls' : 'rises'} at the ${alpha} level, each station by itself, runs from ${percent(shareOf(least, side))} (${yearsOf(least.window)}) to ${percent(shareOf(largest, side))} (${yearsOf(largest.window)}).`;
+}
+
+/** The same where no window has more than one station: shares of it would say little. */
+function oneStation(windows: readonly WindowShare[], alpha: string): string {
+  const falling = windows.filter(({ negative }) => negative > 0).length;
+  const found = (side: 'falling' | 'rising') => windows.filter((window) => window[side] > 0).length;
+  const others = `${fixed(found('rising'))} of the others ${found('rising') === 1 ? 'rises' : 'rise'}`;
+  return `Of ${count(windows.length, 'window')} of at least 15 usable years ${fixed(falling)} ${falling === 1 ? 'slopes' : 'slope'} down, ${fixed(found('falling'))} of them at the ${alpha} level; ${others} at it.`;
 }
 
 const shareOf = (share: WindowShare, side: 'falling' | 'rising'): number => share[side] / share.stations;

@@ -79,9 +79,7 @@ export function YearsSection({ answer, figure, onFigure, period, alpha, csv }: P
             />
             <ToneLegend
               steps={steps}
-              name={
-                figure === 'sign' ? 'Percent of stations on that side,' : 'Percent of stations, falling less rising,'
-              }
+              name={figure === 'sign' ? 'Percent of stations on that side' : 'Percent of stations, falling less rising'}
               marked={null}
               whole={period && 'the years of the basis'}
             />

@@ -88,8 +88,8 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
             <line
               key={first}
               className={styles.level}
-              x1={x(first - 0.5)}
-              x2={x(last + 0.5)}
+              x1={Math.max(PLOT.left, x(first - 0.5))}
+              x2={Math.min(right, x(last + 0.5))}
               y1={y(median * factor)}
               y2={y(median * factor)}
             />
@@ -101,7 +101,7 @@ export function BreaksFigure({ data, breaks, labelOf }: Props) {
           <svg width="18" height="8" aria-hidden="true">
             <line className={styles.level} x1="0" x2="18" y1="4" y2="4" />
           </svg>{' '}
-          median of the years between breaks
+          median of the years between breaks{unit && `, ${unit}`}
         </span>
       </p>
     </div>

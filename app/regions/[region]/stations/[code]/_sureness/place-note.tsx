@@ -22,7 +22,7 @@ export function PlaceNote({ code }: { code: string }) {
   return (
     <>
       {`, place ${spanText(span.rankLow, span.rankHigh)} with 90 % certainty`}
-      {`, among the ${steepestWords(k)} with ${percent(amongSteepest(view, code, k))}`}
+      {`, among the ${steepestWords(k)} with a probability of ${percent(amongSteepest(view, code, k))}`}
     </>
   );
 }
