@@ -5,8 +5,8 @@ import { useWidth } from '@/app/components/use-width';
 import type { PairYear } from '@/lib/region/pair-types';
 import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
+import { ByArrowKeys, YearFigure } from '../stations/[code]/year-figure';
 import { useYearReader } from '../stations/[code]/year-reader';
-import { YearSlider } from '../stations/[code]/year-slider';
 import styles from './pair-figures.module.css';
 
 interface Props {
@@ -37,53 +37,41 @@ export function DoubleMassFigure({ years, summary }: Props) {
   const text = current && readingOf(current);
 
   return (
-    <div ref={frame} className={styles.frame}>
-      <p className={styles.axisName} aria-hidden="true">
-        Upwards: sum of the station. To the right: sum of the reference. Both in ordinary years
-      </p>
-      <YearSlider
-        label={summary}
-        span={[years[0].year, last.year]}
-        year={reader.picked}
-        text={text}
-        yearAt={nearest}
-        onYear={reader.pickNearest}
-        onKeyDown={reader.onKeyDown}
-        onLeave={reader.clear}
-      >
-        <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
-          <FootAxis values={x.ticks(5)} x={x} bottom={bottom} textOf={tickText} />
-          <line className={styles.level} x1={x(0)} y1={y(0)} x2={x(last.referenceSum)} y2={y(last.stationSum)} />
-          <path
-            className={styles.joined}
-            d={`M${x(0)},${y(0)}${years.map(({ referenceSum, stationSum }) => `L${x(referenceSum).toFixed(1)},${y(stationSum).toFixed(1)}`).join('')}`}
-          />
-          {years.map(({ year, referenceSum, stationSum }) => (
-            <circle
-              key={year}
-              className={styles.point}
-              cx={x(referenceSum)}
-              cy={y(stationSum)}
-              r={year === current?.year ? 5 : 3}
-            />
-          ))}
-          {labelled(years, ({ referenceSum }) => x(referenceSum)).map(({ year, referenceSum, stationSum }) => (
-            <text key={year} x={x(referenceSum) + 7} y={y(stationSum) + 13}>
-              {year}
-            </text>
-          ))}
-        </svg>
-      </YearSlider>
-      <p className={styles.readout}>
-        {text ?? (
-          <span className={styles.key}>
-            Dashed: as it would be had the ratio never changed. A bend is where it did.{' '}
-            <span className={styles.onScreen}>The arrow keys read single years.</span>
-          </span>
-        )}
-      </p>
-    </div>
+    <YearFigure
+      {...{ frame, width, summary, reader }}
+      height={HEIGHT}
+      axisName="Upwards: sum of the station. To the right: sum of the reference. Both in ordinary years"
+      span={[years[0].year, last.year]}
+      text={text}
+      yearAt={nearest}
+      meaning={
+        <>
+          Dashed: as it would be had the ratio never changed. A bend is where it did. <ByArrowKeys />
+        </>
+      }
+    >
+      <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
+      <FootAxis values={x.ticks(5)} x={x} bottom={bottom} textOf={tickText} />
+      <line className={styles.level} x1={x(0)} y1={y(0)} x2={x(last.referenceSum)} y2={y(last.stationSum)} />
+      <path
+        className={styles.joined}
+        d={`M${x(0)},${y(0)}${years.map(({ referenceSum, stationSum }) => `L${x(referenceSum).toFixed(1)},${y(stationSum).toFixed(1)}`).join('')}`}
+      />
+      {years.map(({ year, referenceSum, stationSum }) => (
+        <circle
+          key={year}
+          className={styles.point}
+          cx={x(referenceSum)}
+          cy={y(stationSum)}
+          r={year === current?.year ? 5 : 3}
+        />
+      ))}
+      {labelled(years, ({ referenceSum }) => x(referenceSum)).map(({ year, referenceSum, stationSum }) => (
+        <text key={year} x={x(referenceSum) + 7} y={y(stationSum) + 13}>
+          {year}
+        </text>
+      ))}
+    </YearFigure>
   );
 }
 

@@ -6,8 +6,8 @@ import { useWidth } from '@/app/components/use-width';
 import type { WeatherYear } from '@/lib/region/pair-types';
 import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
+import { ByArrowKeys, YearFigure } from '../stations/[code]/year-figure';
 import { useYearReader } from '../stations/[code]/year-reader';
-import { YearSlider } from '../stations/[code]/year-slider';
 import styles from './pair-figures.module.css';
 
 interface Props {
@@ -46,54 +46,43 @@ export function WeatherFigure({ years, factor, unit, weatherName, minimumName, s
     `${current.year}: ${significant(current.minimum * factor)} ${unit} after ${Math.round(current.weather)} mm, which usually leaves ${significant(current.fitted * factor)} ${unit}.`;
 
   return (
-    <div ref={frame} className={styles.frame}>
-      <p className={styles.axisName} aria-hidden="true">
-        Upwards: {minimumName}, {unit}. To the right: {weatherName}
-      </p>
-      <YearSlider
-        label={summary}
-        span={[years[0].year, years[years.length - 1].year]}
-        year={reader.picked}
-        text={text}
-        yearAt={nearest}
-        onYear={reader.pickNearest}
-        onKeyDown={reader.onKeyDown}
-        onLeave={reader.clear}
-      >
-        <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
-          <FootAxis
-            values={x.ticks(Math.max(2, Math.floor((right - PLOT.left) / 90)))}
-            x={x}
-            bottom={bottom}
-            textOf={tickText}
-          />
-          <path
-            className={styles.curve}
-            d={`M${curve.map(({ weather, fitted }) => `${x(weather).toFixed(1)},${y(fitted * factor).toFixed(1)}`).join('L')}`}
-          />
-          {current && (
-            <line className={styles.cursor} x1={x(current.weather)} x2={x(current.weather)} y1={PLOT.top} y2={bottom} />
-          )}
-          {years.map(({ year, weather, minimum }) => (
-            <circle
-              key={year}
-              className={year < middle ? styles.faint : styles.point}
-              cx={x(weather)}
-              cy={y(minimum * factor)}
-              r={year === current?.year ? 5 : 3.5}
-            />
-          ))}
-        </svg>
-      </YearSlider>
-      <p className={styles.readout}>
-        {text ?? (
-          <span className={styles.key}>
-            Hollow: years before {middle}. Full: {middle} and later. Line: what such weather usually leaves.{' '}
-            <span className={styles.onScreen}>The arrow keys read single years.</span>
-          </span>
-        )}
-      </p>
-    </div>
+    <YearFigure
+      {...{ frame, width, summary, reader }}
+      height={HEIGHT}
+      axisName={`Upwards: ${minimumName}, ${unit}. To the right: ${weatherName}`}
+      span={[years[0].year, years[years.length - 1].year]}
+      text={text}
+      yearAt={nearest}
+      meaning={
+        <>
+          Hollow: years before {middle}. Full: {middle} and later. Line: what such weather usually leaves.{' '}
+          <ByArrowKeys />
+        </>
+      }
+    >
+      <ValueAxis ticks={y.ticks(5).map((value) => ({ value, text: tickText(value) }))} y={y} right={right} />
+      <FootAxis
+        values={x.ticks(Math.max(2, Math.floor((right - PLOT.left) / 90)))}
+        x={x}
+        bottom={bottom}
+        textOf={tickText}
+      />
+      <path
+        className={styles.curve}
+        d={`M${curve.map(({ weather, fitted }) => `${x(weather).toFixed(1)},${y(fitted * factor).toFixed(1)}`).join('L')}`}
+      />
+      {current && (
+        <line className={styles.cursor} x1={x(current.weather)} x2={x(current.weather)} y1={PLOT.top} y2={bottom} />
+      )}
+      {years.map(({ year, weather, minimum }) => (
+        <circle
+          key={year}
+          className={year < middle ? styles.faint : styles.point}
+          cx={x(weather)}
+          cy={y(minimum * factor)}
+          r={year === current?.year ? 5 : 3.5}
+        />
+      ))}
+    </YearFigure>
   );
 }

@@ -15,8 +15,8 @@ import type { SlopeLine } from '@/lib/jobs/types';
 import { FootAxis, ValueAxis } from '../stations/[code]/plot-axes';
 import { PLOT } from '../stations/[code]/plot-box';
 import { SlopeBand } from '../stations/[code]/slope-band';
+import { ByArrowKeys, YearFigure } from '../stations/[code]/year-figure';
 import { useYearReader } from '../stations/[code]/year-reader';
-import { YearSlider } from '../stations/[code]/year-slider';
 import styles from './pair-figures.module.css';
 
 export interface YearlyPoint {
@@ -58,60 +58,41 @@ export function YearlyFigure({ points, slope, tone, level, axisName, changes, ye
   const current = points.find(({ year }) => year === reader.picked) ?? null;
 
   return (
-    <div ref={frame} className={styles.frame} data-tone={tone}>
-      <p className={styles.axisName} aria-hidden="true">
-        {axisName}
-      </p>
-      <YearSlider
-        label={summary}
-        span={span}
-        year={reader.picked}
-        text={current?.text ?? null}
-        yearAt={(pixels) => x.invert(pixels)}
-        onYear={reader.pickNearest}
-        onKeyDown={reader.onKeyDown}
-        onLeave={reader.clear}
-      >
-        <svg className={styles.figure} width={width} height={HEIGHT} aria-hidden="true">
-          <ValueAxis
-            ticks={y.ticks(5).map((value) => ({ value, text: tickText(value).replace('-', '−') }))}
-            y={y}
-            right={right}
-          />
-          <FootAxis values={yearTicks(span[0], span[1], right - PLOT.left)} x={x} bottom={bottom} />
-          <line className={styles.level} x1={PLOT.left} x2={right} y1={y(level.value)} y2={y(level.value)} />
-          <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
-          {slope && <SlopeBand slope={slope} x={x} y={y} top={top} bottom={bottom} />}
-          {runsOf(points).map((run) => (
-            <path
-              key={run[0].year}
-              className={styles.joined}
-              d={`M${run.map(({ year, value }) => `${x(year).toFixed(1)},${y(value).toFixed(1)}`).join('L')}`}
-            />
-          ))}
-          {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
-          {points.map(({ year, value }) => (
-            <circle
-              key={year}
-              className={styles.point}
-              cx={x(year)}
-              cy={y(value)}
-              r={year === current?.year ? 5 : 3.25}
-            />
-          ))}
-        </svg>
-      </YearSlider>
-      <p className={styles.readout}>
-        {current ? (
-          current.text
-        ) : (
-          <span className={styles.key}>
-            Thick line: slope with its 95 % interval. Dashed: {level.text}.{' '}
-            <span className={styles.onScreen}>The arrow keys read single years.</span>
-          </span>
-        )}
-      </p>
-    </div>
+    <YearFigure
+      {...{ frame, width, summary, reader }}
+      height={HEIGHT}
+      tone={tone}
+      axisName={axisName}
+      span={span}
+      text={current?.text ?? null}
+      yearAt={(pixels) => x.invert(pixels)}
+      meaning={
+        <>
+          Thick line: slope with its 95 % interval. Dashed: {level.text}. <ByArrowKeys />
+        </>
+      }
+    >
+      <ValueAxis
+        ticks={y.ticks(5).map((value) => ({ value, text: tickText(value).replace('-', '−') }))}
+        y={y}
+        right={right}
+      />
+      <FootAxis values={yearTicks(span[0], span[1], right - PLOT.left)} x={x} bottom={bottom} />
+      <line className={styles.level} x1={PLOT.left} x2={right} y1={y(level.value)} y2={y(level.value)} />
+      <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
+      {slope && <SlopeBand slope={slope} x={x} y={y} top={top} bottom={bottom} />}
+      {runsOf(points).map((run) => (
+        <path
+          key={run[0].year}
+          className={styles.joined}
+          d={`M${run.map(({ year, value }) => `${x(year).toFixed(1)},${y(value).toFixed(1)}`).join('L')}`}
+        />
+      ))}
+      {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
+      {points.map(({ year, value }) => (
+        <circle key={year} className={styles.point} cx={x(year)} cy={y(value)} r={year === current?.year ? 5 : 3.25} />
+      ))}
+    </YearFigure>
   );
 }
 

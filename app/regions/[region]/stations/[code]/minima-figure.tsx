@@ -20,8 +20,8 @@ import { FootAxis, ValueAxis } from './plot-axes';
 import { PLOT } from './plot-box';
 import { readingText } from './reading-text';
 import { SlopeBand, SlopeSample } from './slope-band';
+import { YearFigure } from './year-figure';
 import { useYearReader } from './year-reader';
-import { YearSlider } from './year-slider';
 
 interface Props {
   points: MinimaPoint[];
@@ -58,50 +58,34 @@ export function MinimaFigure({ points, slope, trend, scale, days, changes, level
   const bottom = HEIGHT - PLOT.bottom;
   const zeroBased = scale.index !== 'minimum-date';
   return (
-    <div ref={frame} className={styles.frame} data-trend={trend ?? 'unranked'}>
-      <p className={styles.axisName}>{scale.axisName}</p>
-      <YearSlider
-        label={summary}
-        span={span}
-        year={current?.year ?? null}
-        text={current && readingText(current, scale, days)}
-        className={styles.figure}
-        yearAt={x.invert}
-        onYear={reader.pickNearest}
-        onKeyDown={reader.onKeyDown}
-        onLeave={reader.clear}
-      >
-        <svg width={width} height={HEIGHT} aria-hidden="true">
-          <ValueAxis ticks={axisTicks(y, scale)} y={y} right={width - PLOT.right} zero={zeroBased ? 0 : undefined} />
-          <FootAxis values={yearTicks(span[0], span[1], width - PLOT.left - PLOT.right)} x={x} bottom={bottom} />
-          <LevelLines
-            levels={shown}
-            left={PLOT.left}
-            right={Math.max(PLOT.left, width - PLOT.right)}
-            top={top + 6}
-            bottom={bottom - 6}
-            points={points.map(({ year, value }) => ({ x: x(year), y: y((value ?? 0) * factor) }))}
-          />
-          <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
-          {slope && (
-            <SlopeBand
-              slope={slope}
-              x={x}
-              y={(value) => y(value * factor)}
-              top={0}
-              bottom={zeroBased ? y(0) : bottom}
-            />
-          )}
-          {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
-          {points.map((point) => (
-            <Mark key={point.year} point={point} x={x(point.year)} y={y((point.value ?? 0) * factor)} floor={bottom} />
-          ))}
-        </svg>
-      </YearSlider>
-      <div className={styles.readout}>
-        {current ? readingText(current, scale, days) : <Key points={points} slope={slope} none={scale.none} />}
-      </div>
-    </div>
+    <YearFigure
+      {...{ frame, width, summary, span, reader }}
+      height={HEIGHT}
+      tone={trend === 'falling' ? 'dry' : trend === 'rising' ? 'wet' : 'none'}
+      axisName={scale.axisName}
+      text={current && readingText(current, scale, days)}
+      yearAt={x.invert}
+      meaning={<Key points={points} slope={slope} none={scale.none} />}
+    >
+      <ValueAxis ticks={axisTicks(y, scale)} y={y} right={width - PLOT.right} zero={zeroBased ? 0 : undefined} />
+      <FootAxis values={yearTicks(span[0], span[1], width - PLOT.left - PLOT.right)} x={x} bottom={bottom} />
+      <LevelLines
+        levels={shown}
+        left={PLOT.left}
+        right={Math.max(PLOT.left, width - PLOT.right)}
+        top={top + 6}
+        bottom={bottom - 6}
+        points={points.map(({ year, value }) => ({ x: x(year), y: y((value ?? 0) * factor) }))}
+      />
+      <ChangeMarks changes={marks} top={PLOT.top - 12} bottom={bottom} />
+      {slope && (
+        <SlopeBand slope={slope} x={x} y={(value) => y(value * factor)} top={0} bottom={zeroBased ? y(0) : bottom} />
+      )}
+      {current && <line className={styles.cursor} x1={x(current.year)} x2={x(current.year)} y1={top} y2={bottom} />}
+      {points.map((point) => (
+        <Mark key={point.year} point={point} x={x(point.year)} y={y((point.value ?? 0) * factor)} floor={bottom} />
+      ))}
+    </YearFigure>
   );
 }
 
