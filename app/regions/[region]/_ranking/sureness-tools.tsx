@@ -106,7 +106,8 @@ function Help({ replicates }: { replicates: number }) {
               <p>
                 The rank span is the 90 % interval of a station’s place, from {fixed(replicates)} simulated regions that
                 share weather and carry over from year to year as these records do. The guarantee is an average over
-                stations: 90 of 100 spans hold the true place, and no single one is promised.
+                stations: 90 of 100 spans hold the true place, and no single one is promised. A place may lie outside
+                its own span: a steep figure from a scattered record is believed less than it says.
               </p>
               <p>
                 Steadiness is the share of windows of at least 15 usable years that agree with the sign of the trend.

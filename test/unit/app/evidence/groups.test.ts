@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { shownGroups } from '@/app/regions/[region]/evidence/shown-groups';
+import { noInfluenceKnown, shownGroups } from '@/app/regions/[region]/evidence/shown-groups';
 import { toldGroups } from '@/app/regions/[region]/evidence/told-groups';
 import type { BeyondChance, GroupAnswer } from '@/lib/region/regional-types';
 
@@ -23,6 +23,20 @@ test('shownGroups: an independent set stands by itself only where it leaves some
     'influence:urban all',
     'influence:unknown all',
   ]);
+});
+
+test('shownGroups: one class that holds all stations says nothing of its own, an area that holds them does', () => {
+  const groups = [group('all', 'all', 15), group('all', 'independent', 14), group('drawn', 'all', 15)];
+  const unknown = [group('influence:unknown', 'all', 15), group('influence:unknown', 'independent', 14)];
+  expect(names(shownGroups([...groups, ...unknown]))).toEqual(['all all', 'all independent', 'drawn all']);
+});
+
+test('noInfluenceKnown: only where every ranked station is of unknown influence', () => {
+  const unknown = group('influence:unknown', 'all', 15);
+  expect(noInfluenceKnown([group('all', 'all', 15), unknown])).toBe(true);
+  expect(noInfluenceKnown([group('all', 'all', 16), unknown])).toBe(false);
+  expect(noInfluenceKnown([group('all', 'all', 15), group('influence:natural', 'all', 15)])).toBe(false);
+  expect(noInfluenceKnown([group('all', 'all', 0)])).toBe(false);
 });
 
 test('toldGroups: what was drawn, all stations, and the natural ones where they are fewer', () => {

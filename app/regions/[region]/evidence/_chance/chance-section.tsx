@@ -8,7 +8,7 @@ import type { LongResult } from '@/app/components/use-long-result';
 import type { ChanceMethod, RegionalAnswers } from '@/lib/region/regional-types';
 import styles from '../evidence.module.css';
 import { Section } from '../section.tsx';
-import { shownGroups } from '../shown-groups.ts';
+import { noInfluenceKnown, shownGroups } from '../shown-groups.ts';
 import { ChanceTable } from './chance-table.tsx';
 import { DependentPairs } from './dependent-pairs.tsx';
 import { GroupSentences } from './group-sentences.tsx';
@@ -62,6 +62,12 @@ export function ChanceSection({ answer, method, onMethod, alpha, csv, nameOf, dr
               {range(percent(value.trueLevel[0]), percent(value.trueLevel[1]))} of regions, simulated, not in 5 %.
               Falling and rising are counted apart, and each station’s p is its own here: the counts by adjusted p are
               another question, answered in the second sentence of each group.
+            </p>
+          )}
+          {noInfluenceKnown(value.groups) && (
+            <p className={styles.note}>
+              The influence of no ranked station is known. Once it stands in their facts or in a station list, natural
+              and regulated stations are counted apart here.
             </p>
           )}
           {value.drying && <p className={styles.note}>{value.drying.sentence}</p>}
