@@ -60,6 +60,7 @@ export const PAIR_COLUMNS: readonly Column<PairRow>[] = [
   },
 ];
 
+/** One row a common year, with what they share. */
 export function pairRows({ station, references, years }: PairComparison, index: AnnualIndexName): PairRow[] {
   const codes = references.map(({ code }) => code);
   return years.map((year) => ({ ...year, code: station.code, references: codes, index }));

@@ -59,6 +59,7 @@ export function pairMetadata(file: string, comparison: PairComparison, from: Pro
   return withSummary(tableMetadata(file, title, PAIR_COLUMNS, from), pairSummary(comparison));
 }
 
+/** The same of minima given weather. */
 export function weatherMetadata(file: string, trend: WeatherTrend, from: Provenance): Record<string, unknown> {
   const title = `${from.region.name}: minima of ${trend.station.code} given the weather before them`;
   return withSummary(tableMetadata(file, title, WEATHER_COLUMNS, from), weatherSummary(trend));

@@ -57,6 +57,7 @@ export const WEATHER_COLUMNS: readonly Column<WeatherRow>[] = [
   },
 ];
 
+/** One row a year, with what they share. */
 export function weatherRows({ station, quantity, from, antecedentDays, years }: WeatherTrend): WeatherRow[] {
   return years.map((year) => ({ ...year, code: station.code, quantity, from: from.code, antecedentDays }));
 }

@@ -1,5 +1,6 @@
 import { kendallTauB } from '../statistics/kendall-tau.ts';
 import { median } from '../statistics/quantile.ts';
+import { orNull } from './or-null.ts';
 import { byCode, placesOf } from './places.ts';
 import type { Ranking, RankingRow } from './ranking-types.ts';
 import type { Movement, RankingMovement } from './window-types.ts';
@@ -67,5 +68,3 @@ function byDistance(a: Movement, b: Movement): number {
   const distance = ({ moved }: Movement) => (moved === null ? -1 : Math.abs(moved));
   return distance(b) - distance(a) || byCode(a.code, b.code);
 }
-
-const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value);

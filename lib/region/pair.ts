@@ -1,11 +1,12 @@
 import type { ResolvedBasis } from '../basis.ts';
 import { rankCorrelation } from '../statistics/rank-correlation.ts';
+import { orNull } from './or-null.ts';
 import { problemBeforehand, problemOfCommonYears, problemOfRatios } from './pair-problems.ts';
 import type { PairComparison, PairYear } from './pair-types.ts';
 import { pairSentence, pairWarnings } from './pair-words.ts';
 import type { RankingRow } from './ranking-types.ts';
 import { detectablePercent } from './single-detectable.ts';
-import { FEWEST_FOR_TREND, meanOf, orNull, singleTrend } from './single-trend.ts';
+import { FEWEST_FOR_TREND, meanOf, singleTrend } from './single-trend.ts';
 import type { YearlySeries } from './trend-family.ts';
 
 /** What a comparison reads of a station's row in the ranking. */

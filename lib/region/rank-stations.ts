@@ -4,6 +4,7 @@ import { checkStartMonth } from '../calendar/low-flow-year.ts';
 import { commonPeriod } from './common-period.ts';
 import { type Standing, standingOf } from './eligibility.ts';
 import { INDEX_FACTS, isOfMinus, perArea, percentOfMean, testedSeries } from './index-facts.ts';
+import { orNull } from './or-null.ts';
 import { byCode, placesOf } from './places.ts';
 import { rankingFigure } from './ranking-figure.ts';
 import type { Ranking, RankingRow, StationFacts, StationMinima, Trend } from './ranking-types.ts';
@@ -214,9 +215,6 @@ function meanOf(values: readonly number[]): number | null {
 
 /** Names random draws together with a series' own values, so that what shaped these need not be named again. */
 const seedOf = (basis: ResolvedBasis): string => basisText(basis, ['index', 'serialCorrection']);
-
-/** NaN is null in rows, and −0 is 0. */
-const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value + 0);
 
 function factsOf(station: StationFacts): StationFacts {
   const { id, code, name, river, latitude, longitude, areaKm2, influence, derivedFrom } = station;

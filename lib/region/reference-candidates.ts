@@ -1,9 +1,9 @@
 import { rankCorrelation } from '../statistics/rank-correlation.ts';
 import { distanceKm } from './neighbours.ts';
+import { orNull } from './or-null.ts';
 import type { ReferenceCandidate } from './pair-types.ts';
 import { byCode } from './places.ts';
 import type { RankingRow } from './ranking-types.ts';
-import { orNull } from './single-trend.ts';
 
 /** A reference shares at least so many usable years with the station, and at least half of those that the station has. */
 const FEWEST_COMMON_YEARS = 10;

@@ -1,5 +1,6 @@
 import type { Basis } from '../basis.ts';
 import { YEARS_PER_DECADE } from '../calendar/decade.ts';
+import { orNull } from './or-null.ts';
 import type { PairTrend } from './pair-types.ts';
 import { trendFamily, type YearlySeries } from './trend-family.ts';
 
@@ -34,8 +35,6 @@ export function singleTrend(
   };
 }
 
-/** NaN is null, and −0 is 0. */
-export const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value + 0);
-
+/** Mean of at least one value. */
 export const meanOf = (values: readonly number[]): number =>
   values.reduce((sum, value) => sum + value, 0) / values.length;

@@ -4,6 +4,7 @@ import { median } from '../statistics/quantile.ts';
 import { rankSum } from '../statistics/rank-sum.ts';
 import type { Break, Segment, StepTest } from './break-types.ts';
 import { percentOfMean } from './index-facts.ts';
+import { orNull } from './or-null.ts';
 import { factorOfPart, type RowSerialTerms } from './row-serial-terms.ts';
 
 /** Fewer usable years on a side are not tested: the normal approximation of the rank-sum test would not hold. */
@@ -82,5 +83,3 @@ const NO_TEST = {
   p: null,
   pAdjusted: null,
 } as const;
-
-const orNull = (value: number): number | null => (Number.isNaN(value) ? null : value);

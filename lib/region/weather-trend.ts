@@ -3,9 +3,10 @@ import { antecedentSum } from '../series/antecedent-sum.ts';
 import { quantityWords } from '../series/quantities.ts';
 import { lowess } from '../statistics/lowess.ts';
 import { rankCorrelation } from '../statistics/rank-correlation.ts';
+import { orNull } from './or-null.ts';
 import type { NamedSite, PairTrend, WeatherQuantity, WeatherTrend, WeatherYear } from './pair-types.ts';
 import { detectablePercent } from './single-detectable.ts';
-import { meanOf, orNull, singleTrend } from './single-trend.ts';
+import { meanOf, singleTrend } from './single-trend.ts';
 import { weatherSentence, weatherWarnings } from './weather-words.ts';
 
 /** A curve through fewer points follows each of them. */

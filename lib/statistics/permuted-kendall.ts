@@ -93,7 +93,8 @@ function pairBits(values: ArrayLike<number>, words: number) {
 }
 
 /** Bits that are known and differ. Three words of one weight become one of that weight and a carry of twice it, so that
- *  only one word in eight has its bits counted one by one. */
+ *  only one word in eight has its bits counted one by one.
+ *  Source: the carry-save adders of Harley and Seal, in Warren 2013, Hacker's Delight, 2nd ed., section 5–1. */
 function disagreeing(larger: Uint32Array, known: Uint32Array, orders: Uint32Array, at: number, words: number): number {
   let [ones, twos, fours, eights] = [0, 0, 0, 0];
   for (let w = 0; w < words; w += WORDS_AT_ONCE) {

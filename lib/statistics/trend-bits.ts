@@ -10,6 +10,7 @@ export interface TrendBits {
 
 const WORD_BITS = 32;
 
+/** Words of 32 bits that hold so many bits. */
 export const wordsFor = (bits: number): number => Math.ceil(bits / WORD_BITS);
 
 /** Bits of so many series and replicates, none of them set. */

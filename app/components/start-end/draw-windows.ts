@@ -21,12 +21,12 @@ export const WINDOW_TOKENS = {
   wet: '--wet-fill',
 } as const;
 
-export type WindowPalette = Record<keyof typeof WINDOW_TOKENS, string>;
+type WindowPalette = Record<keyof typeof WINDOW_TOKENS, string>;
 
 /** How much colour lies over the paper at each step from nought on; the same stand in the legend. */
 export const TONE_OPACITY = [0.1, 0.26, 0.46, 0.7, 1] as const;
 
-export interface WindowPicture {
+interface WindowPicture {
   grid: WindowGrid;
   /** null where the window has no answer */
   cellAt(window: YearWindow): WindowCell | null;
@@ -35,6 +35,7 @@ export interface WindowPicture {
   whole: YearWindow | null;
 }
 
+/** Draws the start–end chart, with its years and what is marked in it, on a canvas that has been cleared. */
 export function drawWindows(context: CanvasRenderingContext2D, picture: WindowPicture, palette: WindowPalette): void {
   const { grid, cursor, whole } = picture;
   eachCell(picture, (cell, window) => drawCell(context, grid, window, cell, palette));

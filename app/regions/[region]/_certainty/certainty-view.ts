@@ -12,6 +12,7 @@ export interface CertaintyView {
   detectable: ReadonlyMap<string, DetectableTrend>;
 }
 
+/** The answer as screens look things up in it. */
 export function certaintyView(certainty: Certainty): CertaintyView {
   const { replicates, toldApart, spans, detectable } = certainty;
   return {

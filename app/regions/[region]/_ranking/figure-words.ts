@@ -30,6 +30,7 @@ export interface FigureWords {
 const same = (value: number | null) => value;
 const plus = (value: number | null, written: string) => (value !== null && value > 0 ? `+${written}` : written);
 
+/** The words of a kind of figure in the units shown. */
 export function figureWords(kind: FigureKind, units: Units): FigureWords {
   switch (kind) {
     case 'percent-per-decade':
