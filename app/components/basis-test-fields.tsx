@@ -15,6 +15,10 @@ const CORRECTIONS: readonly (readonly [Basis['serialCorrection'], string, string
   ['none', 'Not corrected', 'As if every year stood alone.'],
 ];
 
+/** Each correction as it is chosen by. Example: "ar1" → "Carry-over of each station" */
+export const correctionName = (wanted: string): string | undefined =>
+  CORRECTIONS.find(([correction]) => correction === wanted)?.[1];
+
 export const asPercent = (value: number): number => Number((value * 100).toFixed(4));
 
 /** The serial correction, each with the false alarms that it lets through, and the false discoveries accepted. */

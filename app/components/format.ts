@@ -64,6 +64,14 @@ export function percent(share: Figure, decimals = 0): string {
   return `${fixed(share * 100, decimals)}${NO_BREAK}%`;
 }
 
+/** A share of many cases as percent, where some are not none and most are not all: 0.004 → "< 1 %", 0.998 → "> 99 %". */
+export function shareText(share: Figure): string {
+  if (isMissing(share)) return MISSING;
+  if (share > 0 && share < 0.01) return `<${NO_BREAK}${percent(0.01)}`;
+  if (share < 1 && share > 0.99) return `>${NO_BREAK}${percent(0.99)}`;
+  return percent(share);
+}
+
 /** "1 station", "12 stations". */
 export function count(number: number, singular: string, plural = `${singular}s`): string {
   return `${fixed(number)} ${number === 1 ? singular : plural}`;

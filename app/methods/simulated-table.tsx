@@ -1,3 +1,4 @@
+import { correctionName } from '@/app/components/basis-test-fields';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import { aimWords, CLAIM_WORDS, SIMULATED, type SimulatedFigure, sharePercent } from '@/lib/region/simulated-figures';
 import styles from './page.module.css';
@@ -32,7 +33,7 @@ function ClaimTable({ claim, figures }: { claim: string; figures: readonly Simul
         <tbody>
           {distinct(figures.map(({ of }) => of)).map((of) => (
             <tr key={of}>
-              <th scope="row">{of}</th>
+              <th scope="row">{methodWords(of)}</th>
               {settings.map((setting) => (
                 <td key={setting}>
                   <Cell figure={figures.find((one) => one.of === of && one.setting === setting)} />
@@ -44,6 +45,17 @@ function ClaimTable({ claim, figures }: { claim: string; figures: readonly Simul
       </table>
     </ScrollFrame>
   );
+}
+
+const CHANCE_WORDS: Readonly<Record<string, string>> = {
+  permutation: 'Years shuffled',
+  sieve: 'Years drawn anew',
+};
+
+/** What was simulated, by the names under which it is chosen. Example: "ar1" → "Carry-over of each station (ar1)" */
+function methodWords(of: string): string {
+  const named = of.split(', ').map((part) => correctionName(part) ?? CHANCE_WORDS[part]);
+  return named.some((name) => name === undefined) ? of : `${named.join(', ')} (${of})`;
 }
 
 function Cell({ figure }: { figure: SimulatedFigure | undefined }) {

@@ -37,7 +37,7 @@ export function suggestedBreak(row: SuggestionRow, basis: ResolvedBasis): Sugges
   const lastBefore = series.years[at];
   const words =
     `The figures themselves would part after ${lowFlowYearLabel(lastBefore, basis.yearStart)} (Pettitt’s K = ${k}, ` +
-    `p = ${probability(p)}${pBySieve ? ', by resampling with carry-over' : ''})` +
+    `p ${probability(p)}${pBySieve ? ', by resampling with carry-over' : ''})` +
     `${besideTrend ? '; step or trend, not told apart' : ''}. Not tested: these figures chose the year.`;
   return { lastBefore, k, p, pBySieve, besideTrend, words };
 }

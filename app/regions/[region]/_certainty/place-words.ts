@@ -1,14 +1,17 @@
-import { count, MISSING, percent, range } from '@/app/components/format';
+import { count, MISSING, range, shareText } from '@/app/components/format';
 import { needleOf } from '@/app/components/needle';
 import type { MapRow } from '../map-row.ts';
 import { amongSteepest, type CertaintyView } from './certainty-view.ts';
 import { type DetectableTerms, detectableText } from './detectable-text.ts';
 
 /** "5 steepest declines", "steepest decline". */
-export const steepestWords = (k: number): string => (k === 1 ? 'steepest decline' : `${k} steepest declines`);
+const steepestWords = (k: number): string => (k === 1 ? 'steepest decline' : `${k} steepest declines`);
+
+/** "among the 5 steepest declines", "the steepest decline". */
+export const amongWords = (k: number): string => `${k === 1 ? '' : 'among '}the ${steepestWords(k)}`;
 
 /** How sure a station's place is, and what its record could have shown, in one sentence; empty while it is not known.
- *  Example: "Place 4–19 of 33 with 90 % certainty; among the 5 steepest declines with 37 %." */
+ *  Example: "Place 4–19 of 33 with 90 % certainty; among the 5 steepest declines with a probability of 37 %." */
 export function placeWords(
   view: CertaintyView | null,
   row: MapRow,
@@ -21,7 +24,7 @@ export function placeWords(
   if (span) {
     const place = span.rankLow === span.rankHigh ? span.rankLow : range(span.rankLow, span.rankHigh);
     parts.push(`place ${place} of ${view.places} with 90 % certainty`);
-    parts.push(`among the ${steepestWords(k)} with ${percent(amongSteepest(view, row.code, k))}`);
+    parts.push(`${amongWords(k)} with a probability of ${shareText(amongSteepest(view, row.code, k))}`);
   }
   const shown = detectableText(view.detectable.get(row.code), { ...terms, drying: row.drying });
   if (!needleOf(row).significant && shown !== MISSING) {

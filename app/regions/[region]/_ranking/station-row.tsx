@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import { memo } from 'react';
-import { areaNumber, fixed, percent, pValue, type Units } from '@/app/components/format';
+import { areaNumber, fixed, pValue, shareText, type Units } from '@/app/components/format';
 import { IntervalFigure, type IntervalScale } from '@/app/components/interval-figure';
 import { needleOf } from '@/app/components/needle';
 import { decodeRatios } from '@/app/components/spark-code';
@@ -117,7 +117,7 @@ export const StationRow = memo(function StationRow(props: StationRowProps) {
         </td>
       )}
       {sureness && <SurenessCells row={row} sureness={sureness} />}
-      <td className={styles.steady}>{percent(row.steadiness)}</td>
+      <td className={styles.steady}>{shareText(row.steadiness)}</td>
     </tr>
   );
 });

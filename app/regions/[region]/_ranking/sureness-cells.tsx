@@ -1,4 +1,4 @@
-import { MISSING, percent, range } from '@/app/components/format';
+import { MISSING, range, shareText } from '@/app/components/format';
 import { amongSteepest, type CertaintyView } from '../_certainty/certainty-view.ts';
 import type { MapRow } from '../map-row.ts';
 import table from './ranking-table.module.css';
@@ -46,10 +46,3 @@ export function SurenessCells({ row, sureness: { view, waiting, k } }: { row: Ma
 }
 
 export const spanText = (low: number, high: number): string => (low === high ? String(low) : range(low, high));
-
-/** Example: 0.004 → "< 1 %", for a few replicates of many are not none. */
-export function shareText(share: number): string {
-  if (share > 0 && share < 0.01) return `<\u00a0${percent(0.01)}`;
-  if (share < 1 && share > 0.99) return `>\u00a0${percent(0.99)}`;
-  return percent(share);
-}

@@ -60,12 +60,12 @@ describe('placeWords', () => {
   const row = (code: string, more = {}) => mapRow({ code, rank: 1, trend: 'none', percentPerDecade: -3, ...more });
   test('says span and probability, and beside no significant trend what would have shown', () => {
     expect(placeWords(view, row('a'), 2, TERMS)).toBe(
-      'Place 1–2 of 3 with 90 % certainty; among the 2 steepest declines with 95\u00a0%; ±6.2 % per decade or more would have shown in four cases of five.',
+      'Place 1–2 of 3 with 90 % certainty; among the 2 steepest declines with a probability of 95\u00a0%; ±6.2 % per decade or more would have shown in four cases of five.',
     );
   });
   test('leaves out what would have shown where the trend is significant', () => {
     expect(placeWords(view, row('c', { trend: 'falling' }), 1, TERMS)).toBe(
-      'Place 3 of 3 with 90 % certainty; among the steepest decline with 0\u00a0%.',
+      'Place 3 of 3 with 90 % certainty; the steepest decline with a probability of 0\u00a0%.',
     );
   });
   test('says of a drying station what would have shown in days', () => {

@@ -10,6 +10,7 @@ import {
   percentPerDecade,
   pValue,
   range,
+  shareText,
   signed,
   significant,
   specific,
@@ -25,8 +26,14 @@ test('fixed writes a true minus, groups thousands, and never a negative zero', (
   expect(fixed(-0.06, 1)).toBe('−0.1');
 });
 
+test('shareText rounds neither a few of many to none nor most to all', () => {
+  expect(shareText(0.004)).toBe('<\u00a01\u00a0%');
+  expect(shareText(465 / 466)).toBe('>\u00a099\u00a0%');
+  expect([0, 0.01, 0.37, 0.99, 1].map(shareText)).toEqual(['0', '1', '37', '99', '100'].map((n) => `${n}\u00a0%`));
+});
+
 test('a missing figure is a dash in every form, and 0 is not missing', () => {
-  for (const write of [fixed, signed, significant, pValue, percent, percentPerDecade]) {
+  for (const write of [fixed, signed, significant, pValue, percent, percentPerDecade, shareText]) {
     expect(write(null)).toBe(MISSING);
     expect(write(Number.NaN)).toBe(MISSING);
     expect(write(0)).not.toBe(MISSING);

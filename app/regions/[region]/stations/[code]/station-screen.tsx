@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Cautions } from '@/app/components/cautions';
 import { ChangeLegend } from '@/app/components/change-marks/change-marks';
 import { markedChanges } from '@/app/components/change-marks/marked-changes';
-import { count, percent } from '@/app/components/format';
+import { count, shareText } from '@/app/components/format';
 import { apiHref, deriveHref, pairHref, regionHref, stationEditHref, stationHref } from '@/app/components/links';
 import { needleOf, needleWords } from '@/app/components/needle';
 import { NeedleMark } from '@/app/components/needle-mark';
@@ -172,7 +172,7 @@ export function StationScreen({ region, detail, background, rows, query, basisQu
         <aside className={styles.side}>
           <TrendFigures row={row} units={basis.units} scale={scale} labelOf={labelOf} />
           {row.trend !== null && (
-            <SurenessFigures code={station.code} rank={row.rank} steadiness={percent(row.steadiness)} terms={terms} />
+            <SurenessFigures code={station.code} rank={row.rank} steadiness={shareText(row.steadiness)} terms={terms} />
           )}
           <AlongRiver slug={region.slug} background={background} query={query} />
           <Neighbours

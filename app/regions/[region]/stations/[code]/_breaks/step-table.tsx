@@ -1,4 +1,4 @@
-import { fixed, interval, MISSING, pValue, range, significant } from '@/app/components/format';
+import { count, interval, MISSING, pValue, range, significant } from '@/app/components/format';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import type { Segment, StationBreaks } from '@/lib/region/break-types';
 import { changeText, changeUnit, dateText, type IndexScale } from '../index-scale';
@@ -77,7 +77,7 @@ function Level({ segment: { median, first, last, years }, scale, labelOf }: Leve
         ? dateText(median)
         : significant(median === null ? null : median * scale.factor)}
       <Quiet>
-        {range(labelOf(first), labelOf(last))}, {fixed(years)} years
+        {range(labelOf(first), labelOf(last))}, {count(years, 'year')}
       </Quiet>
     </td>
   );

@@ -1,10 +1,10 @@
 'use client';
 import { useSearchParams } from 'next/navigation';
-import { percent } from '@/app/components/format';
+import { percent, shareText } from '@/app/components/format';
 import { USUAL_STEEPEST } from '@/lib/region/certainty-types';
 import { useCertaintyOfPage } from '../../../_certainty/certainty-context.tsx';
 import { amongSteepest } from '../../../_certainty/certainty-view.ts';
-import { steepestWords } from '../../../_certainty/place-words.ts';
+import { amongWords } from '../../../_certainty/place-words.ts';
 import { spanText } from '../../../_ranking/sureness-cells.tsx';
 import { parseSteepest } from '../../../map-state.ts';
 
@@ -21,8 +21,8 @@ export function PlaceNote({ code }: { code: string }) {
   if (!view || !span) return null;
   return (
     <>
-      {`, place ${spanText(span.rankLow, span.rankHigh)} with 90 % certainty`}
-      {`, among the ${steepestWords(k)} with a probability of ${percent(amongSteepest(view, code, k))}`}
+      {`, place ${spanText(span.rankLow, span.rankHigh)} with ${percent(0.9)} certainty`}
+      {`, ${amongWords(k)} with a probability of ${shareText(amongSteepest(view, code, k))}`}
     </>
   );
 }

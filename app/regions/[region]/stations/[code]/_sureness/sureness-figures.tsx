@@ -1,12 +1,12 @@
 'use client';
-import { MISSING } from '@/app/components/format';
+import { MISSING, shareText } from '@/app/components/format';
 import { LongWait } from '@/app/components/long-wait';
 import { useCertaintyOfPage } from '../../../_certainty/certainty-context.tsx';
 import { amongSteepest } from '../../../_certainty/certainty-view.ts';
 import { type DetectableTerms, detectableText } from '../../../_certainty/detectable-text.ts';
-import { steepestWords, toldApartWords } from '../../../_certainty/place-words.ts';
+import { amongWords, toldApartWords } from '../../../_certainty/place-words.ts';
 import { SpanFigure } from '../../../_ranking/span-figure.tsx';
-import { shareText, spanText } from '../../../_ranking/sureness-cells.tsx';
+import { spanText } from '../../../_ranking/sureness-cells.tsx';
 import styles from '../station-screen.module.css';
 import { useSteepest } from './place-note.tsx';
 
@@ -29,7 +29,7 @@ export function SurenessFigures({ code, rank, steadiness, terms }: Props) {
       ? []
       : ([
           ['Rank span, 90 %', span ? `${spanText(span.rankLow, span.rankHigh)} of ${view?.places}` : MISSING],
-          [`Among the ${steepestWords(k)}`, share === null ? MISSING : shareText(share)],
+          [`Chance to be ${amongWords(k)}`, shareText(share)],
         ] as [string, string][])),
     ['Steadiness', steadiness],
     ['Detectable trend, per decade', view ? detectableText(view.detectable.get(code), terms) : MISSING],

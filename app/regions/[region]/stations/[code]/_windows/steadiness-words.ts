@@ -1,4 +1,4 @@
-import { count, fixed, percent } from '@/app/components/format';
+import { count, fixed, shareText } from '@/app/components/format';
 import type { StartEndAnswer } from './start-end-answer.ts';
 
 /** How many windows go the way of the whole period, with the caution that belongs to it.
@@ -7,5 +7,5 @@ export function steadinessWords({ steadiness, windows }: Pick<StartEndAnswer, 's
   if (steadiness === null)
     return 'The whole period goes neither way, so there is nothing for other years to agree with.';
   const agree = Math.round(steadiness * windows);
-  return `Steadiness ${percent(steadiness)}: ${fixed(agree)} of ${count(windows, 'window')} of at least 15 usable years ${agree === 1 ? 'goes' : 'go'} the way of the whole period. Windows overlap, so they are not independent evidence.`;
+  return `Steadiness ${shareText(steadiness)}: ${fixed(agree)} of ${count(windows, 'window')} of at least 15 usable years ${agree === 1 ? 'goes' : 'go'} the way of the whole period. Windows overlap, so they are not independent evidence.`;
 }
