@@ -1,3 +1,4 @@
+import { readCodes, writeCodes } from '@/app/components/codes-in-address';
 import type { ExceedanceAxis, FlowAxis } from '@/app/components/duration-figure/axes';
 import { flowIn, specificIn, UNIT_WORDS, type Units } from '@/app/components/format';
 import type { CurveKind, RegionCurves } from '@/lib/jobs/types';
@@ -15,25 +16,14 @@ export const FIRST_CHOICE = 6;
 export function readChoice(text: string | null): StationChoice {
   if (text === null) return { way: 'steepest' };
   if (text === 'view' || text === 'all') return { way: text };
-  return { way: 'codes', codes: text.split(',').filter(Boolean).map(decoded) };
-}
-
-/** A code typed by hand may hold a bare percent sign. */
-function decoded(text: string): string {
-  try {
-    return decodeURIComponent(text);
-  } catch {
-    return text;
-  }
+  return { way: 'codes', codes: readCodes(text) };
 }
 
 /** The text for the address, or null for the choice that needs none. */
 export function writeChoice(choice: StationChoice): string | null {
   if (choice.way === 'steepest') return null;
   if (choice.way !== 'codes') return choice.way;
-  return choice.codes.length
-    ? choice.codes.map((code) => code.replaceAll('%', '%25').replaceAll(',', '%2C')).join(',')
-    : ',';
+  return writeCodes(choice.codes) || ',';
 }
 
 export const readKind = (text: string | null): CurveKind => (text === 'median-annual' ? 'median-annual' : 'period');

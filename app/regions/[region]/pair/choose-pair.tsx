@@ -1,12 +1,12 @@
 'use client';
 import { usePathname, useRouter, useSearchParams } from 'next/navigation';
 import { useId, useState, useTransition } from 'react';
+import { writeCodes } from '@/app/components/codes-in-address';
 import { count, MISSING, signed } from '@/app/components/format';
 import { ScrollFrame } from '@/app/components/scroll-frame';
 import ui from '@/app/components/ui.module.css';
 import type { ReferenceCandidate } from '@/lib/region/pair-types';
 import styles from './choose-pair.module.css';
-import { writeCodes } from './pair-view';
 
 export interface StationOption {
   code: string;

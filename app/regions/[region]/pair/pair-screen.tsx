@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { Cautions } from '@/app/components/cautions';
+import { writeCodes } from '@/app/components/codes-in-address';
 import { apiHref, regionHref, stationHref } from '@/app/components/links';
 import { Empty, ErrorNote } from '@/app/components/notes';
 import type { ResolvedBasis } from '@/lib/basis';
@@ -10,7 +11,6 @@ import { ChoosePair } from './choose-pair';
 import { ComparisonSection } from './comparison-section';
 import type { PairAnswers } from './pair-answers';
 import styles from './pair-screen.module.css';
-import { writeCodes } from './pair-view';
 import { WeatherSection } from './weather-section';
 
 interface Props {

@@ -1,3 +1,4 @@
+import { readCodes } from '@/app/components/codes-in-address';
 import { WEATHER_QUANTITIES, type WeatherQuantity } from '@/lib/region/pair-types';
 import { MOST_ANTECEDENT_DAYS } from '@/lib/series/antecedent-sum';
 
@@ -20,22 +21,11 @@ export function readPairView(query: URLSearchParams): PairView {
   const readable = Number.isInteger(days) && days >= 1 && days <= MOST_ANTECEDENT_DAYS;
   return {
     station: text('station'),
-    references: named === null ? null : [...new Set(named.split(',').map(decoded).filter(Boolean))],
+    references: named === null ? null : [...new Set(readCodes(named))],
     weather: {
       ...(quantity === undefined ? {} : { quantity }),
       ...(from === null ? {} : { from }),
       ...(readable ? { antecedentDays: days } : {}),
     },
   };
-}
-
-/** Codes as one parameter: a comma or percent sign inside a code is written by its number. */
-export const writeCodes = (codes: readonly string[]): string => codes.map(encodeURIComponent).join(',');
-
-function decoded(code: string): string {
-  try {
-    return decodeURIComponent(code);
-  } catch {
-    return code;
-  }
 }

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest';
-import { readPairView, writeCodes } from '@/app/regions/[region]/pair/pair-view';
+import { writeCodes } from '@/app/components/codes-in-address';
+import { readPairView } from '@/app/regions/[region]/pair/pair-view';
 
 const read = (query: string) => readPairView(new URLSearchParams(query));
 
