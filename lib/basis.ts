@@ -28,9 +28,13 @@ export const SERIAL_CORRECTIONS = [
 const month = z.int().min(1).max(12);
 const year = z.int().min(1000).max(9999);
 
+/** Longer than any river has been gauged; a start–end chart grows with the square of it. */
+const MOST_PERIOD_YEARS = 500;
+
 const ascendingYears = z
   .tuple([year, year])
-  .refine(([first, last]) => first <= last, { error: 'the first year must not come after the last' });
+  .refine(([first, last]) => first <= last, { error: 'the first year must not come after the last' })
+  .refine(([first, last]) => last - first < MOST_PERIOD_YEARS, { error: 'longer than any record' });
 
 /** One schema for every edge: URL, JSON, forms and API. Keys as in the batch command's `--basis`. */
 export const basisSchema = z
@@ -127,13 +131,13 @@ function describeIssue(issue: z.core.$ZodIssue, input: object): string {
 
 /** What each key takes, in words for messages. */
 const ALLOWED: Record<BasisKey, string> = {
-  period: '"common", null, or [first, last] low-flow years in rising order',
+  period: `"common", null, or [first, last] low-flow years 1000–9999 in rising order, at most ${MOST_PERIOD_YEARS} years`,
   yearStart: '"auto" or a month 1–12',
   season: 'null or [firstMonth, lastMonth], each 1–12, inside one low-flow year',
   days: 'a whole number 1–365',
   maxMissingDays: 'a whole number 0–365',
   exclude: `a list of ${EXCLUDABLE_FLAGS.join(', ')}`,
-  minYears: 'a whole number from 3',
+  minYears: 'a whole number 3–1000',
   minCoverage: 'a number 0–1',
   normalise: 'area, mean, median or none',
   rankBy: 'percent-per-decade, specific-change or kendall-tau',

@@ -37,3 +37,14 @@ export function seasonSpan(year: number, startMonth: number, season: Season): { 
     last: dayNumber(yearAfterLast, afterLast, 1) - 1,
   };
 }
+
+/** Days of a season in a leap year: as many as it ever has. Example: mostSeasonDays([2, 2]) → 29
+ *  @throws RangeError when a month is not 1–12 */
+export function mostSeasonDays(season: Season): number {
+  const startMonth = season === null ? 1 : season[0];
+  const lengths = [2003, 2004].map((year) => {
+    const { first, last } = seasonSpan(year, startMonth, season);
+    return last - first + 1;
+  });
+  return Math.max(...lengths);
+}

@@ -63,16 +63,18 @@ export function annualMinima(
     const marked = anyFlag ? observeFlags(flow, series.flags, from, to) : { flagged: 0, belowDetection: 0 };
     const zeros = seen.zeros + marked.belowDetection;
     const { minimum, lastIndex } = yearMinimum(flow, from, to - from, days, scratch);
-    const reason = unusableReason({
-      flow,
-      firstDay: series.firstDay,
-      span,
-      yearDays,
-      missingDays: seasonDays - seen.days,
-      days,
-      minimum,
-      maxMissingDays: options.maxMissingDays,
-    });
+    const reason = Number.isFinite(seen.sum)
+      ? unusableReason({
+          flow,
+          firstDay: series.firstDay,
+          span,
+          yearDays,
+          missingDays: seasonDays - seen.days,
+          days,
+          minimum,
+          maxMissingDays: options.maxMissingDays,
+        })
+      : 'flows so large that their sum is infinite: correct them in the file';
 
     result.years[i] = year;
     result.usable[i] = reason === '' ? 1 : 0;

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { BASIS_KEYS, type Basis, basisFromQuery } from '@/lib/basis';
 import type { Narrowing } from '@/lib/export/narrow';
+import { parameterWords } from './parameter-words';
 import { Problem } from './problem';
 
 /** Stations to hold: `stations=A,B` by code, `in=west,south,east,north` by place. */
@@ -21,7 +22,8 @@ export const narrowingParameters = {
 /** Reads the parameters of a request.
  *  @param shape      the parameters that this route takes, by zod
  *  @param withBasis  whether basis keys may stand beside them
- *  @throws Problem that names a parameter nobody reads: a slip of the pen would else be answered with other numbers */
+ *  @throws Problem that names a parameter nobody reads: a slip of the pen would else be answered with other numbers; or
+ *          one that cannot be used, with what was given and what would do */
 export function readParameters<Shape extends z.ZodRawShape>(
   request: Request,
   shape: Shape,
@@ -38,7 +40,13 @@ export function readParameters<Shape extends z.ZodRawShape>(
     }
   }
   const given = Object.fromEntries([...searchParams].filter(([name]) => name in shape));
-  return z.object(shape).parse(given);
+  const read = z.object(shape).safeParse(given);
+  if (read.success) return read.data;
+  const wrong = read.error.issues.map((issue) => {
+    const name = String(issue.path[0]);
+    return `"${name}": ${parameterWords(issue, given[name])}`;
+  });
+  throw new Problem('bad-parameter', `${wrong.join('; ')}.`);
 }
 
 /** The basis that a request asks for: its query laid over the region's own. */

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { isoDate } from '../../../lib/calendar/day.ts';
-import { type Season, seasonSpan } from '../../../lib/calendar/season.ts';
+import { mostSeasonDays, type Season, seasonSpan } from '../../../lib/calendar/season.ts';
 
 test.each<[string, number, number, Season, string, string]>([
   ['a whole April year', 2010, 4, null, '2010-04-01', '2011-03-31'],
@@ -21,4 +21,12 @@ test.each<[string, number, number, Season, string, string]>([
 test('seasonSpan refuses a season over the end of the low-flow year and says which start would do', () => {
   expect(() => seasonSpan(2010, 4, [3, 5])).toThrow('years from month 3 would hold it');
   expect(() => seasonSpan(2010, 4, [0, 5])).toThrow('seasonSpan: season must hold months 1–12, got [0, 5]');
+});
+
+test('mostSeasonDays: as many days as a season ever has', () => {
+  expect(mostSeasonDays([2, 2])).toBe(29);
+  expect(mostSeasonDays([6, 9])).toBe(122);
+  expect(mostSeasonDays([11, 2])).toBe(121);
+  expect(mostSeasonDays(null)).toBe(366);
+  expect(() => mostSeasonDays([0, 5])).toThrow(RangeError);
 });

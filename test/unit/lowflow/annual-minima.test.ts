@@ -139,3 +139,10 @@ test('annualMinima refuses options that cannot be', () => {
   expect(() => annualMinima(record, { ...OPTIONS, yearStart: 0 })).toThrow(RangeError);
   expect(() => annualMinima(record, { ...OPTIONS, yearStart: 4, season: [3, 5] })).toThrow(RangeError);
 });
+
+test('annualMinima: a year whose flows add up to infinity is not usable, and the others are', () => {
+  const huge = seriesOf([2001, 1, 1], { days: 730, flow: (i) => (i < 365 ? 1e308 : 5 + (i % 3)) });
+  const minima = annualMinima(huge, OPTIONS);
+  expect([...minima.usable]).toEqual([0, 1]);
+  expect(minima.reason).toEqual(['flows so large that their sum is infinite: correct them in the file', '']);
+});

@@ -10,7 +10,7 @@ export const breaksParameters = {
     .transform((text, context): BreakChoice => {
       const choice = parseBreakChoice(text);
       if (choice) return choice;
-      context.addIssue({ code: 'custom', message: `must be ${BREAK_CHOICE_HELP}` });
+      context.addIssue({ code: 'custom', message: `must be ${BREAK_CHOICE_HELP}; not "${text}"` });
       return z.NEVER;
     })
     .describe(BREAK_CHOICE_HELP),
