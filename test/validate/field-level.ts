@@ -18,7 +18,7 @@ const STATIONS = 40;
 const ALPHA = 0.1;
 const NOMINAL = 0.05;
 const PERMUTATIONS = 1000;
-const SIEVED = 400;
+const SIEVED = 200;
 const years = yearsFrom(1980, YEARS);
 
 type Correction = Basis['serialCorrection'];
@@ -60,7 +60,7 @@ function sieved(series: ChanceSeries, basis: SievedTask['basis'], seed: string):
 /** A case takes long where series are resampled to be tested, or every replicate needs a slope. */
 const casesOf = (method: ChanceMethod, correction: Correction): number => {
   if (method === 'permutation') return correction === 'block-bootstrap' ? 200 : 1000;
-  return correction === 'ar1-regional' ? 300 : 100;
+  return correction === 'ar1-regional' ? 200 : 100;
 };
 
 export const fieldLevel: Scenario[] = CHANCE_METHODS.flatMap((method) =>

@@ -43,13 +43,14 @@ async function main(argv: string[]): Promise<number> {
   const lane = async () => {
     for (const place of queue) {
       figures.set(place, await inThread(place, cases));
+      // what has been simulated stays when the rest is broken off
+      if (write) keep([figures.get(place)!]);
       process.stderr.write(`${figures.size} of ${places.length} simulated\n`);
     }
   };
   await Promise.all(Array.from({ length: THREADS }, lane));
   const got = places.map((place) => figures.get(place)!);
   process.stdout.write(`${figuresTable(got)}\n`);
-  if (write) keep(got);
   const off = got.filter((figure) => !isAsMeant(figure));
   for (const { claim, of, setting, value } of off)
     process.stdout.write(`NOT AS MEANT: ${claim}, ${of}, ${setting}: ${value}\n`);
