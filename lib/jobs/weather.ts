@@ -11,7 +11,7 @@ import { runTask } from './pool.ts';
 import { rankingOf } from './ranking.ts';
 
 /** Half a year: the wet season and what has fallen since. */
-export const USUAL_ANTECEDENT_DAYS = 180;
+const USUAL_ANTECEDENT_DAYS = 180;
 
 /** A weather record that is stored in a region. */
 export interface WeatherSource {

@@ -2,6 +2,7 @@ import { fixed, flow, interval, MISSING, pValue, range, signed, specific, type U
 import { INDEX_FACTS } from '@/lib/region/index-facts';
 import { INDEX_WORDS } from '@/lib/region/index-words';
 import type { RankingRow } from '@/lib/region/ranking-types';
+import { FigureTable } from './figure-table.tsx';
 import { changeText, changeUnit, type IndexScale, valueText } from './index-scale.ts';
 import styles from './station-screen.module.css';
 
@@ -53,16 +54,7 @@ export function TrendFigures({ row, units, scale, labelOf }: Props) {
     <section className={styles.trend} aria-labelledby="trend-title">
       <h2 id="trend-title">Figures of the trend</h2>
       {row.unrankedReason && <p className={styles.reason}>Not ranked: {row.unrankedReason}.</p>}
-      <table>
-        <tbody>
-          {figures.map(([name, value]) => (
-            <tr key={name}>
-              <th scope="row">{name}</th>
-              <td>{value}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <FigureTable figures={figures} />
     </section>
   );
 }

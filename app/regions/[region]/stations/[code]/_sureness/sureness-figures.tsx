@@ -7,6 +7,7 @@ import { type DetectableTerms, detectableText } from '../../../_certainty/detect
 import { amongWords, toldApartWords } from '../../../_certainty/place-words.ts';
 import { SpanFigure } from '../../../_ranking/span-figure.tsx';
 import { spanText } from '../../../_ranking/sureness-cells.tsx';
+import { FigureTable } from '../figure-table.tsx';
 import styles from '../station-screen.module.css';
 import { useSteepest } from './place-note.tsx';
 
@@ -38,16 +39,7 @@ export function SurenessFigures({ code, rank, steadiness, terms }: Props) {
     <section className={styles.trend} aria-labelledby="sureness-title">
       <h2 id="sureness-title">How sure?</h2>
       {view && span && <SpanFigure low={span.rankLow} high={span.rankHigh} rank={rank} places={view.places} />}
-      <table>
-        <tbody>
-          {figures.map(([name, value]) => (
-            <tr key={name}>
-              <th scope="row">{name}</th>
-              <td>{value}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <FigureTable figures={figures} />
       {view && !view.toldApart && <p className={styles.caption}>{toldApartWords(view)}</p>}
       <LongWait answer={answer} title="Working out the rank spans" failed="The rank spans could not be worked out" />
       <p className={styles.caption}>
