@@ -79,7 +79,7 @@ test('what fills the discs is chosen in the legend, drawn, explained and kept in
   await eventually(picture).not.toBe(bySignificance);
   const bySpan = await picture();
   await page.getByLabel('Filled by').selectOption('steepest');
-  await page.getByRole('option', { name: 'chance to be among the 5 steepest declines' }).waitFor({ state: 'attached' });
+  await page.getByRole('option', { name: 'chance to be among the 5 steepest' }).waitFor({ state: 'attached' });
   await eventually(picture).not.toBe(bySpan);
   await eventually(() => parameter(page, 'fill')).toBe('steepest');
   await page.reload();

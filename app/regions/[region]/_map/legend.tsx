@@ -5,7 +5,6 @@ import { DAYS_AT_45_DEGREES, type Needle, needleOf, needleWords, PERCENT_AT_45_D
 import { NeedleMark } from '@/app/components/needle-mark';
 import type { AnnualIndexName } from '@/lib/basis';
 import { INDEX_FACTS } from '@/lib/region/index-facts';
-import { amongWords } from '../_certainty/place-words.ts';
 import type { MapRow } from '../map-row.ts';
 import type { Fill } from '../map-state.ts';
 import styles from './legend.module.css';
@@ -81,7 +80,9 @@ export function Legend({ rows, startOpen, fill, isKnown, onFill, k, index }: Leg
               Filled by{' '}
               <select value={fill} onChange={(event) => onFill(event.currentTarget.value as Fill)}>
                 <option value="significance">significance</option>
-                <option value="steepest">chance to be {amongWords(k)}</option>
+                <option value="steepest">
+                  {k === 1 ? 'chance to be the steepest' : `chance to be among the ${k} steepest`}
+                </option>
                 <option value="span">how narrow the rank span is</option>
               </select>
             </label>
