@@ -1,5 +1,8 @@
 import styles from './interval-figure.module.css';
 
+/** The scale reaches no further than this many times the middle distance of an end from 0. */
+const REACH = 8;
+
 export interface IntervalScale {
   low: number;
   high: number;
@@ -12,8 +15,11 @@ export function intervalScale(ends: (number | null)[]): IntervalScale {
   if (known.length === 0) return { low: -1, high: 1 };
   // a few wide intervals must not flatten all others: the outer 1 % of ends may be cut
   const cut = Math.floor(known.length * 0.01);
-  const low = Math.min(0, known[cut]);
-  const high = Math.max(0, known[known.length - 1 - cut]);
+  // nor may one that is far out where there are too few rows for that
+  const distances = known.map(Math.abs).sort((a, b) => a - b);
+  const reach = REACH * distances[distances.length >> 1] || Number.POSITIVE_INFINITY;
+  const low = Math.max(-reach, Math.min(0, known[cut]));
+  const high = Math.min(reach, Math.max(0, known[known.length - 1 - cut]));
   const pad = (high - low || 1) * 0.06;
   return { low: low - pad, high: high + pad };
 }

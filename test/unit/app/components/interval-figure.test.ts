@@ -16,6 +16,13 @@ test('intervalScale lets the outer hundredth of many ends run off', () => {
   expect(high).toBeLessThan(12);
 });
 
+test('intervalScale lets one river run off that would flatten the few others to points', () => {
+  const { low, high } = intervalScale([-49, 14, -21, 7, -56, 26, 900, 2400]);
+  expect(low).toBeLessThan(-56);
+  expect(high).toBeLessThan(450);
+  expect(intervalScale([0, 0, 0, 5]).high).toBeGreaterThan(5);
+});
+
 test('intervalScale has width without any interval', () => {
   expect(intervalScale([null, Number.NaN])).toEqual({ low: -1, high: 1 });
 });
