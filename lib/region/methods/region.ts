@@ -41,7 +41,7 @@ export const regionChapter: MethodChapter = {
         {
           tex: String.raw`\theta^{*}_i = F_i^{-1}\bigl(\operatorname{share}(d_i)\bigr), \qquad F_i(\theta) \propto \int^{\theta} g(x)\,e^{-(b_i - x)^2 / 2 s_i^2}\,dx`,
           where:
-            'b the ranking figures, d their deviations in a replicate less the regional ones, share(d) where d stands among the station’s own, s² the variance of d; g the distribution of true figures, normal to begin with (its spread by Paule and Mandel) and roughened towards what the stations say; places are those of θ*',
+            'b the ranking figures, d their deviations in a replicate less what the region shares in it (their mean, steadier stations counting more), share(d) where d stands among the station’s own, s² the variance of d; g the distribution of true figures, normal to begin with (its spread by Paule and Mandel) and roughened towards what the stations say; places are those of θ*',
         },
       ],
       assumes: [
