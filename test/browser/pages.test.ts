@@ -80,7 +80,8 @@ test('the methods page sets its formulas, and what was simulated stands beside t
   expect(await part.locator('.katex-html').first().isVisible()).toBe(true);
   const alarms = part.getByRole('table').first();
   expect(await alarms.getByRole('row').count()).toBe(7);
-  expect(await alarms.getByRole('rowheader').allTextContents()).toContain('ar1-regional');
+  const headers = await alarms.getByRole('rowheader').allTextContents();
+  expect(headers.filter((header) => header.includes('ar1-regional'))).toHaveLength(1);
 });
 
 test('the harness sees trouble: a forbidden inline script, an error, and a request to another host', async () => {

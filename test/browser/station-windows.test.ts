@@ -108,7 +108,7 @@ test('beside a trend that may be chance stands the one that the record would hav
 test('the place comes with its certainty and with the number of steepest that the address asks after', async () => {
   const page = await stationPage(steepest, '?k=2');
   await page
-    .getByText(/ranked 1 of \d+, place 1(–\d+)? with 90.% certainty, among the 2 steepest declines with/)
+    .getByText(/ranked 1 of \d+, place \d+(–\d+)? with 90.% certainty, among the 2 steepest declines with/)
     .waitFor();
 });
 

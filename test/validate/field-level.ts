@@ -59,8 +59,9 @@ function sieved(series: ChanceSeries, basis: SievedTask['basis'], seed: string):
 
 /** A case takes long where series are resampled to be tested, or every replicate needs a slope. */
 const casesOf = (method: ChanceMethod, correction: Correction): number => {
-  if (method === 'permutation') return correction === 'block-bootstrap' ? 200 : 1000;
-  return correction === 'ar1-regional' ? 200 : 100;
+  const usual = correction === 'ar1-regional';
+  if (method === 'permutation') return usual ? 1000 : 300;
+  return usual ? 100 : 40;
 };
 
 export const fieldLevel: Scenario[] = CHANCE_METHODS.flatMap((method) =>
