@@ -307,6 +307,9 @@ export function yearWords(yearStart: number): string {
   return yearStart === 1 ? 'calendar' : `${MONTHS[yearStart - 1]}–${MONTHS[(yearStart + 10) % 12]}`;
 }
 
+/** Whether the words for an index name the days of the mean; where they do not, usable years still depend on these. */
+const hasDays = (index: AnnualIndexName): boolean => index === 'minimum' || index === 'minimum-date';
+
 /** The basis in plain words, in runs, each with the term it speaks of. */
 export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
   const whatOf = basis.season
@@ -328,9 +331,9 @@ export function basisSentenceParts(basis: ResolvedBasis): SentencePart[] {
     { text: period, term: 'period' },
     { text: ', at stations with ' },
     {
-      text: `at least ${basis.minYears} usable years (at most ${basis.maxMissingDays} days missing) and ${percent(basis.minCoverage)} % of ${
-        basis.period === null ? 'their span' : 'the period'
-      }`,
+      text: `at least ${basis.minYears} usable years (at most ${basis.maxMissingDays} days missing${
+        hasDays(basis.index) ? '' : `, judged by ${basis.days}-day means`
+      }) and ${percent(basis.minCoverage)} % of ${basis.period === null ? 'their span' : 'the period'}`,
       term: 'completeness',
     },
     { text: ', ranked by ' },
