@@ -20,7 +20,7 @@ test('one station: every section speaks, of the one', async () => {
   const page = await newPage(`/regions/${one}/evidence`);
   await page.locator('#terms').getByRole('table').waitFor();
   expect(await page.locator('[data-answer="chance"] dd').textContent()).toMatch(/1 station/);
-  expect(await page.locator('[data-answer="years"] dd').textContent()).toMatch(/windows of at least 15 years/);
+  expect(await page.locator('[data-answer="years"] dd').textContent()).toMatch(/windows of at least 15 usable years/);
   expect(await page.locator('#breaks').textContent()).toContain('No ranked station has a dated change');
   await deleteRegion(one);
 });
